@@ -1,0 +1,13 @@
+import { z } from 'zod';
+
+const partSchema = z.object({ ok: z.boolean(), detail: z.string() });
+
+export const healthSchema = z.object({
+  ok: z.boolean(),
+  version: z.string(),
+  database: partSchema,
+  queue: partSchema,
+  pool: partSchema,
+});
+
+export type Health = z.infer<typeof healthSchema>;

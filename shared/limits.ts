@@ -1,0 +1,22 @@
+/** Limits that both sides state in the same words. Changing one changes the refusal and its message. */
+export const LIMITS = {
+  /** Layers of one case after its blocks are expanded. */
+  expandedLayers: 100_000,
+  /** Blocks inside blocks inside blocks. */
+  blockDepth: 3,
+  repeat: 1_000,
+  /** Points (wavelength x angle, over all cases) of one call on the command line. */
+  commandLinePoints: 1_000_000,
+  /** Points of one `POST /api/v1/solve`; more than this is a run. */
+  httpPoints: 20_000,
+  /** Points of one run. */
+  runPoints: 1_000_000,
+  /** Rounding allowed above |m| = 1. */
+  magnetizationSlack: 1e-9,
+  /** Layers and blocks that one stack document may list. */
+  documentItems: 2_000,
+  nameLength: 120,
+  noteLength: 2_000,
+  /** Bytes of a JSON request body. */
+  bodyBytes: 4_000_000,
+} as const;

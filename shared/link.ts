@@ -1,0 +1,32 @@
+import { z } from 'zod';
+import { LIMITS } from './limits.ts';
+
+export const createLinkSchema = z.strictObject({
+  label: z.string().trim().max(LIMITS.nameLength).default(''),
+  /** When the link stops to open; null or absent for never. */
+  expiresAt: z.iso.datetime().nullable().optional(),
+});
+
+export const linkSchema = z.object({
+  id: z.string(),
+  runId: z.string(),
+  runName: z.string(),
+  label: z.string(),
+  createdAt: z.iso.datetime(),
+  createdBy: z.string().nullable(),
+  expiresAt: z.iso.datetime().nullable(),
+  revokedAt: z.iso.datetime().nullable(),
+  lastUsedAt: z.iso.datetime().nullable(),
+  useCount: z.int(),
+});
+
+/** Only the answer to its making carries the address: the server keeps a hash and cannot show it again. */
+export const createdLinkSchema = linkSchema.extend({ url: z.string() });
+export const linkListSchema = z.object({ links: z.array(linkSchema) });
+
+/** "Open in my group": the shared run's stack becomes a stack of that group. */
+export const openInGroupSchema = z.strictObject({ groupId: z.string() });
+
+export type CreateLink = z.input<typeof createLinkSchema>;
+export type Link = z.infer<typeof linkSchema>;
+export type CreatedLink = z.infer<typeof createdLinkSchema>;

@@ -1,0 +1,135 @@
+import { z } from 'zod';
+import { complexSchema, toComplex, vectorSchema } from './complex.ts';
+import { LIMITS } from './limits.ts';
+
+/**
+ * The constants of a medium as the solve contract writes them. Values may be given once, or as
+ * `{samples: [...]}` with one entry per wavelength of the case.
+ */
+const tensorSchema = z.tuple(
+  [
+    z.tuple([complexSchema, complexSchema, complexSchema]),
+    z.tuple([complexSchema, complexSchema, complexSchema]),
+    z.tuple([complexSchema, complexSchema, complexSchema]),
+  ],
+  { error: 'must be a 3x3 array of numbers or [re, im]' },
+);
+
+export type TensorInput = z.infer<typeof tensorSchema>;
+
+/** A refractive index N = n + ik: the convention exp(-iwt) makes k >= 0 for a medium that absorbs. */
+const indexValueSchema = complexSchema.superRefine((value, context) => {
+  const [n, k] = toComplex(value);
+  if (n < 0) context.addIssue({ code: 'custom', message: `n must be >= 0, got ${n}` });
+  if (k < 0) {
+    context.addIssue({
+      code: 'custom',
+      message: `k must be >= 0, got ${k}: the convention here is N = n + ik (time factor exp(-iwt)), so a source that writes n - ik must change the sign of k; gain is not supported`,
+    });
+  }
+  if (n === 0 && k === 0) context.addIssue({ code: 'custom', message: 'must not be 0' });
+});
+
+const tensorValueSchema = tensorSchema.superRefine((tensor, context) => {
+  const [re, im] = toComplex(tensor[2][2]);
+  if (re === 0 && im === 0) {
+    context.addIssue({ code: 'custom', message: 'eps_zz must not be 0', path: [2, 2] });
+  }
+});
+
+function sampled<Value extends z.ZodType>(value: Value, error: string) {
+  return z.union([value, z.strictObject({ samples: z.array(value).min(1) })], { error });
+}
+
+const indexSchema = sampled(indexValueSchema, 'must be a number, [n, k] or {"samples": [...]}').meta({
+  description: 'Complex refractive index N = n + ik.',
+});
+const voigtSchema = sampled(complexSchema, 'must be a number, [re, im] or {"samples": [...]}').meta({
+  description: 'Complex Voigt constant Q in the canonical sign: for m = +z, eps_xy = i Q eps_d.',
+});
+const epsilonSchema = sampled(tensorValueSchema, 'must be a 3x3 complex array or {"samples": [...]}').meta({
+  description: 'Full permittivity tensor, rows x, y, z; replaces every other key of the medium.',
+});
+
+export const magnetizationSchema = vectorSchema
+  .superRefine((m, context) => {
+    const length = Math.hypot(m[0], m[1], m[2]);
+    if (length > 1 + LIMITS.magnetizationSlack) {
+      context.addIssue({
+        code: 'custom',
+        message: `|m| must be <= 1 (fraction of saturation), got ${length}`,
+      });
+    }
+  })
+  .meta({ description: 'Magnetization as a fraction of saturation: x in the plane of incidence, z into the film.' });
+
+const axisSchema = vectorSchema.superRefine((axis, context) => {
+  if (Math.hypot(axis[0], axis[1], axis[2]) === 0) {
+    context.addIssue({ code: 'custom', message: 'must not be the zero vector' });
+  }
+});
+
+const quadraticSchema = z
+  .strictObject({
+    g11: complexSchema,
+    g12: complexSchema,
+    g44: complexSchema,
+    azimuthDeg: z.number().optional(),
+  })
+  .meta({ description: 'Second order in m of a cubic crystal; azimuthDeg turns [100] from x toward y.' });
+
+/** The keys of a medium given by numbers. Kept apart from the objects so that a layer can carry them inline. */
+export const mediumFields = {
+  index: indexSchema.optional(),
+  voigt: voigtSchema.optional(),
+  m: magnetizationSchema.optional(),
+  extraordinary: indexSchema.optional(),
+  axis: axisSchema.optional(),
+  quadratic: quadraticSchema.optional(),
+  epsilon: epsilonSchema.optional(),
+};
+
+export const libraryFields = {
+  material: z.string().min(1).max(80).optional().meta({ description: 'Id of a material in the library.' }),
+  version: z.int().min(1).optional().meta({ description: 'Version of that material; the newest when left out.' }),
+  assumeConstant: z
+    .boolean()
+    .optional()
+    .meta({ description: 'Use a constant known at one wavelength at every other one too.' }),
+};
+
+const mediumObjectSchema = z.strictObject(mediumFields);
+const libraryMediumObjectSchema = z.strictObject({ ...mediumFields, ...libraryFields });
+
+export type MediumInput = z.infer<typeof mediumObjectSchema>;
+export type LibraryMediumInput = z.infer<typeof libraryMediumObjectSchema>;
+
+/** Rules between the keys of one medium. `extra` keys of the object (thicknessNm of a layer) do not count. */
+export function checkMediumKeys(medium: LibraryMediumInput, context: z.RefinementCtx): void {
+  const refuse = (path: string, message: string) => context.addIssue({ code: 'custom', message, path: [path] });
+  if (medium.material !== undefined) {
+    for (const key of ['index', 'voigt', 'extraordinary', 'axis', 'quadratic', 'epsilon'] as const) {
+      if (medium[key] !== undefined) refuse(key, 'cannot stand beside material: the library gives the constants');
+    }
+    return;
+  }
+  if (medium.version !== undefined) refuse('version', 'needs material');
+  if (medium.assumeConstant !== undefined) refuse('assumeConstant', 'needs material');
+  if (medium.epsilon !== undefined) {
+    for (const key of ['index', 'voigt', 'm', 'extraordinary', 'axis', 'quadratic'] as const) {
+      if (medium[key] !== undefined) refuse(key, 'cannot stand beside epsilon, which replaces it');
+    }
+    return;
+  }
+  if (medium.index === undefined) refuse('index', 'is required (or epsilon)');
+  if (medium.quadratic !== undefined && medium.extraordinary !== undefined) {
+    refuse('quadratic', 'cannot stand beside extraordinary');
+  }
+  if (medium.extraordinary !== undefined && medium.axis === undefined) {
+    refuse('axis', 'is required with extraordinary (three numbers)');
+  }
+  if (medium.axis !== undefined && medium.extraordinary === undefined) refuse('axis', 'needs extraordinary');
+}
+
+export const mediumSchema = mediumObjectSchema.superRefine(checkMediumKeys);
+export const libraryMediumSchema = libraryMediumObjectSchema.superRefine(checkMediumKeys);

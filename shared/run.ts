@@ -1,0 +1,150 @@
+import { z } from 'zod';
+import { LIMITS } from './limits.ts';
+import { sourceSchema } from './material.ts';
+import { solveWarningSchema } from './solve.ts';
+import { stackDocumentSchema, stackNameSchema } from './stack.ts';
+
+/** What a run stores at each point. Angles in degrees, the rest dimensionless. `readings.ts` defines each. */
+export const readingNames = [
+  'rotationP',
+  'ellipticityP',
+  'rotationS',
+  'ellipticityS',
+  'reflectanceP',
+  'reflectanceS',
+  'crossSp',
+  'crossPs',
+  'contrastP',
+  'contrastS',
+  'transmittanceP',
+  'transmittanceS',
+  'absorptanceP',
+  'absorptanceS',
+] as const;
+
+export type ReadingName = (typeof readingNames)[number];
+
+const span = {
+  points: z.int().min(1).max(LIMITS.runPoints),
+  spacing: z.enum(['linear', 'log']),
+};
+
+/** The swept quantity. Ends are included; `from` may exceed `to`. Log spacing needs both ends > 0. */
+export const axisSchema = z
+  .discriminatedUnion('kind', [
+    z.strictObject({
+      kind: z.literal('wavelength'),
+      from: z.number().positive(),
+      to: z.number().positive(),
+      ...span,
+    }),
+    z.strictObject({
+      kind: z.literal('angle'),
+      from: z.number().min(0).lt(90),
+      to: z.number().min(0).lt(90),
+      ...span,
+    }),
+    z.strictObject({
+      kind: z.literal('thickness'),
+      layerId: z.string(),
+      from: z.number().min(0),
+      to: z.number().min(0),
+      ...span,
+    }),
+  ])
+  .superRefine((axis, context) => {
+    if (axis.spacing === 'log' && (axis.from === 0 || axis.to === 0)) {
+      context.addIssue({
+        code: 'custom',
+        path: [axis.from === 0 ? 'from' : 'to'],
+        message: 'must be > 0 with log spacing',
+      });
+    }
+  });
+
+export type SweepAxis = z.infer<typeof axisSchema>;
+export type AxisKind = SweepAxis['kind'];
+
+export const createRunSchema = z.strictObject({
+  name: stackNameSchema.optional(),
+  /** The stack the document comes from, when it is a saved one. */
+  stackId: z.string().optional(),
+  document: stackDocumentSchema,
+  axis: axisSchema,
+  readings: z.array(z.enum(readingNames)).min(1).max(readingNames.length).optional(),
+});
+
+export type CreateRun = z.infer<typeof createRunSchema>;
+
+export const runStates = ['queued', 'running', 'done', 'failed', 'cancelled'] as const;
+export type RunState = (typeof runStates)[number];
+
+export const runProgressSchema = z.object({
+  state: z.enum(runStates),
+  done: z.int(),
+  total: z.int(),
+  /** Seconds left by the rate so far; null while there is no rate. */
+  secondsLeft: z.number().nullable(),
+  error: z.string().nullable(),
+});
+
+export type RunProgress = z.infer<typeof runProgressSchema>;
+
+export const runSummarySchema = z.object({
+  id: z.string(),
+  groupId: z.string(),
+  name: z.string(),
+  stackId: z.string().nullable(),
+  stackName: z.string().nullable(),
+  axis: axisSchema,
+  progress: runProgressSchema,
+  createdAt: z.iso.datetime(),
+  finishedAt: z.iso.datetime().nullable(),
+  createdBy: z.string().nullable(),
+  isDemo: z.boolean(),
+});
+
+/** A constant that went into a run: what it is called in the stack, where it comes from, how it was used. */
+export const usedMaterialSchema = z.object({
+  id: z.string(),
+  version: z.int(),
+  name: z.string(),
+  formula: z.string(),
+  class: z.string(),
+  indexSource: sourceSchema,
+  voigtSource: sourceSchema.nullable(),
+  rangeNm: z.tuple([z.number(), z.number()]),
+  voigtRangeNm: z.tuple([z.number(), z.number()]).nullable(),
+  /** True where a constant known at one wavelength was used at others, as the user allowed. */
+  assumedConstant: z.boolean(),
+});
+
+export type UsedMaterial = z.infer<typeof usedMaterialSchema>;
+
+const snapshotFields = {
+  document: stackDocumentSchema,
+  readings: z.array(z.enum(readingNames)),
+  materials: z.array(usedMaterialSchema),
+  warnings: z.array(solveWarningSchema),
+  /** Sentences that say what the numbers rest on; shown in full wherever the run is. */
+  assumptions: z.array(z.string()),
+  solverVersion: z.string(),
+  inputSha256: z.string(),
+  computeSeconds: z.number().nullable(),
+};
+
+export const runSchema = runSummarySchema.extend(snapshotFields);
+export const runListSchema = z.object({ runs: z.array(runSummarySchema) });
+
+export type RunSummary = z.infer<typeof runSummarySchema>;
+export type Run = z.infer<typeof runSchema>;
+
+/** A run as a share link shows it: nothing of the group but the run itself. */
+export const sharedRunSchema = z.object({
+  name: z.string(),
+  axis: axisSchema,
+  finishedAt: z.iso.datetime().nullable(),
+  ...snapshotFields,
+});
+
+export type SharedRun = z.infer<typeof sharedRunSchema>;

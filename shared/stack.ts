@@ -1,0 +1,137 @@
+import { z } from 'zod';
+import { vectorSchema } from './complex.ts';
+import { LIMITS } from './limits.ts';
+import { checkMediumKeys, libraryFields, magnetizationSchema, mediumFields } from './medium.ts';
+
+/**
+ * A stack as people edit it: media by library id or by typed-in constants, every layer with an id of its own so
+ * that a sweep can name it however the stack is reordered. stackCase.ts turns it into a solve case.
+ */
+const { m: _m, ...constantFields } = mediumFields;
+
+/** What fills a layer: `{material, version}` of the library, or constants typed in (then `label` names them). */
+export const stackMediumSchema = z
+  .strictObject({
+    ...constantFields,
+    ...libraryFields,
+    label: z.string().max(LIMITS.nameLength).optional(),
+  })
+  .superRefine(checkMediumKeys);
+
+export type StackMedium = z.infer<typeof stackMediumSchema>;
+
+const itemId = z.string().min(1).max(40);
+
+export const stackLayerSchema = z.strictObject({
+  id: itemId,
+  medium: stackMediumSchema,
+  thicknessNm: z.number().min(0),
+  /** Magnetization of a magnetic layer; absent for a layer that is not magnetic. */
+  m: magnetizationSchema.optional(),
+  /** A fixed layer keeps its m when the working point reverses or replaces the magnetization. */
+  fixed: z.boolean().optional(),
+  /** Role in the film, such as cap or buffer. */
+  note: z.string().max(LIMITS.nameLength).optional(),
+});
+
+export type StackLayer = z.infer<typeof stackLayerSchema>;
+export type StackBlock = { id: string; repeat: number; layers: StackItem[] };
+export type StackItem = StackLayer | StackBlock;
+
+export const stackItemSchema: z.ZodType<StackItem, StackItem> = z.lazy(() =>
+  z.union(
+    [
+      stackLayerSchema,
+      z.strictObject({
+        id: itemId,
+        repeat: z.int().min(0).max(LIMITS.repeat),
+        layers: z.array(stackItemSchema).max(LIMITS.documentItems),
+      }),
+    ],
+    { error: 'must be a layer or a block {"id", "repeat", "layers"}' },
+  ),
+);
+
+export const polarizations = ['p', 's'] as const;
+export type Polarization = (typeof polarizations)[number];
+
+/** Whose magnetization the readings are for: as drawn, reversed, or one direction in every layer not fixed. */
+export const workingMagnetizationSchema = z.discriminatedUnion('mode', [
+  z.strictObject({ mode: z.literal('drawn') }),
+  z.strictObject({ mode: z.literal('reversed') }),
+  z.strictObject({ mode: z.literal('direction'), m: vectorSchema.pipe(magnetizationSchema) }),
+]);
+
+export type WorkingMagnetization = z.infer<typeof workingMagnetizationSchema>;
+
+/** Where the readings strip stands. */
+export const workingPointSchema = z.strictObject({
+  wavelengthNm: z.number().positive(),
+  angleDeg: z.number().min(0).lt(90),
+  input: z.enum(polarizations),
+  magnetization: workingMagnetizationSchema,
+});
+
+export type WorkingPoint = z.infer<typeof workingPointSchema>;
+
+export const stackDocumentSchema = z
+  .strictObject({
+    incident: stackMediumSchema,
+    layers: z.array(stackItemSchema).max(LIMITS.documentItems),
+    substrate: stackMediumSchema,
+    /** Magnetization of a magnetic substrate. */
+    substrateM: magnetizationSchema.optional(),
+    workingPoint: workingPointSchema,
+  })
+  .superRefine((document, context) => {
+    const seen = new Set<string>();
+    const visit = (items: StackItem[], path: (string | number)[]) => {
+      items.forEach((item, position) => {
+        const here = [...path, position];
+        if (seen.has(item.id)) {
+          context.addIssue({ code: 'custom', path: [...here, 'id'], message: `is used twice: ${item.id}` });
+        }
+        seen.add(item.id);
+        if ('layers' in item) visit(item.layers, [...here, 'layers']);
+      });
+    };
+    visit(document.layers, ['layers']);
+  });
+
+export type StackDocument = z.infer<typeof stackDocumentSchema>;
+
+export const stackNameSchema = z.string().trim().min(1).max(LIMITS.nameLength);
+
+export const createStackSchema = z.strictObject({
+  name: stackNameSchema,
+  description: z.string().max(LIMITS.noteLength).default(''),
+  document: stackDocumentSchema,
+});
+
+/** `version` is the one the edit started from: a save over someone else's newer version is a conflict (409). */
+export const updateStackSchema = z.strictObject({
+  version: z.int().min(1),
+  name: stackNameSchema.optional(),
+  description: z.string().max(LIMITS.noteLength).optional(),
+  document: stackDocumentSchema.optional(),
+});
+
+export const stackSummarySchema = z.object({
+  id: z.string(),
+  groupId: z.string(),
+  name: z.string(),
+  description: z.string(),
+  version: z.int(),
+  layerCount: z.int().meta({ description: 'Layers after blocks are expanded.' }),
+  isDemo: z.boolean(),
+  updatedAt: z.iso.datetime(),
+  updatedBy: z.string().nullable().meta({ description: 'Name of the person who saved this version.' }),
+});
+
+export const stackSchema = stackSummarySchema.extend({ document: stackDocumentSchema });
+export const stackListSchema = z.object({ stacks: z.array(stackSummarySchema) });
+
+export type CreateStack = z.input<typeof createStackSchema>;
+export type UpdateStack = z.infer<typeof updateStackSchema>;
+export type StackSummary = z.infer<typeof stackSummarySchema>;
+export type Stack = z.infer<typeof stackSchema>;
