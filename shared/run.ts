@@ -66,6 +66,7 @@ export type SweepAxis = z.infer<typeof axisSchema>;
 export type AxisKind = SweepAxis['kind'];
 
 export const createRunSchema = z.strictObject({
+  groupId: z.string(),
   name: stackNameSchema.optional(),
   /** The stack the document comes from, when it is a saved one. */
   stackId: z.string().optional(),
