@@ -1,5 +1,6 @@
 import { z } from 'zod';
 import { LIMITS } from './limits.ts';
+import { strictObject } from './strictObject.ts';
 
 export const roles = ['owner', 'editor', 'viewer'] as const;
 export type Role = (typeof roles)[number];
@@ -11,10 +12,10 @@ const password = z
   .max(200, { error: 'must have at most 200 characters' });
 const personName = z.string().trim().min(1, { error: 'must not be empty' }).max(LIMITS.nameLength);
 
-export const signInSchema = z.strictObject({ email, password: z.string().min(1).max(200) });
-export const signUpSchema = z.strictObject({ name: personName, email, password });
-export const requestPasswordResetSchema = z.strictObject({ email });
-export const resetPasswordSchema = z.strictObject({ token: z.string().min(1).max(200), password });
+export const signInSchema = strictObject({ email, password: z.string().min(1, { error: 'must not be empty' }).max(200) });
+export const signUpSchema = strictObject({ name: personName, email, password });
+export const requestPasswordResetSchema = strictObject({ email });
+export const resetPasswordSchema = strictObject({ token: z.string().min(1).max(200), password });
 
 export const userSchema = z.object({
   id: z.string(),
@@ -42,10 +43,10 @@ export const memberSchema = z.object({
   joinedAt: z.iso.datetime(),
 });
 export const memberListSchema = z.object({ members: z.array(memberSchema) });
-export const addMemberSchema = z.strictObject({ email, role: z.enum(roles) });
-export const changeRoleSchema = z.strictObject({ role: z.enum(roles) });
+export const addMemberSchema = strictObject({ email, role: z.enum(roles) });
+export const changeRoleSchema = strictObject({ role: z.enum(roles) });
 
-export const createTokenSchema = z.strictObject({ name: personName });
+export const createTokenSchema = strictObject({ name: personName });
 export const tokenSchema = z.object({
   id: z.string(),
   name: z.string(),

@@ -2,6 +2,7 @@ import { z } from 'zod';
 import { vectorSchema } from './complex.ts';
 import { LIMITS } from './limits.ts';
 import { checkMediumKeys, libraryFields, magnetizationSchema, mediumFields } from './medium.ts';
+import { strictObject } from './strictObject.ts';
 
 /**
  * A stack as people edit it: media by library id or by typed-in constants, every layer with an id of its own so
@@ -10,19 +11,17 @@ import { checkMediumKeys, libraryFields, magnetizationSchema, mediumFields } fro
 const { m: _m, ...constantFields } = mediumFields;
 
 /** What fills a layer: `{material, version}` of the library, or constants typed in (then `label` names them). */
-export const stackMediumSchema = z
-  .strictObject({
-    ...constantFields,
-    ...libraryFields,
-    label: z.string().max(LIMITS.nameLength).optional(),
-  })
-  .superRefine(checkMediumKeys);
+export const stackMediumSchema = strictObject({
+  ...constantFields,
+  ...libraryFields,
+  label: z.string().max(LIMITS.nameLength).optional(),
+}).superRefine(checkMediumKeys);
 
 export type StackMedium = z.infer<typeof stackMediumSchema>;
 
 const itemId = z.string().min(1).max(40);
 
-export const stackLayerSchema = z.strictObject({
+export const stackLayerSchema = strictObject({
   id: itemId,
   medium: stackMediumSchema,
   thicknessNm: z.number().min(0),
@@ -42,7 +41,7 @@ export const stackItemSchema: z.ZodType<StackItem, StackItem> = z.lazy(() =>
   z.union(
     [
       stackLayerSchema,
-      z.strictObject({
+      strictObject({
         id: itemId,
         repeat: z.int().min(0).max(LIMITS.repeat),
         layers: z.array(stackItemSchema).max(LIMITS.documentItems),
@@ -57,15 +56,15 @@ export type Polarization = (typeof polarizations)[number];
 
 /** Whose magnetization the readings are for: as drawn, reversed, or one direction in every layer not fixed. */
 export const workingMagnetizationSchema = z.discriminatedUnion('mode', [
-  z.strictObject({ mode: z.literal('drawn') }),
-  z.strictObject({ mode: z.literal('reversed') }),
-  z.strictObject({ mode: z.literal('direction'), m: vectorSchema.pipe(magnetizationSchema) }),
+  strictObject({ mode: z.literal('drawn') }),
+  strictObject({ mode: z.literal('reversed') }),
+  strictObject({ mode: z.literal('direction'), m: vectorSchema.pipe(magnetizationSchema) }),
 ]);
 
 export type WorkingMagnetization = z.infer<typeof workingMagnetizationSchema>;
 
 /** Where the readings strip stands. */
-export const workingPointSchema = z.strictObject({
+export const workingPointSchema = strictObject({
   wavelengthNm: z.number().positive(),
   angleDeg: z.number().min(0).lt(90),
   input: z.enum(polarizations),
@@ -74,42 +73,44 @@ export const workingPointSchema = z.strictObject({
 
 export type WorkingPoint = z.infer<typeof workingPointSchema>;
 
-export const stackDocumentSchema = z
-  .strictObject({
-    incident: stackMediumSchema,
-    layers: z.array(stackItemSchema).max(LIMITS.documentItems),
-    substrate: stackMediumSchema,
-    /** Magnetization of a magnetic substrate. */
-    substrateM: magnetizationSchema.optional(),
-    workingPoint: workingPointSchema,
-  })
-  .superRefine((document, context) => {
-    const seen = new Set<string>();
-    const visit = (items: StackItem[], path: (string | number)[]) => {
-      items.forEach((item, position) => {
-        const here = [...path, position];
-        if (seen.has(item.id)) {
-          context.addIssue({ code: 'custom', path: [...here, 'id'], message: `is used twice: ${item.id}` });
-        }
-        seen.add(item.id);
-        if ('layers' in item) visit(item.layers, [...here, 'layers']);
-      });
-    };
-    visit(document.layers, ['layers']);
-  });
+export const stackDocumentSchema = strictObject({
+  incident: stackMediumSchema,
+  layers: z.array(stackItemSchema).max(LIMITS.documentItems),
+  substrate: stackMediumSchema,
+  /** Magnetization of a magnetic substrate. */
+  substrateM: magnetizationSchema.optional(),
+  workingPoint: workingPointSchema,
+}).superRefine((document, context) => {
+  const seen = new Set<string>();
+  const visit = (items: StackItem[], path: (string | number)[]) => {
+    items.forEach((item, position) => {
+      const here = [...path, position];
+      if (seen.has(item.id)) {
+        context.addIssue({ code: 'custom', path: [...here, 'id'], message: `is used twice: ${item.id}` });
+      }
+      seen.add(item.id);
+      if ('layers' in item) visit(item.layers, [...here, 'layers']);
+    });
+  };
+  visit(document.layers, ['layers']);
+});
 
 export type StackDocument = z.infer<typeof stackDocumentSchema>;
 
-export const stackNameSchema = z.string().trim().min(1).max(LIMITS.nameLength);
+export const stackNameSchema = z
+  .string()
+  .trim()
+  .min(1, { error: 'must not be empty' })
+  .max(LIMITS.nameLength, { error: `must have at most ${LIMITS.nameLength} characters` });
 
-export const createStackSchema = z.strictObject({
+export const createStackSchema = strictObject({
   name: stackNameSchema,
   description: z.string().max(LIMITS.noteLength).default(''),
   document: stackDocumentSchema,
 });
 
 /** `version` is the one the edit started from: a save over someone else's newer version is a conflict (409). */
-export const updateStackSchema = z.strictObject({
+export const updateStackSchema = strictObject({
   version: z.int().min(1),
   name: stackNameSchema.optional(),
   description: z.string().max(LIMITS.noteLength).optional(),
