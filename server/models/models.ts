@@ -1,0 +1,56 @@
+import { Sequelize } from 'sequelize';
+import { defineActivity } from './activity.ts';
+import { defineApiToken } from './apiToken.ts';
+import { defineGroup } from './group.ts';
+import { defineMaterial } from './material.ts';
+import { defineMaterialVersion } from './materialVersion.ts';
+import { defineMembership } from './membership.ts';
+import { definePasswordReset } from './passwordReset.ts';
+import { defineRun } from './run.ts';
+import { defineRunChunk } from './runChunk.ts';
+import { defineShareLink } from './shareLink.ts';
+import { defineStack } from './stack.ts';
+import { defineStackVersion } from './stackVersion.ts';
+import { defineUser } from './user.ts';
+
+export type Models = ReturnType<typeof createModels>;
+
+/**
+ * A connection pool to PostgreSQL and the models on it; nothing is global, so that tests and tools can hold several.
+ * Connects at the first query. End it with `models.sequelize.close()`.
+ */
+export function createModels(databaseUrl: string) {
+  const sequelize = new Sequelize(databaseUrl, {
+    dialect: 'postgres',
+    logging: false,
+    define: { underscored: true },
+    // A request waits at most this long for the database before it is told that the database is away.
+    pool: { max: 10, min: 0, acquire: 5_000, idle: 10_000 },
+    dialectOptions: { connectionTimeoutMillis: 4_000, keepAlive: true },
+  });
+  const models = {
+    sequelize,
+    User: defineUser(sequelize),
+    Group: defineGroup(sequelize),
+    Membership: defineMembership(sequelize),
+    ApiToken: defineApiToken(sequelize),
+    PasswordReset: definePasswordReset(sequelize),
+    Material: defineMaterial(sequelize),
+    MaterialVersion: defineMaterialVersion(sequelize),
+    Stack: defineStack(sequelize),
+    StackVersion: defineStackVersion(sequelize),
+    Run: defineRun(sequelize),
+    RunChunk: defineRunChunk(sequelize),
+    ShareLink: defineShareLink(sequelize),
+    Activity: defineActivity(sequelize),
+  };
+  const { User, Group, Membership, StackVersion, Run, ShareLink } = models;
+  Membership.belongsTo(User, { as: 'user', foreignKey: 'userId' });
+  Membership.belongsTo(Group, { as: 'group', foreignKey: 'groupId' });
+  StackVersion.belongsTo(User, { as: 'author', foreignKey: 'authorId' });
+  Run.belongsTo(User, { as: 'createdBy', foreignKey: 'createdById' });
+  Run.belongsTo(Group, { as: 'group', foreignKey: 'groupId' });
+  ShareLink.belongsTo(User, { as: 'createdBy', foreignKey: 'createdById' });
+  ShareLink.belongsTo(Run, { as: 'run', foreignKey: 'runId' });
+  return models;
+}
