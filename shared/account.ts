@@ -12,7 +12,10 @@ const password = z
   .max(200, { error: 'must have at most 200 characters' });
 const personName = z.string().trim().min(1, { error: 'must not be empty' }).max(LIMITS.nameLength);
 
-export const signInSchema = strictObject({ email, password: z.string().min(1, { error: 'must not be empty' }).max(200) });
+export const signInSchema = strictObject({
+  email,
+  password: z.string().min(1, { error: 'must not be empty' }).max(200),
+});
 export const signUpSchema = strictObject({ name: personName, email, password });
 export const requestPasswordResetSchema = strictObject({ email });
 export const resetPasswordSchema = strictObject({ token: z.string().min(1).max(200), password });

@@ -1,7 +1,8 @@
 import { z } from 'zod';
 import { LIMITS } from './limits.ts';
+import { strictObject } from './strictObject.ts';
 
-export const createLinkSchema = z.strictObject({
+export const createLinkSchema = strictObject({
   label: z.string().trim().max(LIMITS.nameLength).default(''),
   /** When the link stops to open; null or absent for never. */
   expiresAt: z.iso.datetime().nullable().optional(),
@@ -25,7 +26,7 @@ export const createdLinkSchema = linkSchema.extend({ url: z.string() });
 export const linkListSchema = z.object({ links: z.array(linkSchema) });
 
 /** "Open in my group": the shared run's stack becomes a stack of that group. */
-export const openInGroupSchema = z.strictObject({ groupId: z.string() });
+export const openInGroupSchema = strictObject({ groupId: z.string() });
 
 export type CreateLink = z.input<typeof createLinkSchema>;
 export type Link = z.infer<typeof linkSchema>;

@@ -1,5 +1,6 @@
 import { z } from 'zod';
 import { complexPairSchema } from './complex.ts';
+import { strictObject } from './strictObject.ts';
 
 /** The classes that colour the cross-section. */
 export const materialClasses = ['magnet', 'noble', 'refractory', 'dielectric', 'semiconductor'] as const;
@@ -8,7 +9,7 @@ export type MaterialClass = (typeof materialClasses)[number];
 /** How far a constant can be trusted; shown wherever the constant is used. */
 export const confidences = ['measured', 'fitted', 'from memory', 'invented for the demo'] as const;
 
-export const sourceSchema = z.strictObject({
+export const sourceSchema = strictObject({
   citation: z.string(),
   doi: z.string().nullable(),
   licence: z.string().nullable(),
@@ -23,13 +24,13 @@ const wavelengthsNm = z.array(z.number().positive()).min(1);
 
 /** Refractive index against wavelength: a table in ascending wavelength, a formula, or one point. */
 export const indexDispersionSchema = z.discriminatedUnion('kind', [
-  z.strictObject({
+  strictObject({
     kind: z.literal('table'),
     wavelengthsNm,
     n: z.array(z.number().min(0)),
     k: z.array(z.number().min(0)),
   }),
-  z.strictObject({
+  strictObject({
     kind: z.literal('formula'),
     /** An expression for n (lossless) in the wavelength L in micrometres and the coefficients c1, c2, ... */
     expression: z.string(),
@@ -39,14 +40,14 @@ export const indexDispersionSchema = z.discriminatedUnion('kind', [
 ]);
 
 /** Voigt constant Q in the canonical sign against wavelength; one entry means known at one wavelength only. */
-export const voigtDispersionSchema = z.strictObject({
+export const voigtDispersionSchema = strictObject({
   kind: z.literal('table'),
   wavelengthsNm,
   q: z.array(complexPairSchema),
 });
 
 /** One version of a material as stored: everything a solve needs and where it comes from. */
-export const materialContentSchema = z.strictObject({
+export const materialContentSchema = strictObject({
   index: indexDispersionSchema,
   indexSource: sourceSchema,
   voigt: voigtDispersionSchema.nullable(),
@@ -95,7 +96,7 @@ export type MaterialSummary = z.infer<typeof materialSummarySchema>;
 export type Material = z.infer<typeof materialSchema>;
 
 /** A file of data/library: what the seeder writes into the database under the same id. */
-export const libraryEntrySchema = z.strictObject({
+export const libraryEntrySchema = strictObject({
   id: z.string().regex(/^[a-z0-9-]+$/),
   name: z.string(),
   formula: z.string(),

@@ -1,6 +1,7 @@
 import { z } from 'zod';
 import { complexSchema, toComplex, vectorSchema } from './complex.ts';
 import { LIMITS } from './limits.ts';
+import { strictObject } from './strictObject.ts';
 
 /**
  * The constants of a medium as the solve contract writes them. Values may be given once, or as
@@ -38,7 +39,7 @@ const tensorValueSchema = tensorSchema.superRefine((tensor, context) => {
 });
 
 function sampled<Value extends z.ZodType>(value: Value, error: string) {
-  return z.union([value, z.strictObject({ samples: z.array(value).min(1) })], { error });
+  return z.union([value, strictObject({ samples: z.array(value).min(1) })], { error });
 }
 
 const indexSchema = sampled(indexValueSchema, 'must be a number, [n, k] or {"samples": [...]}').meta({
@@ -61,7 +62,9 @@ export const magnetizationSchema = vectorSchema
       });
     }
   })
-  .meta({ description: 'Magnetization as a fraction of saturation: x in the plane of incidence, z into the film.' });
+  .meta({
+    description: 'Magnetization as a fraction of saturation: x in the plane of incidence, z into the film.',
+  });
 
 const axisSchema = vectorSchema.superRefine((axis, context) => {
   if (Math.hypot(axis[0], axis[1], axis[2]) === 0) {
@@ -69,14 +72,12 @@ const axisSchema = vectorSchema.superRefine((axis, context) => {
   }
 });
 
-const quadraticSchema = z
-  .strictObject({
-    g11: complexSchema,
-    g12: complexSchema,
-    g44: complexSchema,
-    azimuthDeg: z.number().optional(),
-  })
-  .meta({ description: 'Second order in m of a cubic crystal; azimuthDeg turns [100] from x toward y.' });
+const quadraticSchema = strictObject({
+  g11: complexSchema,
+  g12: complexSchema,
+  g44: complexSchema,
+  azimuthDeg: z.number().optional(),
+}).meta({ description: 'Second order in m of a cubic crystal; azimuthDeg turns [100] from x toward y.' });
 
 /** The keys of a medium given by numbers. Kept apart from the objects so that a layer can carry them inline. */
 export const mediumFields = {
@@ -91,25 +92,31 @@ export const mediumFields = {
 
 export const libraryFields = {
   material: z.string().min(1).max(80).optional().meta({ description: 'Id of a material in the library.' }),
-  version: z.int().min(1).optional().meta({ description: 'Version of that material; the newest when left out.' }),
+  version: z
+    .int()
+    .min(1)
+    .optional()
+    .meta({ description: 'Version of that material; the newest when left out.' }),
   assumeConstant: z
     .boolean()
     .optional()
     .meta({ description: 'Use a constant known at one wavelength at every other one too.' }),
 };
 
-const mediumObjectSchema = z.strictObject(mediumFields);
-const libraryMediumObjectSchema = z.strictObject({ ...mediumFields, ...libraryFields });
+const mediumObjectSchema = strictObject(mediumFields);
+const libraryMediumObjectSchema = strictObject({ ...mediumFields, ...libraryFields });
 
 export type MediumInput = z.infer<typeof mediumObjectSchema>;
 export type LibraryMediumInput = z.infer<typeof libraryMediumObjectSchema>;
 
 /** Rules between the keys of one medium. `extra` keys of the object (thicknessNm of a layer) do not count. */
 export function checkMediumKeys(medium: LibraryMediumInput, context: z.RefinementCtx): void {
-  const refuse = (path: string, message: string) => context.addIssue({ code: 'custom', message, path: [path] });
+  const refuse = (path: string, message: string) =>
+    context.addIssue({ code: 'custom', message, path: [path] });
   if (medium.material !== undefined) {
     for (const key of ['index', 'voigt', 'extraordinary', 'axis', 'quadratic', 'epsilon'] as const) {
-      if (medium[key] !== undefined) refuse(key, 'cannot stand beside material: the library gives the constants');
+      if (medium[key] !== undefined)
+        refuse(key, 'cannot stand beside material: the library gives the constants');
     }
     return;
   }

@@ -3,6 +3,7 @@ import { LIMITS } from './limits.ts';
 import { sourceSchema } from './material.ts';
 import { solveWarningSchema } from './solve.ts';
 import { stackDocumentSchema, stackNameSchema } from './stack.ts';
+import { strictObject } from './strictObject.ts';
 
 /** What a run stores at each point. Angles in degrees, the rest dimensionless. `readings.ts` defines each. */
 export const readingNames = [
@@ -32,19 +33,19 @@ const span = {
 /** The swept quantity. Ends are included; `from` may exceed `to`. Log spacing needs both ends > 0. */
 export const axisSchema = z
   .discriminatedUnion('kind', [
-    z.strictObject({
+    strictObject({
       kind: z.literal('wavelength'),
       from: z.number().positive(),
       to: z.number().positive(),
       ...span,
     }),
-    z.strictObject({
+    strictObject({
       kind: z.literal('angle'),
       from: z.number().min(0).lt(90),
       to: z.number().min(0).lt(90),
       ...span,
     }),
-    z.strictObject({
+    strictObject({
       kind: z.literal('thickness'),
       layerId: z.string(),
       from: z.number().min(0),
@@ -65,7 +66,7 @@ export const axisSchema = z
 export type SweepAxis = z.infer<typeof axisSchema>;
 export type AxisKind = SweepAxis['kind'];
 
-export const createRunSchema = z.strictObject({
+export const createRunSchema = strictObject({
   groupId: z.string(),
   name: stackNameSchema.optional(),
   /** The stack the document comes from, when it is a saved one. */

@@ -3,6 +3,7 @@ import { complexPairSchema } from './complex.ts';
 import { LIMITS } from './limits.ts';
 import { checkMediumKeys, libraryFields, libraryMediumSchema, mediumFields, mediumSchema } from './medium.ts';
 import type { LibraryMediumInput, MediumInput } from './medium.ts';
+import { strictObject } from './strictObject.ts';
 
 /**
  * The stateless entry to the numeric core, the same on the command line and over HTTP.
@@ -14,7 +15,11 @@ const angle = z.number().min(0).lt(90);
 
 const thicknessNm = z.number().min(0).meta({ description: 'Layer thickness in nm.' });
 
-const repeat = z.int().min(0).max(LIMITS.repeat).meta({ description: 'How often the block stands in the stack.' });
+const repeat = z
+  .int()
+  .min(0)
+  .max(LIMITS.repeat)
+  .meta({ description: 'How often the block stands in the stack.' });
 
 export type LayerInput = MediumInput & { thicknessNm: number };
 export type BlockInput = { repeat: number; layers: StackItemInput[] };
@@ -24,19 +29,19 @@ export type LibraryLayerInput = LibraryMediumInput & { thicknessNm: number };
 export type LibraryBlockInput = { repeat: number; layers: LibraryStackItemInput[] };
 export type LibraryStackItemInput = LibraryLayerInput | LibraryBlockInput;
 
-const layerSchema = z.strictObject({ thicknessNm, ...mediumFields }).superRefine(checkMediumKeys);
-const libraryLayerSchema = z
-  .strictObject({ thicknessNm, ...mediumFields, ...libraryFields })
-  .superRefine(checkMediumKeys);
+const layerSchema = strictObject({ thicknessNm, ...mediumFields }).superRefine(checkMediumKeys);
+const libraryLayerSchema = strictObject({ thicknessNm, ...mediumFields, ...libraryFields }).superRefine(
+  checkMediumKeys,
+);
 
 const stackItemSchema: z.ZodType<StackItemInput, StackItemInput> = z.lazy(() =>
-  z.union([layerSchema, z.strictObject({ repeat, layers: z.array(stackItemSchema) })], {
+  z.union([layerSchema, strictObject({ repeat, layers: z.array(stackItemSchema) })], {
     error: 'must be a layer or a block {"repeat", "layers"}',
   }),
 );
 
 const libraryStackItemSchema: z.ZodType<LibraryStackItemInput, LibraryStackItemInput> = z.lazy(() =>
-  z.union([libraryLayerSchema, z.strictObject({ repeat, layers: z.array(libraryStackItemSchema) })], {
+  z.union([libraryLayerSchema, strictObject({ repeat, layers: z.array(libraryStackItemSchema) })], {
     error: 'must be a layer or a block {"repeat", "layers"}',
   }),
 );
@@ -56,22 +61,22 @@ const caseFields = {
   }),
 };
 
-export const solveCaseSchema = z.strictObject({
+export const solveCaseSchema = strictObject({
   ...caseFields,
   incident: mediumSchema,
   layers: z.array(stackItemSchema),
   substrate: mediumSchema,
 });
 
-export const librarySolveCaseSchema = z.strictObject({
+export const librarySolveCaseSchema = strictObject({
   ...caseFields,
   incident: libraryMediumSchema,
   layers: z.array(libraryStackItemSchema),
   substrate: libraryMediumSchema,
 });
 
-export const solveRequestSchema = z.strictObject({ cases: z.array(solveCaseSchema).min(1) });
-export const librarySolveRequestSchema = z.strictObject({ cases: z.array(librarySolveCaseSchema).min(1) });
+export const solveRequestSchema = strictObject({ cases: z.array(solveCaseSchema).min(1) });
+export const librarySolveRequestSchema = strictObject({ cases: z.array(librarySolveCaseSchema).min(1) });
 
 export type SolveCase = z.infer<typeof solveCaseSchema>;
 export type LibrarySolveCase = z.infer<typeof librarySolveCaseSchema>;
@@ -107,9 +112,9 @@ export const solveResponseSchema = z.object({
   results: z.array(
     z.object({
       points: z.array(solvePointSchema),
-      resolved: solveCaseSchema
-        .optional()
-        .meta({ description: 'Over HTTP, when a medium was named by library id: the case with the samples used.' }),
+      resolved: solveCaseSchema.optional().meta({
+        description: 'Over HTTP, when a medium was named by library id: the case with the samples used.',
+      }),
     }),
   ),
   warnings: z.array(solveWarningSchema).optional(),

@@ -23,7 +23,12 @@ export function toSolveCase(
   magnetization: WorkingMagnetization = document.workingPoint.magnetization,
 ): LibrarySolveCase {
   const layerOf = (layer: StackLayer): LibraryStackItemInput => ({
-    ...mediumOf(layer.medium, workingM(layer.m, layer.fixed ?? false, magnetization), magnetization, layer.fixed),
+    ...mediumOf(
+      layer.medium,
+      workingM(layer.m, layer.fixed ?? false, magnetization),
+      magnetization,
+      layer.fixed,
+    ),
     thicknessNm: layer.thicknessNm,
   });
   const itemOf = (item: StackItem): LibraryStackItemInput =>
@@ -33,11 +38,19 @@ export function toSolveCase(
     angleDeg,
     incident: mediumOf(document.incident, undefined, magnetization),
     layers: document.layers.map(itemOf),
-    substrate: mediumOf(document.substrate, workingM(document.substrateM, false, magnetization), magnetization),
+    substrate: mediumOf(
+      document.substrate,
+      workingM(document.substrateM, false, magnetization),
+      magnetization,
+    ),
   };
 }
 
-function workingM(m: Vector | undefined, fixed: boolean, magnetization: WorkingMagnetization): Vector | undefined {
+function workingM(
+  m: Vector | undefined,
+  fixed: boolean,
+  magnetization: WorkingMagnetization,
+): Vector | undefined {
   if (m === undefined || fixed) return m;
   switch (magnetization.mode) {
     case 'drawn':
@@ -61,7 +74,10 @@ function mediumOf(
 }
 
 /** The case with every magnetization taken away (`zero`) or turned round (`reversed`), free tensors included. */
-export function inMagnetizationState<Case extends LibrarySolveCase>(given: Case, state: MagnetizationState): Case {
+export function inMagnetizationState<Case extends LibrarySolveCase>(
+  given: Case,
+  state: MagnetizationState,
+): Case {
   if (state === 'given') return given;
   const change = <Medium extends LibraryMediumInput>(medium: Medium): Medium => {
     const tensors = state === 'zero' ? symmetricTensor(medium) : reversedTensor(medium);

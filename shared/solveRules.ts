@@ -1,0 +1,134 @@
+import type { ComplexInput } from './complex.ts';
+import { toComplex } from './complex.ts';
+import type { Issue } from './error.ts';
+import { LIMITS } from './limits.ts';
+import type { LibraryMediumInput } from './medium.ts';
+import type { LibrarySolveCase, LibrarySolveRequest, LibraryStackItemInput } from './solve.ts';
+
+/** Keys of the contract that a later version brings; until then they are refused in these words. */
+export const NOT_AVAILABLE_YET = {
+  outputs: 'is not available yet',
+  backside: 'is not available yet',
+} as const;
+
+/**
+ * The rules of a request that need more than one field: counts of samples, the incident medium, depth and size of
+ * blocks, number of points. The request has passed its schema. (Warnings come with the answer: worker/optics/warnings.ts.)
+ *
+ * @param limits.maxPoints points (wavelength x angle over all cases) that this entry takes
+ * @param limits.beyond what to do instead, said when there are more
+ */
+export function checkSolveRequest(
+  request: LibrarySolveRequest,
+  limits: { maxPoints: number; beyond: string },
+): Issue[] {
+  const issues: Issue[] = [];
+  let points = 0;
+  request.cases.forEach((one, index) => {
+    const path = `cases[${index}]`;
+    const wavelengths = Array.isArray(one.wavelengthNm) ? one.wavelengthNm.length : 1;
+    points += wavelengths * (Array.isArray(one.angleDeg) ? one.angleDeg.length : 1);
+    forEachMedium(one, (medium, where) => checkSamples(medium, `${path}.${where}`, wavelengths, issues));
+    checkIncident(one.incident, `${path}.incident`, issues);
+    const expanded = expandedLayers(one.layers, `${path}.layers`, 0, issues);
+    if (expanded > LIMITS.expandedLayers) {
+      issues.push({
+        path: `${path}.layers`,
+        message: `must have at most ${LIMITS.expandedLayers} layers after blocks are expanded, got ${expanded}`,
+      });
+    }
+  });
+  if (points > limits.maxPoints) {
+    issues.push({
+      path: 'cases',
+      message: `must have at most ${limits.maxPoints} points (wavelengths x angles over all cases), got ${points}: ${limits.beyond}`,
+    });
+  }
+  return issues;
+}
+
+function expandedLayers(
+  items: LibraryStackItemInput[],
+  path: string,
+  depth: number,
+  issues: Issue[],
+): number {
+  return items.reduce((count, item, index) => {
+    if (!('layers' in item)) return count + 1;
+    if (depth >= LIMITS.blockDepth) {
+      issues.push({
+        path: `${path}[${index}].layers`,
+        message: `blocks may be nested at most ${LIMITS.blockDepth} deep`,
+      });
+      return count;
+    }
+    return count + item.repeat * expandedLayers(item.layers, `${path}[${index}].layers`, depth + 1, issues);
+  }, 0);
+}
+
+function checkSamples(medium: LibraryMediumInput, path: string, wavelengths: number, issues: Issue[]): void {
+  for (const key of ['index', 'voigt', 'extraordinary', 'epsilon'] as const) {
+    const value = medium[key];
+    if (typeof value !== 'object' || !('samples' in value)) continue;
+    if (value.samples.length !== wavelengths) {
+      issues.push({
+        path: `${path}.${key}.samples`,
+        message: `must have one entry per wavelength (${wavelengths}), got ${value.samples.length}`,
+      });
+    }
+  }
+}
+
+/** Light must arrive from an isotropic, lossless, non-magnetic medium (physics.md section 1). */
+function checkIncident(incident: LibraryMediumInput, path: string, issues: Issue[]): void {
+  for (const key of ['extraordinary', 'axis', 'quadratic', 'epsilon'] as const) {
+    if (incident[key] !== undefined) {
+      issues.push({
+        path: `${path}.${key}`,
+        message: 'the incident medium must be isotropic: give index only',
+      });
+    }
+  }
+  for (const key of ['voigt', 'm'] as const) {
+    if (incident[key] !== undefined) {
+      issues.push({
+        path: `${path}.${key}`,
+        message: 'the incident medium must not be magnetic: give index only',
+      });
+    }
+  }
+  indexValues(incident).forEach(({ value, suffix }) => {
+    const [n, k] = toComplex(value);
+    if (k !== 0) {
+      issues.push({
+        path: `${path}.index${suffix}`,
+        message: `the incident medium must not absorb: k must be 0, got ${k}`,
+      });
+    }
+    if (n <= 0) issues.push({ path: `${path}.index${suffix}`, message: `n must be > 0, got ${n}` });
+  });
+}
+
+function indexValues(medium: LibraryMediumInput): { value: ComplexInput; suffix: string }[] {
+  if (medium.index === undefined) return [];
+  if (typeof medium.index === 'object' && 'samples' in medium.index) {
+    return medium.index.samples.map((value, index) => ({ value, suffix: `.samples[${index}]` }));
+  }
+  return [{ value: medium.index, suffix: '' }];
+}
+
+/** Visits incident medium, every layer as written (blocks not expanded) and substrate, with their paths. */
+export function forEachMedium(
+  one: LibrarySolveCase,
+  visit: (medium: LibraryMediumInput, path: string) => void,
+): void {
+  const visitItems = (items: LibraryStackItemInput[], path: string) => {
+    items.forEach((item, index) => {
+      if ('layers' in item) visitItems(item.layers, `${path}[${index}].layers`);
+      else visit(item, `${path}[${index}]`);
+    });
+  };
+  visit(one.incident, 'incident');
+  visitItems(one.layers, 'layers');
+  visit(one.substrate, 'substrate');
+}
