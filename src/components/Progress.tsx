@@ -1,0 +1,48 @@
+import { formatCount, formatDuration } from '../lib/format.ts';
+import { Button } from './Button.tsx';
+
+type ProgressProps = {
+  label: string;
+  done: number;
+  total: number;
+  /** Null while there is no rate to estimate from. */
+  secondsLeft: number | null;
+  onCancel?: (() => void) | undefined;
+  cancelling?: boolean;
+};
+
+/** Long work: how far, how long still, and a way to stop it. */
+export function Progress({ label, done, total, secondsLeft, onCancel, cancelling = false }: ProgressProps) {
+  const share = total > 0 ? Math.min(1, done / total) : 0;
+  const left =
+    secondsLeft === null ? 'estimating the time left' : `about ${formatDuration(secondsLeft)} left`;
+  return (
+    <div className="flex flex-col gap-1.5">
+      <div className="flex flex-wrap items-center gap-x-3 gap-y-1">
+        <span className="font-semibold">{label}</span>
+        <span className="text-note text-muted">
+          {formatCount(done)} of {formatCount(total)} points, {cancelling ? 'stopping' : left}
+        </span>
+        {onCancel ? (
+          <Button tone="plain" className="ml-auto" busy={cancelling} onClick={onCancel}>
+            Cancel
+          </Button>
+        ) : null}
+      </div>
+      <div
+        role="progressbar"
+        aria-label={label}
+        aria-valuemin={0}
+        aria-valuemax={100}
+        aria-valuenow={Math.round(share * 100)}
+        aria-valuetext={`${Math.round(share * 100)} percent, ${left}`}
+        className="h-1.5 overflow-hidden rounded-full bg-line"
+      >
+        <div
+          className="h-full rounded-full bg-accent transition-[width]"
+          style={{ width: `${share * 100}%` }}
+        />
+      </div>
+    </div>
+  );
+}

@@ -1,0 +1,35 @@
+/** Colours a curve may have; each stands for one kind of quantity all over the program. */
+export type PlotTone = 'rotation' | 'ellipticity' | 'reflectance' | 'ink' | 'magnet' | 'accent';
+
+export type PlotSeries = {
+  /** Printed at the curve and beside its value. */
+  name: string;
+  /** Runs in one direction; a Float64Array of a million samples is fine. */
+  x: ArrayLike<number>;
+  /** As many values as x; NaN where there is none, which breaks the line. */
+  y: ArrayLike<number>;
+  tone: PlotTone;
+  dash?: 'solid' | 'dashed' | 'dotted';
+  /** Line width, px. */
+  width?: number;
+  /** Open markers along the line (the mark of s light). */
+  symbol?: 'none' | 'open';
+  /** Which of the y axes: 0 is on the left, the others on the right. */
+  yAxisIndex?: number;
+  /** A value as read out, unit included; as many digits as the axis needs when left out. */
+  format?: (value: number) => string;
+};
+
+export type PlotAxis = {
+  /** Name with unit, such as "angle of incidence (deg)". */
+  label: string;
+  /** Logarithmic; a y axis then shows absolute values. */
+  log?: boolean;
+  /** Values that the scale always encloses, such as 0. */
+  include?: readonly number[];
+  /** A value as read out, unit included. */
+  format?: (value: number) => string;
+};
+
+/** Pixels of the plotting area within the figure. */
+export type PlotFrame = { left: number; right: number; top: number; bottom: number };

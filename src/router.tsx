@@ -1,0 +1,40 @@
+import type { ComponentType } from 'react';
+import { createBrowserRouter } from 'react-router-dom';
+import type { RouteObject } from 'react-router-dom';
+import { RequireSession } from './features/session/components/RequireSession.tsx';
+import { paths } from './lib/paths.ts';
+import { AppLayout } from './routes/layout/AppLayout.tsx';
+import { RouteError } from './routes/layout/RouteError.tsx';
+
+/** A page whose code is fetched when it is first opened. */
+function page(path: string, load: () => Promise<ComponentType>): RouteObject {
+  return { path, lazy: async () => ({ Component: await load() }) };
+}
+
+/** Open to everybody. */
+const openPages = [
+  page(paths.share, async () => (await import('./routes/share/SharePage.tsx')).SharePage),
+  page('*', async () => (await import('./routes/notFound/NotFoundPage.tsx')).NotFoundPage),
+];
+
+/** Behind the sign-in. */
+const groupPages = [
+  page(paths.start, async () => (await import('./routes/start/StartPage.tsx')).StartPage),
+  page(paths.stack, async () => (await import('./routes/stack/StackPage.tsx')).StackPage),
+  page(paths.run, async () => (await import('./routes/run/RunPage.tsx')).RunPage),
+];
+
+export function createRouter() {
+  return createBrowserRouter([
+    {
+      Component: AppLayout,
+      HydrateFallback: () => null,
+      children: [
+        {
+          ErrorBoundary: RouteError,
+          children: [...openPages, { Component: RequireSession, children: groupPages }],
+        },
+      ],
+    },
+  ]);
+}

@@ -1,0 +1,3 @@
+export function RunPage() {
+  return null;
+}

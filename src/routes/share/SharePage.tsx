@@ -1,0 +1,3 @@
+export function SharePage() {
+  return null;
+}

@@ -1,0 +1,3 @@
+export function StackPage() {
+  return null;
+}
