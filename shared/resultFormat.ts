@@ -1,0 +1,169 @@
+import { z } from 'zod';
+import { readingDefinitions } from './readings.ts';
+import { axisSchema, readingNames } from './run.ts';
+import type { ReadingName, SweepAxis } from './run.ts';
+
+/**
+ * The binary file of a run's numbers, the same in the database, over HTTP and in the browser.
+ *
+ *     bytes 0..7      "SKEWRUN" and a zero byte
+ *     bytes 8..11     format version, Uint32
+ *     bytes 12..15    length of the header in bytes, Uint32: a multiple of 8
+ *     bytes 16..      header: JSON in UTF-8, filled up with spaces
+ *     then            Float64 columns of `pointCount` values each: the axis, then header.readings in their order
+ *
+ * All numbers are little-endian. Columns start on 8-byte borders, so that a reader can lay a Float64Array over
+ * each without copying. A reading that does not exist at a point is NaN.
+ */
+const MAGIC = [0x53, 0x4b, 0x45, 0x57, 0x52, 0x55, 0x4e, 0x00];
+const FORMAT_VERSION = 1;
+const PREAMBLE_BYTES = 16;
+const BYTES_PER_VALUE = 8;
+
+const columnSchema = z.object({ name: z.enum(readingNames), unit: z.string() });
+
+const resultHeaderSchema = z.object({
+  axis: axisSchema,
+  axisUnit: z.enum(['nm', 'deg']),
+  readings: z.array(columnSchema),
+  pointCount: z.int().min(1),
+  solverVersion: z.string(),
+  /** SHA-256 of everything the numbers were computed from. */
+  inputSha256: z.string(),
+});
+
+export type ResultHeader = z.infer<typeof resultHeaderSchema>;
+
+export type RunResult = {
+  header: ResultHeader;
+  axis: Float64Array;
+  columns: Partial<Record<ReadingName, Float64Array>>;
+};
+
+/** Bytes that are no result, and where they stop to be one. */
+export class ResultFormatError extends Error {
+  override readonly name = 'ResultFormatError';
+}
+
+export function axisUnitOf(axis: SweepAxis): 'nm' | 'deg' {
+  return axis.kind === 'angle' ? 'deg' : 'nm';
+}
+
+/** The header of a result with these readings, in this order. */
+export function describeResult(
+  axis: SweepAxis,
+  readings: readonly ReadingName[],
+  provenance: { solverVersion: string; inputSha256: string },
+): ResultHeader {
+  return {
+    axis,
+    axisUnit: axisUnitOf(axis),
+    readings: readings.map((name) => ({ name, unit: readingDefinitions[name].unit })),
+    pointCount: axis.points,
+    ...provenance,
+  };
+}
+
+/** Everything before the first column. The columns follow as plain Float64 bytes, so that a file can be streamed. */
+export function encodeResultHeader(header: ResultHeader): Uint8Array {
+  const json = new TextEncoder().encode(JSON.stringify(header));
+  const headerBytes = Math.ceil(json.length / BYTES_PER_VALUE) * BYTES_PER_VALUE;
+  const bytes = new Uint8Array(PREAMBLE_BYTES + headerBytes).fill(0x20);
+  bytes.set(MAGIC);
+  const view = new DataView(bytes.buffer);
+  view.setUint32(8, FORMAT_VERSION, true);
+  view.setUint32(12, headerBytes, true);
+  bytes.set(json, PREAMBLE_BYTES);
+  return bytes;
+}
+
+/** Bytes of the whole file. */
+export function resultByteLength(header: ResultHeader): number {
+  return (
+    encodeResultHeader(header).length + (1 + header.readings.length) * header.pointCount * BYTES_PER_VALUE
+  );
+}
+
+/**
+ * Reads a result. The columns are views into `buffer`, not copies.
+ *
+ * @throws ResultFormatError with the offending value when the bytes are damaged, cut off or of another version
+ */
+export function decodeResult(buffer: ArrayBuffer): RunResult {
+  const headerBytes = checkPreamble(buffer);
+  const header = parseHeader(buffer, headerBytes);
+  const columnsAt = PREAMBLE_BYTES + headerBytes;
+  const expected = columnsAt + (1 + header.readings.length) * header.pointCount * BYTES_PER_VALUE;
+  if (buffer.byteLength !== expected) {
+    throw new ResultFormatError(
+      `A result of ${header.pointCount} points and ${header.readings.length} readings has ${expected} bytes, got ${buffer.byteLength}: the transfer was cut off or changed; load it again.`,
+    );
+  }
+  const columnAt = (position: number) =>
+    new Float64Array(buffer, columnsAt + position * header.pointCount * BYTES_PER_VALUE, header.pointCount);
+  checkAxis(header.axis, columnAt(0));
+  return {
+    header,
+    axis: columnAt(0),
+    columns: Object.fromEntries(header.readings.map(({ name }, index) => [name, columnAt(1 + index)])),
+  };
+}
+
+/** @returns length of the header */
+function checkPreamble(buffer: ArrayBuffer): number {
+  if (new Uint8Array(new Uint32Array([1]).buffer)[0] !== 1) {
+    throw new ResultFormatError('Results are little-endian and this machine is not.');
+  }
+  if (buffer.byteLength < PREAMBLE_BYTES) {
+    throw new ResultFormatError(`A result has at least ${PREAMBLE_BYTES} bytes, got ${buffer.byteLength}.`);
+  }
+  const magic = [...new Uint8Array(buffer, 0, MAGIC.length)];
+  if (MAGIC.some((byte, position) => magic[position] !== byte)) {
+    const hex = magic.map((byte) => byte.toString(16).padStart(2, '0')).join(' ');
+    throw new ResultFormatError(`This is not a result of a run: it begins with the bytes ${hex}.`);
+  }
+  const view = new DataView(buffer);
+  const version = view.getUint32(8, true);
+  if (version !== FORMAT_VERSION) {
+    throw new ResultFormatError(`This reader knows format ${FORMAT_VERSION}, got format ${version}.`);
+  }
+  const headerBytes = view.getUint32(12, true);
+  if (headerBytes % BYTES_PER_VALUE !== 0 || PREAMBLE_BYTES + headerBytes > buffer.byteLength) {
+    throw new ResultFormatError(
+      `The header must have a multiple of ${BYTES_PER_VALUE} bytes within ${buffer.byteLength}, got ${headerBytes}.`,
+    );
+  }
+  return headerBytes;
+}
+
+function parseHeader(buffer: ArrayBuffer, headerBytes: number): ResultHeader {
+  const text = new TextDecoder().decode(new Uint8Array(buffer, PREAMBLE_BYTES, headerBytes));
+  let json: unknown;
+  try {
+    json = JSON.parse(text);
+  } catch {
+    throw new ResultFormatError(`The header is not JSON: ${text.slice(0, 60)}`);
+  }
+  const parsed = resultHeaderSchema.safeParse(json);
+  if (!parsed.success) {
+    const [issue] = parsed.error.issues;
+    throw new ResultFormatError(`The header is not right at ${issue?.path.join('.')}: ${issue?.message}`);
+  }
+  if (parsed.data.pointCount !== parsed.data.axis.points) {
+    throw new ResultFormatError(
+      `The axis has ${parsed.data.axis.points} points, but pointCount is ${parsed.data.pointCount}.`,
+    );
+  }
+  return parsed.data;
+}
+
+/** The ends of the axis are exact: a shift of the columns by any number of bytes shows here. */
+function checkAxis(axis: SweepAxis, values: Float64Array): void {
+  const ends: [number, number, number][] = [[0, axis.from, values[0]!]];
+  if (axis.points > 1) ends.push([axis.points - 1, axis.to, values[axis.points - 1]!]);
+  for (const [index, expected, got] of ends) {
+    if (got !== expected) {
+      throw new ResultFormatError(`The axis must be ${expected} at point ${index}, got ${got}.`);
+    }
+  }
+}
