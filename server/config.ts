@@ -48,6 +48,8 @@ export type Config = {
   logLevel: string;
   demo: boolean;
   attemptLimit: number;
+  /** Holds every answer against its schema before it is sent: on in tests. */
+  checkAnswers: boolean;
 };
 
 /**
@@ -80,6 +82,7 @@ export function readConfig(environment: Record<string, string | undefined>): Con
     logLevel: values.LOG_LEVEL,
     demo: !production && values.DEMO === 'on',
     attemptLimit: values.ATTEMPT_LIMIT,
+    checkAnswers: values.NODE_ENV === 'test',
   };
 }
 

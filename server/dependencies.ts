@@ -1,0 +1,30 @@
+import type { Logger } from 'pino';
+import type { ComputePool } from '../worker/pool.ts';
+import type { Config } from './config.ts';
+import type { MailCatcher } from './mail/mailCatcher.ts';
+import type { Mailer } from './mail/mailer.ts';
+import type { Models } from './models/models.ts';
+
+export type PartHealth = { ok: boolean; detail: string };
+
+/** Everything a request handler or a job may use. Made once by index.ts, or by a test; nothing is global. */
+export type Dependencies = {
+  config: Config;
+  models: Models;
+  logger: Logger;
+  pool: ComputePool;
+  mailer: Mailer;
+  /** The local mail server of development; null where real mail is sent. */
+  mailCatcher: MailCatcher | null;
+  /** Where people reach the server, without a slash at the end. A function: the port may be chosen at start. */
+  publicUrl: () => string;
+};
+
+/** The queue of runs as the rest of the server sees it. */
+export type Jobs = {
+  health(): Promise<PartHealth>;
+  stop(): Promise<void>;
+};
+
+/** What request handlers have: the queue is started after everything that it depends on. */
+export type AppDependencies = Dependencies & { jobs: Jobs };
