@@ -1,4 +1,4 @@
-import { cleanup, fireEvent, render, screen } from '@testing-library/react';
+import { cleanup, fireEvent, render, screen, waitFor } from '@testing-library/react';
 import userEvent from '@testing-library/user-event';
 import { afterEach, describe, expect, it, vi } from 'vitest';
 import { LinePlot } from './LinePlot.tsx';
@@ -36,8 +36,9 @@ function show(onPickX?: (x: number) => void) {
 }
 
 describe('LinePlot', () => {
-  it('draws the curves with their names at them and no legend', () => {
+  it('draws the curves with their names at them and no legend', async () => {
     show();
+    await waitFor(() => expect(document.querySelector('svg text')).not.toBeNull());
     const texts = [...document.querySelectorAll('svg text')].map((node) => node.textContent);
     expect(texts).toContain('rotation');
     expect(texts).toContain('ellipticity');

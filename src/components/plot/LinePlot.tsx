@@ -109,7 +109,10 @@ export function LinePlot(props: Props) {
     // Large grids move by what is a pixel or so, else a million presses would be needed.
     const stride = Math.max(1, Math.round(grid.length / 800));
     const wanted = start + forward * (Math.abs(step) === 1 ? step * stride : step * grid.length);
-    const next = Math.min(Math.max(Math.round(cursor === null ? start : wanted), 0), grid.length - 1);
+    const next = Math.min(
+      Math.max(Math.round(cursor === null && Math.abs(step) === 1 ? start : wanted), 0),
+      grid.length - 1,
+    );
     const x = grid[next]!;
     if (x < low || x > high) setZoom([x - (high - low) / 2, x + (high - low) / 2]);
     readAt(x);

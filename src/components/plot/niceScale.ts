@@ -17,8 +17,9 @@ function niceStep(span: number, count: number): number {
 export function niceScale(low: number, high: number, count = 5): NiceScale {
   if (!Number.isFinite(low) || !Number.isFinite(high)) return { min: 0, max: 1, ticks: [0, 0.5, 1] };
   // Below this, differences are rounding of the doubles themselves and would be drawn as noise.
-  const flat = high - low <= 1e-12 * Math.max(Math.abs(low), Math.abs(high));
-  const margin = flat ? Math.abs(high) * 0.1 || 1 : 0;
+  const size = Math.max(Math.abs(low), Math.abs(high));
+  const flat = high - low <= Math.max(1e-12 * size, 1e-290);
+  const margin = flat ? (size > 1e-280 ? size * 0.1 : 1) : 0;
   const step = niceStep(high - low + 2 * margin, count);
   const min = Math.floor((low - margin) / step + 1e-9) * step;
   const max = Math.ceil((high + margin) / step - 1e-9) * step;
@@ -72,22 +73,25 @@ function clean(value: number, step: number): number {
   return digits > 100 ? value : Number(value.toFixed(Math.min(100, digits))) + 0;
 }
 
-/** A tick as printed: as few digits as tell it from its neighbours, a true minus sign. */
+/** A tick as printed: the digits that tell it from its neighbours, a true minus sign. */
 export function formatTick(tick: number, ticks: readonly number[]): string {
-  const steps = ticks.slice(1).map((value, index) => Math.abs(value - ticks[index]!));
-  const step = Math.min(...steps, Infinity);
-  const size = Math.max(...ticks.map(Math.abs));
   if (tick === 0) return '0';
-  if (size >= 1e5 || size < 1e-3 || (ticks.length > 1 && size / Math.min(...ticks.map(Math.abs)) > 1e4)) {
-    return tick
-      .toPrecision(3)
-      .replace(/\.?0+(e|$)/, '$1')
-      .replace('e+', 'e')
-      .replace(/-/g, '−');
+  const steps = ticks.slice(1).map((value, index) => Math.abs(value - ticks[index]!));
+  const step = Math.min(...steps);
+  const uniform = steps.length > 0 && steps.every((value) => Math.abs(value - step) < step * 1e-6);
+  const sizes = ticks.filter((value) => value !== 0).map(Math.abs);
+  const [least, most] = [Math.min(...sizes), Math.max(...sizes)];
+  if (most >= 1e5 || most < 1e-3 || (!uniform && least < 1e-3)) {
+    return minus(
+      tick
+        .toExponential(2)
+        .replace(/\.?0+e/, 'e')
+        .replace('e+', 'e'),
+    );
   }
-  const uniform = steps.every((value) => Math.abs(value - step) < step * 1e-6);
-  const digits =
-    Number.isFinite(step) && uniform ? Math.max(0, -Math.floor(Math.log10(step) + 1e-9)) : undefined;
-  const text = digits === undefined ? String(tick) : tick.toFixed(digits);
-  return text.replace('-', '−');
+  return minus(uniform ? tick.toFixed(Math.max(0, -Math.floor(Math.log10(step) + 1e-9))) : String(tick));
+}
+
+function minus(text: string): string {
+  return text.replace(/-/g, '−');
 }
