@@ -1,5 +1,7 @@
 import { readdirSync, readFileSync } from 'node:fs';
 import { join } from 'node:path';
+import type { Issue } from '../../shared/error.ts';
+import { describeIssues } from '../../shared/issues.ts';
 import { libraryEntrySchema } from '../../shared/material.ts';
 import type { LibraryEntry } from '../../shared/material.ts';
 import { checkContent } from './checkContent.ts';
@@ -25,12 +27,18 @@ function readEntry(path: string, id: string): LibraryEntry {
     throw new Error(`${path}: not readable as JSON`, { cause: error });
   }
   const parsed = libraryEntrySchema.safeParse(json);
-  if (!parsed.success) {
-    const issues = parsed.error.issues.map((issue) => `${issue.path.join('.')}: ${issue.message}`);
-    throw new Error(`${path}: ${issues.join('; ')}`);
+  if (!parsed.success) throw refusal(path, describeIssues(parsed.error, json));
+  const issues = checkContent(parsed.data.content).map(({ path: at, message }) => ({
+    path: `content.${at}`,
+    message,
+  }));
+  if (parsed.data.id !== id) {
+    issues.push({ path: 'id', message: `must be the name of the file, got ${parsed.data.id}` });
   }
-  const issues = checkContent(parsed.data.content).map((issue) => `content.${issue.path}: ${issue.message}`);
-  if (parsed.data.id !== id) issues.push(`id: must be the name of the file, got ${parsed.data.id}`);
-  if (issues.length > 0) throw new Error(`${path}: ${issues.join('; ')}`);
+  if (issues.length > 0) throw refusal(path, issues);
   return parsed.data;
+}
+
+function refusal(path: string, issues: Issue[]): Error {
+  return new Error(`${path}: ${issues.map((issue) => `${issue.path}: ${issue.message}`).join('; ')}`);
 }
