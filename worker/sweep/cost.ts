@@ -7,14 +7,12 @@ type Item = object | { repeat: number; layers: Item[] };
  * shared out by it: chunks get longer or shorter when it is wrong.
  */
 export function microsecondsPerPoint(layers: Item[]): number {
-  return 2 + 1.2 * effectiveLayers(layers);
+  return 2 + 1.2 * countExpanded(layers);
 }
 
-/** A block costs about two steps for each doubling of its layers. */
-function effectiveLayers(items: Item[]): number {
+function countExpanded(items: Item[]): number {
   return items.reduce<number>(
-    (sum, item) =>
-      sum + ('layers' in item ? effectiveLayers(item.layers) + 2 * Math.log2(Math.max(1, item.repeat)) : 1),
+    (sum, item) => sum + ('layers' in item ? item.repeat * countExpanded(item.layers) : 1),
     0,
   );
 }

@@ -1,0 +1,237 @@
+import { writeFile, mkdtemp, rm } from 'node:fs/promises';
+import { tmpdir } from 'node:os';
+import path from 'node:path';
+import { setTimeout as sleep } from 'node:timers/promises';
+import { pathToFileURL } from 'node:url';
+import { afterAll, beforeAll, describe, expect, it } from 'vitest';
+import type { SweepAxis } from '../shared/run.ts';
+import type { SolveRequest } from '../shared/solve.ts';
+import type { StackDocument } from '../shared/stack.ts';
+import { solveCase } from './optics/solveRequest.ts';
+import { createPool } from './pool.ts';
+import type { ComputePool } from './pool.ts';
+import { ComputeError } from './sweep/computeError.ts';
+import type { SweepInput } from './sweep/sweepInput.ts';
+
+const document: StackDocument = {
+  incident: { index: 1 },
+  layers: [
+    { id: 'cap', medium: { index: [2.33, 4.14] }, thicknessNm: 3 },
+    { id: 'film', medium: { index: [2.25, 4.07], voigt: [0.03, 0.01] }, thicknessNm: 1, m: [0, 0, 1] },
+    { id: 'buffer', medium: { index: [3.5, 3.6] }, thicknessNm: 5 },
+  ],
+  substrate: { index: [3.88, 0.02] },
+  workingPoint: { wavelengthNm: 633, angleDeg: 30, input: 'p', magnetization: { mode: 'drawn' } },
+};
+
+const angles = (points: number): SweepAxis => ({ kind: 'angle', from: 0, to: 85, points, spacing: 'linear' });
+
+const sweepOf = (axis: SweepAxis): SweepInput => ({
+  document,
+  axis,
+  readings: ['rotationP', 'ellipticityP', 'contrastP', 'reflectanceS'],
+  materials: [],
+});
+
+const request: SolveRequest = {
+  cases: [
+    {
+      wavelengthNm: 633,
+      angleDeg: [0, 30],
+      incident: { index: 1 },
+      layers: [{ index: [2.25, 4.07], voigt: [0.03, 0.01], m: [0, 0, 1], thicknessNm: 5 }],
+      substrate: { index: [3.88, 0.02] },
+    },
+  ],
+};
+
+/** Threads that translate TypeScript start slowly on a busy machine. */
+const SLOW_MS = 60_000;
+
+/** A sweep that takes this machine some minutes. */
+const endless = sweepOf(angles(1_000_000));
+
+function failureOf(work: Promise<unknown>): Promise<ComputeError> {
+  return work.then(
+    () => {
+      throw new Error('expected a ComputeError');
+    },
+    (error: unknown) => {
+      if (error instanceof ComputeError) return error;
+      throw error;
+    },
+  );
+}
+
+describe('the pool', () => {
+  let pool: ComputePool;
+  beforeAll(async () => {
+    pool = createPool({ threads: 2 });
+    await pool.warm();
+  }, SLOW_MS);
+  afterAll(() => pool.close());
+
+  it('answers a request with what the solver gives', async () => {
+    const response = await pool.solve(request);
+    expect(response.results[0]!.points).toEqual(solveCase(request.cases[0]!));
+  });
+
+  it('reports progress up to the end and fills every column', async () => {
+    const seen: number[] = [];
+    const { columns, points } = await pool.sweep(sweepOf(angles(50_000)), {
+      onProgress: (done, total) => {
+        expect(total).toBe(50_000);
+        seen.push(done);
+      },
+    });
+    expect(points).toBe(50_000);
+    expect(columns).toHaveLength(5);
+    expect(columns.every((column) => column.every(Number.isFinite))).toBe(true);
+    expect(seen).toEqual([...seen].sort((a, b) => a - b));
+    expect(seen.at(-1)).toBe(50_000);
+  });
+
+  it('stops a running sweep within 100 ms and works on', async () => {
+    const cancelling = new AbortController();
+    const failure = failureOf(pool.sweep(endless, { signal: cancelling.signal }));
+    await sleep(300);
+    const asked = performance.now();
+    cancelling.abort();
+    expect((await failure).failure).toBe('cancelled');
+    expect(performance.now() - asked).toBeLessThan(100);
+    // The threads are free again, not busy with a sweep that nobody wants.
+    const next = performance.now();
+    await pool.sweep(sweepOf(angles(100)));
+    expect(performance.now() - next).toBeLessThan(1_000);
+  });
+
+  it('refuses a sweep that is cancelled before it starts', async () => {
+    const failure = await failureOf(pool.sweep(endless, { signal: AbortSignal.abort() }));
+    expect(failure.failure).toBe('cancelled');
+  });
+
+  it('keeps this process and small requests quick while a sweep holds every core', async () => {
+    const cancelling = new AbortController();
+    const sweep = failureOf(pool.sweep(endless, { signal: cancelling.signal }));
+    await sleep(100);
+    const waits: number[] = [];
+    const turns: number[] = [];
+    for (let count = 0; count < 20; count += 1) {
+      const asked = performance.now();
+      await pool.solve(request);
+      waits.push(performance.now() - asked);
+      const turn = performance.now();
+      await sleep(5);
+      turns.push(performance.now() - turn);
+    }
+    cancelling.abort();
+    await sweep;
+    const median = waits.sort((a, b) => a - b)[10]!;
+    expect(median).toBeLessThan(50);
+    expect(Math.max(...turns)).toBeLessThan(100);
+  });
+
+  it('lets two sweeps share the cores, so that a short one does not wait for a long one', async () => {
+    const cancelling = new AbortController();
+    const long = failureOf(pool.sweep(endless, { signal: cancelling.signal }));
+    await sleep(100);
+    const started = performance.now();
+    await pool.sweep(sweepOf(angles(2_000)));
+    expect(performance.now() - started).toBeLessThan(2_000);
+    cancelling.abort();
+    await long;
+  });
+
+  it('says which material does not reach to a wavelength of the sweep', async () => {
+    const source = {
+      citation: 'made up for this test',
+      doi: null,
+      licence: null,
+      sample: null,
+      method: null,
+      confidence: 'invented for the demo',
+      caution: null,
+    } as const;
+    const film = { id: 'film', medium: { material: 'x', version: 1 }, thicknessNm: 1 };
+    const failure = await failureOf(
+      pool.sweep({
+        document: { ...document, layers: [film] },
+        axis: { kind: 'wavelength', from: 500, to: 900, points: 200, spacing: 'linear' },
+        readings: ['reflectanceP'],
+        materials: [
+          {
+            id: 'x',
+            version: 1,
+            name: 'Testium',
+            content: {
+              index: { kind: 'table', wavelengthsNm: [400, 600, 800], n: [1, 2, 3], k: [0, 0, 0] },
+              indexSource: source,
+              voigt: null,
+              voigtSource: null,
+            },
+          },
+        ],
+      }),
+    );
+    expect(failure.failure).toBe('refused');
+    expect(failure.issues[0]!.path).toBe('layers[0].material');
+    expect(failure.issues[0]!.message).toMatch(/Testium.*400 to 800 nm/);
+  });
+});
+
+describe('a pool whose thread dies', () => {
+  let folder: string;
+  let pool: ComputePool;
+  beforeAll(async () => {
+    // The real task, except that some inputs end or break the thread that gets them.
+    folder = await mkdtemp(path.join(tmpdir(), 'skewlight-pool-'));
+    const file = path.join(folder, 'task.mjs');
+    const real = new URL('./task.ts', import.meta.url).href;
+    await writeFile(
+      file,
+      `import * as real from ${JSON.stringify(real)};
+       export const warm = real.warm;
+       export const sweepChunk = (task) => {
+         if (task.points === 777) process.exit(9);
+         if (task.points === 778) throw new Error('a bug');
+         if (task.points === 779) { const hoard = []; for (;;) hoard.push(new Array(1_000).fill(hoard.length)); }
+         return real.sweepChunk(task);
+       };
+       export const solve = (request) => (request.cases.length === 0 ? process.exit(9) : real.solve(request));`,
+    );
+    pool = createPool({ threads: 2, taskFile: pathToFileURL(file), heapMb: 100 });
+    await pool.warm();
+  }, SLOW_MS);
+  afterAll(async () => {
+    await pool.close();
+    await rm(folder, { recursive: true });
+  });
+
+  it.each([
+    ['exits', 777, /exited with code: 9/],
+    ['throws', 778, /a bug/],
+    ['runs out of memory', 779, /memory/],
+  ])('fails its sweep clearly when it %s, and the pool lives on', async (_how, points, message) => {
+    const failure = await failureOf(pool.sweep(sweepOf(angles(points))));
+    expect(failure.failure).toBe('crashed');
+    expect(failure.message).toMatch(message);
+    const { columns } = await pool.sweep(sweepOf(angles(1_000)));
+    expect(columns[1]!.every(Number.isFinite)).toBe(true);
+    expect(pool.state().ok).toBe(true);
+  });
+
+  it('fails a small request the same way', async () => {
+    expect((await failureOf(pool.solve({ cases: [] }))).failure).toBe('crashed');
+    expect((await pool.solve(request)).results).toHaveLength(1);
+  });
+
+  it('fails what is under way when it closes', async () => {
+    const closing = createPool({ threads: 1 });
+    await closing.warm();
+    const failure = failureOf(closing.sweep(endless));
+    await sleep(100);
+    await closing.close();
+    expect((await failure).failure).toBe('closed');
+    expect((await failureOf(closing.solve(request))).failure).toBe('closed');
+  });
+});

@@ -1,0 +1,62 @@
+import type { Issue } from '../shared/error.ts';
+import type { SolveRequest, SolveResponse } from '../shared/solve.ts';
+import { solveCase } from './optics/solveRequest.ts';
+import type { ChunkTask } from './sweep/runSweep.ts';
+import { SharedResult } from './sweep/sharedResult.ts';
+import type { SweepInput } from './sweep/sweepInput.ts';
+import { SweepSolver } from './sweep/sweepSolver.ts';
+
+/**
+ * What runs in a worker thread. Everything that crosses is plain: the fields of an error do not survive the
+ * way, so a refusal comes back as a value.
+ */
+export type TaskOutcome<Value> = { ok: true; value: Value } | { ok: false; message: string; issues: Issue[] };
+
+/** Sweeps that this thread has compiled, the one used last at the end. */
+const solvers = new Map<number, SweepSolver>();
+/** A host runs few sweeps at a time; old ones must not keep their stacks in memory. */
+const MOST_SOLVERS = 4;
+
+export function sweepChunk(task: ChunkTask): TaskOutcome<null> {
+  return outcomeOf(() => {
+    const result = new SharedResult(task.result, task.points, task.readings);
+    solverOf(task).solve(task.chunk, result);
+    return null;
+  });
+}
+
+export function solve(request: SolveRequest): TaskOutcome<SolveResponse> {
+  return outcomeOf(() => ({ results: request.cases.map((one) => ({ points: solveCase(one) })) }));
+}
+
+/** Makes a thread load its code before the first question. */
+export function warm(): TaskOutcome<null> {
+  return outcomeOf(() => null);
+}
+
+function solverOf(task: ChunkTask): SweepSolver {
+  const solver = solvers.get(task.sweepId) ?? new SweepSolver(readInput(task.input));
+  solvers.delete(task.sweepId);
+  solvers.set(task.sweepId, solver);
+  for (const old of solvers.keys()) {
+    if (solvers.size <= MOST_SOLVERS) break;
+    solvers.delete(old);
+  }
+  return solver;
+}
+
+function readInput(bytes: SharedArrayBuffer): SweepInput {
+  const text = new TextDecoder().decode(new Uint8Array(bytes).slice());
+  // Written by runSweep from a SweepInput in this same process.
+  return JSON.parse(text) as SweepInput;
+}
+
+function outcomeOf<Value>(work: () => Value): TaskOutcome<Value> {
+  try {
+    return { ok: true, value: work() };
+  } catch (error) {
+    const message = error instanceof Error ? error.message : String(error);
+    const issues = error instanceof Error && 'issues' in error ? (error.issues as Issue[]) : [];
+    return { ok: false, message, issues };
+  }
+}
