@@ -1,0 +1,134 @@
+import type { Complex, ComplexInput, Vector } from '../../shared/complex.ts';
+import { toComplex } from '../../shared/complex.ts';
+import type { MediumInput, TensorInput } from '../../shared/medium.ts';
+import { minus, plus, times } from './complexNumber.ts';
+import type { QuadraticConstants, Tensor } from './tensor.ts';
+import {
+  addGyration,
+  addQuadratic,
+  addUniaxial,
+  createTensor,
+  isMultipleOfIdentity,
+  setScalar,
+} from './tensor.ts';
+
+/** One value for all wavelengths, or one per wavelength. */
+type Sampled<Value> = Value[];
+
+function samplesOf<Input, Value>(
+  input: Input | { samples: Input[] } | undefined,
+  convert: (value: Input) => Value,
+): Sampled<Value> | null {
+  if (input === undefined) return null;
+  if (typeof input === 'object' && input !== null && 'samples' in input) return input.samples.map(convert);
+  return [convert(input)];
+}
+
+function sampleAt<Value>(samples: Sampled<Value>, wavelengthIndex: number): Value {
+  return samples.length === 1 ? samples[0]! : samples[wavelengthIndex]!;
+}
+
+/**
+ * A medium of a solve case, ready to give its permittivity at one wavelength after another.
+ *
+ * `load` fills `tensor` and the flags; they describe the last loaded wavelength.
+ */
+export class Medium {
+  readonly tensor: Tensor = createTensor();
+  /** The tensor is a multiple of the unit tensor. */
+  isotropic = true;
+  /** All diagonal elements are eps_d and the rest is the gyration of Q m: the weak magnet of most stacks. */
+  scalarDiagonal = true;
+  /** N where the diagonal is scalar; null for a medium given as a tensor. */
+  index: Complex | null = null;
+
+  readonly #index: Sampled<Complex> | null;
+  readonly #voigt: Sampled<Complex> | null;
+  readonly #extraordinary: Sampled<Complex> | null;
+  readonly #epsilon: Sampled<Tensor> | null;
+  readonly #m: Vector;
+  readonly #axis: Vector | null;
+  readonly #quadratic: QuadraticConstants | null;
+
+  /** @param input a medium that has passed `mediumSchema` */
+  constructor(input: MediumInput) {
+    this.#index = samplesOf(input.index, toComplex);
+    this.#voigt = samplesOf(input.voigt, toComplex);
+    this.#extraordinary = samplesOf(input.extraordinary, toComplex);
+    this.#epsilon = samplesOf(input.epsilon, tensorFrom);
+    this.#m = input.m ?? [0, 0, 0];
+    this.#axis = input.axis ?? null;
+    this.#quadratic = input.quadratic ? quadraticFrom(input.quadratic) : null;
+  }
+
+  /** A medium that is this tensor, at whatever wavelength; the tensor is copied. */
+  static fromTensor(tensor: Tensor): Medium {
+    const medium = new Medium({ index: 1 });
+    medium.tensor.set(tensor);
+    medium.index = null;
+    medium.scalarDiagonal = false;
+    medium.isotropic = isMultipleOfIdentity(tensor);
+    return medium;
+  }
+
+  /** Some constant is given per wavelength. */
+  get isSampled(): boolean {
+    return [this.#index, this.#voigt, this.#extraordinary, this.#epsilon].some(
+      (samples) => (samples?.length ?? 0) > 1,
+    );
+  }
+
+  load(wavelengthIndex: number): void {
+    if (this.#epsilon) {
+      this.tensor.set(sampleAt(this.#epsilon, wavelengthIndex));
+      this.index = null;
+      this.scalarDiagonal = false;
+      this.isotropic = isMultipleOfIdentity(this.tensor);
+      return;
+    }
+    const index = sampleAt(this.#index ?? [], wavelengthIndex);
+    const permittivity = times(index, index);
+    setScalar(this.tensor, permittivity);
+    this.index = index;
+    this.scalarDiagonal = true;
+    if (this.#extraordinary && this.#axis) {
+      const extraordinary = sampleAt(this.#extraordinary, wavelengthIndex);
+      addUniaxial(this.tensor, permittivity, times(extraordinary, extraordinary), this.#axis);
+      this.scalarDiagonal = false;
+    }
+    if (this.#quadratic) {
+      addQuadratic(this.tensor, this.#quadratic, this.#m);
+      this.scalarDiagonal = false;
+    }
+    if (this.#voigt) {
+      addGyration(this.tensor, permittivity, sampleAt(this.#voigt, wavelengthIndex), this.#m);
+    }
+    this.isotropic = isMultipleOfIdentity(this.tensor);
+  }
+
+  /**
+   * eps_yy - xi^2, written so that nothing cancels near grazing incidence in a layer that has the index of the
+   * incident medium: (N - N0)(N + N0) + q0^2, since xi^2 = N0^2 - q0^2.
+   */
+  yyLessXi2(incidentIndex: number, q0: number): Complex {
+    if (this.index && (this.scalarDiagonal || this.isotropic)) {
+      const n0: Complex = [incidentIndex, 0];
+      return plus(times(minus(this.index, n0), plus(this.index, n0)), [q0 * q0, 0]);
+    }
+    return [this.tensor[8]! - incidentIndex * incidentIndex + q0 * q0, this.tensor[9]!];
+  }
+}
+
+function tensorFrom(rows: TensorInput): Tensor {
+  return Float64Array.from(rows.flatMap((row) => row.flatMap((value) => toComplex(value))));
+}
+
+function quadraticFrom(input: NonNullable<MediumInput['quadratic']>): QuadraticConstants {
+  const complex = (value: ComplexInput) => toComplex(value);
+  return {
+    g11: complex(input.g11),
+    g12: complex(input.g12),
+    g44: complex(input.g44),
+    azimuthDeg: input.azimuthDeg ?? 0,
+  };
+}

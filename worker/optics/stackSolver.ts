@@ -1,0 +1,205 @@
+import type { Complex } from '../../shared/complex.ts';
+import { toComplex } from '../../shared/complex.ts';
+import type { MediumInput } from '../../shared/medium.ts';
+import type { SolveCase, StackItemInput } from '../../shared/solve.ts';
+import { forwardRoot, over } from './complexNumber.ts';
+import type { Matrix2 } from './matrix2.ts';
+import { add, createMatrix2, invert, multiply, subtract } from './matrix2.ts';
+import { Medium } from './medium.ts';
+import { Modes } from './modes.ts';
+import type { Jones, KerrAngles, Polarized } from './observables.ts';
+import { kerrAngles, reflectance } from './observables.ts';
+import { FieldState, LayerStep } from './recursion.ts';
+
+/** One solved point. The object and its arrays belong to the solver and are overwritten by its next `solve`. */
+export type SolvedPoint = {
+  /** Reflection `pp, ps, sp, ss` as re, im. */
+  r: Jones;
+  /** Transmission likewise; null unless the substrate's tensor is a multiple of the identity. */
+  t: Jones | null;
+  R: Polarized;
+  T: Polarized;
+  A: Polarized;
+  kerr: { p: KerrAngles | null; s: KerrAngles | null };
+};
+
+/**
+ * One case of the solve contract, compiled: equal media share their modes, layers of a repeated block are prepared
+ * once per point.
+ */
+export class StackSolver {
+  readonly wavelengthsNm: Float64Array;
+  readonly anglesDeg: Float64Array;
+
+  readonly #incidentIndex: Complex[];
+  readonly #modes: Modes[] = [];
+  readonly #substrate: Modes;
+  /** Layers as written, and the order in which light from below meets them once blocks are expanded. */
+  readonly #written: LayerStep[] = [];
+  readonly #sequence: LayerStep[];
+  readonly #byPath = new Map<string, LayerStep>();
+
+  readonly #state = new FieldState();
+  readonly #inverse: Matrix2 = createMatrix2();
+  readonly #product: Matrix2 = createMatrix2();
+  readonly #transmission: Jones = createMatrix2();
+  readonly #point: SolvedPoint = {
+    r: createMatrix2(),
+    t: null,
+    R: { p: 0, s: 0 },
+    T: { p: 0, s: 0 },
+    A: { p: 0, s: 0 },
+    kerr: { p: null, s: null },
+  };
+  #loaded = -1;
+
+  /** @param solveCase a case that has passed `solveCaseSchema` and `checkSolveRequest` */
+  constructor(solveCase: SolveCase) {
+    this.wavelengthsNm = Float64Array.from([solveCase.wavelengthNm].flat());
+    this.anglesDeg = Float64Array.from([solveCase.angleDeg].flat());
+    const { index } = solveCase.incident;
+    this.#incidentIndex =
+      typeof index === 'object' && 'samples' in index
+        ? index.samples.map(toComplex)
+        : [toComplex(index ?? 1)];
+    const shared = new Map<string, Modes>();
+    const modesOf = (medium: MediumInput): Modes => {
+      const key = JSON.stringify(medium);
+      const known = shared.get(key);
+      if (known) return known;
+      const modes = new Modes(new Medium(medium));
+      shared.set(key, modes);
+      this.#modes.push(modes);
+      return modes;
+    };
+    this.#substrate = modesOf(solveCase.substrate);
+    this.#sequence = this.#compile(solveCase.layers, '', modesOf).reverse();
+  }
+
+  #compile(items: StackItemInput[], path: string, modesOf: (medium: MediumInput) => Modes): LayerStep[] {
+    return items.flatMap((item, position) => {
+      const here = `${path}/${position}`;
+      if ('layers' in item) {
+        const block = this.#compile(item.layers, here, modesOf);
+        return Array.from({ length: item.repeat }, () => block).flat();
+      }
+      const { thicknessNm, ...medium } = item;
+      const step = new LayerStep(modesOf(medium), thicknessNm);
+      this.#written.push(step);
+      this.#byPath.set(here, step);
+      return step;
+    });
+  }
+
+  /**
+   * Changes one written layer for the solves that follow.
+   *
+   * @param path positions into nested `layers` arrays, as `findLayerPath` gives them
+   * @throws RangeError when there is no layer at that path
+   */
+  setThickness(path: number[], thicknessNm: number): void {
+    const layer = this.#byPath.get(`/${path.join('/')}`);
+    if (!layer) throw new RangeError(`no layer at layers[${path.join('].layers[')}]`);
+    layer.thicknessNm = thicknessNm;
+  }
+
+  /**
+   * @param wavelengthIndex position in `wavelengthsNm`
+   * @param angleDeg angle of incidence, [0, 90) deg
+   */
+  solve(wavelengthIndex: number, angleDeg: number): SolvedPoint {
+    this.#load(wavelengthIndex);
+    const incidents = this.#incidentIndex;
+    const n0 = (incidents.length === 1 ? incidents[0]! : incidents[wavelengthIndex]!)[0];
+    const xi = n0 * Math.sin((angleDeg * Math.PI) / 180);
+    // cos(theta) as sin(90 deg - theta): near grazing the subtraction in degrees is exact.
+    const q0 = n0 * Math.sin(((90 - angleDeg) * Math.PI) / 180);
+    const k0 = (2 * Math.PI) / this.wavelengthsNm[wavelengthIndex]!;
+    for (const modes of this.#modes) modes.update(n0, xi, q0);
+    for (const layer of this.#written) layer.update(k0);
+    this.#state.start(this.#substrate);
+    for (const layer of this.#sequence) layer.cross(this.#state);
+    this.#leave(n0, q0);
+    return this.#point;
+  }
+
+  #load(wavelengthIndex: number): void {
+    if (wavelengthIndex === this.#loaded) return;
+    for (const modes of this.#modes) modes.medium.load(wavelengthIndex);
+    this.#loaded = wavelengthIndex;
+  }
+
+  /**
+   * Into the incident medium: f = diag(N0, 1) (incident + reflected), g = diag(q0 / N0, q0) (incident - reflected),
+   * so r = D^-1 (Z0 M - N) (Z0 M + N)^-1 D with D = diag(1/N0, 1), free of any division by cos(theta).
+   */
+  #leave(n0: number, q0: number): void {
+    const { m, n, chain } = this.#state;
+    const product = this.#product;
+    const inverse = this.#inverse;
+    const point = this.#point;
+    const zp = q0 / (n0 * n0);
+    for (let i = 0; i < 4; i++) product[i] = zp * m[i]!;
+    for (let i = 4; i < 8; i++) product[i] = q0 * m[i]!;
+    add(inverse, product, n);
+    invert(inverse, inverse);
+    subtract(product, product, n);
+    multiply(point.r, product, inverse);
+    point.r[2] = point.r[2]! * n0;
+    point.r[3] = point.r[3]! * n0;
+    point.r[4] = point.r[4]! / n0;
+    point.r[5] = point.r[5]! / n0;
+    // x of the whole stack for unit p (first column) and s light.
+    multiply(product, chain, inverse);
+    for (let i = 0; i < 8; i += 4) {
+      product[i] = (product[i]! * 2 * q0) / n0;
+      product[i + 1] = (product[i + 1]! * 2 * q0) / n0;
+      product[i + 2] = product[i + 2]! * 2 * q0;
+      product[i + 3] = product[i + 3]! * 2 * q0;
+    }
+    const R = reflectance(point.r);
+    point.R = R;
+    point.T = this.#transmittance(product, q0);
+    point.A = { p: 1 - R.p - point.T.p, s: 1 - R.s - point.T.s };
+    point.t = this.#transmittedAmplitudes(product);
+    point.kerr = { p: kerrAngles(point.r, 'p'), s: kerrAngles(point.r, 's') };
+  }
+
+  /** Energy through the last interface: Re(Ex Hy* - Ey Hx*) / (N0 cos theta) with f = x, g = Z x there. */
+  #transmittance(x: Matrix2, q0: number): Polarized {
+    const g = this.#inverse;
+    const substrate = this.#substrate;
+    if (substrate.isotropic) {
+      g.fill(0);
+      [g[0], g[1]] = substrate.zp;
+      [g[6], g[7]] = substrate.q;
+    } else {
+      g.set(substrate.forward.z);
+    }
+    multiply(g, g, x);
+    const flux = (column: number) =>
+      g[column]! * x[column]! +
+      g[column + 1]! * x[column + 1]! +
+      g[column + 4]! * x[column + 4]! +
+      g[column + 5]! * x[column + 5]!;
+    return { p: flux(0) / q0, s: flux(2) / q0 };
+  }
+
+  /** t by the unit vectors of an isotropic exit medium: Hy = N t_p, Ey = t_s. */
+  #transmittedAmplitudes(x: Matrix2): Jones | null {
+    const { isotropic, medium } = this.#substrate;
+    if (!isotropic) return null;
+    const index: Complex =
+      medium.index && medium.scalarDiagonal
+        ? medium.index
+        : forwardRoot([medium.tensor[0]!, medium.tensor[1]!]);
+    const inverse = over([1, 0], index);
+    const t = this.#transmission;
+    for (const i of [0, 2]) {
+      t[i] = x[i]! * inverse[0] - x[i + 1]! * inverse[1];
+      t[i + 1] = x[i]! * inverse[1] + x[i + 1]! * inverse[0];
+    }
+    t.set(x.subarray(4), 4);
+    return t;
+  }
+}

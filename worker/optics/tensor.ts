@@ -1,0 +1,152 @@
+import type { Complex, Vector } from '../../shared/complex.ts';
+import { modulus, times } from './complexNumber.ts';
+
+/** Element (row, column) of a tensor as a complex number; rows and columns count from 0. */
+export function element(tensor: Tensor, row: number, column: number): Complex {
+  const i = at(row, column);
+  return [tensor[i]!, tensor[i + 1]!];
+}
+
+/**
+ * A permittivity tensor: 18 doubles, rows x, y, z, each element re, im. Element (row, column) starts at
+ * `2 * (3 * row + column)`.
+ */
+export type Tensor = Float64Array;
+
+export function createTensor(): Tensor {
+  return new Float64Array(18);
+}
+
+const at = (row: number, column: number) => 2 * (3 * row + column);
+
+function addTo(tensor: Tensor, row: number, column: number, re: number, im: number): void {
+  const i = at(row, column);
+  tensor[i] = tensor[i]! + re;
+  tensor[i + 1] = tensor[i + 1]! + im;
+}
+
+/** out = eps_d times the unit tensor. */
+export function setScalar(out: Tensor, permittivity: Complex): void {
+  out.fill(0);
+  for (let i = 0; i < 3; i++) addTo(out, i, i, permittivity[0], permittivity[1]);
+}
+
+/**
+ * Adds the first order in m (physics.md section 2): for m = +z, eps_xy = i Q eps_d and eps_yx = -i Q eps_d,
+ * and cyclic in x, y, z.
+ */
+export function addGyration(out: Tensor, permittivity: Complex, voigt: Complex, m: Vector): void {
+  const [re, im] = times(voigt, permittivity);
+  for (let axis = 0; axis < 3; axis++) {
+    const row = (axis + 1) % 3;
+    const column = (axis + 2) % 3;
+    const length = m[axis]!;
+    addTo(out, row, column, -im * length, re * length);
+    addTo(out, column, row, im * length, -re * length);
+  }
+}
+
+/** Adds (eps_e - eps_o) n n^T for a uniaxial medium with optic axis n (any length but zero). */
+export function addUniaxial(out: Tensor, ordinary: Complex, extraordinary: Complex, axis: Vector): void {
+  const length = Math.hypot(axis[0], axis[1], axis[2]);
+  const n = [axis[0] / length, axis[1] / length, axis[2] / length];
+  const re = extraordinary[0] - ordinary[0];
+  const im = extraordinary[1] - ordinary[1];
+  for (let row = 0; row < 3; row++) {
+    for (let column = 0; column < 3; column++) {
+      const weight = n[row]! * n[column]!;
+      addTo(out, row, column, re * weight, im * weight);
+    }
+  }
+}
+
+export type QuadraticConstants = { g11: Complex; g12: Complex; g44: Complex; azimuthDeg: number };
+
+/**
+ * Adds the second order in m of a cubic crystal (physics.md section 2). The crystal axes are turned about z by the
+ * azimuth: m is taken into the crystal, the tensor built there and turned back.
+ */
+export function addQuadratic(out: Tensor, constants: QuadraticConstants, m: Vector): void {
+  const gamma = (constants.azimuthDeg * Math.PI) / 180;
+  const cos = Math.cos(gamma);
+  const sin = Math.sin(gamma);
+  const crystal: Vector = [cos * m[0] + sin * m[1], -sin * m[0] + cos * m[1], m[2]];
+  const inCrystal = createTensor();
+  const { g11, g12, g44 } = constants;
+  for (let i = 0; i < 3; i++) {
+    for (let j = 0; j < 3; j++) {
+      const product = crystal[i]! * crystal[j]!;
+      if (i !== j) {
+        addTo(inCrystal, i, j, 2 * g44[0] * product, 2 * g44[1] * product);
+        continue;
+      }
+      const others = crystal[(i + 1) % 3]! ** 2 + crystal[(i + 2) % 3]! ** 2;
+      addTo(inCrystal, i, i, g11[0] * product + g12[0] * others, g11[1] * product + g12[1] * others);
+    }
+  }
+  const rotation = [
+    [cos, -sin, 0],
+    [sin, cos, 0],
+    [0, 0, 1],
+  ];
+  for (let row = 0; row < 3; row++) {
+    for (let column = 0; column < 3; column++) {
+      for (let i = 0; i < 3; i++) {
+        for (let j = 0; j < 3; j++) {
+          const weight = rotation[row]![i]! * rotation[column]![j]!;
+          const from = at(i, j);
+          addTo(out, row, column, weight * inCrystal[from]!, weight * inCrystal[from + 1]!);
+        }
+      }
+    }
+  }
+}
+
+/** True when the tensor is exactly a multiple of the unit tensor. */
+export function isMultipleOfIdentity(tensor: Tensor): boolean {
+  for (let row = 0; row < 3; row++) {
+    for (let column = 0; column < 3; column++) {
+      const i = at(row, column);
+      const re = row === column ? tensor[0] : 0;
+      const im = row === column ? tensor[1] : 0;
+      if (tensor[i] !== re || tensor[i + 1] !== im) return false;
+    }
+  }
+  return true;
+}
+
+/** Element (i, j) of the loss matrix (eps - eps^H) / 2i, which is Hermitian. */
+function loss(tensor: Tensor, i: number, j: number): Complex {
+  const a = at(i, j);
+  const b = at(j, i);
+  return [(tensor[a + 1]! + tensor[b + 1]!) / 2, (tensor[b]! - tensor[a]!) / 2];
+}
+
+/** How much isotropic loss surely makes the medium passive: 0 for one that is (Gershgorin's circles). */
+export function gainBound(tensor: Tensor): number {
+  let bound = 0;
+  for (let i = 0; i < 3; i++) {
+    let reach = -loss(tensor, i, i)[0];
+    for (let j = 0; j < 3; j++) if (j !== i) reach += modulus(loss(tensor, i, j));
+    bound = Math.max(bound, reach);
+  }
+  return bound;
+}
+
+/**
+ * True when (eps - eps^H)/2i has no negative eigenvalue beyond rounding, that is when the medium gives no energy.
+ * A Hermitian 3x3 matrix is positive semidefinite when all its principal minors are >= 0 (Sylvester's criterion,
+ * semidefinite form).
+ */
+export function isPassive(tensor: Tensor): boolean {
+  let size = 0;
+  for (const value of tensor) size = Math.max(size, Math.abs(value));
+  const slack = 1e-12 * size;
+  const [d0, d1, d2] = [0, 1, 2].map((i) => loss(tensor, i, i)[0]) as [number, number, number];
+  if (Math.min(d0, d1, d2) < -slack) return false;
+  const square = (i: number, j: number) => modulus(loss(tensor, i, j)) ** 2;
+  const [l01, l02, l12] = [square(0, 1), square(0, 2), square(1, 2)];
+  if (Math.min(d0 * d1 - l01, d0 * d2 - l02, d1 * d2 - l12) < -slack * size) return false;
+  const cycle = times(times(loss(tensor, 0, 1), loss(tensor, 1, 2)), loss(tensor, 2, 0))[0];
+  return d0 * d1 * d2 + 2 * cycle - d0 * l12 - d1 * l02 - d2 * l01 >= -slack * size * size;
+}
