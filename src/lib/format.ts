@@ -123,3 +123,12 @@ export function formatDuration(seconds: number): string {
   const rest = minutes % 60;
   return rest === 0 ? `${Math.floor(minutes / 60)} h` : `${Math.floor(minutes / 60)} h ${rest} min`;
 }
+
+const subscripts = '₀₁₂₃₄₅₆₇₈₉';
+
+/** A chemical formula with its counts set low: SiO2 becomes SiO₂. */
+export function formatFormula(formula: string): string {
+  return formula.replace(/([A-Za-z)])(\d+)/g, (_, before: string, digits: string) => {
+    return before + Array.from(digits, (digit) => subscripts[Number(digit)]).join('');
+  });
+}

@@ -1,0 +1,113 @@
+import { useMemo, useState } from 'react';
+import { Link as RouterLink, generatePath } from 'react-router-dom';
+import type { Link } from '../../../../shared/link.ts';
+import { Button } from '../../../components/Button.tsx';
+import { ConfirmDialog } from '../../../components/ConfirmDialog.tsx';
+import { DataTable } from '../../../components/DataTable.tsx';
+import type { Column } from '../../../components/DataTable.tsx';
+import { EmptyState } from '../../../components/EmptyState.tsx';
+import { useNotify } from '../../../components/Notices.tsx';
+import { formatCount, formatDate, formatSince } from '../../../lib/format.ts';
+import { paths } from '../../../lib/paths.ts';
+import { useRevokeGroupLink } from '../api/revokeGroupLink.ts';
+import { linkState } from '../linkState.ts';
+
+export function GroupLinkTable({ groupId, links }: { groupId: string; links: readonly Link[] }) {
+  const [revoking, setRevoking] = useState<Link | null>(null);
+  const revoke = useRevokeGroupLink(groupId);
+  const notify = useNotify();
+  const columns = useMemo<Column<Link>[]>(
+    () => [
+      {
+        id: 'run',
+        header: 'Run',
+        value: (link) => link.runName,
+        cell: (link) => (
+          <div>
+            <RouterLink
+              to={generatePath(paths.run, { runId: link.runId })}
+              className="font-semibold text-ink no-underline hover:text-accent hover:underline"
+            >
+              {link.runName}
+            </RouterLink>
+            {link.label ? <div className="text-note font-normal text-muted">{link.label}</div> : null}
+          </div>
+        ),
+      },
+      {
+        id: 'state',
+        header: 'State',
+        value: (link) => linkState(link).text,
+        cell: (link) => {
+          const { open, text } = linkState(link);
+          return <span className={open ? '' : 'text-muted'}>{text}</span>;
+        },
+      },
+      {
+        id: 'used',
+        header: 'Last use',
+        value: (link) => link.lastUsedAt,
+        cell: (link) =>
+          link.lastUsedAt ? `${formatSince(link.lastUsedAt)}, ${formatCount(link.useCount)} in all` : 'never',
+      },
+      {
+        id: 'made',
+        header: 'Made',
+        value: (link) => link.createdAt,
+        cell: (link) => `${formatDate(link.createdAt)}${link.createdBy ? `, ${link.createdBy}` : ''}`,
+      },
+      {
+        id: 'actions',
+        header: 'Actions',
+        hideHeader: true,
+        sortable: false,
+        align: 'end',
+        value: () => null,
+        cell: (link) =>
+          linkState(link).open ? (
+            <Button tone="plain" onClick={() => setRevoking(link)} className="max-sm:-ml-3.5">
+              Revoke<span className="sr-only"> the link to {link.runName}</span>
+            </Button>
+          ) : null,
+      },
+    ],
+    [],
+  );
+  return (
+    <>
+      <DataTable
+        caption="Share links of this group"
+        columns={columns}
+        rows={links}
+        rowKey={(link) => link.id}
+        initialSort={{ id: 'made', descending: true }}
+        empty={
+          <EmptyState title="No share links">
+            A link opens one run without an account. Editors make them on the page of the run.
+          </EmptyState>
+        }
+      />
+      {revoking ? (
+        <ConfirmDialog
+          open
+          onOpenChange={(open) => {
+            if (!open) setRevoking(null);
+          }}
+          title={`Revoke the link to “${revoking.runName}”?`}
+          description="Whoever has it sees from now on that it was revoked. It cannot be opened again; a new link can be made."
+          action="Revoke link"
+          busy={revoke.isPending}
+          error={revoke.error?.message}
+          onConfirm={() =>
+            revoke.mutate(revoking.id, {
+              onSuccess: () => {
+                setRevoking(null);
+                notify.done('The link is revoked.');
+              },
+            })
+          }
+        />
+      ) : null}
+    </>
+  );
+}

@@ -1,0 +1,116 @@
+import { Trash2 } from 'lucide-react';
+import { useMemo, useState } from 'react';
+import type { ReactNode } from 'react';
+import { Link, generatePath } from 'react-router-dom';
+import type { RunSummary } from '../../../../shared/run.ts';
+import { IconButton } from '../../../components/Button.tsx';
+import { DataTable } from '../../../components/DataTable.tsx';
+import type { Column } from '../../../components/DataTable.tsx';
+import { useNotify } from '../../../components/Notices.tsx';
+import { formatDateTime, formatSince } from '../../../lib/format.ts';
+import { paths } from '../../../lib/paths.ts';
+import { useCancelRun } from '../api/cancelRun.ts';
+import { describeAxis } from '../describeAxis.ts';
+import { DeleteRunDialog } from './DeleteRunDialog.tsx';
+import { RunStateCell } from './RunStateCell.tsx';
+
+type RunTableProps = { groupId: string; runs: readonly RunSummary[]; mayEdit: boolean; empty: ReactNode };
+
+export function RunTable({ groupId, runs, mayEdit, empty }: RunTableProps) {
+  const [deleting, setDeleting] = useState<RunSummary | null>(null);
+  const { mutate: cancel, isPending, variables } = useCancelRun(groupId);
+  const notify = useNotify();
+
+  const columns = useMemo(() => {
+    const shown: Column<RunSummary>[] = [
+      { id: 'name', header: 'Run', value: (run) => run.name, cell: (run) => <RunName run={run} /> },
+      { id: 'sweep', header: 'Sweep', value: (run) => describeAxis(run.axis) },
+      {
+        id: 'state',
+        header: 'State',
+        value: (run) => run.progress.state,
+        cell: (run) => (
+          <RunStateCell
+            run={run}
+            cancelling={isPending && variables === run.id}
+            onCancel={
+              mayEdit
+                ? () =>
+                    cancel(run.id, { onError: (error) => notify.problem(`Not cancelled: ${error.message}`) })
+                : undefined
+            }
+          />
+        ),
+      },
+      {
+        id: 'started',
+        header: 'Started',
+        value: (run) => run.createdAt,
+        cell: (run) => (
+          <time dateTime={run.createdAt} title={formatDateTime(run.createdAt)} className="whitespace-nowrap">
+            {formatSince(run.createdAt)}
+          </time>
+        ),
+      },
+      { id: 'by', header: 'By', value: (run) => run.createdBy },
+    ];
+    if (mayEdit) {
+      shown.push({
+        id: 'actions',
+        header: 'Actions',
+        hideHeader: true,
+        sortable: false,
+        align: 'end',
+        value: () => null,
+        cell: (run) => (
+          <IconButton label={`Delete ${run.name}`} onClick={() => setDeleting(run)}>
+            <Trash2 aria-hidden="true" className="size-4" />
+          </IconButton>
+        ),
+      });
+    }
+    return shown;
+  }, [mayEdit, cancel, isPending, variables, notify]);
+
+  return (
+    <>
+      <DataTable
+        caption="Runs of this group"
+        columns={columns}
+        rows={runs}
+        rowKey={(run) => run.id}
+        empty={empty}
+        initialSort={{ id: 'started', descending: true }}
+      />
+      {deleting ? <DeleteRunDialog run={deleting} onClose={() => setDeleting(null)} /> : null}
+    </>
+  );
+}
+
+function RunName({ run }: { run: RunSummary }) {
+  return (
+    <div className="min-w-0">
+      <Link
+        to={generatePath(paths.run, { runId: run.id })}
+        className="font-semibold text-ink no-underline hover:text-accent hover:underline"
+      >
+        {run.name}
+      </Link>
+      {run.isDemo ? <span className="ml-2 text-small font-normal text-muted">demo</span> : null}
+      {run.stackName ? (
+        <div className="text-note font-normal text-muted">
+          {run.stackId ? (
+            <Link
+              to={generatePath(paths.stack, { stackId: run.stackId })}
+              className="text-muted no-underline hover:underline"
+            >
+              {run.stackName}
+            </Link>
+          ) : (
+            run.stackName
+          )}
+        </div>
+      ) : null}
+    </div>
+  );
+}

@@ -1,0 +1,58 @@
+import type { MaterialSummary } from '../../../shared/material.ts';
+import type { StackDocument, StackLayer, StackMedium, WorkingPoint } from '../../../shared/stack.ts';
+
+export const stackTemplates = ['pt-co-pt', 'blank'] as const;
+export type StackTemplate = (typeof stackTemplates)[number];
+
+export const templateTexts: Record<StackTemplate, { label: string; hint: string }> = {
+  'pt-co-pt': {
+    label: 'Pt/Co/Pt on oxidised silicon',
+    hint: 'Pt 3, Co 1 (polar), Pt 5, Ta 5, SiO₂ 100 nm on Si; change any of it.',
+  },
+  blank: { label: 'Blank', hint: 'Air on silicon, no layers yet.' },
+};
+
+/** The laser line at which the shipped magneto-optic constants are known. */
+const workingPoint: WorkingPoint = {
+  wavelengthNm: 632.8,
+  angleDeg: 60,
+  input: 'p',
+  magnetization: { mode: 'drawn' },
+};
+
+const air: StackMedium = { index: 1, label: 'air' };
+
+/**
+ * The document a new stack starts with. Materials are chosen from the library by formula: the preferred source, and
+ * for a magnet one with a Voigt constant.
+ *
+ * @throws Error that names the formula which the library lacks
+ */
+export function documentOf(template: StackTemplate, materials: readonly MaterialSummary[]): StackDocument {
+  const medium = (formula: string): StackMedium => {
+    const candidates = materials.filter((material) => material.formula === formula);
+    const chosen =
+      candidates.find((material) => material.class === 'magnet' && material.voigtRangeNm !== null) ??
+      candidates.find((material) => material.preferred) ??
+      candidates[0];
+    if (!chosen) throw new Error(`The library has no ${formula}; start with a blank stack.`);
+    return { material: chosen.id, version: chosen.version };
+  };
+  const layer = (id: string, formula: string, thicknessNm: number, rest: Partial<StackLayer> = {}) => ({
+    id,
+    medium: medium(formula),
+    thicknessNm,
+    ...rest,
+  });
+  const layers =
+    template === 'blank'
+      ? []
+      : [
+          layer('cap', 'Pt', 3, { note: 'cap' }),
+          layer('film', 'Co', 1, { m: [0, 0, 1] }),
+          layer('seed', 'Pt', 5),
+          layer('buffer', 'Ta', 5, { note: 'buffer' }),
+          layer('oxide', 'SiO2', 100),
+        ];
+  return { incident: air, layers, substrate: medium('Si'), workingPoint };
+}
