@@ -32,9 +32,19 @@ function accountFor(home) {
   );
 }
 
+/**
+ * The command as the account of the cluster, to be started with cwd "/" (the account may not enter ours).
+ * @param {{ account: string | undefined }} place
+ * @param {string[]} command
+ */
+export const asAccount = ({ account }, command) =>
+  account === undefined ? command : ['runuser', '-u', account, '--', ...command];
+
 /** @param {string} account @param {string} folder */
-const canEnter = (account, folder) =>
-  spawnSync('runuser', ['-u', account, '--', 'test', '-x', folder], { cwd: '/' }).status === 0;
+function canEnter(account, folder) {
+  const [program, ...args] = asAccount({ account }, ['test', '-x', folder]);
+  return spawnSync(program, args, { cwd: '/' }).status === 0;
+}
 
 /** Decides the place and makes the folder. @returns {ClusterPlace} */
 export function clusterPlace() {
@@ -61,14 +71,6 @@ export function clusterPlace() {
   fs.chownSync(home, idOf(account, '-u'), idOf(account, '-g'));
   return { home, data: path.join(home, 'cluster'), account };
 }
-
-/**
- * The command as the account of the cluster, to be started with cwd "/" (the account may not enter ours).
- * @param {ClusterPlace} place
- * @param {string[]} command
- */
-export const asAccount = ({ account }, command) =>
-  account === undefined ? command : ['runuser', '-u', account, '--', ...command];
 
 /** Gives a file that root wrote to the account of the cluster. @param {ClusterPlace} place @param {string} file */
 export function giveToAccount({ account }, file) {
