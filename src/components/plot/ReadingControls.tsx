@@ -1,0 +1,95 @@
+import type { AngleUnit } from '../../lib/format.ts';
+import { familyLooks } from './readingSeries.ts';
+import type { Family, Light, ReadingView } from './readingView.ts';
+import { SeriesMark } from './SeriesMark.tsx';
+
+const names: Record<Family, string> = {
+  rotation: 'rotation',
+  ellipticity: 'ellipticity',
+  reflectance: 'reflectance',
+  cross: 'cross-polarized',
+  contrast: 'contrast',
+};
+
+const chip =
+  'inline-flex h-7 items-center gap-1.5 rounded-control border px-2.5 text-note aria-pressed:border-edge aria-pressed:bg-panel aria-pressed:text-ink border-transparent text-muted hover:text-ink';
+
+type Props = {
+  /** What there is to choose from. */
+  families: readonly Family[];
+  lights: Light;
+  shown: readonly Family[];
+  light: Light;
+  log: boolean;
+  unit: AngleUnit;
+  onChange: (change: Partial<ReadingView>) => void;
+};
+
+/** Which readings a plot shows, for which light, in which unit and on which scale. */
+export function ReadingControls({ families, lights, shown, light, log, unit, onChange }: Props) {
+  const toggle = (family: Family) => {
+    const next = shown.includes(family) ? shown.filter((one) => one !== family) : [...shown, family];
+    // An empty plot answers nothing: the last curve stays.
+    if (next.length > 0) onChange({ shown: next });
+  };
+  return (
+    <>
+      <div role="group" aria-label="Readings shown" className="flex flex-wrap gap-0.5">
+        {families.map((family) => (
+          <button
+            key={family}
+            type="button"
+            aria-pressed={shown.includes(family)}
+            onClick={() => toggle(family)}
+            className={chip}
+          >
+            <SeriesMark series={{ ...familyLooks[family] }} />
+            {names[family]}
+          </button>
+        ))}
+      </div>
+      {lights === 'ps' && (
+        <select
+          aria-label="Light shown"
+          value={light}
+          onChange={(event) => onChange({ light: asLight(event.target.value) })}
+          className={quietSelect}
+        >
+          <option value="p">p light</option>
+          <option value="s">s light</option>
+          <option value="ps">p and s</option>
+        </select>
+      )}
+      <select
+        aria-label="Unit of the angles"
+        value={unit}
+        onChange={(event) => onChange({ unit: asUnit(event.target.value) })}
+        className={quietSelect}
+      >
+        <option value="mdeg">mdeg</option>
+        <option value="deg">deg</option>
+        <option value="mrad">mrad</option>
+      </select>
+      <select
+        aria-label="Scale of the readings"
+        value={log ? 'log' : 'linear'}
+        onChange={(event) => onChange({ log: event.target.value === 'log' })}
+        className={quietSelect}
+      >
+        <option value="linear">linear</option>
+        <option value="log">log of absolute value</option>
+      </select>
+    </>
+  );
+}
+
+const quietSelect =
+  'h-7 rounded-control border border-transparent bg-transparent px-1 text-note text-muted hover:border-edge hover:text-ink';
+
+function asLight(value: string): Light {
+  return value === 's' || value === 'ps' ? value : 'p';
+}
+
+function asUnit(value: string): AngleUnit {
+  return value === 'deg' || value === 'mrad' ? value : 'mdeg';
+}

@@ -1,0 +1,47 @@
+import { useMemo } from 'react';
+import type { ReactNode } from 'react';
+import type { ReadingName, SweepAxis } from '../../../shared/run.ts';
+import type { AngleUnit } from '../../lib/format.ts';
+import { LinePlot } from './LinePlot.tsx';
+import { readingSeries, sweepXAxis } from './readingSeries.ts';
+
+type Props = {
+  axis: SweepAxis;
+  /** What the swept layer is called, for a thickness axis. */
+  layerName?: string | undefined;
+  grid: ArrayLike<number>;
+  columns: Partial<Record<ReadingName, ArrayLike<number>>>;
+  /** Which of them to draw. */
+  readings: readonly ReadingName[];
+  unit: AngleUnit;
+  log: boolean;
+  height: number;
+  marker?: number | undefined;
+  onPickX?: ((x: number) => void) | undefined;
+  onCursorX?: ((x: number | null) => void) | undefined;
+  fileName: string;
+  controls?: ReactNode;
+  renderer?: 'canvas' | 'svg';
+};
+
+/** Readings along a sweep, drawn as everywhere in the program. */
+export function ReadingPlot(props: Props) {
+  const { axis, layerName, grid, columns, readings, unit, log, marker, onPickX, onCursorX, ...rest } = props;
+  const data = useMemo(
+    () => readingSeries(grid, columns, readings, unit, log),
+    [grid, columns, readings, unit, log],
+  );
+  const xAxis = useMemo(() => sweepXAxis(axis, layerName), [axis, layerName]);
+  return (
+    <LinePlot
+      {...rest}
+      series={data.series}
+      yAxes={data.yAxes}
+      xAxis={xAxis}
+      ariaLabel={`Readings against ${xAxis.label}`}
+      {...(marker === undefined ? {} : { marker })}
+      {...(onPickX ? { onPickX } : {})}
+      {...(onCursorX ? { onCursorX } : {})}
+    />
+  );
+}

@@ -1,0 +1,115 @@
+import { readingDefinitions } from '../../../shared/readings.ts';
+import type { ReadingName, SweepAxis } from '../../../shared/run.ts';
+import { formatNumber, fromDegrees } from '../../lib/format.ts';
+import type { AngleUnit } from '../../lib/format.ts';
+import type { PlotAxis, PlotSeries } from './plotTypes.ts';
+import type { Family } from './readingView.ts';
+
+/** How each family looks everywhere: colour, dash, name at the curve. */
+export const familyLooks: Record<
+  Family,
+  Pick<PlotSeries, 'tone' | 'dash'> & { word: string; width: number }
+> = {
+  rotation: { tone: 'rotation', dash: 'solid', word: 'rotation', width: 2.4 },
+  ellipticity: { tone: 'ellipticity', dash: 'dashed', word: 'ellipticity', width: 2.2 },
+  reflectance: { tone: 'reflectance', dash: 'dotted', word: 'R', width: 1.8 },
+  cross: { tone: 'magnet', dash: 'solid', word: '|r|', width: 2 },
+  contrast: { tone: 'ink', dash: 'dashed', word: 'contrast', width: 2 },
+};
+
+const crossNames = { p: '|r_sp|', s: '|r_ps|' } as const;
+
+export type ReadingPlotData = { series: PlotSeries[]; yAxes: PlotAxis[] };
+
+/**
+ * The curves and axes of a set of readings: Kerr angles on the left in the unit of the screen, then reflectance,
+ * cross-polarized amplitude (in thousandths) and contrast, each family that is there on an axis of its own.
+ *
+ * @param columns one value a grid point, angles in degrees, NaN for none
+ */
+export function readingSeries(
+  grid: ArrayLike<number>,
+  columns: Partial<Record<ReadingName, ArrayLike<number>>>,
+  readings: readonly ReadingName[],
+  unit: AngleUnit,
+  log: boolean,
+): ReadingPlotData {
+  const present = readings.filter((name) => columns[name] !== undefined);
+  const both = new Set(present.map((name) => readingDefinitions[name].polarization)).size > 1;
+  const kinds = axisOrder.filter((kind) => present.some((name) => axisOf(name) === kind));
+  const series = present.flatMap((name): PlotSeries[] => {
+    const { family, polarization } = readingDefinitions[name];
+    const kind = axisOf(name);
+    const values = columns[name];
+    if (kind === null || values === undefined || family === 'transmittance' || family === 'absorptance')
+      return [];
+    const { word, width, ...look } = familyLooks[family];
+    const plain = family === 'cross' ? crossNames[polarization] : word;
+    return [
+      {
+        ...look,
+        name: both && family !== 'cross' ? `${plain} ${polarization}` : plain,
+        x: grid,
+        y: scaled(values, kind, unit),
+        width: polarization === 'p' ? width : width * 0.6,
+        symbol: polarization === 's' ? 'open' : 'none',
+        yAxisIndex: kinds.indexOf(kind),
+      },
+    ];
+  });
+  return { series, yAxes: kinds.map((kind) => axisFor(kind, unit, log)) };
+}
+
+const axisOrder = ['angle', 'reflectance', 'cross', 'contrast'] as const;
+type AxisKind = (typeof axisOrder)[number];
+
+function axisOf(name: ReadingName): AxisKind | null {
+  const { family } = readingDefinitions[name];
+  if (family === 'rotation' || family === 'ellipticity') return 'angle';
+  return family === 'transmittance' || family === 'absorptance' ? null : family;
+}
+
+function scaled(values: ArrayLike<number>, kind: AxisKind, unit: AngleUnit): ArrayLike<number> {
+  const factor = kind === 'angle' ? fromDegrees(1, unit) : kind === 'cross' ? 1000 : 1;
+  return factor === 1 ? values : Float64Array.from(values, (value) => value * factor);
+}
+
+function axisFor(kind: AxisKind, unit: AngleUnit, log: boolean): PlotAxis {
+  const label = (name: string) => (log ? `abs(${name})` : name);
+  switch (kind) {
+    case 'angle':
+      return { label: label(unit), log, include: [0], format: (value) => `${signed(value)} ${unit}` };
+    case 'reflectance':
+      return { label: 'R', log, include: [0], format: (value) => formatNumber(value) };
+    case 'cross':
+      return { label: '|r| × 10³', log, include: [0], format: (value) => `${formatNumber(value)} × 10⁻³` };
+    case 'contrast':
+      return { label: label('contrast'), log, include: [0], format: signed };
+  }
+}
+
+function signed(value: number): string {
+  return formatNumber(value, { signed: true });
+}
+
+/** The x axis of a sweep in words. */
+export function sweepXAxis(axis: SweepAxis, layerName?: string): PlotAxis {
+  const log = axis.spacing === 'log';
+  switch (axis.kind) {
+    case 'wavelength':
+      return { label: 'wavelength (nm)', log, format: (value) => `${plain(value)} nm` };
+    case 'angle':
+      return { label: 'angle of incidence (deg)', log, format: (value) => `${plain(value)}°` };
+    case 'thickness':
+      return {
+        label: `thickness of ${layerName ?? 'the layer'} (nm)`,
+        log,
+        format: (value) => `${plain(value)} nm`,
+      };
+  }
+}
+
+/** Seven digits: a grid of 1e6 points over 90 deg still has distinct values. */
+function plain(value: number): string {
+  return String(Number(value.toPrecision(7)));
+}

@@ -1,0 +1,93 @@
+import { toComplex } from '../../../../shared/complex.ts';
+import type { MaterialClass, MaterialSummary } from '../../../../shared/material.ts';
+import type { StackMedium } from '../../../../shared/stack.ts';
+import { formatPlain, formatRange } from '../../../lib/format.ts';
+
+/** The group's library by id, as far as it is loaded. */
+export type Materials = ReadonlyMap<string, MaterialSummary>;
+
+export function materialOf(medium: StackMedium, materials: Materials): MaterialSummary | null {
+  return medium.material === undefined ? null : (materials.get(medium.material) ?? null);
+}
+
+/** What the drawing prints in a layer: the formula, else the name given to typed-in constants, else the constants. */
+export function mediumName(medium: StackMedium, materials: Materials): string {
+  if (medium.material !== undefined) return materialOf(medium, materials)?.formula ?? medium.material;
+  if (medium.label) return medium.label;
+  if (medium.epsilon !== undefined) return 'free tensor';
+  if (medium.index === undefined || isSampled(medium.index)) return 'table';
+  const [n, k] = toComplex(medium.index);
+  if (k === 0) return n === 1 ? 'vacuum' : `n ${formatPlain(n)}`;
+  return `${formatPlain(n)} + ${formatPlain(k)}i`;
+}
+
+export function isSampled<Value>(value: Value | { samples: Value[] }): value is { samples: Value[] } {
+  return typeof value === 'object' && value !== null && 'samples' in value;
+}
+
+/** The class that colours the layer; of typed-in constants by what they are like. */
+export function mediumClass(medium: StackMedium, materials: Materials): MaterialClass {
+  const material = materialOf(medium, materials);
+  if (material) return material.class;
+  if (medium.voigt !== undefined || medium.epsilon !== undefined) return 'magnet';
+  if (medium.index === undefined || isSampled(medium.index)) return 'refractory';
+  const [n, k] = toComplex(medium.index);
+  if (k > 1) return n < 1 ? 'noble' : 'refractory';
+  return k > 0.001 || n > 3 ? 'semiconductor' : 'dielectric';
+}
+
+/** Whether an m of this medium does anything. */
+export function isMagnetic(medium: StackMedium, materials: Materials): boolean {
+  if (medium.material === undefined) return medium.voigt !== undefined || medium.quadratic !== undefined;
+  return (materialOf(medium, materials)?.voigtRangeNm ?? null) !== null;
+}
+
+export type MediumNote = { tone: 'problem' | 'caution'; text: string; offer: 'assumeConstant' | null };
+
+/**
+ * What a reader must know of a medium at these wavelengths: constants that end before them, a constant known at
+ * one wavelength only, and constants given from memory.
+ *
+ * @param rangeNm lowest and highest wavelength that is asked
+ * @param magnetized whether the medium has an m other than 0: only then its Q is used
+ */
+export function mediumNotes(
+  medium: StackMedium,
+  materials: Materials,
+  rangeNm: readonly [number, number],
+  magnetized: boolean,
+): MediumNote[] {
+  const material = materialOf(medium, materials);
+  if (material === null) return [];
+  const notes: MediumNote[] = [];
+  const asked = formatRange(rangeNm, 'nm');
+  const assumed = medium.assumeConstant === true;
+  const check = (what: string, known: [number, number]) => {
+    if (rangeNm[0] >= known[0] && rangeNm[1] <= known[1]) return;
+    const one = known[0] === known[1];
+    const extent = one ? `at ${formatRange(known, 'nm')} only` : `for ${formatRange(known, 'nm')}`;
+    if (one && assumed) {
+      notes.push({
+        tone: 'caution',
+        text: `${what} of ${material.formula} is known ${extent} and used at ${asked} too.`,
+        offer: null,
+      });
+      return;
+    }
+    notes.push({
+      tone: 'problem',
+      text: `${what} of ${material.formula} is known ${extent}, not at ${asked}.`,
+      offer: one ? 'assumeConstant' : null,
+    });
+  };
+  check('n, k', material.rangeNm);
+  if (magnetized && material.voigtRangeNm) check('Q', material.voigtRangeNm);
+  if (magnetized && material.voigtConfidence === 'from memory') {
+    notes.push({
+      tone: 'caution',
+      text: `Q of ${material.formula} is from memory: verify before use.`,
+      offer: null,
+    });
+  }
+  return notes;
+}
