@@ -29,6 +29,8 @@ const environmentSchema = z.object({
   LOG_LEVEL: z.enum(['fatal', 'error', 'warn', 'info', 'debug', 'trace', 'silent']).default('info'),
   /** The demo group and its sign-ins; always off in production. */
   DEMO: onOff.default('on'),
+  /** How many reverse proxies of yours stand in front; their X-Forwarded-For is then believed. */
+  TRUST_PROXY: z.coerce.number().int().min(0).max(10).default(0),
   /** Failed sign-ins per person and address, and resets and sign-ups per address, in a quarter of an hour. */
   ATTEMPT_LIMIT: z.coerce.number().int().min(1).default(30),
 });
@@ -47,6 +49,7 @@ export type Config = {
   threads: number;
   logLevel: string;
   demo: boolean;
+  trustedProxies: number;
   attemptLimit: number;
   /** Holds every answer against its schema before it is sent: on in tests. */
   checkAnswers: boolean;
@@ -81,6 +84,7 @@ export function readConfig(environment: Record<string, string | undefined>): Con
     threads: values.THREADS ?? availableParallelism(),
     logLevel: values.LOG_LEVEL,
     demo: !production && values.DEMO === 'on',
+    trustedProxies: values.TRUST_PROXY,
     attemptLimit: values.ATTEMPT_LIMIT,
     checkAnswers: values.NODE_ENV === 'test',
   };

@@ -4,6 +4,7 @@ import type { Config } from './config.ts';
 import type { MailCatcher } from './mail/mailCatcher.ts';
 import type { Mailer } from './mail/mailer.ts';
 import type { Models } from './models/models.ts';
+import type { MaterialStore } from './services/materialStore.ts';
 
 export type PartHealth = { ok: boolean; detail: string };
 
@@ -11,6 +12,7 @@ export type PartHealth = { ok: boolean; detail: string };
 export type Dependencies = {
   config: Config;
   models: Models;
+  materials: MaterialStore;
   logger: Logger;
   pool: ComputePool;
   mailer: Mailer;

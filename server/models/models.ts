@@ -44,9 +44,10 @@ export function createModels(databaseUrl: string) {
     ShareLink: defineShareLink(sequelize),
     Activity: defineActivity(sequelize),
   };
-  const { User, Group, Membership, StackVersion, Run, ShareLink } = models;
+  const { User, Group, Membership, Stack, StackVersion, Run, ShareLink } = models;
   Membership.belongsTo(User, { as: 'user', foreignKey: 'userId' });
   Membership.belongsTo(Group, { as: 'group', foreignKey: 'groupId' });
+  Stack.hasMany(StackVersion, { as: 'versions', foreignKey: 'stackId' });
   StackVersion.belongsTo(User, { as: 'author', foreignKey: 'authorId' });
   Run.belongsTo(User, { as: 'createdBy', foreignKey: 'createdById' });
   Run.belongsTo(Group, { as: 'group', foreignKey: 'groupId' });

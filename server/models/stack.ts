@@ -5,8 +5,10 @@ import type {
   InferCreationAttributes,
   Model,
   ModelStatic,
+  NonAttribute,
   Sequelize,
 } from 'sequelize';
+import type { StackVersion } from './stackVersion.ts';
 
 /** A stack of a group; the documents are in its versions. */
 export interface Stack extends Model<InferAttributes<Stack>, InferCreationAttributes<Stack>> {
@@ -19,6 +21,8 @@ export interface Stack extends Model<InferAttributes<Stack>, InferCreationAttrib
   isDemo: CreationOptional<boolean>;
   createdAt: CreationOptional<Date>;
   updatedAt: CreationOptional<Date>;
+  /** Present when the query included it: `newestVersion` of services/stacks.ts asks for the newest only. */
+  versions?: NonAttribute<StackVersion[]>;
 }
 
 export function defineStack(sequelize: Sequelize): ModelStatic<Stack> {

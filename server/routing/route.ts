@@ -60,14 +60,15 @@ export type Route = {
   authentication: Policy<Actor | null, never>['authentication'];
   body: ZodType | null;
   query: ZodType | null;
-  answer: { status: number; schema: ZodType | null; contentType: string };
+  /** `schema` for JSON, `contentType` alone for a file or stream, neither for an empty answer. */
+  answer: { status: number; schema: ZodType | null; contentType: string | null };
   handle(request: Request, response: Response, services: RouteServices): Promise<void>;
 };
 
 export type RouteServices = {
   dependencies: AppDependencies;
   /** @throws Refusal 401 when there is a cookie or token that does not hold */
-  authenticate: (request: Request) => Promise<Actor | null>;
+  authenticate: (request: Request, response: Response) => Promise<Actor | null>;
 };
 
 /**
@@ -105,7 +106,7 @@ export function route<
   const { answer, handler } = declaration;
   return {
     ...describe(declaration),
-    answer: { ...answer, contentType: 'application/json' },
+    answer: { ...answer, contentType: answer.schema && 'application/json' },
     async handle(request, response, services) {
       const context = await prepare(declaration, request, response, services);
       const result = await handler(context);
@@ -132,7 +133,7 @@ export function streamRoute<
   Subject = null,
 >(
   declaration: Declaration<Path, undefined, Query, Who, Subject> & {
-    answer: { contentType: string };
+    answer: { contentType: string; schema?: ZodType };
     handler: (
       context: RouteContext<Path, undefined, Output<Query>, Who> & { subject: Subject },
     ) => Promise<void> | void;
@@ -140,7 +141,7 @@ export function streamRoute<
 ): Route {
   return {
     ...describe(declaration),
-    answer: { status: 200, schema: null, contentType: declaration.answer.contentType },
+    answer: { status: 200, schema: null, ...declaration.answer },
     async handle(request, response, services) {
       await declaration.handler(await prepare(declaration, request, response, services));
     },
@@ -179,7 +180,7 @@ async function prepare<
   { dependencies, authenticate }: RouteServices,
 ): Promise<RouteContext<Path, Output<Body>, Output<Query>, Who> & { subject: Subject }> {
   const { policy, noun = 'thing' } = declaration;
-  const actor = policy.admit(policy.authentication === 'none' ? null : await authenticate(request));
+  const actor = policy.admit(policy.authentication === 'none' ? null : await authenticate(request, response));
   refuseForgedRequest(request, dependencies.publicUrl());
   const context = {
     dependencies,
