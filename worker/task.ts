@@ -1,6 +1,6 @@
 import type { Issue } from '../shared/error.ts';
 import type { SolveRequest, SolveResponse } from '../shared/solve.ts';
-import { solveCase } from './optics/solveRequest.ts';
+import { solveRequest } from './optics/solveRequest.ts';
 import type { ChunkTask } from './sweep/runSweep.ts';
 import { SharedResult } from './sweep/sharedResult.ts';
 import type { SweepInput } from './sweep/sweepInput.ts';
@@ -26,7 +26,7 @@ export function sweepChunk(task: ChunkTask): TaskOutcome<null> {
 }
 
 export function solve(request: SolveRequest): TaskOutcome<SolveResponse> {
-  return outcomeOf(() => ({ results: request.cases.map((one) => ({ points: solveCase(one) })) }));
+  return outcomeOf(() => solveRequest(request));
 }
 
 /** Makes a thread load its code before the first question. */
