@@ -89,3 +89,47 @@ export function invert(out: Matrix2, x: Matrix2): void {
   out[6] = a * re - ai * im;
   out[7] = a * im + ai * re;
 }
+
+/** out = diag(first, second) x */
+export function scaleRows(
+  out: Matrix2,
+  x: Matrix2,
+  aRe: number,
+  aIm: number,
+  dRe: number,
+  dIm: number,
+): void {
+  for (let i = 0; i < 4; i += 2) {
+    const re = x[i]!;
+    const im = x[i + 1]!;
+    out[i] = aRe * re - aIm * im;
+    out[i + 1] = aRe * im + aIm * re;
+  }
+  for (let i = 4; i < 8; i += 2) {
+    const re = x[i]!;
+    const im = x[i + 1]!;
+    out[i] = dRe * re - dIm * im;
+    out[i + 1] = dRe * im + dIm * re;
+  }
+}
+
+/** out = x diag(first, second) */
+export function scaleColumns(
+  out: Matrix2,
+  x: Matrix2,
+  aRe: number,
+  aIm: number,
+  dRe: number,
+  dIm: number,
+): void {
+  for (let i = 0; i < 8; i += 4) {
+    const re = x[i]!;
+    const im = x[i + 1]!;
+    out[i] = aRe * re - aIm * im;
+    out[i + 1] = aRe * im + aIm * re;
+    const re2 = x[i + 2]!;
+    const im2 = x[i + 3]!;
+    out[i + 2] = dRe * re2 - dIm * im2;
+    out[i + 3] = dRe * im2 + dIm * re2;
+  }
+}

@@ -15,7 +15,7 @@ import {
 /** One value for all wavelengths, or one per wavelength. */
 type Sampled<Value> = Value[];
 
-function samplesOf<Input, Value>(
+export function samplesOf<Input, Value>(
   input: Input | { samples: Input[] } | undefined,
   convert: (value: Input) => Value,
 ): Sampled<Value> | null {
@@ -24,7 +24,7 @@ function samplesOf<Input, Value>(
   return [convert(input)];
 }
 
-function sampleAt<Value>(samples: Sampled<Value>, wavelengthIndex: number): Value {
+export function sampleAt<Value>(samples: Sampled<Value>, wavelengthIndex: number): Value {
   return samples.length === 1 ? samples[0]! : samples[wavelengthIndex]!;
 }
 

@@ -1,5 +1,14 @@
 import type { Matrix2 } from './matrix2.ts';
-import { add, createMatrix2, invert, multiply, setDiagonal, subtract } from './matrix2.ts';
+import {
+  add,
+  createMatrix2,
+  invert,
+  multiply,
+  scaleColumns,
+  scaleRows,
+  setDiagonal,
+  subtract,
+} from './matrix2.ts';
 import type { Modes } from './modes.ts';
 import { propagate } from './modes.ts';
 
@@ -171,36 +180,6 @@ function setSimilar(out: Matrix2, x: Matrix2, modes: Modes): void {
   out[5] = c * downIm + ci * downRe;
   out[6] = x[6]!;
   out[7] = x[7]!;
-}
-
-/** out = diag(first, second) x */
-function scaleRows(out: Matrix2, x: Matrix2, aRe: number, aIm: number, dRe: number, dIm: number): void {
-  for (let i = 0; i < 4; i += 2) {
-    const re = x[i]!;
-    const im = x[i + 1]!;
-    out[i] = aRe * re - aIm * im;
-    out[i + 1] = aRe * im + aIm * re;
-  }
-  for (let i = 4; i < 8; i += 2) {
-    const re = x[i]!;
-    const im = x[i + 1]!;
-    out[i] = dRe * re - dIm * im;
-    out[i + 1] = dRe * im + dIm * re;
-  }
-}
-
-/** out = x diag(first, second) */
-function scaleColumns(out: Matrix2, x: Matrix2, aRe: number, aIm: number, dRe: number, dIm: number): void {
-  for (let i = 0; i < 8; i += 4) {
-    const re = x[i]!;
-    const im = x[i + 1]!;
-    out[i] = aRe * re - aIm * im;
-    out[i + 1] = aRe * im + aIm * re;
-    const re2 = x[i + 2]!;
-    const im2 = x[i + 3]!;
-    out[i + 2] = dRe * re2 - dIm * im2;
-    out[i + 3] = dRe * im2 + dIm * re2;
-  }
 }
 
 function quotient(aRe: number, aIm: number, bRe: number, bIm: number): [number, number] {

@@ -2,10 +2,12 @@ import type { Complex } from '../../shared/complex.ts';
 import { toComplex } from '../../shared/complex.ts';
 import type { MediumInput } from '../../shared/medium.ts';
 import type { SolveCase, StackItemInput } from '../../shared/solve.ts';
-import { forwardRoot, over } from './complexNumber.ts';
+import { forwardRoot, over, scaled, times } from './complexNumber.ts';
+import type { Geometry } from './geometry.ts';
+import { incidenceGeometry } from './geometry.ts';
 import type { Matrix2 } from './matrix2.ts';
-import { add, createMatrix2, invert, multiply, subtract } from './matrix2.ts';
-import { Medium } from './medium.ts';
+import { add, createMatrix2, invert, multiply, scaleColumns, scaleRows, subtract } from './matrix2.ts';
+import { Medium, sampleAt, samplesOf } from './medium.ts';
 import { Modes } from './modes.ts';
 import type { Jones, KerrAngles, Polarized } from './observables.ts';
 import { kerrAngles, reflectance } from './observables.ts';
@@ -42,8 +44,10 @@ export class StackSolver {
   readonly #state = new FieldState();
   readonly #inverse: Matrix2 = createMatrix2();
   readonly #product: Matrix2 = createMatrix2();
+  readonly #exit: Matrix2 = createMatrix2();
   readonly #transmission: Jones = createMatrix2();
-  readonly #point: SolvedPoint = {
+  /** The last solved point. */
+  readonly point: SolvedPoint = {
     r: createMatrix2(),
     t: null,
     R: { p: 0, s: 0 },
@@ -58,10 +62,7 @@ export class StackSolver {
     this.wavelengthsNm = Float64Array.from([solveCase.wavelengthNm].flat());
     this.anglesDeg = Float64Array.from([solveCase.angleDeg].flat());
     const { index } = solveCase.incident;
-    this.#incidentIndex =
-      typeof index === 'object' && 'samples' in index
-        ? index.samples.map(toComplex)
-        : [toComplex(index ?? 1)];
+    this.#incidentIndex = samplesOf(index, toComplex) ?? [[1, 0]];
     const shared = new Map<string, Modes>();
     const modesOf = (medium: MediumInput): Modes => {
       const key = JSON.stringify(medium);
@@ -108,19 +109,35 @@ export class StackSolver {
    * @param angleDeg angle of incidence, [0, 90) deg
    */
   solve(wavelengthIndex: number, angleDeg: number): SolvedPoint {
+    const index = sampleAt(this.#incidentIndex, wavelengthIndex);
+    const geometry = incidenceGeometry(index[0], angleDeg);
+    const { point } = this;
+    this.solveAmplitudes(wavelengthIndex, geometry, index, [geometry.q0, 0]);
+    const R = reflectance(point.r);
+    point.R = R;
+    point.T = this.#transmittance(geometry.q0);
+    point.A = { p: 1 - R.p - point.T.p, s: 1 - R.s - point.T.s };
+    point.kerr = { p: kerrAngles(point.r, 'p'), s: kerrAngles(point.r, 's') };
+    return point;
+  }
+
+  /**
+   * Only r and t of `point`, for light that arrives from the case's incident medium; that medium may absorb here,
+   * as the inside of a thick slab does.
+   *
+   * @param geometry fixes xi, whatever medium the light comes from
+   * @param index N of the medium the light arrives in
+   * @param q its normal wave number over k0
+   */
+  solveAmplitudes(wavelengthIndex: number, geometry: Geometry, index: Complex, q: Complex): void {
     this.#load(wavelengthIndex);
-    const incidents = this.#incidentIndex;
-    const n0 = (incidents.length === 1 ? incidents[0]! : incidents[wavelengthIndex]!)[0];
-    const xi = n0 * Math.sin((angleDeg * Math.PI) / 180);
-    // cos(theta) as sin(90 deg - theta): near grazing the subtraction in degrees is exact.
-    const q0 = n0 * Math.sin(((90 - angleDeg) * Math.PI) / 180);
+    const { n0, xi, q0 } = geometry;
     const k0 = (2 * Math.PI) / this.wavelengthsNm[wavelengthIndex]!;
     for (const modes of this.#modes) modes.update(n0, xi, q0);
     for (const layer of this.#written) layer.update(k0);
     this.#state.start(this.#substrate);
     for (const layer of this.#sequence) layer.cross(this.#state);
-    this.#leave(n0, q0);
-    return this.#point;
+    this.#leave(index, q);
   }
 
   #load(wavelengthIndex: number): void {
@@ -133,50 +150,37 @@ export class StackSolver {
    * Into the incident medium: f = diag(N0, 1) (incident + reflected), g = diag(q0 / N0, q0) (incident - reflected),
    * so r = D^-1 (Z0 M - N) (Z0 M + N)^-1 D with D = diag(1/N0, 1), free of any division by cos(theta).
    */
-  #leave(n0: number, q0: number): void {
+  #leave(n0: Complex, q0: Complex): void {
     const { m, n, chain } = this.#state;
     const product = this.#product;
     const inverse = this.#inverse;
-    const point = this.#point;
-    const zp = q0 / (n0 * n0);
-    for (let i = 0; i < 4; i++) product[i] = zp * m[i]!;
-    for (let i = 4; i < 8; i++) product[i] = q0 * m[i]!;
+    const { point } = this;
+    const zp = over(q0, times(n0, n0));
+    scaleRows(product, m, zp[0], zp[1], q0[0], q0[1]);
     add(inverse, product, n);
     invert(inverse, inverse);
     subtract(product, product, n);
     multiply(point.r, product, inverse);
-    point.r[2] = point.r[2]! * n0;
-    point.r[3] = point.r[3]! * n0;
-    point.r[4] = point.r[4]! / n0;
-    point.r[5] = point.r[5]! / n0;
-    // x of the whole stack for unit p (first column) and s light.
-    multiply(product, chain, inverse);
-    for (let i = 0; i < 8; i += 4) {
-      product[i] = (product[i]! * 2 * q0) / n0;
-      product[i + 1] = (product[i + 1]! * 2 * q0) / n0;
-      product[i + 2] = product[i + 2]! * 2 * q0;
-      product[i + 3] = product[i + 3]! * 2 * q0;
-    }
-    const R = reflectance(point.r);
-    point.R = R;
-    point.T = this.#transmittance(product, q0);
-    point.A = { p: 1 - R.p - point.T.p, s: 1 - R.s - point.T.s };
-    point.t = this.#transmittedAmplitudes(product);
-    point.kerr = { p: kerrAngles(point.r, 'p'), s: kerrAngles(point.r, 's') };
+    const inverseIndex = over([1, 0], n0);
+    scaleElement(point.r, 2, n0);
+    scaleElement(point.r, 4, inverseIndex);
+    // x at the substrate for unit p (first column) and s light.
+    multiply(this.#exit, chain, inverse);
+    const p = over(scaled(q0, 2), n0);
+    scaleColumns(this.#exit, this.#exit, p[0], p[1], 2 * q0[0], 2 * q0[1]);
+    point.t = this.#transmittedAmplitudes(this.#exit);
   }
 
   /** Energy through the last interface: Re(Ex Hy* - Ey Hx*) / (N0 cos theta) with f = x, g = Z x there. */
-  #transmittance(x: Matrix2, q0: number): Polarized {
-    const g = this.#inverse;
+  #transmittance(q0: number): Polarized {
+    const g = this.#product;
+    const x = this.#exit;
     const substrate = this.#substrate;
     if (substrate.isotropic) {
-      g.fill(0);
-      [g[0], g[1]] = substrate.zp;
-      [g[6], g[7]] = substrate.q;
+      scaleRows(g, x, substrate.zp[0], substrate.zp[1], substrate.q[0], substrate.q[1]);
     } else {
-      g.set(substrate.forward.z);
+      multiply(g, substrate.forward.z, x);
     }
-    multiply(g, g, x);
     const flux = (column: number) =>
       g[column]! * x[column]! +
       g[column + 1]! * x[column + 1]! +
@@ -194,12 +198,13 @@ export class StackSolver {
         ? medium.index
         : forwardRoot([medium.tensor[0]!, medium.tensor[1]!]);
     const inverse = over([1, 0], index);
-    const t = this.#transmission;
-    for (const i of [0, 2]) {
-      t[i] = x[i]! * inverse[0] - x[i + 1]! * inverse[1];
-      t[i + 1] = x[i]! * inverse[1] + x[i + 1]! * inverse[0];
-    }
-    t.set(x.subarray(4), 4);
-    return t;
+    scaleRows(this.#transmission, x, inverse[0], inverse[1], 1, 0);
+    return this.#transmission;
   }
+}
+
+function scaleElement(matrix: Matrix2, at: 2 | 4, factor: Complex): void {
+  const value = times([matrix[at]!, matrix[at + 1]!], factor);
+  matrix[at] = value[0];
+  matrix[at + 1] = value[1];
 }
