@@ -1,4 +1,6 @@
 import type { Logger } from 'pino';
+import type { Transaction } from 'sequelize';
+import type { RunProgress } from '../shared/run.ts';
 import type { ComputePool } from '../worker/pool.ts';
 import type { Config } from './config.ts';
 import type { MailCatcher } from './mail/mailCatcher.ts';
@@ -26,6 +28,13 @@ export type Dependencies = {
 export type Jobs = {
   health(): Promise<PartHealth>;
   stop(): Promise<void>;
+  /** Puts a run that waits into the queue, in the transaction that makes it wait. */
+  enqueue(runId: string, transaction: Transaction): Promise<void>;
+  /**
+   * Tells how a run goes on, until the returned function is called. `null` means that notices may have been lost:
+   * look at the row.
+   */
+  watch(runId: string, listener: (progress: RunProgress | null) => void): () => void;
 };
 
 /** What request handlers have: the queue is started after everything that it depends on. */
