@@ -1,0 +1,117 @@
+import type { Logger } from 'pino';
+import type { ComputePool } from '../../worker/pool.ts';
+import { ComputeError } from '../../worker/sweep/computeError.ts';
+import type { SweepResult } from '../../worker/sweep/runSweep.ts';
+import { isDatabaseAway } from '../http/toRefusal.ts';
+import type { Models } from '../models/models.ts';
+import type { MaterialStore } from '../services/materialStore.ts';
+import { loadRunMaterials } from '../services/runMaterials.ts';
+import type { RunLease } from './runLease.ts';
+import type { RunQueue } from './runQueue.ts';
+import { retryWhileAway } from './retryWhileAway.ts';
+
+export type ExecutionDependencies = {
+  models: Models;
+  materials: MaterialStore;
+  pool: ComputePool;
+  queue: RunQueue;
+  logger: Logger;
+};
+
+/** Reason to stop a run that is not this host's any more; with any other reason it goes back to the queue. */
+export const LOST = 'cancelled, deleted or taken by another host';
+
+/**
+ * Computes one run and stores what came out: its numbers, or why there are none. Never rejects: when the database
+ * stays away, the run is left to the sweeper.
+ *
+ * @param stopping aborted to stop the run, with `LOST` when it is not this host's any more
+ */
+export async function executeRun(
+  lease: RunLease,
+  dependencies: ExecutionDependencies,
+  stopping: AbortController,
+): Promise<void> {
+  const { logger, queue } = dependencies;
+  const log = logger.child({ runId: lease.runId });
+  try {
+    const outcome = await compute(lease, dependencies, stopping);
+    switch (outcome.kind) {
+      case 'stopped':
+        if (stopping.signal.reason !== LOST) await lease.giveBack(queue);
+        log.info({ reason: String(stopping.signal.reason) }, 'A run was stopped');
+        break;
+      case 'failed':
+        await retryWhileAway(() => lease.fail(outcome.error), stopping.signal);
+        log.warn({ error: outcome.error }, 'A run failed');
+        break;
+      case 'solved': {
+        const { seconds, points } = outcome.result;
+        const stored = await retryWhileAway(() => lease.finish(outcome.result), stopping.signal);
+        log.info({ seconds, points, stored }, 'A run was solved');
+        break;
+      }
+    }
+  } catch (error) {
+    log.error({ err: error }, 'A run could not be brought to an end; it will be tried again');
+  }
+}
+
+type Outcome =
+  | { kind: 'solved'; result: SweepResult }
+  /** `error` is for people. */
+  | { kind: 'failed'; error: string }
+  | { kind: 'stopped' };
+
+async function compute(
+  lease: RunLease,
+  { materials: store, pool, logger }: ExecutionDependencies,
+  stopping: AbortController,
+): Promise<Outcome> {
+  const { document, axis, readings } = lease.run.input;
+  let reporting = false;
+  const report = async (done: number) => {
+    // A slow database gets fewer reports, not a queue of them.
+    if (reporting) return;
+    reporting = true;
+    try {
+      if (!(await lease.reportProgress(done))) stopping.abort(LOST);
+    } catch (error) {
+      if (!isDatabaseAway(error)) logger.error({ err: error }, 'Progress could not be stored');
+    } finally {
+      reporting = false;
+    }
+  };
+  try {
+    const materials = await loadRunMaterials(store, lease.run);
+    const input = { document, axis, readings, materials };
+    const result = await pool.sweep(input, {
+      signal: stopping.signal,
+      onProgress: (done, total) => {
+        if (done < total) void report(done);
+      },
+    });
+    return { kind: 'solved', result };
+  } catch (error) {
+    if (stopping.signal.aborted) return { kind: 'stopped' };
+    if (!(error instanceof ComputeError)) throw error;
+    return error.failure === 'closed'
+      ? { kind: 'stopped' }
+      : { kind: 'failed', error: describeFailure(error) };
+  }
+}
+
+function describeFailure(error: ComputeError): string {
+  switch (error.failure) {
+    case 'refused':
+      return error.issues.length > 0
+        ? error.issues.map(({ path, message }) => `${path}: ${message}`).join('\n')
+        : error.message;
+    case 'crashed':
+      return `${error.message}. Rerun it; if that fails again, ask for fewer points or a smaller stack.`;
+    case 'cancelled':
+    case 'timeout':
+    case 'closed':
+      return error.message;
+  }
+}

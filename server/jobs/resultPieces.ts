@@ -1,0 +1,39 @@
+import { describeResult, encodeResultHeader } from '../../shared/resultFormat.ts';
+import { SOLVER_VERSION } from '../../worker/optics/version.ts';
+import type { SweepResult } from '../../worker/sweep/runSweep.ts';
+import type { Run } from '../models/run.ts';
+
+/** What one row of run_chunks holds at most. */
+export const PIECE_BYTES = 4 * 1024 * 1024;
+
+/** The result file of a run, cut into rows. The pieces are views of the shared columns wherever possible. */
+export function* resultPieces(
+  run: Pick<Run, 'input' | 'inputSha256'>,
+  result: SweepResult,
+): Generator<Buffer> {
+  const { axis, readings } = run.input;
+  const header = encodeResultHeader(
+    describeResult(axis, readings, { solverVersion: SOLVER_VERSION, inputSha256: run.inputSha256 }),
+  );
+  let waiting: Buffer[] = [Buffer.from(header)];
+  let bytes = header.length;
+  for (const column of result.columns) {
+    const whole = Buffer.from(column.buffer, column.byteOffset, column.byteLength);
+    for (let start = 0; start < whole.length;) {
+      const part = whole.subarray(start, start + PIECE_BYTES - bytes);
+      waiting.push(part);
+      bytes += part.length;
+      start += part.length;
+      if (bytes === PIECE_BYTES) {
+        yield joined(waiting);
+        waiting = [];
+        bytes = 0;
+      }
+    }
+  }
+  if (bytes > 0) yield joined(waiting);
+}
+
+function joined(parts: Buffer[]): Buffer {
+  return parts.length === 1 ? parts[0]! : Buffer.concat(parts);
+}
