@@ -42,11 +42,16 @@ export class Medium {
   /** N where the diagonal is scalar; null for a medium given as a tensor. */
   index: Complex | null = null;
 
+  /** N^2, the part of the diagonal that Q multiplies; null for a medium given as a tensor. */
+  permittivity: Complex | null = null;
+  /** Q at the loaded wavelength; 0 without magneto-optic data. */
+  voigt: Complex = [0, 0];
+  readonly m: Vector;
+
   readonly #index: Sampled<Complex> | null;
   readonly #voigt: Sampled<Complex> | null;
   readonly #extraordinary: Sampled<Complex> | null;
   readonly #epsilon: Sampled<Tensor> | null;
-  readonly #m: Vector;
   readonly #axis: Vector | null;
   readonly #quadratic: QuadraticConstants | null;
 
@@ -56,7 +61,7 @@ export class Medium {
     this.#voigt = samplesOf(input.voigt, toComplex);
     this.#extraordinary = samplesOf(input.extraordinary, toComplex);
     this.#epsilon = samplesOf(input.epsilon, tensorFrom);
-    this.#m = input.m ?? [0, 0, 0];
+    this.m = input.m ?? [0, 0, 0];
     this.#axis = input.axis ?? null;
     this.#quadratic = input.quadratic ? quadraticFrom(input.quadratic) : null;
   }
@@ -90,6 +95,7 @@ export class Medium {
     const permittivity = times(index, index);
     setScalar(this.tensor, permittivity);
     this.index = index;
+    this.permittivity = permittivity;
     this.scalarDiagonal = true;
     if (this.#extraordinary && this.#axis) {
       const extraordinary = sampleAt(this.#extraordinary, wavelengthIndex);
@@ -97,11 +103,12 @@ export class Medium {
       this.scalarDiagonal = false;
     }
     if (this.#quadratic) {
-      addQuadratic(this.tensor, this.#quadratic, this.#m);
+      addQuadratic(this.tensor, this.#quadratic, this.m);
       this.scalarDiagonal = false;
     }
     if (this.#voigt) {
-      addGyration(this.tensor, permittivity, sampleAt(this.#voigt, wavelengthIndex), this.#m);
+      this.voigt = sampleAt(this.#voigt, wavelengthIndex);
+      addGyration(this.tensor, permittivity, this.voigt, this.m);
     }
     this.isotropic = isMultipleOfIdentity(this.tensor);
   }

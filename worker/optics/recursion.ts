@@ -49,7 +49,7 @@ const step = createMatrix2();
  */
 export class LayerStep {
   readonly modes: Modes;
-  thicknessNm: number;
+  readonly #layer: { thicknessNm: number };
   /** Isotropic: exp(i k0 d q), its square e, and 1 - e without cancellation. */
   #phiRe = 1;
   #phiIm = 0;
@@ -61,14 +61,15 @@ export class LayerStep {
   readonly #down = createMatrix2();
   readonly #up = createMatrix2();
 
-  constructor(modes: Modes, thicknessNm: number) {
+  /** @param layer its thickness is read anew at each update */
+  constructor(modes: Modes, layer: { thicknessNm: number }) {
     this.modes = modes;
-    this.thicknessNm = thicknessNm;
+    this.#layer = layer;
   }
 
   /** @param k0 vacuum wave number, 1/nm */
   update(k0: number): void {
-    const phase = k0 * this.thicknessNm;
+    const phase = k0 * this.#layer.thicknessNm;
     const { modes } = this;
     if (!modes.isotropic) {
       propagate(this.#down, modes.forward, phase, 1);

@@ -1,13 +1,12 @@
 import type { Complex } from '../../shared/complex.ts';
-import { toComplex } from '../../shared/complex.ts';
-import type { MediumInput } from '../../shared/medium.ts';
-import type { SolveCase, StackItemInput } from '../../shared/solve.ts';
+import type { SolveCase } from '../../shared/solve.ts';
+import type { WrittenLayer } from './compiledStack.ts';
+import { CompiledStack } from './compiledStack.ts';
 import { forwardRoot, over, scaled, times } from './complexNumber.ts';
 import type { Geometry } from './geometry.ts';
 import { incidenceGeometry } from './geometry.ts';
 import type { Matrix2 } from './matrix2.ts';
 import { add, createMatrix2, invert, multiply, scaleColumns, scaleRows, subtract } from './matrix2.ts';
-import { Medium, sampleAt, samplesOf } from './medium.ts';
 import { Modes } from './modes.ts';
 import type { Jones, KerrAngles, Polarized } from './observables.ts';
 import { kerrAngles, reflectance } from './observables.ts';
@@ -30,16 +29,13 @@ export type SolvedPoint = {
  * once per point.
  */
 export class StackSolver {
-  readonly wavelengthsNm: Float64Array;
-  readonly anglesDeg: Float64Array;
+  readonly stack: CompiledStack;
 
-  readonly #incidentIndex: Complex[];
-  readonly #modes: Modes[] = [];
+  readonly #modes: Modes[];
   readonly #substrate: Modes;
-  /** Layers as written, and the order in which light from below meets them once blocks are expanded. */
-  readonly #written: LayerStep[] = [];
-  readonly #sequence: LayerStep[];
-  readonly #byPath = new Map<string, LayerStep>();
+  readonly #steps = new Map<WrittenLayer, LayerStep>();
+  /** From the substrate up. */
+  readonly #upward: LayerStep[];
 
   readonly #state = new FieldState();
   readonly #inverse: Matrix2 = createMatrix2();
@@ -55,41 +51,25 @@ export class StackSolver {
     A: { p: 0, s: 0 },
     kerr: { p: null, s: null },
   };
-  #loaded = -1;
 
   /** @param solveCase a case that has passed `solveCaseSchema` and `checkSolveRequest` */
   constructor(solveCase: SolveCase) {
-    this.wavelengthsNm = Float64Array.from([solveCase.wavelengthNm].flat());
-    this.anglesDeg = Float64Array.from([solveCase.angleDeg].flat());
-    const { index } = solveCase.incident;
-    this.#incidentIndex = samplesOf(index, toComplex) ?? [[1, 0]];
-    const shared = new Map<string, Modes>();
-    const modesOf = (medium: MediumInput): Modes => {
-      const key = JSON.stringify(medium);
-      const known = shared.get(key);
-      if (known) return known;
-      const modes = new Modes(new Medium(medium));
-      shared.set(key, modes);
-      this.#modes.push(modes);
-      return modes;
-    };
-    this.#substrate = modesOf(solveCase.substrate);
-    this.#sequence = this.#compile(solveCase.layers, '', modesOf).reverse();
+    this.stack = new CompiledStack(solveCase);
+    const modes = new Map(this.stack.media.map((medium) => [medium, new Modes(medium)]));
+    this.#modes = [...modes.values()];
+    this.#substrate = modes.get(this.stack.substrate)!;
+    for (const layer of this.stack.written) {
+      this.#steps.set(layer, new LayerStep(modes.get(layer.medium)!, layer));
+    }
+    this.#upward = this.stack.sequence.map((layer) => this.#steps.get(layer)!).reverse();
   }
 
-  #compile(items: StackItemInput[], path: string, modesOf: (medium: MediumInput) => Modes): LayerStep[] {
-    return items.flatMap((item, position) => {
-      const here = `${path}/${position}`;
-      if ('layers' in item) {
-        const block = this.#compile(item.layers, here, modesOf);
-        return Array.from({ length: item.repeat }, () => block).flat();
-      }
-      const { thicknessNm, ...medium } = item;
-      const step = new LayerStep(modesOf(medium), thicknessNm);
-      this.#written.push(step);
-      this.#byPath.set(here, step);
-      return step;
-    });
+  get wavelengthsNm(): Float64Array {
+    return this.stack.wavelengthsNm;
+  }
+
+  get anglesDeg(): Float64Array {
+    return this.stack.anglesDeg;
   }
 
   /**
@@ -99,7 +79,7 @@ export class StackSolver {
    * @throws RangeError when there is no layer at that path
    */
   setThickness(path: number[], thicknessNm: number): void {
-    const layer = this.#byPath.get(`/${path.join('/')}`);
+    const layer = this.stack.layerAt(path);
     if (!layer) throw new RangeError(`no layer at layers[${path.join('].layers[')}]`);
     layer.thicknessNm = thicknessNm;
   }
@@ -109,7 +89,7 @@ export class StackSolver {
    * @param angleDeg angle of incidence, [0, 90) deg
    */
   solve(wavelengthIndex: number, angleDeg: number): SolvedPoint {
-    const index = sampleAt(this.#incidentIndex, wavelengthIndex);
+    const index = this.stack.incidentIndex(wavelengthIndex);
     const geometry = incidenceGeometry(index[0], angleDeg);
     const { point } = this;
     this.solveAmplitudes(wavelengthIndex, geometry, index, [geometry.q0, 0]);
@@ -130,20 +110,14 @@ export class StackSolver {
    * @param q its normal wave number over k0
    */
   solveAmplitudes(wavelengthIndex: number, geometry: Geometry, index: Complex, q: Complex): void {
-    this.#load(wavelengthIndex);
+    this.stack.load(wavelengthIndex);
     const { n0, xi, q0 } = geometry;
     const k0 = (2 * Math.PI) / this.wavelengthsNm[wavelengthIndex]!;
     for (const modes of this.#modes) modes.update(n0, xi, q0);
-    for (const layer of this.#written) layer.update(k0);
+    for (const step of this.#steps.values()) step.update(k0);
     this.#state.start(this.#substrate);
-    for (const layer of this.#sequence) layer.cross(this.#state);
+    for (const step of this.#upward) step.cross(this.#state);
     this.#leave(index, q);
-  }
-
-  #load(wavelengthIndex: number): void {
-    if (wavelengthIndex === this.#loaded) return;
-    for (const modes of this.#modes) modes.medium.load(wavelengthIndex);
-    this.#loaded = wavelengthIndex;
   }
 
   /**

@@ -1,0 +1,84 @@
+import type { Complex } from '../../shared/complex.ts';
+import { toComplex } from '../../shared/complex.ts';
+import type { MediumInput } from '../../shared/medium.ts';
+import type { SolveCase, StackItemInput } from '../../shared/solve.ts';
+import { Medium, sampleAt, samplesOf } from './medium.ts';
+
+/** A layer as written in the case; a block refers to it as often as it repeats. */
+export type WrittenLayer = {
+  /** Positions into nested `layers` arrays. */
+  path: number[];
+  medium: Medium;
+  thicknessNm: number;
+};
+
+/** A solve case with equal media shared and blocks expanded; what every computation on it starts from. */
+export class CompiledStack {
+  readonly wavelengthsNm: Float64Array;
+  readonly anglesDeg: Float64Array;
+  /** Each different medium once, the substrate's first. */
+  readonly media: Medium[] = [];
+  readonly substrate: Medium;
+  readonly written: WrittenLayer[] = [];
+  /** Layers in the order in which light meets them, blocks expanded. */
+  readonly sequence: WrittenLayer[];
+
+  readonly #incidentIndex: Complex[];
+  readonly #byPath = new Map<string, WrittenLayer>();
+  #loaded = -1;
+
+  /** @param solveCase a case that has passed `solveCaseSchema` and `checkSolveRequest` */
+  constructor(solveCase: SolveCase) {
+    this.wavelengthsNm = Float64Array.from([solveCase.wavelengthNm].flat());
+    this.anglesDeg = Float64Array.from([solveCase.angleDeg].flat());
+    this.#incidentIndex = samplesOf(solveCase.incident.index, toComplex) ?? [[1, 0]];
+    const shared = new Map<string, Medium>();
+    const mediumOf = (input: MediumInput): Medium => {
+      const key = JSON.stringify(input);
+      const known = shared.get(key);
+      if (known) return known;
+      const medium = new Medium(input);
+      shared.set(key, medium);
+      this.media.push(medium);
+      return medium;
+    };
+    this.substrate = mediumOf(solveCase.substrate);
+    this.sequence = this.#compile(solveCase.layers, [], mediumOf);
+  }
+
+  #compile(
+    items: StackItemInput[],
+    path: number[],
+    mediumOf: (input: MediumInput) => Medium,
+  ): WrittenLayer[] {
+    return items.flatMap((item, position) => {
+      const here = [...path, position];
+      if ('layers' in item) {
+        const block = this.#compile(item.layers, here, mediumOf);
+        return Array.from({ length: item.repeat }, () => block).flat();
+      }
+      const { thicknessNm, ...constants } = item;
+      const layer = { path: here, medium: mediumOf(constants), thicknessNm };
+      this.written.push(layer);
+      this.#byPath.set(here.join('/'), layer);
+      return layer;
+    });
+  }
+
+  /** Index of the incident medium; complex only for light that comes from inside a slab. */
+  incidentIndex(wavelengthIndex: number): Complex {
+    return sampleAt(this.#incidentIndex, wavelengthIndex);
+  }
+
+  /** The written layer at a path as `findLayerPath` gives it; undefined when there is none. */
+  layerAt(path: number[]): WrittenLayer | undefined {
+    return this.#byPath.get(path.join('/'));
+  }
+
+  /** Makes every medium describe this wavelength. */
+  load(wavelengthIndex: number): void {
+    if (wavelengthIndex === this.#loaded) return;
+    for (const medium of this.media) medium.load(wavelengthIndex);
+    this.#loaded = wavelengthIndex;
+  }
+}
