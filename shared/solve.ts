@@ -34,17 +34,22 @@ const libraryLayerSchema = strictObject({ thicknessNm, ...mediumFields, ...libra
   checkMediumKeys,
 );
 
-const stackItemSchema: z.ZodType<StackItemInput, StackItemInput> = z.lazy(() =>
-  z.union([layerSchema, strictObject({ repeat, layers: z.array(stackItemSchema) })], {
-    error: 'must be a layer or a block {"repeat", "layers"}',
-  }),
-);
+// A schema that holds itself needs a name in the API's description.
+const stackItemSchema: z.ZodType<StackItemInput, StackItemInput> = z
+  .lazy(() =>
+    z.union([layerSchema, strictObject({ repeat, layers: z.array(stackItemSchema) })], {
+      error: 'must be a layer or a block {"repeat", "layers"}',
+    }),
+  )
+  .meta({ id: 'LayerOrBlock' });
 
-const libraryStackItemSchema: z.ZodType<LibraryStackItemInput, LibraryStackItemInput> = z.lazy(() =>
-  z.union([libraryLayerSchema, strictObject({ repeat, layers: z.array(libraryStackItemSchema) })], {
-    error: 'must be a layer or a block {"repeat", "layers"}',
-  }),
-);
+const libraryStackItemSchema: z.ZodType<LibraryStackItemInput, LibraryStackItemInput> = z
+  .lazy(() =>
+    z.union([libraryLayerSchema, strictObject({ repeat, layers: z.array(libraryStackItemSchema) })], {
+      error: 'must be a layer or a block {"repeat", "layers"}',
+    }),
+  )
+  .meta({ id: 'LibraryLayerOrBlock' });
 
 export function isBlock<Layer extends object, Block extends { layers: unknown[] }>(
   item: Layer | Block,

@@ -37,19 +37,22 @@ export type StackLayer = z.infer<typeof stackLayerSchema>;
 export type StackBlock = { id: string; repeat: number; layers: StackItem[] };
 export type StackItem = StackLayer | StackBlock;
 
-export const stackItemSchema: z.ZodType<StackItem, StackItem> = z.lazy(() =>
-  z.union(
-    [
-      stackLayerSchema,
-      strictObject({
-        id: itemId,
-        repeat: z.int().min(0).max(LIMITS.repeat),
-        layers: z.array(stackItemSchema).max(LIMITS.documentItems),
-      }),
-    ],
-    { error: 'must be a layer or a block {"id", "repeat", "layers"}' },
-  ),
-);
+// A schema that holds itself needs a name in the API's description.
+export const stackItemSchema: z.ZodType<StackItem, StackItem> = z
+  .lazy(() =>
+    z.union(
+      [
+        stackLayerSchema,
+        strictObject({
+          id: itemId,
+          repeat: z.int().min(0).max(LIMITS.repeat),
+          layers: z.array(stackItemSchema).max(LIMITS.documentItems),
+        }),
+      ],
+      { error: 'must be a layer or a block {"id", "repeat", "layers"}' },
+    ),
+  )
+  .meta({ id: 'StackItem' });
 
 export const polarizations = ['p', 's'] as const;
 export type Polarization = (typeof polarizations)[number];
