@@ -13,6 +13,21 @@ function page(path: string, load: () => Promise<ComponentType>): RouteObject {
 
 /** Open to everybody. */
 const openPages = [
+  page(paths.signIn, async () => (await import('./routes/signIn/SignInPage.tsx')).SignInPage),
+  page(paths.signUp, async () => (await import('./routes/signUp/SignUpPage.tsx')).SignUpPage),
+  page(
+    paths.forgotPassword,
+    async () => (await import('./routes/forgotPassword/ForgotPasswordPage.tsx')).ForgotPasswordPage,
+  ),
+  page(
+    paths.resetPassword,
+    async () => (await import('./routes/resetPassword/ResetPasswordPage.tsx')).ResetPasswordPage,
+  ),
+  page(
+    paths.conventions,
+    async () => (await import('./routes/conventions/ConventionsPage.tsx')).ConventionsPage,
+  ),
+  page(paths.mails, async () => (await import('./routes/mails/MailsPage.tsx')).MailsPage),
   page(paths.share, async () => (await import('./routes/share/SharePage.tsx')).SharePage),
   page('*', async () => (await import('./routes/notFound/NotFoundPage.tsx')).NotFoundPage),
 ];
@@ -20,6 +35,12 @@ const openPages = [
 /** Behind the sign-in. */
 const groupPages = [
   page(paths.start, async () => (await import('./routes/start/StartPage.tsx')).StartPage),
+  page(paths.groupHome, async () => (await import('./routes/groupHome/GroupHomePage.tsx')).GroupHomePage),
+  page(paths.runs, async () => (await import('./routes/runs/RunsPage.tsx')).RunsPage),
+  page(paths.materials, async () => (await import('./routes/materials/MaterialsPage.tsx')).MaterialsPage),
+  page(paths.people, async () => (await import('./routes/people/PeoplePage.tsx')).PeoplePage),
+  page(paths.account, async () => (await import('./routes/account/AccountPage.tsx')).AccountPage),
+  page(paths.material, async () => (await import('./routes/material/MaterialPage.tsx')).MaterialPage),
   page(paths.stack, async () => (await import('./routes/stack/StackPage.tsx')).StackPage),
   page(paths.run, async () => (await import('./routes/run/RunPage.tsx')).RunPage),
 ];

@@ -126,8 +126,12 @@ export function formatDuration(seconds: number): string {
 
 const subscripts = '₀₁₂₃₄₅₆₇₈₉';
 
+/** Trade names that look like formulas but count nothing. */
+const tradeNames = new Set(['BK7']);
+
 /** A chemical formula with its counts set low: SiO2 becomes SiO₂. */
 export function formatFormula(formula: string): string {
+  if (tradeNames.has(formula)) return formula;
   return formula.replace(/([A-Za-z)])(\d+)/g, (_, before: string, digits: string) => {
     return before + Array.from(digits, (digit) => subscripts[Number(digit)]).join('');
   });
