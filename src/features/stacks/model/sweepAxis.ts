@@ -81,3 +81,19 @@ export function axisProblems(axis: SweepAxis): Partial<Record<'from' | 'to' | 'p
   if (axis.points > 1 && axis.from === axis.to && !problems.to) problems.to = 'must differ from the start';
   return problems;
 }
+
+/** Bytes of a preview's request that are still quick to send and read. */
+const PREVIEW_BYTES = 1_500_000;
+/** States of one reading at most: given, m = 0, reversed. */
+const STATES = 3;
+
+/**
+ * Points of the live preview: those of the axis up to PREVIEW_POINTS, fewer for a thickness of a film so long that
+ * a copy of it for each point would be a slow request.
+ */
+export function previewPoints(axis: SweepAxis, document: StackDocument): number {
+  const most = Math.min(axis.points, PREVIEW_POINTS);
+  if (axis.kind !== 'thickness') return most;
+  const bytes = JSON.stringify(document.layers).length;
+  return Math.max(2, Math.min(most, Math.floor(PREVIEW_BYTES / (STATES * Math.max(bytes, 1)))));
+}

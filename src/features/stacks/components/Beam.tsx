@@ -1,0 +1,168 @@
+import { useElementWidth } from '../../../components/plot/useElementWidth.ts';
+import type { Polarization } from '../../../../shared/stack.ts';
+import { formatCount } from '../../../lib/format.ts';
+import { along, angleArc, exaggeration, incomingRay, outgoingRay } from '../model/beamGeometry.ts';
+import type { Point } from '../model/beamGeometry.ts';
+
+type Props = {
+  angleDeg: number;
+  input: Polarization;
+  /** Change of the reflected polarization for this input, deg; null where there is none or it is not known yet. */
+  kerr: { rotationDeg: number; ellipticityDeg: number } | null;
+};
+
+const HEIGHT = 206;
+/** Left edge of the film, past the depth numbers. */
+const FILM_LEFT = 38;
+
+/** Light arriving at its true angle, and the polarization it leaves with, tilted by a stated exaggeration. */
+export function Beam({ angleDeg, input, kerr }: Props) {
+  const [measure, width] = useElementWidth(372);
+  const frame = { width, height: HEIGHT, x: (FILM_LEFT + width) / 2, surface: HEIGHT - 1 };
+  const incoming = incomingRay(angleDeg, frame);
+  const outgoing = outgoingRay(angleDeg, frame);
+  // At normal incidence the beam returns on itself: drawn side by side, a little apart.
+  const apart = angleDeg < 12 ? (12 - angleDeg) * 0.9 : 0;
+  const shift = (point: Point, by: number) => ({ x: point.x + by, y: point.y });
+  const ray = {
+    in: [shift(incoming.start, -apart), shift(incoming.end, -3)],
+    out: [shift(outgoing.start, 3), shift(outgoing.end, apart)],
+  };
+  const mark = along(ray.in[0]!, ray.in[1]!, 0.34);
+  const lens = along(ray.out[0]!, ray.out[1]!, 0.74);
+  const factor = kerr ? exaggeration(kerr.rotationDeg, kerr.ellipticityDeg) : 1;
+  return (
+    <div ref={measure}>
+      <svg
+        width={width}
+        height={HEIGHT}
+        viewBox={`0 0 ${width} ${HEIGHT}`}
+        role="img"
+        aria-label={`${input} polarized light arrives at ${angleDeg}° to the normal and is reflected`}
+        className="block"
+      >
+        <line x1={frame.x} x2={frame.x} y1="22" y2={HEIGHT} stroke="var(--line)" strokeDasharray="3 4" />
+        <Ray from={ray.in[0]!} to={ray.in[1]!} arrowAt={1} />
+        <Ray from={ray.out[0]!} to={ray.out[1]!} arrowAt={1} opacity={0.75} />
+        {angleDeg > 3 && <path d={angleArc(angleDeg, frame, 62)} fill="none" stroke="var(--muted)" />}
+        <AngleText angleDeg={angleDeg} x={frame.x} y={frame.surface} />
+        <PolarizationMark at={mark} angleDeg={angleDeg} input={input} />
+        {kerr && (
+          <Lens
+            at={lens}
+            width={width}
+            input={input}
+            rotationDeg={kerr.rotationDeg * factor}
+            ellipticityDeg={kerr.ellipticityDeg * factor}
+            factor={factor}
+          />
+        )}
+      </svg>
+    </div>
+  );
+}
+
+function Ray({
+  from,
+  to,
+  arrowAt,
+  opacity = 1,
+}: {
+  from: Point;
+  to: Point;
+  arrowAt: number;
+  opacity?: number;
+}) {
+  const direction = (Math.atan2(to.y - from.y, to.x - from.x) * 180) / Math.PI;
+  const tip = along(from, to, arrowAt);
+  return (
+    <g opacity={opacity}>
+      <line x1={from.x} y1={from.y} x2={to.x} y2={to.y} stroke="var(--accent)" strokeWidth="2" />
+      <path
+        d="M0 0l-11 -5v10z"
+        transform={`translate(${tip.x} ${tip.y}) rotate(${direction})`}
+        fill="var(--accent)"
+      />
+    </g>
+  );
+}
+
+function AngleText({ angleDeg, x, y }: { angleDeg: number; x: number; y: number }) {
+  const half = ((angleDeg / 2) * Math.PI) / 180;
+  return (
+    <text
+      x={x - 80 * Math.sin(half)}
+      y={y - 80 * Math.cos(half)}
+      textAnchor={angleDeg < 12 ? 'end' : 'middle'}
+      dx={angleDeg < 12 ? -12 - (12 - angleDeg) : 0}
+      fontSize="12"
+      fill="var(--ink)"
+    >
+      {String(Number(angleDeg.toFixed(3)))}°
+    </text>
+  );
+}
+
+/** p swings in the drawing, across the beam; s swings across the drawing: a dot in a ring. */
+function PolarizationMark({ at, angleDeg, input }: { at: Point; angleDeg: number; input: Polarization }) {
+  return (
+    <g transform={`translate(${at.x} ${at.y})`}>
+      {input === 'p' ? (
+        <line x1="-17" x2="17" transform={`rotate(${-angleDeg})`} stroke="var(--ink)" strokeWidth="2" />
+      ) : (
+        <>
+          <circle r="6.5" fill="var(--paper)" stroke="var(--ink)" strokeWidth="2" />
+          <circle r="2" fill="var(--ink)" />
+        </>
+      )}
+      <text
+        x={input === 'p' ? -15 : -13}
+        y={input === 'p' ? 22 : 20}
+        textAnchor="middle"
+        fontSize="12"
+        fill="var(--ink)"
+      >
+        {input}
+      </text>
+    </g>
+  );
+}
+
+type LensProps = {
+  at: Point;
+  width: number;
+  input: Polarization;
+  rotationDeg: number;
+  ellipticityDeg: number;
+  factor: number;
+};
+
+/** The outgoing polarization as an observer sees it who looks into the beam: upright is the input's own direction. */
+function Lens({ at, width, input, rotationDeg, ellipticityDeg, factor }: LensProps) {
+  const ratio = Math.min(1, Math.abs(Math.tan((Math.min(44, Math.abs(ellipticityDeg)) * Math.PI) / 180)));
+  const place = { x: Math.min(Math.max(at.x, 24), width - 24), y: Math.max(at.y, 36) };
+  const words = factor === 1 ? 'tilt as it is' : `tilt drawn × ${formatCount(factor)}`;
+  const textX = Math.min(place.x, width - 44);
+  return (
+    <g>
+      <g transform={`translate(${place.x} ${place.y})`}>
+        <circle r="21" fill="var(--paper)" stroke="var(--line)" />
+        <line y1="-19" y2="19" stroke="var(--muted)" strokeDasharray="2 3" />
+        <ellipse
+          rx={Math.max(0.9, 17 * ratio)}
+          ry="17"
+          fill="none"
+          stroke="var(--rotation)"
+          strokeWidth="2"
+          transform={`rotate(${-rotationDeg})`}
+        />
+      </g>
+      <text x={textX} y={place.y - 26} textAnchor="middle" fontSize="11" fill="var(--muted)">
+        {words}
+        <title>
+          The small ellipse is the reflected polarization for {input} light, looking into the beam.
+        </title>
+      </text>
+    </g>
+  );
+}

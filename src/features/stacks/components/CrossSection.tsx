@@ -1,0 +1,163 @@
+import { Plus } from 'lucide-react';
+import { useCallback, useMemo } from 'react';
+import type { StackDocument, StackItem, StackMedium } from '../../../../shared/stack.ts';
+import { Button } from '../../../components/Button.tsx';
+import { useLayerDrag } from '../hooks/useLayerDrag.ts';
+import { layerHeights } from '../model/depthScale.ts';
+import { dropItem } from '../model/dropTarget.ts';
+import type { DropTarget } from '../model/dropTarget.ts';
+import { isBlock, listLayers } from '../model/items.ts';
+import { isMagnetic, mediumClass, mediumName } from '../model/media.ts';
+import { layerLike } from '../model/newStackItems.ts';
+import { BlockFrame } from './BlockFrame.tsx';
+import { classFill, magnetHatch } from './classColours.ts';
+import { DepthTick } from './DepthTick.tsx';
+import { useFilm } from './film.ts';
+import { LayerName } from './LayerName.tsx';
+import { LayerRow } from './LayerRow.tsx';
+import { MagnetizationChip } from './MagnetizationChip.tsx';
+import { MediumNotes } from './MediumNotes.tsx';
+import { MediumPicker } from './MediumPicker.tsx';
+
+/** Height that the layers of the drawing keep to where they can, px. */
+const ROOM = 430;
+
+/** The film from its surface down: layers on a compressed depth scale, blocks in brackets, the substrate fading out. */
+export function CrossSection({ document }: { document: StackDocument }) {
+  const { edit, announce } = useFilm();
+  const onDrop = useCallback(
+    (id: string, target: DropTarget) => {
+      edit?.((now) => ({ ...now, layers: dropItem(now.layers, id, target) }), null);
+      announce('Moved');
+    },
+    [edit, announce],
+  );
+  const { setFilm, draggedId, target, start } = useLayerDrag(onDrop);
+  const heights = useMemo(() => {
+    const layers = listLayers(document.layers);
+    const px = layerHeights(
+      layers.map((layer) => layer.thicknessNm),
+      ROOM,
+    );
+    return new Map(layers.map((layer, index) => [layer.id, px[index]!]));
+  }, [document.layers]);
+
+  const rowsOf = (items: readonly StackItem[], startNm: number, prefix: string) => {
+    let depthNm = startNm;
+    return items.map((item, index) => {
+      const position = `${prefix}${index + 1}`;
+      const common = { position, dragged: draggedId === item.id, onGrab: edit ? start : undefined };
+      const topNm = depthNm;
+      depthNm += thicknessOf(item);
+      return isBlock(item) ? (
+        <BlockFrame key={item.id} block={item} periodNm={periodOf(item.layers)} depthNm={depthNm} {...common}>
+          {rowsOf(item.layers, topNm, `${position}.`)}
+        </BlockFrame>
+      ) : (
+        <LayerRow
+          key={item.id}
+          layer={item}
+          height={heights.get(item.id) ?? 34}
+          depthNm={depthNm}
+          {...common}
+        />
+      );
+    });
+  };
+
+  return (
+    <div ref={setFilm} className="relative ml-[38px]">
+      {document.layers.length === 0 && (
+        <div className="border-b-[1.5px] border-paper bg-panel px-4 py-4 text-note text-muted">
+          <p>No layer yet: light meets the bare substrate.</p>
+          {edit && (
+            <Button
+              className="mt-2"
+              icon={<Plus size={15} aria-hidden />}
+              onClick={() => edit((now) => ({ ...now, layers: [layerLike(undefined, now.substrate)] }), null)}
+            >
+              Add a layer
+            </Button>
+          )}
+        </div>
+      )}
+      <ol aria-label="Layers, from the surface down" className="relative">
+        {rowsOf(document.layers, 0, '')}
+      </ol>
+      <DepthTick depthNm={0} atTop />
+      <Substrate document={document} />
+      {target && (
+        <div
+          className="pointer-events-none absolute inset-x-0 z-10 h-[3px] -translate-y-1/2 rounded-full bg-accent"
+          style={{ top: target.y }}
+        />
+      )}
+    </div>
+  );
+}
+
+function periodOf(items: readonly StackItem[]): number {
+  return items.reduce((sum, item) => sum + thicknessOf(item), 0);
+}
+
+function thicknessOf(item: StackItem): number {
+  return isBlock(item) ? item.repeat * periodOf(item.layers) : item.thicknessNm;
+}
+
+function Substrate({ document }: { document: StackDocument }) {
+  const { materials, edit, issues } = useFilm();
+  const { substrate, substrateM } = document;
+  const name = mediumName(substrate, materials);
+  const change = (medium: StackMedium, editName: string | null) =>
+    edit?.(({ substrateM: m, ...now }) => {
+      const magnetic = isMagnetic(medium, materials);
+      return { ...now, substrate: medium, ...(magnetic ? { substrateM: m ?? [0, 0, 1] } : {}) };
+    }, editName);
+  return (
+    <div
+      className="relative flex min-h-[104px] flex-col pt-3"
+      style={{
+        background: `linear-gradient(${classFill[mediumClass(substrate, materials)]}, transparent)`,
+        ...(substrateM ? { backgroundImage: `${magnetHatch}` } : {}),
+      }}
+    >
+      <div className="flex items-center gap-1.5 px-3">
+        {edit ? (
+          <MediumPicker
+            medium={substrate}
+            label="the substrate"
+            onChange={change}
+            className="text-lead font-semibold"
+          >
+            <LayerName name={name} />
+          </MediumPicker>
+        ) : (
+          <span className="px-2 text-lead font-semibold">
+            <LayerName name={name} />
+          </span>
+        )}
+        <span className="text-note text-muted">substrate</span>
+        {substrateM && (
+          <span className="ml-auto">
+            <MagnetizationChip
+              m={substrateM}
+              label="the substrate"
+              fixed={false}
+              onChange={
+                edit ? (m) => edit((now) => ({ ...now, substrateM: m }), 'm of the substrate') : undefined
+              }
+            />
+          </span>
+        )}
+      </div>
+      <div className="px-1 pt-1">
+        <MediumNotes
+          medium={substrate}
+          magnetized={substrateM !== undefined && substrateM.some((part) => part !== 0)}
+          issues={issues.get('substrate') ?? []}
+          onChange={edit ? (medium) => change(medium, null) : undefined}
+        />
+      </div>
+    </div>
+  );
+}

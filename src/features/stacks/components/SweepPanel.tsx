@@ -1,0 +1,204 @@
+import { useMemo } from 'react';
+import type { ReactNode } from 'react';
+import type { AxisKind, SweepAxis } from '../../../../shared/run.ts';
+import type { StackDocument } from '../../../../shared/stack.ts';
+import { ReadingControls } from '../../../components/plot/ReadingControls.tsx';
+import { ReadingPlot } from '../../../components/plot/ReadingPlot.tsx';
+import { PlotButton } from '../../../components/plot/PlotToolbar.tsx';
+import { families, readingsOf } from '../../../components/plot/readingView.ts';
+import type { Family, Light } from '../../../components/plot/readingView.ts';
+import { fileNameOf, saveFile, toCsv } from '../../../components/plot/saveFile.ts';
+import { Tabs } from '../../../components/Tabs.tsx';
+import { formatCount, formatDuration } from '../../../lib/format.ts';
+import { useSweep } from '../hooks/useSweep.ts';
+import type { LiveSweep } from '../hooks/useSweep.ts';
+import { findItem, isBlock, listLayers } from '../model/items.ts';
+import { mediumName } from '../model/media.ts';
+import { axisProblems, defaultAxis } from '../model/sweepAxis.ts';
+import type { ViewState } from '../model/viewState.ts';
+import { AxisForm } from './AxisForm.tsx';
+import { useFilm } from './film.ts';
+import { SolveProblem } from './ReadingsStrip.tsx';
+
+type Props = {
+  title: string;
+  document: StackDocument;
+  view: ViewState;
+  transverse: boolean;
+  onView: (change: Partial<ViewState>) => void;
+  /** The one primary button; absent for those who may not keep runs. */
+  keep: ((sweep: { axis: SweepAxis; problem: boolean }) => ReactNode) | null;
+};
+
+const kinds = [
+  { value: 'wavelength', label: 'wavelength' },
+  { value: 'angle', label: 'angle' },
+  { value: 'thickness', label: 'thickness' },
+] as const;
+
+/** The plot of the current question: which quantity is swept, over what, and which readings are drawn. */
+export function SweepPanel({ title, document, view, transverse, onView, keep }: Props) {
+  const { materials } = useFilm();
+  const axis = useMemo(() => currentAxis(view, document, materials), [view, document, materials]);
+  const shown = view.shown ?? defaultFamilies(transverse);
+  const light: Light = view.light ?? view.point.input;
+  const readings = useMemo(() => readingsOf(shown, light), [shown, light]);
+  const sweep = useSweep(document, view.point, axis, readings);
+  const layers = listLayers(document.layers).map((layer) => ({
+    layer,
+    name: mediumName(layer.medium, materials),
+  }));
+  const nameOf = (id: string) => layers.find(({ layer }) => layer.id === id)?.name;
+
+  return (
+    <section aria-label="Plot">
+      <Tabs
+        label="What is swept"
+        value={view.kind}
+        onValueChange={(kind) => onView({ kind, axis: null })}
+        tabs={kinds}
+        end={
+          <>
+            <span className="text-[13px] text-muted">{axis && <SweepNote sweep={sweep} axis={axis} />}</span>
+            {axis &&
+              keep?.({ axis, problem: Object.keys(axisProblems(axis)).length > 0 || sweep.error !== null })}
+          </>
+        }
+      >
+        {axis === null ? (
+          <p className="card mt-1.5 px-4 py-10 text-center text-muted">
+            There is no layer whose thickness could be swept. Add one to the drawing.
+          </p>
+        ) : (
+          <div className="card mt-1.5 px-4 pt-2.5 pb-2">
+            <AxisForm
+              axis={axis}
+              layers={layers}
+              onChange={(next) => onView({ axis: next })}
+              onChooseLayer={(layerId) =>
+                onView({ axis: defaultAxis('thickness', document, materials, layerId) })
+              }
+            />
+            <div className="mt-1 border-t border-line pt-1.5">
+              {sweep.drawn ? (
+                <div
+                  className={`transition-opacity ${sweep.error ? 'opacity-45' : ''}`}
+                  aria-busy={sweep.pending}
+                >
+                  <ReadingPlot
+                    axis={sweep.drawn.axis}
+                    layerName={
+                      sweep.drawn.axis.kind === 'thickness' ? nameOf(sweep.drawn.axis.layerId) : undefined
+                    }
+                    grid={sweep.drawn.grid}
+                    columns={sweep.drawn.columns}
+                    readings={readings}
+                    unit={view.unit}
+                    log={view.log}
+                    height={336}
+                    marker={markerOf(sweep.drawn.axis, document, view)}
+                    onPickX={
+                      sweep.drawn.axis.kind === 'thickness' ? undefined : (x) => onView(picked(axis, x, view))
+                    }
+                    fileName={`${title} ${axis.kind}`}
+                    controls={
+                      <>
+                        <ReadingControls
+                          families={families}
+                          lights="ps"
+                          shown={shown}
+                          light={light}
+                          log={view.log}
+                          unit={view.unit}
+                          onChange={onView}
+                        />
+                        <PlotButton label="Download the values as CSV" onClick={() => saveCsv(title, sweep)}>
+                          CSV
+                        </PlotButton>
+                      </>
+                    }
+                  />
+                </div>
+              ) : (
+                <div className="flex h-[372px] items-center justify-center text-muted" role="status">
+                  {sweep.error ? '' : 'Solving the film'}
+                </div>
+              )}
+              {sweep.error && <SolveProblem error={sweep.error} />}
+            </div>
+          </div>
+        )}
+      </Tabs>
+    </section>
+  );
+}
+
+/** The axis of the address where it still fits the film, else the default of its kind. */
+function currentAxis(
+  view: ViewState,
+  document: StackDocument,
+  materials: Parameters<typeof defaultAxis>[2],
+): SweepAxis | null {
+  const { axis, kind } = view;
+  if (axis === null) return defaultAxis(kind, document, materials);
+  if (axis.kind !== 'thickness') return axis;
+  const layer = findItem(document.layers, axis.layerId);
+  return layer && !isBlock(layer) ? axis : defaultAxis(kind, document, materials);
+}
+
+function defaultFamilies(transverse: boolean): readonly Family[] {
+  return transverse ? transverseFamilies : kerrFamilies;
+}
+
+const kerrFamilies: readonly Family[] = ['rotation', 'ellipticity', 'reflectance'];
+const transverseFamilies: readonly Family[] = ['contrast', 'reflectance'];
+
+function markerOf(axis: SweepAxis, document: StackDocument, view: ViewState): number | undefined {
+  switch (axis.kind) {
+    case 'wavelength':
+      return view.point.wavelengthNm;
+    case 'angle':
+      return view.point.angleDeg;
+    case 'thickness': {
+      const layer = findItem(document.layers, axis.layerId);
+      return layer && !isBlock(layer) ? layer.thicknessNm : undefined;
+    }
+  }
+}
+
+/** The working point moved to where the plot was clicked, in steps that can be read. */
+function picked(axis: SweepAxis, x: number, view: ViewState): Partial<ViewState> {
+  const rounded = Number(x.toFixed(Math.abs(axis.to - axis.from) < 10 ? 3 : 1));
+  const kind: AxisKind = axis.kind;
+  return {
+    point:
+      kind === 'wavelength' ? { ...view.point, wavelengthNm: rounded } : { ...view.point, angleDeg: rounded },
+  };
+}
+
+function SweepNote({ sweep, axis }: { sweep: LiveSweep; axis: SweepAxis }) {
+  if (sweep.drawn === null) return null;
+  const previewed = sweep.drawn.grid.length;
+  const time = formatDuration(sweep.drawn.seconds);
+  return axis.points > previewed
+    ? `preview of ${formatCount(previewed)} points, ${time}`
+    : `${formatCount(previewed)} points, ${time}`;
+}
+
+function saveCsv(title: string, { drawn }: LiveSweep): void {
+  if (drawn === null) return;
+  const unit = drawn.axis.kind === 'angle' ? 'Deg' : 'Nm';
+  saveFile(
+    fileNameOf(`${title} ${drawn.axis.kind}`, 'csv'),
+    toCsv([
+      { header: drawn.axis.kind + unit, values: drawn.grid },
+      ...Object.entries(drawn.columns).map(([name, values]) => ({ header: csvHeader(name), values })),
+    ]),
+    'text/csv',
+  );
+}
+
+/** Angles say their unit; the rest has none. */
+function csvHeader(reading: string): string {
+  return /^(rotation|ellipticity)/.test(reading) ? `${reading}Deg` : reading;
+}

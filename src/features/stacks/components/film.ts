@@ -1,0 +1,29 @@
+import { createContext, use } from 'react';
+import type { Issue } from '../../../../shared/error.ts';
+import type { Materials } from '../model/media.ts';
+import type { EditDocument } from '../hooks/useStackEditor.ts';
+
+/** What every part of the drawing needs: the library, how to change the film, and what is wrong with it. */
+export type Film = {
+  materials: Materials;
+  /** Null for those who may look but not change. */
+  edit: EditDocument | null;
+  /** Lowest and highest wavelength that the page asks for, nm. */
+  rangeNm: readonly [number, number];
+  /** Issues of the server by item id (or `incident`, `substrate`), path cut to the field. */
+  issues: ReadonlyMap<string, readonly Issue[]>;
+  /** Says a change in words to screen readers. */
+  announce: (text: string) => void;
+};
+
+export const FilmContext = createContext<Film>({
+  materials: new Map(),
+  edit: null,
+  rangeNm: [0, 0],
+  issues: new Map(),
+  announce: () => undefined,
+});
+
+export function useFilm(): Film {
+  return use(FilmContext);
+}

@@ -1,0 +1,65 @@
+import type { ReadingName } from '../../../../shared/run.ts';
+import { readingDefinitions } from '../../../../shared/readings.ts';
+import type { Polarization } from '../../../../shared/stack.ts';
+import { formatAngle, formatNumber } from '../../../lib/format.ts';
+import type { AngleUnit } from '../../../lib/format.ts';
+import type { PointReadings } from './solveStates.ts';
+
+export type StripReading = {
+  family: 'rotation' | 'ellipticity' | 'reflectance' | 'cross' | 'contrast';
+  label: string;
+  anchor: string;
+  value: string | null;
+  unit: string;
+  other: string;
+};
+
+const names: Record<StripReading['family'], { p: ReadingName; s: ReadingName; label: string }> = {
+  rotation: { p: 'rotationP', s: 'rotationS', label: 'Kerr rotation' },
+  ellipticity: { p: 'ellipticityP', s: 'ellipticityS', label: 'Kerr ellipticity' },
+  reflectance: { p: 'reflectanceP', s: 'reflectanceS', label: 'Reflectance' },
+  cross: { p: 'crossSp', s: 'crossPs', label: 'Cross-polarized' },
+  contrast: { p: 'contrastP', s: 'contrastS', label: 'Transverse contrast' },
+};
+
+/**
+ * What the strip shows for the input light, the other light in small. For purely transverse m the contrast takes
+ * the place of the rotation, which is zero then.
+ */
+export function stripReadings(
+  readings: PointReadings | null,
+  input: Polarization,
+  transverse: boolean,
+  unit: AngleUnit,
+): StripReading[] {
+  const other = input === 'p' ? 's' : 'p';
+  const shown = [transverse ? 'contrast' : 'rotation', 'ellipticity', 'reflectance', 'cross'] as const;
+  return shown.map((family) => {
+    const name = names[family][input];
+    const value = readings?.[name] ?? null;
+    const otherValue = readings?.[names[family][other]] ?? null;
+    return {
+      family,
+      label:
+        family === 'cross' ? `${names.cross.label} ${readingDefinitions[name].symbol}` : names[family].label,
+      anchor: readingDefinitions[name].anchor,
+      value: value === null ? null : format(family, value, unit),
+      unit: family === 'rotation' || family === 'ellipticity' ? unit : family === 'cross' ? '× 10⁻³' : '',
+      other: `${other} light ${otherValue === null ? '–' : format(family, otherValue, unit)}`,
+    };
+  });
+}
+
+function format(family: StripReading['family'], value: number, unit: AngleUnit): string {
+  switch (family) {
+    case 'rotation':
+    case 'ellipticity':
+      return formatAngle(value, unit);
+    case 'reflectance':
+      return formatNumber(value);
+    case 'cross':
+      return formatNumber(value * 1000);
+    case 'contrast':
+      return formatNumber(value, { signed: true });
+  }
+}
