@@ -1,3 +1,64 @@
+import { useQuery } from '@tanstack/react-query';
+import { useEffect, useMemo } from 'react';
+import { generatePath, useNavigate, useParams } from 'react-router-dom';
+import { ErrorState } from '../../components/ErrorState.tsx';
+import { LoadingState } from '../../components/LoadingState.tsx';
+import { Page, useDocumentTitle } from '../../components/Page.tsx';
+import { materialListQuery } from '../../features/materials/api/materialList.ts';
+import { KeepAsRun } from '../../features/runs/components/KeepAsRun.tsx';
+import { mayEdit, useMembership } from '../../features/session/hooks/useSession.ts';
+import { stackQuery } from '../../features/stacks/api/stack.ts';
+import { StackWorkbench } from '../../features/stacks/components/StackWorkbench.tsx';
+import { paths } from '../../lib/paths.ts';
+import { rememberGroup } from '../../lib/rememberedGroup.ts';
+
+/** `/stacks/:stackId`: the film, its readings and the current question. */
 export function StackPage() {
-  return null;
+  const { stackId = '' } = useParams();
+  const stack = useQuery(stackQuery(stackId));
+  const groupId = stack.data?.groupId;
+  const library = useQuery({ ...materialListQuery(groupId ?? ''), enabled: groupId !== undefined });
+  const materials = useMemo(
+    () => new Map((library.data?.materials ?? []).map((material) => [material.id, material])),
+    [library.data],
+  );
+  const membership = useMembership(groupId);
+  const navigate = useNavigate();
+  useDocumentTitle(stack.data?.name ?? 'Stack');
+  useEffect(() => {
+    if (groupId !== undefined) rememberGroup(groupId);
+  }, [groupId]);
+
+  const error = stack.error ?? library.error;
+  if (error && (!stack.data || !library.data)) {
+    const retry = () => void (stack.error ? stack.refetch() : library.refetch());
+    return (
+      <Page title="Stack">
+        <ErrorState title="The stack could not be opened" error={error} onRetry={retry} />
+      </Page>
+    );
+  }
+  if (!stack.data || !library.data) {
+    return (
+      <Page title="Stack">
+        <LoadingState label="Opening the stack" rows={8} />
+      </Page>
+    );
+  }
+  return (
+    <StackWorkbench
+      key={stackId}
+      stack={stack.data}
+      materials={materials}
+      mayEdit={mayEdit(membership)}
+      onCopied={({ id }) => void navigate(generatePath(paths.stack, { stackId: id }))}
+      keepButton={({ document, axis, readings, problem }) => (
+        <KeepAsRun
+          body={{ groupId: stack.data.groupId, stackId, document, axis, readings }}
+          problem={problem}
+          onKept={({ id }) => void navigate(generatePath(paths.run, { runId: id }))}
+        />
+      )}
+    />
+  );
 }

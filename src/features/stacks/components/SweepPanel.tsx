@@ -14,15 +14,16 @@ import { useSweep } from '../hooks/useSweep.ts';
 import type { LiveSweep } from '../hooks/useSweep.ts';
 import { findItem, isBlock, listLayers } from '../model/items.ts';
 import { mediumName } from '../model/media.ts';
+import type { Materials } from '../model/media.ts';
 import { axisProblems, defaultAxis } from '../model/sweepAxis.ts';
 import type { ViewState } from '../model/viewState.ts';
 import { AxisForm } from './AxisForm.tsx';
-import { useFilm } from './film.ts';
 import { SolveProblem } from './ReadingsStrip.tsx';
 
 type Props = {
   title: string;
   document: StackDocument;
+  materials: Materials;
   view: ViewState;
   transverse: boolean;
   onView: (change: Partial<ViewState>) => void;
@@ -37,8 +38,7 @@ const kinds = [
 ] as const;
 
 /** The plot of the current question: which quantity is swept, over what, and which readings are drawn. */
-export function SweepPanel({ title, document, view, transverse, onView, keep }: Props) {
-  const { materials } = useFilm();
+export function SweepPanel({ title, document, materials, view, transverse, onView, keep }: Props) {
   const axis = useMemo(() => currentAxis(view, document, materials), [view, document, materials]);
   const shown = view.shown ?? defaultFamilies(transverse);
   const light: Light = view.light ?? view.point.input;
@@ -134,11 +134,7 @@ export function SweepPanel({ title, document, view, transverse, onView, keep }: 
 }
 
 /** The axis of the address where it still fits the film, else the default of its kind. */
-function currentAxis(
-  view: ViewState,
-  document: StackDocument,
-  materials: Parameters<typeof defaultAxis>[2],
-): SweepAxis | null {
+function currentAxis(view: ViewState, document: StackDocument, materials: Materials): SweepAxis | null {
   const { axis, kind } = view;
   if (axis === null) return defaultAxis(kind, document, materials);
   if (axis.kind !== 'thickness') return axis;

@@ -1,0 +1,90 @@
+import { useCallback, useMemo, useState } from 'react';
+import type { Issue } from '../../../../shared/error.ts';
+import type { StackDocument, WorkingPoint } from '../../../../shared/stack.ts';
+import type { EditDocument } from '../hooks/useStackEditor.ts';
+import type { Materials } from '../model/media.ts';
+import { issueTarget } from '../model/issueTarget.ts';
+import type { PointReadings } from '../model/solveStates.ts';
+import { Beam } from './Beam.tsx';
+import { CrossSection } from './CrossSection.tsx';
+import { FilmContext } from './film.ts';
+import { IncidentMedium } from './IncidentMedium.tsx';
+
+type Props = {
+  document: StackDocument;
+  materials: Materials;
+  point: WorkingPoint;
+  readings: PointReadings | null;
+  /** Lowest and highest wavelength that the page asks for, nm. */
+  rangeNm: readonly [number, number];
+  /** Issues of the server, with its paths. */
+  issues: readonly Issue[];
+  edit: EditDocument | null;
+};
+
+const noIssues: readonly Issue[] = [];
+
+/** The film as a drawing: the light, the layers, the substrate. With `edit` it is the editor, without it a picture. */
+export function FilmDrawing({
+  document,
+  materials,
+  point,
+  readings,
+  rangeNm,
+  issues = noIssues,
+  edit,
+}: Props) {
+  const [said, setSaid] = useState('');
+  const announce = useCallback((text: string) => setSaid(text), []);
+  const [fromNm, toNm] = rangeNm;
+  const film = useMemo(
+    () => ({
+      materials,
+      edit,
+      rangeNm: [fromNm, toNm] as const,
+      issues: issuesByItem(document, issues),
+      announce,
+    }),
+    [materials, edit, fromNm, toNm, document, issues, announce],
+  );
+  return (
+    <FilmContext value={film}>
+      <div className="relative">
+        <div className="absolute top-0 left-0">
+          <IncidentMedium document={document} point={point} />
+        </div>
+        <Beam angleDeg={point.angleDeg} input={point.input} kerr={kerrOf(readings, point)} />
+        <span aria-hidden="true" className="absolute bottom-1.5 left-0 text-tick text-muted">
+          nm
+        </span>
+      </div>
+      <CrossSection document={document} />
+      <p role="status" className="sr-only">
+        {said}
+      </p>
+    </FilmContext>
+  );
+}
+
+function kerrOf(readings: PointReadings | null, { input }: WorkingPoint) {
+  const rotationDeg = readings?.[input === 'p' ? 'rotationP' : 'rotationS'] ?? null;
+  const ellipticityDeg = readings?.[input === 'p' ? 'ellipticityP' : 'ellipticityS'] ?? null;
+  return rotationDeg === null || ellipticityDeg === null ? null : { rotationDeg, ellipticityDeg };
+}
+
+/** Issues at the item they name, each said once however many states and points repeat it. */
+function issuesByItem(
+  document: StackDocument,
+  issues: readonly Issue[],
+): ReadonlyMap<string, readonly Issue[]> {
+  const byItem = new Map<string, Issue[]>();
+  for (const { path, message } of issues) {
+    const target = issueTarget(document, path);
+    if (target.place === 'page' || target.place === 'point') continue;
+    const key = target.place === 'layer' ? target.id : target.place;
+    const own = byItem.get(key) ?? [];
+    if (own.some((issue) => issue.path === target.field && issue.message === message)) continue;
+    byItem.set(key, [...own, { path: target.field, message }]);
+  }
+  return byItem;
+}

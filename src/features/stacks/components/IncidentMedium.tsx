@@ -1,0 +1,41 @@
+import type { StackDocument, StackMedium, WorkingPoint } from '../../../../shared/stack.ts';
+import { mediumName } from '../model/media.ts';
+import { useFilm } from './film.ts';
+import { LayerName } from './LayerName.tsx';
+import { MediumNotes } from './MediumNotes.tsx';
+import { MediumPicker } from './MediumPicker.tsx';
+
+/** What the light comes through, at the top of the drawing. */
+export function IncidentMedium({ document, point }: { document: StackDocument; point: WorkingPoint }) {
+  const { materials, edit, issues } = useFilm();
+  const { incident } = document;
+  const name = <LayerName name={mediumName(incident, materials)} />;
+  const change = (medium: StackMedium, editName: string | null) =>
+    edit?.((now) => ({ ...now, incident: medium }), editName);
+  return (
+    <div className="relative z-10">
+      {edit ? (
+        <MediumPicker
+          medium={incident}
+          label="the incident medium"
+          lossless
+          onChange={change}
+          className="-ml-2 text-note text-muted"
+        >
+          {name}
+        </MediumPicker>
+      ) : (
+        <span className="text-note text-muted">{name}</span>
+      )}
+      <p className="text-[11.5px] text-muted">
+        {String(Number(point.wavelengthNm.toPrecision(7)))} nm, {point.input} light
+      </p>
+      <MediumNotes
+        medium={incident}
+        magnetized={false}
+        issues={issues.get('incident') ?? []}
+        onChange={edit ? (medium) => change(medium, null) : undefined}
+      />
+    </div>
+  );
+}

@@ -1,0 +1,157 @@
+import { useMemo, useState } from 'react';
+import type { ReactNode } from 'react';
+import type { Issue } from '../../../../shared/error.ts';
+import type { ReadingName, SweepAxis } from '../../../../shared/run.ts';
+import type { Stack, StackDocument, WorkingPoint } from '../../../../shared/stack.ts';
+import { Button } from '../../../components/Button.tsx';
+import { families, readingsOf } from '../../../components/plot/readingView.ts';
+import { ApiError } from '../../../lib/apiClient.ts';
+import { useEditorKeys } from '../hooks/useEditorKeys.ts';
+import { useReadings } from '../hooks/useReadings.ts';
+import { useStackEditor } from '../hooks/useStackEditor.ts';
+import { useView } from '../hooks/useView.ts';
+import { issueTarget } from '../model/issueTarget.ts';
+import { listLayers } from '../model/items.ts';
+import { isTransverse } from '../model/magnetization.ts';
+import type { Materials } from '../model/media.ts';
+import { samePoint } from '../model/viewState.ts';
+import { EditorNotices } from './EditorNotices.tsx';
+import { FilmDrawing } from './FilmDrawing.tsx';
+import { FilmHeader } from './FilmHeader.tsx';
+import { LeaveGuard } from './LeaveGuard.tsx';
+import { ReadingsStrip } from './ReadingsStrip.tsx';
+import { SweepPanel } from './SweepPanel.tsx';
+import { WorkingPointBar } from './WorkingPointBar.tsx';
+
+/** What "keep as run" keeps. */
+export type KeptSweep = {
+  document: StackDocument;
+  axis: SweepAxis;
+  readings: ReadingName[];
+  /** Whether the axis or the film is such that the run would be refused. */
+  problem: boolean;
+};
+
+type Props = {
+  stack: Stack;
+  materials: Materials;
+  mayEdit: boolean;
+  onCopied: (stack: Stack) => void;
+  /** The button that keeps the sweep on the page as a run. */
+  keepButton: (sweep: KeptSweep) => ReactNode;
+};
+
+/** Up to here a run stores every reading that the page can show; above, those that are drawn. */
+const ALL_READINGS_UP_TO = 20_000;
+
+/** The heart of the program: the film on the left, its readings and the current question on the right. */
+export function StackWorkbench({ stack, materials, mayEdit, onCopied, keepButton }: Props) {
+  const editor = useStackEditor(stack);
+  const [showsNewer, setShowsNewer] = useState(false);
+  const newer = showsNewer ? editor.conflict : null;
+  const film = newer?.document ?? editor.draft.document;
+  const [view, setView] = useView(film.workingPoint);
+  const { point } = view;
+  const live = useReadings(film, point);
+  const transverse = useMemo(() => isTransverse(workingVectors(film, point)), [film, point]);
+  const solveIssues = live.error instanceof ApiError ? live.error.issues : noIssues;
+  const issues = useMemo(() => [...solveIssues, ...editor.saveIssues], [solveIssues, editor.saveIssues]);
+  const canEdit = mayEdit && newer === null;
+  useEditorKeys({ undo: editor.undo, redo: editor.redo, save: () => void editor.save() }, canEdit);
+
+  const setPoint = (change: Partial<WorkingPoint>) => setView({ point: { ...point, ...change } });
+  const keep = ({ axis, problem }: { axis: SweepAxis; problem: boolean }) => {
+    const shown = view.shown ?? (transverse ? (['contrast', 'reflectance'] as const) : families.slice(0, 3));
+    const all = axis.points <= ALL_READINGS_UP_TO;
+    return keepButton({
+      document: { ...film, workingPoint: point },
+      axis,
+      readings: all ? readingsOf(families, 'ps') : readingsOf(shown, view.light ?? point.input),
+      problem,
+    });
+  };
+
+  return (
+    <div className="grid min-h-[calc(100dvh-53px)] grid-cols-1 lg:grid-cols-[416px_minmax(0,1fr)]">
+      <section aria-label="Film" className="border-line px-5 py-4 max-lg:border-b lg:border-r">
+        <FilmHeader stack={stack} editor={editor} mayEdit={mayEdit} />
+        {mayEdit && (
+          <EditorNotices
+            editor={editor}
+            showsNewer={showsNewer}
+            onShowNewer={setShowsNewer}
+            onCopied={onCopied}
+          />
+        )}
+        <div className="mt-3">
+          <FilmDrawing
+            document={film}
+            materials={materials}
+            point={point}
+            readings={live.readings}
+            rangeNm={wavelengthRange(point, view.kind === 'wavelength' ? view.axis : null)}
+            issues={issues}
+            edit={canEdit ? editor.editDocument : null}
+          />
+        </div>
+      </section>
+      <div className="min-w-0 px-6 pt-4 pb-6">
+        <div className="mb-3 flex flex-wrap items-center gap-x-3 gap-y-2">
+          <WorkingPointBar point={point} problems={pointProblems(film, issues)} onChange={setPoint} />
+          <span className="ml-auto text-[13px] text-muted">
+            {canEdit && !samePoint(point, film.workingPoint) ? (
+              <Button
+                tone="plain"
+                className="px-1.5! py-0.5! text-[13px]!"
+                title="Open the stack at this working point from now on; saved with the stack"
+                onClick={() => editor.editDocument((now) => ({ ...now, workingPoint: point }), null)}
+              >
+                Make this the stack's working point
+              </Button>
+            ) : (
+              'exact, change against m = 0'
+            )}
+          </span>
+        </div>
+        <ReadingsStrip live={live} input={point.input} transverse={transverse} unit={view.unit} />
+        <div className="mt-4">
+          <SweepPanel
+            title={editor.draft.name}
+            document={film}
+            materials={materials}
+            view={view}
+            transverse={transverse}
+            onView={setView}
+            keep={mayEdit ? keep : null}
+          />
+        </div>
+      </div>
+      <LeaveGuard dirty={editor.dirty && mayEdit} />
+    </div>
+  );
+}
+
+const noIssues: readonly Issue[] = [];
+
+function wavelengthRange(point: WorkingPoint, axis: SweepAxis | null): readonly [number, number] {
+  const all = axis?.kind === 'wavelength' ? [point.wavelengthNm, axis.from, axis.to] : [point.wavelengthNm];
+  return [Math.min(...all), Math.max(...all)];
+}
+
+/** Every m as the working point has it; a free tensor counts as not transverse. */
+function workingVectors(document: StackDocument, { magnetization }: WorkingPoint) {
+  const layers = listLayers(document.layers).map(({ m, fixed }) => ({ m, fixed: fixed === true }));
+  return [...layers, { m: document.substrateM, fixed: false }].flatMap(({ m, fixed }) => {
+    if (m === undefined) return [];
+    return [magnetization.mode === 'direction' && !fixed ? magnetization.m : m];
+  });
+}
+
+function pointProblems(document: StackDocument, issues: readonly Issue[]) {
+  const find = (field: string) =>
+    issues.find(({ path }) => {
+      const target = issueTarget(document, path);
+      return target.place === 'point' && target.field === field;
+    })?.message;
+  return { wavelengthNm: find('wavelengthNm'), angleDeg: find('angleDeg') };
+}
