@@ -31,8 +31,8 @@ export type Jobs = {
   /** Puts a run that waits into the queue, in the transaction that makes it wait. */
   enqueue(runId: string, transaction: Transaction): Promise<void>;
   /**
-   * Tells how a run goes on, until the returned function is called. `null` means that notices may have been lost:
-   * look at the row.
+   * Tells how a run goes on, until the returned function is called. `null` means: look at the row, the run was
+   * cancelled or deleted, or notices may have been lost.
    */
   watch(runId: string, listener: (progress: RunProgress | null) => void): () => void;
 };

@@ -90,9 +90,8 @@ export function resultByteLength(header: ResultHeader): number {
  * @throws ResultFormatError with the offending value when the bytes are damaged, cut off or of another version
  */
 export function decodeResult(buffer: ArrayBuffer): RunResult {
-  const headerBytes = checkPreamble(buffer);
-  const header = parseHeader(buffer, headerBytes);
-  const columnsAt = PREAMBLE_BYTES + headerBytes;
+  const columnsAt = columnsOffset(buffer, buffer.byteLength);
+  const header = parseHeader(buffer, columnsAt - PREAMBLE_BYTES);
   const expected = columnsAt + (1 + header.readings.length) * header.pointCount * BYTES_PER_VALUE;
   if (buffer.byteLength !== expected) {
     throw new ResultFormatError(
@@ -109,31 +108,37 @@ export function decodeResult(buffer: ArrayBuffer): RunResult {
   };
 }
 
-/** @returns length of the header */
-function checkPreamble(buffer: ArrayBuffer): number {
+/**
+ * Where the first column begins.
+ *
+ * @param start the first 16 bytes of a result, or more
+ * @param fileBytes length of the whole result
+ * @throws ResultFormatError when this is no result of a version that this code knows
+ */
+export function columnsOffset(start: ArrayBuffer, fileBytes: number): number {
   if (new Uint8Array(new Uint32Array([1]).buffer)[0] !== 1) {
     throw new ResultFormatError('Results are little-endian and this machine is not.');
   }
-  if (buffer.byteLength < PREAMBLE_BYTES) {
-    throw new ResultFormatError(`A result has at least ${PREAMBLE_BYTES} bytes, got ${buffer.byteLength}.`);
+  if (start.byteLength < PREAMBLE_BYTES) {
+    throw new ResultFormatError(`A result has at least ${PREAMBLE_BYTES} bytes, got ${start.byteLength}.`);
   }
-  const magic = [...new Uint8Array(buffer, 0, MAGIC.length)];
+  const magic = [...new Uint8Array(start, 0, MAGIC.length)];
   if (MAGIC.some((byte, position) => magic[position] !== byte)) {
     const hex = magic.map((byte) => byte.toString(16).padStart(2, '0')).join(' ');
     throw new ResultFormatError(`This is not a result of a run: it begins with the bytes ${hex}.`);
   }
-  const view = new DataView(buffer);
+  const view = new DataView(start);
   const version = view.getUint32(8, true);
   if (version !== FORMAT_VERSION) {
     throw new ResultFormatError(`This reader knows format ${FORMAT_VERSION}, got format ${version}.`);
   }
   const headerBytes = view.getUint32(12, true);
-  if (headerBytes % BYTES_PER_VALUE !== 0 || PREAMBLE_BYTES + headerBytes > buffer.byteLength) {
+  if (headerBytes % BYTES_PER_VALUE !== 0 || PREAMBLE_BYTES + headerBytes > fileBytes) {
     throw new ResultFormatError(
-      `The header must have a multiple of ${BYTES_PER_VALUE} bytes within ${buffer.byteLength}, got ${headerBytes}.`,
+      `The header must have a multiple of ${BYTES_PER_VALUE} bytes within ${fileBytes}, got ${headerBytes}.`,
     );
   }
-  return headerBytes;
+  return PREAMBLE_BYTES + headerBytes;
 }
 
 function parseHeader(buffer: ArrayBuffer, headerBytes: number): ResultHeader {

@@ -123,7 +123,6 @@ export class RunLease {
       if (!held) return false;
       await queue.send(this.runId, transaction);
       await this.#notify('queued', { done: 0 }, transaction);
-      await sendRunNotice(this.#models.sequelize, { kind: 'queued' }, transaction);
       return true;
     });
   }

@@ -1,6 +1,7 @@
 import PgBoss from 'pg-boss';
 import { QueryTypes } from 'sequelize';
 import type { Sequelize, Transaction } from 'sequelize';
+import { sendRunNotice } from './runNotices.ts';
 
 /** Tables of the queue package, apart from ours. */
 const SCHEMA = 'queue';
@@ -41,7 +42,11 @@ export class RunQueue {
     await this.#boss.stop({ graceful: false });
   }
 
-  /** @throws Error when the entry could not be made; the transaction must not be committed then */
+  /**
+   * Puts a run in and tells every host, both once the transaction commits.
+   *
+   * @throws Error when the entry could not be made; the transaction must not be committed then
+   */
   async send(runId: string, transaction: Transaction): Promise<void> {
     const entry: Entry = { runId };
     const id = await this.#boss.send(QUEUE, entry, {
@@ -50,6 +55,7 @@ export class RunQueue {
       retryLimit: 0,
     });
     if (id === null) throw new Error(`The queue did not take run ${runId}: its tables are missing.`);
+    await sendRunNotice(this.#sequelize, { kind: 'queued' }, transaction);
   }
 
   /** Takes the oldest entry out, for good once the transaction commits; null when none waits. */

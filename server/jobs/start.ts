@@ -29,6 +29,7 @@ export async function startJobs(dependencies: JobDependencies): Promise<Jobs> {
       channel.listen((notice) => {
         if (notice === 'reconnected') listener(null);
         else if (notice.kind === 'progress' && notice.runId === runId) listener(notice.progress);
+        else if (notice.kind === 'stop' && notice.runId === runId) listener(null);
       }),
     health() {
       const computing = host ? `${host.runCount} runs on this machine` : 'other machines compute';

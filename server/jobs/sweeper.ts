@@ -55,9 +55,7 @@ export async function sweepOrphans(
       logger.warn({ runId: run.id, host, attempts }, 'The host of a run fell silent');
     }
     const resent = await sendAgain(models, queue, transaction);
-    const returned = orphans.length - failed + resent;
-    if (returned > 0) await sendRunNotice(models.sequelize, { kind: 'queued' }, transaction);
-    return { returned, failed };
+    return { returned: orphans.length - failed + resent, failed };
   });
 }
 

@@ -1,0 +1,100 @@
+import { openInGroupSchema } from '../../../shared/link.ts';
+import { sharedRunSchema } from '../../../shared/run.ts';
+import { stackSchema } from '../../../shared/stack.ts';
+import type { AppDependencies } from '../../dependencies.ts';
+import { addToGroup } from '../../policies/group.ts';
+import { anyone } from '../../policies/policy.ts';
+import { presentSharedRun } from '../../presenters/presentRun.ts';
+import { presentStack } from '../../presenters/presentStack.ts';
+import { isRowId } from '../../routing/pathParams.ts';
+import type { Route } from '../../routing/route.ts';
+import { route, streamRoute } from '../../routing/route.ts';
+import { countLinkUse, openLink } from '../../services/links.ts';
+import { openSharedRun } from '../../services/openSharedRun.ts';
+import { sendRunFile } from '../../services/sendRunFile.ts';
+import { readingsQuerySchema } from '../runs/readingsQuery.ts';
+
+/** What a link opens is the run as it was stored: nothing here looks at the stack or the materials of today. */
+const load = ({ dependencies, params }: { dependencies: AppDependencies; params: { token: string } }) =>
+  openLink(dependencies.models, params.token);
+
+const readSharedRun = route({
+  method: 'get',
+  path: '/shared/:token',
+  summary: 'The run that a share link opens; 410 once it is revoked or has expired.',
+  noun: 'link',
+  policy: anyone,
+  load,
+  answer: { status: 200, schema: sharedRunSchema },
+  async handler({ dependencies, subject }) {
+    await countLinkUse(dependencies.models, subject.link);
+    return presentSharedRun(subject.run);
+  },
+});
+
+const readSharedData = streamRoute({
+  method: 'get',
+  path: '/shared/:token/data',
+  summary: 'The numbers of the shared run as Float64 columns behind a JSON header.',
+  noun: 'link',
+  policy: anyone,
+  query: readingsQuerySchema,
+  load,
+  answer: { contentType: 'application/octet-stream' },
+  handler: ({ dependencies, subject, query, response }) =>
+    sendRunFile(dependencies, subject.run, { kind: 'binary', readings: query.readings }, response),
+});
+
+const readSharedCsv = streamRoute({
+  method: 'get',
+  path: '/shared/:token/data.csv',
+  summary: 'The numbers of the shared run as CSV.',
+  noun: 'link',
+  policy: anyone,
+  query: readingsQuerySchema,
+  load,
+  answer: { contentType: 'text/csv' },
+  handler: ({ dependencies, subject, query, response }) =>
+    sendRunFile(dependencies, subject.run, { kind: 'csv', readings: query.readings }, response),
+});
+
+const readSharedInput = streamRoute({
+  method: 'get',
+  path: '/shared/:token/input.json',
+  summary: 'A request of the solve contract that reproduces the shared run on the command line.',
+  noun: 'link',
+  policy: anyone,
+  load,
+  answer: { contentType: 'application/json' },
+  handler: ({ dependencies, subject, response }) =>
+    sendRunFile(dependencies, subject.run, { kind: 'input' }, response),
+});
+
+const openInGroup = route({
+  method: 'post',
+  path: '/shared/:token/stacks',
+  summary: "Put the shared run's stack into a group of one's own.",
+  noun: 'link or group',
+  policy: addToGroup,
+  body: openInGroupSchema,
+  async load(context) {
+    const shared = await load(context);
+    const { groupId } = context.body;
+    if (!shared || !isRowId(groupId)) return null;
+    const group = await context.dependencies.models.Group.findByPk(groupId);
+    return group && { id: group.id, run: shared.run };
+  },
+  answer: { status: 201, schema: stackSchema },
+  async handler({ dependencies, actor, subject }) {
+    const { stack, newest } = await openSharedRun(dependencies, actor, subject.run, subject.id);
+    return presentStack(stack, newest);
+  },
+});
+
+export const sharedRoutes: Route[] = [
+  readSharedRun,
+  readSharedData,
+  readSharedCsv,
+  readSharedInput,
+  openInGroup,
+];

@@ -1,0 +1,107 @@
+import { Op, fn, literal } from 'sequelize';
+import { conflict, gone, invalid } from '../errors.ts';
+import type { Models } from '../models/models.ts';
+import type { Run } from '../models/run.ts';
+import type { ShareLink } from '../models/shareLink.ts';
+import { recordActivity } from './recordActivity.ts';
+import { hashSecret, makeSecret } from './secrets.ts';
+
+type Person = { userId: string; name: string };
+
+/** A link with what a list shows of it. */
+export type LinkWithRun = { link: ShareLink; runName: string; runId: string };
+
+/**
+ * Makes a link that opens a run without an account.
+ *
+ * @param wanted.expiresAt when it stops to open; null for never
+ * @returns the link and its token, which is stored as a hash only and cannot be shown again
+ * @throws Refusal 409 while the run has no numbers, 422 when the link would have expired already
+ */
+export async function createLink(
+  models: Models,
+  actor: Person,
+  run: Run,
+  wanted: { label: string; expiresAt: Date | null },
+): Promise<{ link: LinkWithRun; token: string }> {
+  if (run.state !== 'done') {
+    throw conflict(`The run is ${run.state}: a link can be made once it has its numbers.`);
+  }
+  if (wanted.expiresAt !== null && wanted.expiresAt.getTime() <= Date.now()) {
+    throw invalid([{ path: 'expiresAt', message: 'must be in the future' }]);
+  }
+  const token = makeSecret();
+  const { id: runId, groupId } = run;
+  const linkId = await models.sequelize.transaction(async (transaction) => {
+    const link = await models.ShareLink.create(
+      { ...wanted, runId, groupId, tokenHash: hashSecret(token), createdById: actor.userId },
+      { transaction },
+    );
+    const detail = { run: run.name, label: wanted.label };
+    await recordActivity(
+      models,
+      { action: 'link.create', groupId, actor, subjectId: link.id, detail },
+      transaction,
+    );
+    return link.id;
+  });
+  const [link] = await listLinks(models, { id: linkId });
+  if (!link) throw new Error(`Link ${linkId} is gone right after its making.`);
+  return { link, token };
+}
+
+/** Links whose run exists, newest first. Those of deleted runs open nothing and are not listed. */
+export async function listLinks(
+  models: Models,
+  where: { id: string } | { runId: string } | { groupId: string },
+): Promise<LinkWithRun[]> {
+  const links = await models.ShareLink.findAll({
+    where: { runId: { [Op.ne]: null }, ...where },
+    include: ['createdBy', { association: 'run', attributes: ['id', 'name'] }],
+    order: [
+      ['createdAt', 'DESC'],
+      ['id', 'ASC'],
+    ],
+  });
+  return links.flatMap((link) => (link.run ? [{ link, runId: link.run.id, runName: link.run.name }] : []));
+}
+
+/** From now on the link answers 410. Revoking twice keeps the first time. */
+export async function revokeLink(models: Models, actor: Person, link: ShareLink): Promise<void> {
+  await models.sequelize.transaction(async (transaction) => {
+    const [count] = await models.ShareLink.update(
+      { revokedAt: fn('now') },
+      { where: { id: link.id, revokedAt: null }, transaction },
+    );
+    if (count === 0) return;
+    const { groupId, id: subjectId, label } = link;
+    await recordActivity(
+      models,
+      { action: 'link.revoke', groupId, actor, subjectId, detail: { label } },
+      transaction,
+    );
+  });
+}
+
+/**
+ * The run that a token opens; null for a token that never was.
+ *
+ * @throws Refusal 410 when the link was revoked, has expired, or its run was deleted
+ */
+export async function openLink(models: Models, token: string): Promise<{ link: ShareLink; run: Run } | null> {
+  const link = await models.ShareLink.findOne({ where: { tokenHash: hashSecret(token) }, include: 'run' });
+  if (!link) return null;
+  if (link.revokedAt || !link.run) throw gone('This link was revoked. Ask whoever sent it for a new one.');
+  if (link.expiresAt && link.expiresAt.getTime() <= Date.now()) {
+    throw gone('This link has expired. Ask whoever sent it for a new one.');
+  }
+  return { link, run: link.run };
+}
+
+/** Remembers that somebody opened the link. */
+export async function countLinkUse(models: Models, link: ShareLink): Promise<void> {
+  await models.ShareLink.update(
+    { lastUsedAt: fn('now'), useCount: literal('use_count + 1') },
+    { where: { id: link.id } },
+  );
+}

@@ -1,0 +1,101 @@
+import { Op } from 'sequelize';
+import type { StackItemInput } from '../../shared/solve.ts';
+import type { MediumInput } from '../../shared/medium.ts';
+import type { StackDocument, StackItem, StackMedium } from '../../shared/stack.ts';
+import { ResolutionError, resolveCase } from '../../worker/dispersion/resolveCase.ts';
+import { materialKey } from '../../worker/sweep/sweepInput.ts';
+import { conflict } from '../errors.ts';
+import type { AppDependencies } from '../dependencies.ts';
+import type { Run } from '../models/run.ts';
+import { recordActivity } from './recordActivity.ts';
+import { runCase } from './runCases.ts';
+import { loadRunMaterials } from './runMaterials.ts';
+import { createStack } from './stacks.ts';
+import type { StackWithVersion } from './stacks.ts';
+
+type Person = { userId: string; name: string };
+
+/**
+ * Puts the stack of a shared run, as it was computed, into a group.
+ *
+ * A material that is another group's own cannot be named there: its constants at the working point take its place.
+ *
+ * @throws Refusal 409 when such a material is not known at the wavelength of the working point
+ */
+export async function openSharedRun(
+  dependencies: Pick<AppDependencies, 'models' | 'materials'>,
+  actor: Person,
+  run: Run,
+  groupId: string,
+): Promise<StackWithVersion> {
+  const { models } = dependencies;
+  const foreign = await foreignMaterials(dependencies, run, groupId);
+  const document = foreign.size === 0 ? run.input.document : await withConstants(dependencies, run, foreign);
+  const replaced =
+    foreign.size > 0 ? ` Own materials of its group stand as constants at the working point.` : '';
+  const opened = await createStack(models, actor, groupId, {
+    name: run.stackName ?? run.name,
+    description: `From the shared run "${run.name}".${replaced}`,
+    document,
+  });
+  await models.sequelize.transaction((transaction) =>
+    recordActivity(
+      models,
+      { action: 'link.open-in-group', groupId, actor, subjectId: opened.stack.id, detail: { run: run.name } },
+      transaction,
+    ),
+  );
+  return opened;
+}
+
+/** Ids of the run's materials that are out of the group's reach. */
+async function foreignMaterials(
+  { models }: Pick<AppDependencies, 'models'>,
+  run: Run,
+  groupId: string,
+): Promise<Set<string>> {
+  const ids = run.input.materials.map(({ id }) => id);
+  const inReach = await models.Material.findAll({
+    attributes: ['id'],
+    where: { id: ids, groupId: { [Op.or]: [null, groupId] } },
+  });
+  const reached = new Set(inReach.map(({ id }) => id));
+  return new Set(ids.filter((id) => !reached.has(id)));
+}
+
+async function withConstants(
+  { materials: store }: Pick<AppDependencies, 'materials'>,
+  run: Run,
+  foreign: Set<string>,
+): Promise<StackDocument> {
+  const { document } = run.input;
+  const materials = await loadRunMaterials(store, run);
+  const names = new Map(materials.map(({ id, name }) => [id, name]));
+  const constantsOf = (medium: StackMedium, { index, voigt }: MediumInput): StackMedium =>
+    medium.material === undefined || !foreign.has(medium.material)
+      ? medium
+      : { index, ...(voigt !== undefined && { voigt }), label: names.get(medium.material) };
+  const replaceItems = (items: StackItem[], resolved: StackItemInput[]): StackItem[] =>
+    items.map((item, position) => {
+      const other = resolved[position]!;
+      if ('layers' in item) {
+        return { ...item, layers: replaceItems(item.layers, 'layers' in other ? other.layers : []) };
+      }
+      return 'layers' in other ? item : { ...item, medium: constantsOf(item.medium, other) };
+    });
+  try {
+    const resolved = resolveCase(
+      runCase(document, document.workingPoint.wavelengthNm),
+      new Map(materials.map((material) => [materialKey(material), material])),
+    );
+    return {
+      ...document,
+      incident: constantsOf(document.incident, resolved.incident),
+      layers: replaceItems(document.layers, resolved.layers),
+      substrate: constantsOf(document.substrate, resolved.substrate),
+    };
+  } catch (error) {
+    if (!(error instanceof ResolutionError)) throw error;
+    throw conflict(`This run uses materials of its own group, which cannot be taken along: ${error.message}`);
+  }
+}

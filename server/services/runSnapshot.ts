@@ -1,0 +1,142 @@
+import type { CreateRun, UsedMaterial } from '../../shared/run.ts';
+import type { SolveWarning } from '../../shared/solve.ts';
+import type { StackDocument, StackItem, StackMedium } from '../../shared/stack.ts';
+import { dispersionRangeNm, isSameWavelength } from '../../worker/dispersion/range.ts';
+import { ResolutionError, resolveCase } from '../../worker/dispersion/resolveCase.ts';
+import type { ResolvableMaterial } from '../../worker/dispersion/resolveCase.ts';
+import { SOLVER_VERSION } from '../../worker/optics/version.ts';
+import { solveWarnings } from '../../worker/optics/warnings.ts';
+import { axisValues } from '../../worker/sweep/axisValues.ts';
+import { invalid } from '../errors.ts';
+import type { Material } from '../models/material.ts';
+import type { Run, RunInput } from '../models/run.ts';
+import type { MaterialStore } from './materialStore.ts';
+import { runAssumptions } from './runAssumptions.ts';
+import { checkRunDocument, checkRunMaterials, runCase } from './runCases.ts';
+import { hashRunInput } from './runInputHash.ts';
+import { documentPath, toDocumentIssues } from './runPaths.ts';
+
+/** What a run is computed from and rests on, taken at the moment of its making and never changed. */
+export type RunSnapshot = Pick<
+  Run,
+  'input' | 'materials' | 'assumptions' | 'warnings' | 'inputSha256' | 'solverVersion' | 'total'
+>;
+
+type LoadedMaterial = ResolvableMaterial & { material: Material };
+
+/** Wavelengths at which media are looked at for warnings. */
+const WARNING_POINTS = 21;
+
+/**
+ * @param wanted what is to be swept; every reading named
+ * @throws Refusal 422 with everything that keeps it from being computed
+ */
+export async function takeRunSnapshot(
+  store: MaterialStore,
+  groupId: string,
+  wanted: Required<Pick<CreateRun, 'document' | 'axis' | 'readings'>>,
+): Promise<RunSnapshot> {
+  const { axis, readings } = wanted;
+  const issues = checkRunDocument(wanted.document, axis);
+  if (issues.length > 0) throw invalid(issues);
+  const given = runCase(wanted.document, wanted.document.workingPoint.wavelengthNm);
+  const loaded = await store.loadFor([given], [groupId]);
+  const outOfReach = checkRunMaterials(wanted.document, axis, loaded);
+  if (outOfReach.length > 0) throw invalid(outOfReach);
+  const materials = [...loaded.values()];
+  const document = withVersions(wanted.document, loaded);
+  const input: RunInput = {
+    document,
+    axis,
+    readings,
+    materials: materials.map(({ id, version }) => ({ id, version })),
+  };
+  const used = materials.map((material) => describeUse(material, document, sweptNm(input)));
+  return {
+    input,
+    materials: used,
+    assumptions: runAssumptions(document, axis, readings, used),
+    warnings: warningsOf(input, loaded),
+    inputSha256: hashRunInput(input, materials),
+    solverVersion: SOLVER_VERSION,
+    total: axis.points,
+  };
+}
+
+/** The document with the version of every material named: the newest one may be another tomorrow. */
+function withVersions(
+  document: StackDocument,
+  materials: ReadonlyMap<string, LoadedMaterial>,
+): StackDocument {
+  const newest = new Map([...materials.values()].map(({ id, material }) => [id, material.version]));
+  const pinned = (medium: StackMedium): StackMedium =>
+    medium.material === undefined || medium.version !== undefined
+      ? medium
+      : { ...medium, version: newest.get(medium.material) };
+  const pinnedItem = (item: StackItem): StackItem =>
+    'layers' in item
+      ? { ...item, layers: item.layers.map(pinnedItem) }
+      : { ...item, medium: pinned(item.medium) };
+  return {
+    ...document,
+    incident: pinned(document.incident),
+    layers: document.layers.map(pinnedItem),
+    substrate: pinned(document.substrate),
+  };
+}
+
+/** The wavelengths at the ends of the run. */
+function sweptNm({ axis, document }: RunInput): number[] {
+  return axis.kind === 'wavelength' ? [axis.from, axis.to] : [document.workingPoint.wavelengthNm];
+}
+
+function describeUse(
+  { id, version, content, material }: LoadedMaterial,
+  document: StackDocument,
+  wavelengthsNm: number[],
+): UsedMaterial {
+  const voigtRangeNm = content.voigt && dispersionRangeNm(content.voigt);
+  const rangeNm = dispersionRangeNm(content.index);
+  const stretched = [rangeNm, voigtRangeNm].some(
+    (range) =>
+      range !== null &&
+      range[0] === range[1] &&
+      wavelengthsNm.some((one) => !isSameWavelength(one, range[0])),
+  );
+  return {
+    id,
+    version,
+    name: material.name,
+    formula: material.formula,
+    class: material.class,
+    indexSource: content.indexSource,
+    voigtSource: content.voigtSource,
+    rangeNm,
+    voigtRangeNm,
+    assumedConstant: stretched && isAssumedConstant(document, id, version),
+  };
+}
+
+function isAssumedConstant(document: StackDocument, id: string, version: number): boolean {
+  const assumes = (medium: StackMedium) =>
+    medium.material === id && medium.version === version && medium.assumeConstant === true;
+  const any = (items: StackItem[]): boolean =>
+    items.some((item) => ('layers' in item ? any(item.layers) : assumes(item.medium)));
+  return assumes(document.incident) || assumes(document.substrate) || any(document.layers);
+}
+
+function warningsOf(input: RunInput, materials: ReadonlyMap<string, ResolvableMaterial>): SolveWarning[] {
+  const { axis, document } = input;
+  const wavelengths =
+    axis.kind === 'wavelength'
+      ? axisValues({ ...axis, points: Math.min(axis.points, WARNING_POINTS) })
+      : document.workingPoint.wavelengthNm;
+  try {
+    const warnings = solveWarnings({ cases: [resolveCase(runCase(document, wavelengths), materials)] });
+    return warnings.map((warning) => ({ ...warning, path: documentPath(warning.path) }));
+  } catch (error) {
+    // A formula may have no value between two wavelengths where it has one.
+    if (error instanceof ResolutionError) throw invalid(toDocumentIssues(error.issues));
+    throw error;
+  }
+}

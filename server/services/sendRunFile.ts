@@ -1,0 +1,75 @@
+import { Readable } from 'node:stream';
+import { pipeline } from 'node:stream/promises';
+import type { Response } from 'express';
+import { describeResult, resultByteLength } from '../../shared/resultFormat.ts';
+import type { ReadingName } from '../../shared/run.ts';
+import type { AppDependencies } from '../dependencies.ts';
+import type { Run } from '../models/run.ts';
+import { resultBytes, resultCsv } from './runDownloads.ts';
+import { runInputFile } from './runInputFile.ts';
+import { loadRunMaterials } from './runMaterials.ts';
+import { RunResult } from './runResult.ts';
+
+/**
+ * The files that a run is handed out as, to members and through links alike. All are streamed: a run of a million
+ * points takes no more memory than one of a thousand.
+ */
+export type RunFile =
+  | { kind: 'binary'; readings?: ReadingName[] }
+  | { kind: 'csv'; readings?: ReadingName[] }
+  | { kind: 'input' };
+
+/** @throws Refusal 409 while the run has no numbers, 422 for a reading that it does not have; nothing is sent then */
+export async function sendRunFile(
+  { models, materials }: Pick<AppDependencies, 'models' | 'materials'>,
+  run: Run,
+  file: RunFile,
+  response: Response,
+): Promise<void> {
+  switch (file.kind) {
+    case 'binary': {
+      const result = await RunResult.open(models, run);
+      const readings = result.choose(file.readings);
+      const { solverVersion, inputSha256, input } = run;
+      const header = describeResult(input.axis, readings, { solverVersion, inputSha256 });
+      response.set({
+        'Content-Type': 'application/octet-stream',
+        'Content-Length': String(resultByteLength(header)),
+      });
+      return send(resultBytes(result, readings), response);
+    }
+    case 'csv': {
+      const result = await RunResult.open(models, run);
+      const readings = result.choose(file.readings);
+      response.attachment(`${fileNameOf(run)}.csv`).type('text/csv; charset=utf-8');
+      return send(resultCsv(result, readings), response);
+    }
+    case 'input': {
+      const constants = await loadRunMaterials(materials, run);
+      response.attachment(`${fileNameOf(run)}-input.json`).type('application/json');
+      return send(runInputFile(run.input, constants), response);
+    }
+  }
+}
+
+async function send(
+  pieces: AsyncIterable<Uint8Array | string> | Iterable<string>,
+  response: Response,
+): Promise<void> {
+  try {
+    await pipeline(Readable.from(pieces), response);
+  } catch (error) {
+    // The reader went away: nobody is left to be told.
+    if (error instanceof Error && 'code' in error && error.code === 'ERR_STREAM_PREMATURE_CLOSE') return;
+    throw error;
+  }
+}
+
+function fileNameOf(run: Run): string {
+  const name = run.name
+    .normalize('NFKD')
+    .replace(/[^\w.-]+/g, '-')
+    .replace(/^-+|-+$/g, '')
+    .slice(0, 60);
+  return name || 'run';
+}
