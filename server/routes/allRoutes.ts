@@ -2,11 +2,16 @@ import type { Route } from '../routing/route.ts';
 import { accountRoutes } from './accounts/accountRoutes.ts';
 import { developmentRoutes } from './development/developmentRoutes.ts';
 import { healthRoutes } from './health/healthRoutes.ts';
+import { linkRoutes } from './links/linkRoutes.ts';
 import { materialRoutes } from './materials/materialRoutes.ts';
 import { memberRoutes } from './members/memberRoutes.ts';
 import { openApiRoutes } from './openapi/openApiRoutes.ts';
 import { passwordResetRoutes } from './password-resets/passwordResetRoutes.ts';
+import { runEventRoutes } from './runs/runEventRoutes.ts';
+import { runFileRoutes } from './runs/runFileRoutes.ts';
+import { runRoutes } from './runs/runRoutes.ts';
 import { sessionRoutes } from './session/sessionRoutes.ts';
+import { sharedRoutes } from './shared/sharedRoutes.ts';
 import { solveRoutes } from './solve/solveRoutes.ts';
 import { stackRoutes } from './stacks/stackRoutes.ts';
 import { tokenRoutes } from './tokens/tokenRoutes.ts';
@@ -21,6 +26,11 @@ const described: Route[] = [
   ...stackRoutes,
   ...materialRoutes,
   ...solveRoutes,
+  ...runRoutes,
+  ...runEventRoutes,
+  ...runFileRoutes,
+  ...linkRoutes,
+  ...sharedRoutes,
   ...developmentRoutes,
 ];
 
