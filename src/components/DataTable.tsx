@@ -85,9 +85,9 @@ export function DataTable<Row extends object>({
 
   if (rows.length === 0) return empty;
   return (
-    <table role="table" className="w-full border-collapse text-left max-sm:block">
+    <table role="table" className="w-full border-collapse text-left max-md:block">
       <caption className="sr-only">{caption}</caption>
-      <thead role="rowgroup" className="max-sm:sr-only">
+      <thead role="rowgroup" className="max-md:sr-only">
         <tr role="row" className="border-b border-line">
           {(table.getHeaderGroups()[0]?.headers ?? []).map((header) => {
             const column = columnOf(header.column.id);
@@ -118,12 +118,12 @@ export function DataTable<Row extends object>({
           })}
         </tr>
       </thead>
-      <tbody role="rowgroup" className="max-sm:block">
+      <tbody role="rowgroup" className="max-md:block">
         {table.getRowModel().rows.map((row) => (
           <tr
             key={row.id}
             role="row"
-            className="border-b border-line last:border-b-0 hover:bg-accent-soft/40 max-sm:block max-sm:py-2.5"
+            className="border-b border-line last:border-b-0 hover:bg-accent-soft/40 max-md:relative max-md:block max-md:py-2.5"
           >
             {columns.map((column, position) => (
               <BodyCell key={column.id} column={column} row={row.original} isName={position === 0} />
@@ -135,25 +135,39 @@ export function DataTable<Row extends object>({
   );
 }
 
+/** On a phone the name stands on a line of its own and the rest flows under it, each value behind its column's name. */
 function BodyCell<Row>({ column, row, isName }: { column: Column<Row>; row: Row; isName: boolean }) {
   const content = column.cell ? column.cell(row) : (column.value(row) ?? '–');
-  const look = `px-3 py-2 align-middle max-sm:flex max-sm:items-baseline max-sm:gap-3 max-sm:py-0.5 ${
-    column.align === 'end' ? 'sm:text-right' : ''
-  }`;
+  const align = column.align === 'end' ? 'md:text-right' : '';
   if (isName) {
     return (
-      <th role="rowheader" scope="row" className={`${look} font-semibold`}>
+      <th
+        role="rowheader"
+        scope="row"
+        className={`px-3 py-2 align-middle font-semibold max-md:block max-md:pt-0 max-md:pr-14 max-md:pb-1 ${align}`}
+      >
         {content}
       </th>
     );
   }
+  if (column.hideHeader) {
+    return (
+      <td
+        role="cell"
+        className={`px-3 py-1 align-middle max-md:absolute max-md:top-1.5 max-md:right-1 max-md:p-0 ${align}`}
+      >
+        {content}
+      </td>
+    );
+  }
   return (
-    <td role="cell" className={look}>
-      {column.hideHeader ? null : (
-        <span aria-hidden="true" className="w-28 shrink-0 text-note text-muted sm:hidden">
-          {column.header}
-        </span>
-      )}
+    <td
+      role="cell"
+      className={`px-3 py-2 align-middle max-md:inline-flex max-md:max-w-full max-md:items-baseline max-md:gap-1.5 max-md:py-0 max-md:pr-1 ${align}`}
+    >
+      <span aria-hidden="true" className="shrink-0 text-note text-muted md:hidden">
+        {column.header}
+      </span>
       {content}
     </td>
   );

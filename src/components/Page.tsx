@@ -22,10 +22,10 @@ export function Page({ title, subtitle, actions, width = 'wide', children }: Pag
   useDocumentTitle(title);
   return (
     <div
-      className={`mx-auto px-4 pt-5 pb-12 sm:px-6 ${width === 'wide' ? 'max-w-[1240px]' : 'max-w-[800px]'}`}
+      className={`mx-auto px-4 pt-5 pb-12 sm:px-6 ${width === 'wide' ? 'max-w-[1280px]' : 'max-w-[820px]'}`}
     >
       <div className="mb-5 flex flex-wrap items-end gap-x-4 gap-y-3">
-        <div className="min-w-0 flex-1">
+        <div className="min-w-0 flex-1 max-sm:basis-full">
           <h1 className="text-title wrap-break-word">{title}</h1>
           {subtitle ? <div className="mt-0.5 text-note text-muted">{subtitle}</div> : null}
         </div>

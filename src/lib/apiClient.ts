@@ -34,6 +34,8 @@ type BinaryRequest = {
 type JsonRequest<Schema extends z.ZodType> = BinaryRequest & {
   method?: Method;
   body?: unknown;
+  /** Beyond those of JSON, such as `idempotency-key`. */
+  headers?: Record<string, string>;
   /** What the answer must be; `noContent` where the server answers 204. */
   schema: Schema;
 };
@@ -56,12 +58,13 @@ export function onUnauthenticated(handler: () => void): void {
 export async function request<Schema extends z.ZodType>(
   options: JsonRequest<Schema>,
 ): Promise<z.output<Schema>> {
-  const { method = 'GET', path, body, schema, signal } = options;
+  const { method = 'GET', path, body, headers, schema, signal } = options;
   const response = await answerTo(path, {
     method,
     headers: {
       accept: 'application/json',
       ...(body === undefined ? {} : { 'content-type': 'application/json' }),
+      ...headers,
     },
     ...(body === undefined ? {} : { body: JSON.stringify(body) }),
     ...(signal ? { signal } : {}),

@@ -78,10 +78,9 @@ export function formatAngle(angleDeg: number, unit: AngleUnit = 'mdeg', digits =
   return formatNumber(fromDegrees(angleDeg, unit), { digits, signed: true });
 }
 
-/** A complex number such as `2.870 + 3.360i`. */
-export function formatComplex([re, im]: readonly [number, number], digits = 4): string {
-  const joint = im < 0 ? minus : '+';
-  return `${formatNumber(re, { digits })} ${joint} ${formatNumber(Math.abs(im), { digits })}i`;
+/** A complex number with the digits it was given: `2.87 + 3.36i`. */
+export function formatTypedComplex([re, im]: readonly [number, number]): string {
+  return `${formatPlain(re)} ${im < 0 ? minus : '+'} ${formatPlain(Math.abs(im))}i`;
 }
 
 /** A range with its unit, or the one value where both ends are the same. */

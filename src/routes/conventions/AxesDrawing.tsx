@@ -31,7 +31,7 @@ export function AxesDrawing() {
   const pTransmitted = [cosIn, -sinIn] as const;
   return (
     <svg
-      viewBox="0 0 640 372"
+      viewBox="0 32 640 336"
       role="img"
       aria-label="The plane of incidence. x runs to the right along the film, z down into the sample, y out of the page at the reader. The incident beam comes from the upper left at the angle theta to the normal, the reflected beam leaves to the upper right. s points at the reader for every beam. p of the incident beam points up and to the right, p of the reflected beam up and to the left."
       className="w-full max-w-[720px]"
@@ -82,7 +82,7 @@ export function AxesDrawing() {
       <TowardReader at={atTransmitted} color="var(--ink)" />
       <Label x={atTransmitted[0] + 50} y={atTransmitted[1] - 12} main="p" low="t" />
 
-      <text x="118" y="84" fill="var(--accent)" fontWeight="600">
+      <text x="92" y="84" fill="var(--accent)" fontWeight="600">
         incident
       </text>
       <text x="516" y="84" fill="var(--accent)" fontWeight="600">

@@ -27,16 +27,7 @@ export function ConventionSection({ id, title, children }: ConventionSectionProp
 
 /** An equation on a line of its own. */
 export function Formula({ children }: { children: ReactNode }) {
-  return (
-    <div
-      className="overflow-x-auto py-0.5 pl-4 text-lead sm:pl-6"
-      tabIndex={0}
-      role="group"
-      aria-label="Formula"
-    >
-      <div className="w-max leading-[1.9]">{children}</div>
-    </div>
-  );
+  return <div className="pl-4 text-lead leading-[1.9] sm:pl-6">{children}</div>;
 }
 
 /** A fraction with a bar; read as "top over bottom". */
@@ -53,18 +44,22 @@ export function Fraction({ top, bottom }: { top: ReactNode; bottom: ReactNode })
 /** A 3 by 3 matrix in brackets, rows x, y, z. */
 export function Matrix({ rows }: { rows: readonly (readonly ReactNode[])[] }) {
   return (
-    <table className="inline-table rounded-[3px] border-x-[1.5px] border-ink align-middle">
-      <tbody>
-        {rows.map((row, rowPosition) => (
-          <tr key={rowPosition}>
-            {row.map((entry, position) => (
-              <td key={position} className="px-2.5 text-center leading-snug">
-                {entry}
-              </td>
-            ))}
-          </tr>
-        ))}
-      </tbody>
-    </table>
+    <span className="inline-flex items-stretch align-middle">
+      <span className="w-1.5 border-y-[1.5px] border-l-[1.5px] border-ink" />
+      <table>
+        <tbody>
+          {rows.map((row, rowPosition) => (
+            <tr key={rowPosition}>
+              {row.map((entry, position) => (
+                <td key={position} className="px-2 text-center leading-snug">
+                  {entry}
+                </td>
+              ))}
+            </tr>
+          ))}
+        </tbody>
+      </table>
+      <span className="w-1.5 border-y-[1.5px] border-r-[1.5px] border-ink" />
+    </span>
   );
 }

@@ -71,7 +71,7 @@ export function EllipseDrawing() {
       <text x={center[0] - 50} y="14" fill="var(--rotation)" fontWeight="600">
         +φ
       </text>
-      <text x="62" y={center[1] + 34} fill="var(--ellipticity)" fontWeight="600">
+      <text x="0" y={center[1] + 48} fill="var(--ellipticity)" fontWeight="600">
         tan χ = short / long
       </text>
       <Arrow

@@ -70,8 +70,10 @@ function MaterialDetail({ material }: { material: Material }) {
           <div className="mb-2 flex flex-wrap items-baseline justify-between gap-2">
             <h2 id="index-heading" className="text-body">
               Refractive index N = n + ik
+              <span className="ml-3 text-note font-normal text-muted">
+                {formatRange(material.rangeNm, 'nm')}
+              </span>
             </h2>
-            <span className="text-note text-muted">{formatRange(material.rangeNm, 'nm')}</span>
             <Select
               aria-label="Horizontal axis"
               value={unit}

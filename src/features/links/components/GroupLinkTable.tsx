@@ -65,7 +65,7 @@ export function GroupLinkTable({ groupId, links }: { groupId: string; links: rea
         value: () => null,
         cell: (link) =>
           linkState(link).open ? (
-            <Button tone="plain" onClick={() => setRevoking(link)} className="max-sm:-ml-3.5">
+            <Button tone="plain" onClick={() => setRevoking(link)}>
               Revoke<span className="sr-only"> the link to {link.runName}</span>
             </Button>
           ) : null,

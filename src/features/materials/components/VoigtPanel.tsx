@@ -2,7 +2,7 @@ import { useMemo } from 'react';
 import type { Material } from '../../../../shared/material.ts';
 import { LinePlot } from '../../../components/plot/LinePlot.tsx';
 import type { PlotSeries } from '../../../components/plot/plotTypes.ts';
-import { formatComplex, formatPlain } from '../../../lib/format.ts';
+import { formatPlain, formatTypedComplex } from '../../../lib/format.ts';
 import { onSpectralAxis, spectralLabels } from './spectralScale.ts';
 import type { SpectralUnit } from './spectralScale.ts';
 
@@ -23,7 +23,7 @@ export function VoigtPanel({ material, unit }: { material: Material; unit: Spect
   if (voigt.q.length === 1 && only) {
     return (
       <div>
-        <p className="text-reading font-[560] tracking-[-0.02em]">{formatComplex(only)}</p>
+        <p className="text-reading font-[560] tracking-[-0.02em]">{formatTypedComplex(only)}</p>
         <p className="mt-1 text-muted">
           Known at {formatPlain(voigt.wavelengthsNm[0] ?? NaN)} nm only. At other wavelengths a stack uses it
           only where somebody allows that for the layer, and every plot says so.

@@ -85,7 +85,7 @@ export function MemberTable({ groupId, members, userId, isOwner, onOwnPlaceChang
         value: () => null,
         cell: (member) =>
           isOwner || member.userId === userId ? (
-            <Button tone="plain" onClick={() => setRemoving(member)} className="max-sm:-ml-3.5">
+            <Button tone="plain" onClick={() => setRemoving(member)}>
               {member.userId === userId ? 'Leave' : 'Remove'}
               <span className="sr-only"> {member.name}</span>
             </Button>

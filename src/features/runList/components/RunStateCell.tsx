@@ -24,7 +24,7 @@ export function RunStateCell({ run, onCancel, cancelling }: RunStateCellProps) {
       );
     case 'running':
       return (
-        <div className="min-w-56 flex-1">
+        <div className="min-w-0 flex-1 md:min-w-64">
           <Progress
             label="Computing"
             done={done}

@@ -24,7 +24,17 @@ export function RunTable({ groupId, runs, mayEdit, empty }: RunTableProps) {
   const columns = useMemo(() => {
     const shown: Column<RunSummary>[] = [
       { id: 'name', header: 'Run', value: (run) => run.name, cell: (run) => <RunName run={run} /> },
-      { id: 'sweep', header: 'Sweep', value: (run) => describeAxis(run.axis) },
+      {
+        id: 'sweep',
+        header: 'Sweep',
+        value: (run) => describeAxis(run.axis).span,
+        cell: (run) => (
+          <div>
+            {describeAxis(run.axis).span}
+            <div className="text-note text-muted">{describeAxis(run.axis).points}</div>
+          </div>
+        ),
+      },
       {
         id: 'state',
         header: 'State',

@@ -16,7 +16,7 @@ export function RequireSession() {
     return <Navigate to={paths.signIn + back} replace />;
   }
   return (
-    <div className="mx-auto max-w-[1240px] px-4 py-8 sm:px-6">
+    <div className="mx-auto max-w-[1280px] px-4 py-8 sm:px-6">
       {session.isError ? (
         <ErrorState
           title="Your session could not be checked"

@@ -36,7 +36,7 @@ export function TokenTable({ tokens }: { tokens: readonly ApiToken[] }) {
         align: 'end',
         value: () => null,
         cell: (token) => (
-          <Button tone="plain" onClick={() => setRevoking(token)} className="max-sm:-ml-3.5">
+          <Button tone="plain" onClick={() => setRevoking(token)}>
             Revoke<span className="sr-only"> {token.name}</span>
           </Button>
         ),
