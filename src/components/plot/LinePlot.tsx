@@ -32,8 +32,10 @@ type Props = {
   onCursorX?: (x: number | null) => void;
   /** Name of downloaded files, without ending. */
   fileName?: string;
-  /** Further controls, left of zoom and downloads. */
+  /** Controls of the page, left of zoom and downloads. */
   controls?: ReactNode;
+  /** Further files beside PNG and SVG. */
+  downloads?: ReactNode;
   /** The SVG renderer is for tests: jsdom has no canvas. */
   renderer?: 'canvas' | 'svg';
 };
@@ -44,7 +46,7 @@ type Props = {
  * Names stand at the curves. Any number of samples: what is drawn is thinned to the pixels without losing a peak.
  */
 export function LinePlot(props: Props) {
-  const { series, xAxis, yAxes, height, ariaLabel, marker, onPickX, onCursorX, controls } = props;
+  const { series, xAxis, yAxes, height, ariaLabel, marker, onPickX, onCursorX, controls, downloads } = props;
   const { fileName = ariaLabel, renderer = 'canvas' } = props;
   const { tokens, fontsReady } = usePlotTokens();
   const [measure, width] = useElementWidth(760);
@@ -122,6 +124,7 @@ export function LinePlot(props: Props) {
   return (
     <figure className="m-0" aria-label={ariaLabel}>
       <PlotToolbar
+        downloads={downloads}
         zoomed={zoomed}
         onZoom={zoomBy}
         onReset={() => setZoom(null)}

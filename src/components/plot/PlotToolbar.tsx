@@ -25,11 +25,13 @@ type Props = {
   onReset: () => void;
   onSvg: () => void;
   onPng: () => void;
-  /** Further controls of the page, such as the scale or the CSV file. */
+  /** Controls of the page, such as the choice of curves. */
   children?: ReactNode;
+  /** Further files beside the pictures, such as CSV. */
+  downloads?: ReactNode;
 };
 
-export function PlotToolbar({ zoomed, onZoom, onReset, onSvg, onPng, children }: Props) {
+export function PlotToolbar({ zoomed, onZoom, onReset, onSvg, onPng, children, downloads }: Props) {
   return (
     <div className="flex flex-wrap items-center gap-x-1 gap-y-1" data-screen-only>
       <div className="flex flex-wrap items-center gap-1">{children}</div>
@@ -44,6 +46,7 @@ export function PlotToolbar({ zoomed, onZoom, onReset, onSvg, onPng, children }:
           <RotateCcw size={14} aria-hidden />
         </PlotButton>
         <span className="bg-line mx-1.5 h-4 w-px" aria-hidden />
+        {downloads}
         <PlotButton label="Download the figure as PNG" onClick={onPng}>
           PNG
         </PlotButton>

@@ -12,21 +12,19 @@ const names: Record<Family, string> = {
 };
 
 const chip =
-  'inline-flex h-7 items-center gap-1.5 rounded-control border px-2.5 text-note aria-pressed:border-edge aria-pressed:bg-panel aria-pressed:text-ink border-transparent text-muted hover:text-ink';
+  'inline-flex h-7 items-center gap-1.5 rounded-control px-2 text-note whitespace-nowrap text-muted opacity-70 hover:text-ink hover:opacity-100 aria-pressed:font-semibold aria-pressed:text-ink aria-pressed:opacity-100';
 
-type Props = {
+type FamilyProps = {
   /** What there is to choose from. */
   families: readonly Family[];
   lights: Light;
   shown: readonly Family[];
   light: Light;
-  log: boolean;
-  unit: AngleUnit;
   onChange: (change: Partial<ReadingView>) => void;
 };
 
-/** Which readings a plot shows, for which light, in which unit and on which scale. */
-export function ReadingControls({ families, lights, shown, light, log, unit, onChange }: Props) {
+/** Which readings a plot shows, and for which light. */
+export function FamilyControls({ families, lights, shown, light, onChange }: FamilyProps) {
   const toggle = (family: Family) => {
     const next = shown.includes(family) ? shown.filter((one) => one !== family) : [...shown, family];
     // An empty plot answers nothing: the last curve stays.
@@ -34,7 +32,7 @@ export function ReadingControls({ families, lights, shown, light, log, unit, onC
   };
   return (
     <>
-      <div role="group" aria-label="Readings shown" className="flex flex-wrap gap-0.5">
+      <div role="group" aria-label="Readings shown" className="-ml-2 flex flex-wrap">
         {families.map((family) => (
           <button
             key={family}
@@ -43,7 +41,7 @@ export function ReadingControls({ families, lights, shown, light, log, unit, onC
             onClick={() => toggle(family)}
             className={chip}
           >
-            <SeriesMark series={{ ...familyLooks[family] }} />
+            <SeriesMark series={familyLooks[family]} />
             {names[family]}
           </button>
         ))}
@@ -60,6 +58,16 @@ export function ReadingControls({ families, lights, shown, light, log, unit, onC
           <option value="ps">p and s</option>
         </select>
       )}
+    </>
+  );
+}
+
+type ScaleProps = Pick<ReadingView, 'log' | 'unit'> & { onChange: (change: Partial<ReadingView>) => void };
+
+/** In which unit and on which scale readings are shown. */
+export function ScaleControls({ log, unit, onChange }: ScaleProps) {
+  return (
+    <span className="inline-flex items-center gap-1">
       <select
         aria-label="Unit of the angles"
         value={unit}
@@ -74,12 +82,13 @@ export function ReadingControls({ families, lights, shown, light, log, unit, onC
         aria-label="Scale of the readings"
         value={log ? 'log' : 'linear'}
         onChange={(event) => onChange({ log: event.target.value === 'log' })}
+        title="The logarithm is that of the absolute value"
         className={quietSelect}
       >
         <option value="linear">linear</option>
-        <option value="log">log of absolute value</option>
+        <option value="log">log of abs</option>
       </select>
-    </>
+    </span>
   );
 }
 

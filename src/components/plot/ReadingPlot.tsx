@@ -21,6 +21,7 @@ type Props = {
   onCursorX?: ((x: number | null) => void) | undefined;
   fileName: string;
   controls?: ReactNode;
+  downloads?: ReactNode;
   renderer?: 'canvas' | 'svg';
 };
 

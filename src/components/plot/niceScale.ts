@@ -26,6 +26,23 @@ export function niceScale(low: number, high: number, count = 5): NiceScale {
   return { min: clean(min, step), max: clean(max, step), ticks: ticksBetween(min, max, step) };
 }
 
+/**
+ * A linear scale with this many intervals, so that its ticks lie on the grid lines of another axis. Null where that
+ * would leave more than half of the height empty.
+ */
+export function alignedScale(low: number, high: number, intervals: number): NiceScale | null {
+  const free = niceScale(low, high, intervals);
+  for (const stretch of [1, 1.25, 2, 2.5, 4, 5, 10]) {
+    const step = niceStep(free.max - free.min, intervals) * stretch * 0.5;
+    const min = Math.floor(low / step + 1e-9) * step;
+    const max = min + intervals * step;
+    if (max < high - 1e-9 * step || step === 0) continue;
+    if (max - min > 2.2 * (free.max - free.min)) return null;
+    return { min: clean(min, step / 10), max: clean(max, step / 10), ticks: ticksBetween(min, max, step) };
+  }
+  return null;
+}
+
 /** Ticks within [min, max], the ends kept as they are: for the x axis, whose range the user has chosen. */
 export function linearTicks(min: number, max: number, count = 7): number[] {
   if (!(max > min)) return [min];
@@ -62,7 +79,7 @@ export function logScale(low: number, high: number): NiceScale {
 
 function ticksBetween(first: number, last: number, step: number): number[] {
   const count = Math.round((last - first) / step + 1e-9);
-  return Array.from({ length: count + 1 }, (_, index) => clean(first + index * step, step)).filter(
+  return Array.from({ length: count + 1 }, (_, index) => clean(first + index * step, step / 10)).filter(
     (tick) => tick <= last + step * 1e-6,
   );
 }

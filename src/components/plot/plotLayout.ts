@@ -3,7 +3,7 @@ import { decimateMinMax } from './decimate.ts';
 import type { Drawn } from './decimate.ts';
 import { placeLabels } from './labelPlaces.ts';
 import type { LabelPlace } from './labelPlaces.ts';
-import { linearTicks, logScale, logTicks, niceScale } from './niceScale.ts';
+import { alignedScale, linearTicks, logScale, logTicks, niceScale } from './niceScale.ts';
 import type { NiceScale } from './niceScale.ts';
 import { toPixel } from './plotScale.ts';
 import type { PlotScale, Window } from './plotScale.ts';
@@ -61,12 +61,12 @@ export function layoutPlot(
     log: xLog,
     ticks: xLog ? logTicks(...window) : linearTicks(window[0], window[1], tickCount),
   };
+  let intervals: number | null = null;
   const y = yAxes.map((axis, index) => {
-    const scale = scaleOf(
-      axis,
-      series.filter((one) => (one.yAxisIndex ?? 0) === index),
-      window,
-    );
+    const own = series.filter((one) => (one.yAxisIndex ?? 0) === index);
+    const scale = scaleOf(axis, own, window, intervals);
+    // The grid lines are those of the left axis; the others put their ticks on them where that wastes no room.
+    if (index === 0 && !axis.log) intervals = scale.ticks.length - 1;
     return { ...scale, from: frame.bottom, to: frame.top, log: axis.log === true };
   });
   const buckets = Math.max(50, Math.round(frame.right - frame.left));
@@ -93,7 +93,12 @@ function forLog(value: number): number {
   return value === 0 ? NaN : Math.abs(value);
 }
 
-function scaleOf(axis: PlotAxis, series: readonly PlotSeries[], window: Window): NiceScale {
+function scaleOf(
+  axis: PlotAxis,
+  series: readonly PlotSeries[],
+  window: Window,
+  intervals: number | null,
+): NiceScale {
   let low = Infinity;
   let high = -Infinity;
   for (const one of series) {
@@ -105,7 +110,8 @@ function scaleOf(axis: PlotAxis, series: readonly PlotSeries[], window: Window):
   if (axis.log) return logScale(low, high);
   if (low <= high)
     for (const value of axis.include ?? []) [low, high] = [Math.min(low, value), Math.max(high, value)];
-  return niceScale(low, high);
+  const aligned = intervals !== null && low <= high ? alignedScale(low, high, intervals) : null;
+  return aligned && aligned.max <= (axis.most ?? Infinity) ? aligned : niceScale(low, high);
 }
 
 /** About 6.6 px a character at 12 px semibold; only used to keep names apart. */

@@ -51,8 +51,28 @@ export function plotOption(
       splitLine: { show: index === 0, lineStyle: { color: tokens.line } },
       axisLine: { show: false },
     })),
-    series: series.flatMap((one, index) => seriesOption(one, index, layout, tokens)),
+    series: [
+      ...series.flatMap((one, index) => seriesOption(one, index, layout, tokens)),
+      ...zeroLine(layout, tokens),
+    ],
   };
+}
+
+/** The zero of the left axis, where it lies inside the figure: the sign of an angle is read against it. */
+function zeroLine({ x, y }: PlotLayout, tokens: PlotTokens): object[] {
+  const left = y[0];
+  if (!left || left.log || !(left.min < 0 && left.max > 0)) return [];
+  const ends = [x.min, x.max].map((value) => [onScale(value, x.log), 0]);
+  return [
+    {
+      type: 'line',
+      data: ends,
+      showSymbol: false,
+      silent: true,
+      z: 1,
+      lineStyle: { color: tokens.muted, width: 1, opacity: 0.55 },
+    },
+  ];
 }
 
 function axisOption(scale: PlotLayout['x'], tokens: PlotTokens) {

@@ -27,6 +27,8 @@ export type PlotAxis = {
   log?: boolean;
   /** Values that the scale always encloses, such as 0. */
   include?: readonly number[];
+  /** What the quantity cannot exceed; the scale does not run past it only to look tidy. */
+  most?: number;
   /** A value as read out, unit included. */
   format?: (value: number) => string;
 };

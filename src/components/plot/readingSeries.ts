@@ -80,7 +80,7 @@ function axisFor(kind: AxisKind, unit: AngleUnit, log: boolean): PlotAxis {
     case 'angle':
       return { label: label(unit), log, include: [0], format: (value) => `${signed(value)} ${unit}` };
     case 'reflectance':
-      return { label: 'R', log, include: [0], format: (value) => formatNumber(value) };
+      return { label: 'R', log, include: [0], most: 1, format: (value) => formatNumber(value) };
     case 'cross':
       return { label: '|r| × 10³', log, include: [0], format: (value) => `${formatNumber(value)} × 10⁻³` };
     case 'contrast':

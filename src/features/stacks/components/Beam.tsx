@@ -1,7 +1,7 @@
 import { useElementWidth } from '../../../components/plot/useElementWidth.ts';
 import type { Polarization } from '../../../../shared/stack.ts';
 import { formatCount } from '../../../lib/format.ts';
-import { along, angleArc, exaggeration, incomingRay, outgoingRay } from '../model/beamGeometry.ts';
+import { along, angleArc, exaggeration, incomingRay, outgoingRay, raysApart } from '../model/beamGeometry.ts';
 import type { Point } from '../model/beamGeometry.ts';
 
 type Props = {
@@ -14,6 +14,8 @@ type Props = {
 const HEIGHT = 206;
 /** Left edge of the film, past the depth numbers. */
 const FILM_LEFT = 38;
+/** Where along the outgoing ray its polarization is drawn. */
+const LENS_AT = 0.72;
 
 /** Light arriving at its true angle, and the polarization it leaves with, tilted by a stated exaggeration. */
 export function Beam({ angleDeg, input, kerr }: Props) {
@@ -21,15 +23,11 @@ export function Beam({ angleDeg, input, kerr }: Props) {
   const frame = { width, height: HEIGHT, x: (FILM_LEFT + width) / 2, surface: HEIGHT - 1 };
   const incoming = incomingRay(angleDeg, frame);
   const outgoing = outgoingRay(angleDeg, frame);
-  // At normal incidence the beam returns on itself: drawn side by side, a little apart.
-  const apart = angleDeg < 12 ? (12 - angleDeg) * 0.9 : 0;
-  const shift = (point: Point, by: number) => ({ x: point.x + by, y: point.y });
-  const ray = {
-    in: [shift(incoming.start, -apart), shift(incoming.end, -3)],
-    out: [shift(outgoing.start, 3), shift(outgoing.end, apart)],
-  };
-  const mark = along(ray.in[0]!, ray.in[1]!, 0.34);
-  const lens = along(ray.out[0]!, ray.out[1]!, 0.74);
+  const apart = raysApart(angleDeg, frame, LENS_AT, 17);
+  const [inFrom, inTo] = [shifted(incoming.start, -apart), shifted(incoming.end, -apart)];
+  const [outFrom, outTo] = [shifted(outgoing.start, apart), shifted(outgoing.end, apart)];
+  const mark = along(inFrom, inTo, 0.34);
+  const lens = along(outFrom, outTo, LENS_AT);
   const factor = kerr ? exaggeration(kerr.rotationDeg, kerr.ellipticityDeg) : 1;
   return (
     <div ref={measure}>
@@ -42,10 +40,10 @@ export function Beam({ angleDeg, input, kerr }: Props) {
         className="block"
       >
         <line x1={frame.x} x2={frame.x} y1="22" y2={HEIGHT} stroke="var(--line)" strokeDasharray="3 4" />
-        <Ray from={ray.in[0]!} to={ray.in[1]!} arrowAt={1} />
-        <Ray from={ray.out[0]!} to={ray.out[1]!} arrowAt={1} opacity={0.75} />
+        <Ray from={inFrom} to={inTo} />
+        <Ray from={outFrom} to={outTo} opacity={0.75} />
         {angleDeg > 3 && <path d={angleArc(angleDeg, frame, 62)} fill="none" stroke="var(--muted)" />}
-        <AngleText angleDeg={angleDeg} x={frame.x} y={frame.surface} />
+        <AngleText angleDeg={angleDeg} x={frame.x} y={frame.surface} apart={apart} />
         <PolarizationMark at={mark} angleDeg={angleDeg} input={input} />
         {kerr && (
           <Lens
@@ -62,39 +60,32 @@ export function Beam({ angleDeg, input, kerr }: Props) {
   );
 }
 
-function Ray({
-  from,
-  to,
-  arrowAt,
-  opacity = 1,
-}: {
-  from: Point;
-  to: Point;
-  arrowAt: number;
-  opacity?: number;
-}) {
+function shifted(point: Point, by: number): Point {
+  return { x: point.x + by, y: point.y };
+}
+
+function Ray({ from, to, opacity = 1 }: { from: Point; to: Point; opacity?: number }) {
   const direction = (Math.atan2(to.y - from.y, to.x - from.x) * 180) / Math.PI;
-  const tip = along(from, to, arrowAt);
   return (
     <g opacity={opacity}>
       <line x1={from.x} y1={from.y} x2={to.x} y2={to.y} stroke="var(--accent)" strokeWidth="2" />
       <path
         d="M0 0l-11 -5v10z"
-        transform={`translate(${tip.x} ${tip.y}) rotate(${direction})`}
+        transform={`translate(${to.x} ${to.y}) rotate(${direction})`}
         fill="var(--accent)"
       />
     </g>
   );
 }
 
-function AngleText({ angleDeg, x, y }: { angleDeg: number; x: number; y: number }) {
+function AngleText({ angleDeg, x, y, apart }: { angleDeg: number; x: number; y: number; apart: number }) {
   const half = ((angleDeg / 2) * Math.PI) / 180;
+  const steep = angleDeg < 14;
   return (
     <text
-      x={x - 80 * Math.sin(half)}
+      x={steep ? x - apart - 80 * Math.sin(2 * half) - 8 : x - 80 * Math.sin(half)}
       y={y - 80 * Math.cos(half)}
-      textAnchor={angleDeg < 12 ? 'end' : 'middle'}
-      dx={angleDeg < 12 ? -12 - (12 - angleDeg) : 0}
+      textAnchor={steep ? 'end' : 'middle'}
       fontSize="12"
       fill="var(--ink)"
     >
@@ -141,8 +132,17 @@ type LensProps = {
 function Lens({ at, width, input, rotationDeg, ellipticityDeg, factor }: LensProps) {
   const ratio = Math.min(1, Math.abs(Math.tan((Math.min(44, Math.abs(ellipticityDeg)) * Math.PI) / 180)));
   const place = { x: Math.min(Math.max(at.x, 24), width - 24), y: Math.max(at.y, 36) };
-  const words = factor === 1 ? 'tilt as it is' : `tilt drawn × ${formatCount(factor)}`;
-  const textX = Math.min(place.x, width - 44);
+  const words =
+    rotationDeg === 0 && ellipticityDeg === 0
+      ? 'not turned'
+      : factor === 1
+        ? 'tilt as it is'
+        : `tilt drawn × ${formatCount(factor)}`;
+  // Beside the lens where there is room, else above it: the ray goes on up and to the right.
+  const beside = width - place.x > 132;
+  const text = beside
+    ? { x: place.x + 28, y: place.y + 18 }
+    : { x: Math.min(place.x, width - 50), y: place.y - 28 };
   return (
     <g>
       <g transform={`translate(${place.x} ${place.y})`}>
@@ -157,7 +157,7 @@ function Lens({ at, width, input, rotationDeg, ellipticityDeg, factor }: LensPro
           transform={`rotate(${-rotationDeg})`}
         />
       </g>
-      <text x={textX} y={place.y - 26} textAnchor="middle" fontSize="11" fill="var(--muted)">
+      <text x={text.x} y={text.y} textAnchor={beside ? 'start' : 'middle'} fontSize="11" fill="var(--muted)">
         {words}
         <title>
           The small ellipse is the reflected polarization for {input} light, looking into the beam.

@@ -7,6 +7,7 @@ import { issueTarget } from '../model/issueTarget.ts';
 import type { PointReadings } from '../model/solveStates.ts';
 import { Beam } from './Beam.tsx';
 import { CrossSection } from './CrossSection.tsx';
+import { FilmCautions } from './FilmCautions.tsx';
 import { FilmContext } from './film.ts';
 import { IncidentMedium } from './IncidentMedium.tsx';
 
@@ -59,6 +60,7 @@ export function FilmDrawing({
         </span>
       </div>
       <CrossSection document={document} />
+      <FilmCautions document={document} />
       <p role="status" className="sr-only">
         {said}
       </p>

@@ -24,7 +24,7 @@ type Props = {
   position: string;
   height: number;
   /** Depth of its lower face, nm; null where the tick would say nothing new. */
-  depthNm: number;
+  depthNm: number | null;
   dragged: boolean;
   onGrab?: ((id: string) => (event: PointerEvent) => void) | undefined;
 };
@@ -128,7 +128,7 @@ export const LayerRow = memo(function LayerRow({ layer, position, height, depthN
         issues={ownIssues.filter(({ path }) => path !== 'thicknessNm')}
         onChange={edit ? (medium) => change({ medium }, null) : undefined}
       />
-      <DepthTick depthNm={depthNm} />
+      {depthNm !== null && <DepthTick depthNm={depthNm} />}
     </li>
   );
 });

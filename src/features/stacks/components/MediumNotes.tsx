@@ -14,16 +14,15 @@ type Props = {
 /** What stands in the way of a medium's constants, at the medium, with what can be done about it. */
 export function MediumNotes({ medium, magnetized, issues, onChange }: Props) {
   const { materials, rangeNm } = useFilm();
-  const notes = mediumNotes(medium, materials, rangeNm, magnetized);
+  // Cautions stand below the drawing, once for all layers of the material.
+  const notes = mediumNotes(medium, materials, rangeNm, magnetized).filter(({ tone }) => tone === 'problem');
   // The page knows most of it before the server says so; then it is said once.
-  const shownIssues = notes.some(({ tone }) => tone === 'problem')
-    ? issues.filter(({ path }) => !path.endsWith('material'))
-    : issues;
+  const shownIssues = notes.length > 0 ? issues.filter(({ path }) => !path.endsWith('material')) : issues;
   if (notes.length === 0 && shownIssues.length === 0) return null;
   return (
     <div className="mx-2 mb-1.5 flex flex-col gap-1 rounded-box bg-paper/90 px-2 py-1 text-small">
-      {notes.map(({ tone, text, offer }) => (
-        <p key={text} className={tone === 'problem' ? 'text-danger' : 'text-warn'}>
+      {notes.map(({ text, offer }) => (
+        <p key={text} className="text-danger">
           <TriangleAlert aria-hidden="true" className="mr-1 inline size-3 align-[-1px]" />
           {text}{' '}
           {offer && onChange && (

@@ -2,8 +2,9 @@ import { useMemo } from 'react';
 import type { ReactNode } from 'react';
 import type { AxisKind, SweepAxis } from '../../../../shared/run.ts';
 import type { StackDocument } from '../../../../shared/stack.ts';
-import { ReadingControls } from '../../../components/plot/ReadingControls.tsx';
+import { FamilyControls, ScaleControls } from '../../../components/plot/ReadingControls.tsx';
 import { ReadingPlot } from '../../../components/plot/ReadingPlot.tsx';
+import { usePlotHeight } from '../../../components/plot/usePlotHeight.ts';
 import { PlotButton } from '../../../components/plot/PlotToolbar.tsx';
 import { families, readingsOf } from '../../../components/plot/readingView.ts';
 import type { Family, Light } from '../../../components/plot/readingView.ts';
@@ -31,6 +32,9 @@ type Props = {
   keep: ((sweep: { axis: SweepAxis; problem: boolean }) => ReactNode) | null;
 };
 
+/** Header, working point, readings and controls above the plot and its margin below, px. */
+const PAGE_ABOVE_PLOT = 420;
+
 const kinds = [
   { value: 'wavelength', label: 'wavelength' },
   { value: 'angle', label: 'angle' },
@@ -40,6 +44,7 @@ const kinds = [
 /** The plot of the current question: which quantity is swept, over what, and which readings are drawn. */
 export function SweepPanel({ title, document, materials, view, transverse, onView, keep }: Props) {
   const axis = useMemo(() => currentAxis(view, document, materials), [view, document, materials]);
+  const plotHeight = usePlotHeight(PAGE_ABOVE_PLOT);
   const shown = view.shown ?? defaultFamilies(transverse);
   const light: Light = view.light ?? view.point.input;
   const readings = useMemo(() => readingsOf(shown, light), [shown, light]);
@@ -71,14 +76,17 @@ export function SweepPanel({ title, document, materials, view, transverse, onVie
           </p>
         ) : (
           <div className="card mt-1.5 px-4 pt-2.5 pb-2">
-            <AxisForm
-              axis={axis}
-              layers={layers}
-              onChange={(next) => onView({ axis: next })}
-              onChooseLayer={(layerId) =>
-                onView({ axis: defaultAxis('thickness', document, materials, layerId) })
-              }
-            />
+            <div className="flex flex-wrap items-center justify-between gap-x-3 gap-y-1">
+              <AxisForm
+                axis={axis}
+                layers={layers}
+                onChange={(next) => onView({ axis: next })}
+                onChooseLayer={(layerId) =>
+                  onView({ axis: defaultAxis('thickness', document, materials, layerId) })
+                }
+              />
+              <ScaleControls log={view.log} unit={view.unit} onChange={onView} />
+            </div>
             <div className="mt-1 border-t border-line pt-1.5">
               {sweep.drawn ? (
                 <div
@@ -95,32 +103,34 @@ export function SweepPanel({ title, document, materials, view, transverse, onVie
                     readings={readings}
                     unit={view.unit}
                     log={view.log}
-                    height={336}
+                    height={plotHeight}
                     marker={markerOf(sweep.drawn.axis, document, view)}
                     onPickX={
                       sweep.drawn.axis.kind === 'thickness' ? undefined : (x) => onView(picked(axis, x, view))
                     }
                     fileName={`${title} ${axis.kind}`}
                     controls={
-                      <>
-                        <ReadingControls
-                          families={families}
-                          lights="ps"
-                          shown={shown}
-                          light={light}
-                          log={view.log}
-                          unit={view.unit}
-                          onChange={onView}
-                        />
-                        <PlotButton label="Download the values as CSV" onClick={() => saveCsv(title, sweep)}>
-                          CSV
-                        </PlotButton>
-                      </>
+                      <FamilyControls
+                        families={families}
+                        lights="ps"
+                        shown={shown}
+                        light={light}
+                        onChange={onView}
+                      />
+                    }
+                    downloads={
+                      <PlotButton label="Download the values as CSV" onClick={() => saveCsv(title, sweep)}>
+                        CSV
+                      </PlotButton>
                     }
                   />
                 </div>
               ) : (
-                <div className="flex h-[372px] items-center justify-center text-muted" role="status">
+                <div
+                  className="flex items-center justify-center text-muted"
+                  style={{ height: plotHeight + 36 }}
+                  role="status"
+                >
                   {sweep.error ? '' : 'Solving the film'}
                 </div>
               )}

@@ -11,7 +11,7 @@ const RADIANS = Math.PI / 180;
  */
 export function incomingRay(angleDeg: number, frame: BeamFrame): { start: Point; end: Point } {
   const [sin, cos] = [Math.sin(angleDeg * RADIANS), Math.cos(angleDeg * RADIANS)];
-  const toSide = sin > 0 ? (frame.x - 6) / sin : Infinity;
+  const toSide = sin > 0 ? (Math.min(frame.x, frame.width - frame.x) - 6) / sin : Infinity;
   const toTop = cos > 0 ? (frame.surface - 8) / cos : Infinity;
   const length = Math.min(toSide, toTop, 205);
   return {
@@ -24,6 +24,18 @@ export function incomingRay(angleDeg: number, frame: BeamFrame): { start: Point;
 export function outgoingRay(angleDeg: number, frame: BeamFrame): { start: Point; end: Point } {
   const { start, end } = incomingRay(angleDeg, frame);
   return { start: end, end: { x: 2 * frame.x - start.x, y: start.y } };
+}
+
+/**
+ * How far apart, to either side, the two rays are drawn near normal incidence, where they would cover each other.
+ * They keep their angle.
+ *
+ * @param share where along the outgoing ray something wide stands
+ * @param halfWidth of that, px
+ */
+export function raysApart(angleDeg: number, frame: BeamFrame, share: number, halfWidth: number): number {
+  const { start } = incomingRay(angleDeg, frame);
+  return Math.max(3, halfWidth - share * (frame.x - start.x));
 }
 
 /** The arc between normal and incoming ray, as an SVG path. */

@@ -60,6 +60,7 @@ function format(family: StripReading['family'], value: number, unit: AngleUnit):
     case 'cross':
       return formatNumber(value * 1000);
     case 'contrast':
-      return formatNumber(value, { signed: true });
+      // A difference of two reflectances: below this it is the rounding of doubles, not a signal.
+      return Math.abs(value) < 1e-13 ? '0' : formatNumber(value, { signed: true });
   }
 }
