@@ -18,22 +18,12 @@ export function formatPath(path: readonly Key[]): string {
  *
  * @param error what `safeParse` returned
  * @param input the value that was parsed; its offending parts are quoted in the messages
- * @param notYet keys that are part of the contract but not available yet, with what to say of them
  */
-export function describeIssues(
-  error: z.ZodError,
-  input: unknown,
-  notYet: Readonly<Record<string, string>> = {},
-): Issue[] {
-  return error.issues.flatMap((issue) => describe(issue, [], input, notYet));
+export function describeIssues(error: z.ZodError, input: unknown): Issue[] {
+  return error.issues.flatMap((issue) => describe(issue, [], input));
 }
 
-function describe(
-  issue: ZodIssue,
-  base: readonly Key[],
-  input: unknown,
-  notYet: Readonly<Record<string, string>>,
-): Issue[] {
+function describe(issue: ZodIssue, base: readonly Key[], input: unknown): Issue[] {
   const path = [...base, ...issue.path];
   const here = valueAt(input, path);
   if (issue.code === 'invalid_union') {
@@ -47,13 +37,13 @@ function describe(
         },
       ];
     }
-    return branch.flatMap((inner) => describe(inner, path, input, notYet));
+    return branch.flatMap((inner) => describe(inner, path, input));
   }
   if (issue.code === 'unrecognized_keys') {
     const messages = issue.message.split('\n');
     return issue.keys.map((key, index) => ({
       path: formatPath([...path, key]),
-      message: notYet[key] ?? messages[index] ?? 'is not a known key',
+      message: messages[index] ?? 'is not a known key',
     }));
   }
   return [{ path: formatPath(path), message: sentence(issue, here) }];

@@ -41,7 +41,8 @@ export const readingDefinitions: Record<ReadingName, ReadingDefinition> = {
 
 /** The part of a solved point that the readings are made of; the worker and the client both hold it. */
 export type ReadingSource = Pick<SolvePoint, 'R' | 'T' | 'A' | 'kerr'> & {
-  r: Pick<SolvePoint['r'], 'sp' | 'ps'>;
+  /** Null where intensities add and there is no amplitude. */
+  r: Pick<NonNullable<SolvePoint['r']>, 'sp' | 'ps'> | null;
 };
 
 /**
@@ -70,9 +71,9 @@ export function readingOf(
     case 'reflectanceS':
       return given.R.s;
     case 'crossSp':
-      return Math.hypot(...given.r.sp);
+      return given.r && Math.hypot(...given.r.sp);
     case 'crossPs':
-      return Math.hypot(...given.r.ps);
+      return given.r && Math.hypot(...given.r.ps);
     case 'contrastP':
       return contrast(given.R.p, reversed.R.p);
     case 'contrastS':

@@ -66,8 +66,22 @@ const caseFields = {
   }),
 };
 
+/** What a case may ask for beside the standard answer. */
+export const solveOutputs = ['mueller', 'faraday', 'contributions', 'depth', 'ceiling'] as const;
+export type SolveOutput = (typeof solveOutputs)[number];
+
+const outputs = z.array(z.enum(solveOutputs)).optional();
+
+/** A thick slab substrate whose inner reflections add in intensity; its bare back face looks at `exit`. */
+const backsideFields = {
+  incoherent: z.literal(true),
+  thicknessNm: z.number().min(0),
+};
+
 export const solveCaseSchema = strictObject({
   ...caseFields,
+  outputs,
+  backside: strictObject({ ...backsideFields, exit: mediumSchema }).optional(),
   incident: mediumSchema,
   layers: z.array(stackItemSchema),
   substrate: mediumSchema,
@@ -75,6 +89,8 @@ export const solveCaseSchema = strictObject({
 
 export const librarySolveCaseSchema = strictObject({
   ...caseFields,
+  outputs,
+  backside: strictObject({ ...backsideFields, exit: libraryMediumSchema }).optional(),
   incident: libraryMediumSchema,
   layers: z.array(libraryStackItemSchema),
   substrate: libraryMediumSchema,
@@ -99,16 +115,64 @@ const kerrAnglesSchema = z.object({ rotationDeg: z.number(), ellipticityDeg: z.n
 
 const polarizedSchema = z.object({ p: z.number(), s: z.number() });
 
+const muellerSchema = z
+  .array(z.array(z.number()))
+  .meta({ description: '4x4, rows and columns S0..S3, not normalized; basis p, s.' });
+
+const shareSchema = z.object({ sp: complexPairSchema, ps: complexPairSchema, pp: complexPairSchema });
+
+/** What each magnetic layer adds to the reflected amplitudes, to first order in Q, and what that leaves out. */
+export const contributionsSchema = z.object({
+  layers: z.array(
+    shareSchema.extend({
+      path: z
+        .string()
+        .meta({ description: 'the layer as written, such as layers[2].layers[0], or substrate' }),
+      /** Position in the expanded stack, counted from the light; the substrate comes last. */
+      position: z.int(),
+      depthNm: z.number().meta({ description: 'depth of its upper face' }),
+    }),
+  ),
+  /** Sum of the shares. */
+  total: shareSchema,
+  /** r_sp and r_ps of the full answer, and its r_pp less that of the stack with m = 0. */
+  exact: shareSchema,
+});
+
+/** Fields and losses against depth; for p and s light of unit amplitude and power. Lists run in step. */
+export const depthSchema = z.object({
+  depthNm: z.array(z.number()),
+  position: z.array(z.int()),
+  field: z.object({ p: z.array(z.number()), s: z.array(z.number()) }),
+  absorbedPerNm: z.object({ p: z.array(z.number()), s: z.array(z.number()) }),
+  /** Density of the first-order r_sp. */
+  signalPerNm: z.array(complexPairSchema),
+});
+
+/** First-order bounds on |r_sp|: of this stack, and of its magnetic materials in any stack. Null without loss. */
+export const ceilingSchema = z.object({
+  stack: z.number().nullable(),
+  material: z.number().nullable(),
+  /** |r_sp| over the material's ceiling. */
+  shareReached: z.number().nullable(),
+});
+
 /** One solved point; definitions and signs are those of the conventions page. */
 export const solvePointSchema = z.object({
   wavelengthNm: z.number(),
   angleDeg: z.number(),
-  r: jonesSchema,
+  r: jonesSchema.nullable().meta({ description: 'null with an incoherent backside' }),
   t: jonesSchema.nullable(),
   R: polarizedSchema,
   T: polarizedSchema,
   A: polarizedSchema,
   kerr: z.object({ p: kerrAnglesSchema, s: kerrAnglesSchema }),
+  degreeOfPolarization: polarizedSchema.optional(),
+  mueller: muellerSchema.optional(),
+  faraday: z.object({ p: kerrAnglesSchema, s: kerrAnglesSchema }).nullable().optional(),
+  contributions: contributionsSchema.nullable().optional(),
+  depth: depthSchema.optional(),
+  ceiling: ceilingSchema.optional(),
 });
 
 export const solveWarningSchema = z.object({ case: z.int(), path: z.string(), message: z.string() });

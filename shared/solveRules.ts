@@ -5,12 +5,6 @@ import { LIMITS } from './limits.ts';
 import type { LibraryMediumInput } from './medium.ts';
 import type { LibrarySolveCase, LibrarySolveRequest, LibraryStackItemInput } from './solve.ts';
 
-/** Keys of the contract that a later version brings; until then they are refused in these words. */
-export const NOT_AVAILABLE_YET = {
-  outputs: 'is not available yet',
-  backside: 'is not available yet',
-} as const;
-
 /**
  * The rules of a request that need more than one field: counts of samples, the incident medium, depth and size of
  * blocks, number of points. The request has passed its schema. (Warnings come with the answer: worker/optics/warnings.ts.)
@@ -30,6 +24,11 @@ export function checkSolveRequest(
     points += wavelengths * (Array.isArray(one.angleDeg) ? one.angleDeg.length : 1);
     forEachMedium(one, (medium, where) => checkSamples(medium, `${path}.${where}`, wavelengths, issues));
     checkIncident(one.incident, `${path}.incident`, issues);
+    if (one.backside) {
+      checkIsotropic(one.substrate, `${path}.substrate`, 'the slab of an incoherent backside', issues);
+      checkIsotropic(one.backside.exit, `${path}.backside.exit`, 'the exit medium', issues);
+      checkBacksideOutputs(one.outputs ?? [], `${path}.outputs`, issues);
+    }
     const expanded = expandedLayers(one.layers, `${path}.layers`, 0, issues);
     if (expanded > LIMITS.expandedLayers) {
       issues.push({
@@ -77,6 +76,28 @@ function checkSamples(medium: LibraryMediumInput, path: string, wavelengths: num
       });
     }
   }
+}
+
+/** A thick slab and what lies behind it have one index each (physics.md section 6). */
+function checkIsotropic(medium: LibraryMediumInput, path: string, what: string, issues: Issue[]): void {
+  for (const key of ['extraordinary', 'quadratic', 'epsilon'] as const) {
+    if (medium[key] !== undefined) {
+      issues.push({ path: `${path}.${key}`, message: `${what} must be isotropic: give index only` });
+    }
+  }
+  const isMagnetic = medium.voigt !== undefined && medium.m?.some((component) => component !== 0);
+  if (isMagnetic) issues.push({ path: `${path}.voigt`, message: `${what} must not be magnetic` });
+}
+
+/** Where intensities add there are no amplitudes to take apart. */
+function checkBacksideOutputs(outputs: readonly string[], path: string, issues: Issue[]): void {
+  outputs.forEach((output, index) => {
+    if (output === 'mueller') return;
+    issues.push({
+      path: `${path}[${index}]`,
+      message: `${output} needs amplitudes, which an incoherent backside does not have; ask for it without backside`,
+    });
+  });
 }
 
 /** Light must arrive from an isotropic, lossless, non-magnetic medium (physics.md section 1). */
@@ -131,4 +152,5 @@ export function forEachMedium(
   visit(one.incident, 'incident');
   visitItems(one.layers, 'layers');
   visit(one.substrate, 'substrate');
+  if (one.backside) visit(one.backside.exit, 'backside.exit');
 }

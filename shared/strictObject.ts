@@ -9,7 +9,7 @@ export function strictObject<Shape extends z.core.$ZodLooseShape>(shape: Shape) 
   return z.strictObject(shape, {
     error: (issue) =>
       issue.code === 'unrecognized_keys'
-        ? (issue['keys']).map((key) => unknownKey(key, known)).join('\n')
+        ? issue['keys'].map((key) => unknownKey(key, known)).join('\n')
         : undefined,
   });
 }

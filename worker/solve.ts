@@ -5,7 +5,7 @@ import type { ErrorEnvelope, Issue } from '../shared/error.ts';
 import { LIMITS } from '../shared/limits.ts';
 import type { SolveRequest } from '../shared/solve.ts';
 import { solveRequestSchema } from '../shared/solve.ts';
-import { checkSolveRequest, NOT_AVAILABLE_YET } from '../shared/solveRules.ts';
+import { checkSolveRequest } from '../shared/solveRules.ts';
 import { solveCasePoints } from './optics/solveRequest.ts';
 import { solveWarnings } from './optics/warnings.ts';
 
@@ -47,9 +47,14 @@ function parseRequest(input: unknown): SolveRequest {
         maxPoints: LIMITS.commandLinePoints,
         beyond: 'split them over several calls',
       })
-    : describeIssues(parsed.error, input, NOT_AVAILABLE_YET);
+    : describeIssues(parsed.error, input);
   if (!parsed.success || issues.length > 0) {
-    throw new Refusal(issues.map((issue) => `${issue.path}: ${issue.message}`).join('\n'), issues);
+    throw new Refusal(
+      issues
+        .map(({ path, message }) => (path === '' ? `the input ${message}` : `${path}: ${message}`))
+        .join('\n'),
+      issues,
+    );
   }
   return parsed.data;
 }
@@ -84,6 +89,9 @@ async function writeResults(request: SolveRequest): Promise<void> {
   const warnings = solveWarnings(request);
   await write(warnings.length > 0 ? `],"warnings":${JSON.stringify(warnings)}}\n` : ']}\n');
 }
+
+// A reader that has seen enough, such as head, closes the pipe: stop without a stack trace.
+process.stdout.on('error', (error: NodeJS.ErrnoException) => process.exit(error.code === 'EPIPE' ? 0 : 1));
 
 try {
   await writeResults(parseRequest(await readInput(process.argv[2])));

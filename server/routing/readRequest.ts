@@ -1,7 +1,6 @@
 import type { Request } from 'express';
 import type { ZodType } from 'zod';
 import { describeIssues } from '../../shared/issues.ts';
-import { NOT_AVAILABLE_YET } from '../../shared/solveRules.ts';
 import { invalid } from '../errors.ts';
 import { hostileParts } from './hostileParts.ts';
 
@@ -28,5 +27,5 @@ function parse(schema: ZodType, input: unknown): unknown {
   if (hostile.length > 0) throw invalid(hostile);
   const parsed = schema.safeParse(input);
   if (parsed.success) return parsed.data;
-  throw invalid(describeIssues(parsed.error, input, NOT_AVAILABLE_YET));
+  throw invalid(describeIssues(parsed.error, input));
 }

@@ -27,8 +27,11 @@ export class CompiledStack {
   readonly #byPath = new Map<string, WrittenLayer>();
   #loaded = -1;
 
-  /** @param solveCase a case that has passed `solveCaseSchema` and `checkSolveRequest` */
-  constructor(solveCase: SolveCase) {
+  /**
+   * @param solveCase a case that has passed `solveCaseSchema` and `checkSolveRequest`
+   * @param options.separateLayers every layer of the expanded stack has a medium of its own, for `isolateGyration`
+   */
+  constructor(solveCase: SolveCase, options: { separateLayers?: boolean } = {}) {
     this.wavelengthsNm = Float64Array.from([solveCase.wavelengthNm].flat());
     this.anglesDeg = Float64Array.from([solveCase.angleDeg].flat());
     this.#incidentIndex = samplesOf(solveCase.incident.index, toComplex) ?? [[1, 0]];
@@ -43,7 +46,8 @@ export class CompiledStack {
       return medium;
     };
     this.substrate = mediumOf(solveCase.substrate);
-    this.sequence = this.#compile(solveCase.layers, [], mediumOf);
+    const layers = this.#compile(solveCase.layers, [], mediumOf);
+    this.sequence = options.separateLayers ? this.#separated(layers) : layers;
   }
 
   #compile(
@@ -63,6 +67,27 @@ export class CompiledStack {
       this.#byPath.set(here.join('/'), layer);
       return layer;
     });
+  }
+
+  #separated(layers: WrittenLayer[]): WrittenLayer[] {
+    const separate = layers.map((layer) => ({ ...layer, medium: layer.medium.copy() }));
+    this.written.length = 0;
+    this.media.length = 0;
+    this.media.push(this.substrate);
+    for (const layer of separate) {
+      this.written.push(layer);
+      this.media.push(layer.medium);
+    }
+    return separate;
+  }
+
+  /** Leaves one layer of a separated stack its gyration, times `factor`; the substrate comes last. */
+  isolateGyration(position: number, factor: number): void {
+    const media = [...this.sequence.map((layer) => layer.medium), this.substrate];
+    media.forEach((medium, index) => {
+      medium.gyrationScale = index === position ? factor : 0;
+    });
+    this.#loaded = -1;
   }
 
   /** Index of the incident medium; complex only for light that comes from inside a slab. */

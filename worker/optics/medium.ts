@@ -2,6 +2,7 @@ import type { Complex, ComplexInput, Vector } from '../../shared/complex.ts';
 import { toComplex } from '../../shared/complex.ts';
 import type { MediumInput, TensorInput } from '../../shared/medium.ts';
 import { minus, plus, times } from './complexNumber.ts';
+import type { Geometry } from './geometry.ts';
 import type { QuadraticConstants, Tensor } from './tensor.ts';
 import {
   addGyration,
@@ -9,6 +10,7 @@ import {
   addUniaxial,
   createTensor,
   isMultipleOfIdentity,
+  scaleAntisymmetricPart,
   setScalar,
 } from './tensor.ts';
 
@@ -47,7 +49,10 @@ export class Medium {
   /** Q at the loaded wavelength; 0 without magneto-optic data. */
   voigt: Complex = [0, 0];
   readonly m: Vector;
+  /** The part of the tensor that is odd in m counts this many times; for taking layers apart. */
+  gyrationScale = 1;
 
+  readonly #input: MediumInput;
   readonly #index: Sampled<Complex> | null;
   readonly #voigt: Sampled<Complex> | null;
   readonly #extraordinary: Sampled<Complex> | null;
@@ -57,6 +62,7 @@ export class Medium {
 
   /** @param input a medium that has passed `mediumSchema` */
   constructor(input: MediumInput) {
+    this.#input = input;
     this.#index = samplesOf(input.index, toComplex);
     this.#voigt = samplesOf(input.voigt, toComplex);
     this.#extraordinary = samplesOf(input.extraordinary, toComplex);
@@ -76,6 +82,11 @@ export class Medium {
     return medium;
   }
 
+  /** The same constants with a state of their own. */
+  copy(): Medium {
+    return new Medium(this.#input);
+  }
+
   /** Some constant is given per wavelength. */
   get isSampled(): boolean {
     return [this.#index, this.#voigt, this.#extraordinary, this.#epsilon].some(
@@ -83,9 +94,15 @@ export class Medium {
     );
   }
 
+  /** The tensor has a part that is odd in m. */
+  get isGyrotropic(): boolean {
+    return this.#epsilon !== null || (this.#voigt !== null && this.m.some((component) => component !== 0));
+  }
+
   load(wavelengthIndex: number): void {
     if (this.#epsilon) {
       this.tensor.set(sampleAt(this.#epsilon, wavelengthIndex));
+      if (this.gyrationScale !== 1) scaleAntisymmetricPart(this.tensor, this.gyrationScale);
       this.index = null;
       this.scalarDiagonal = false;
       this.isotropic = isMultipleOfIdentity(this.tensor);
@@ -99,7 +116,7 @@ export class Medium {
     this.scalarDiagonal = true;
     if (this.#extraordinary && this.#axis) {
       const extraordinary = sampleAt(this.#extraordinary, wavelengthIndex);
-      addUniaxial(this.tensor, permittivity, times(extraordinary, extraordinary), this.#axis);
+      addUniaxial(this.tensor, index, extraordinary, this.#axis);
       this.scalarDiagonal = false;
     }
     if (this.#quadratic) {
@@ -108,21 +125,22 @@ export class Medium {
     }
     if (this.#voigt) {
       this.voigt = sampleAt(this.#voigt, wavelengthIndex);
-      addGyration(this.tensor, permittivity, this.voigt, this.m);
+      addGyration(this.tensor, permittivity, this.voigt, this.m, this.gyrationScale);
     }
     this.isotropic = isMultipleOfIdentity(this.tensor);
   }
 
   /**
-   * eps_yy - xi^2, written so that nothing cancels near grazing incidence in a layer that has the index of the
-   * incident medium: (N - N0)(N + N0) + q0^2, since xi^2 = N0^2 - q0^2.
+   * eps_yy - xi^2. Far from normal incidence it is written with xi^2 = N0^2 - q0^2 as (N - N0)(N + N0) + q0^2, so
+   * that nothing cancels near grazing incidence in a layer that has the index of the incident medium.
    */
-  yyLessXi2(incidentIndex: number, q0: number): Complex {
+  yyLessXi2({ n0, xi, q0 }: Geometry): Complex {
+    if (xi < q0) return [this.tensor[8]! - xi * xi, this.tensor[9]!];
     if (this.index && (this.scalarDiagonal || this.isotropic)) {
-      const n0: Complex = [incidentIndex, 0];
-      return plus(times(minus(this.index, n0), plus(this.index, n0)), [q0 * q0, 0]);
+      const incident: Complex = [n0, 0];
+      return plus(times(minus(this.index, incident), plus(this.index, incident)), [q0 * q0, 0]);
     }
-    return [this.tensor[8]! - incidentIndex * incidentIndex + q0 * q0, this.tensor[9]!];
+    return [this.tensor[8]! - n0 * n0 + q0 * q0, this.tensor[9]!];
   }
 }
 

@@ -1,12 +1,13 @@
 import type { Complex } from '../../shared/complex.ts';
 import { forwardRoot, minus, modulus, over, plus, scaled, squareRoot, times } from './complexNumber.ts';
+import type { Geometry } from './geometry.ts';
 import type { Matrix2 } from './matrix2.ts';
 import { createMatrix2, invert, subtract } from './matrix2.ts';
 import { Medium } from './medium.ts';
 import type { Quartic, RootPair } from './quartic.ts';
 import { quarticRoots, refinePair } from './quartic.ts';
 import type { WaveEquation } from './waveEquation.ts';
-import { gainBound } from './tensor.ts';
+import { gainOf } from './tensor.ts';
 import { secularQuartic, waveEquation } from './waveEquation.ts';
 
 /**
@@ -45,24 +46,19 @@ export class Modes {
     this.medium = medium;
   }
 
-  /**
-   * @param incidentIndex N0
-   * @param xi N0 sin(theta)
-   * @param q0 N0 cos(theta)
-   */
-  update(incidentIndex: number, xi: number, q0: number): void {
+  update(geometry: Geometry): void {
     const { medium } = this;
     this.isotropic = medium.isotropic;
     if (medium.isotropic) {
-      this.q = forwardRoot(medium.yyLessXi2(incidentIndex, q0));
+      this.q = forwardRoot(medium.yyLessXi2(geometry));
       // At a critical angle the wave neither enters nor leaves; a trace of q keeps the formulas finite.
       if (this.q[0] === 0 && this.q[1] === 0) this.q = [1e-150, 0];
       this.zp = over(this.q, [medium.tensor[0]!, medium.tensor[1]!]);
       return;
     }
-    const equation = waveEquation(medium, incidentIndex, xi, q0);
+    const equation = waveEquation(medium, geometry);
     const quartic = secularQuartic(equation);
-    const pair = refinePair(quartic, forwardPair(medium, quartic, incidentIndex, xi, q0));
+    const pair = refinePair(quartic, forwardPair(medium, quartic, geometry));
     fillBeam(this.forward, equation, pair);
     fillBeam(this.backward, equation, otherPair(quartic, pair));
     subtract(this.zStep, this.forward.z, this.backward.z);
@@ -75,44 +71,51 @@ function createBeam(): Beam {
   return { half: zero(), h: zero(), p12: zero(), p21: zero(), splitting: zero(), z: createMatrix2() };
 }
 
-/** Loss added to tell forward from backward waves in a lossless medium (limiting absorption), relative to the tensor. */
+/** Loss added to tell forward from backward waves in a lossless medium (limiting absorption), by the tensor's size. */
 const SORTING_LOSS = 1e-6;
 
 /**
  * A first guess of sum and product of the two forward wave numbers.
  *
  * A weak magnet with scalar diagonal starts from its quartic without the linear term, which is of second order in
- * Q: u^2 then solves a quadratic. Any other tensor has all four roots found and sorted by decay, with a trace of
- * loss added so that lossless waves sort by the direction of their energy.
+ * Q: u^2 then solves a quadratic. Any other tensor has all four roots found, and those taken that lie nearest to the
+ * two forward ones of the same medium with a trace of loss, where forward waves are the ones that decay.
  */
-function forwardPair(
-  medium: Medium,
-  quartic: Quartic,
-  incidentIndex: number,
-  xi: number,
-  q0: number,
-): RootPair {
+function forwardPair(medium: Medium, quartic: Quartic, geometry: Geometry): RootPair {
   const { c2, c1, c0 } = quartic;
-  const weak =
+  const isWeak =
     modulus(c1) < 0.02 * modulus(c2) ** 1.5 &&
     modulus(minus(times(c2, c2), scaled(c0, 4))) < 0.2 * modulus(c2) ** 2;
-  if (medium.scalarDiagonal && weak) {
+  if (medium.scalarDiagonal && isWeak) {
     const centre = scaled(c2, -0.5);
     const spread = squareRoot(minus(times(centre, centre), c0));
-    const u1 = forwardRoot(plus(centre, spread));
-    const u2 = forwardRoot(minus(centre, spread));
-    return { sum: plus(u1, u2), product: times(u1, u2) };
+    return pairOf(forwardRoot(plus(centre, spread)), forwardRoot(minus(centre, spread)));
   }
-  const lossy = withLoss(medium);
-  const roots = quarticRoots(secularQuartic(waveEquation(lossy, incidentIndex, xi, q0)));
-  const [u1, u2] = roots.sort((a, b) => b[1] - a[1]) as [Complex, Complex];
+  const roots = quarticRoots(quartic);
+  const lossy = quarticRoots(secularQuartic(waveEquation(withLoss(medium), geometry)));
+  const [first, second] = lossy.sort((a, b) => b[1] - a[1]);
+  const u1 = takeNearest(roots, first!);
+  const u2 = takeNearest(roots, second!);
+  return pairOf(u1, u2);
+}
+
+function pairOf(u1: Complex, u2: Complex): RootPair {
   return { sum: plus(u1, u2), product: times(u1, u2) };
+}
+
+/** Takes the root nearest to `target` out of `roots`. */
+function takeNearest(roots: Complex[], target: Complex): Complex {
+  let nearest = 0;
+  for (let i = 1; i < roots.length; i++) {
+    if (modulus(minus(roots[i]!, target)) < modulus(minus(roots[nearest]!, target))) nearest = i;
+  }
+  return roots.splice(nearest, 1)[0]!;
 }
 
 /** The loaded medium as a bare tensor, made passive and then lossy by SORTING_LOSS of its size. */
 function withLoss(medium: Medium): Medium {
   const lossy = Medium.fromTensor(medium.tensor);
-  const loss = SORTING_LOSS * Math.max(...medium.tensor.map(Math.abs)) + gainBound(medium.tensor);
+  const loss = SORTING_LOSS * Math.max(...medium.tensor.map(Math.abs)) + gainOf(medium.tensor);
   for (const i of [1, 9, 17]) lossy.tensor[i] = lossy.tensor[i]! + loss;
   return lossy;
 }

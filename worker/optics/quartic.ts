@@ -61,6 +61,7 @@ export function refinePair(quartic: Quartic, start: RootPair): RootPair {
   let { sum, product } = start;
   const { c3, c2, c1, c0 } = quartic;
   let best = Infinity;
+  const reach = 0.3 * (modulus(start.sum) + Math.sqrt(modulus(start.product)));
   for (let step = 0; step < 12; step++) {
     // Division of the quartic by the factor: quotient u^2 + d1 u + d0, remainder r1 u + r0.
     const d1 = plus(c3, sum);
@@ -83,5 +84,6 @@ export function refinePair(quartic: Quartic, start: RootPair): RootPair {
     product = plus(product, dProduct);
     if (change <= 1e-17 * (modulus(sum) + modulus(product))) break;
   }
-  return { sum, product };
+  // Gone to another pair of roots: the start, good to half the digits, is the better answer.
+  return modulus(minus(sum, start.sum)) > reach ? start : { sum, product };
 }

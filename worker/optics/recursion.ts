@@ -49,7 +49,7 @@ const step = createMatrix2();
  */
 export class LayerStep {
   readonly modes: Modes;
-  readonly #layer: { thicknessNm: number };
+  readonly layer: { readonly thicknessNm: number };
   /** Isotropic: exp(i k0 d q), its square e, and 1 - e without cancellation. */
   #phiRe = 1;
   #phiIm = 0;
@@ -62,14 +62,14 @@ export class LayerStep {
   readonly #up = createMatrix2();
 
   /** @param layer its thickness is read anew at each update */
-  constructor(modes: Modes, layer: { thicknessNm: number }) {
+  constructor(modes: Modes, layer: { readonly thicknessNm: number }) {
     this.modes = modes;
-    this.#layer = layer;
+    this.layer = layer;
   }
 
   /** @param k0 vacuum wave number, 1/nm */
   update(k0: number): void {
-    const phase = k0 * this.#layer.thicknessNm;
+    const phase = k0 * this.layer.thicknessNm;
     const { modes } = this;
     if (!modes.isotropic) {
       propagate(this.#down, modes.forward, phase, 1);

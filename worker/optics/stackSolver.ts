@@ -2,7 +2,7 @@ import type { Complex } from '../../shared/complex.ts';
 import type { SolveCase } from '../../shared/solve.ts';
 import type { WrittenLayer } from './compiledStack.ts';
 import { CompiledStack } from './compiledStack.ts';
-import { forwardRoot, over, scaled, times } from './complexNumber.ts';
+import { forwardRoot, minus, over, plus, scaled, times } from './complexNumber.ts';
 import type { Geometry } from './geometry.ts';
 import { incidenceGeometry } from './geometry.ts';
 import type { Matrix2 } from './matrix2.ts';
@@ -53,8 +53,8 @@ export class StackSolver {
   };
 
   /** @param solveCase a case that has passed `solveCaseSchema` and `checkSolveRequest` */
-  constructor(solveCase: SolveCase) {
-    this.stack = new CompiledStack(solveCase);
+  constructor(solveCase: SolveCase, options: { separateLayers?: boolean } = {}) {
+    this.stack = new CompiledStack(solveCase, options);
     const modes = new Map(this.stack.media.map((medium) => [medium, new Modes(medium)]));
     this.#modes = [...modes.values()];
     this.#substrate = modes.get(this.stack.substrate)!;
@@ -111,9 +111,8 @@ export class StackSolver {
    */
   solveAmplitudes(wavelengthIndex: number, geometry: Geometry, index: Complex, q: Complex): void {
     this.stack.load(wavelengthIndex);
-    const { n0, xi, q0 } = geometry;
     const k0 = (2 * Math.PI) / this.wavelengthsNm[wavelengthIndex]!;
-    for (const modes of this.#modes) modes.update(n0, xi, q0);
+    for (const modes of this.#modes) modes.update(geometry);
     for (const step of this.#steps.values()) step.update(k0);
     this.#state.start(this.#substrate);
     for (const step of this.#upward) step.cross(this.#state);
@@ -126,18 +125,24 @@ export class StackSolver {
    */
   #leave(n0: Complex, q0: Complex): void {
     const { m, n, chain } = this.#state;
-    const product = this.#product;
-    const inverse = this.#inverse;
     const { point } = this;
+    const x = this.#product;
+    const inverse = this.#inverse;
     const zp = over(q0, times(n0, n0));
-    scaleRows(product, m, zp[0], zp[1], q0[0], q0[1]);
-    add(inverse, product, n);
+    scaleRows(x, m, zp[0], zp[1], q0[0], q0[1]);
+    add(inverse, x, n);
     invert(inverse, inverse);
-    subtract(product, product, n);
-    multiply(point.r, product, inverse);
-    const inverseIndex = over([1, 0], n0);
-    scaleElement(point.r, 2, n0);
-    scaleElement(point.r, 4, inverseIndex);
+    subtract(point.r, x, n);
+    multiply(point.r, point.r, inverse);
+    // The cross terms of the same product without their cancellation near grazing incidence, X = Z0 M:
+    // 2 (X21 N22 - N21 X22) / det(X + N), and the like.
+    const at = (matrix: Matrix2, i: number): Complex => [matrix[i]!, matrix[i + 1]!];
+    const sum = (i: number): Complex => plus(at(x, i), at(n, i));
+    const twice = over([2, 0], minus(times(sum(0), sum(6)), times(sum(2), sum(4))));
+    const ps = minus(times(at(x, 2), at(n, 0)), times(at(n, 2), at(x, 0)));
+    const sp = minus(times(at(x, 4), at(n, 6)), times(at(n, 4), at(x, 6)));
+    point.r.set(times(times(ps, twice), n0), 2);
+    point.r.set(over(times(sp, twice), n0), 4);
     // x at the substrate for unit p (first column) and s light.
     multiply(this.#exit, chain, inverse);
     const p = over(scaled(q0, 2), n0);
@@ -175,10 +180,4 @@ export class StackSolver {
     scaleRows(this.#transmission, x, inverse[0], inverse[1], 1, 0);
     return this.#transmission;
   }
-}
-
-function scaleElement(matrix: Matrix2, at: 2 | 4, factor: Complex): void {
-  const value = times([matrix[at]!, matrix[at + 1]!], factor);
-  matrix[at] = value[0];
-  matrix[at + 1] = value[1];
 }

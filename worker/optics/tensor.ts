@@ -1,5 +1,5 @@
 import type { Complex, Vector } from '../../shared/complex.ts';
-import { modulus, times } from './complexNumber.ts';
+import { minus, modulus, plus, times } from './complexNumber.ts';
 
 /** Element (row, column) of a tensor as a complex number; rows and columns count from 0. */
 export function element(tensor: Tensor, row: number, column: number): Complex {
@@ -35,23 +35,27 @@ export function setScalar(out: Tensor, permittivity: Complex): void {
  * Adds the first order in m (physics.md section 2): for m = +z, eps_xy = i Q eps_d and eps_yx = -i Q eps_d,
  * and cyclic in x, y, z.
  */
-export function addGyration(out: Tensor, permittivity: Complex, voigt: Complex, m: Vector): void {
+export function addGyration(out: Tensor, permittivity: Complex, voigt: Complex, m: Vector, factor = 1): void {
   const [re, im] = times(voigt, permittivity);
   for (let axis = 0; axis < 3; axis++) {
     const row = (axis + 1) % 3;
     const column = (axis + 2) % 3;
-    const length = m[axis]!;
+    const length = factor * m[axis]!;
     addTo(out, row, column, -im * length, re * length);
     addTo(out, column, row, im * length, -re * length);
   }
 }
 
-/** Adds (eps_e - eps_o) n n^T for a uniaxial medium with optic axis n (any length but zero). */
+/**
+ * Adds (eps_e - eps_o) n n^T for a uniaxial medium with optic axis n (any length but zero). The difference is taken
+ * as (Ne - No)(Ne + No), so that a weak birefringence keeps its digits.
+ *
+ * @param ordinary No, extraordinary Ne: refractive indices
+ */
 export function addUniaxial(out: Tensor, ordinary: Complex, extraordinary: Complex, axis: Vector): void {
   const length = Math.hypot(axis[0], axis[1], axis[2]);
   const n = [axis[0] / length, axis[1] / length, axis[2] / length];
-  const re = extraordinary[0] - ordinary[0];
-  const im = extraordinary[1] - ordinary[1];
+  const [re, im] = times(minus(extraordinary, ordinary), plus(extraordinary, ordinary));
   for (let row = 0; row < 3; row++) {
     for (let column = 0; column < 3; column++) {
       const weight = n[row]! * n[column]!;
@@ -102,6 +106,24 @@ export function addQuadratic(out: Tensor, constants: QuadraticConstants, m: Vect
   }
 }
 
+/** The part odd in m is the antisymmetric one (Onsager): eps = symmetric + factor times antisymmetric. */
+export function scaleAntisymmetricPart(tensor: Tensor, factor: number): void {
+  for (const [row, column] of [
+    [0, 1],
+    [0, 2],
+    [1, 2],
+  ] as const) {
+    for (const part of [0, 1]) {
+      const a = at(row, column) + part;
+      const b = at(column, row) + part;
+      const even = (tensor[a]! + tensor[b]!) / 2;
+      const odd = (factor * (tensor[a]! - tensor[b]!)) / 2;
+      tensor[a] = even + odd;
+      tensor[b] = even - odd;
+    }
+  }
+}
+
 /** True when the tensor is exactly a multiple of the unit tensor. */
 export function isMultipleOfIdentity(tensor: Tensor): boolean {
   for (let row = 0; row < 3; row++) {
@@ -122,17 +144,6 @@ function loss(tensor: Tensor, i: number, j: number): Complex {
   return [(tensor[a + 1]! + tensor[b + 1]!) / 2, (tensor[b]! - tensor[a]!) / 2];
 }
 
-/** How much isotropic loss surely makes the medium passive: 0 for one that is (Gershgorin's circles). */
-export function gainBound(tensor: Tensor): number {
-  let bound = 0;
-  for (let i = 0; i < 3; i++) {
-    let reach = -loss(tensor, i, i)[0];
-    for (let j = 0; j < 3; j++) if (j !== i) reach += modulus(loss(tensor, i, j));
-    bound = Math.max(bound, reach);
-  }
-  return bound;
-}
-
 /**
  * True when (eps - eps^H)/2i has no negative eigenvalue beyond rounding, that is when the medium gives no energy.
  * A Hermitian 3x3 matrix is positive semidefinite when all its principal minors are >= 0 (Sylvester's criterion,
@@ -149,4 +160,21 @@ export function isPassive(tensor: Tensor): boolean {
   if (Math.min(d0 * d1 - l01, d0 * d2 - l02, d1 * d2 - l12) < -slack * size) return false;
   const cycle = times(times(loss(tensor, 0, 1), loss(tensor, 1, 2)), loss(tensor, 2, 0))[0];
   return d0 * d1 * d2 + 2 * cycle - d0 * l12 - d1 * l02 - d2 * l01 >= -slack * size * size;
+}
+
+/**
+ * How much isotropic loss makes the medium passive: less the smallest eigenvalue of the loss matrix where that is
+ * negative, else 0. Closed form for a Hermitian 3x3 matrix (Smith, Commun. ACM 4, 168 (1961)).
+ */
+export function gainOf(tensor: Tensor): number {
+  if (isPassive(tensor)) return 0;
+  const d = [0, 1, 2].map((i) => loss(tensor, i, i)[0]) as [number, number, number];
+  const [l01, l12, l20] = [loss(tensor, 0, 1), loss(tensor, 1, 2), loss(tensor, 2, 0)];
+  const mean = (d[0] + d[1] + d[2]) / 3;
+  const [e0, e1, e2] = [d[0] - mean, d[1] - mean, d[2] - mean];
+  const [s01, s12, s20] = [modulus(l01) ** 2, modulus(l12) ** 2, modulus(l20) ** 2];
+  const spread = Math.sqrt((e0 * e0 + e1 * e1 + e2 * e2 + 2 * (s01 + s12 + s20)) / 6);
+  const determinant = e0 * e1 * e2 + 2 * times(times(l01, l12), l20)[0] - e0 * s12 - e1 * s20 - e2 * s01;
+  const half = Math.min(1, Math.max(-1, determinant / (2 * spread ** 3)));
+  return -(mean + 2 * spread * Math.cos(Math.acos(half) / 3 + (2 * Math.PI) / 3));
 }

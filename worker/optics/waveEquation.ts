@@ -1,5 +1,6 @@
 import type { Complex } from '../../shared/complex.ts';
-import { minus, over, plus, scaled, times } from './complexNumber.ts';
+import { minus, modulus, over, plus, scaled, times } from './complexNumber.ts';
+import type { Geometry } from './geometry.ts';
 import type { Medium } from './medium.ts';
 import type { Quartic } from './quartic.ts';
 import { element } from './tensor.ts';
@@ -30,13 +31,9 @@ export type WaveEquation = {
   kappa: Complex;
 };
 
-/**
- * @param medium loaded at the wavelength
- * @param incidentIndex N0
- * @param xi N0 sin(theta)
- * @param q0 N0 cos(theta)
- */
-export function waveEquation(medium: Medium, incidentIndex: number, xi: number, q0: number): WaveEquation {
+/** @param medium loaded at the wavelength */
+export function waveEquation(medium: Medium, geometry: Geometry): WaveEquation {
+  const { xi } = geometry;
   const e = (row: number, column: number) => element(medium.tensor, row, column);
   const [xx, xy, xz, yx, yy, yz, zx, zy, zz] = [
     e(0, 0),
@@ -49,8 +46,8 @@ export function waveEquation(medium: Medium, incidentIndex: number, xi: number, 
     e(2, 1),
     e(2, 2),
   ];
-  const yyLessXi2 = medium.yyLessXi2(incidentIndex, q0);
-  const kappa = minus(xx, over(times(xz, zx), zz));
+  const yyLessXi2 = medium.yyLessXi2(geometry);
+  const kappa = awayFromZero(minus(xx, over(times(xz, zx), zz)), modulus(xx));
   const eta1 = minus(xy, over(times(xz, zy), zz));
   const eta2 = minus(yx, over(times(yz, zx), zz));
   const xiXz = scaled(over(xz, zz), -xi);
@@ -74,6 +71,12 @@ export function waveEquation(medium: Medium, incidentIndex: number, xi: number, 
     a12: eta1,
     kappa,
   };
+}
+
+/** kappa vanishes for |Q| = 1 across the plane of incidence, where the medium acts like one of permittivity 0. */
+function awayFromZero(kappa: Complex, scale: number): Complex {
+  const least = 1e-13 * scale;
+  return modulus(kappa) < least ? [least, 0] : kappa;
 }
 
 /** det(u^2 - u U + V) as a quartic in u. */

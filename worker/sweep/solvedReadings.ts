@@ -13,7 +13,7 @@ const WEAK_AMPLITUDE = 0.1;
  * make millions of objects.
  */
 export class SolvedReadings implements ReadingSource {
-  readonly r: ReadingSource['r'] = { sp: [0, 0], ps: [0, 0] };
+  readonly r: NonNullable<ReadingSource['r']> = { sp: [0, 0], ps: [0, 0] };
   R: ReadingSource['R'] = { p: 0, s: 0 };
   T: ReadingSource['T'] = { p: 0, s: 0 };
   A: ReadingSource['A'] = { p: 0, s: 0 };
