@@ -5,6 +5,7 @@ import { RequireSession } from './features/session/components/RequireSession.tsx
 import { paths } from './lib/paths.ts';
 import { AppLayout } from './routes/layout/AppLayout.tsx';
 import { RouteError } from './routes/layout/RouteError.tsx';
+import { StartingUp } from './routes/layout/StartingUp.tsx';
 
 /** A page whose code is fetched when it is first opened. */
 function page(path: string, load: () => Promise<ComponentType>): RouteObject {
@@ -49,7 +50,7 @@ export function createRouter() {
   return createBrowserRouter([
     {
       Component: AppLayout,
-      HydrateFallback: () => null,
+      HydrateFallback: StartingUp,
       children: [
         {
           ErrorBoundary: RouteError,

@@ -5,7 +5,10 @@ import { Mark } from './Mark.tsx';
 export type ShellLink = {
   to: string;
   label: string;
-  /** Whether only the exact address counts as here. */ exact?: boolean;
+  /** Whether only the exact address counts as here. */
+  exact?: boolean;
+  /** For what stands at the right where there is room, and in the row of links where there is not. */
+  narrowOnly?: boolean;
 };
 
 type AppShellProps = {
@@ -50,7 +53,7 @@ export function AppShell({ home, links, right, banner, children }: AppShellProps
                 to={link.to}
                 end={link.exact ?? false}
                 className={({ isActive }) =>
-                  `py-1 no-underline hover:text-ink ${isActive ? 'font-semibold text-ink' : 'text-muted'}`
+                  `py-1 no-underline hover:text-ink ${link.narrowOnly ? 'md:hidden' : ''} ${isActive ? 'font-semibold text-ink' : 'text-muted'}`
                 }
               >
                 {link.label}

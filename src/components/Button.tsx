@@ -5,15 +5,15 @@ import { Link } from 'react-router-dom';
 export type ButtonTone = 'primary' | 'quiet' | 'plain' | 'danger';
 
 const shape =
-  'inline-flex items-center justify-center gap-1.5 rounded-control px-3.5 py-[7px] text-body font-semibold leading-[1.35] whitespace-nowrap no-underline transition-colors disabled:cursor-not-allowed disabled:opacity-55 aria-disabled:opacity-55';
+  'inline-flex items-center justify-center gap-1.5 rounded-control px-3.5 py-[7px] text-body leading-[1.35] whitespace-nowrap no-underline transition-colors disabled:cursor-not-allowed disabled:opacity-55 aria-disabled:opacity-55';
 
 const tones: Record<ButtonTone, string> = {
-  primary: 'bg-accent text-on-accent border border-accent enabled:hover:opacity-90',
+  primary: 'bg-accent text-on-accent font-semibold border border-accent enabled:hover:opacity-90',
   quiet:
     'border border-edge bg-panel text-ink font-medium enabled:hover:bg-accent-soft [a&]:hover:bg-accent-soft',
   plain:
     'border border-transparent text-accent font-medium enabled:hover:bg-accent-soft [a&]:hover:bg-accent-soft',
-  danger: 'border border-danger bg-panel text-danger enabled:hover:bg-danger-soft',
+  danger: 'border border-danger font-semibold bg-panel text-danger enabled:hover:bg-danger-soft',
 };
 
 type Look = { tone?: ButtonTone; icon?: ReactNode };

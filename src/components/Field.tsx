@@ -58,7 +58,9 @@ export function FormError({ message }: { message: string | undefined }) {
     <div
       role="alert"
       className={
-        message ? 'rounded-control bg-danger-soft px-3 py-2 text-note whitespace-pre-line text-danger' : ''
+        message
+          ? 'rounded-control bg-danger-soft px-3 py-2 text-note whitespace-pre-line text-danger'
+          : 'hidden'
       }
     >
       {message}

@@ -1,17 +1,19 @@
-import { Link, Outlet, ScrollRestoration, generatePath } from 'react-router-dom';
+import { useQuery } from '@tanstack/react-query';
+import { Link, Outlet, ScrollRestoration, generatePath, useNavigation } from 'react-router-dom';
 import { AppShell } from '../../components/AppShell.tsx';
 import { ButtonLink } from '../../components/Button.tsx';
 import { ConnectionBanner } from '../../components/ConnectionBanner.tsx';
+import { sessionQuery } from '../../features/session/api/session.ts';
 import { GroupMenu } from '../../features/session/components/GroupMenu.tsx';
 import { PersonMenu } from '../../features/session/components/PersonMenu.tsx';
 import { useCurrentGroup } from '../../features/session/hooks/useCurrentGroup.ts';
 import { useReconnect } from '../../features/session/hooks/useReconnect.ts';
-import { useSession } from '../../features/session/hooks/useSession.ts';
 import { paths } from '../../lib/paths.ts';
 
 /** Header and frame of every page, signed in or not. */
 export function AppLayout() {
-  const session = useSession();
+  const { data: session } = useQuery(sessionQuery());
+  const fetchingPage = useNavigation().state === 'loading';
   const group = useCurrentGroup();
   const connection = useReconnect();
   const links = group
@@ -19,6 +21,7 @@ export function AppLayout() {
         { to: generatePath(paths.groupHome, { groupId: group.groupId }), label: 'Stacks', exact: true },
         { to: generatePath(paths.materials, { groupId: group.groupId }), label: 'Materials' },
         { to: generatePath(paths.runs, { groupId: group.groupId }), label: 'Runs' },
+        { to: paths.conventions, label: 'Conventions', narrowOnly: true },
       ]
     : [];
   return (
@@ -31,20 +34,23 @@ export function AppLayout() {
           {session && group ? <GroupMenu groups={session.groups} current={group} /> : null}
           <Link
             to={paths.conventions}
-            className="rounded-control px-2 py-1.5 text-muted no-underline hover:bg-accent-soft hover:text-accent max-[420px]:hidden"
+            className={`rounded-control px-2 py-1.5 text-muted no-underline hover:bg-accent-soft hover:text-accent ${group ? 'max-md:hidden' : ''}`}
           >
             Conventions
           </Link>
           {session ? (
             <PersonMenu session={session} />
-          ) : (
+          ) : session === null ? (
             <ButtonLink to={paths.signIn} tone="plain">
               Sign in
             </ButtonLink>
-          )}
+          ) : null}
         </>
       }
     >
+      {fetchingPage ? (
+        <div aria-hidden="true" className="fixed inset-x-0 top-0 z-50 h-0.5 animate-pulse bg-accent" />
+      ) : null}
       <Outlet />
       <ScrollRestoration />
     </AppShell>

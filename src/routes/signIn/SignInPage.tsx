@@ -1,8 +1,9 @@
-import { Link, useLocation, useNavigate } from 'react-router-dom';
+import { Link, Navigate, useLocation, useNavigate } from 'react-router-dom';
 import { NarrowPage } from '../../components/NarrowPage.tsx';
 import { DemoSignIns } from '../../features/session/components/DemoSignIns.tsx';
 import { SignInForm } from '../../features/session/components/SignInForm.tsx';
 import { useReturnPath } from '../../features/session/hooks/useReturnPath.ts';
+import { useSession } from '../../features/session/hooks/useSession.ts';
 import { paths } from '../../lib/paths.ts';
 
 export function SignInPage() {
@@ -10,6 +11,7 @@ export function SignInPage() {
   const { search } = useLocation();
   const back = useReturnPath();
   const onSignedIn = () => void navigate(back, { replace: true });
+  if (useSession()) return <Navigate to={back} replace />;
   return (
     <NarrowPage title="Sign in">
       <p className="-mt-2 text-muted">
