@@ -100,15 +100,14 @@ export async function createRun(
 }
 
 /** The same input once more, with today's solver. */
-export async function rerunRun(
-  { models, jobs }: RunDependencies,
-  actor: Person,
-  { groupId, stackId, stackVersion, stackName, name, ...run }: Run,
-): Promise<Run> {
-  const { input, materials, assumptions, warnings, inputSha256, total } = run;
+export async function rerunRun({ models, jobs }: RunDependencies, actor: Person, run: Run): Promise<Run> {
+  const { groupId, stackId, stackVersion, stackName, name, total } = run;
+  const { input, materials, assumptions, warnings, inputSha256 } = run;
   return storeRun({ models, jobs }, actor, 'run.rerun', {
-    ...{ groupId, stackId, stackVersion, stackName, name, input, materials, assumptions, warnings },
-    ...{ inputSha256, total, solverVersion: SOLVER_VERSION, createdById: actor.userId },
+    ...{ groupId, stackId, stackVersion, stackName, name, total },
+    ...{ input, materials, assumptions, warnings, inputSha256 },
+    solverVersion: SOLVER_VERSION,
+    createdById: actor.userId,
   });
 }
 
