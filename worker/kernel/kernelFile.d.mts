@@ -1,0 +1,2 @@
+export function projectFolder(from?: string): string;
+export function kernelFile(root?: string): string;

@@ -1,0 +1,236 @@
+import { add, at, both, im, inverseNorm, mul, put, re, sub, V } from './simd.as';
+
+// A repeated block as a whole: the 4x4 matrix that takes (f, h) from its lower to its upper face.
+//   matrix   rows f1, f2, h1, h2; element (row, column) in slots 8 row + 2 column and the next
+
+/** The matrix of a plain layer, as in plain.as. */
+export function matrixPlain(pairs: i32, layer: usize, matrix: usize): void {
+  memory.fill(matrix, 0, <usize>pairs * 32 * V);
+  for (let i = 0; i < pairs; i++) {
+    for (let part: usize = 0; part < 2; part++) {
+      const c = at(layer, part);
+      put(matrix, part, c);
+      put(matrix, 10 + part, c);
+      put(matrix, 20 + part, c);
+      put(matrix, 30 + part, c);
+      put(matrix, 4 + part, at(layer, 4 + part));
+      put(matrix, 14 + part, at(layer, 2 + part));
+      put(matrix, 16 + part, f64x2.neg(at(layer, 6 + part)));
+      put(matrix, 26 + part, f64x2.neg(at(layer, 8 + part)));
+    }
+    layer += 14 * V;
+    matrix += 32 * V;
+  }
+}
+
+/** The matrix of a gyrotropic layer: exp(k0 d K) taken from (f, lambda f) to (f, h). */
+export function matrixGyrotropic(pairs: i32, gyro: usize, stride: usize, map: usize, matrix: usize): void {
+  for (let i = 0; i < pairs; i++) {
+    const a1Re = at(map, 24);
+    const a1Im = at(map, 25);
+    const u12Re = at(gyro, 6);
+    const u12Im = at(gyro, 7);
+    const u21Re = at(gyro, 8);
+    const u21Im = at(gyro, 9);
+    const kRe = at(gyro, 2);
+    const kIm = at(gyro, 3);
+    for (let row: usize = 0; row < 2; row++) {
+      const e1Re = at(map, 4 * row);
+      const e1Im = at(map, 4 * row + 1);
+      const e2Re = at(map, 4 * row + 2);
+      const e2Im = at(map, 4 * row + 3);
+      const f1Re = at(map, 8 + 4 * row);
+      const f1Im = at(map, 9 + 4 * row);
+      const f2Re = at(map, 10 + 4 * row);
+      const f2Im = at(map, 11 + 4 * row);
+      const f = matrix + 8 * row * V;
+      // f rows: E11 + E12 A, E12 B
+      put(f, 0, add(e1Re, re(f1Re, f1Im, a1Re, a1Im)));
+      put(f, 1, add(e1Im, im(f1Re, f1Im, a1Re, a1Im)));
+      put(f, 2, add(e2Re, re(f1Re, f1Im, u12Re, u12Im)));
+      put(f, 3, add(e2Im, im(f1Re, f1Im, u12Re, u12Im)));
+      put(f, 4, re(f1Re, f1Im, kRe, kIm));
+      put(f, 5, im(f1Re, f1Im, kRe, kIm));
+      put(f, 6, f2Re);
+      put(f, 7, f2Im);
+      // lambda f rows: E22 = E11 + E12 U, then -E12 V + E22 A and E22 B
+      const g1Re = add(e1Re, re(f2Re, f2Im, u21Re, u21Im));
+      const g1Im = add(e1Im, im(f2Re, f2Im, u21Re, u21Im));
+      const g2Re = add(e2Re, re(f1Re, f1Im, u12Re, u12Im));
+      const g2Im = add(e2Im, im(f1Re, f1Im, u12Re, u12Im));
+      const w = matrix + (16 + 8 * row) * V;
+      for (let column: usize = 0; column < 4; column += 2) {
+        const v1Re = at(map, 16 + column);
+        const v1Im = at(map, 17 + column);
+        const v2Re = at(map, 20 + column);
+        const v2Im = at(map, 21 + column);
+        const xRe = column === 0 ? a1Re : u12Re;
+        const xIm = column === 0 ? a1Im : u12Im;
+        put(
+          w,
+          column,
+          sub(re(g1Re, g1Im, xRe, xIm), add(re(f1Re, f1Im, v1Re, v1Im), re(f2Re, f2Im, v2Re, v2Im))),
+        );
+        put(
+          w,
+          column + 1,
+          sub(im(g1Re, g1Im, xRe, xIm), add(im(f1Re, f1Im, v1Re, v1Im), im(f2Re, f2Im, v2Re, v2Im))),
+        );
+      }
+      put(w, 4, re(g1Re, g1Im, kRe, kIm));
+      put(w, 5, im(g1Re, g1Im, kRe, kIm));
+      put(w, 6, g2Re);
+      put(w, 7, g2Im);
+    }
+    // h1 = (lambda f1 - A1 f)/kappa; h2 = lambda f2 as it stands.
+    const pRe = at(gyro, 4);
+    const pIm = at(gyro, 5);
+    for (let column: usize = 0; column < 8; column += 2) {
+      const f1Re = at(matrix, column);
+      const f1Im = at(matrix, column + 1);
+      const f2Re = at(matrix, 8 + column);
+      const f2Im = at(matrix, 9 + column);
+      const lRe = sub(
+        at(matrix, 16 + column),
+        add(re(a1Re, a1Im, f1Re, f1Im), re(u12Re, u12Im, f2Re, f2Im)),
+      );
+      const lIm = sub(
+        at(matrix, 17 + column),
+        add(im(a1Re, a1Im, f1Re, f1Im), im(u12Re, u12Im, f2Re, f2Im)),
+      );
+      put(matrix, 16 + column, re(lRe, lIm, pRe, pIm));
+      put(matrix, 17 + column, im(lRe, lIm, pRe, pIm));
+    }
+    gyro += stride;
+    map += 26 * V;
+    matrix += 32 * V;
+  }
+}
+
+/** A plain layer on top of what `matrix` holds, in place: rows f and h of one polarization mix. */
+export function stackPlain(pairs: i32, layer: usize, matrix: usize): void {
+  for (let i = 0; i < pairs; i++) {
+    const cRe = at(layer, 0);
+    const cIm = at(layer, 1);
+    for (let polarization: usize = 0; polarization < 2; polarization++) {
+      const upRe = at(layer, 4 - 2 * polarization);
+      const upIm = at(layer, 5 - 2 * polarization);
+      const downRe = at(layer, 6 + 2 * polarization);
+      const downIm = at(layer, 7 + 2 * polarization);
+      const f = matrix + 8 * polarization * V;
+      for (let column: usize = 0; column < 8; column += 2) {
+        const fRe = at(f, column);
+        const fIm = at(f, column + 1);
+        const hRe = at(f, 16 + column);
+        const hIm = at(f, 17 + column);
+        put(f, column, add(re(cRe, cIm, fRe, fIm), re(upRe, upIm, hRe, hIm)));
+        put(f, column + 1, add(im(cRe, cIm, fRe, fIm), im(upRe, upIm, hRe, hIm)));
+        put(f, 16 + column, sub(re(cRe, cIm, hRe, hIm), re(downRe, downIm, fRe, fIm)));
+        put(f, 17 + column, sub(im(cRe, cIm, hRe, hIm), im(downRe, downIm, fRe, fIm)));
+      }
+    }
+    layer += 14 * V;
+    matrix += 32 * V;
+  }
+}
+
+/** product = upper lower; must not overlap. */
+export function multiply(pairs: i32, upper: usize, lower: usize, product: usize): void {
+  for (let i = 0; i < pairs; i++) {
+    for (let row: usize = 0; row < 32; row += 8) {
+      const aRe = at(upper, row);
+      const aIm = at(upper, row + 1);
+      const bRe = at(upper, row + 2);
+      const bIm = at(upper, row + 3);
+      const cRe = at(upper, row + 4);
+      const cIm = at(upper, row + 5);
+      const dRe = at(upper, row + 6);
+      const dIm = at(upper, row + 7);
+      for (let column: usize = 0; column < 8; column += 2) {
+        const xRe = at(lower, column);
+        const xIm = at(lower, column + 1);
+        const yRe = at(lower, column + 8);
+        const yIm = at(lower, column + 9);
+        let sumRe = add(re(aRe, aIm, xRe, xIm), re(bRe, bIm, yRe, yIm));
+        let sumIm = add(im(aRe, aIm, xRe, xIm), im(bRe, bIm, yRe, yIm));
+        const zRe = at(lower, column + 16);
+        const zIm = at(lower, column + 17);
+        const wRe = at(lower, column + 24);
+        const wIm = at(lower, column + 25);
+        sumRe = add(sumRe, add(re(cRe, cIm, zRe, zIm), re(dRe, dIm, wRe, wIm)));
+        sumIm = add(sumIm, add(im(cRe, cIm, zRe, zIm), im(dRe, dIm, wRe, wIm)));
+        put(product, row + column, sumRe);
+        put(product, row + column + 1, sumIm);
+      }
+    }
+    upper += 32 * V;
+    lower += 32 * V;
+    product += 32 * V;
+  }
+}
+
+/** Crosses the block: [M; N] = matrix [1; Y] to `work` (0-7 and 8-15). */
+export function crossMatrix(pairs: i32, matrix: usize, state: usize, work: usize): void {
+  for (let i = 0; i < pairs; i++) {
+    for (let row: usize = 0; row < 4; row++) {
+      const cRe = at(matrix, 8 * row + 4);
+      const cIm = at(matrix, 8 * row + 5);
+      const dRe = at(matrix, 8 * row + 6);
+      const dIm = at(matrix, 8 * row + 7);
+      for (let column: usize = 0; column < 4; column += 2) {
+        const xRe = at(state, column);
+        const xIm = at(state, column + 1);
+        const yRe = at(state, column + 4);
+        const yIm = at(state, column + 5);
+        put(
+          work,
+          4 * row + column,
+          add(at(matrix, 8 * row + column), add(re(cRe, cIm, xRe, xIm), re(dRe, dIm, yRe, yIm))),
+        );
+        put(
+          work,
+          4 * row + column + 1,
+          add(at(matrix, 8 * row + column + 1), add(im(cRe, cIm, xRe, xIm), im(dRe, dIm, yRe, yIm))),
+        );
+      }
+    }
+    matrix += 32 * V;
+    state += 8 * V;
+    work += 16 * V;
+  }
+}
+
+/** Y' = N M^-1 from `work`. */
+export function settle(pairs: i32, work: usize, state: usize): void {
+  for (let i = 0; i < pairs; i++) {
+    const aRe = at(work, 0);
+    const aIm = at(work, 1);
+    const bRe = at(work, 2);
+    const bIm = at(work, 3);
+    const cRe = at(work, 4);
+    const cIm = at(work, 5);
+    const dRe = at(work, 6);
+    const dIm = at(work, 7);
+    const detRe = sub(re(aRe, aIm, dRe, dIm), re(bRe, bIm, cRe, cIm));
+    const detIm = sub(im(aRe, aIm, dRe, dIm), im(bRe, bIm, cRe, cIm));
+    const scale = inverseNorm(detRe, detIm);
+    const invRe = mul(detRe, scale);
+    const invIm = f64x2.neg(mul(detIm, scale));
+    for (let row: usize = 0; row < 8; row += 4) {
+      const n1Re = at(work, 8 + row);
+      const n1Im = at(work, 9 + row);
+      const n2Re = at(work, 10 + row);
+      const n2Im = at(work, 11 + row);
+      const lRe = sub(re(n1Re, n1Im, dRe, dIm), re(n2Re, n2Im, cRe, cIm));
+      const lIm = sub(im(n1Re, n1Im, dRe, dIm), im(n2Re, n2Im, cRe, cIm));
+      const rRe = sub(re(n2Re, n2Im, aRe, aIm), re(n1Re, n1Im, bRe, bIm));
+      const rIm = sub(im(n2Re, n2Im, aRe, aIm), im(n1Re, n1Im, bRe, bIm));
+      put(state, row, re(lRe, lIm, invRe, invIm));
+      put(state, row + 1, im(lRe, lIm, invRe, invIm));
+      put(state, row + 2, re(rRe, rIm, invRe, invIm));
+      put(state, row + 3, im(rRe, rIm, invRe, invIm));
+    }
+    work += 16 * V;
+    state += 8 * V;
+  }
+}
