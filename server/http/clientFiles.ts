@@ -13,7 +13,7 @@ export function clientFiles(directory: string): Router {
   const router = Router();
   router.use(express.static(directory, { index: false, setHeaders: setCaching }));
   router.get('/{*splat}', (request, response) => {
-    if (path.extname(request.path) !== '') {
+    if (/\.\w+$/.test(request.path)) {
       response.status(404).type('text/plain').send('There is no such file.\n');
       return;
     }

@@ -1,0 +1,68 @@
+import { randomUUID } from 'node:crypto';
+import { QueryTypes, Sequelize } from 'sequelize';
+import { afterAll, beforeAll, expect, test } from 'vitest';
+import { buildContent, buildMaterial } from '../../tests/factories.ts';
+import { createModels } from '../models/models.ts';
+import type { Models } from '../models/models.ts';
+import { migrate, migrateDown } from './migrate.ts';
+
+const name = `skewlight_migrations_${randomUUID().slice(0, 8)}`;
+const testUrl = process.env['TEST_DATABASE_URL'] ?? '';
+const scratchUrl = Object.assign(new URL(testUrl), { pathname: `/${name}` }).toString();
+const admin = new Sequelize(testUrl, { logging: false });
+let models: Models;
+beforeAll(async () => {
+  await admin.query(`CREATE DATABASE ${name}`);
+  models = createModels(scratchUrl);
+});
+afterAll(async () => {
+  await models.sequelize.close();
+  await admin.query(`DROP DATABASE ${name}`);
+  await admin.close();
+});
+
+const tables = async () => {
+  const rows = await models.sequelize.query<{ name: string }>(
+    `SELECT table_name AS name FROM information_schema.tables WHERE table_schema = 'public' ORDER BY 1`,
+    { type: QueryTypes.SELECT },
+  );
+  return rows.map((row) => row.name);
+};
+
+test('servers that start together take every step once; all steps have a way down, and up again', async () => {
+  const [first, second] = await Promise.all([migrate(scratchUrl), migrate(scratchUrl)]);
+  expect([first.length, second.length].sort()).toEqual([0, Math.max(first.length, second.length)]);
+  const made = await tables();
+  const taken = first.length > 0 ? first : second;
+  expect(made).toEqual(
+    expect.arrayContaining(['users', 'stacks', 'materials', 'runs', 'share_links', 'activity']),
+  );
+  expect(await migrateDown(scratchUrl)).toEqual([...taken].reverse());
+  expect(await tables()).toEqual(['schema_migrations']);
+  expect(await migrate(scratchUrl)).toEqual(taken);
+  expect(await tables()).toEqual(made);
+  expect(await migrate(scratchUrl)).toEqual([]);
+});
+
+test('every model fits its table', async () => {
+  await migrate(scratchUrl);
+  for (const model of Object.values(models.sequelize.models)) {
+    expect(await model.findAll()).toEqual([]);
+    const columns = Object.keys(
+      await models.sequelize.getQueryInterface().describeTable(model.getTableName()),
+    );
+    const fields = Object.values(model.getAttributes()).map((attribute) => attribute.field);
+    expect(columns.sort()).toEqual(fields.sort());
+  }
+});
+
+test('the database itself keeps a version of a material as it is', async () => {
+  await migrate(scratchUrl);
+  const material = await buildMaterial(models, { id: 'kept' });
+  const change = models.MaterialVersion.update(
+    { content: buildContent({ voigt: null, voigtSource: null }) },
+    { where: { materialId: 'kept' } },
+  );
+  await expect(change).rejects.toThrow(/never changed/);
+  await material.destroy();
+});

@@ -1,0 +1,107 @@
+import path from 'node:path';
+import { afterAll, beforeAll, describe, expect, test } from 'vitest';
+import type { LibraryEntry } from '../../shared/material.ts';
+import { librarySolveRequestSchema } from '../../shared/solve.ts';
+import { toSolveCase } from '../../shared/stackCase.ts';
+import { loadLibrary } from '../../worker/dispersion/loadLibrary.ts';
+import type { ApiServer } from '../../tests/apiServer.ts';
+import { startApiServer } from '../../tests/apiServer.ts';
+import { buildContent } from '../../tests/factories.ts';
+import { projectRoot } from '../projectRoot.ts';
+import { hashSecret } from '../services/secrets.ts';
+import { solve } from '../services/solve.ts';
+import { seedDemo } from './demo.ts';
+import { DEMO_LINK_TOKEN, DEMO_PASSWORD, readDemoData } from './demoData.ts';
+import { revokeDemoLink, seedDemoRun } from './demoRun.ts';
+import { seedLibrary } from './library.ts';
+
+let api: ApiServer;
+const library = loadLibrary(path.join(projectRoot, 'data', 'library'));
+beforeAll(async () => {
+  api = await startApiServer({ compute: true });
+  await seedLibrary(api.models, library);
+});
+afterAll(() => api.stop());
+
+describe('the shipped library', () => {
+  const entry: LibraryEntry = {
+    id: `seeded-${Date.now()}`,
+    name: 'Testium',
+    formula: 'Te',
+    class: 'magnet',
+    preferred: false,
+    notes: ['One'],
+    content: buildContent(),
+  };
+  const versions = () =>
+    api.models.MaterialVersion.findAll({ where: { materialId: entry.id }, order: ['version'] });
+
+  test('is there, and seeding again changes nothing', async () => {
+    expect(library.length).toBeGreaterThanOrEqual(35);
+    const before = await api.models.MaterialVersion.count();
+    await Promise.all([seedLibrary(api.models, library), seedLibrary(api.models, library)]);
+    expect(await api.models.MaterialVersion.count()).toBe(before);
+  });
+
+  test('gets a new version where constants changed, and keeps the old one', async () => {
+    await seedLibrary(api.models, [entry]);
+    const changed = { ...entry, content: buildContent({ voigt: null, voigtSource: null }) };
+    await seedLibrary(api.models, [changed]);
+    await seedLibrary(api.models, [{ ...changed, name: 'Testium, renamed' }]);
+    const stored = await versions();
+    expect(stored.map((row) => row.content)).toEqual([entry.content, changed.content]);
+    const material = await api.models.Material.findByPk(entry.id, { rejectOnEmpty: true });
+    expect([material.version, material.name, material.groupId]).toEqual([2, 'Testium, renamed', null]);
+  });
+});
+
+describe('the demo', () => {
+  test('has its people with their roles, four stacks that solve, a finished run and the known link', async () => {
+    const data = readDemoData();
+    const demo = await seedDemo(api.models, data);
+    await seedDemoRun(api.dependencies, demo, data);
+    const lead = await api.anonymous().post('/api/v1/session').send({
+      email: 'lead@northgate.example',
+      password: DEMO_PASSWORD,
+    });
+    expect(lead.body).toMatchObject({
+      groups: [{ groupName: 'Northgate Films', role: 'owner', isDemo: true }],
+    });
+    const memberships = await api.models.Membership.findAll({ where: { groupId: demo.group.id } });
+    expect(memberships.map((one) => one.role).sort()).toEqual(['editor', 'editor', 'owner', 'viewer']);
+    const stacks = await api.models.StackVersion.findAll({ where: { authorId: demo.lead.id } });
+    expect(stacks).toHaveLength(4);
+    for (const { document } of stacks) {
+      const { wavelengthNm, angleDeg } = document.workingPoint;
+      const request = librarySolveRequestSchema.parse({
+        cases: [toSolveCase(document, wavelengthNm, angleDeg)],
+      });
+      const { results } = await solve(api.dependencies, request, []);
+      expect(results[0]?.points).toHaveLength(1);
+    }
+    const link = await api.models.ShareLink.findOne({
+      where: { tokenHash: hashSecret(DEMO_LINK_TOKEN) },
+      include: 'run',
+    });
+    expect(link?.run).toMatchObject({ state: 'done', done: 341, total: 341, isDemo: true });
+    await api.anonymous().get(`/api/v1/shared/${DEMO_LINK_TOKEN}`).expect(200);
+  });
+
+  test('is made once: what somebody deleted stays deleted', async () => {
+    const data = readDemoData();
+    const demo = await seedDemo(api.models, data);
+    const [stack] = await api.models.Stack.findAll({ where: { groupId: demo.group.id } });
+    await stack!.destroy();
+    const again = await seedDemo(api.models, data);
+    await seedDemoRun(api.dependencies, again, data);
+    expect(again.group.id).toBe(demo.group.id);
+    expect(await api.models.Stack.count({ where: { groupId: demo.group.id } })).toBe(3);
+    expect(await api.models.Run.count({ where: { groupId: demo.group.id } })).toBe(1);
+    expect(await api.models.Group.count({ where: { isDemo: true } })).toBe(1);
+  });
+
+  test('loses its known link when the database comes into production', async () => {
+    await revokeDemoLink(api.models);
+    await api.anonymous().get(`/api/v1/shared/${DEMO_LINK_TOKEN}`).expect(410);
+  });
+});
