@@ -95,7 +95,7 @@ async function answerTo(path: string, init: RequestInit): Promise<Response> {
   try {
     response = await fetch(base + path, { credentials: 'same-origin', ...init });
   } catch (error) {
-    if (error instanceof DOMException && error.name === 'AbortError') throw error;
+    if (isAbort(error)) throw error;
     reportConnection('unreachable');
     throw new ApiError(0, 'network', 'The server cannot be reached. Check the connection, then try again.');
   }
@@ -130,7 +130,7 @@ async function readJson(response: Response): Promise<unknown> {
   try {
     return await response.json();
   } catch (error) {
-    if (error instanceof DOMException && error.name === 'AbortError') throw error;
+    if (isAbort(error)) throw error;
     throw new ApiError(
       response.status,
       'unreadable',
@@ -139,4 +139,9 @@ async function readJson(response: Response): Promise<unknown> {
       response.headers.get('x-request-id'),
     );
   }
+}
+
+/** By its name: the browser, Node and jsdom each have a DOMException of their own. */
+function isAbort(error: unknown): boolean {
+  return error instanceof Object && 'name' in error && error.name === 'AbortError';
 }

@@ -22,11 +22,16 @@ function versionOf(text: string | null): number | null {
   return Number.isInteger(version) && version > 0 ? version : null;
 }
 
+/** `Co, Cobalt`, but not `BK7, BK7 glass`. */
+function titleOf({ formula, name }: Material): string {
+  return name.startsWith(formula) ? name : `${formatFormula(formula)}, ${name}`;
+}
+
 export function MaterialPage() {
   const { materialId = '' } = useParams();
   const [search] = useSearchParams();
   const material = useQuery(materialQuery(materialId, versionOf(search.get('version'))));
-  const title = material.data ? `${formatFormula(material.data.formula)}, ${material.data.name}` : 'Material';
+  const title = material.data ? titleOf(material.data) : 'Material';
   return (
     <Page title={title} subtitle={material.data ? <MaterialLine material={material.data} /> : null}>
       <QueryGate query={material} what="material">

@@ -5,20 +5,32 @@ import type { PlotSeries } from '../../../components/plot/plotTypes.ts';
 import { onSpectralAxis, spectralLabels } from './spectralScale.ts';
 import type { SpectralUnit } from './spectralScale.ts';
 
-const nonNegative = { label: 'n, k', include: [0] };
+/** Two scales: beside the k of a metal, or that of a glass, the run of n would be a flat line on one. */
+const nAxis = { label: 'n' };
+const kAxis = { label: 'k', include: [0] };
 
-/** n and k as a solve interpolates them. */
+/** n and k as a solve interpolates them; k is left out where it is zero throughout. */
 export function IndexPlot({ material, unit }: { material: Material; unit: SpectralUnit }) {
   const { wavelengthsNm, n, k } = material.curves;
-  const series = useMemo<PlotSeries[]>(
-    () => [
+  const absorbs = useMemo(() => k.some((value) => value > 0), [k]);
+  const series = useMemo<PlotSeries[]>(() => {
+    const curves: PlotSeries[] = [
       { name: 'n', ...onSpectralAxis(unit, wavelengthsNm, n), tone: 'ink', width: 2 },
-      { name: 'k', ...onSpectralAxis(unit, wavelengthsNm, k), tone: 'accent', width: 2, dash: 'dashed' },
-    ],
-    [unit, wavelengthsNm, n, k],
-  );
+    ];
+    if (absorbs) {
+      curves.push({
+        name: 'k (right scale)',
+        ...onSpectralAxis(unit, wavelengthsNm, k),
+        tone: 'accent',
+        width: 2,
+        dash: 'dashed',
+        yAxisIndex: 1,
+      });
+    }
+    return curves;
+  }, [unit, wavelengthsNm, n, k, absorbs]);
   const xAxis = useMemo(() => ({ label: spectralLabels[unit] }), [unit]);
-  const yAxes = useMemo(() => [nonNegative], []);
+  const yAxes = useMemo(() => (absorbs ? [nAxis, kAxis] : [nAxis]), [absorbs]);
   return (
     <LinePlot
       series={series}
