@@ -17,35 +17,46 @@ const chip =
 type FamilyProps = {
   /** What there is to choose from. */
   families: readonly Family[];
-  lights: Light;
   shown: readonly Family[];
-  light: Light;
   onChange: (change: Partial<ReadingView>) => void;
 };
 
-/** Which readings a plot shows, and for which light. */
-export function FamilyControls({ families, lights, shown, light, onChange }: FamilyProps) {
+/** Which readings a plot shows. */
+export function FamilyControls({ families, shown, onChange }: FamilyProps) {
   const toggle = (family: Family) => {
     const next = shown.includes(family) ? shown.filter((one) => one !== family) : [...shown, family];
     // An empty plot answers nothing: the last curve stays.
     if (next.length > 0) onChange({ shown: next });
   };
   return (
-    <>
-      <div role="group" aria-label="Readings shown" className="-ml-2 flex flex-wrap">
-        {families.map((family) => (
-          <button
-            key={family}
-            type="button"
-            aria-pressed={shown.includes(family)}
-            onClick={() => toggle(family)}
-            className={chip}
-          >
-            <SeriesMark series={familyLooks[family]} />
-            {names[family]}
-          </button>
-        ))}
-      </div>
+    <div role="group" aria-label="Readings shown" className="-ml-2 flex flex-wrap">
+      {families.map((family) => (
+        <button
+          key={family}
+          type="button"
+          aria-pressed={shown.includes(family)}
+          onClick={() => toggle(family)}
+          className={chip}
+        >
+          <SeriesMark series={familyLooks[family]} />
+          {names[family]}
+        </button>
+      ))}
+    </div>
+  );
+}
+
+type ScaleProps = Pick<ReadingView, 'log' | 'unit'> & {
+  light: Light;
+  /** The lights that there are readings for. */
+  lights: Light;
+  onChange: (change: Partial<ReadingView>) => void;
+};
+
+/** For which light, in which unit and on which scale readings are shown. */
+export function ScaleControls({ light, lights, log, unit, onChange }: ScaleProps) {
+  return (
+    <span className="inline-flex items-center gap-1">
       {lights === 'ps' && (
         <select
           aria-label="Light shown"
@@ -58,16 +69,6 @@ export function FamilyControls({ families, lights, shown, light, onChange }: Fam
           <option value="ps">p and s</option>
         </select>
       )}
-    </>
-  );
-}
-
-type ScaleProps = Pick<ReadingView, 'log' | 'unit'> & { onChange: (change: Partial<ReadingView>) => void };
-
-/** In which unit and on which scale readings are shown. */
-export function ScaleControls({ log, unit, onChange }: ScaleProps) {
-  return (
-    <span className="inline-flex items-center gap-1">
       <select
         aria-label="Unit of the angles"
         value={unit}

@@ -32,12 +32,14 @@ export function niceScale(low: number, high: number, count = 5): NiceScale {
  */
 export function alignedScale(low: number, high: number, intervals: number): NiceScale | null {
   const free = niceScale(low, high, intervals);
-  for (const stretch of [1, 1.25, 2, 2.5, 4, 5, 10]) {
-    const step = niceStep(free.max - free.min, intervals) * stretch * 0.5;
+  const width = free.max - free.min;
+  const power = 10 ** Math.floor(Math.log10(width / intervals));
+  for (const lead of [0.5, 1, 2, 2.5, 5, 10, 20, 25]) {
+    const step = lead * power;
     const min = Math.floor(low / step + 1e-9) * step;
     const max = min + intervals * step;
-    if (max < high - 1e-9 * step || step === 0) continue;
-    if (max - min > 2.2 * (free.max - free.min)) return null;
+    if (max < high - 1e-9 * step) continue;
+    if (max - min > 2.2 * width) return null;
     return { min: clean(min, step / 10), max: clean(max, step / 10), ticks: ticksBetween(min, max, step) };
   }
   return null;
@@ -106,7 +108,14 @@ export function formatTick(tick: number, ticks: readonly number[]): string {
         .replace('e+', 'e'),
     );
   }
-  return minus(uniform ? tick.toFixed(Math.max(0, -Math.floor(Math.log10(step) + 1e-9))) : String(tick));
+  return minus(uniform ? tick.toFixed(decimalsOf(step)) : String(tick));
+}
+
+/** Decimals that show a step in full: 2 for 0.25. */
+function decimalsOf(step: number): number {
+  let decimals = Math.max(0, -Math.floor(Math.log10(step) + 1e-9));
+  while (decimals < 8 && Math.abs(Number(step.toFixed(decimals)) - step) > 1e-6 * step) decimals++;
+  return decimals;
 }
 
 function minus(text: string): string {

@@ -47,7 +47,13 @@ export function plotOption(
       offset: index === 0 ? 0 : (index - 1) * 54,
       name: axis.label,
       nameGap: 10,
-      nameTextStyle: { color: tokens.muted, fontSize: 11.5, align: index === 0 ? 'center' : 'left' },
+      nameTextStyle: {
+        color: tokens.muted,
+        fontSize: 11.5,
+        align: index === 0 ? 'right' : 'left',
+        // Over the numbers, clear of the working point's handle on the frame.
+        padding: index === 0 ? [0, 8, 0, 0] : [0, 0, 0, 8],
+      },
       splitLine: { show: index === 0, lineStyle: { color: tokens.line } },
       axisLine: { show: false },
     })),

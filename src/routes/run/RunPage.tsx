@@ -1,3 +1,131 @@
+import { useQuery } from '@tanstack/react-query';
+import { useEffect } from 'react';
+import { Link, generatePath, useNavigate, useParams, useSearchParams } from 'react-router-dom';
+import type { Run } from '../../../shared/run.ts';
+import { Button } from '../../components/Button.tsx';
+import { ErrorState } from '../../components/ErrorState.tsx';
+import { LoadingState } from '../../components/LoadingState.tsx';
+import { Page } from '../../components/Page.tsx';
+import { useRerun } from '../../features/runs/api/changeRun.ts';
+import { runQuery } from '../../features/runs/api/run.ts';
+import { Comparison } from '../../features/runs/components/Comparison.tsx';
+import { DeleteRun } from '../../features/runs/components/DeleteRun.tsx';
+import { RunDownloads } from '../../features/runs/components/RunDownloads.tsx';
+import { RunProvenance } from '../../features/runs/components/RunProvenance.tsx';
+import { RunState } from '../../features/runs/components/RunState.tsx';
+import { useRunProgress } from '../../features/runs/hooks/useRunProgress.ts';
+import { mayEdit, useMembership } from '../../features/session/hooks/useSession.ts';
+import { SharePanel } from '../../features/sharing/components/SharePanel.tsx';
+import { formatCount, formatDateTime } from '../../lib/format.ts';
+import { paths } from '../../lib/paths.ts';
+import { rememberGroup } from '../../lib/rememberedGroup.ts';
+import { StoredRun } from './StoredRun.tsx';
+
+/** `/runs/:runId`: progress while it runs, then its values and everything they rest on. */
 export function RunPage() {
-  return null;
+  const { runId = '' } = useParams();
+  const run = useQuery(runQuery(runId));
+  useRunProgress(run.data);
+  const groupId = run.data?.groupId;
+  useEffect(() => {
+    if (groupId !== undefined) rememberGroup(groupId);
+  }, [groupId]);
+
+  if (run.data) return <LoadedRun key={runId} run={run.data} />;
+  return (
+    <Page title="Run">
+      {run.error ? (
+        <ErrorState
+          title="The run could not be opened"
+          error={run.error}
+          onRetry={() => void run.refetch()}
+        />
+      ) : (
+        <LoadingState label="Opening the run" rows={8} />
+      )}
+    </Page>
+  );
+}
+
+function LoadedRun({ run }: { run: Run }) {
+  const editor = mayEdit(useMembership(run.groupId));
+  const navigate = useNavigate();
+  const [search] = useSearchParams();
+  const rerun = useRerun(run);
+  const done = run.progress.state === 'done';
+  const compareWith = search.get('compare');
+  const path = `/runs/${run.id}`;
+  const startRerun = () =>
+    rerun.mutate(undefined, {
+      onSuccess: (made) => {
+        const to = generatePath(paths.run, { runId: made.id });
+        void navigate(done ? `${to}?compare=${run.id}` : to);
+      },
+    });
+
+  return (
+    <Page
+      title={run.name}
+      subtitle={<RunLine run={run} />}
+      actions={
+        editor && (
+          <>
+            {done && (
+              <Button
+                busy={rerun.isPending}
+                onClick={startRerun}
+                title="Compute the same input again and compare"
+              >
+                Rerun with today’s solver
+              </Button>
+            )}
+            <DeleteRun
+              run={run}
+              onDeleted={() => void navigate(generatePath(paths.runs, { groupId: run.groupId }))}
+            />
+          </>
+        )
+      }
+    >
+      {rerun.error && (
+        <p role="alert" className="mb-3 text-danger">
+          Not started: {rerun.error.message}
+        </p>
+      )}
+      <StoredRun
+        run={run}
+        dataPath={done ? path : null}
+        waiting={<RunState run={run} mayEdit={editor} onRerun={startRerun} rerunning={rerun.isPending} />}
+      >
+        {({ result, layerName }) => (
+          <div className="mt-6 flex flex-col gap-7">
+            {compareWith && result && (
+              <Comparison run={run} result={result} olderId={compareWith} layerName={layerName} />
+            )}
+            {editor && done && <SharePanel runId={run.id} />}
+            <RunDownloads path={path} hasData={done} />
+            <RunProvenance run={run} />
+          </div>
+        )}
+      </StoredRun>
+    </Page>
+  );
+}
+
+function RunLine({ run }: { run: Run }) {
+  const points = `${formatCount(run.axis.points)} ${run.axis.points === 1 ? 'point' : 'points'}`;
+  return (
+    <>
+      {run.stackId ? (
+        <Link className="prose-link" to={generatePath(paths.stack, { stackId: run.stackId })}>
+          {run.stackName ?? 'its stack'}
+        </Link>
+      ) : (
+        (run.stackName ?? 'a stack that was deleted')
+      )}
+      {`, ${points}, ${formatDateTime(run.createdAt)}`}
+      {run.createdBy ? ` by ${run.createdBy}` : ''}
+      {run.isDemo ? '. Demo.' : ''}
+    </>
+  );
 }

@@ -1,5 +1,5 @@
 import { useQuery } from '@tanstack/react-query';
-import { useEffect, useMemo } from 'react';
+import { useEffect } from 'react';
 import { generatePath, useNavigate, useParams } from 'react-router-dom';
 import { ErrorState } from '../../components/ErrorState.tsx';
 import { LoadingState } from '../../components/LoadingState.tsx';
@@ -18,10 +18,6 @@ export function StackPage() {
   const stack = useQuery(stackQuery(stackId));
   const groupId = stack.data?.groupId;
   const library = useQuery({ ...materialListQuery(groupId ?? ''), enabled: groupId !== undefined });
-  const materials = useMemo(
-    () => new Map((library.data?.materials ?? []).map((material) => [material.id, material])),
-    [library.data],
-  );
   const membership = useMembership(groupId);
   const navigate = useNavigate();
   useDocumentTitle(stack.data?.name ?? 'Stack');
@@ -49,7 +45,7 @@ export function StackPage() {
     <StackWorkbench
       key={stackId}
       stack={stack.data}
-      materials={materials}
+      library={library.data.materials}
       mayEdit={mayEdit(membership)}
       onCopied={({ id }) => void navigate(generatePath(paths.stack, { stackId: id }))}
       keepButton={({ document, axis, readings, problem }) => (

@@ -4,11 +4,13 @@ import { formatCount } from '../../../lib/format.ts';
 import { along, angleArc, exaggeration, incomingRay, outgoingRay, raysApart } from '../model/beamGeometry.ts';
 import type { Point } from '../model/beamGeometry.ts';
 
+export type KerrAngles = { rotationDeg: number; ellipticityDeg: number };
+
 type Props = {
   angleDeg: number;
   input: Polarization;
   /** Change of the reflected polarization for this input, deg; null where there is none or it is not known yet. */
-  kerr: { rotationDeg: number; ellipticityDeg: number } | null;
+  kerr: KerrAngles | null;
 };
 
 const HEIGHT = 206;
@@ -138,11 +140,11 @@ function Lens({ at, width, input, rotationDeg, ellipticityDeg, factor }: LensPro
       : factor === 1
         ? 'tilt as it is'
         : `tilt drawn × ${formatCount(factor)}`;
-  // Beside the lens where there is room, else above it: the ray goes on up and to the right.
-  const beside = width - place.x > 132;
-  const text = beside
-    ? { x: place.x + 28, y: place.y + 18 }
-    : { x: Math.min(place.x, width - 50), y: place.y - 28 };
+  // Clear of the ray, which comes from below left and goes on up to the right.
+  const text =
+    width - place.x > 132
+      ? ({ x: place.x + 28, y: place.y + 18, anchor: 'start' } as const)
+      : ({ x: width - 1, y: place.y + (place.y + 44 < HEIGHT ? 38 : -30), anchor: 'end' } as const);
   return (
     <g>
       <g transform={`translate(${place.x} ${place.y})`}>
@@ -157,7 +159,7 @@ function Lens({ at, width, input, rotationDeg, ellipticityDeg, factor }: LensPro
           transform={`rotate(${-rotationDeg})`}
         />
       </g>
-      <text x={text.x} y={text.y} textAnchor={beside ? 'start' : 'middle'} fontSize="11" fill="var(--muted)">
+      <text x={text.x} y={text.y} textAnchor={text.anchor} fontSize="11" fill="var(--muted)">
         {words}
         <title>
           The small ellipse is the reflected polarization for {input} light, looking into the beam.

@@ -13,7 +13,6 @@ import { BlockFrame } from './BlockFrame.tsx';
 import { classFill, magnetHatch } from './classColours.ts';
 import { DepthTick } from './DepthTick.tsx';
 import { useFilm } from './film.ts';
-import { LayerName } from './LayerName.tsx';
 import { LayerRow } from './LayerRow.tsx';
 import { MagnetizationChip } from './MagnetizationChip.tsx';
 import { MediumNotes } from './MediumNotes.tsx';
@@ -58,7 +57,8 @@ export function CrossSection({ document }: { document: StackDocument }) {
           key={item.id}
           layer={item}
           height={heights.get(item.id) ?? 34}
-          depthNm={depthNm}
+          // The face of a block's last layer is that of the block, many repetitions further down.
+          depthNm={prefix !== '' && index === items.length - 1 ? null : depthNm}
           {...common}
         />
       );
@@ -129,12 +129,10 @@ function Substrate({ document }: { document: StackDocument }) {
             onChange={change}
             className="text-lead font-semibold"
           >
-            <LayerName name={name} />
+            {name}
           </MediumPicker>
         ) : (
-          <span className="px-2 text-lead font-semibold">
-            <LayerName name={name} />
-          </span>
+          <span className="px-2 text-lead font-semibold">{name}</span>
         )}
         <span className="text-note text-muted">substrate</span>
         {substrateM && (

@@ -92,12 +92,21 @@ function Arrow({ m, size }: { m: Vector; size: number }) {
         </g>
       )}
       {across && (
-        <g stroke="var(--magnet)" strokeWidth="1.8">
-          <circle r={inPlane > 0.02 ? 4.4 : 7.5} fill="var(--paper)" />
+        // Where m has both parts, the mark sits at the arrow's tail and leaves the arrow to be seen.
+        <g
+          stroke="var(--magnet)"
+          strokeWidth="1.6"
+          transform={
+            inPlane > 0.02
+              ? `rotate(${drawnAngleDeg(m)}) translate(${-reach} 0) rotate(${-drawnAngleDeg(m)})`
+              : undefined
+          }
+        >
+          <circle r={inPlane > 0.02 ? 3.6 : 7.5} fill="var(--paper)" />
           {m[1] > 0 ? (
-            <circle r={inPlane > 0.02 ? 1.2 : 2.2} fill="var(--magnet)" stroke="none" />
+            <circle r={inPlane > 0.02 ? 1.3 : 2.2} fill="var(--magnet)" stroke="none" />
           ) : (
-            <path d={inPlane > 0.02 ? 'M-2.4 -2.4l4.8 4.8M-2.4 2.4l4.8 -4.8' : 'M-5 -5l10 10M-5 5l10 -10'} />
+            <path d={inPlane > 0.02 ? 'M-2 -2l4 4M-2 2l4 -4' : 'M-5 -5l10 10M-5 5l10 -10'} />
           )}
         </g>
       )}

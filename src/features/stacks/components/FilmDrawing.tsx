@@ -1,11 +1,12 @@
 import { useCallback, useMemo, useState } from 'react';
 import type { Issue } from '../../../../shared/error.ts';
+import type { MaterialSummary } from '../../../../shared/material.ts';
 import type { StackDocument, WorkingPoint } from '../../../../shared/stack.ts';
 import type { EditDocument } from '../hooks/useStackEditor.ts';
 import type { Materials } from '../model/media.ts';
 import { issueTarget } from '../model/issueTarget.ts';
-import type { PointReadings } from '../model/solveStates.ts';
 import { Beam } from './Beam.tsx';
+import type { KerrAngles } from './Beam.tsx';
 import { CrossSection } from './CrossSection.tsx';
 import { FilmCautions } from './FilmCautions.tsx';
 import { FilmContext } from './film.ts';
@@ -15,38 +16,37 @@ type Props = {
   document: StackDocument;
   materials: Materials;
   point: WorkingPoint;
-  readings: PointReadings | null;
+  /** Change of the reflected polarization at that point, for its input light; null where it is not known. */
+  kerr: KerrAngles | null;
   /** Lowest and highest wavelength that the page asks for, nm. */
   rangeNm: readonly [number, number];
   /** Issues of the server, with its paths. */
-  issues: readonly Issue[];
+  issues?: readonly Issue[];
+  /** What a layer can be made of, for the editor. */
+  library?: readonly MaterialSummary[];
   edit: EditDocument | null;
 };
 
 const noIssues: readonly Issue[] = [];
+const noLibrary: readonly MaterialSummary[] = [];
 
 /** The film as a drawing: the light, the layers, the substrate. With `edit` it is the editor, without it a picture. */
-export function FilmDrawing({
-  document,
-  materials,
-  point,
-  readings,
-  rangeNm,
-  issues = noIssues,
-  edit,
-}: Props) {
+export function FilmDrawing(props: Props) {
+  const { document, materials, point, kerr, rangeNm, edit } = props;
+  const { issues = noIssues, library = noLibrary } = props;
   const [said, setSaid] = useState('');
   const announce = useCallback((text: string) => setSaid(text), []);
   const [fromNm, toNm] = rangeNm;
   const film = useMemo(
     () => ({
       materials,
+      library,
       edit,
       rangeNm: [fromNm, toNm] as const,
       issues: issuesByItem(document, issues),
       announce,
     }),
-    [materials, edit, fromNm, toNm, document, issues, announce],
+    [materials, library, edit, fromNm, toNm, document, issues, announce],
   );
   return (
     <FilmContext value={film}>
@@ -54,7 +54,7 @@ export function FilmDrawing({
         <div className="absolute top-0 left-0">
           <IncidentMedium document={document} point={point} />
         </div>
-        <Beam angleDeg={point.angleDeg} input={point.input} kerr={kerrOf(readings, point)} />
+        <Beam angleDeg={point.angleDeg} input={point.input} kerr={kerr} />
         <span aria-hidden="true" className="absolute bottom-1.5 left-0 text-tick text-muted">
           nm
         </span>
@@ -66,12 +66,6 @@ export function FilmDrawing({
       </p>
     </FilmContext>
   );
-}
-
-function kerrOf(readings: PointReadings | null, { input }: WorkingPoint) {
-  const rotationDeg = readings?.[input === 'p' ? 'rotationP' : 'rotationS'] ?? null;
-  const ellipticityDeg = readings?.[input === 'p' ? 'ellipticityP' : 'ellipticityS'] ?? null;
-  return rotationDeg === null || ellipticityDeg === null ? null : { rotationDeg, ellipticityDeg };
 }
 
 /** Issues at the item they name, each said once however many states and points repeat it. */

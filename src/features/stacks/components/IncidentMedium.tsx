@@ -1,7 +1,6 @@
 import type { StackDocument, StackMedium, WorkingPoint } from '../../../../shared/stack.ts';
 import { mediumName } from '../model/media.ts';
 import { useFilm } from './film.ts';
-import { LayerName } from './LayerName.tsx';
 import { MediumNotes } from './MediumNotes.tsx';
 import { MediumPicker } from './MediumPicker.tsx';
 
@@ -9,7 +8,7 @@ import { MediumPicker } from './MediumPicker.tsx';
 export function IncidentMedium({ document, point }: { document: StackDocument; point: WorkingPoint }) {
   const { materials, edit, issues } = useFilm();
   const { incident } = document;
-  const name = <LayerName name={mediumName(incident, materials)} />;
+  const name = mediumName(incident, materials);
   const change = (medium: StackMedium, editName: string | null) =>
     edit?.((now) => ({ ...now, incident: medium }), editName);
   return (

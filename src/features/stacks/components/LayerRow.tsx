@@ -1,4 +1,4 @@
-import { Ellipsis, GripVertical, Lock } from 'lucide-react';
+import { Ellipsis, GripVertical } from 'lucide-react';
 import { memo, useState } from 'react';
 import type { KeyboardEvent, PointerEvent } from 'react';
 import type { StackLayer, StackMedium } from '../../../../shared/stack.ts';
@@ -13,7 +13,6 @@ import { classFill, magnetHatch } from './classColours.ts';
 import { DepthTick } from './DepthTick.tsx';
 import { useFilm } from './film.ts';
 import { itemMenu, stepItem } from './itemActions.ts';
-import { LayerName } from './LayerName.tsx';
 import { MagnetizationChip } from './MagnetizationChip.tsx';
 import { MediumNotes } from './MediumNotes.tsx';
 import { MediumPicker } from './MediumPicker.tsx';
@@ -75,13 +74,13 @@ export const LayerRow = memo(function LayerRow({ layer, position, height, depthN
             onChange={changeMedium}
             className={`text-lead font-semibold ${magnetic ? 'bg-paper/85' : ''}`}
           >
-            <LayerName name={name} />
+            {name}
           </MediumPicker>
         ) : (
           <span
             className={`rounded-box px-2 py-[2px] text-lead font-semibold ${magnetic ? 'bg-paper/85' : 'ml-1'}`}
           >
-            <LayerName name={name} />
+            {name}
           </span>
         )}
         <Note
@@ -90,7 +89,7 @@ export const LayerRow = memo(function LayerRow({ layer, position, height, depthN
           onChange={edit && ((note) => change({ note }, 'note'))}
           crowded={magnetic}
         />
-        <span className="ml-auto flex items-center gap-1.5">
+        <span className="ml-auto flex shrink-0 items-center gap-1.5">
           {layer.m && (
             <MagnetizationChip
               m={layer.m}
@@ -99,7 +98,6 @@ export const LayerRow = memo(function LayerRow({ layer, position, height, depthN
               onChange={edit ? (m) => change({ m }, 'm') : undefined}
             />
           )}
-          {layer.fixed && <Lock aria-hidden="true" className="size-3 text-muted" />}
           <Quantity
             label={`thickness of ${label}`}
             unit="nm"

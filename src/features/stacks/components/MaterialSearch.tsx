@@ -2,7 +2,7 @@ import { useId, useRef, useState } from 'react';
 import type { KeyboardEvent } from 'react';
 import type { MaterialSummary } from '../../../../shared/material.ts';
 import { controlLook } from '../../../components/controlLook.ts';
-import { formatRange } from '../../../lib/format.ts';
+import { formatFormula, formatRange } from '../../../lib/format.ts';
 import { searchMaterials } from '../model/materialSearch.ts';
 import { classFill, magnetHatch } from './classColours.ts';
 
@@ -100,7 +100,7 @@ function MaterialLine({ material, current }: { material: MaterialSummary; curren
         }}
       />
       <span className="truncate">
-        <b className="font-semibold">{material.formula}</b>{' '}
+        <b className="font-semibold">{formatFormula(material.formula)}</b>{' '}
         <span className="text-muted">{material.name}</span>
         {current && <span className="text-note text-accent"> in use</span>}
       </span>

@@ -26,7 +26,6 @@ export function MediumPicker({ medium, label, lossless = false, onChange, classN
   const [way, setWay] = useState<'library' | 'constants'>(
     medium.material === undefined ? 'constants' : 'library',
   );
-  const materials = [...film.materials.values()];
   return (
     <Popup
       open={open}
@@ -56,7 +55,7 @@ export function MediumPicker({ medium, label, lossless = false, onChange, classN
           {way === 'library' ? (
             <MaterialSearch
               materials={
-                lossless ? materials.filter((material) => material.voigtRangeNm === null) : materials
+                lossless ? film.library.filter((material) => material.voigtRangeNm === null) : film.library
               }
               chosen={medium.material}
               onChoose={({ id, version }) => {

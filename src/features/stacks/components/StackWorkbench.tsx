@@ -1,6 +1,7 @@
 import { useMemo, useState } from 'react';
 import type { ReactNode } from 'react';
 import type { Issue } from '../../../../shared/error.ts';
+import type { MaterialSummary } from '../../../../shared/material.ts';
 import type { ReadingName, SweepAxis } from '../../../../shared/run.ts';
 import type { Stack, StackDocument, WorkingPoint } from '../../../../shared/stack.ts';
 import { Button } from '../../../components/Button.tsx';
@@ -14,6 +15,7 @@ import { issueTarget } from '../model/issueTarget.ts';
 import { listLayers } from '../model/items.ts';
 import { isTransverse } from '../model/magnetization.ts';
 import type { Materials } from '../model/media.ts';
+import { kerrAngles } from '../model/solveStates.ts';
 import { samePoint } from '../model/viewState.ts';
 import { EditorNotices } from './EditorNotices.tsx';
 import { FilmDrawing } from './FilmDrawing.tsx';
@@ -34,7 +36,7 @@ export type KeptSweep = {
 
 type Props = {
   stack: Stack;
-  materials: Materials;
+  library: readonly MaterialSummary[];
   mayEdit: boolean;
   onCopied: (stack: Stack) => void;
   /** The button that keeps the sweep on the page as a run. */
@@ -45,7 +47,8 @@ type Props = {
 const ALL_READINGS_UP_TO = 20_000;
 
 /** The heart of the program: the film on the left, its readings and the current question on the right. */
-export function StackWorkbench({ stack, materials, mayEdit, onCopied, keepButton }: Props) {
+export function StackWorkbench({ stack, library, mayEdit, onCopied, keepButton }: Props) {
+  const materials = useMemo<Materials>(() => new Map(library.map((one) => [one.id, one])), [library]);
   const editor = useStackEditor(stack);
   const [showsNewer, setShowsNewer] = useState(false);
   const newer = showsNewer ? editor.conflict : null;
@@ -87,8 +90,9 @@ export function StackWorkbench({ stack, materials, mayEdit, onCopied, keepButton
           <FilmDrawing
             document={film}
             materials={materials}
+            library={library}
             point={point}
-            readings={live.readings}
+            kerr={kerrAngles(live.readings, point.input)}
             rangeNm={wavelengthRange(point, view.kind === 'wavelength' ? view.axis : null)}
             issues={issues}
             edit={canEdit ? editor.editDocument : null}

@@ -85,7 +85,7 @@ export function SweepPanel({ title, document, materials, view, transverse, onVie
                   onView({ axis: defaultAxis('thickness', document, materials, layerId) })
                 }
               />
-              <ScaleControls log={view.log} unit={view.unit} onChange={onView} />
+              <ScaleControls light={light} lights="ps" log={view.log} unit={view.unit} onChange={onView} />
             </div>
             <div className="mt-1 border-t border-line pt-1.5">
               {sweep.drawn ? (
@@ -109,15 +109,7 @@ export function SweepPanel({ title, document, materials, view, transverse, onVie
                       sweep.drawn.axis.kind === 'thickness' ? undefined : (x) => onView(picked(axis, x, view))
                     }
                     fileName={`${title} ${axis.kind}`}
-                    controls={
-                      <FamilyControls
-                        families={families}
-                        lights="ps"
-                        shown={shown}
-                        light={light}
-                        onChange={onView}
-                      />
-                    }
+                    controls={<FamilyControls families={families} shown={shown} onChange={onView} />}
                     downloads={
                       <PlotButton label="Download the values as CSV" onClick={() => saveCsv(title, sweep)}>
                         CSV

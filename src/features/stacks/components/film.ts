@@ -1,11 +1,14 @@
 import { createContext, use } from 'react';
 import type { Issue } from '../../../../shared/error.ts';
+import type { MaterialSummary } from '../../../../shared/material.ts';
 import type { Materials } from '../model/media.ts';
 import type { EditDocument } from '../hooks/useStackEditor.ts';
 
 /** What every part of the drawing needs: the library, how to change the film, and what is wrong with it. */
 export type Film = {
   materials: Materials;
+  /** What a layer can be made of. */
+  library: readonly MaterialSummary[];
   /** Null for those who may look but not change. */
   edit: EditDocument | null;
   /** Lowest and highest wavelength that the page asks for, nm. */
@@ -18,6 +21,7 @@ export type Film = {
 
 export const FilmContext = createContext<Film>({
   materials: new Map(),
+  library: [],
   edit: null,
   rangeNm: [0, 0],
   issues: new Map(),

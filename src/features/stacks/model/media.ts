@@ -1,18 +1,27 @@
 import { toComplex } from '../../../../shared/complex.ts';
 import type { MaterialClass, MaterialSummary } from '../../../../shared/material.ts';
 import type { StackMedium } from '../../../../shared/stack.ts';
-import { formatPlain, formatRange } from '../../../lib/format.ts';
+import { formatFormula, formatPlain, formatRange } from '../../../lib/format.ts';
 
-/** The group's library by id, as far as it is loaded. */
-export type Materials = ReadonlyMap<string, MaterialSummary>;
+/** What the drawing and its cautions need of a material. */
+export type DrawnMaterial = Pick<
+  MaterialSummary,
+  'formula' | 'class' | 'rangeNm' | 'voigtRangeNm' | 'voigtConfidence'
+>;
 
-export function materialOf(medium: StackMedium, materials: Materials): MaterialSummary | null {
+/** Materials by id: the group's library, or those that a run was computed with. */
+export type Materials = ReadonlyMap<string, DrawnMaterial>;
+
+export function materialOf(medium: StackMedium, materials: Materials): DrawnMaterial | null {
   return medium.material === undefined ? null : (materials.get(medium.material) ?? null);
 }
 
 /** What the drawing prints in a layer: the formula, else the name given to typed-in constants, else the constants. */
 export function mediumName(medium: StackMedium, materials: Materials): string {
-  if (medium.material !== undefined) return materialOf(medium, materials)?.formula ?? medium.material;
+  if (medium.material !== undefined) {
+    const material = materialOf(medium, materials);
+    return material ? formatFormula(material.formula) : medium.material;
+  }
   if (medium.label) return medium.label;
   if (medium.epsilon !== undefined) return 'free tensor';
   if (medium.index === undefined || isSampled(medium.index)) return 'table';
@@ -69,14 +78,14 @@ export function mediumNotes(
     if (one && assumed) {
       notes.push({
         tone: 'caution',
-        text: `${what} of ${material.formula} is known ${extent} and used at ${asked} too.`,
+        text: `${what} of ${formatFormula(material.formula)} is known ${extent} and used at ${asked} too.`,
         offer: null,
       });
       return;
     }
     notes.push({
       tone: 'problem',
-      text: `${what} of ${material.formula} is known ${extent}, not at ${asked}.`,
+      text: `${what} of ${formatFormula(material.formula)} is known ${extent}, not at ${asked}.`,
       offer: one ? 'assumeConstant' : null,
     });
   };
@@ -85,7 +94,7 @@ export function mediumNotes(
   if (magnetized && material.voigtConfidence === 'from memory') {
     notes.push({
       tone: 'caution',
-      text: `Q of ${material.formula} is from memory: verify before use.`,
+      text: `Q of ${formatFormula(material.formula)} is from memory: verify before use.`,
       offer: null,
     });
   }

@@ -1,7 +1,7 @@
 import type { ReadingName, SweepAxis } from '../../../../shared/run.ts';
 import { readingDefinitions, readingOf } from '../../../../shared/readings.ts';
 import type { LibrarySolveCase, LibrarySolveRequest, SolveResponse } from '../../../../shared/solve.ts';
-import type { StackDocument, WorkingPoint } from '../../../../shared/stack.ts';
+import type { Polarization, StackDocument, WorkingPoint } from '../../../../shared/stack.ts';
 import { inMagnetizationState, toSolveCase } from '../../../../shared/stackCase.ts';
 import type { MagnetizationState } from '../../../../shared/stackCase.ts';
 import { withLayer } from './items.ts';
@@ -106,4 +106,11 @@ export function readSweepResponse(response: SolveResponse, sweep: Sweep): Readin
     });
   }
   return columns;
+}
+
+/** Rotation and ellipticity for the input light, deg; null where the reflected beam has no polarization. */
+export function kerrAngles(readings: PointReadings | null, input: Polarization) {
+  const rotationDeg = readings?.[input === 'p' ? 'rotationP' : 'rotationS'] ?? null;
+  const ellipticityDeg = readings?.[input === 'p' ? 'ellipticityP' : 'ellipticityS'] ?? null;
+  return rotationDeg === null || ellipticityDeg === null ? null : { rotationDeg, ellipticityDeg };
 }
