@@ -28,6 +28,6 @@ export function requestLog(logger: Logger) {
 }
 
 /** The address of a share link or a reset mail is a key: the log must not hand it on. */
-export function withoutSecrets(url: string): string {
+function withoutSecrets(url: string): string {
   return url.replace(/\/(shared?|reset-password)\/[^/?#]+/g, '/$1/***');
 }

@@ -4,7 +4,7 @@ import { SMTPServer } from 'smtp-server';
 import type { SMTPServerSession } from 'smtp-server';
 import { readMail } from './readMail.ts';
 
-export type CaughtMail = { id: string; to: string; subject: string; text: string; receivedAt: Date };
+type CaughtMail = { id: string; to: string; subject: string; text: string; receivedAt: Date };
 
 export type MailCatcher = {
   /** Address for the mailer. */

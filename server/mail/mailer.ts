@@ -1,6 +1,6 @@
 import { createTransport } from 'nodemailer';
 
-export type Mail = { to: string; subject: string; text: string };
+type Mail = { to: string; subject: string; text: string };
 
 export type Mailer = {
   /** @throws Error when the mail server does not take it */

@@ -7,7 +7,7 @@ import { holdsRole, isMember } from './actor.ts';
  * `hide` answers 404, so that somebody outside a group cannot tell whether an id exists; `refuse` answers 403 to a
  * member whose role does not reach.
  */
-export type Decision = 'allow' | 'hide' | 'refuse';
+type Decision = 'allow' | 'hide' | 'refuse';
 
 /** Who may call a route, decided in two steps: by who asks, then by what was loaded. */
 export type Policy<Who extends Actor | null, Subject> = {
