@@ -2,6 +2,7 @@ import type { Logger } from 'pino';
 import type { ComputePool } from '../../worker/pool.ts';
 import { ComputeError } from '../../worker/sweep/computeError.ts';
 import type { SweepResult } from '../../worker/sweep/runSweep.ts';
+import { Refusal } from '../errors.ts';
 import { isDatabaseAway } from '../http/toRefusal.ts';
 import type { Models } from '../models/models.ts';
 import type { MaterialStore } from '../services/materialStore.ts';
@@ -94,24 +95,22 @@ async function compute(
     return { kind: 'solved', result };
   } catch (error) {
     if (stopping.signal.aborted) return { kind: 'stopped' };
-    if (!(error instanceof ComputeError)) throw error;
-    return error.failure === 'closed'
-      ? { kind: 'stopped' }
-      : { kind: 'failed', error: describeFailure(error) };
+    if (isDatabaseAway(error)) throw error;
+    if (error instanceof ComputeError && error.failure === 'closed') return { kind: 'stopped' };
+    if (!(error instanceof ComputeError) && !(error instanceof Refusal)) {
+      logger.error({ err: error, runId: lease.runId }, 'A run failed for a reason that nobody thought of');
+    }
+    return { kind: 'failed', error: describeFailure(error) };
   }
 }
 
-function describeFailure(error: ComputeError): string {
-  switch (error.failure) {
-    case 'refused':
-      return error.issues.length > 0
-        ? error.issues.map(({ path, message }) => `${path}: ${message}`).join('\n')
-        : error.message;
-    case 'crashed':
-      return `${error.message}. Rerun it; if that fails again, ask for fewer points or a smaller stack.`;
-    case 'cancelled':
-    case 'timeout':
-    case 'closed':
-      return error.message;
-  }
+/** What the person who started the run reads. */
+function describeFailure(error: unknown): string {
+  if (error instanceof Refusal) return error.message;
+  if (!(error instanceof ComputeError)) return 'Something went wrong on the server. The log has the details.';
+  if (error.issues.length > 0)
+    return error.issues.map(({ path, message }) => `${path}: ${message}`).join('\n');
+  return error.failure === 'crashed'
+    ? `${error.message}. Rerun it; if that fails again, ask for fewer points or a smaller stack.`
+    : error.message;
 }
