@@ -79,6 +79,47 @@ const quadraticSchema = strictObject({
   azimuthDeg: z.number().optional(),
 }).meta({ description: 'Second order in m of a cubic crystal; azimuthDeg turns [100] from x toward y.' });
 
+/**
+ * Two media mixed on a scale far below the wavelength (physics.md section 6). `bruggeman` treats them alike;
+ * `maxwell-garnett` has spheres of the second in the first. Each part keeps its own m.
+ */
+const mixtureRules = {
+  model: z.enum(['bruggeman', 'maxwell-garnett']),
+  /** Volume fraction of the second part. */
+  fraction: z.number().min(0).max(1),
+};
+
+const partFields = {
+  index: indexSchema.optional(),
+  voigt: voigtSchema.optional(),
+  m: magnetizationSchema.optional(),
+};
+
+const partSchema = strictObject(partFields).superRefine((part, context) => {
+  if (part.index === undefined) context.addIssue({ code: 'custom', path: ['index'], message: 'is required' });
+});
+
+export const mixtureSchema = strictObject({
+  ...mixtureRules,
+  parts: z.tuple([partSchema, partSchema]),
+}).superRefine((mixture, context) => {
+  if (mixture.model === 'maxwell-garnett' && mixture.parts[0].voigt !== undefined) {
+    context.addIssue({
+      code: 'custom',
+      path: ['parts', 0, 'voigt'],
+      message:
+        'the host of a maxwell-garnett mixture must not be magnetic; put the magnet second, or use bruggeman',
+    });
+  }
+});
+
+const orientationSchema = z
+  .tuple([z.number(), z.number(), z.number()], { error: 'must be three angles in deg' })
+  .meta({
+    description:
+      'Euler angles in deg: the crystal or tensor is turned about z, then about the new y, then about the new z.',
+  });
+
 /** The keys of a medium given by numbers. Kept apart from the objects so that a layer can carry them inline. */
 export const mediumFields = {
   index: indexSchema.optional(),
@@ -88,7 +129,11 @@ export const mediumFields = {
   axis: axisSchema.optional(),
   quadratic: quadraticSchema.optional(),
   epsilon: epsilonSchema.optional(),
+  orientationDeg: orientationSchema.optional(),
+  mixture: mixtureSchema.optional(),
 };
+
+export type MixtureInput = z.infer<typeof mixtureSchema>;
 
 export const libraryFields = {
   material: z.string().min(1).max(80).optional().meta({ description: 'Id of a material in the library.' }),
@@ -103,32 +148,60 @@ export const libraryFields = {
     .meta({ description: 'Use a constant known at one wavelength at every other one too.' }),
 };
 
+const libraryPartSchema = strictObject({ ...partFields, ...libraryFields }).superRefine((part, context) => {
+  if ((part.index === undefined) === (part.material === undefined)) {
+    context.addIssue({ code: 'custom', path: ['index'], message: 'give either index or material' });
+  }
+});
+
+/** The same keys where media may be named by library id, parts of a mixture included. */
+export const libraryMediumFields = {
+  ...mediumFields,
+  ...libraryFields,
+  mixture: strictObject({
+    ...mixtureRules,
+    parts: z.tuple([libraryPartSchema, libraryPartSchema]),
+  }).optional(),
+};
+
 const mediumObjectSchema = strictObject(mediumFields);
-const libraryMediumObjectSchema = strictObject({ ...mediumFields, ...libraryFields });
+const libraryMediumObjectSchema = strictObject(libraryMediumFields);
 
 export type MediumInput = z.infer<typeof mediumObjectSchema>;
 export type LibraryMediumInput = z.infer<typeof libraryMediumObjectSchema>;
+
+const constantKeys = ['index', 'voigt', 'extraordinary', 'axis', 'quadratic', 'epsilon', 'mixture'] as const;
 
 /** Rules between the keys of one medium. `extra` keys of the object (thicknessNm of a layer) do not count. */
 export function checkMediumKeys(medium: LibraryMediumInput, context: z.RefinementCtx): void {
   const refuse = (path: string, message: string) =>
     context.addIssue({ code: 'custom', message, path: [path] });
+  const refuseBeside = (keys: readonly (keyof LibraryMediumInput)[], message: string) => {
+    for (const key of keys) if (medium[key] !== undefined) refuse(key, message);
+  };
   if (medium.material !== undefined) {
-    for (const key of ['index', 'voigt', 'extraordinary', 'axis', 'quadratic', 'epsilon'] as const) {
-      if (medium[key] !== undefined)
-        refuse(key, 'cannot stand beside material: the library gives the constants');
-    }
+    refuseBeside(
+      [...constantKeys, 'orientationDeg'],
+      'cannot stand beside material: the library gives the constants',
+    );
     return;
   }
-  if (medium.version !== undefined) refuse('version', 'needs material');
-  if (medium.assumeConstant !== undefined) refuse('assumeConstant', 'needs material');
+  refuseBeside(['version', 'assumeConstant'], 'needs material');
   if (medium.epsilon !== undefined) {
-    for (const key of ['index', 'voigt', 'm', 'extraordinary', 'axis', 'quadratic'] as const) {
-      if (medium[key] !== undefined) refuse(key, 'cannot stand beside epsilon, which replaces it');
-    }
+    refuseBeside(
+      ['index', 'voigt', 'm', 'extraordinary', 'axis', 'quadratic', 'mixture'],
+      'cannot stand beside epsilon, which replaces it',
+    );
     return;
   }
-  if (medium.index === undefined) refuse('index', 'is required (or epsilon)');
+  if (medium.mixture !== undefined) {
+    refuseBeside(
+      ['index', 'voigt', 'm', 'extraordinary', 'axis', 'quadratic', 'orientationDeg'],
+      'cannot stand beside mixture: its parts give the constants',
+    );
+    return;
+  }
+  if (medium.index === undefined) refuse('index', 'is required (or epsilon, or mixture)');
   if (medium.quadratic !== undefined && medium.extraordinary !== undefined) {
     refuse('quadratic', 'cannot stand beside extraordinary');
   }
@@ -136,6 +209,10 @@ export function checkMediumKeys(medium: LibraryMediumInput, context: z.Refinemen
     refuse('axis', 'is required with extraordinary (three numbers)');
   }
   if (medium.axis !== undefined && medium.extraordinary === undefined) refuse('axis', 'needs extraordinary');
+  const hasAxes = medium.extraordinary !== undefined || medium.quadratic !== undefined;
+  if (medium.orientationDeg !== undefined && !hasAxes) {
+    refuse('orientationDeg', 'needs axes to turn: epsilon, extraordinary or quadratic');
+  }
 }
 
 export const mediumSchema = mediumObjectSchema.superRefine(checkMediumKeys);

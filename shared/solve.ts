@@ -1,7 +1,13 @@
 import { z } from 'zod';
 import { complexPairSchema } from './complex.ts';
 import { LIMITS } from './limits.ts';
-import { checkMediumKeys, libraryFields, libraryMediumSchema, mediumFields, mediumSchema } from './medium.ts';
+import {
+  checkMediumKeys,
+  libraryMediumFields,
+  libraryMediumSchema,
+  mediumFields,
+  mediumSchema,
+} from './medium.ts';
 import type { LibraryMediumInput, MediumInput } from './medium.ts';
 import { strictObject } from './strictObject.ts';
 
@@ -21,16 +27,21 @@ const repeat = z
   .max(LIMITS.repeat)
   .meta({ description: 'How often the block stands in the stack.' });
 
-export type LayerInput = MediumInput & { thicknessNm: number };
+/** Width of the zone, centred on the upper face, in which the composition runs evenly from the medium above. */
+const gradedNm = z.number().min(0).optional().meta({
+  description: 'Width in nm of a graded interface with the medium above, half of it in either layer.',
+});
+
+export type LayerInput = MediumInput & { thicknessNm: number; gradedNm?: number | undefined };
 export type BlockInput = { repeat: number; layers: StackItemInput[] };
 export type StackItemInput = LayerInput | BlockInput;
 
-export type LibraryLayerInput = LibraryMediumInput & { thicknessNm: number };
+export type LibraryLayerInput = LibraryMediumInput & { thicknessNm: number; gradedNm?: number | undefined };
 export type LibraryBlockInput = { repeat: number; layers: LibraryStackItemInput[] };
 export type LibraryStackItemInput = LibraryLayerInput | LibraryBlockInput;
 
-const layerSchema = strictObject({ thicknessNm, ...mediumFields }).superRefine(checkMediumKeys);
-const libraryLayerSchema = strictObject({ thicknessNm, ...mediumFields, ...libraryFields }).superRefine(
+const layerSchema = strictObject({ thicknessNm, gradedNm, ...mediumFields }).superRefine(checkMediumKeys);
+const libraryLayerSchema = strictObject({ thicknessNm, gradedNm, ...libraryMediumFields }).superRefine(
   checkMediumKeys,
 );
 
@@ -78,22 +89,45 @@ const backsideFields = {
   thicknessNm: z.number().min(0),
 };
 
+const weights = z.array(z.number().min(0)).min(1);
+
+/**
+ * Averages of intensities over neighbouring points. The wavelengths of the case come in groups of as many as there
+ * are wavelengthWeights, each group one point of the answer; angles likewise. Weights add up to 1.
+ */
+const averageSchema = strictObject({
+  wavelengthWeights: weights.optional(),
+  angleWeights: weights.optional(),
+  /** All layers thicker by a common factor, as over a film that is not uniform under the beam. */
+  thickness: z
+    .array(strictObject({ factor: z.number().min(0), weight: z.number().min(0) }))
+    .min(1)
+    .optional(),
+}).optional();
+
+const substrateSchema = strictObject({ gradedNm, ...mediumFields }).superRefine(checkMediumKeys);
+const librarySubstrateSchema = strictObject({ gradedNm, ...libraryMediumFields }).superRefine(
+  checkMediumKeys,
+);
+
 export const solveCaseSchema = strictObject({
   ...caseFields,
   outputs,
+  average: averageSchema,
   backside: strictObject({ ...backsideFields, exit: mediumSchema }).optional(),
   incident: mediumSchema,
   layers: z.array(stackItemSchema),
-  substrate: mediumSchema,
+  substrate: substrateSchema,
 });
 
 export const librarySolveCaseSchema = strictObject({
   ...caseFields,
   outputs,
+  average: averageSchema,
   backside: strictObject({ ...backsideFields, exit: libraryMediumSchema }).optional(),
   incident: libraryMediumSchema,
   layers: z.array(libraryStackItemSchema),
-  substrate: libraryMediumSchema,
+  substrate: librarySubstrateSchema,
 });
 
 export const solveRequestSchema = strictObject({ cases: z.array(solveCaseSchema).min(1) });
@@ -181,6 +215,9 @@ export const solveResponseSchema = z.object({
   results: z.array(
     z.object({
       points: z.array(solvePointSchema),
+      graded: z.object({ slices: z.int(), change: z.number() }).optional().meta({
+        description: 'Slices per graded interface, and the last change of any amplitude when they doubled.',
+      }),
       resolved: solveCaseSchema.optional().meta({
         description: 'Over HTTP, when a medium was named by library id: the case with the samples used.',
       }),

@@ -3,7 +3,12 @@ import { toComplex } from './complex.ts';
 import type { Issue } from './error.ts';
 import { LIMITS } from './limits.ts';
 import type { LibraryMediumInput } from './medium.ts';
-import type { LibrarySolveCase, LibrarySolveRequest, LibraryStackItemInput } from './solve.ts';
+import type {
+  LibraryLayerInput,
+  LibrarySolveCase,
+  LibrarySolveRequest,
+  LibraryStackItemInput,
+} from './solve.ts';
 
 /**
  * The rules of a request that need more than one field: counts of samples, the incident medium, depth and size of
@@ -24,11 +29,13 @@ export function checkSolveRequest(
     points += wavelengths * (Array.isArray(one.angleDeg) ? one.angleDeg.length : 1);
     forEachMedium(one, (medium, where) => checkSamples(medium, `${path}.${where}`, wavelengths, issues));
     checkIncident(one.incident, `${path}.incident`, issues);
+    checkAverage(one, path, wavelengths, issues);
+    checkGraded(one, path, issues);
     if (one.backside) {
       checkIsotropic(one.substrate, `${path}.substrate`, 'the slab of an incoherent backside', issues);
       checkIsotropic(one.backside.exit, `${path}.backside.exit`, 'the exit medium', issues);
-      checkBacksideOutputs(one.outputs ?? [], `${path}.outputs`, issues);
     }
+    if (one.backside || one.average) checkIntensityOutputs(one.outputs ?? [], `${path}.outputs`, issues);
     const expanded = expandedLayers(one.layers, `${path}.layers`, 0, issues);
     if (expanded > LIMITS.expandedLayers) {
       issues.push({
@@ -78,6 +85,60 @@ function checkSamples(medium: LibraryMediumInput, path: string, wavelengths: num
   }
 }
 
+/** Groups that come out even, weights that add up to 1. */
+function checkAverage(one: LibrarySolveCase, path: string, wavelengths: number, issues: Issue[]): void {
+  const { average } = one;
+  if (!average) return;
+  const refuse = (key: string, message: string) => issues.push({ path: `${path}.average.${key}`, message });
+  const angles = Array.isArray(one.angleDeg) ? one.angleDeg.length : 1;
+  const lists = [
+    { key: 'wavelengthWeights', weights: average.wavelengthWeights, count: wavelengths, what: 'wavelengths' },
+    { key: 'angleWeights', weights: average.angleWeights, count: angles, what: 'angles' },
+    { key: 'thickness', weights: average.thickness?.map(({ weight }) => weight), count: 0, what: '' },
+  ];
+  for (const { key, weights, count, what } of lists) {
+    if (!weights) continue;
+    const sum = weights.reduce((total, weight) => total + weight, 0);
+    if (Math.abs(sum - 1) > 1e-9) refuse(key, `weights must add up to 1, got ${sum}`);
+    if (count % weights.length !== 0) {
+      refuse(key, `the ${what} must come in groups of ${weights.length}, got ${count}`);
+    }
+  }
+}
+
+/** A graded interface needs room in both layers, and two media that can be mixed. */
+function checkGraded(one: LibrarySolveCase, path: string, issues: Issue[]): void {
+  const isGraded = (layer: { gradedNm?: number | undefined }) => (layer.gradedNm ?? 0) > 0;
+  const sequence: { layer: LibraryLayerInput; where: string }[] = [];
+  const visit = (items: LibraryStackItemInput[], where: string) =>
+    items.forEach((item, index) => {
+      if (!('layers' in item)) sequence.push({ layer: item, where: `${where}[${index}]` });
+      // Twice is enough to meet every neighbour a repeated layer has.
+      else for (let n = 0; n < Math.min(2, item.repeat); n++) visit(item.layers, `${where}[${index}].layers`);
+    });
+  visit(one.layers, `${path}.layers`);
+  sequence.push({ layer: { ...one.substrate, thicknessNm: Infinity }, where: `${path}.substrate` });
+  if (!sequence.some(({ layer }) => isGraded(layer))) return;
+  const refuse = (where: string, message: string) => {
+    const full = `${where}.gradedNm`;
+    if (!issues.some((issue) => issue.path === full)) issues.push({ path: full, message });
+  };
+  sequence.forEach(({ layer, where }, index) => {
+    const below = sequence[index + 1];
+    const used = ((layer.gradedNm ?? 0) + (below?.layer.gradedNm ?? 0)) / 2;
+    if (used > layer.thicknessNm) {
+      const here = isGraded(layer) ? where : (below?.where ?? where);
+      refuse(here, `needs ${used} nm of a layer of ${layer.thicknessNm} nm: make the interface narrower`);
+    }
+    if (!isGraded(layer)) return;
+    for (const medium of [layer, sequence[index - 1]?.layer ?? one.incident]) {
+      for (const key of ['extraordinary', 'quadratic', 'epsilon', 'mixture'] as const) {
+        if (medium[key] !== undefined) refuse(where, `cannot grade between media one of which has ${key}`);
+      }
+    }
+  });
+}
+
 /** A thick slab and what lies behind it have one index each (physics.md section 6). */
 function checkIsotropic(medium: LibraryMediumInput, path: string, what: string, issues: Issue[]): void {
   for (const key of ['extraordinary', 'quadratic', 'epsilon'] as const) {
@@ -90,12 +151,12 @@ function checkIsotropic(medium: LibraryMediumInput, path: string, what: string, 
 }
 
 /** Where intensities add there are no amplitudes to take apart. */
-function checkBacksideOutputs(outputs: readonly string[], path: string, issues: Issue[]): void {
+function checkIntensityOutputs(outputs: readonly string[], path: string, issues: Issue[]): void {
   outputs.forEach((output, index) => {
     if (output === 'mueller') return;
     issues.push({
       path: `${path}[${index}]`,
-      message: `${output} needs amplitudes, which an incoherent backside does not have; ask for it without backside`,
+      message: `${output} needs amplitudes; ask for it without backside and average, which add intensities`,
     });
   });
 }

@@ -1,19 +1,19 @@
 import { z } from 'zod';
 import { vectorSchema } from './complex.ts';
 import { LIMITS } from './limits.ts';
-import { checkMediumKeys, libraryFields, magnetizationSchema, mediumFields } from './medium.ts';
+import { checkMediumKeys, libraryMediumFields, magnetizationSchema } from './medium.ts';
+import { spreadShapes } from './spread.ts';
 import { strictObject } from './strictObject.ts';
 
 /**
  * A stack as people edit it: media by library id or by typed-in constants, every layer with an id of its own so
  * that a sweep can name it however the stack is reordered. stackCase.ts turns it into a solve case.
  */
-const { m: _m, ...constantFields } = mediumFields;
+const { m: _m, ...constantFields } = libraryMediumFields;
 
 /** What fills a layer: `{material, version}` of the library, or constants typed in (then `label` names them). */
 export const stackMediumSchema = strictObject({
   ...constantFields,
-  ...libraryFields,
   label: z.string().max(LIMITS.nameLength).optional(),
 }).superRefine(checkMediumKeys);
 
@@ -31,6 +31,25 @@ export const stackLayerSchema = strictObject({
   fixed: z.boolean().optional(),
   /** Role in the film, such as cap or buffer. */
   note: z.string().max(LIMITS.nameLength).optional(),
+  /** Width of the graded interface with the medium above. */
+  gradedNm: z.number().min(0).optional(),
+  /** Parts of a magnetic layer at its faces that carry no magnetization; they belong to its thickness. */
+  dead: strictObject({ topNm: z.number().min(0), bottomNm: z.number().min(0) }).optional(),
+  /** The upper part of the layer has turned into an oxide: `consumedNm` of it into `expansion` times as much. */
+  oxide: strictObject({
+    medium: stackMediumSchema,
+    consumedNm: z.number().min(0),
+    expansion: z.number().min(0.1).max(10),
+  }).optional(),
+}).superRefine((layer, context) => {
+  const dead = (layer.dead?.topNm ?? 0) + (layer.dead?.bottomNm ?? 0);
+  const left = layer.thicknessNm - (layer.oxide?.consumedNm ?? 0);
+  const refuse = (path: string[], message: string) => context.addIssue({ code: 'custom', path, message });
+  if (left < 0) {
+    refuse(['oxide', 'consumedNm'], `must not exceed the layer's thickness (${layer.thicknessNm} nm)`);
+  } else if (dead > left) {
+    refuse(['dead'], `the dead parts (${dead} nm) must fit into the ${left} nm of the layer`);
+  }
 });
 
 export type StackLayer = z.infer<typeof stackLayerSchema>;
@@ -82,6 +101,16 @@ export const stackDocumentSchema = strictObject({
   substrate: stackMediumSchema,
   /** Magnetization of a magnetic substrate. */
   substrateM: magnetizationSchema.optional(),
+  substrateGradedNm: z.number().min(0).optional(),
+  /** The substrate is a thick slab; inner reflections add in intensity, `exit` lies behind it. */
+  backside: strictObject({ thicknessNm: z.number().min(0), exit: stackMediumSchema }).optional(),
+  /** Averages over what light and film are not sharp in; standard deviations of the stated shape. */
+  spread: strictObject({
+    shape: z.enum(spreadShapes),
+    thicknessPercent: z.number().min(0).max(30).optional(),
+    divergenceDeg: z.number().min(0).max(10).optional(),
+    bandwidthNm: z.number().min(0).max(200).optional(),
+  }).optional(),
   workingPoint: workingPointSchema,
 }).superRefine((document, context) => {
   const seen = new Set<string>();

@@ -1,6 +1,8 @@
 import type { Vector } from './complex.ts';
 import type { LibraryMediumInput, TensorInput } from './medium.ts';
-import type { LibrarySolveCase, LibraryStackItemInput } from './solve.ts';
+import type { LibraryLayerInput, LibrarySolveCase, LibraryStackItemInput } from './solve.ts';
+import type { Node } from './spread.ts';
+import { spreadNodes } from './spread.ts';
 import type { StackDocument, StackItem, StackLayer, StackMedium, WorkingMagnetization } from './stack.ts';
 
 /**
@@ -12,6 +14,9 @@ export type MagnetizationState = 'given' | 'zero' | 'reversed';
 /**
  * A stack document as a case of the solve contract, with the magnetization of the working point put in.
  *
+ * Dead layers and oxides become layers of their own; spreads become groups of wavelengths and angles with weights
+ * (`average`), in which each wavelength and angle asked for is one group.
+ *
  * @param wavelengthNm vacuum wavelength or wavelengths, nm
  * @param angleDeg angle or angles of incidence, deg
  * @param magnetization as drawn, reversed, or one direction for every layer that has an m and is not fixed
@@ -22,29 +27,87 @@ export function toSolveCase(
   angleDeg: number | number[],
   magnetization: WorkingMagnetization = document.workingPoint.magnetization,
 ): LibrarySolveCase {
-  const layerOf = (layer: StackLayer): LibraryStackItemInput => ({
-    ...mediumOf(
-      layer.medium,
-      workingM(layer.m, layer.fixed ?? false, magnetization),
-      magnetization,
-      layer.fixed,
-    ),
-    thicknessNm: layer.thicknessNm,
-  });
-  const itemOf = (item: StackItem): LibraryStackItemInput =>
-    'layers' in item ? { repeat: item.repeat, layers: item.layers.map(itemOf) } : layerOf(item);
+  const itemsOf = (item: StackItem): LibraryStackItemInput[] =>
+    'layers' in item
+      ? [{ repeat: item.repeat, layers: item.layers.flatMap(itemsOf) }]
+      : layersOf(item, magnetization);
+  const { substrateGradedNm, backside } = document;
+  const substrateM = workingM(document.substrateM, false, magnetization);
   return {
-    wavelengthNm,
-    angleDeg,
+    ...spreadOf(document, wavelengthNm, angleDeg),
     incident: mediumOf(document.incident, undefined, magnetization),
-    layers: document.layers.map(itemOf),
-    substrate: mediumOf(
-      document.substrate,
-      workingM(document.substrateM, false, magnetization),
-      magnetization,
-    ),
+    layers: document.layers.flatMap(itemsOf),
+    substrate: {
+      ...mediumOf(document.substrate, substrateM, magnetization),
+      ...(substrateGradedNm ? { gradedNm: substrateGradedNm } : {}),
+    },
+    ...(backside
+      ? {
+          backside: {
+            incoherent: true,
+            thicknessNm: backside.thicknessNm,
+            exit: mediumOf(backside.exit, undefined, magnetization),
+          },
+        }
+      : {}),
   };
 }
+
+/** One layer as drawn: oxide on top, then dead, live and dead part; most have only the live one. */
+function layersOf(layer: StackLayer, magnetization: WorkingMagnetization): LibraryLayerInput[] {
+  const { medium, fixed = false, oxide, dead } = layer;
+  const m = workingM(layer.m, fixed, magnetization);
+  const live = mediumOf(medium, m, magnetization, fixed);
+  const silent = m === undefined ? live : mediumOf(medium, [0, 0, 0], magnetization, fixed);
+  const topNm = dead?.topNm ?? 0;
+  const bottomNm = dead?.bottomNm ?? 0;
+  const consumedNm = oxide?.consumedNm ?? 0;
+  const parts: LibraryLayerInput[] = [];
+  if (oxide && consumedNm > 0) {
+    const oxideMedium = mediumOf(oxide.medium, undefined, magnetization);
+    parts.push({ ...oxideMedium, thicknessNm: consumedNm * oxide.expansion });
+  }
+  if (topNm > 0) parts.push({ ...silent, thicknessNm: topNm });
+  parts.push({ ...live, thicknessNm: layer.thicknessNm - consumedNm - topNm - bottomNm });
+  if (bottomNm > 0) parts.push({ ...silent, thicknessNm: bottomNm });
+  if (layer.gradedNm) parts[0] = { ...parts[0]!, gradedNm: layer.gradedNm };
+  return parts;
+}
+
+function spreadOf(
+  document: StackDocument,
+  wavelengthNm: number | number[],
+  angleDeg: number | number[],
+): Pick<LibrarySolveCase, 'wavelengthNm' | 'angleDeg' | 'average'> {
+  const { spread } = document;
+  const { bandwidthNm = 0, divergenceDeg = 0, thicknessPercent = 0, shape = 'normal' } = spread ?? {};
+  if (bandwidthNm === 0 && divergenceDeg === 0 && thicknessPercent === 0) return { wavelengthNm, angleDeg };
+  const nodesOf = (values: number | number[], deviation: number) =>
+    [values].flat().map((value) => spreadNodes(value, deviation, shape));
+  const wavelengths = nodesOf(wavelengthNm, bandwidthNm);
+  const angles = nodesOf(angleDeg, divergenceDeg);
+  const weights = (groups: Node[][]) => groups[0]!.map(({ weight }) => weight);
+  return {
+    wavelengthNm: wavelengths.flat().map(({ value }) => value),
+    // A beam spread about the normal reaches it from both sides; past grazing there is no beam.
+    angleDeg: angles.flat().map(({ value }) => Math.min(Math.abs(value), GRAZING_DEG)),
+    average: {
+      ...(bandwidthNm > 0 ? { wavelengthWeights: weights(wavelengths) } : {}),
+      ...(divergenceDeg > 0 ? { angleWeights: weights(angles) } : {}),
+      ...(thicknessPercent > 0
+        ? {
+            thickness: spreadNodes(1, thicknessPercent / 100, shape).map(({ value, weight }) => ({
+              factor: value,
+              weight,
+            })),
+          }
+        : {}),
+    },
+  };
+}
+
+/** The last angle that an average over the divergence uses. */
+const GRAZING_DEG = 89.999;
 
 function workingM(
   m: Vector | undefined,
@@ -70,7 +133,21 @@ function mediumOf(
 ): LibraryMediumInput {
   const { label: _label, ...constants } = medium;
   const reversed = magnetization.mode === 'reversed' && !fixed ? reversedTensor(constants) : constants;
-  return m === undefined ? reversed : { ...reversed, m };
+  if (m === undefined) return reversed;
+  const { mixture } = reversed;
+  if (!mixture) return { ...reversed, m };
+  // The m of a mixed layer is that of its magnetic part.
+  const [first, second] = mixture.parts;
+  return {
+    ...reversed,
+    mixture: {
+      ...mixture,
+      parts: [
+        { ...first, m },
+        { ...second, m },
+      ],
+    },
+  };
 }
 
 /** The case with every magnetization taken away (`zero`) or turned round (`reversed`), free tensors included. */
@@ -81,8 +158,16 @@ export function inMagnetizationState<Case extends LibrarySolveCase>(
   if (state === 'given') return given;
   const change = <Medium extends LibraryMediumInput>(medium: Medium): Medium => {
     const tensors = state === 'zero' ? symmetricTensor(medium) : reversedTensor(medium);
-    if (tensors.m === undefined) return tensors;
-    return { ...tensors, m: state === 'zero' ? [0, 0, 0] : negated(tensors.m) };
+    const { mixture } = tensors;
+    if (mixture) {
+      const [first, second] = mixture.parts;
+      return { ...tensors, mixture: { ...mixture, parts: [changeM(first), changeM(second)] } };
+    }
+    return changeM(tensors);
+  };
+  const changeM = <Part extends { m?: Vector | undefined }>(part: Part): Part => {
+    if (part.m === undefined) return part;
+    return { ...part, m: state === 'zero' ? [0, 0, 0] : negated(part.m) };
   };
   const changeItem = (item: LibraryStackItemInput): LibraryStackItemInput =>
     'layers' in item ? { ...item, layers: item.layers.map(changeItem) } : change(item);

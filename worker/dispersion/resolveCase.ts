@@ -1,7 +1,7 @@
 import type { Complex } from '../../shared/complex.ts';
 import type { Issue } from '../../shared/error.ts';
 import type { MaterialContent } from '../../shared/material.ts';
-import type { LibraryMediumInput, MediumInput } from '../../shared/medium.ts';
+import type { LibraryMediumInput, MediumInput, MixtureInput } from '../../shared/medium.ts';
 import type {
   LibrarySolveCase,
   LibraryStackItemInput,
@@ -26,6 +26,9 @@ export class ResolutionError extends Error {
 
 type Constants = Pick<MediumInput, 'index' | 'voigt'>;
 
+/** What may name a material: a medium or a part of a mixture. */
+type ByName = Pick<LibraryMediumInput, 'material' | 'version' | 'assumeConstant' | 'm' | 'index' | 'voigt'>;
+
 /**
  * A case with numbers in place of library ids, one sample per wavelength where the case lists several.
  * Layers of one material share their samples. `m` is kept as it stands; the Voigt constant is put in only where
@@ -41,19 +44,28 @@ export function resolveCase(
   const resolver = new MediumResolver(given.wavelengthNm, materials);
   const resolveItem = (item: LibraryStackItemInput, path: string): StackItemInput => {
     if ('layers' in item) return { ...item, layers: resolveItems(item.layers, `${path}.layers`) };
-    const { thicknessNm, ...medium } = item;
-    return { thicknessNm, ...resolver.resolve(medium, path) };
+    const { thicknessNm, gradedNm, ...medium } = item;
+    return { thicknessNm, ...graded(gradedNm), ...resolver.resolve(medium, path) };
   };
   const resolveItems = (items: LibraryStackItemInput[], path: string) =>
     items.map((item, position) => resolveItem(item, `${path}[${position}]`));
+  const { gradedNm, ...substrate } = given.substrate;
+  const { backside, ...rest } = given;
   const resolved: SolveCase = {
-    ...given,
+    ...rest,
     incident: resolver.resolve(given.incident, 'incident'),
     layers: resolveItems(given.layers, 'layers'),
-    substrate: resolver.resolve(given.substrate, 'substrate'),
+    substrate: { ...graded(gradedNm), ...resolver.resolve(substrate, 'substrate') },
+    ...(backside
+      ? { backside: { ...backside, exit: resolver.resolve(backside.exit, 'backside.exit') } }
+      : {}),
   };
   if (resolver.issues.length > 0) throw new ResolutionError(resolver.issues);
   return resolved;
+}
+
+function graded(gradedNm: number | undefined): { gradedNm?: number } {
+  return gradedNm === undefined ? {} : { gradedNm };
 }
 
 class MediumResolver {
@@ -75,6 +87,18 @@ class MediumResolver {
   }
 
   resolve(medium: LibraryMediumInput, path: string): MediumInput {
+    const { mixture, ...plain } = medium;
+    const resolved = this.resolvePlain(plain, path);
+    if (!mixture) return resolved;
+    const part = (position: 0 | 1): MixtureInput['parts'][0] =>
+      this.resolvePlain(mixture.parts[position], `${path}.mixture.parts[${position}]`);
+    return { ...resolved, mixture: { ...mixture, parts: [part(0), part(1)] } };
+  }
+
+  private resolvePlain<Plain extends ByName>(
+    medium: Plain,
+    path: string,
+  ): Omit<Plain, 'material' | 'version' | 'assumeConstant'> & Constants {
     const { material: id, version, assumeConstant = false, ...rest } = medium;
     if (id === undefined) return rest;
     const magnetized = rest.m !== undefined && rest.m.some((component) => component !== 0);

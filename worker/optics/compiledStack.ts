@@ -2,6 +2,8 @@ import type { Complex } from '../../shared/complex.ts';
 import { toComplex } from '../../shared/complex.ts';
 import type { MediumInput } from '../../shared/medium.ts';
 import type { SolveCase, StackItemInput } from '../../shared/solve.ts';
+import type { GradedLayer } from './gradedInterfaces.ts';
+import { gradeSequence } from './gradedInterfaces.ts';
 import { Medium, sampleAt, samplesOf } from './medium.ts';
 
 /** A layer as written in the case; a block refers to it as often as it repeats. */
@@ -10,6 +12,15 @@ export type WrittenLayer = {
   path: number[];
   medium: Medium;
   thicknessNm: number;
+};
+
+export type CompileOptions = {
+  /** Every layer of the expanded stack has a medium of its own, for `isolateGyration`. */
+  separateLayers?: boolean;
+  /** Slices per graded interface. */
+  slices?: number;
+  /** Light comes from the substrate: the order is reversed and every tensor mirrored in the film plane. */
+  fromBelow?: boolean;
 };
 
 /** A solve case with equal media shared and blocks expanded; what every computation on it starts from. */
@@ -21,20 +32,19 @@ export class CompiledStack {
   readonly substrate: Medium;
   readonly written: WrittenLayer[] = [];
   /** Layers in the order in which light meets them, blocks expanded. */
-  readonly sequence: WrittenLayer[];
+  sequence: WrittenLayer[] = [];
 
   readonly #incidentIndex: Complex[];
   readonly #byPath = new Map<string, WrittenLayer>();
   #loaded = -1;
 
-  /**
-   * @param solveCase a case that has passed `solveCaseSchema` and `checkSolveRequest`
-   * @param options.separateLayers every layer of the expanded stack has a medium of its own, for `isolateGyration`
-   */
-  constructor(solveCase: SolveCase, options: { separateLayers?: boolean } = {}) {
+  /** @param solveCase a case that has passed `solveCaseSchema` and `checkSolveRequest` */
+  constructor(solveCase: SolveCase, options: CompileOptions = {}) {
     this.wavelengthsNm = Float64Array.from([solveCase.wavelengthNm].flat());
     this.anglesDeg = Float64Array.from([solveCase.angleDeg].flat());
-    this.#incidentIndex = samplesOf(solveCase.incident.index, toComplex) ?? [[1, 0]];
+    const { gradedNm = 0, ...bottom } = solveCase.substrate;
+    const [entry, exit] = options.fromBelow ? [bottom, solveCase.incident] : [solveCase.incident, bottom];
+    this.#incidentIndex = samplesOf(entry.index, toComplex) ?? [[1, 0]];
     const shared = new Map<string, Medium>();
     const mediumOf = (input: MediumInput): Medium => {
       const key = JSON.stringify(input);
@@ -45,40 +55,48 @@ export class CompiledStack {
       this.media.push(medium);
       return medium;
     };
-    this.substrate = mediumOf(solveCase.substrate);
+    this.substrate = mediumOf(exit);
     const layers = this.#compile(solveCase.layers, [], mediumOf);
-    this.sequence = options.separateLayers ? this.#separated(layers) : layers;
+    const isGraded = gradedNm > 0 || layers.some((layer) => layer.gradedNm > 0);
+    if (isGraded) {
+      const last = { path: [], medium: new Medium(bottom), thicknessNm: Infinity, gradedNm };
+      const graded = gradeSequence([...layers, last], solveCase.incident, options.slices ?? 1);
+      this.#replaceLayers(graded.slice(0, -1));
+    } else {
+      this.sequence = layers;
+    }
+    if (options.fromBelow) {
+      this.sequence.reverse();
+      for (const medium of this.media) medium.mirrored = true;
+    }
+    if (options.separateLayers) {
+      this.#replaceLayers(this.sequence.map((layer) => ({ ...layer, medium: layer.medium.copy() })));
+    }
   }
 
-  #compile(
-    items: StackItemInput[],
-    path: number[],
-    mediumOf: (input: MediumInput) => Medium,
-  ): WrittenLayer[] {
+  #compile(items: StackItemInput[], path: number[], mediumOf: (input: MediumInput) => Medium): GradedLayer[] {
     return items.flatMap((item, position) => {
       const here = [...path, position];
       if ('layers' in item) {
         const block = this.#compile(item.layers, here, mediumOf);
         return Array.from({ length: item.repeat }, () => block).flat();
       }
-      const { thicknessNm, ...constants } = item;
-      const layer = { path: here, medium: mediumOf(constants), thicknessNm };
+      const { thicknessNm, gradedNm = 0, ...constants } = item;
+      const layer = { path: here, medium: mediumOf(constants), thicknessNm, gradedNm };
       this.written.push(layer);
       this.#byPath.set(here.join('/'), layer);
       return layer;
     });
   }
 
-  #separated(layers: WrittenLayer[]): WrittenLayer[] {
-    const separate = layers.map((layer) => ({ ...layer, medium: layer.medium.copy() }));
+  /** Layers that are no longer those written: thicknesses then belong to the case, not to `layerAt`. */
+  #replaceLayers(layers: WrittenLayer[]): void {
+    this.sequence = layers;
+    this.#byPath.clear();
     this.written.length = 0;
+    this.written.push(...layers);
     this.media.length = 0;
-    this.media.push(this.substrate);
-    for (const layer of separate) {
-      this.written.push(layer);
-      this.media.push(layer.medium);
-    }
-    return separate;
+    this.media.push(this.substrate, ...new Set(layers.map((layer) => layer.medium)));
   }
 
   /** Leaves one layer of a separated stack its gyration, times `factor`; the substrate comes last. */

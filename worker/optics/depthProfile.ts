@@ -9,7 +9,7 @@ import { Medium } from './medium.ts';
 import { Modes } from './modes.ts';
 import { FieldState, LayerStep } from './recursion.ts';
 import type { Tensor } from './tensor.ts';
-import { addGyration, createTensor, element, scaleAntisymmetricPart } from './tensor.ts';
+import { addGyration, createTensor, element, mirror, scaleAntisymmetricPart } from './tensor.ts';
 
 /** Ex, Ey, Ez for unit incident light, as re, im: six doubles. */
 type Field = Float64Array;
@@ -235,12 +235,9 @@ function withoutGyration(medium: Medium): Medium {
   return Medium.fromTensor(tensor);
 }
 
-/** Turned by 180 deg about z: the elements that couple z with x and y change sign. */
+/** Turned by 180 deg about z. */
 function turnedHalfRound(medium: Medium): Medium {
   const tensor = medium.tensor.slice();
-  for (const i of [2, 5, 6, 7]) {
-    tensor[2 * i] = -tensor[2 * i]!;
-    tensor[2 * i + 1] = -tensor[2 * i + 1]!;
-  }
+  mirror(tensor);
   return Medium.fromTensor(tensor);
 }

@@ -77,7 +77,10 @@ function contributionsOf(
   const { point, stack } = solver;
   const at = (i: number): Complex => [point.r[i]!, point.r[i + 1]!];
   const given = { sp: at(4), ps: at(2), pp: at(0) };
-  const zero = new StackSolver(inMagnetizationState(solveCase, 'zero')).solve(wavelengthIndex, angleDeg);
+  const zero = new StackSolver(inMagnetizationState(solveCase, 'zero'), solver.options).solve(
+    wavelengthIndex,
+    angleDeg,
+  );
   const unmagnetized = (i: number): Complex => [zero.r[i]!, zero.r[i + 1]!];
   let depthNm = 0;
   const layers = shares.flatMap((share, position) => {

@@ -1,6 +1,5 @@
-import type { Complex, Vector } from '../../shared/complex.ts';
-import type { MediumInput, TensorInput } from '../../shared/medium.ts';
-import type { SolveCase, StackItemInput } from '../../shared/solve.ts';
+import type { Complex } from '../../shared/complex.ts';
+import type { SolveCase } from '../../shared/solve.ts';
 import { forwardRoot, minus, over, plus, times } from './complexNumber.ts';
 import type { Geometry } from './geometry.ts';
 import { incidenceGeometry } from './geometry.ts';
@@ -30,12 +29,16 @@ export class IncoherentSlabSolver {
   readonly #exit: Medium;
   readonly #thicknessNm: number;
 
-  /** @param solveCase a valid case with `backside` */
-  constructor(solveCase: SolveCase) {
+  /**
+   * @param solveCase a valid case with `backside`
+   * @param slices per graded interface
+   */
+  constructor(solveCase: SolveCase, slices?: number) {
     const { backside, ...front } = solveCase;
     if (!backside) throw new TypeError('the case has no backside');
-    this.front = new StackSolver(front);
-    this.#inside = new StackSolver(mirrored(front));
+    const options = slices === undefined ? {} : { slices };
+    this.front = new StackSolver(front, options);
+    this.#inside = new StackSolver(front, { ...options, fromBelow: true });
     this.#slab = new Medium(solveCase.substrate);
     this.#exit = new Medium(backside.exit);
     this.#thicknessNm = backside.thicknessNm;
@@ -105,50 +108,4 @@ function crossReversed(jones: Matrix2): Matrix2 {
   const out = Float64Array.from(jones);
   for (let i = 2; i < 6; i++) out[i] = -out[i]!;
   return out;
-}
-
-/**
- * The stack as seen from inside the slab: reversed order, mirrored in the film plane. m is an axial vector and keeps
- * its z component, an optic axis is a polar one and turns it, a tensor changes the sign of xz and yz.
- */
-function mirrored(solveCase: SolveCase): SolveCase {
-  const item = (one: StackItemInput): StackItemInput =>
-    'layers' in one
-      ? { repeat: one.repeat, layers: one.layers.map(item).reverse() }
-      : { ...mirroredMedium(one), thicknessNm: one.thicknessNm };
-  return {
-    ...solveCase,
-    incident: solveCase.substrate,
-    layers: solveCase.layers.map(item).reverse(),
-    substrate: solveCase.incident,
-  };
-}
-
-function mirroredMedium(medium: MediumInput): MediumInput {
-  const axial = (v: Vector): Vector => [-v[0], -v[1], v[2]];
-  const polar = (v: Vector): Vector => [v[0], v[1], -v[2]];
-  const { m, axis, epsilon, ...rest } = medium;
-  return {
-    ...rest,
-    ...(m ? { m: axial(m) } : {}),
-    ...(axis ? { axis: polar(axis) } : {}),
-    ...(epsilon
-      ? {
-          epsilon: Array.isArray(epsilon)
-            ? mirroredTensor(epsilon)
-            : { samples: epsilon.samples.map(mirroredTensor) },
-        }
-      : {}),
-  };
-}
-
-function mirroredTensor(tensor: TensorInput): TensorInput {
-  const minusOne = (value: TensorInput[0][0]): TensorInput[0][0] =>
-    typeof value === 'number' ? -value : [-value[0], -value[1]];
-  const [x, y, z] = tensor;
-  return [
-    [x[0], x[1], minusOne(x[2])],
-    [y[0], y[1], minusOne(y[2])],
-    [minusOne(z[0]), minusOne(z[1]), z[2]],
-  ];
 }

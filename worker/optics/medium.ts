@@ -1,8 +1,11 @@
-import type { Complex, ComplexInput, Vector } from '../../shared/complex.ts';
+import type { Complex, Vector } from '../../shared/complex.ts';
 import { toComplex } from '../../shared/complex.ts';
-import type { MediumInput, TensorInput } from '../../shared/medium.ts';
-import { minus, plus, times } from './complexNumber.ts';
+import type { MediumInput, MixtureInput, TensorInput } from '../../shared/medium.ts';
+import { forwardRoot, minus, over, plus, times } from './complexNumber.ts';
 import type { Geometry } from './geometry.ts';
+import { bruggeman, maxwellGarnett } from './mixture.ts';
+import type { Rotation } from './rotation.ts';
+import { composed, eulerRotation, rotated, rotatedVector } from './rotation.ts';
 import type { QuadraticConstants, Tensor } from './tensor.ts';
 import {
   addGyration,
@@ -10,6 +13,7 @@ import {
   addUniaxial,
   createTensor,
   isMultipleOfIdentity,
+  mirror,
   scaleAntisymmetricPart,
   setScalar,
 } from './tensor.ts';
@@ -30,10 +34,13 @@ export function sampleAt<Value>(samples: Sampled<Value>, wavelengthIndex: number
   return samples.length === 1 ? samples[0]! : samples[wavelengthIndex]!;
 }
 
+/** One of two mixed media. */
+type Part = { index: Sampled<Complex>; voigt: Sampled<Complex> | null; m: Vector };
+
 /**
  * A medium of a solve case, ready to give its permittivity at one wavelength after another.
  *
- * `load` fills `tensor` and the flags; they describe the last loaded wavelength.
+ * `load` fills the public fields; they describe the last loaded wavelength.
  */
 export class Medium {
   readonly tensor: Tensor = createTensor();
@@ -43,91 +50,138 @@ export class Medium {
   scalarDiagonal = true;
   /** N where the diagonal is scalar; null for a medium given as a tensor. */
   index: Complex | null = null;
-
   /** N^2, the part of the diagonal that Q multiplies; null for a medium given as a tensor. */
   permittivity: Complex | null = null;
-  /** Q at the loaded wavelength; 0 without magneto-optic data. */
+  /** Q; 0 without magneto-optic data. */
   voigt: Complex = [0, 0];
-  readonly m: Vector;
+  m: Vector;
   /** The part of the tensor that is odd in m counts this many times; for taking layers apart. */
   gyrationScale = 1;
+  /** The tensor is mirrored in the film plane, as light from below sees it. */
+  mirrored = false;
 
-  readonly #input: MediumInput;
+  readonly input: MediumInput;
   readonly #index: Sampled<Complex> | null;
   readonly #voigt: Sampled<Complex> | null;
   readonly #extraordinary: Sampled<Complex> | null;
   readonly #epsilon: Sampled<Tensor> | null;
-  readonly #axis: Vector | null;
-  readonly #quadratic: QuadraticConstants | null;
+  readonly #orientation: Rotation | null;
+  readonly #parts: Part[] | null;
 
   /** @param input a medium that has passed `mediumSchema` */
   constructor(input: MediumInput) {
-    this.#input = input;
+    this.input = input;
     this.#index = samplesOf(input.index, toComplex);
     this.#voigt = samplesOf(input.voigt, toComplex);
     this.#extraordinary = samplesOf(input.extraordinary, toComplex);
     this.#epsilon = samplesOf(input.epsilon, tensorFrom);
     this.m = input.m ?? [0, 0, 0];
-    this.#axis = input.axis ?? null;
-    this.#quadratic = input.quadratic ? quadraticFrom(input.quadratic) : null;
+    this.#orientation = input.orientationDeg ? eulerRotation(input.orientationDeg) : null;
+    this.#parts = input.mixture?.parts.map(partFrom) ?? null;
   }
 
   /** A medium that is this tensor, at whatever wavelength; the tensor is copied. */
   static fromTensor(tensor: Tensor): Medium {
     const medium = new Medium({ index: 1 });
-    medium.tensor.set(tensor);
-    medium.index = null;
-    medium.scalarDiagonal = false;
-    medium.isotropic = isMultipleOfIdentity(tensor);
+    medium.#takeTensor(tensor);
     return medium;
   }
 
   /** The same constants with a state of their own. */
   copy(): Medium {
-    return new Medium(this.#input);
+    return new Medium(this.input);
   }
 
   /** Some constant is given per wavelength. */
   get isSampled(): boolean {
-    return [this.#index, this.#voigt, this.#extraordinary, this.#epsilon].some(
-      (samples) => (samples?.length ?? 0) > 1,
-    );
+    const own = [this.#index, this.#voigt, this.#extraordinary, this.#epsilon];
+    const mixed = this.#parts?.flatMap((part) => [part.index, part.voigt]) ?? [];
+    return [...own, ...mixed].some((samples) => (samples?.length ?? 0) > 1);
   }
 
   /** The tensor has a part that is odd in m. */
   get isGyrotropic(): boolean {
-    return this.#epsilon !== null || (this.#voigt !== null && this.m.some((component) => component !== 0));
+    if (this.#parts) return this.#parts.some(({ voigt, m }) => voigt !== null && isNonZero(m));
+    return this.#epsilon !== null || (this.#voigt !== null && isNonZero(this.m));
   }
 
   load(wavelengthIndex: number): void {
     if (this.#epsilon) {
-      this.tensor.set(sampleAt(this.#epsilon, wavelengthIndex));
-      if (this.gyrationScale !== 1) scaleAntisymmetricPart(this.tensor, this.gyrationScale);
-      this.index = null;
-      this.scalarDiagonal = false;
-      this.isotropic = isMultipleOfIdentity(this.tensor);
-      return;
+      const given = sampleAt(this.#epsilon, wavelengthIndex);
+      const tensor = this.#orientation ? rotated(given, this.#orientation) : given.slice();
+      if (this.gyrationScale !== 1) scaleAntisymmetricPart(tensor, this.gyrationScale);
+      this.#takeTensor(tensor);
+    } else if (this.#parts) {
+      this.#mix(this.#parts, wavelengthIndex);
+    } else {
+      const voigt = this.#voigt ? sampleAt(this.#voigt, wavelengthIndex) : null;
+      this.#takeIndex(sampleAt(this.#index ?? [], wavelengthIndex), voigt, wavelengthIndex);
     }
-    const index = sampleAt(this.#index ?? [], wavelengthIndex);
+    if (this.mirrored) mirror(this.tensor);
+    this.isotropic = isMultipleOfIdentity(this.tensor);
+  }
+
+  #takeTensor(tensor: Tensor): void {
+    this.tensor.set(tensor);
+    this.index = null;
+    this.permittivity = null;
+    this.scalarDiagonal = false;
+    this.isotropic = isMultipleOfIdentity(tensor);
+  }
+
+  #takeIndex(index: Complex, voigt: Complex | null, wavelengthIndex: number): void {
+    const { quadratic, axis } = this.input;
     const permittivity = times(index, index);
     setScalar(this.tensor, permittivity);
     this.index = index;
     this.permittivity = permittivity;
     this.scalarDiagonal = true;
-    if (this.#extraordinary && this.#axis) {
-      const extraordinary = sampleAt(this.#extraordinary, wavelengthIndex);
-      addUniaxial(this.tensor, index, extraordinary, this.#axis);
+    if (this.#extraordinary && axis) {
+      const turned = this.#orientation ? rotatedVector(axis, this.#orientation) : axis;
+      addUniaxial(this.tensor, index, sampleAt(this.#extraordinary, wavelengthIndex), turned);
       this.scalarDiagonal = false;
     }
-    if (this.#quadratic) {
-      addQuadratic(this.tensor, this.#quadratic, this.m);
+    if (quadratic) {
+      addQuadratic(this.tensor, quadraticFrom(quadratic, this.#orientation), this.m);
       this.scalarDiagonal = false;
     }
-    if (this.#voigt) {
-      this.voigt = sampleAt(this.#voigt, wavelengthIndex);
-      addGyration(this.tensor, permittivity, this.voigt, this.m, this.gyrationScale);
+    if (voigt) {
+      this.voigt = voigt;
+      addGyration(this.tensor, permittivity, voigt, this.m, this.gyrationScale);
     }
-    this.isotropic = isMultipleOfIdentity(this.tensor);
+  }
+
+  /** Two parts: one Q and m where only one direction of m is at work, else the tensor. */
+  #mix(parts: Part[], wavelengthIndex: number): void {
+    const permittivities = parts.map(({ index }) => {
+      const n = sampleAt(index, wavelengthIndex);
+      return times(n, n);
+    });
+    const { model, fraction } = this.input.mixture!;
+    const mix = model === 'bruggeman' ? bruggeman : maxwellGarnett;
+    const mixed = mix(permittivities[0]!, permittivities[1]!, fraction);
+    // Q eps of the mixture, part by part: the factor i is the same throughout.
+    const strengths = parts.map(({ voigt }, i): Complex =>
+      voigt ? times(mixed.weights[i]!, times(sampleAt(voigt, wavelengthIndex), permittivities[i]!)) : [0, 0],
+    );
+    const active = parts.filter(({ voigt, m }) => voigt !== null && isNonZero(m));
+    const m = active[0]?.m ?? [0, 0, 0];
+    const isOneDirection = active.every((part) => part.m.every((component, i) => component === m[i]));
+    this.#takeIndex(forwardRoot(mixed.permittivity), null, wavelengthIndex);
+    if (isOneDirection) {
+      this.m = m;
+      this.voigt = over(
+        strengths.reduce(
+          (sum, strength, i) => (active.includes(parts[i]!) ? plus(sum, strength) : sum),
+          [0, 0],
+        ),
+        mixed.permittivity,
+      );
+      addGyration(this.tensor, mixed.permittivity, this.voigt, m, this.gyrationScale);
+      return;
+    }
+    parts.forEach((part, i) => addGyration(this.tensor, [1, 0], strengths[i]!, part.m, this.gyrationScale));
+    this.#takeTensor(this.tensor.slice());
   }
 
   /**
@@ -148,12 +202,27 @@ function tensorFrom(rows: TensorInput): Tensor {
   return Float64Array.from(rows.flatMap((row) => row.flatMap((value) => toComplex(value))));
 }
 
-function quadraticFrom(input: NonNullable<MediumInput['quadratic']>): QuadraticConstants {
-  const complex = (value: ComplexInput) => toComplex(value);
+function partFrom(input: MixtureInput['parts'][0]): Part {
   return {
-    g11: complex(input.g11),
-    g12: complex(input.g12),
-    g44: complex(input.g44),
-    azimuthDeg: input.azimuthDeg ?? 0,
+    index: samplesOf(input.index, toComplex) ?? [],
+    voigt: samplesOf(input.voigt, toComplex),
+    m: input.m ?? [0, 0, 0],
+  };
+}
+
+function isNonZero(m: Vector): boolean {
+  return m.some((component) => component !== 0);
+}
+
+function quadraticFrom(
+  input: NonNullable<MediumInput['quadratic']>,
+  orientation: Rotation | null,
+): QuadraticConstants {
+  const azimuth = eulerRotation([input.azimuthDeg ?? 0, 0, 0]);
+  return {
+    g11: toComplex(input.g11),
+    g12: toComplex(input.g12),
+    g44: toComplex(input.g44),
+    crystal: orientation ? composed(orientation, azimuth) : azimuth,
   };
 }

@@ -19,7 +19,7 @@ export function sharesByDifference(
   angleDeg: number,
 ): Share[] {
   const { stack } = solver;
-  const probe = new StackSolver(solveCase, { separateLayers: true });
+  const probe = new StackSolver(solveCase, { ...solver.options, separateLayers: true });
   const kept = createMatrix2();
   const media = [...stack.sequence.map((layer) => layer.medium), stack.substrate];
   return media.map((medium, position): Share => {

@@ -1,10 +1,13 @@
 import type { Complex } from '../../shared/complex.ts';
 import type { SolveCase, SolvePoint, SolveRequest, SolveResponse } from '../../shared/solve.ts';
 import { explain } from './explain.ts';
-import { IncoherentSlabSolver } from './incoherentSlab.ts';
-import type { Mueller, Stokes } from './mueller.ts';
+import type { IntensityPoint } from './intensitySolver.ts';
+import { IntensitySolver } from './intensitySolver.ts';
+import type { Mueller } from './mueller.ts';
 import { degreeOfPolarization, polarizationOf, stokesForAzimuth } from './mueller.ts';
 import type { Jones } from './observables.ts';
+import type { Refinement } from './refine.ts';
+import { refineInterfaces } from './refine.ts';
 import type { SolvedPoint } from './stackSolver.ts';
 import { StackSolver } from './stackSolver.ts';
 import { solveWarnings } from './warnings.ts';
@@ -14,42 +17,57 @@ import { solveWarnings } from './warnings.ts';
  *
  * @param solveCase a case that has passed `solveCaseSchema` and `checkSolveRequest`
  */
-export function* solveCasePoints(solveCase: SolveCase): Generator<SolvePoint, void, void> {
-  const pointAt = pointSolver(solveCase);
-  for (const [index, wavelengthNm] of [solveCase.wavelengthNm].flat().entries()) {
-    for (const angleDeg of [solveCase.angleDeg].flat()) {
-      yield { wavelengthNm, angleDeg, ...pointAt(index, angleDeg) };
+export function* solveCasePoints(
+  solveCase: SolveCase,
+  refinement: Refinement | null = refineInterfaces(solveCase),
+): Generator<SolvePoint, void, void> {
+  const outputs = new Set(solveCase.outputs);
+  const wavelengthsNm = [solveCase.wavelengthNm].flat();
+  const anglesDeg = [solveCase.angleDeg].flat();
+  if (solveCase.backside || solveCase.average) {
+    const solver = new IntensitySolver(solveCase, refinement?.slices);
+    const { wavelengths, angles } = solver.groups;
+    const { wavelengthWeights = [1], angleWeights = [1] } = solveCase.average ?? {};
+    for (let i = 0; i < wavelengthsNm.length / wavelengths; i++) {
+      for (let j = 0; j < anglesDeg.length / angles; j++) {
+        yield {
+          wavelengthNm: weighted(wavelengthsNm, i * wavelengths, wavelengthWeights),
+          angleDeg: weighted(anglesDeg, j * angles, angleWeights),
+          ...intensityAnswer(solver.solve(i, j), outputs.has('mueller')),
+        };
+      }
+    }
+    return;
+  }
+  const solver = new StackSolver(solveCase, refinement ? { slices: refinement.slices } : {});
+  for (const [index, wavelengthNm] of wavelengthsNm.entries()) {
+    for (const angleDeg of anglesDeg) {
+      const answer = amplitudeAnswer(solver.solve(index, angleDeg));
+      yield {
+        wavelengthNm,
+        angleDeg,
+        ...answer,
+        ...(outputs.size > 0 ? explain(solver, solveCase, index, angleDeg, outputs) : {}),
+      };
     }
   }
 }
 
-type PointAnswer = Omit<SolvePoint, 'wavelengthNm' | 'angleDeg'>;
-
-function pointSolver(solveCase: SolveCase): (wavelengthIndex: number, angleDeg: number) => PointAnswer {
-  const outputs = new Set(solveCase.outputs);
-  if (solveCase.backside) {
-    const solver = new IncoherentSlabSolver(solveCase);
-    return (index, angleDeg) => {
-      const { reflection, transmission, power } = solver.solve(index, angleDeg);
-      return {
-        ...intensityAnswer(reflection, transmission, power),
-        ...(outputs.has('mueller') ? { mueller: rowsOf(reflection) } : {}),
-      };
-    };
-  }
-  const solver = new StackSolver(solveCase);
-  return (index, angleDeg) => {
-    const point = solver.solve(index, angleDeg);
-    const answer = amplitudeAnswer(point);
-    return outputs.size > 0 ? { ...answer, ...explain(solver, solveCase, index, angleDeg, outputs) } : answer;
-  };
+function weighted(values: number[], start: number, weights: number[]): number {
+  if (weights.length === 1) return values[start]!;
+  return weights.reduce((sum, weight, i) => sum + weight * values[start + i]!, 0);
 }
+
+type PointAnswer = Omit<SolvePoint, 'wavelengthNm' | 'angleDeg'>;
 
 /** All cases of a request, with the warnings that concern them. */
 export function solveRequest(request: SolveRequest): SolveResponse {
   const warnings = solveWarnings(request);
   return {
-    results: request.cases.map((one) => ({ points: [...solveCasePoints(one)] })),
+    results: request.cases.map((one) => {
+      const graded = refineInterfaces(one);
+      return { points: [...solveCasePoints(one, graded)], ...(graded ? { graded } : {}) };
+    }),
     ...(warnings.length > 0 ? { warnings } : {}),
   };
 }
@@ -71,30 +89,18 @@ function amplitudes(jones: Jones): NonNullable<SolvePoint['r']> {
   return { pp: at(0), ps: at(2), sp: at(4), ss: at(6) };
 }
 
-function intensityAnswer(
-  reflection: Mueller,
-  transmission: Mueller,
-  power: { p: number; s: number },
-): PointAnswer {
-  const reflected = { p: stokesForAzimuth(reflection, 0), s: stokesForAzimuth(reflection, 90) };
-  const through = (stokes: Stokes) =>
-    (power.p * (stokes[0]! + stokes[1]!) + power.s * (stokes[0]! - stokes[1]!)) / 2;
-  const R = { p: reflected.p[0]!, s: reflected.s[0]! };
-  const T = {
-    p: through(stokesForAzimuth(transmission, 0)),
-    s: through(stokesForAzimuth(transmission, 90)),
-  };
+function intensityAnswer({ reflection, T }: IntensityPoint, withMueller: boolean): PointAnswer {
+  const p = stokesForAzimuth(reflection, 0);
+  const s = stokesForAzimuth(reflection, 90);
   return {
     r: null,
     t: null,
-    R,
+    R: { p: p[0]!, s: s[0]! },
     T,
-    A: { p: 1 - R.p - T.p, s: 1 - R.s - T.s },
-    kerr: { p: polarizationOf(reflected.p, 0), s: polarizationOf(reflected.s, 90) },
-    degreeOfPolarization: {
-      p: degreeOfPolarization(reflected.p),
-      s: degreeOfPolarization(reflected.s),
-    },
+    A: { p: 1 - p[0]! - T.p, s: 1 - s[0]! - T.s },
+    kerr: { p: polarizationOf(p, 0), s: polarizationOf(s, 90) },
+    degreeOfPolarization: { p: degreeOfPolarization(p), s: degreeOfPolarization(s) },
+    ...(withMueller ? { mueller: rowsOf(reflection) } : {}),
   };
 }
 

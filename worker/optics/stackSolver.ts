@@ -1,6 +1,6 @@
 import type { Complex } from '../../shared/complex.ts';
 import type { SolveCase } from '../../shared/solve.ts';
-import type { WrittenLayer } from './compiledStack.ts';
+import type { CompileOptions, WrittenLayer } from './compiledStack.ts';
 import { CompiledStack } from './compiledStack.ts';
 import { forwardRoot, minus, over, plus, scaled, times } from './complexNumber.ts';
 import type { Geometry } from './geometry.ts';
@@ -30,6 +30,7 @@ export type SolvedPoint = {
  */
 export class StackSolver {
   readonly stack: CompiledStack;
+  readonly options: CompileOptions;
 
   readonly #modes: Modes[];
   readonly #substrate: Modes;
@@ -53,7 +54,8 @@ export class StackSolver {
   };
 
   /** @param solveCase a case that has passed `solveCaseSchema` and `checkSolveRequest` */
-  constructor(solveCase: SolveCase, options: { separateLayers?: boolean } = {}) {
+  constructor(solveCase: SolveCase, options: CompileOptions = {}) {
+    this.options = options;
     this.stack = new CompiledStack(solveCase, options);
     const modes = new Map(this.stack.media.map((medium) => [medium, new Modes(medium)]));
     this.#modes = [...modes.values()];

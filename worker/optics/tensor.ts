@@ -1,5 +1,7 @@
 import type { Complex, Vector } from '../../shared/complex.ts';
 import { minus, modulus, plus, times } from './complexNumber.ts';
+import type { Rotation } from './rotation.ts';
+import { rotated, rotatedVector, transposed } from './rotation.ts';
 
 /** Element (row, column) of a tensor as a complex number; rows and columns count from 0. */
 export function element(tensor: Tensor, row: number, column: number): Complex {
@@ -64,46 +66,35 @@ export function addUniaxial(out: Tensor, ordinary: Complex, extraordinary: Compl
   }
 }
 
-export type QuadraticConstants = { g11: Complex; g12: Complex; g44: Complex; azimuthDeg: number };
+export type QuadraticConstants = {
+  g11: Complex;
+  g12: Complex;
+  g44: Complex;
+  /** Columns are the crystal axes [100], [010], [001]. */
+  crystal: Rotation;
+};
 
 /**
- * Adds the second order in m of a cubic crystal (physics.md section 2). The crystal axes are turned about z by the
- * azimuth: m is taken into the crystal, the tensor built there and turned back.
+ * Adds the second order in m of a cubic crystal (physics.md section 2): m is taken into the crystal, the tensor
+ * built there and turned back.
  */
 export function addQuadratic(out: Tensor, constants: QuadraticConstants, m: Vector): void {
-  const gamma = (constants.azimuthDeg * Math.PI) / 180;
-  const cos = Math.cos(gamma);
-  const sin = Math.sin(gamma);
-  const crystal: Vector = [cos * m[0] + sin * m[1], -sin * m[0] + cos * m[1], m[2]];
+  const { g11, g12, g44, crystal } = constants;
+  const inside = rotatedVector(m, transposed(crystal));
   const inCrystal = createTensor();
-  const { g11, g12, g44 } = constants;
   for (let i = 0; i < 3; i++) {
     for (let j = 0; j < 3; j++) {
-      const product = crystal[i]! * crystal[j]!;
+      const product = inside[i]! * inside[j]!;
       if (i !== j) {
         addTo(inCrystal, i, j, 2 * g44[0] * product, 2 * g44[1] * product);
         continue;
       }
-      const others = crystal[(i + 1) % 3]! ** 2 + crystal[(i + 2) % 3]! ** 2;
+      const others = inside[(i + 1) % 3]! ** 2 + inside[(i + 2) % 3]! ** 2;
       addTo(inCrystal, i, i, g11[0] * product + g12[0] * others, g11[1] * product + g12[1] * others);
     }
   }
-  const rotation = [
-    [cos, -sin, 0],
-    [sin, cos, 0],
-    [0, 0, 1],
-  ];
-  for (let row = 0; row < 3; row++) {
-    for (let column = 0; column < 3; column++) {
-      for (let i = 0; i < 3; i++) {
-        for (let j = 0; j < 3; j++) {
-          const weight = rotation[row]![i]! * rotation[column]![j]!;
-          const from = at(i, j);
-          addTo(out, row, column, weight * inCrystal[from]!, weight * inCrystal[from + 1]!);
-        }
-      }
-    }
-  }
+  const turned = rotated(inCrystal, crystal);
+  for (let i = 0; i < 18; i++) out[i] = out[i]! + turned[i]!;
 }
 
 /** The part odd in m is the antisymmetric one (Onsager): eps = symmetric + factor times antisymmetric. */
@@ -121,6 +112,14 @@ export function scaleAntisymmetricPart(tensor: Tensor, factor: number): void {
       tensor[a] = even + odd;
       tensor[b] = even - odd;
     }
+  }
+}
+
+/** z -> -z: the elements that couple z with x and y change sign. Half a turn about z does the same. */
+export function mirror(tensor: Tensor): void {
+  for (const i of [2, 5, 6, 7]) {
+    tensor[2 * i] = -tensor[2 * i]!;
+    tensor[2 * i + 1] = -tensor[2 * i + 1]!;
   }
 }
 
