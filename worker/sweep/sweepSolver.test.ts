@@ -1,0 +1,148 @@
+import { describe, expect, it } from 'vitest';
+import { readingOf } from '../../shared/readings.ts';
+import { readingNames } from '../../shared/run.ts';
+import type { ReadingName, SweepAxis } from '../../shared/run.ts';
+import type { SolveCase } from '../../shared/solve.ts';
+import { inMagnetizationState, toSolveCase } from '../../shared/stackCase.ts';
+import type { StackDocument, StackLayer } from '../../shared/stack.ts';
+import { resolveCase } from '../dispersion/resolveCase.ts';
+import { solveRequest } from '../optics/solveRequest.ts';
+import { axisValues } from './axisValues.ts';
+import { SharedResult } from './sharedResult.ts';
+import { SweepSolver } from './sweepSolver.ts';
+
+const film: StackLayer = {
+  id: 'film',
+  medium: { index: [2.25, 4.07], voigt: [0.03, 0.01] },
+  thicknessNm: 3,
+  m: [0.3, 0.4, 0.8],
+};
+
+const stack = (layers: StackLayer[] = [film], overrides: Partial<StackDocument> = {}): StackDocument => ({
+  incident: { index: 1 },
+  layers: [
+    { id: 'cap', medium: { index: [2.33, 4.14] }, thicknessNm: 2 },
+    {
+      id: 'block',
+      repeat: 3,
+      layers: [...layers, { id: 'spacer', medium: { index: [2.1, 3] }, thicknessNm: 1 }],
+    },
+  ],
+  substrate: { index: 1.5 },
+  workingPoint: { wavelengthNm: 633, angleDeg: 50, input: 'p', magnetization: { mode: 'drawn' } },
+  ...overrides,
+});
+
+/** The sweep in two chunks, as two threads would do it, the later one first. */
+function sweep(document: StackDocument, axis: SweepAxis, readings: ReadingName[] = [...readingNames]) {
+  const result = SharedResult.allocate(axis.points, readings.length);
+  const solver = new SweepSolver({ document, axis, readings, materials: [] });
+  const half = Math.floor(axis.points / 2);
+  solver.solve({ start: half, count: axis.points - half }, result);
+  solver.solve({ start: 0, count: half }, result);
+  expect(result.done).toBe(axis.points);
+  return result.columns;
+}
+
+/** The same readings point by point, each from three cases of its own; no state is skipped. */
+function pointByPoint(document: StackDocument, axis: SweepAxis, readings: ReadingName[] = [...readingNames]) {
+  return axisValues(axis).map((value) => {
+    const { workingPoint } = document;
+    const given = resolveCase(
+      toSolveCase(
+        axis.kind === 'thickness' ? withThickness(document, axis.layerId, value) : document,
+        axis.kind === 'wavelength' ? value : workingPoint.wavelengthNm,
+        axis.kind === 'angle' ? value : workingPoint.angleDeg,
+      ),
+      new Map(),
+    );
+    const at = (one: SolveCase) => solveRequest({ cases: [one] }).results[0]!.points[0]!;
+    const states = [given, inMagnetizationState(given, 'zero'), inMagnetizationState(given, 'reversed')].map(
+      at,
+    );
+    return readings.map((name) => readingOf(name, states[0]!, states[1]!, states[2]!));
+  });
+}
+
+function withThickness(document: StackDocument, layerId: string, thicknessNm: number): StackDocument {
+  const changed = JSON.stringify(document, (_key, value: unknown) =>
+    typeof value === 'object' && value !== null && 'id' in value && value.id === layerId
+      ? { ...value, thicknessNm }
+      : value,
+  );
+  return JSON.parse(changed) as StackDocument;
+}
+
+const axes: SweepAxis[] = [
+  { kind: 'wavelength', from: 400, to: 800, points: 9, spacing: 'linear' },
+  { kind: 'angle', from: 0, to: 89, points: 9, spacing: 'linear' },
+  { kind: 'thickness', layerId: 'film', from: 0, to: 40, points: 9, spacing: 'linear' },
+];
+
+describe.each(axes)('a sweep over $kind', (axis) => {
+  it('gives what single cases give, to the last digit', () => {
+    const columns = sweep(stack(), axis);
+    expect([...columns[0]!]).toEqual(axisValues(axis));
+    pointByPoint(stack(), axis).forEach((row, point) => {
+      expect(columns.slice(1).map((column) => column[point])).toEqual(row);
+    });
+  });
+
+  it('solves the unmagnetized stack where it turns light by itself', () => {
+    const uniaxial: StackLayer = {
+      ...film,
+      medium: { ...film.medium, extraordinary: [2.6, 3.5], axis: [1, 1, 0] },
+    };
+    const columns = sweep(stack([uniaxial]), axis, ['rotationP', 'ellipticityS']);
+    pointByPoint(stack([uniaxial]), axis, ['rotationP', 'ellipticityS']).forEach((row, point) => {
+      expect([columns[1]![point], columns[2]![point]]).toEqual(row);
+    });
+  });
+});
+
+describe('a sweep', () => {
+  it('has no Kerr angle where the unmagnetized stack reflects nothing, though the magnetized one does', () => {
+    // A film with the index of its surroundings: at m = 0 it is not there.
+    const ghost: StackLayer = { ...film, medium: { index: 1.5, voigt: [0.01, 0] }, m: [0, 0, 1] };
+    const document: StackDocument = {
+      ...stack(),
+      incident: { index: 1.5 },
+      layers: [ghost],
+    };
+    const axis: SweepAxis = { kind: 'angle', from: 0, to: 60, points: 4, spacing: 'linear' };
+    const [, rotation, cross] = sweep(document, axis, ['rotationP', 'crossSp']);
+    expect(rotation!.every(Number.isNaN)).toBe(true);
+    expect(Math.min(...cross!)).toBeGreaterThan(1e-6);
+  });
+
+  it('solves no point after it is cancelled', () => {
+    const axis = axes[1]!;
+    const result = SharedResult.allocate(axis.points, 1);
+    result.cancel();
+    new SweepSolver({ document: stack(), axis, readings: ['reflectanceP'], materials: [] }).solve(
+      { start: 0, count: axis.points },
+      result,
+    );
+    expect(result.done).toBe(0);
+  });
+
+  it('refuses a layer that the stack does not have', () => {
+    const axis: SweepAxis = {
+      kind: 'thickness',
+      layerId: 'nope',
+      from: 0,
+      to: 1,
+      points: 2,
+      spacing: 'linear',
+    };
+    expect(
+      () => new SweepSolver({ document: stack(), axis, readings: ['reflectanceP'], materials: [] }),
+    ).toThrow(/no layer nope/);
+  });
+
+  it('does not lay columns over memory of another size', () => {
+    expect(() => new SharedResult(new SharedArrayBuffer(64), 10, 2)).toThrow(
+      /10 points and 2 readings has 256 bytes, got 64/,
+    );
+  });
+});
