@@ -2,7 +2,7 @@ import type { ReactNode } from 'react';
 import { Link, NavLink } from 'react-router-dom';
 import { Mark } from './Mark.tsx';
 
-export type ShellLink = {
+type ShellLink = {
   to: string;
   label: string;
   /** Whether only the exact address counts as here. */

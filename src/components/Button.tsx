@@ -2,7 +2,7 @@ import type { ComponentProps, ReactNode } from 'react';
 import { Link } from 'react-router-dom';
 
 /** `primary` stands once on a screen; `quiet` has an edge, `plain` has none; `danger` destroys something. */
-export type ButtonTone = 'primary' | 'quiet' | 'plain' | 'danger';
+type ButtonTone = 'primary' | 'quiet' | 'plain' | 'danger';
 
 const shape =
   'inline-flex items-center justify-center gap-1.5 rounded-control px-3.5 py-[7px] text-body leading-[1.35] whitespace-nowrap no-underline transition-colors disabled:cursor-not-allowed disabled:opacity-55 aria-disabled:opacity-55';

@@ -15,7 +15,7 @@ const superscripts: Record<string, string> = {
   '9': '⁹',
 };
 
-export function superscript(exponent: number): string {
+function superscript(exponent: number): string {
   return Array.from(String(exponent), (digit) => superscripts[digit] ?? digit).join('');
 }
 

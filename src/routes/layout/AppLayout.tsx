@@ -9,12 +9,14 @@ import { PersonMenu } from '../../features/session/components/PersonMenu.tsx';
 import { useCurrentGroup } from '../../features/session/hooks/useCurrentGroup.ts';
 import { useReconnect } from '../../features/session/hooks/useReconnect.ts';
 import { paths } from '../../lib/paths.ts';
+import { useFocusOnNavigation } from './useFocusOnNavigation.ts';
 
 /** Header and frame of every page, signed in or not. */
 export function AppLayout() {
   const { data: session } = useQuery(sessionQuery());
   const fetchingPage = useNavigation().state === 'loading';
   const group = useCurrentGroup();
+  useFocusOnNavigation();
   const connection = useReconnect();
   const links = group
     ? [

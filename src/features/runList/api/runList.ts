@@ -6,7 +6,7 @@ import { request } from '../../../lib/apiClient.ts';
 const activeEveryMs = 1500;
 
 /** Whether a run may still change by itself. */
-export function isActive(state: RunState): boolean {
+function isActive(state: RunState): boolean {
   return state === 'queued' || state === 'running';
 }
 

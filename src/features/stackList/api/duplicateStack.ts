@@ -7,7 +7,7 @@ import { stackDocumentQuery } from './stackDocument.ts';
 import { stackListQuery } from './stackList.ts';
 
 /** "Film", "Film (copy)", cut so that the name stays within what the server takes. */
-export function nameOfCopy(name: string): string {
+function nameOfCopy(name: string): string {
   const ending = ' (copy)';
   return name.slice(0, LIMITS.nameLength - ending.length) + ending;
 }
