@@ -24,14 +24,22 @@ export class BatchResult {
   readonly columns: Float64Array[];
   readonly withTransmission: boolean;
 
-  constructor(capacity: number, withTransmission = false) {
+  /** @param buffer where the columns lie one after the other; give a shared one to fill it from several threads */
+  constructor(
+    capacity: number,
+    withTransmission = false,
+    buffer: ArrayBufferLike = new ArrayBuffer(BatchResult.bytes(capacity, withTransmission)),
+  ) {
     this.withTransmission = withTransmission;
-    const count = withTransmission ? ALL_COLUMNS : REFLECTION_COLUMNS;
-    const buffer = new ArrayBuffer(8 * capacity * count);
     this.columns = Array.from(
-      { length: count },
+      { length: withTransmission ? ALL_COLUMNS : REFLECTION_COLUMNS },
       (_, column) => new Float64Array(buffer, 8 * capacity * column, capacity),
     );
+  }
+
+  /** Length of the buffer of a result. */
+  static bytes(capacity: number, withTransmission = false): number {
+    return 8 * capacity * (withTransmission ? ALL_COLUMNS : REFLECTION_COLUMNS);
   }
 
   get capacity(): number {

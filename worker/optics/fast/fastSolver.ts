@@ -117,10 +117,11 @@ export class FastSolver {
   /**
    * Solves all points of a batch in any order of wavelengths and angles. Long runs of one wavelength are the quickest.
    *
-   * @param out its capacity must reach; point i of the batch goes to position i
+   * @param out receives point i of the batch at position start + i
+   * @param start of the batch in `out`
    * @throws RangeError when arrays differ in length or `out` is too small
    */
-  solveBatch(batch: Batch, out: BatchResult): void {
+  solveBatch(batch: Batch, out: BatchResult, start = 0): void {
     const { wavelengthIndex, anglesDeg, thickness } = batch;
     const count = anglesDeg.length;
     if (wavelengthIndex.length !== count || (thickness && thickness.nm.length !== count)) {
@@ -128,7 +129,9 @@ export class FastSolver {
         `a batch of ${count} angles has ${wavelengthIndex.length} wavelengths${thickness ? ` and ${thickness.nm.length} thicknesses` : ''}`,
       );
     }
-    if (out.capacity < count) throw new RangeError(`${count} points do not fit a result of ${out.capacity}`);
+    if (out.capacity < start + count) {
+      throw new RangeError(`${count} points from ${start} do not fit a result of ${out.capacity}`);
+    }
     if (count === 0) return;
     const swept = thickness ? this.#layerAt(thickness.path) : null;
     const written = swept?.thicknessNm ?? 0;
@@ -143,8 +146,8 @@ export class FastSolver {
     }
     for (let from = 0; from < count;) {
       from += this.#plan
-        ? this.#solveTile(batch, from, swept, this.#plan, out)
-        : this.#solveGeneral(batch, from, out);
+        ? this.#solveTile(batch, from, swept, this.#plan, out, start)
+        : this.#solveGeneral(batch, from, out, start);
     }
     if (swept && thickness) {
       swept.swept = false;
@@ -161,6 +164,7 @@ export class FastSolver {
     swept: FastLayer | null,
     plan: Crossing[],
     out: BatchResult,
+    start: number,
   ): number {
     const tile = this.#tile;
     const { wavelengthIndex, anglesDeg, thickness } = batch;
@@ -190,27 +194,32 @@ export class FastSolver {
       }
     }
     tile.solve(this.#substrate, plan, out.withTransmission);
-    this.#take(batch, from, count, out);
+    this.#take(batch, from, count, out, start);
     return count;
   }
 
-  #take(batch: Batch, from: number, count: number, out: BatchResult): void {
+  #take(batch: Batch, from: number, count: number, out: BatchResult, start: number): void {
     const tile = this.#tile;
-    for (const [number, column] of out.columns.entries()) {
+    for (let number = 0; number < out.columns.length; number++) {
+      const column = out.columns[number]!;
       const solved = tile.column(number);
-      column.set(count === solved.length ? solved : solved.subarray(0, count), from);
+      if (count === solved.length) column.set(solved, start + from);
+      // A view made for a few points takes longer than copying them.
+      else for (let i = 0; i < count; i++) column[start + from + i] = solved[i]!;
     }
     const substrate = this.#media[this.#substrate]!;
     if (substrate.gyrotropic && out.withTransmission) {
       for (let column = COLUMN.t; column < COLUMN.t + 8; column++) {
-        out.columns[column]!.fill(NaN, from, from + count);
+        out.columns[column]!.fill(NaN, start + from, start + from + count);
       }
     }
     const p = tile.column(COLUMN.reflectanceP);
     const s = tile.column(COLUMN.reflectanceS);
     for (let i = 0; i < count; i++) {
       const finite = p[i]! < Infinity && s[i]! < Infinity;
-      if (!finite || (substrate.gyrotropic && tile.isDoubtful(i))) this.#solveGeneral(batch, from + i, out);
+      if (!finite || (substrate.gyrotropic && tile.isDoubtful(i))) {
+        this.#solveGeneral(batch, from + i, out, start);
+      }
     }
   }
 
@@ -224,11 +233,16 @@ export class FastSolver {
   }
 
   /** One point by the general solver. */
-  #solveGeneral({ wavelengthIndex, anglesDeg, thickness }: Batch, point: number, out: BatchResult): number {
+  #solveGeneral(
+    { wavelengthIndex, anglesDeg, thickness }: Batch,
+    point: number,
+    out: BatchResult,
+    start: number,
+  ): number {
     this.#general ??= this.#createGeneral();
     if (thickness) this.#general.setThickness(thickness.path, thickness.nm[point]!);
     const solved = this.#general.solve(wavelengthIndex[point]!, anglesDeg[point]!);
-    writePoint(out.columns, point, solved, out.withTransmission);
+    writePoint(out.columns, start + point, solved, out.withTransmission);
     return 1;
   }
 

@@ -91,6 +91,7 @@ export type Kernel = {
   matrixPlain(pairs: number, layer: number, matrix: number): void;
   matrixGyrotropic(pairs: number, gyro: number, stride: number, map: number, matrix: number): void;
   stackPlain(pairs: number, layer: number, matrix: number): void;
+  stackPlainBelow(pairs: number, layer: number, matrix: number): void;
   multiply(pairs: number, upper: number, lower: number, product: number): void;
   crossMatrix(pairs: number, matrix: number, state: number, work: number): void;
   settle(pairs: number, work: number, state: number): void;

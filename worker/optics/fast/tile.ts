@@ -294,10 +294,7 @@ export class Tile {
   }
 
   #crossPower({ block, squarings, repeats }: Crossing & { kind: 'power' }): void {
-    let { matrix, spare } = this.#at;
-    for (const [i, step] of block.entries()) {
-      if (this.#stack(step, i === 0, matrix, spare)) [matrix, spare] = [spare, matrix];
-    }
+    let [matrix, spare] = this.#buildBlock(block);
     // All powers of one matrix commute: the odd rests are crossed as the squares come up.
     let left = repeats;
     for (let i = 0; i < squarings; i++) {
@@ -310,28 +307,55 @@ export class Tile {
     this.#coupled ||= block.some((step) => step.kind === 'gyrotropic');
   }
 
-  /** Puts a layer on top of the block in `matrix`; true when the new matrix is in `spare`. */
-  #stack(step: Crossing, first: boolean, matrix: number, spare: number): boolean {
+  /**
+   * The matrix of one repetition, begun at its lowest gyrotropic layer: plain layers join from either side at half the
+   * cost of a matrix product.
+   *
+   * @returns where it is, and the free place
+   */
+  #buildBlock(block: Crossing[]): [matrix: number, spare: number] {
     const kernel = this.#kernel;
     const pairs = this.#pairs;
-    const { layer, map, single } = this.#at;
-    if (step.kind === 'plain') {
-      this.#tracePlain(step.layer, step.degree);
-      if (first) kernel.matrixPlain(pairs, layer, matrix);
-      else kernel.stackPlain(pairs, layer, matrix);
-      return false;
+    const { layer, single } = this.#at;
+    let { matrix, spare } = this.#at;
+    const core = Math.max(
+      0,
+      block.findIndex((step) => step.kind === 'gyrotropic'),
+    );
+    this.#blockMatrix(block[core]!, matrix);
+    for (const step of block.slice(0, core).reverse()) {
+      this.#traceInBlock(step);
+      kernel.stackPlainBelow(pairs, layer, matrix);
     }
-    if (step.kind === 'power') throw new Error('a block inside a block is planned layer by layer');
-    this.#traceGyrotropic(step);
-    const { constants } = this.#media[step.layer.mediumNumber]!;
-    const stride = this.#stride(step.layer.mediumNumber);
-    if (first) {
-      kernel.matrixGyrotropic(pairs, constants, stride, map, matrix);
-      return false;
+    for (const step of block.slice(core + 1)) {
+      if (step.kind === 'plain') {
+        this.#traceInBlock(step);
+        kernel.stackPlain(pairs, layer, matrix);
+      } else {
+        this.#blockMatrix(step, single);
+        kernel.multiply(pairs, single, matrix, spare);
+        [matrix, spare] = [spare, matrix];
+      }
     }
-    kernel.matrixGyrotropic(pairs, constants, stride, map, single);
-    kernel.multiply(pairs, single, matrix, spare);
-    return true;
+    return [matrix, spare];
+  }
+
+  #traceInBlock(step: Crossing): void {
+    if (step.kind === 'plain') this.#tracePlain(step.layer, step.degree);
+    else if (step.kind === 'gyrotropic') this.#traceGyrotropic(step);
+    else throw new Error('a block inside a block is planned layer by layer');
+  }
+
+  #blockMatrix(step: Crossing, matrix: number): void {
+    const { layer, map } = this.#at;
+    this.#traceInBlock(step);
+    if (step.kind !== 'gyrotropic') {
+      this.#kernel.matrixPlain(this.#pairs, layer, matrix);
+      return;
+    }
+    const { mediumNumber } = step.layer;
+    const { constants } = this.#media[mediumNumber]!;
+    this.#kernel.matrixGyrotropic(this.#pairs, constants, this.#stride(mediumNumber), map, matrix);
   }
 
   #crossMatrix(matrix: number): void {

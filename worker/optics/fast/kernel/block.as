@@ -8,15 +8,15 @@ export function matrixPlain(pairs: i32, layer: usize, matrix: usize): void {
   memory.fill(matrix, 0, <usize>pairs * 32 * V);
   for (let i = 0; i < pairs; i++) {
     for (let part: usize = 0; part < 2; part++) {
-      const c = at(layer, part);
-      put(matrix, part, c);
-      put(matrix, 10 + part, c);
-      put(matrix, 20 + part, c);
-      put(matrix, 30 + part, c);
-      put(matrix, 4 + part, at(layer, 4 + part));
-      put(matrix, 14 + part, at(layer, 2 + part));
-      put(matrix, 16 + part, f64x2.neg(at(layer, 6 + part)));
-      put(matrix, 26 + part, f64x2.neg(at(layer, 8 + part)));
+      const c = at(layer + part * V, 0);
+      put(matrix + part * V, 0, c);
+      put(matrix + part * V, 10, c);
+      put(matrix + part * V, 20, c);
+      put(matrix + part * V, 30, c);
+      put(matrix + part * V, 4, at(layer + part * V, 4));
+      put(matrix + part * V, 14, at(layer + part * V, 2));
+      put(matrix + part * V, 16, f64x2.neg(at(layer + part * V, 6)));
+      put(matrix + part * V, 26, f64x2.neg(at(layer + part * V, 8)));
     }
     layer += 14 * V;
     matrix += 32 * V;
@@ -35,14 +35,14 @@ export function matrixGyrotropic(pairs: i32, gyro: usize, stride: usize, map: us
     const kRe = at(gyro, 2);
     const kIm = at(gyro, 3);
     for (let row: usize = 0; row < 2; row++) {
-      const e1Re = at(map, 4 * row);
-      const e1Im = at(map, 4 * row + 1);
-      const e2Re = at(map, 4 * row + 2);
-      const e2Im = at(map, 4 * row + 3);
-      const f1Re = at(map, 8 + 4 * row);
-      const f1Im = at(map, 9 + 4 * row);
-      const f2Re = at(map, 10 + 4 * row);
-      const f2Im = at(map, 11 + 4 * row);
+      const e1Re = at(map + 4 * row * V, 0);
+      const e1Im = at(map + 4 * row * V, 1);
+      const e2Re = at(map + 4 * row * V, 2);
+      const e2Im = at(map + 4 * row * V, 3);
+      const f1Re = at(map + 4 * row * V, 8);
+      const f1Im = at(map + 4 * row * V, 9);
+      const f2Re = at(map + 4 * row * V, 10);
+      const f2Im = at(map + 4 * row * V, 11);
       const f = matrix + 8 * row * V;
       // f rows: E11 + E12 A, E12 B
       put(f, 0, add(e1Re, re(f1Re, f1Im, a1Re, a1Im)));
@@ -60,20 +60,16 @@ export function matrixGyrotropic(pairs: i32, gyro: usize, stride: usize, map: us
       const g2Im = add(e2Im, im(f1Re, f1Im, u12Re, u12Im));
       const w = matrix + (16 + 8 * row) * V;
       for (let column: usize = 0; column < 4; column += 2) {
-        const v1Re = at(map, 16 + column);
-        const v1Im = at(map, 17 + column);
-        const v2Re = at(map, 20 + column);
-        const v2Im = at(map, 21 + column);
+        const v1Re = at(map + column * V, 16);
+        const v1Im = at(map + column * V, 17);
+        const v2Re = at(map + column * V, 20);
+        const v2Im = at(map + column * V, 21);
         const xRe = column === 0 ? a1Re : u12Re;
         const xIm = column === 0 ? a1Im : u12Im;
-        put(
-          w,
-          column,
+        put(w + column * V, 0,
           sub(re(g1Re, g1Im, xRe, xIm), add(re(f1Re, f1Im, v1Re, v1Im), re(f2Re, f2Im, v2Re, v2Im))),
         );
-        put(
-          w,
-          column + 1,
+        put(w + column * V, 1,
           sub(im(g1Re, g1Im, xRe, xIm), add(im(f1Re, f1Im, v1Re, v1Im), im(f2Re, f2Im, v2Re, v2Im))),
         );
       }
@@ -86,20 +82,20 @@ export function matrixGyrotropic(pairs: i32, gyro: usize, stride: usize, map: us
     const pRe = at(gyro, 4);
     const pIm = at(gyro, 5);
     for (let column: usize = 0; column < 8; column += 2) {
-      const f1Re = at(matrix, column);
-      const f1Im = at(matrix, column + 1);
-      const f2Re = at(matrix, 8 + column);
-      const f2Im = at(matrix, 9 + column);
+      const f1Re = at(matrix + column * V, 0);
+      const f1Im = at(matrix + column * V, 1);
+      const f2Re = at(matrix + column * V, 8);
+      const f2Im = at(matrix + column * V, 9);
       const lRe = sub(
-        at(matrix, 16 + column),
+        at(matrix + column * V, 16),
         add(re(a1Re, a1Im, f1Re, f1Im), re(u12Re, u12Im, f2Re, f2Im)),
       );
       const lIm = sub(
-        at(matrix, 17 + column),
+        at(matrix + column * V, 17),
         add(im(a1Re, a1Im, f1Re, f1Im), im(u12Re, u12Im, f2Re, f2Im)),
       );
-      put(matrix, 16 + column, re(lRe, lIm, pRe, pIm));
-      put(matrix, 17 + column, im(lRe, lIm, pRe, pIm));
+      put(matrix + column * V, 16, re(lRe, lIm, pRe, pIm));
+      put(matrix + column * V, 17, im(lRe, lIm, pRe, pIm));
     }
     gyro += stride;
     map += 26 * V;
@@ -113,20 +109,47 @@ export function stackPlain(pairs: i32, layer: usize, matrix: usize): void {
     const cRe = at(layer, 0);
     const cIm = at(layer, 1);
     for (let polarization: usize = 0; polarization < 2; polarization++) {
-      const upRe = at(layer, 4 - 2 * polarization);
-      const upIm = at(layer, 5 - 2 * polarization);
-      const downRe = at(layer, 6 + 2 * polarization);
-      const downIm = at(layer, 7 + 2 * polarization);
+      const upRe = at(layer + (0 - 2 * polarization) * V, 4);
+      const upIm = at(layer + (0 - 2 * polarization) * V, 5);
+      const downRe = at(layer + 2 * polarization * V, 6);
+      const downIm = at(layer + 2 * polarization * V, 7);
       const f = matrix + 8 * polarization * V;
       for (let column: usize = 0; column < 8; column += 2) {
-        const fRe = at(f, column);
-        const fIm = at(f, column + 1);
-        const hRe = at(f, 16 + column);
-        const hIm = at(f, 17 + column);
-        put(f, column, add(re(cRe, cIm, fRe, fIm), re(upRe, upIm, hRe, hIm)));
-        put(f, column + 1, add(im(cRe, cIm, fRe, fIm), im(upRe, upIm, hRe, hIm)));
-        put(f, 16 + column, sub(re(cRe, cIm, hRe, hIm), re(downRe, downIm, fRe, fIm)));
-        put(f, 17 + column, sub(im(cRe, cIm, hRe, hIm), im(downRe, downIm, fRe, fIm)));
+        const fRe = at(f + column * V, 0);
+        const fIm = at(f + column * V, 1);
+        const hRe = at(f + column * V, 16);
+        const hIm = at(f + column * V, 17);
+        put(f + column * V, 0, add(re(cRe, cIm, fRe, fIm), re(upRe, upIm, hRe, hIm)));
+        put(f + column * V, 1, add(im(cRe, cIm, fRe, fIm), im(upRe, upIm, hRe, hIm)));
+        put(f + column * V, 16, sub(re(cRe, cIm, hRe, hIm), re(downRe, downIm, fRe, fIm)));
+        put(f + column * V, 17, sub(im(cRe, cIm, hRe, hIm), im(downRe, downIm, fRe, fIm)));
+      }
+    }
+    layer += 14 * V;
+    matrix += 32 * V;
+  }
+}
+
+/** A plain layer below what `matrix` holds, in place: columns f and h of one polarization mix. */
+export function stackPlainBelow(pairs: i32, layer: usize, matrix: usize): void {
+  for (let i = 0; i < pairs; i++) {
+    const cRe = at(layer, 0);
+    const cIm = at(layer, 1);
+    for (let polarization: usize = 0; polarization < 2; polarization++) {
+      const upRe = at(layer + (0 - 2 * polarization) * V, 4);
+      const upIm = at(layer + (0 - 2 * polarization) * V, 5);
+      const downRe = at(layer + 2 * polarization * V, 6);
+      const downIm = at(layer + 2 * polarization * V, 7);
+      const f = matrix + 2 * polarization * V;
+      for (let row: usize = 0; row < 32; row += 8) {
+        const fRe = at(f + row * V, 0);
+        const fIm = at(f + row * V, 1);
+        const hRe = at(f + row * V, 4);
+        const hIm = at(f + row * V, 5);
+        put(f + row * V, 0, sub(re(cRe, cIm, fRe, fIm), re(downRe, downIm, hRe, hIm)));
+        put(f + row * V, 1, sub(im(cRe, cIm, fRe, fIm), im(downRe, downIm, hRe, hIm)));
+        put(f + row * V, 4, add(re(cRe, cIm, hRe, hIm), re(upRe, upIm, fRe, fIm)));
+        put(f + row * V, 5, add(im(cRe, cIm, hRe, hIm), im(upRe, upIm, fRe, fIm)));
       }
     }
     layer += 14 * V;
@@ -138,29 +161,29 @@ export function stackPlain(pairs: i32, layer: usize, matrix: usize): void {
 export function multiply(pairs: i32, upper: usize, lower: usize, product: usize): void {
   for (let i = 0; i < pairs; i++) {
     for (let row: usize = 0; row < 32; row += 8) {
-      const aRe = at(upper, row);
-      const aIm = at(upper, row + 1);
-      const bRe = at(upper, row + 2);
-      const bIm = at(upper, row + 3);
-      const cRe = at(upper, row + 4);
-      const cIm = at(upper, row + 5);
-      const dRe = at(upper, row + 6);
-      const dIm = at(upper, row + 7);
+      const aRe = at(upper + row * V, 0);
+      const aIm = at(upper + row * V, 1);
+      const bRe = at(upper + row * V, 2);
+      const bIm = at(upper + row * V, 3);
+      const cRe = at(upper + row * V, 4);
+      const cIm = at(upper + row * V, 5);
+      const dRe = at(upper + row * V, 6);
+      const dIm = at(upper + row * V, 7);
       for (let column: usize = 0; column < 8; column += 2) {
-        const xRe = at(lower, column);
-        const xIm = at(lower, column + 1);
-        const yRe = at(lower, column + 8);
-        const yIm = at(lower, column + 9);
+        const xRe = at(lower + column * V, 0);
+        const xIm = at(lower + column * V, 1);
+        const yRe = at(lower + column * V, 8);
+        const yIm = at(lower + column * V, 9);
         let sumRe = add(re(aRe, aIm, xRe, xIm), re(bRe, bIm, yRe, yIm));
         let sumIm = add(im(aRe, aIm, xRe, xIm), im(bRe, bIm, yRe, yIm));
-        const zRe = at(lower, column + 16);
-        const zIm = at(lower, column + 17);
-        const wRe = at(lower, column + 24);
-        const wIm = at(lower, column + 25);
+        const zRe = at(lower + column * V, 16);
+        const zIm = at(lower + column * V, 17);
+        const wRe = at(lower + column * V, 24);
+        const wIm = at(lower + column * V, 25);
         sumRe = add(sumRe, add(re(cRe, cIm, zRe, zIm), re(dRe, dIm, wRe, wIm)));
         sumIm = add(sumIm, add(im(cRe, cIm, zRe, zIm), im(dRe, dIm, wRe, wIm)));
-        put(product, row + column, sumRe);
-        put(product, row + column + 1, sumIm);
+        put(product + (row + column) * V, 0, sumRe);
+        put(product + (row + column) * V, 1, sumIm);
       }
     }
     upper += 32 * V;
@@ -173,24 +196,20 @@ export function multiply(pairs: i32, upper: usize, lower: usize, product: usize)
 export function crossMatrix(pairs: i32, matrix: usize, state: usize, work: usize): void {
   for (let i = 0; i < pairs; i++) {
     for (let row: usize = 0; row < 4; row++) {
-      const cRe = at(matrix, 8 * row + 4);
-      const cIm = at(matrix, 8 * row + 5);
-      const dRe = at(matrix, 8 * row + 6);
-      const dIm = at(matrix, 8 * row + 7);
+      const cRe = at(matrix + (8 * row) * V, 4);
+      const cIm = at(matrix + (8 * row) * V, 5);
+      const dRe = at(matrix + (8 * row) * V, 6);
+      const dIm = at(matrix + (8 * row) * V, 7);
       for (let column: usize = 0; column < 4; column += 2) {
-        const xRe = at(state, column);
-        const xIm = at(state, column + 1);
-        const yRe = at(state, column + 4);
-        const yIm = at(state, column + 5);
-        put(
-          work,
-          4 * row + column,
-          add(at(matrix, 8 * row + column), add(re(cRe, cIm, xRe, xIm), re(dRe, dIm, yRe, yIm))),
+        const xRe = at(state + column * V, 0);
+        const xIm = at(state + column * V, 1);
+        const yRe = at(state + column * V, 4);
+        const yIm = at(state + column * V, 5);
+        put(work + (4 * row + column) * V, 0,
+          add(at(matrix + (8 * row + column) * V, 0), add(re(cRe, cIm, xRe, xIm), re(dRe, dIm, yRe, yIm))),
         );
-        put(
-          work,
-          4 * row + column + 1,
-          add(at(matrix, 8 * row + column + 1), add(im(cRe, cIm, xRe, xIm), im(dRe, dIm, yRe, yIm))),
+        put(work + (4 * row + column) * V, 1,
+          add(at(matrix + (8 * row + column) * V, 1), add(im(cRe, cIm, xRe, xIm), im(dRe, dIm, yRe, yIm))),
         );
       }
     }
@@ -217,18 +236,18 @@ export function settle(pairs: i32, work: usize, state: usize): void {
     const invRe = mul(detRe, scale);
     const invIm = f64x2.neg(mul(detIm, scale));
     for (let row: usize = 0; row < 8; row += 4) {
-      const n1Re = at(work, 8 + row);
-      const n1Im = at(work, 9 + row);
-      const n2Re = at(work, 10 + row);
-      const n2Im = at(work, 11 + row);
+      const n1Re = at(work + row * V, 8);
+      const n1Im = at(work + row * V, 9);
+      const n2Re = at(work + row * V, 10);
+      const n2Im = at(work + row * V, 11);
       const lRe = sub(re(n1Re, n1Im, dRe, dIm), re(n2Re, n2Im, cRe, cIm));
       const lIm = sub(im(n1Re, n1Im, dRe, dIm), im(n2Re, n2Im, cRe, cIm));
       const rRe = sub(re(n2Re, n2Im, aRe, aIm), re(n1Re, n1Im, bRe, bIm));
       const rIm = sub(im(n2Re, n2Im, aRe, aIm), im(n1Re, n1Im, bRe, bIm));
-      put(state, row, re(lRe, lIm, invRe, invIm));
-      put(state, row + 1, im(lRe, lIm, invRe, invIm));
-      put(state, row + 2, re(rRe, rIm, invRe, invIm));
-      put(state, row + 3, im(rRe, rIm, invRe, invIm));
+      put(state + row * V, 0, re(lRe, lIm, invRe, invIm));
+      put(state + row * V, 1, im(lRe, lIm, invRe, invIm));
+      put(state + row * V, 2, re(rRe, rIm, invRe, invIm));
+      put(state + row * V, 3, im(rRe, rIm, invRe, invIm));
     }
     work += 16 * V;
     state += 8 * V;

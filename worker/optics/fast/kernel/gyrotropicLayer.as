@@ -259,48 +259,40 @@ export function crossGyrotropic(
     const u12Re = at(gyro, 6);
     const u12Im = at(gyro, 7);
     for (let column: usize = 0; column < 4; column += 2) {
-      const y1Re = at(state, column);
-      const y1Im = at(state, column + 1);
+      const y1Re = at(state + column * V, 0);
+      const y1Im = at(state + column * V, 1);
       const w1Re = add(re(kRe, kIm, y1Re, y1Im), column === 0 ? at(map, 24) : u12Re);
       const w1Im = add(im(kRe, kIm, y1Re, y1Im), column === 0 ? at(map, 25) : u12Im);
-      const w2Re = at(state, column + 4);
-      const w2Im = at(state, column + 5);
-      const x1Re = sub(re(u12Re, u12Im, w2Re, w2Im), at(map, 16 + column));
-      const x1Im = sub(im(u12Re, u12Im, w2Re, w2Im), at(map, 17 + column));
+      const w2Re = at(state + column * V, 4);
+      const w2Im = at(state + column * V, 5);
+      const x1Re = sub(re(u12Re, u12Im, w2Re, w2Im), at(map + column * V, 16));
+      const x1Im = sub(im(u12Re, u12Im, w2Re, w2Im), at(map + column * V, 17));
       const u21Re = at(gyro, 8);
       const u21Im = at(gyro, 9);
-      const x2Re = sub(re(u21Re, u21Im, w1Re, w1Im), at(map, 20 + column));
-      const x2Im = sub(im(u21Re, u21Im, w1Re, w1Im), at(map, 21 + column));
+      const x2Re = sub(re(u21Re, u21Im, w1Re, w1Im), at(map + column * V, 20));
+      const x2Im = sub(im(u21Re, u21Im, w1Re, w1Im), at(map + column * V, 21));
       for (let row: usize = 0; row < 8; row += 4) {
-        const f1Re = at(map, 8 + row);
-        const f1Im = at(map, 9 + row);
-        const f2Re = at(map, 10 + row);
-        const f2Im = at(map, 11 + row);
-        put(
-          work,
-          row + column,
-          add(at(map, row + column), add(re(f1Re, f1Im, w1Re, w1Im), re(f2Re, f2Im, w2Re, w2Im))),
+        const f1Re = at(map + row * V, 8);
+        const f1Im = at(map + row * V, 9);
+        const f2Re = at(map + row * V, 10);
+        const f2Im = at(map + row * V, 11);
+        put(work + (row + column) * V, 0,
+          add(at(map + (row + column) * V, 0), add(re(f1Re, f1Im, w1Re, w1Im), re(f2Re, f2Im, w2Re, w2Im))),
         );
-        put(
-          work,
-          row + column + 1,
-          add(at(map, row + column + 1), add(im(f1Re, f1Im, w1Re, w1Im), im(f2Re, f2Im, w2Re, w2Im))),
+        put(work + (row + column) * V, 1,
+          add(at(map + (row + column) * V, 1), add(im(f1Re, f1Im, w1Re, w1Im), im(f2Re, f2Im, w2Re, w2Im))),
         );
-        const e1Re = at(map, row);
-        const e1Im = at(map, row + 1);
-        const e2Re = at(map, row + 2);
-        const e2Im = at(map, row + 3);
-        put(
-          work,
-          8 + row + column,
+        const e1Re = at(map + row * V, 0);
+        const e1Im = at(map + row * V, 1);
+        const e2Re = at(map + row * V, 2);
+        const e2Im = at(map + row * V, 3);
+        put(work + (row + column) * V, 8,
           add(
             add(re(e1Re, e1Im, w1Re, w1Im), re(e2Re, e2Im, w2Re, w2Im)),
             add(re(f1Re, f1Im, x1Re, x1Im), re(f2Re, f2Im, x2Re, x2Im)),
           ),
         );
-        put(
-          work,
-          9 + row + column,
+        put(work + (row + column) * V, 9,
           add(
             add(im(e1Re, e1Im, w1Re, w1Im), im(e2Re, e2Im, w2Re, w2Im)),
             add(im(f1Re, f1Im, x1Re, x1Im), im(f2Re, f2Im, x2Re, x2Im)),
@@ -341,10 +333,10 @@ export function settleGyrotropic(
     const kappaRe = at(gyro, 4);
     const kappaIm = at(gyro, 5);
     for (let row: usize = 0; row < 2; row++) {
-      const n1Re = at(work, 8 + 4 * row);
-      const n1Im = at(work, 9 + 4 * row);
-      const n2Re = at(work, 10 + 4 * row);
-      const n2Im = at(work, 11 + 4 * row);
+      const n1Re = at(work + 4 * row * V, 8);
+      const n1Im = at(work + 4 * row * V, 9);
+      const n2Re = at(work + 4 * row * V, 10);
+      const n2Im = at(work + 4 * row * V, 11);
       const lRe = sub(re(n1Re, n1Im, dRe, dIm), re(n2Re, n2Im, cRe, cIm));
       const lIm = sub(im(n1Re, n1Im, dRe, dIm), im(n2Re, n2Im, cRe, cIm));
       const rRe = sub(re(n2Re, n2Im, aRe, aIm), re(n1Re, n1Im, bRe, bIm));
@@ -363,10 +355,10 @@ export function settleGyrotropic(
         y2Re = re(otherRe, otherIm, kappaRe, kappaIm);
         y2Im = im(otherRe, otherIm, kappaRe, kappaIm);
       }
-      put(state, 4 * row, y1Re);
-      put(state, 4 * row + 1, y1Im);
-      put(state, 4 * row + 2, y2Re);
-      put(state, 4 * row + 3, y2Im);
+      put(state + 4 * row * V, 0, y1Re);
+      put(state + 4 * row * V, 1, y1Im);
+      put(state + 4 * row * V, 2, y2Re);
+      put(state + 4 * row * V, 3, y2Im);
     }
     gyro += stride;
     map += 26 * V;

@@ -3,7 +3,7 @@
 export { crossDiagonal, crossPlain, chainBack, chainPlain, traceThick, traceThin } from './plain.as';
 export { crossGyrotropic, mapGyrotropic, settleGyrotropic, traceGyrotropic } from './gyrotropicLayer.as';
 export { prepareGyrotropic, startGyrotropic } from './gyrotropicMedium.as';
-export { crossMatrix, matrixGyrotropic, matrixPlain, multiply, settle, stackPlain } from './block.as';
+export { crossMatrix, matrixGyrotropic, matrixPlain, multiply, settle, stackPlain, stackPlainBelow } from './block.as';
 export { leave, placePoints, preparePlain, readAngles, startChain, startPlain, transmit } from './surface.as';
 
 export function firstFreeByte(): usize {

@@ -166,17 +166,17 @@ export function crossDiagonal(pairs: i32, layer: usize, state: usize): void {
     const cRe = at(layer, 0);
     const cIm = at(layer, 1);
     for (let k: usize = 0; k < 2; k++) {
-      const yRe = at(state, 6 * k);
-      const yIm = at(state, 6 * k + 1);
-      const aRe = at(layer, 4 - 2 * k);
-      const aIm = at(layer, 5 - 2 * k);
+      const yRe = at(state + 6 * k * V, 0);
+      const yIm = at(state + 6 * k * V, 1);
+      const aRe = at(layer + (- 2 * k) * V, 4);
+      const aIm = at(layer + (- 2 * k) * V, 5);
       const mRe = add(cRe, re(aRe, aIm, yRe, yIm));
       const mIm = add(cIm, im(aRe, aIm, yRe, yIm));
-      const nRe = sub(re(cRe, cIm, yRe, yIm), at(layer, 6 + 2 * k));
-      const nIm = sub(im(cRe, cIm, yRe, yIm), at(layer, 7 + 2 * k));
+      const nRe = sub(re(cRe, cIm, yRe, yIm), at(layer + 2 * k * V, 6));
+      const nIm = sub(im(cRe, cIm, yRe, yIm), at(layer + 2 * k * V, 7));
       const scale = inverseNorm(mRe, mIm);
-      put(state, 6 * k, mul(scale, add(mul(nRe, mRe), mul(nIm, mIm))));
-      put(state, 6 * k + 1, mul(scale, sub(mul(nIm, mRe), mul(nRe, mIm))));
+      put(state + 6 * k * V, 0, mul(scale, add(mul(nRe, mRe), mul(nIm, mIm))));
+      put(state + 6 * k * V, 1, mul(scale, sub(mul(nIm, mRe), mul(nRe, mIm))));
     }
     layer += 14 * V;
     state += 8 * V;
@@ -250,32 +250,26 @@ export function crossPlain(pairs: i32, layer: usize, state: usize, scaled: i32):
   }
 }
 
-/** Before `crossPlain` or `crossDiagonal`, for T: X' = X M^-1, with M = C + diag(P, S) Y (times exp(i phi) if scaled). */
+/**
+ * Before `crossPlain` or `crossDiagonal`, for T: M = C + diag(P, S) Y to slots 0-7 of `work`, and to 8-9 what X M^-1
+ * is to be multiplied by where M is stored times exp(i phi).
+ */
 export function chainPlain(pairs: i32, layer: usize, state: usize, scaled: i32, work: usize): void {
   for (let i = 0; i < pairs; i++) {
-    for (let k: usize = 0; k < 4; k++) {
-      const aRe = at(layer, k < 2 ? 4 : 2);
-      const aIm = at(layer, k < 2 ? 5 : 3);
-      const diagonal = k === 0 || k === 3;
-      const yRe = at(state, 2 * k);
-      const yIm = at(state, 2 * k + 1);
-      let mRe = re(aRe, aIm, yRe, yIm);
-      let mIm = im(aRe, aIm, yRe, yIm);
-      if (diagonal) {
-        mRe = add(mRe, at(layer, 0));
-        mIm = add(mIm, at(layer, 1));
-      }
-      if (scaled) {
-        // M is exp(-i phi) times what is stored; dividing would overflow, so X takes the factor instead.
-        put(work, 8, at(layer, 12));
-        put(work, 9, at(layer, 13));
-      } else {
-        put(work, 8, both(1));
-        put(work, 9, both(0));
-      }
-      put(work, 2 * k, mRe);
-      put(work, 2 * k + 1, mIm);
-    }
+    const pRe = at(layer, 4);
+    const pIm = at(layer, 5);
+    const sRe = at(layer, 2);
+    const sIm = at(layer, 3);
+    put(work, 0, add(at(layer, 0), re(pRe, pIm, at(state, 0), at(state, 1))));
+    put(work, 1, add(at(layer, 1), im(pRe, pIm, at(state, 0), at(state, 1))));
+    put(work, 2, re(pRe, pIm, at(state, 2), at(state, 3)));
+    put(work, 3, im(pRe, pIm, at(state, 2), at(state, 3)));
+    put(work, 4, re(sRe, sIm, at(state, 4), at(state, 5)));
+    put(work, 5, im(sRe, sIm, at(state, 4), at(state, 5)));
+    put(work, 6, add(at(layer, 0), re(sRe, sIm, at(state, 6), at(state, 7))));
+    put(work, 7, add(at(layer, 1), im(sRe, sIm, at(state, 6), at(state, 7))));
+    put(work, 8, scaled ? at(layer, 12) : both(1));
+    put(work, 9, scaled ? at(layer, 13) : both(0));
     layer += 14 * V;
     state += 8 * V;
     work += 10 * V;
@@ -304,18 +298,18 @@ export function chainBack(pairs: i32, work: usize, workStride: usize, hasFactor:
       invIm = im(sameRe, invIm, at(work, 8), at(work, 9));
     }
     for (let row: usize = 0; row < 8; row += 4) {
-      const x1Re = at(chain, row);
-      const x1Im = at(chain, row + 1);
-      const x2Re = at(chain, row + 2);
-      const x2Im = at(chain, row + 3);
+      const x1Re = at(chain + row * V, 0);
+      const x1Im = at(chain + row * V, 1);
+      const x2Re = at(chain + row * V, 2);
+      const x2Im = at(chain + row * V, 3);
       const lRe = sub(re(x1Re, x1Im, dRe, dIm), re(x2Re, x2Im, cRe, cIm));
       const lIm = sub(im(x1Re, x1Im, dRe, dIm), im(x2Re, x2Im, cRe, cIm));
       const rRe = sub(re(x2Re, x2Im, aRe, aIm), re(x1Re, x1Im, bRe, bIm));
       const rIm = sub(im(x2Re, x2Im, aRe, aIm), im(x1Re, x1Im, bRe, bIm));
-      put(chain, row, re(lRe, lIm, invRe, invIm));
-      put(chain, row + 1, im(lRe, lIm, invRe, invIm));
-      put(chain, row + 2, re(rRe, rIm, invRe, invIm));
-      put(chain, row + 3, im(rRe, rIm, invRe, invIm));
+      put(chain + row * V, 0, re(lRe, lIm, invRe, invIm));
+      put(chain + row * V, 1, im(lRe, lIm, invRe, invIm));
+      put(chain + row * V, 2, re(rRe, rIm, invRe, invIm));
+      put(chain + row * V, 3, im(rRe, rIm, invRe, invIm));
     }
     work += workStride;
     chain += 8 * V;
