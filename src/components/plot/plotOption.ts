@@ -146,19 +146,25 @@ function seriesOption(series: PlotSeries, index: number, layout: PlotLayout, tok
       },
     },
   };
-  if (series.symbol !== 'open') return [line];
-  const markers = {
+  const marks = (name: string, data: number[][], symbolSize: number) => ({
     type: 'scatter',
-    name: `${series.name} (markers)`,
+    name: `${series.name} (${name})`,
     yAxisIndex: axisIndex,
-    data: markerSamples(points),
+    data,
     symbol: 'circle',
-    symbolSize: 6.5,
+    symbolSize,
     itemStyle: { color: tokens.panel, borderColor: color, borderWidth: 1.5 },
     silent: true,
     clip: true,
-  };
-  return [line, markers];
+  });
+  const parts: object[] = [line];
+  if (series.symbol === 'open') parts.push(marks('markers', markerSamples(points), 6.5));
+  if (series.points) {
+    const { x, y } = series.points;
+    const samples = Array.from(x, (at, sample) => [onScale(at, xScale.log), onScale(y[sample]!, yScale.log)]);
+    parts.push(marks('samples', samples, samples.length > 80 ? 3.5 : 5));
+  }
+  return parts;
 }
 
 /** Samples at about equal distances along x. */

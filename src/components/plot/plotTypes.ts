@@ -14,6 +14,8 @@ export type PlotSeries = {
   width?: number;
   /** Open markers along the line (the mark of s light). */
   symbol?: 'none' | 'open';
+  /** Samples that the curve was made from, such as tabulated ones; drawn as small open marks, not read out. */
+  points?: { x: ArrayLike<number>; y: ArrayLike<number> };
   /** Which of the y axes: 0 is on the left, the others on the right. */
   yAxisIndex?: number;
   /** A value as read out, unit included; as many digits as the axis needs when left out. */

@@ -12,23 +12,28 @@ const kAxis = { label: 'k', include: [0] };
 /** n and k as a solve interpolates them; k is left out where it is zero throughout. */
 export function IndexPlot({ material, unit }: { material: Material; unit: SpectralUnit }) {
   const { wavelengthsNm, n, k } = material.curves;
+  const { index } = material.content;
   const absorbs = useMemo(() => k.some((value) => value > 0), [k]);
   const series = useMemo<PlotSeries[]>(() => {
+    // What the source tabulates is marked on the curve that joins it; a formula has no points of its own.
+    const tabulated = (values: 'n' | 'k') =>
+      index.kind === 'table' ? { points: onSpectralAxis(unit, index.wavelengthsNm, index[values]) } : {};
     const curves: PlotSeries[] = [
-      { name: 'n', ...onSpectralAxis(unit, wavelengthsNm, n), tone: 'ink', width: 2 },
+      { name: 'n', ...onSpectralAxis(unit, wavelengthsNm, n), ...tabulated('n'), tone: 'ink', width: 1.6 },
     ];
     if (absorbs) {
       curves.push({
         name: 'k (right scale)',
         ...onSpectralAxis(unit, wavelengthsNm, k),
+        ...tabulated('k'),
         tone: 'accent',
-        width: 2,
+        width: 1.6,
         dash: 'dashed',
         yAxisIndex: 1,
       });
     }
     return curves;
-  }, [unit, wavelengthsNm, n, k, absorbs]);
+  }, [unit, wavelengthsNm, n, k, index, absorbs]);
   const xAxis = useMemo(() => ({ label: spectralLabels[unit] }), [unit]);
   const yAxes = useMemo(() => (absorbs ? [nAxis, kAxis] : [nAxis]), [absorbs]);
   return (
