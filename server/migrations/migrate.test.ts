@@ -1,24 +1,21 @@
-import { randomUUID } from 'node:crypto';
-import { QueryTypes, Sequelize } from 'sequelize';
+import { QueryTypes } from 'sequelize';
 import { afterAll, beforeAll, expect, test } from 'vitest';
 import { buildContent, buildMaterial } from '../../tests/factories.ts';
+import type { ScratchDatabase } from '../../tests/scratchDatabase.ts';
+import { createScratchDatabase } from '../../tests/scratchDatabase.ts';
 import { createModels } from '../models/models.ts';
 import type { Models } from '../models/models.ts';
 import { migrate, migrateDown } from './migrate.ts';
 
-const name = `skewlight_migrations_${randomUUID().slice(0, 8)}`;
-const testUrl = process.env['TEST_DATABASE_URL'] ?? '';
-const scratchUrl = Object.assign(new URL(testUrl), { pathname: `/${name}` }).toString();
-const admin = new Sequelize(testUrl, { logging: false });
+let scratch: ScratchDatabase;
 let models: Models;
 beforeAll(async () => {
-  await admin.query(`CREATE DATABASE ${name}`);
-  models = createModels(scratchUrl);
+  scratch = await createScratchDatabase();
+  models = createModels(scratch.url);
 });
 afterAll(async () => {
   await models.sequelize.close();
-  await admin.query(`DROP DATABASE ${name}`);
-  await admin.close();
+  await scratch.drop();
 });
 
 const tables = async () => {
@@ -30,22 +27,22 @@ const tables = async () => {
 };
 
 test('servers that start together take every step once; all steps have a way down, and up again', async () => {
-  const [first, second] = await Promise.all([migrate(scratchUrl), migrate(scratchUrl)]);
+  const [first, second] = await Promise.all([migrate(scratch.url), migrate(scratch.url)]);
   expect([first.length, second.length].sort()).toEqual([0, Math.max(first.length, second.length)]);
   const made = await tables();
   const taken = first.length > 0 ? first : second;
   expect(made).toEqual(
     expect.arrayContaining(['users', 'stacks', 'materials', 'runs', 'share_links', 'activity']),
   );
-  expect(await migrateDown(scratchUrl)).toEqual([...taken].reverse());
+  expect(await migrateDown(scratch.url)).toEqual([...taken].reverse());
   expect(await tables()).toEqual(['schema_migrations']);
-  expect(await migrate(scratchUrl)).toEqual(taken);
+  expect(await migrate(scratch.url)).toEqual(taken);
   expect(await tables()).toEqual(made);
-  expect(await migrate(scratchUrl)).toEqual([]);
+  expect(await migrate(scratch.url)).toEqual([]);
 });
 
 test('every model fits its table', async () => {
-  await migrate(scratchUrl);
+  await migrate(scratch.url);
   for (const model of Object.values(models.sequelize.models)) {
     expect(await model.findAll()).toEqual([]);
     const columns = Object.keys(
@@ -57,7 +54,7 @@ test('every model fits its table', async () => {
 });
 
 test('the database itself keeps a version of a material as it is', async () => {
-  await migrate(scratchUrl);
+  await migrate(scratch.url);
   const material = await buildMaterial(models, { id: 'kept' });
   const change = models.MaterialVersion.update(
     { content: buildContent({ voigt: null, voigtSource: null }) },

@@ -7,6 +7,9 @@ import { loadLibrary } from '../../worker/dispersion/loadLibrary.ts';
 import type { ApiServer } from '../../tests/apiServer.ts';
 import { startApiServer } from '../../tests/apiServer.ts';
 import { buildContent } from '../../tests/factories.ts';
+import type { ScratchDatabase } from '../../tests/scratchDatabase.ts';
+import { createScratchDatabase } from '../../tests/scratchDatabase.ts';
+import { migrate } from '../migrations/migrate.ts';
 import { projectRoot } from '../projectRoot.ts';
 import { hashSecret } from '../services/secrets.ts';
 import { solve } from '../services/solve.ts';
@@ -15,13 +18,20 @@ import { DEMO_LINK_TOKEN, DEMO_PASSWORD, readDemoData } from './demoData.ts';
 import { revokeDemoLink, seedDemoRun } from './demoRun.ts';
 import { seedLibrary } from './library.ts';
 
+// The demo group exists once in a database: this one is ours alone.
+let scratch: ScratchDatabase;
 let api: ApiServer;
 const library = loadLibrary(path.join(projectRoot, 'data', 'library'));
 beforeAll(async () => {
-  api = await startApiServer({ compute: true });
+  scratch = await createScratchDatabase();
+  await migrate(scratch.url);
+  api = await startApiServer({ databaseUrl: scratch.url });
   await seedLibrary(api.models, library);
 });
-afterAll(() => api.stop());
+afterAll(async () => {
+  await api.stop();
+  await scratch.drop();
+});
 
 describe('the shipped library', () => {
   const entry: LibraryEntry = {
