@@ -55,7 +55,9 @@ export function* solveCasePoints(
 
 function weighted(values: number[], start: number, weights: number[]): number {
   if (weights.length === 1) return values[start]!;
-  return weights.reduce((sum, weight, i) => sum + weight * values[start + i]!, 0);
+  const mean = weights.reduce((sum, weight, i) => sum + weight * values[start + i]!, 0);
+  // The nodes lie evenly about the value asked for; rounding must not change its name.
+  return Number(mean.toPrecision(12));
 }
 
 type PointAnswer = Omit<SolvePoint, 'wavelengthNm' | 'angleDeg'>;

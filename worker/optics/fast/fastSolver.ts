@@ -200,12 +200,9 @@ export class FastSolver {
 
   #take(batch: Batch, from: number, count: number, out: BatchResult, start: number): void {
     const tile = this.#tile;
-    for (let number = 0; number < out.columns.length; number++) {
-      const column = out.columns[number]!;
-      const solved = tile.column(number);
-      if (count === solved.length) column.set(solved, start + from);
-      // A view made for a few points takes longer than copying them.
-      else for (let i = 0; i < count; i++) column[start + from + i] = solved[i]!;
+    const solved = tile.columns(count);
+    for (let column = 0; column < out.columns.length; column++) {
+      out.columns[column]!.set(solved[column]!, start + from);
     }
     const substrate = this.#media[this.#substrate]!;
     if (substrate.gyrotropic && out.withTransmission) {
@@ -213,8 +210,8 @@ export class FastSolver {
         out.columns[column]!.fill(NaN, start + from, start + from + count);
       }
     }
-    const p = tile.column(COLUMN.reflectanceP);
-    const s = tile.column(COLUMN.reflectanceS);
+    const p = solved[COLUMN.reflectanceP]!;
+    const s = solved[COLUMN.reflectanceS]!;
     for (let i = 0; i < count; i++) {
       const finite = p[i]! < Infinity && s[i]! < Infinity;
       if (!finite || (substrate.gyrotropic && tile.isDoubtful(i))) {

@@ -46,6 +46,7 @@ export class Tile {
   readonly #at: Record<keyof typeof SLOTS | 'substrate' | 'spare' | 'single' | 'out', number>;
   readonly #numbers: Float64Array;
   readonly #columns: Float64Array[];
+  readonly #views: (Float64Array[] | undefined)[] = [];
   #pairs = 0;
   /** 1 where every point has constants of its own, 0 where all share those of one wavelength. */
   #mixed: 0 | 1 = 0;
@@ -91,9 +92,10 @@ export class Tile {
     return this.#at.out + column * TILE_PAIRS * SLOT;
   }
 
-  /** Column of the results, one value per point. */
-  column(column: number): Float64Array {
-    return this.#columns[column]!;
+  /** The first `count` values of every column of the results. Views of a length are made once. */
+  columns(count: number): Float64Array[] {
+    const views = (this.#views[count] ??= this.#columns.map((column) => column.subarray(0, count)));
+    return views;
   }
 
   /** Angles in degrees from `from`; an odd last point is doubled. */

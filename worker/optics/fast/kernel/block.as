@@ -157,98 +157,136 @@ export function stackPlainBelow(pairs: i32, layer: usize, matrix: usize): void {
   }
 }
 
+/** One element of a matrix product: row (a b c d) times a column of `lower`. */
+@inline
+function element(
+  product: usize,
+  lower: usize,
+  column: usize,
+  aRe: v128,
+  aIm: v128,
+  bRe: v128,
+  bIm: v128,
+  cRe: v128,
+  cIm: v128,
+  dRe: v128,
+  dIm: v128,
+): void {
+  const xRe = at(lower, column);
+  const xIm = at(lower, column + 1);
+  const yRe = at(lower, column + 8);
+  const yIm = at(lower, column + 9);
+  let sumRe = add(re(aRe, aIm, xRe, xIm), re(bRe, bIm, yRe, yIm));
+  let sumIm = add(im(aRe, aIm, xRe, xIm), im(bRe, bIm, yRe, yIm));
+  const zRe = at(lower, column + 16);
+  const zIm = at(lower, column + 17);
+  const wRe = at(lower, column + 24);
+  const wIm = at(lower, column + 25);
+  sumRe = add(sumRe, add(re(cRe, cIm, zRe, zIm), re(dRe, dIm, wRe, wIm)));
+  sumIm = add(sumIm, add(im(cRe, cIm, zRe, zIm), im(dRe, dIm, wRe, wIm)));
+  put(product, column, sumRe);
+  put(product, column + 1, sumIm);
+}
+
 /** product = upper lower; must not overlap. */
 export function multiply(pairs: i32, upper: usize, lower: usize, product: usize): void {
   for (let i = 0; i < pairs; i++) {
-    for (let row: usize = 0; row < 32; row += 8) {
-      const aRe = at(upper + row * V, 0);
-      const aIm = at(upper + row * V, 1);
-      const bRe = at(upper + row * V, 2);
-      const bIm = at(upper + row * V, 3);
-      const cRe = at(upper + row * V, 4);
-      const cIm = at(upper + row * V, 5);
-      const dRe = at(upper + row * V, 6);
-      const dIm = at(upper + row * V, 7);
-      for (let column: usize = 0; column < 8; column += 2) {
-        const xRe = at(lower + column * V, 0);
-        const xIm = at(lower + column * V, 1);
-        const yRe = at(lower + column * V, 8);
-        const yIm = at(lower + column * V, 9);
-        let sumRe = add(re(aRe, aIm, xRe, xIm), re(bRe, bIm, yRe, yIm));
-        let sumIm = add(im(aRe, aIm, xRe, xIm), im(bRe, bIm, yRe, yIm));
-        const zRe = at(lower + column * V, 16);
-        const zIm = at(lower + column * V, 17);
-        const wRe = at(lower + column * V, 24);
-        const wIm = at(lower + column * V, 25);
-        sumRe = add(sumRe, add(re(cRe, cIm, zRe, zIm), re(dRe, dIm, wRe, wIm)));
-        sumIm = add(sumIm, add(im(cRe, cIm, zRe, zIm), im(dRe, dIm, wRe, wIm)));
-        put(product + (row + column) * V, 0, sumRe);
-        put(product + (row + column) * V, 1, sumIm);
-      }
+    for (let row: usize = 0; row < 4; row++) {
+      const aRe = at(upper, 0);
+      const aIm = at(upper, 1);
+      const bRe = at(upper, 2);
+      const bIm = at(upper, 3);
+      const cRe = at(upper, 4);
+      const cIm = at(upper, 5);
+      const dRe = at(upper, 6);
+      const dIm = at(upper, 7);
+      element(product, lower, 0, aRe, aIm, bRe, bIm, cRe, cIm, dRe, dIm);
+      element(product, lower, 2, aRe, aIm, bRe, bIm, cRe, cIm, dRe, dIm);
+      element(product, lower, 4, aRe, aIm, bRe, bIm, cRe, cIm, dRe, dIm);
+      element(product, lower, 6, aRe, aIm, bRe, bIm, cRe, cIm, dRe, dIm);
+      upper += 8 * V;
+      product += 8 * V;
     }
-    upper += 32 * V;
     lower += 32 * V;
-    product += 32 * V;
   }
+}
+
+/** One element of [M; N]: a row of the matrix times a column of [1; Y]. */
+@inline
+function crossElement(
+  matrix: usize,
+  state: usize,
+  work: usize,
+  column: usize,
+  cRe: v128,
+  cIm: v128,
+  dRe: v128,
+  dIm: v128,
+): void {
+  const xRe = at(state, column);
+  const xIm = at(state, column + 1);
+  const yRe = at(state, column + 4);
+  const yIm = at(state, column + 5);
+  put(work, column, add(at(matrix, column), add(re(cRe, cIm, xRe, xIm), re(dRe, dIm, yRe, yIm))));
+  put(work, column + 1, add(at(matrix, column + 1), add(im(cRe, cIm, xRe, xIm), im(dRe, dIm, yRe, yIm))));
+}
+
+@inline
+function crossMatrixRow(matrix: usize, state: usize, work: usize): void {
+  const cRe = at(matrix, 4);
+  const cIm = at(matrix, 5);
+  const dRe = at(matrix, 6);
+  const dIm = at(matrix, 7);
+  crossElement(matrix, state, work, 0, cRe, cIm, dRe, dIm);
+  crossElement(matrix, state, work, 2, cRe, cIm, dRe, dIm);
 }
 
 /** Crosses the block: [M; N] = matrix [1; Y] to `work` (0-7 and 8-15). */
 export function crossMatrix(pairs: i32, matrix: usize, state: usize, work: usize): void {
   for (let i = 0; i < pairs; i++) {
-    for (let row: usize = 0; row < 4; row++) {
-      const cRe = at(matrix + (8 * row) * V, 4);
-      const cIm = at(matrix + (8 * row) * V, 5);
-      const dRe = at(matrix + (8 * row) * V, 6);
-      const dIm = at(matrix + (8 * row) * V, 7);
-      for (let column: usize = 0; column < 4; column += 2) {
-        const xRe = at(state + column * V, 0);
-        const xIm = at(state + column * V, 1);
-        const yRe = at(state + column * V, 4);
-        const yIm = at(state + column * V, 5);
-        put(work + (4 * row + column) * V, 0,
-          add(at(matrix + (8 * row + column) * V, 0), add(re(cRe, cIm, xRe, xIm), re(dRe, dIm, yRe, yIm))),
-        );
-        put(work + (4 * row + column) * V, 1,
-          add(at(matrix + (8 * row + column) * V, 1), add(im(cRe, cIm, xRe, xIm), im(dRe, dIm, yRe, yIm))),
-        );
-      }
-    }
+    crossMatrixRow(matrix, state, work);
+    crossMatrixRow(matrix + 8 * V, state, work + 4 * V);
+    crossMatrixRow(matrix + 16 * V, state, work + 8 * V);
+    crossMatrixRow(matrix + 24 * V, state, work + 12 * V);
     matrix += 32 * V;
     state += 8 * V;
     work += 16 * V;
   }
 }
 
+/** One row of N M^-1, M = [a b; c d], by the adjoint and 1 / det M. */
+@inline
+function settleRow(work: usize, row: usize, state: usize, invRe: v128, invIm: v128): void {
+  const n1Re = at(row, 0);
+  const n1Im = at(row, 1);
+  const n2Re = at(row, 2);
+  const n2Im = at(row, 3);
+  const lRe = sub(re(n1Re, n1Im, at(work, 6), at(work, 7)), re(n2Re, n2Im, at(work, 4), at(work, 5)));
+  const lIm = sub(im(n1Re, n1Im, at(work, 6), at(work, 7)), im(n2Re, n2Im, at(work, 4), at(work, 5)));
+  put(state, 0, re(lRe, lIm, invRe, invIm));
+  put(state, 1, im(lRe, lIm, invRe, invIm));
+  const rRe = sub(re(n2Re, n2Im, at(work, 0), at(work, 1)), re(n1Re, n1Im, at(work, 2), at(work, 3)));
+  const rIm = sub(im(n2Re, n2Im, at(work, 0), at(work, 1)), im(n1Re, n1Im, at(work, 2), at(work, 3)));
+  put(state, 2, re(rRe, rIm, invRe, invIm));
+  put(state, 3, im(rRe, rIm, invRe, invIm));
+}
+
 /** Y' = N M^-1 from `work`. */
 export function settle(pairs: i32, work: usize, state: usize): void {
   for (let i = 0; i < pairs; i++) {
-    const aRe = at(work, 0);
-    const aIm = at(work, 1);
-    const bRe = at(work, 2);
-    const bIm = at(work, 3);
-    const cRe = at(work, 4);
-    const cIm = at(work, 5);
-    const dRe = at(work, 6);
-    const dIm = at(work, 7);
-    const detRe = sub(re(aRe, aIm, dRe, dIm), re(bRe, bIm, cRe, cIm));
-    const detIm = sub(im(aRe, aIm, dRe, dIm), im(bRe, bIm, cRe, cIm));
+    const detRe = sub(
+      re(at(work, 0), at(work, 1), at(work, 6), at(work, 7)),
+      re(at(work, 2), at(work, 3), at(work, 4), at(work, 5)),
+    );
+    const detIm = sub(
+      im(at(work, 0), at(work, 1), at(work, 6), at(work, 7)),
+      im(at(work, 2), at(work, 3), at(work, 4), at(work, 5)),
+    );
     const scale = inverseNorm(detRe, detIm);
     const invRe = mul(detRe, scale);
     const invIm = f64x2.neg(mul(detIm, scale));
-    for (let row: usize = 0; row < 8; row += 4) {
-      const n1Re = at(work + row * V, 8);
-      const n1Im = at(work + row * V, 9);
-      const n2Re = at(work + row * V, 10);
-      const n2Im = at(work + row * V, 11);
-      const lRe = sub(re(n1Re, n1Im, dRe, dIm), re(n2Re, n2Im, cRe, cIm));
-      const lIm = sub(im(n1Re, n1Im, dRe, dIm), im(n2Re, n2Im, cRe, cIm));
-      const rRe = sub(re(n2Re, n2Im, aRe, aIm), re(n1Re, n1Im, bRe, bIm));
-      const rIm = sub(im(n2Re, n2Im, aRe, aIm), im(n1Re, n1Im, bRe, bIm));
-      put(state + row * V, 0, re(lRe, lIm, invRe, invIm));
-      put(state + row * V, 1, im(lRe, lIm, invRe, invIm));
-      put(state + row * V, 2, re(rRe, rIm, invRe, invIm));
-      put(state + row * V, 3, im(rRe, rIm, invRe, invIm));
-    }
+    settleRow(work, work + 8 * V, state, invRe, invIm);
+    settleRow(work, work + 12 * V, state + 4 * V, invRe, invIm);
     work += 16 * V;
     state += 8 * V;
   }

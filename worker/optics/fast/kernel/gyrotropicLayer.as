@@ -1,4 +1,5 @@
-import { add, at, both, entry, im, inverseNorm, mul, put, re, sub, V } from './simd.as';
+import { settle } from './block.as';
+import { add, at, both, entry, im, mul, put, re, sub, V } from './simd.as';
 
 // Layers of a gyrotropic medium (gyrotropicMedium.as). K = [0, 1; -V, U] acts on (f, lambda f); a layer is
 // exp(k0 d K), found as a polynomial of degree 3 in K modulo its characteristic polynomial. No wave is followed on
@@ -241,6 +242,72 @@ export function mapGyrotropic(
   }
 }
 
+/** One row of M and of lambda f in one column: E11 + E12 W and E11 W + E12 X. */
+@inline
+function crossRow(
+  map: usize,
+  work: usize,
+  column: usize,
+  w1Re: v128,
+  w1Im: v128,
+  w2Re: v128,
+  w2Im: v128,
+  x1Re: v128,
+  x1Im: v128,
+  x2Re: v128,
+  x2Im: v128,
+): void {
+  const f1Re = at(map, 8);
+  const f1Im = at(map, 9);
+  const f2Re = at(map, 10);
+  const f2Im = at(map, 11);
+  put(work, column, add(at(map, column), add(re(f1Re, f1Im, w1Re, w1Im), re(f2Re, f2Im, w2Re, w2Im))));
+  put(
+    work,
+    column + 1,
+    add(at(map, column + 1), add(im(f1Re, f1Im, w1Re, w1Im), im(f2Re, f2Im, w2Re, w2Im))),
+  );
+  const sRe = add(re(f1Re, f1Im, x1Re, x1Im), re(f2Re, f2Im, x2Re, x2Im));
+  const sIm = add(im(f1Re, f1Im, x1Re, x1Im), im(f2Re, f2Im, x2Re, x2Im));
+  const e1Re = at(map, 0);
+  const e1Im = at(map, 1);
+  const e2Re = at(map, 2);
+  const e2Im = at(map, 3);
+  put(work, 8 + column, add(sRe, add(re(e1Re, e1Im, w1Re, w1Im), re(e2Re, e2Im, w2Re, w2Im))));
+  put(work, 9 + column, add(sIm, add(im(e1Re, e1Im, w1Re, w1Im), im(e2Re, e2Im, w2Re, w2Im))));
+}
+
+/** One column of a crossing; `aRe`, `aIm` is A in that column. */
+@inline
+function crossColumn(
+  gyro: usize,
+  map: usize,
+  state: usize,
+  work: usize,
+  column: usize,
+  aRe: v128,
+  aIm: v128,
+): void {
+  const kRe = at(gyro, 2);
+  const kIm = at(gyro, 3);
+  const y1Re = at(state, column);
+  const y1Im = at(state, column + 1);
+  const w1Re = add(re(kRe, kIm, y1Re, y1Im), aRe);
+  const w1Im = add(im(kRe, kIm, y1Re, y1Im), aIm);
+  const w2Re = at(state, column + 4);
+  const w2Im = at(state, column + 5);
+  const u12Re = at(gyro, 6);
+  const u12Im = at(gyro, 7);
+  const x1Re = sub(re(u12Re, u12Im, w2Re, w2Im), at(map, 16 + column));
+  const x1Im = sub(im(u12Re, u12Im, w2Re, w2Im), at(map, 17 + column));
+  const u21Re = at(gyro, 8);
+  const u21Im = at(gyro, 9);
+  const x2Re = sub(re(u21Re, u21Im, w1Re, w1Im), at(map, 20 + column));
+  const x2Im = sub(im(u21Re, u21Im, w1Re, w1Im), at(map, 21 + column));
+  crossRow(map, work, column, w1Re, w1Im, w2Re, w2Im, x1Re, x1Im, x2Re, x2Im);
+  crossRow(map + 4 * V, work + 4 * V, column, w1Re, w1Im, w2Re, w2Im, x1Re, x1Im, x2Re, x2Im);
+}
+
 /**
  * First half of a crossing: with W = A + B Y the lambda f of Y, X = U W - V, the fields above are
  * M = E11 + E12 W and lambda f = E11 W + E12 X. Both go to `work` (0-7 and 8-15).
@@ -254,52 +321,8 @@ export function crossGyrotropic(
   work: usize,
 ): void {
   for (let i = 0; i < pairs; i++) {
-    const kRe = at(gyro, 2);
-    const kIm = at(gyro, 3);
-    const u12Re = at(gyro, 6);
-    const u12Im = at(gyro, 7);
-    for (let column: usize = 0; column < 4; column += 2) {
-      const y1Re = at(state + column * V, 0);
-      const y1Im = at(state + column * V, 1);
-      const w1Re = add(re(kRe, kIm, y1Re, y1Im), column === 0 ? at(map, 24) : u12Re);
-      const w1Im = add(im(kRe, kIm, y1Re, y1Im), column === 0 ? at(map, 25) : u12Im);
-      const w2Re = at(state + column * V, 4);
-      const w2Im = at(state + column * V, 5);
-      const x1Re = sub(re(u12Re, u12Im, w2Re, w2Im), at(map + column * V, 16));
-      const x1Im = sub(im(u12Re, u12Im, w2Re, w2Im), at(map + column * V, 17));
-      const u21Re = at(gyro, 8);
-      const u21Im = at(gyro, 9);
-      const x2Re = sub(re(u21Re, u21Im, w1Re, w1Im), at(map + column * V, 20));
-      const x2Im = sub(im(u21Re, u21Im, w1Re, w1Im), at(map + column * V, 21));
-      for (let row: usize = 0; row < 8; row += 4) {
-        const f1Re = at(map + row * V, 8);
-        const f1Im = at(map + row * V, 9);
-        const f2Re = at(map + row * V, 10);
-        const f2Im = at(map + row * V, 11);
-        put(work + (row + column) * V, 0,
-          add(at(map + (row + column) * V, 0), add(re(f1Re, f1Im, w1Re, w1Im), re(f2Re, f2Im, w2Re, w2Im))),
-        );
-        put(work + (row + column) * V, 1,
-          add(at(map + (row + column) * V, 1), add(im(f1Re, f1Im, w1Re, w1Im), im(f2Re, f2Im, w2Re, w2Im))),
-        );
-        const e1Re = at(map + row * V, 0);
-        const e1Im = at(map + row * V, 1);
-        const e2Re = at(map + row * V, 2);
-        const e2Im = at(map + row * V, 3);
-        put(work + (row + column) * V, 8,
-          add(
-            add(re(e1Re, e1Im, w1Re, w1Im), re(e2Re, e2Im, w2Re, w2Im)),
-            add(re(f1Re, f1Im, x1Re, x1Im), re(f2Re, f2Im, x2Re, x2Im)),
-          ),
-        );
-        put(work + (row + column) * V, 9,
-          add(
-            add(im(e1Re, e1Im, w1Re, w1Im), im(e2Re, e2Im, w2Re, w2Im)),
-            add(im(f1Re, f1Im, x1Re, x1Im), im(f2Re, f2Im, x2Re, x2Im)),
-          ),
-        );
-      }
-    }
+    crossColumn(gyro, map, state, work, 0, at(map, 24), at(map, 25));
+    crossColumn(gyro, map, state, work, 2, at(gyro, 6), at(gyro, 7));
     gyro += stride;
     map += 26 * V;
     state += 8 * V;
@@ -316,53 +339,20 @@ export function settleGyrotropic(
   work: usize,
   state: usize,
 ): void {
+  settle(pairs, work, state);
   for (let i = 0; i < pairs; i++) {
-    const aRe = at(work, 0);
-    const aIm = at(work, 1);
-    const bRe = at(work, 2);
-    const bIm = at(work, 3);
-    const cRe = at(work, 4);
-    const cIm = at(work, 5);
-    const dRe = at(work, 6);
-    const dIm = at(work, 7);
-    const detRe = sub(re(aRe, aIm, dRe, dIm), re(bRe, bIm, cRe, cIm));
-    const detIm = sub(im(aRe, aIm, dRe, dIm), im(bRe, bIm, cRe, cIm));
-    const scale = inverseNorm(detRe, detIm);
-    const invRe = mul(detRe, scale);
-    const invIm = f64x2.neg(mul(detIm, scale));
     const kappaRe = at(gyro, 4);
     const kappaIm = at(gyro, 5);
-    for (let row: usize = 0; row < 2; row++) {
-      const n1Re = at(work + 4 * row * V, 8);
-      const n1Im = at(work + 4 * row * V, 9);
-      const n2Re = at(work + 4 * row * V, 10);
-      const n2Im = at(work + 4 * row * V, 11);
-      const lRe = sub(re(n1Re, n1Im, dRe, dIm), re(n2Re, n2Im, cRe, cIm));
-      const lIm = sub(im(n1Re, n1Im, dRe, dIm), im(n2Re, n2Im, cRe, cIm));
-      const rRe = sub(re(n2Re, n2Im, aRe, aIm), re(n1Re, n1Im, bRe, bIm));
-      const rIm = sub(im(n2Re, n2Im, aRe, aIm), im(n1Re, n1Im, bRe, bIm));
-      let y1Re = re(lRe, lIm, invRe, invIm);
-      let y1Im = im(lRe, lIm, invRe, invIm);
-      let y2Re = re(rRe, rIm, invRe, invIm);
-      let y2Im = im(rRe, rIm, invRe, invIm);
-      if (row === 0) {
-        const lessRe = sub(y1Re, at(map, 24));
-        const lessIm = sub(y1Im, at(map, 25));
-        y1Re = re(lessRe, lessIm, kappaRe, kappaIm);
-        y1Im = im(lessRe, lessIm, kappaRe, kappaIm);
-        const otherRe = sub(y2Re, at(gyro, 6));
-        const otherIm = sub(y2Im, at(gyro, 7));
-        y2Re = re(otherRe, otherIm, kappaRe, kappaIm);
-        y2Im = im(otherRe, otherIm, kappaRe, kappaIm);
-      }
-      put(state + 4 * row * V, 0, y1Re);
-      put(state + 4 * row * V, 1, y1Im);
-      put(state + 4 * row * V, 2, y2Re);
-      put(state + 4 * row * V, 3, y2Im);
-    }
+    const y1Re = sub(at(state, 0), at(map, 24));
+    const y1Im = sub(at(state, 1), at(map, 25));
+    put(state, 0, re(y1Re, y1Im, kappaRe, kappaIm));
+    put(state, 1, im(y1Re, y1Im, kappaRe, kappaIm));
+    const y2Re = sub(at(state, 2), at(gyro, 6));
+    const y2Im = sub(at(state, 3), at(gyro, 7));
+    put(state, 2, re(y2Re, y2Im, kappaRe, kappaIm));
+    put(state, 3, im(y2Re, y2Im, kappaRe, kappaIm));
     gyro += stride;
     map += 26 * V;
-    work += 16 * V;
     state += 8 * V;
   }
 }

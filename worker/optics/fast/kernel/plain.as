@@ -160,24 +160,27 @@ export function traceThick(
   }
 }
 
+/** One polarization: M = c + (aRe, aIm) y, N = c y - (bRe, bIm). */
+@inline
+function crossOne(state: usize, cRe: v128, cIm: v128, aRe: v128, aIm: v128, bRe: v128, bIm: v128): void {
+  const yRe = at(state, 0);
+  const yIm = at(state, 1);
+  const mRe = add(cRe, re(aRe, aIm, yRe, yIm));
+  const mIm = add(cIm, im(aRe, aIm, yRe, yIm));
+  const nRe = sub(re(cRe, cIm, yRe, yIm), bRe);
+  const nIm = sub(im(cRe, cIm, yRe, yIm), bIm);
+  const scale = inverseNorm(mRe, mIm);
+  put(state, 0, mul(scale, add(mul(nRe, mRe), mul(nIm, mIm))));
+  put(state, 1, mul(scale, sub(mul(nIm, mRe), mul(nRe, mIm))));
+}
+
 /** y' = (C y - G)/(C + P y) and (C y - F)/(C + S y): a plain layer below all magnetic ones. */
 export function crossDiagonal(pairs: i32, layer: usize, state: usize): void {
   for (let i = 0; i < pairs; i++) {
     const cRe = at(layer, 0);
     const cIm = at(layer, 1);
-    for (let k: usize = 0; k < 2; k++) {
-      const yRe = at(state + 6 * k * V, 0);
-      const yIm = at(state + 6 * k * V, 1);
-      const aRe = at(layer + (- 2 * k) * V, 4);
-      const aIm = at(layer + (- 2 * k) * V, 5);
-      const mRe = add(cRe, re(aRe, aIm, yRe, yIm));
-      const mIm = add(cIm, im(aRe, aIm, yRe, yIm));
-      const nRe = sub(re(cRe, cIm, yRe, yIm), at(layer + 2 * k * V, 6));
-      const nIm = sub(im(cRe, cIm, yRe, yIm), at(layer + 2 * k * V, 7));
-      const scale = inverseNorm(mRe, mIm);
-      put(state + 6 * k * V, 0, mul(scale, add(mul(nRe, mRe), mul(nIm, mIm))));
-      put(state + 6 * k * V, 1, mul(scale, sub(mul(nIm, mRe), mul(nRe, mIm))));
-    }
+    crossOne(state, cRe, cIm, at(layer, 4), at(layer, 5), at(layer, 6), at(layer, 7));
+    crossOne(state + 6 * V, cRe, cIm, at(layer, 2), at(layer, 3), at(layer, 8), at(layer, 9));
     layer += 14 * V;
     state += 8 * V;
   }

@@ -142,35 +142,37 @@ export function leave(
   }
 }
 
+/** One input: `p` is its first column of r, `first` its column of R, `angles` that of its rotation. */
+@inline
+function readInput(p: usize, column: usize, first: usize, angles: usize, sense: f64): void {
+  const half = both(28.64788975654116);
+  const pRe = v128.load(p);
+  const pIm = v128.load(p + column);
+  const sRe = v128.load(p + 4 * column);
+  const sIm = v128.load(p + 5 * column);
+  const powerP = norm(pRe, pIm);
+  const powerS = norm(sRe, sIm);
+  const s0 = add(powerP, powerS);
+  v128.store(first, s0);
+  const s1 = sub(powerP, powerS);
+  const s2 = mul(both(2), add(mul(pRe, sRe), mul(pIm, sIm)));
+  const s3 = mul(both(2), sub(mul(pRe, sIm), mul(pIm, sRe)));
+  const none = v128.or(f64x2.lt(s0, both(1e-28)), f64x2.ne(s0, s0));
+  let rotation = mul(half, angleOf(mul(both(sense), s2), mul(both(sense), s1)));
+  rotation = choose(f64x2.le(rotation, both(-90)), add(rotation, both(180)), rotation);
+  const ellipticity = mul(half, angleOf(s3, f64x2.sqrt(norm(s1, s2))));
+  v128.store(angles, v128.or(rotation, none));
+  v128.store(angles + column, v128.or(ellipticity, none));
+}
+
 /**
  * R and the exact Kerr angles (physics.md section 4) from the eight columns of `leave`: columns 8 R_p, 9 R_s,
  * 10 rotation and 11 ellipticity for p light, 12 and 13 for s light, deg; NaN where S0 < 1e-28.
  */
 export function readAngles(pairs: i32, out: usize, column: usize): void {
   for (let i = 0; i < pairs; i++) {
-    const half = both(28.64788975654116);
-    for (let input: usize = 0; input < 2; input++) {
-      const p = out + 2 * input * column;
-      const pRe = v128.load(p);
-      const pIm = v128.load(p + column);
-      const sRe = v128.load(p + 4 * column);
-      const sIm = v128.load(p + 5 * column);
-      const powerP = norm(pRe, pIm);
-      const powerS = norm(sRe, sIm);
-      const s0 = add(powerP, powerS);
-      v128.store(out + (8 + input) * column, s0);
-      const s1 = sub(powerP, powerS);
-      const s2 = mul(both(2), add(mul(pRe, sRe), mul(pIm, sIm)));
-      const s3 = mul(both(2), sub(mul(pRe, sIm), mul(pIm, sRe)));
-      const sense = both(input === 0 ? 1 : -1);
-      const none = v128.or(f64x2.lt(s0, both(1e-28)), f64x2.ne(s0, s0));
-      let rotation = mul(half, angleOf(mul(sense, s2), mul(sense, s1)));
-      rotation = choose(f64x2.le(rotation, both(-90)), add(rotation, both(180)), rotation);
-      const ellipticity = mul(half, angleOf(s3, f64x2.sqrt(norm(s1, s2))));
-      const angles = out + (10 + 2 * input) * column;
-      v128.store(angles, v128.or(rotation, none));
-      v128.store(angles + column, v128.or(ellipticity, none));
-    }
+    readInput(out, column, out + 8 * column, out + 10 * column, 1);
+    readInput(out + 2 * column, column, out + 9 * column, out + 12 * column, -1);
     out += V;
   }
 }
