@@ -94,7 +94,7 @@ export function ScaleControls({ light, lights, log, unit, onChange }: ScaleProps
 }
 
 const quietSelect =
-  'h-7 rounded-control border border-transparent bg-transparent px-1 text-note text-muted hover:border-edge hover:text-ink';
+  'h-7 field-sizing-content rounded-control border border-transparent bg-transparent px-1 text-note text-muted hover:border-edge hover:text-ink';
 
 function asLight(value: string): Light {
   return value === 's' || value === 'ps' ? value : 'p';

@@ -96,17 +96,19 @@ function LoadedRun({ run }: { run: Run }) {
         run={run}
         dataPath={done ? path : null}
         waiting={<RunState run={run} mayEdit={editor} onRerun={startRerun} rerunning={rerun.isPending} />}
-      >
-        {({ result, layerName }) => (
+        besideFilm={({ result, layerName }) => (
           <div className="mt-6 flex flex-col gap-7">
             {compareWith && result && (
               <Comparison run={run} result={result} olderId={compareWith} layerName={layerName} />
             )}
             {editor && done && <SharePanel runId={run.id} />}
             <RunDownloads path={path} hasData={done} />
-            <RunProvenance run={run} />
           </div>
         )}
+      >
+        <div className="mt-3 border-t border-line pt-5">
+          <RunProvenance run={run} />
+        </div>
       </StoredRun>
     </Page>
   );

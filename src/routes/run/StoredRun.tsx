@@ -28,15 +28,17 @@ type Props = {
   dataPath: string | null;
   /** In place of the plot while there are no numbers. */
   waiting: ReactNode;
-  /** Below the plot, which may compare the numbers with others. */
-  children: (loaded: { result: RunResult | null; layerName: string | null }) => ReactNode;
+  /** Right below the plot; it may compare the numbers with others. */
+  besideFilm?: (loaded: { result: RunResult | null; layerName: string | null }) => ReactNode;
+  /** Below film and plot, over the whole width. */
+  children: ReactNode;
 };
 
 /**
  * A stored run: the film as it was, the values at the cursor, the curves. On a phone in this order, one below the
  * other. The drawing follows the cursor along an angle or a wavelength.
  */
-export function StoredRun({ run, dataPath, waiting, children }: Props) {
+export function StoredRun({ run, dataPath, waiting, besideFilm, children }: Props) {
   const [view, setView] = useReadingView();
   const [cursor, setCursor] = useState<number | null>(null);
   const data = useQuery({ ...runDataQuery(dataPath ?? ''), enabled: dataPath !== null });
@@ -102,8 +104,9 @@ export function StoredRun({ run, dataPath, waiting, children }: Props) {
             <LoadingState label="Loading the values" rows={8} />
           )}
         </section>
-        {children({ result, layerName })}
+        {besideFilm?.({ result, layerName })}
       </div>
+      <div className="min-w-0 lg:col-span-2">{children}</div>
     </div>
   );
 }

@@ -54,23 +54,21 @@ function OpenShare({ token, run }: { token: string; run: SharedRun }) {
       }
     >
       <StoredRun run={run} dataPath={path} waiting={null}>
-        {() => (
-          <div className="mt-6 flex flex-col gap-7">
-            <RunProvenance run={run} />
-            <RunDownloads path={path} hasData />
-            {!session && (
-              <p className="text-note text-muted">
-                <Link
-                  className="prose-link"
-                  to={`${paths.signIn}?return=${encodeURIComponent(`/share/${token}`)}`}
-                >
-                  Sign in
-                </Link>{' '}
-                to open this film in a group of your own and change it.
-              </p>
-            )}
-          </div>
-        )}
+        <div className="mt-3 flex flex-col gap-7 border-t border-line pt-5">
+          <RunProvenance run={run} />
+          <RunDownloads path={path} hasData />
+          {!session && (
+            <p className="text-note text-muted">
+              <Link
+                className="prose-link"
+                to={`${paths.signIn}?return=${encodeURIComponent(`/share/${token}`)}`}
+              >
+                Sign in
+              </Link>{' '}
+              to open this film in a group of your own and change it.
+            </p>
+          )}
+        </div>
       </StoredRun>
     </Page>
   );

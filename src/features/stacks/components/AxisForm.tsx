@@ -28,7 +28,7 @@ export function AxisForm({ axis, layers, onChange, onChooseLayer }: Props) {
           <select
             value={axis.layerId}
             onChange={(event) => onChooseLayer(event.target.value)}
-            className="h-7 max-w-52 rounded-box border border-line bg-panel px-1.5 text-ink"
+            className="h-7 max-w-44 field-sizing-content rounded-box border border-line bg-panel px-1.5 text-ink"
           >
             {layers.map(({ layer, name }, index) => (
               <option key={layer.id} value={layer.id}>
@@ -80,7 +80,7 @@ export function AxisForm({ axis, layers, onChange, onChooseLayer }: Props) {
           onChange={(event) =>
             onChange({ ...axis, spacing: event.target.value === 'log' ? 'log' : 'linear' })
           }
-          className="h-7 rounded-box border border-transparent bg-transparent px-1 hover:border-edge"
+          className="h-7 field-sizing-content rounded-box border border-transparent bg-transparent px-1 hover:border-edge"
         >
           <option value="linear">evenly spaced</option>
           <option value="log">log spaced</option>

@@ -134,7 +134,7 @@ function Substrate({ document }: { document: StackDocument }) {
         ) : (
           <span className="px-2 text-lead font-semibold">{name}</span>
         )}
-        <span className="text-note text-muted">substrate</span>
+        <span className="text-note text-ink/80">substrate</span>
         {substrateM && (
           <span className="ml-auto">
             <MagnetizationChip

@@ -1,6 +1,7 @@
 import type { Vector } from '../../../../shared/complex.ts';
 import { Field } from '../../../components/Field.tsx';
 import { NumberInput } from '../../../components/NumberInput.tsx';
+import { formatPlain } from '../../../lib/format.ts';
 import { describeM, geometries, lengthOf, withComponent, withLength } from '../model/magnetization.ts';
 import { DirectionDial } from './DirectionDial.tsx';
 
@@ -42,6 +43,7 @@ export function DirectionForm({ m, label, onChange }: Props) {
                 min={-1}
                 max={1}
                 step={0.1}
+                format={fourDigits}
                 onChange={(value) => onChange(withComponent(m, index === 0 ? 0 : index === 1 ? 1 : 2, value))}
               />
             )}
@@ -55,6 +57,7 @@ export function DirectionForm({ m, label, onChange }: Props) {
               min={0}
               max={1}
               step={0.1}
+              format={fourDigits}
               onChange={(value) => onChange(withLength(m, value))}
             />
           )}
@@ -65,4 +68,9 @@ export function DirectionForm({ m, label, onChange }: Props) {
       </p>
     </div>
   );
+}
+
+/** As many digits as the box has room for; the full number is there while it is edited. */
+function fourDigits(value: number): string {
+  return formatPlain(Number(value.toPrecision(4)));
 }

@@ -1,29 +1,16 @@
 import { TriangleAlert } from 'lucide-react';
 import type { StackDocument } from '../../../../shared/stack.ts';
-import { listLayers } from '../model/items.ts';
-import { lengthOf } from '../model/magnetization.ts';
-import { mediumNotes } from '../model/media.ts';
+import { filmCautions } from '../model/media.ts';
 import { useFilm } from './film.ts';
 
 /** What to know of the film's constants, each said once: a Q from memory, a constant used beyond its wavelength. */
 export function FilmCautions({ document }: { document: StackDocument }) {
   const { materials, rangeNm } = useFilm();
-  const media = [
-    { medium: document.incident, m: undefined },
-    ...listLayers(document.layers),
-    { medium: document.substrate, m: document.substrateM },
-  ];
-  const cautions = new Set(
-    media.flatMap(({ medium, m }) =>
-      mediumNotes(medium, materials, rangeNm, m !== undefined && lengthOf(m) > 0)
-        .filter(({ tone }) => tone === 'caution')
-        .map(({ text }) => text),
-    ),
-  );
-  if (cautions.size === 0) return null;
+  const cautions = filmCautions(document, materials, rangeNm);
+  if (cautions.length === 0) return null;
   return (
     <ul aria-label="Cautions" className="ml-[38px] text-small text-warn">
-      {[...cautions].map((text) => (
+      {cautions.map(({ text }) => (
         <li key={text}>
           <TriangleAlert aria-hidden="true" className="mr-1 inline size-3 align-[-1px]" />
           {text}

@@ -149,7 +149,7 @@ export function Handle({
       aria-keyshortcuts="Alt+ArrowUp Alt+ArrowDown"
       title="Drag into order, or Alt with the arrow keys"
       onPointerDown={onGrab(id)}
-      className="-mr-1 inline-flex h-6 w-4 shrink-0 cursor-grab touch-none items-center justify-center rounded-box text-muted opacity-55 group-hover:opacity-100 focus-visible:opacity-100"
+      className="-mr-1 inline-flex h-6 w-4 shrink-0 cursor-grab touch-none items-center justify-center rounded-box text-ink opacity-60 group-hover:opacity-100 focus-visible:opacity-100"
     >
       <GripVertical size={13} aria-hidden />
     </button>
@@ -161,7 +161,7 @@ type NoteProps = { note: string; label: string; onChange: ((note: string) => voi
 /** The layer's role in the film, such as cap or buffer. An empty one shows only where it can be filled in. */
 function Note({ note, label, onChange, crowded }: NoteProps) {
   const [focused, setFocused] = useState(false);
-  if (!onChange) return note ? <span className="truncate text-note text-muted">{note}</span> : null;
+  if (!onChange) return note ? <span className="truncate text-note text-ink/80">{note}</span> : null;
   const hidden = note === '' && !focused;
   return (
     <input
@@ -172,9 +172,9 @@ function Note({ note, label, onChange, crowded }: NoteProps) {
       onFocus={() => setFocused(true)}
       onBlur={() => setFocused(false)}
       onChange={(event) => onChange(event.target.value)}
-      className={`min-w-0 rounded-box border-0 bg-transparent px-1.5 py-[3px] text-note text-muted ring-1 ring-transparent outline-none hover:ring-edge focus:bg-paper/85 focus:ring-2 focus:ring-accent ${
+      className={`min-w-0 rounded-box border-0 bg-transparent px-1.5 py-[3px] text-note text-ink/80 ring-1 ring-transparent outline-none hover:ring-edge focus:bg-paper/85 focus:ring-2 focus:ring-accent ${
         crowded ? 'w-14' : 'w-28'
-      } ${hidden ? 'placeholder:opacity-0 group-hover:placeholder:opacity-70' : ''}`}
+      } ${hidden ? 'placeholder:text-ink/0 group-hover:placeholder:text-ink/80' : ''}`}
     />
   );
 }

@@ -39,6 +39,7 @@ export function MaterialSearch({ materials, chosen, onChoose }: Props) {
   return (
     <div className="flex flex-col gap-2">
       <input
+        data-autofocus
         type="text"
         role="combobox"
         aria-label="Find a material"

@@ -1,4 +1,5 @@
 import { Popover } from 'radix-ui';
+import { useRef } from 'react';
 import type { ReactNode } from 'react';
 
 type Props = {
@@ -14,15 +15,23 @@ type Props = {
 
 /** A small panel beside the number it edits; the drawing stays in sight and goes on changing. */
 export function Popup({ trigger, label, open, onOpenChange, className = 'w-80', children }: Props) {
+  const content = useRef<HTMLDivElement>(null);
   return (
     <Popover.Root {...(open === undefined ? {} : { open })} {...(onOpenChange ? { onOpenChange } : {})}>
       <Popover.Trigger asChild>{trigger}</Popover.Trigger>
       <Popover.Portal>
         <Popover.Content
+          ref={content}
           aria-label={label}
           align="start"
           sideOffset={6}
           collisionPadding={12}
+          onOpenAutoFocus={(event) => {
+            const wanted = content.current?.querySelector<HTMLElement>('[data-autofocus]');
+            if (!wanted) return;
+            event.preventDefault();
+            wanted.focus();
+          }}
           className={`card z-40 max-w-[calc(100vw-24px)] p-3.5 shadow-float ${className}`}
         >
           {children}

@@ -14,9 +14,10 @@ import { useView } from '../hooks/useView.ts';
 import { issueTarget } from '../model/issueTarget.ts';
 import { listLayers } from '../model/items.ts';
 import { isTransverse } from '../model/magnetization.ts';
+import { filmCautions } from '../model/media.ts';
 import type { Materials } from '../model/media.ts';
 import { kerrAngles } from '../model/solveStates.ts';
-import { samePoint } from '../model/viewState.ts';
+import { axisOf, samePoint, usualFamilies } from '../model/viewState.ts';
 import { EditorNotices } from './EditorNotices.tsx';
 import { FilmDrawing } from './FilmDrawing.tsx';
 import { FilmHeader } from './FilmHeader.tsx';
@@ -55,6 +56,8 @@ export function StackWorkbench({ stack, library, mayEdit, onCopied, keepButton }
   const film = newer?.document ?? editor.draft.document;
   const [view, setView] = useView(film.workingPoint);
   const { point } = view;
+  const axis = useMemo(() => axisOf(view, film, materials), [view, film, materials]);
+  const rangeNm = wavelengthRange(point, axis);
   const live = useReadings(film, point);
   const transverse = useMemo(() => isTransverse(workingVectors(film, point)), [film, point]);
   const solveIssues = live.error instanceof ApiError ? live.error.issues : noIssues;
@@ -64,7 +67,7 @@ export function StackWorkbench({ stack, library, mayEdit, onCopied, keepButton }
 
   const setPoint = (change: Partial<WorkingPoint>) => setView({ point: { ...point, ...change } });
   const keep = ({ axis, problem }: { axis: SweepAxis; problem: boolean }) => {
-    const shown = view.shown ?? (transverse ? (['contrast', 'reflectance'] as const) : families.slice(0, 3));
+    const shown = view.shown ?? usualFamilies(transverse);
     const all = axis.points <= ALL_READINGS_UP_TO;
     return keepButton({
       document: { ...film, workingPoint: point },
@@ -93,7 +96,7 @@ export function StackWorkbench({ stack, library, mayEdit, onCopied, keepButton }
             library={library}
             point={point}
             kerr={kerrAngles(live.readings, point.input)}
-            rangeNm={wavelengthRange(point, view.kind === 'wavelength' ? view.axis : null)}
+            rangeNm={rangeNm}
             issues={issues}
             edit={canEdit ? editor.editDocument : null}
           />
@@ -124,6 +127,10 @@ export function StackWorkbench({ stack, library, mayEdit, onCopied, keepButton }
             document={film}
             materials={materials}
             view={view}
+            axis={axis}
+            notes={filmCautions(film, materials, rangeNm)
+              .filter(({ kind }) => kind === 'extended')
+              .map(({ text }) => text)}
             transverse={transverse}
             onView={setView}
             keep={mayEdit ? keep : null}

@@ -7,7 +7,7 @@ import { ReadingPlot } from '../../../components/plot/ReadingPlot.tsx';
 import { usePlotHeight } from '../../../components/plot/usePlotHeight.ts';
 import { PlotButton } from '../../../components/plot/PlotToolbar.tsx';
 import { families, readingsOf } from '../../../components/plot/readingView.ts';
-import type { Family, Light } from '../../../components/plot/readingView.ts';
+import type { Light } from '../../../components/plot/readingView.ts';
 import { fileNameOf, saveFile, toCsv } from '../../../components/plot/saveFile.ts';
 import { Tabs } from '../../../components/Tabs.tsx';
 import { formatCount, formatDuration } from '../../../lib/format.ts';
@@ -17,6 +17,7 @@ import { findItem, isBlock, listLayers } from '../model/items.ts';
 import { mediumName } from '../model/media.ts';
 import type { Materials } from '../model/media.ts';
 import { axisProblems, defaultAxis } from '../model/sweepAxis.ts';
+import { usualFamilies } from '../model/viewState.ts';
 import type { ViewState } from '../model/viewState.ts';
 import { AxisForm } from './AxisForm.tsx';
 import { SolveProblem } from './ReadingsStrip.tsx';
@@ -26,7 +27,11 @@ type Props = {
   document: StackDocument;
   materials: Materials;
   view: ViewState;
+  /** What is swept; null where there is nothing to sweep. */
+  axis: SweepAxis | null;
   transverse: boolean;
+  /** What to know of the constants along the sweep. */
+  notes: readonly string[];
   onView: (change: Partial<ViewState>) => void;
   /** The one primary button; absent for those who may not keep runs. */
   keep: ((sweep: { axis: SweepAxis; problem: boolean }) => ReactNode) | null;
@@ -42,10 +47,19 @@ const kinds = [
 ] as const;
 
 /** The plot of the current question: which quantity is swept, over what, and which readings are drawn. */
-export function SweepPanel({ title, document, materials, view, transverse, onView, keep }: Props) {
-  const axis = useMemo(() => currentAxis(view, document, materials), [view, document, materials]);
+export function SweepPanel({
+  title,
+  document,
+  materials,
+  view,
+  axis,
+  transverse,
+  notes,
+  onView,
+  keep,
+}: Props) {
   const plotHeight = usePlotHeight(PAGE_ABOVE_PLOT);
-  const shown = view.shown ?? defaultFamilies(transverse);
+  const shown = view.shown ?? usualFamilies(transverse);
   const light: Light = view.light ?? view.point.input;
   const readings = useMemo(() => readingsOf(shown, light), [shown, light]);
   const sweep = useSweep(document, view.point, axis, readings);
@@ -127,6 +141,11 @@ export function SweepPanel({ title, document, materials, view, transverse, onVie
                 </div>
               )}
               {sweep.error && <SolveProblem error={sweep.error} />}
+              {notes.map((note) => (
+                <p key={note} className="text-small text-warn">
+                  {note}
+                </p>
+              ))}
             </div>
           </div>
         )}
@@ -134,22 +153,6 @@ export function SweepPanel({ title, document, materials, view, transverse, onVie
     </section>
   );
 }
-
-/** The axis of the address where it still fits the film, else the default of its kind. */
-function currentAxis(view: ViewState, document: StackDocument, materials: Materials): SweepAxis | null {
-  const { axis, kind } = view;
-  if (axis === null) return defaultAxis(kind, document, materials);
-  if (axis.kind !== 'thickness') return axis;
-  const layer = findItem(document.layers, axis.layerId);
-  return layer && !isBlock(layer) ? axis : defaultAxis(kind, document, materials);
-}
-
-function defaultFamilies(transverse: boolean): readonly Family[] {
-  return transverse ? transverseFamilies : kerrFamilies;
-}
-
-const kerrFamilies: readonly Family[] = ['rotation', 'ellipticity', 'reflectance'];
-const transverseFamilies: readonly Family[] = ['contrast', 'reflectance'];
 
 function markerOf(axis: SweepAxis, document: StackDocument, view: ViewState): number | undefined {
   switch (axis.kind) {

@@ -1,7 +1,8 @@
 import { toComplex } from '../../../../shared/complex.ts';
 import type { MaterialClass, MaterialSummary } from '../../../../shared/material.ts';
-import type { StackMedium } from '../../../../shared/stack.ts';
+import type { StackDocument, StackMedium } from '../../../../shared/stack.ts';
 import { formatFormula, formatPlain, formatRange } from '../../../lib/format.ts';
+import { listLayers } from './items.ts';
 
 /** What the drawing and its cautions need of a material. */
 export type DrawnMaterial = Pick<
@@ -51,7 +52,13 @@ export function isMagnetic(medium: StackMedium, materials: Materials): boolean {
   return (materialOf(medium, materials)?.voigtRangeNm ?? null) !== null;
 }
 
-export type MediumNote = { tone: 'problem' | 'caution'; text: string; offer: 'assumeConstant' | null };
+export type MediumNote = {
+  tone: 'problem' | 'caution';
+  /** `extended` where a constant of one wavelength is used at others, which the plot says too. */
+  kind: 'range' | 'extended' | 'memory';
+  text: string;
+  offer: 'assumeConstant' | null;
+};
 
 /**
  * What a reader must know of a medium at these wavelengths: constants that end before them, a constant known at
@@ -78,6 +85,7 @@ export function mediumNotes(
     if (one && assumed) {
       notes.push({
         tone: 'caution',
+        kind: 'extended',
         text: `${what} of ${formatFormula(material.formula)} is known ${extent} and used at ${asked} too.`,
         offer: null,
       });
@@ -85,6 +93,7 @@ export function mediumNotes(
     }
     notes.push({
       tone: 'problem',
+      kind: 'range',
       text: `${what} of ${formatFormula(material.formula)} is known ${extent}, not at ${asked}.`,
       offer: one ? 'assumeConstant' : null,
     });
@@ -94,9 +103,29 @@ export function mediumNotes(
   if (magnetized && material.voigtConfidence === 'from memory') {
     notes.push({
       tone: 'caution',
+      kind: 'memory',
       text: `Q of ${formatFormula(material.formula)} is from memory: verify before use.`,
       offer: null,
     });
   }
   return notes;
+}
+
+/** What to know of all media of a film, each said once. */
+export function filmCautions(
+  document: StackDocument,
+  materials: Materials,
+  rangeNm: readonly [number, number],
+): MediumNote[] {
+  const media = [
+    { medium: document.incident, m: undefined },
+    ...listLayers(document.layers),
+    { medium: document.substrate, m: document.substrateM },
+  ];
+  const cautions = media.flatMap(({ medium, m }) =>
+    mediumNotes(medium, materials, rangeNm, m?.some((part) => part !== 0) ?? false).filter(
+      ({ tone }) => tone === 'caution',
+    ),
+  );
+  return cautions.filter(({ text }, index) => cautions.findIndex((other) => other.text === text) === index);
 }

@@ -1,9 +1,13 @@
 import { axisSchema } from '../../../../shared/run.ts';
 import type { AxisKind, SweepAxis } from '../../../../shared/run.ts';
 import { workingPointSchema } from '../../../../shared/stack.ts';
-import type { WorkingPoint } from '../../../../shared/stack.ts';
+import type { StackDocument, WorkingPoint } from '../../../../shared/stack.ts';
 import { readReadingView, writeReadingView } from '../../../components/plot/readingView.ts';
-import type { ReadingView } from '../../../components/plot/readingView.ts';
+import type { Family, ReadingView } from '../../../components/plot/readingView.ts';
+
+import { findItem, isBlock } from './items.ts';
+import type { Materials } from './media.ts';
+import { defaultAxis } from './sweepAxis.ts';
 
 /** What the address restores. Null stands for the choice that follows from the stack. */
 export type ViewState = ReadingView & {
@@ -97,3 +101,24 @@ export function samePoint(a: WorkingPoint, b: WorkingPoint): boolean {
 function sameMagnetization(a: WorkingPoint, b: WorkingPoint): boolean {
   return JSON.stringify(a.magnetization) === JSON.stringify(b.magnetization);
 }
+
+/** The axis of the address where it still fits the film, else the default of its kind; null without a layer. */
+export function axisOf(
+  view: Pick<ViewState, 'axis' | 'kind'>,
+  document: StackDocument,
+  materials: Materials,
+): SweepAxis | null {
+  const { axis, kind } = view;
+  if (axis === null) return defaultAxis(kind, document, materials);
+  if (axis.kind !== 'thickness') return axis;
+  const layer = findItem(document.layers, axis.layerId);
+  return layer && !isBlock(layer) ? axis : defaultAxis(kind, document, materials);
+}
+
+/** What is drawn until somebody chooses. For purely transverse m there is no rotation to draw. */
+export function usualFamilies(transverse: boolean): readonly Family[] {
+  return transverse ? transverseFamilies : kerrFamilies;
+}
+
+const kerrFamilies: readonly Family[] = ['rotation', 'ellipticity', 'reflectance'];
+const transverseFamilies: readonly Family[] = ['contrast', 'reflectance'];
