@@ -54,9 +54,16 @@ describe('documentOf', () => {
     expect(layers[1]).toMatchObject({ m: [0, 0, 1] });
   });
 
+  it('passes over a preferred source that is not known at the working point or not over the visible range', () => {
+    const narrow = buildMaterial('ta-ir', { formula: 'Ta', preferred: true, rangeNm: [667, 2000] });
+    const red = buildMaterial('ta-red', { formula: 'Ta', preferred: true, rangeNm: [600, 700] });
+    const { layers } = documentOf('pt-co-pt', [narrow, red, ...library]);
+    expect(layers[3]).toMatchObject({ medium: { material: 'ta' } });
+  });
+
   it('names what the library lacks', () => {
     const withoutTa = library.filter((material) => material.id !== 'ta');
-    expect(() => documentOf('pt-co-pt', withoutTa)).toThrow('no Ta');
+    expect(() => documentOf('pt-co-pt', withoutTa)).toThrow('no Ta at 632.8 nm');
   });
 });
 

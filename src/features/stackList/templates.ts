@@ -22,20 +22,30 @@ const workingPoint: WorkingPoint = {
 
 const air: StackMedium = { index: 1, label: 'air' };
 
+/** Where sweeps over wavelength usually go; a source that covers it is of more use than one that does not. */
+const visibleNm = [400, 800] as const;
+
 /**
- * The document a new stack starts with. Materials are chosen from the library by formula: the preferred source, and
- * for a magnet one with a Voigt constant.
+ * The document a new stack starts with. Materials are chosen from the library by formula, among those known at the
+ * working point: for a magnet one with a Voigt constant there, then sources that cover the visible range, then the
+ * preferred one.
  *
  * @throws Error that names the formula which the library lacks
  */
 export function documentOf(template: StackTemplate, materials: readonly MaterialSummary[]): StackDocument {
   const medium = (formula: string): StackMedium => {
-    const candidates = materials.filter((material) => material.formula === formula);
-    const chosen =
-      candidates.find((material) => material.class === 'magnet' && material.voigtRangeNm !== null) ??
-      candidates.find((material) => material.preferred) ??
-      candidates[0];
-    if (!chosen) throw new Error(`The library has no ${formula}; start with a blank stack.`);
+    const known = materials.filter(
+      (material) => material.formula === formula && covers(material.rangeNm, workingPoint.wavelengthNm),
+    );
+    const chosen = known.reduce<MaterialSummary | undefined>(
+      (best, one) => (best === undefined || worth(one) > worth(best) ? one : best),
+      undefined,
+    );
+    if (!chosen) {
+      throw new Error(
+        `The library has no ${formula} at ${workingPoint.wavelengthNm} nm; start with a blank stack.`,
+      );
+    }
     return { material: chosen.id, version: chosen.version };
   };
   const layer = (id: string, formula: string, thicknessNm: number, rest: Partial<StackLayer> = {}) => ({
@@ -55,4 +65,14 @@ export function documentOf(template: StackTemplate, materials: readonly Material
           layer('oxide', 'SiO2', 100),
         ];
   return { incident: air, layers, substrate: medium('Si'), workingPoint };
+}
+
+function covers([from, to]: readonly [number, number], wavelengthNm: number): boolean {
+  return from <= wavelengthNm && wavelengthNm <= to;
+}
+
+function worth({ voigtRangeNm, rangeNm, preferred }: MaterialSummary): number {
+  const magnetic = voigtRangeNm !== null && covers(voigtRangeNm, workingPoint.wavelengthNm);
+  const visible = visibleNm.every((end) => covers(rangeNm, end));
+  return (magnetic ? 4 : 0) + (visible ? 2 : 0) + (preferred ? 1 : 0);
 }

@@ -24,7 +24,7 @@ function versionOf(text: string | null): number | null {
 
 /** `Co, Cobalt`, but not `BK7, BK7 glass`. */
 function titleOf({ formula, name }: Material): string {
-  return name.startsWith(formula) ? name : `${formatFormula(formula)}, ${name}`;
+  return name.startsWith(`${formula} `) ? name : `${formatFormula(formula)}, ${name}`;
 }
 
 export function MaterialPage() {

@@ -23,7 +23,10 @@ const columns: readonly Column<MaterialSummary>[] = [
           <span className="font-normal text-muted"> {material.name}</span>
         </Link>
         <div className="text-small font-normal text-muted">
-          {[material.preferred ? 'preferred source' : null, material.groupId ? 'of this group' : null]
+          {[
+            material.preferred ? null : 'another source is preferred',
+            material.groupId ? 'of this group' : null,
+          ]
             .filter(Boolean)
             .join(', ')}
         </div>
