@@ -15,7 +15,7 @@ const SWEEP_NICENESS = 5;
 /** A request over HTTP that takes longer should be a run. */
 const SOLVE_TIMEOUT_MS = 60_000;
 
-export type PoolState = { ok: boolean; detail: string };
+type PoolState = { ok: boolean; detail: string };
 
 /** The threads of one process: all numbers of Skewlight are computed here. */
 export type ComputePool = {
