@@ -94,8 +94,9 @@ export function moveInto(
   end: 'first' | 'last',
 ): StackItem[] {
   const moved = findItem(items, id);
-  if (moved === null || id === blockId || (isBlock(moved) && findItem(moved.layers, blockId)))
-    return [...items];
+  const target = findItem(items, blockId);
+  const inside = moved !== null && isBlock(moved) && findItem(moved.layers, blockId) !== null;
+  if (moved === null || target === null || !isBlock(target) || id === blockId || inside) return [...items];
   return replaceItem(removeItem(items, id), blockId, (block) => {
     if (!isBlock(block)) return [block];
     return [{ ...block, layers: end === 'first' ? [moved, ...block.layers] : [...block.layers, moved] }];

@@ -1,0 +1,30 @@
+import { describe, expect, it } from 'vitest';
+import { describeResult } from '../../../../shared/resultFormat.ts';
+import type { RunResult } from '../../../../shared/resultFormat.ts';
+import { largestDifferences } from './largestDifferences.ts';
+
+function buildResult(rotation: number[], axis = [0, 30, 60]): RunResult {
+  const swept = { kind: 'angle', from: 0, to: 60, points: axis.length, spacing: 'linear' } as const;
+  return {
+    header: describeResult(swept, ['rotationP'], { solverVersion: '1', inputSha256: 'abc' }),
+    axis: Float64Array.from(axis),
+    columns: { rotationP: Float64Array.from(rotation) },
+  };
+}
+
+describe('largestDifferences', () => {
+  it('finds the largest one and where it is', () => {
+    const [rotation] = largestDifferences(buildResult([1, 2, 3]), buildResult([1, 2.5, 2.75]))!;
+    expect(rotation).toEqual({ reading: 'rotationP', largest: 0.5, x: 30, oneSided: 0 });
+  });
+
+  it('counts points that have a value in one of the two only, and none where both have none', () => {
+    const [rotation] = largestDifferences(buildResult([NaN, NaN, 3]), buildResult([NaN, 2, 3]))!;
+    expect(rotation).toMatchObject({ largest: 0, oneSided: 1 });
+  });
+
+  it('compares nothing when the points differ', () => {
+    expect(largestDifferences(buildResult([1, 2, 3]), buildResult([1, 2, 3], [0, 31, 60]))).toBeNull();
+    expect(largestDifferences(buildResult([1, 2, 3]), buildResult([1, 2], [0, 60]))).toBeNull();
+  });
+});

@@ -1,0 +1,102 @@
+import { describe, expect, it } from 'vitest';
+import { librarySolveRequestSchema } from '../../../../shared/solve.ts';
+import type { SolvePoint } from '../../../../shared/solve.ts';
+import {
+  pointRequest,
+  readPointResponse,
+  readSweepResponse,
+  statesFor,
+  sweepRequest,
+} from './solveStates.ts';
+import type { Sweep } from './solveStates.ts';
+import { buildDocument } from './stackFixtures.ts';
+
+/** A point with the numbers that the readings look at; the rest does not matter here. */
+function buildPoint(rotationDeg: number, reflectance = 0.5): SolvePoint {
+  const zero: [number, number] = [0, 0];
+  const jones = { pp: zero, ps: zero, sp: [3e-4, 4e-4] as [number, number], ss: zero };
+  const angles = { rotationDeg, ellipticityDeg: 2 * rotationDeg };
+  return {
+    wavelengthNm: 632.8,
+    angleDeg: 60,
+    r: jones,
+    t: null,
+    R: { p: reflectance, s: reflectance },
+    T: { p: 0, s: 0 },
+    A: { p: 0, s: 0 },
+    kerr: { p: angles, s: null },
+  };
+}
+
+describe('pointRequest', () => {
+  it('asks for the film as given, with m = 0 and reversed, in one request that the contract accepts', () => {
+    const document = buildDocument();
+    const request = pointRequest(document, document.workingPoint);
+    expect(librarySolveRequestSchema.safeParse(request).success).toBe(true);
+    expect(request.cases.map(({ layers }) => layers[1])).toMatchObject([
+      { m: [0, 0, 1] },
+      { m: [0, 0, 0] },
+      { m: [0, 0, -1] },
+    ]);
+  });
+});
+
+describe('readPointResponse', () => {
+  it('reads the change against m = 0 and the contrast against the reversed film', () => {
+    const response = {
+      results: [
+        { points: [buildPoint(0.05, 0.51)] },
+        { points: [buildPoint(0.01)] },
+        { points: [buildPoint(-0.03, 0.49)] },
+      ],
+    };
+    const readings = readPointResponse(response);
+    expect(readings.rotationP).toBeCloseTo(0.04, 12);
+    expect(readings.ellipticityP).toBeCloseTo(0.08, 12);
+    expect(readings.rotationS).toBeNull();
+    expect(readings.crossSp).toBeCloseTo(5e-4, 15);
+    expect(readings.contrastP).toBeCloseTo(0.02, 12);
+  });
+});
+
+describe('a sweep', () => {
+  const document = buildDocument();
+  const grid = [1, 2, 4];
+  const axis = { kind: 'thickness', layerId: 'co', from: 1, to: 4, points: 3, spacing: 'log' } as const;
+  const sweep: Sweep = { axis, grid, readings: ['rotationP', 'reflectanceP'] };
+
+  it('asks only for the states that its readings are made of', () => {
+    expect(statesFor(['reflectanceP', 'crossSp'])).toEqual(['given']);
+    expect(statesFor(['rotationS'])).toEqual(['given', 'zero']);
+    expect(statesFor(['contrastP'])).toEqual(['given', 'reversed']);
+  });
+
+  it('has one case a thickness and state, and one case a state for an angle', () => {
+    const request = sweepRequest(document, document.workingPoint, sweep);
+    expect(request.cases.map(({ layers }) => layers[1])).toMatchObject([
+      { thicknessNm: 1, m: [0, 0, 1] },
+      { thicknessNm: 2, m: [0, 0, 1] },
+      { thicknessNm: 4, m: [0, 0, 1] },
+      { thicknessNm: 1, m: [0, 0, 0] },
+      { thicknessNm: 2, m: [0, 0, 0] },
+      { thicknessNm: 4, m: [0, 0, 0] },
+    ]);
+    const angle: Sweep = { ...sweep, axis: { ...axis, kind: 'angle' } as never, grid: [0, 45] };
+    expect(sweepRequest(document, document.workingPoint, angle).cases).toMatchObject([
+      { angleDeg: [0, 45], wavelengthNm: 632.8 },
+      { angleDeg: [0, 45] },
+    ]);
+  });
+
+  it('reads the answer into columns, the same whether points come in one result or in many', () => {
+    const points = [0.1, 0.2, 0.4, 0.01, 0.02, 0.04].map((angle) => buildPoint(angle));
+    const many = readSweepResponse({ results: points.map((point) => ({ points: [point] })) }, sweep);
+    const few = readSweepResponse(
+      { results: [{ points: points.slice(0, 3) }, { points: points.slice(3) }] },
+      sweep,
+    );
+    expect(many).toEqual(few);
+    expect(Array.from(many.rotationP!)).toEqual([0.1 - 0.01, 0.2 - 0.02, 0.4 - 0.04]);
+    expect(Array.from(many.reflectanceP!)).toEqual([0.5, 0.5, 0.5]);
+  });
+});
