@@ -45,9 +45,9 @@ export const stackLayerSchema = strictObject({
   const dead = (layer.dead?.topNm ?? 0) + (layer.dead?.bottomNm ?? 0);
   const left = layer.thicknessNm - (layer.oxide?.consumedNm ?? 0);
   const refuse = (path: string[], message: string) => context.addIssue({ code: 'custom', path, message });
-  if (left < 0) {
+  if (layer.oxide && left < 0) {
     refuse(['oxide', 'consumedNm'], `must not exceed the layer's thickness (${layer.thicknessNm} nm)`);
-  } else if (dead > left) {
+  } else if (layer.dead && dead > left) {
     refuse(['dead'], `the dead parts (${dead} nm) must fit into the ${left} nm of the layer`);
   }
 });
