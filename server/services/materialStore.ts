@@ -1,10 +1,10 @@
 import { Op } from 'sequelize';
 import type { MaterialContent } from '../../shared/material.ts';
 import type { LibrarySolveCase } from '../../shared/solve.ts';
-import { forEachMedium } from '../../shared/solveRules.ts';
 import type { ResolvableMaterial } from '../../worker/dispersion/resolveCase.ts';
 import type { Material } from '../models/material.ts';
 import type { Models } from '../models/models.ts';
+import { namedMaterials } from './namedMaterials.ts';
 
 /** Contents kept in memory; a version never changes, so none goes stale. */
 const KEPT_CONTENTS = 500;
@@ -64,12 +64,9 @@ export function createMaterialStore(models: Models): MaterialStore {
 
 function versionsByMaterial(cases: LibrarySolveCase[]): Map<string, Set<number | 'newest'>> {
   const wanted = new Map<string, Set<number | 'newest'>>();
-  for (const one of cases) {
-    forEachMedium(one, ({ material, version }) => {
-      if (material === undefined) return;
-      const versions = wanted.get(material) ?? new Set();
-      wanted.set(material, versions.add(version ?? 'newest'));
-    });
+  for (const { material, version } of cases.flatMap(namedMaterials)) {
+    const versions = wanted.get(material) ?? new Set();
+    wanted.set(material, versions.add(version ?? 'newest'));
   }
   return wanted;
 }

@@ -1,11 +1,12 @@
 import type { Issue } from '../../shared/error.ts';
 import { LIMITS } from '../../shared/limits.ts';
 import type { LibrarySolveRequest, SolveCase, SolveResponse } from '../../shared/solve.ts';
-import { checkSolveRequest, forEachMedium } from '../../shared/solveRules.ts';
+import { checkSolveRequest } from '../../shared/solveRules.ts';
 import { resolveCase, ResolutionError } from '../../worker/dispersion/resolveCase.ts';
 import type { ResolvableMaterial } from '../../worker/dispersion/resolveCase.ts';
 import type { Dependencies } from '../dependencies.ts';
 import { invalid } from '../errors.ts';
+import { namedMaterials } from './namedMaterials.ts';
 
 const limits = {
   maxPoints: LIMITS.httpPoints,
@@ -30,8 +31,8 @@ export async function solve(
   refuse(checkSolveRequest({ cases }, limits));
   const response = await pool.solve({ cases });
   const results = response.results.map((result, position) => {
-    const resolved = cases[position];
-    return resolved && namesMaterial(request, position) ? { ...result, resolved } : result;
+    const [asked, resolved] = [request.cases[position], cases[position]];
+    return asked && resolved && namedMaterials(asked).length > 0 ? { ...result, resolved } : result;
   });
   return { ...response, results };
 }
@@ -58,11 +59,4 @@ function resolveCases(
   });
   refuse(issues);
   return resolved;
-}
-
-function namesMaterial({ cases }: LibrarySolveRequest, position: number): boolean {
-  let named = false;
-  const one = cases[position];
-  if (one) forEachMedium(one, ({ material }) => (named ||= material !== undefined));
-  return named;
 }

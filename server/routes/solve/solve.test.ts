@@ -108,6 +108,17 @@ describe('media of the library', () => {
     await post([{ ...exampleCase, layers: [{ thicknessNm: 1, material: own.id }] }]).expect(200);
   });
 
+  test('are found in the parts of a mixture', async () => {
+    const { id } = await buildMaterial(api.models);
+    const mixture = { model: 'bruggeman', fraction: 0.5, parts: [{ index: [0.18, 3.43] }, { material: id }] };
+    const solve = () => post([{ ...exampleCase, layers: [{ thicknessNm: 2, mixture }] }]);
+    const [result] = read(solveResponseSchema, await solve().expect(200)).results;
+    expect(JSON.stringify(result?.resolved)).toContain('bruggeman');
+    expect(JSON.stringify(result?.resolved)).not.toContain(id);
+    await api.models.Material.destroy({ where: { id } });
+    expect(issuePaths(await solve().expect(422))).toEqual(['cases[0].layers[0].mixture.parts[1].material']);
+  });
+
   test('must keep the rules of a case too', async () => {
     const absorbing = await buildMaterial(api.models);
     const refused = await post([{ ...exampleCase, incident: { material: absorbing.id } }]).expect(422);
