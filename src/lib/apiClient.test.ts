@@ -48,12 +48,14 @@ describe('request', () => {
     expect(seen).toEqual([{ method: 'POST', url: '/api/v1/films', body: '{"name":"Pt/Co/Pt"}', key: 'k1' }]);
   });
 
-  it('takes 204 as no content', async () => {
-    server.answer((_request, response) => {
-      response.writeHead(204);
-      response.end();
-    });
+  it.each([202, 204])('takes %i without a body as no content', async (status) => {
+    server.answer((_request, response) => response.writeHead(status).end());
     expect(await request({ method: 'DELETE', path: '/films/1', schema: noContent })).toBeUndefined();
+  });
+
+  it('does not take an empty answer for a film', async () => {
+    server.answer((_request, response) => response.writeHead(200).end());
+    expect(await failureOf(film())).toMatchObject({ status: 200, code: 'unreadable' });
   });
 
   it('refuses an answer that does not fit the schema and says where', async () => {

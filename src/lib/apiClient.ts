@@ -36,7 +36,7 @@ type JsonRequest<Schema extends z.ZodType> = BinaryRequest & {
   body?: unknown;
   /** Beyond those of JSON, such as `idempotency-key`. */
   headers?: Record<string, string>;
-  /** What the answer must be; `noContent` where the server answers 204. */
+  /** What the answer must be; `noContent` where the server answers without a body (202, 204). */
   schema: Schema;
 };
 
@@ -69,7 +69,7 @@ export async function request<Schema extends z.ZodType>(
     ...(body === undefined ? {} : { body: JSON.stringify(body) }),
     ...(signal ? { signal } : {}),
   });
-  const received: unknown = response.status === 204 ? undefined : await readJson(response);
+  const received = await readJson(response);
   const parsed = schema.safeParse(received);
   if (parsed.success) return parsed.data;
   const first = parsed.error.issues[0];
@@ -126,9 +126,11 @@ async function refusalOf(response: Response): Promise<ApiError> {
   return new ApiError(response.status, code, message, issues, stated ?? requestId);
 }
 
+/** The body as JSON; undefined when there is none. */
 async function readJson(response: Response): Promise<unknown> {
   try {
-    return await response.json();
+    const text = await response.text();
+    return text === '' ? undefined : JSON.parse(text);
   } catch (error) {
     if (isAbort(error)) throw error;
     throw new ApiError(
