@@ -25,10 +25,10 @@ export type Crossing =
     }
   | { kind: 'power'; block: Crossing[]; squarings: number; repeats: number };
 
-/** e-foldings of amplitude a step may take, so that what comes from below keeps its digits: e^5 of 2^53. */
-const FADE_PER_STEP = 2.5;
-/** What lies deeper than this many e-foldings is seen by no digit (e^-80 in r). */
-const OPAQUE = 40;
+/** e-foldings of amplitude a step may take: what comes from below loses no more than e^8 of its 2^53 digits. */
+const FADE_PER_STEP = 4;
+/** What lies deeper than this many e-foldings is zero in every number (e^-700 in r). */
+const OPAQUE = 350;
 /** |phi| up to which plain layers go by series. */
 const THIN = 4;
 /** |phi| up to which a gyrotropic series is summed before doubling, and how often it may be doubled. */

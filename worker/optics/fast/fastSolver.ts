@@ -8,7 +8,7 @@ import { COLUMN } from './batchResult.ts';
 import type { Crossing, FastItem, FastLayer } from './crossingPlan.ts';
 import { planCrossings } from './crossingPlan.ts';
 import { FastMedium } from './fastMedium.ts';
-import { createKernel } from './kernelModule.ts';
+import { kernelOf } from './kernelModule.ts';
 import { Tile, TILE_PAIRS } from './tile.ts';
 
 /** Points to solve: wavelength by position in the case, angle in deg, and a thickness of one layer where it varies. */
@@ -76,7 +76,7 @@ export class FastSolver {
     };
     this.#substrate = numberOf(solveCase.substrate);
     this.#items = this.#compile(solveCase.layers, '', numberOf);
-    this.#tile = new Tile(createKernel(kernelModule), this.#media);
+    this.#tile = new Tile(kernelOf(kernelModule), this.#media);
   }
 
   #compile(
@@ -133,27 +133,34 @@ export class FastSolver {
       throw new RangeError(`${count} points from ${start} do not fit a result of ${out.capacity}`);
     }
     if (count === 0) return;
-    const swept = thickness ? this.#layerAt(thickness.path) : null;
-    const written = swept?.thicknessNm ?? 0;
-    if (swept && thickness) {
-      swept.swept = true;
-      swept.thicknessNm = thickness.nm.reduce((most, nm) => Math.max(most, nm), 0);
-      this.#planned = false;
+    if (!this.#tile.claim()) this.#loaded = -1;
+    if (!thickness) {
+      this.#solveAll(batch, null, out, start);
+      return;
     }
-    if (!this.#planned) {
-      this.#plan = planCrossings(this.#items);
-      this.#planned = true;
+    const swept = this.#layerAt(thickness.path);
+    const written = swept.thicknessNm;
+    swept.swept = true;
+    this.setThickness(
+      thickness.path,
+      thickness.nm.reduce((most, nm) => Math.max(most, nm), 0),
+    );
+    try {
+      this.#solveAll(batch, swept, out, start);
+    } finally {
+      swept.swept = false;
+      this.setThickness(thickness.path, written);
     }
-    for (let from = 0; from < count;) {
+  }
+
+  #solveAll(batch: Batch, swept: FastLayer | null, out: BatchResult, start: number): void {
+    if (!this.#planned) this.#plan = planCrossings(this.#items);
+    this.#planned = true;
+    let from = 0;
+    while (from < batch.anglesDeg.length) {
       from += this.#plan
         ? this.#solveTile(batch, from, swept, this.#plan, out, start)
         : this.#solveGeneral(batch, from, out, start);
-    }
-    if (swept && thickness) {
-      swept.swept = false;
-      swept.thicknessNm = written;
-      this.#planned = false;
-      this.#general?.setThickness(thickness.path, written);
     }
   }
 
@@ -247,7 +254,7 @@ export class FastSolver {
   #createGeneral(): StackSolver {
     const general = new StackSolver(this.#solveCase);
     for (const [path, layer] of this.#byPath) {
-      if (!layer.swept) general.setThickness(path.slice(1).split('/').map(Number), layer.thicknessNm);
+      general.setThickness(path.slice(1).split('/').map(Number), layer.thicknessNm);
     }
     return general;
   }

@@ -120,11 +120,20 @@ export type Kernel = {
   ): void;
 };
 
-/** A kernel with memory of its own. */
-export function createKernel(module: WebAssembly.Module): Kernel {
+const kernels = new WeakMap<WebAssembly.Module, Kernel>();
+
+/**
+ * The kernel of this thread: one instance serves all solvers, since each memory reserves gigabytes of address space.
+ * Whoever uses the memory must expect others to have used it since (`Tile.claim`).
+ */
+export function kernelOf(module: WebAssembly.Module): Kernel {
+  const known = kernels.get(module);
+  if (known) return known;
   const abort = () => {
     throw new Error('the kernel stopped: this is a fault in it');
   };
   // The exports are those of kernel/kernel.as, compiled together with this project.
-  return new WebAssembly.Instance(module, { env: { abort } }).exports as unknown as Kernel;
+  const kernel = new WebAssembly.Instance(module, { env: { abort } }).exports as unknown as Kernel;
+  kernels.set(module, kernel);
+  return kernel;
 }

@@ -26,10 +26,13 @@ const SLOTS = {
 const COLUMNS = 24;
 
 /** Points of a tile: its records then fit the second cache, most of them the first. */
-export const TILE_PAIRS = 64;
+export const TILE_PAIRS = 100;
 /** Media constants per point may take this much memory; a case of very many media gets shorter mixed tiles. */
 const MEDIA_BYTES = 2_000_000;
 const PAGE = 65_536;
+
+/** The tile that used a kernel's memory last. */
+const owners = new WeakMap<Kernel, Tile>();
 
 /** Addresses of one medium's records. */
 type MediumPlace = { medium: FastMedium; index: number; constants: number; slots: number };
@@ -44,9 +47,10 @@ export class Tile {
   readonly #kernel: Kernel;
   readonly #media: MediumPlace[];
   readonly #at: Record<keyof typeof SLOTS | 'substrate' | 'spare' | 'single' | 'out', number>;
-  readonly #numbers: Float64Array;
-  readonly #columns: Float64Array[];
-  readonly #views: (Float64Array[] | undefined)[] = [];
+  readonly #end: number;
+  #numbers = new Float64Array();
+  #columns: Float64Array[] = [];
+  #views: (Float64Array[] | undefined)[] = [];
   #pairs = 0;
   /** 1 where every point has constants of its own, 0 where all share those of one wavelength. */
   #mixed: 0 | 1 = 0;
@@ -79,13 +83,30 @@ export class Tile {
       constants: take(medium.gyrotropic ? SLOTS.gyro : SLOTS.plain, this.mixedPairs),
       slots: medium.gyrotropic ? SLOTS.gyro : SLOTS.plain,
     }));
-    const missing = next - kernel.memory.buffer.byteLength;
-    if (missing > 0) kernel.memory.grow(Math.ceil(missing / PAGE));
-    this.#numbers = new Float64Array(kernel.memory.buffer);
-    this.#columns = Array.from(
-      { length: COLUMNS },
-      (_, column) => new Float64Array(kernel.memory.buffer, this.#column(column), 2 * TILE_PAIRS),
-    );
+    this.#end = next;
+  }
+
+  /**
+   * Takes the kernel's memory for the calls that follow, until another tile claims it.
+   *
+   * @returns whether it is as this tile left it
+   */
+  claim(): boolean {
+    const { memory } = this.#kernel;
+    const untouched = owners.get(this.#kernel) === this;
+    owners.set(this.#kernel, this);
+    const missing = this.#end - memory.buffer.byteLength;
+    if (missing > 0) memory.grow(Math.ceil(missing / PAGE));
+    // Memory that grows, for this tile or another, takes all views of it along.
+    if (this.#numbers.buffer !== memory.buffer) {
+      this.#numbers = new Float64Array(memory.buffer);
+      this.#views = [];
+      this.#columns = Array.from(
+        { length: COLUMNS },
+        (_, column) => new Float64Array(memory.buffer, this.#column(column), 2 * TILE_PAIRS),
+      );
+    }
+    return untouched;
   }
 
   #column(column: number): number {
@@ -94,8 +115,7 @@ export class Tile {
 
   /** The first `count` values of every column of the results. Views of a length are made once. */
   columns(count: number): Float64Array[] {
-    const views = (this.#views[count] ??= this.#columns.map((column) => column.subarray(0, count)));
-    return views;
+    return (this.#views[count] ??= this.#columns.map((column) => column.subarray(0, count)));
   }
 
   /** Angles in degrees from `from`; an odd last point is doubled. */
