@@ -1,10 +1,11 @@
 import type { ReadingName } from '../../shared/run.ts';
 import type { StackDocument, StackItem, StackMedium } from '../../shared/stack.ts';
+import { isGeneral } from './generalStack.ts';
 
 /** Which states of the stack have to be solved at each point for the readings asked. */
 export type StatesNeeded = {
   /**
-   * `always`: the stack turns p or s light without any magnetization. `weak reflection`: it cannot, so the change
+   * `always`: the stack may turn p or s light without any magnetization. `weak reflection`: it cannot, so the change
    * equals the angle itself and m = 0 matters only where it may reflect nothing at all (reading null).
    */
   zero: 'never' | 'weak reflection' | 'always';
@@ -16,7 +17,7 @@ const contrastReadings = new Set<ReadingName>(['contrastP', 'contrastS']);
 
 /** Solving a state that no reading uses would double the time of a sweep. */
 export function statesNeeded(document: StackDocument, readings: ReadingName[]): StatesNeeded {
-  const turns = turnsLightUnmagnetized(document);
+  const turns = isGeneral(document) || turnsLightUnmagnetized(document);
   const asksKerr = readings.some((name) => kerrReadings.has(name));
   return {
     zero: !asksKerr ? 'never' : turns ? 'always' : 'weak reflection',

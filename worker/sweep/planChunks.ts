@@ -1,5 +1,6 @@
 import type { StackItem } from '../../shared/stack.ts';
 import { microsecondsPerPoint } from './cost.ts';
+import { generalCost } from './generalStack.ts';
 import { countStates, statesNeeded } from './magnetizationStates.ts';
 import type { SweepInput } from './sweepInput.ts';
 
@@ -23,7 +24,8 @@ const MOST_SAMPLES = 200_000;
 export function planChunks(input: SweepInput, threads: number): Chunk[] {
   const { axis, document, readings } = input;
   const states = countStates(statesNeeded(document, readings));
-  const byTime = CHUNK_MICROSECONDS / (states * microsecondsPerPoint(document.layers));
+  const microseconds = states * generalCost(document) * microsecondsPerPoint(document.layers);
+  const byTime = CHUNK_MICROSECONDS / microseconds;
   const byThreads = Math.max(FEWEST_POINTS, axis.points / (threads * CHUNKS_PER_THREAD));
   const byMemory = axis.kind === 'wavelength' ? MOST_SAMPLES / (countItems(document.layers) + 2) : Infinity;
   const size = Math.max(1, Math.floor(Math.min(byTime, byThreads, byMemory)));

@@ -10,6 +10,7 @@ import { solveRequest } from '../optics/solveRequest.ts';
 import { axisValues } from './axisValues.ts';
 import { SharedResult } from './sharedResult.ts';
 import { SweepSolver } from './sweepSolver.ts';
+import { withThickness } from './withThickness.ts';
 
 const film: StackLayer = {
   id: 'film',
@@ -64,14 +65,19 @@ function pointByPoint(document: StackDocument, axis: SweepAxis, readings: Readin
   });
 }
 
-function withThickness(document: StackDocument, layerId: string, thicknessNm: number): StackDocument {
-  const changed = JSON.stringify(document, (_key, value: unknown) =>
-    typeof value === 'object' && value !== null && 'id' in value && value.id === layerId
-      ? { ...value, thicknessNm }
-      : value,
-  );
-  return JSON.parse(changed) as StackDocument;
-}
+/** What makes a stack more than sharp layers in coherent light, each alone. */
+const general: [string, StackDocument][] = [
+  [
+    'an average over thickness, angle and bandwidth',
+    { ...stack(), spread: { shape: 'normal', thicknessPercent: 3, divergenceDeg: 0.5, bandwidthNm: 4 } },
+  ],
+  ['a thick slab', { ...stack(), backside: { thicknessNm: 500_000, exit: { index: 1 } } }],
+  ['dead parts', stack([{ ...film, thicknessNm: 3, dead: { topNm: 0.3, bottomNm: 0.2 } }])],
+  [
+    'an oxide',
+    stack([{ ...film, oxide: { medium: { index: [2.2, 0.5] }, consumedNm: 0.4, expansion: 1.8 } }]),
+  ],
+];
 
 const axes: SweepAxis[] = [
   { kind: 'wavelength', from: 400, to: 800, points: 9, spacing: 'linear' },
@@ -100,7 +106,31 @@ describe.each(axes)('a sweep over $kind', (axis) => {
   });
 });
 
+describe.each(general)('a stack with %s', (_what, document) => {
+  it.each(axes.map((axis) => (axis.kind === 'thickness' ? { ...axis, from: 0.5 } : axis)))(
+    'is swept over $kind as single cases give it',
+    (axis) => {
+      const readings: ReadingName[] = ['rotationP', 'ellipticityS', 'contrastP', 'reflectanceS', 'crossSp'];
+      const columns = sweep(document, axis, readings);
+      pointByPoint(document, axis, readings).forEach((row, point) => {
+        expect(columns.slice(1).map((column) => column[point])).toEqual(row.map((value) => value ?? NaN));
+      });
+    },
+  );
+});
+
 describe('a sweep', () => {
+  it('over a graded stack stays within the refinement of its interfaces', () => {
+    const document = stack([{ ...film, gradedNm: 0.6 }]);
+    const columns = sweep(document, axes[1]!, ['reflectanceP', 'crossSp']);
+    const sharp = sweep(stack(), axes[1]!, ['reflectanceP', 'crossSp']);
+    pointByPoint(document, axes[1]!, ['reflectanceP', 'crossSp']).forEach((row, point) => {
+      expect(columns[1]![point]).toBeCloseTo(row[0]!, 5);
+      expect(columns[2]![point]).toBeCloseTo(row[1]!, 5);
+    });
+    expect(Math.abs(columns[1]![0]! - sharp[1]![0]!)).toBeGreaterThan(1e-4);
+  });
+
   it('has no Kerr angle where the unmagnetized stack reflects nothing, though the magnetized one does', () => {
     // A film with the index of its surroundings: at m = 0 it is not there.
     const ghost: StackLayer = { ...film, medium: { index: 1.5, voigt: [0.01, 0] }, m: [0, 0, 1] };

@@ -1,36 +1,20 @@
 import { readingOf } from '../../shared/readings.ts';
 import type { SolveCase } from '../../shared/solve.ts';
-import { findLayerPath, inMagnetizationState, toSolveCase } from '../../shared/stackCase.ts';
-import type { MagnetizationState } from '../../shared/stackCase.ts';
+import { findLayerPath, toSolveCase } from '../../shared/stackCase.ts';
+import type { StackDocument } from '../../shared/stack.ts';
 import { resolveCase } from '../dispersion/resolveCase.ts';
 import type { ResolvableMaterial } from '../dispersion/resolveCase.ts';
-import { StackSolver } from '../optics/stackSolver.ts';
 import { axisValueAt, axisValues } from './axisValues.ts';
+import { GeneralStates, SharpStates } from './chunkStates.ts';
+import type { PointPlace } from './chunkStates.ts';
+import { isGeneral } from './generalStack.ts';
 import { statesNeeded } from './magnetizationStates.ts';
 import type { StatesNeeded } from './magnetizationStates.ts';
 import type { Chunk } from './planChunks.ts';
 import type { SharedResult } from './sharedResult.ts';
-import { SolvedReadings, reflectsWeakly, unturned } from './solvedReadings.ts';
 import { materialKey } from './sweepInput.ts';
 import type { SweepInput } from './sweepInput.ts';
-
-/** A stack in one magnetization state, compiled when it is first solved. */
-class StateSolver {
-  readonly readings = new SolvedReadings();
-  readonly #resolved: SolveCase;
-  readonly #state: MagnetizationState;
-  #solver: StackSolver | null = null;
-
-  constructor(resolved: SolveCase, state: MagnetizationState) {
-    this.#resolved = resolved;
-    this.#state = state;
-  }
-
-  get solver(): StackSolver {
-    this.#solver ??= new StackSolver(inMagnetizationState(this.#resolved, this.#state));
-    return this.#solver;
-  }
-}
+import { withThickness } from './withThickness.ts';
 
 /** One sweep as one thread solves it: any chunk of it, into the shared columns. */
 export class SweepSolver {
@@ -39,7 +23,7 @@ export class SweepSolver {
   readonly #materials: Map<string, ResolvableMaterial>;
   readonly #sweptLayer: number[] | null;
   /** Compiled once where the wavelength does not change. */
-  #atOneWavelength: Record<MagnetizationState, StateSolver> | null = null;
+  #atOneWavelength: SharpStates | null = null;
 
   /** @throws Error when the axis names a layer that the document does not have */
   constructor(input: SweepInput) {
@@ -59,67 +43,67 @@ export class SweepSolver {
    * @throws ResolutionError when a material does not reach to a wavelength of the chunk
    */
   solve(chunk: Chunk, result: SharedResult): void {
-    const { axis, document, readings } = this.#input;
-    const solvers = this.#solversFor(chunk);
+    const { axis, readings } = this.#input;
+    const states = this.#statesFor(chunk);
     for (let offset = 0; offset < chunk.count; offset += 1) {
       if (result.cancelled) return;
       const index = chunk.start + offset;
       const value = axisValueAt(axis, index);
+      const { given, zero, reversed } = states.solve(this.#placeOf(offset, value));
       result.columns[0]![index] = value;
-      this.#solvePoint(
-        solvers,
-        axis.kind === 'wavelength' ? offset : 0,
-        axis.kind === 'angle' ? value : document.workingPoint.angleDeg,
-        axis.kind === 'thickness' ? value : null,
-      );
       for (let column = 0; column < readings.length; column += 1) {
-        const reading = readingOf(readings[column]!, this.#given, this.#zero, this.#reversed);
+        const reading = readingOf(readings[column]!, given, zero, reversed);
         result.columns[1 + column]![index] = reading ?? NaN;
       }
       result.addDone(1);
     }
   }
 
-  #given = new SolvedReadings();
-  #zero: typeof unturned = unturned;
-  #reversed = this.#given;
+  readonly #place: PointPlace = { wavelengthIndex: 0, angleDeg: 0, thicknessNm: null };
 
-  #solvePoint(
-    solvers: Record<MagnetizationState, StateSolver>,
-    wavelengthIndex: number,
-    angleDeg: number,
-    thicknessNm: number | null,
-  ): void {
-    const solve = (state: StateSolver) => {
-      const { solver } = state;
-      if (thicknessNm !== null) solver.setThickness(this.#sweptLayer!, thicknessNm);
-      return solver.solve(wavelengthIndex, angleDeg);
-    };
-    const given = solve(solvers.given);
-    this.#given = solvers.given.readings.take(given);
-    const solvesZero =
-      this.#needed.zero === 'always' || (this.#needed.zero === 'weak reflection' && reflectsWeakly(given));
-    this.#zero = solvesZero ? solvers.zero.readings.take(solve(solvers.zero)) : unturned;
-    this.#reversed = this.#needed.reversed
-      ? solvers.reversed.readings.take(solve(solvers.reversed))
-      : this.#given;
+  #placeOf(offset: number, value: number): PointPlace {
+    const { axis, document } = this.#input;
+    this.#place.wavelengthIndex = axis.kind === 'wavelength' ? offset : 0;
+    this.#place.angleDeg = axis.kind === 'angle' ? value : document.workingPoint.angleDeg;
+    this.#place.thicknessNm = axis.kind === 'thickness' ? value : null;
+    return this.#place;
   }
 
-  #solversFor(chunk: Chunk): Record<MagnetizationState, StateSolver> {
+  #statesFor(chunk: Chunk): SharpStates | GeneralStates {
     const { axis, document } = this.#input;
-    if (axis.kind === 'wavelength') return this.#compile(axisValues(axis, chunk.start, chunk.count));
-    this.#atOneWavelength ??= this.#compile(document.workingPoint.wavelengthNm);
+    const { wavelengthNm, angleDeg } = document.workingPoint;
+    if (isGeneral(document)) return new GeneralStates(() => this.#casesOf(chunk), this.#needed);
+    if (axis.kind === 'wavelength') {
+      const wavelengths = axisValues(axis, chunk.start, chunk.count);
+      return new SharpStates(this.#resolve(document, wavelengths, angleDeg), this.#needed, null);
+    }
+    this.#atOneWavelength ??= new SharpStates(
+      this.#resolve(document, wavelengthNm, angleDeg),
+      this.#needed,
+      this.#sweptLayer,
+    );
     return this.#atOneWavelength;
   }
 
-  #compile(wavelengthNm: number | number[]): Record<MagnetizationState, StateSolver> {
-    const { document } = this.#input;
-    const given = toSolveCase(document, wavelengthNm, document.workingPoint.angleDeg);
-    const resolved = resolveCase(given, this.#materials);
-    return {
-      given: new StateSolver(resolved, 'given'),
-      zero: new StateSolver(resolved, 'zero'),
-      reversed: new StateSolver(resolved, 'reversed'),
-    };
+  *#casesOf(chunk: Chunk): Generator<SolveCase, void> {
+    const { axis, document } = this.#input;
+    const { wavelengthNm, angleDeg } = document.workingPoint;
+    const values = axisValues(axis, chunk.start, chunk.count);
+    switch (axis.kind) {
+      case 'wavelength':
+        yield this.#resolve(document, values, angleDeg);
+        return;
+      case 'angle':
+        yield this.#resolve(document, wavelengthNm, values);
+        return;
+      case 'thickness':
+        for (const value of values) {
+          yield this.#resolve(withThickness(document, axis.layerId, value), wavelengthNm, angleDeg);
+        }
+    }
+  }
+
+  #resolve(document: StackDocument, wavelengthNm: number | number[], angleDeg: number | number[]): SolveCase {
+    return resolveCase(toSolveCase(document, wavelengthNm, angleDeg), this.#materials);
   }
 }
