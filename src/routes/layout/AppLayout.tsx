@@ -1,5 +1,6 @@
 import { useQuery } from '@tanstack/react-query';
 import { Link, Outlet, ScrollRestoration, generatePath, useNavigation } from 'react-router-dom';
+import type { Location } from 'react-router-dom';
 import { AppShell } from '../../components/AppShell.tsx';
 import { ButtonLink } from '../../components/Button.tsx';
 import { ConnectionBanner } from '../../components/ConnectionBanner.tsx';
@@ -10,6 +11,11 @@ import { useCurrentGroup } from '../../features/session/hooks/useCurrentGroup.ts
 import { useReconnect } from '../../features/session/hooks/useReconnect.ts';
 import { paths } from '../../lib/paths.ts';
 import { useFocusOnNavigation } from './useFocusOnNavigation.ts';
+
+/** The first page of a visit has no key of its own; under a common one an anchor would lose to an old position. */
+function scrollKey({ key, pathname, search, hash }: Location): string {
+  return key === 'default' ? pathname + search + hash : key;
+}
 
 /** Header and frame of every page, signed in or not. */
 export function AppLayout() {
@@ -54,7 +60,7 @@ export function AppLayout() {
         <div aria-hidden="true" className="fixed inset-x-0 top-0 z-50 h-0.5 animate-pulse bg-accent" />
       ) : null}
       <Outlet />
-      <ScrollRestoration />
+      <ScrollRestoration getKey={scrollKey} />
     </AppShell>
   );
 }
