@@ -12,7 +12,7 @@ const names: Record<Family, string> = {
 };
 
 const chip =
-  'inline-flex h-7 items-center gap-1.5 rounded-control px-2 text-note whitespace-nowrap text-muted opacity-70 hover:text-ink hover:opacity-100 aria-pressed:font-semibold aria-pressed:text-ink aria-pressed:opacity-100';
+  'inline-flex h-7 items-center gap-1.5 rounded-control px-2 text-note whitespace-nowrap text-muted hover:text-ink aria-pressed:font-semibold aria-pressed:text-ink [&>svg]:opacity-40 aria-pressed:[&>svg]:opacity-100';
 
 type FamilyProps = {
   /** What there is to choose from. */

@@ -23,7 +23,7 @@ export type ReadingPlotData = { series: PlotSeries[]; yAxes: PlotAxis[] };
 
 /**
  * The curves and axes of a set of readings: Kerr angles on the left in the unit of the screen, then reflectance,
- * cross-polarized amplitude (in thousandths) and contrast, each family that is there on an axis of its own.
+ * cross-polarized amplitude and contrast (in thousandths), each family that is there on an axis of its own.
  *
  * @param columns one value a grid point, angles in degrees, NaN for none
  */
@@ -70,7 +70,7 @@ function axisOf(name: ReadingName): AxisKind | null {
 }
 
 function scaled(values: ArrayLike<number>, kind: AxisKind, unit: AngleUnit): ArrayLike<number> {
-  const factor = kind === 'angle' ? fromDegrees(1, unit) : kind === 'cross' ? 1000 : 1;
+  const factor = kind === 'angle' ? fromDegrees(1, unit) : kind === 'reflectance' ? 1 : 1000;
   return factor === 1 ? values : Float64Array.from(values, (value) => value * factor);
 }
 
@@ -84,7 +84,12 @@ function axisFor(kind: AxisKind, unit: AngleUnit, log: boolean): PlotAxis {
     case 'cross':
       return { label: '|r| × 10³', log, include: [0], format: (value) => `${formatNumber(value)} × 10⁻³` };
     case 'contrast':
-      return { label: label('contrast'), log, include: [0], format: signed };
+      return {
+        label: log ? 'abs(contrast) × 10³' : 'contrast × 10³',
+        log,
+        include: [0],
+        format: (value) => `${signed(value)} × 10⁻³`,
+      };
   }
 }
 

@@ -18,8 +18,10 @@ import {
   workingPlace,
 } from '../../features/runs/model/sweepPlace.ts';
 import { FilmDrawing } from '../../features/stacks/components/FilmDrawing.tsx';
+import { isTransverse, workingVectors } from '../../features/stacks/model/magnetization.ts';
 import { mediumName } from '../../features/stacks/model/media.ts';
 import type { DrawnMaterial } from '../../features/stacks/model/media.ts';
+import { usualFamilies } from '../../features/stacks/model/viewState.ts';
 import { useReadingView } from './useReadingView.ts';
 
 type Props = {
@@ -48,6 +50,7 @@ export function StoredRun({ run, dataPath, waiting, besideFilm, children }: Prop
   const layer = sweptLayer(axis, document);
   const layerName = layer && mediumName(layer.medium, materials);
   const result = data.data ?? null;
+  const usual = usualFamilies(isTransverse(workingVectors(document, document.workingPoint.magnetization)));
   const near = result && valuesNear(result, cursor ?? workingPlace(axis, document) ?? axis.from);
   const point = near ? pointAt(axis, document.workingPoint, near.x) : document.workingPoint;
   const [rotation, ellipticity] =
@@ -87,6 +90,7 @@ export function StoredRun({ run, dataPath, waiting, besideFilm, children }: Prop
               run={run}
               result={result}
               view={view}
+              usual={usual}
               onView={setView}
               onCursorX={setCursor}
               layerName={layerName}

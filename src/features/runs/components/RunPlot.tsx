@@ -4,13 +4,15 @@ import type { SharedRun } from '../../../../shared/run.ts';
 import { FamilyControls, ScaleControls } from '../../../components/plot/ReadingControls.tsx';
 import { ReadingPlot } from '../../../components/plot/ReadingPlot.tsx';
 import { familiesOf, lightsOf, readingsOf } from '../../../components/plot/readingView.ts';
-import type { ReadingView } from '../../../components/plot/readingView.ts';
+import type { Family, ReadingView } from '../../../components/plot/readingView.ts';
 import { workingPlace } from '../model/sweepPlace.ts';
 
 type Props = {
   run: Pick<SharedRun, 'name' | 'axis' | 'document'>;
   result: RunResult;
   view: ReadingView;
+  /** What is drawn until somebody chooses. */
+  usual: readonly Family[];
   onView: (change: Partial<ReadingView>) => void;
   onCursorX: (x: number | null) => void;
   layerName: string | null;
@@ -18,12 +20,12 @@ type Props = {
 };
 
 /** The curves of a stored run. */
-export function RunPlot({ run, result, view, onView, onCursorX, layerName, height }: Props) {
+export function RunPlot({ run, result, view, usual, onView, onCursorX, layerName, height }: Props) {
   const stored = useMemo(() => result.header.readings.map(({ name }) => name), [result]);
   const families = familiesOf(stored);
   const lights = lightsOf(stored);
   const light = view.light ?? (lights === 'ps' ? run.document.workingPoint.input : lights);
-  const wanted = (view.shown ?? families.slice(0, 3)).filter((family) => families.includes(family));
+  const wanted = (view.shown ?? usual).filter((family) => families.includes(family));
   const shown = wanted.length > 0 ? wanted : families;
   const key = `${shown.join()} ${light}`;
   // The curves are made anew when the choice changes, not whenever its array does.

@@ -85,6 +85,8 @@ function print(name: ReadingName, value: number, unit: AngleUnit): string {
   if (Number.isNaN(value)) return '–';
   const { family, unit: stored } = readingDefinitions[name];
   if (stored === 'deg') return `${formatAngle(value, unit)} ${unit}`;
-  if (family === 'cross') return `${formatNumber(value * 1000)} × 10⁻³`;
-  return formatNumber(value, { signed: family === 'contrast' });
+  if (family !== 'cross' && family !== 'contrast') return formatNumber(value);
+  // Below this a contrast is the rounding of two equal reflectances.
+  if (Math.abs(value) < 1e-13) return '0';
+  return `${formatNumber(value * 1000, { signed: family === 'contrast' })} × 10⁻³`;
 }

@@ -12,8 +12,7 @@ import { useReadings } from '../hooks/useReadings.ts';
 import { useStackEditor } from '../hooks/useStackEditor.ts';
 import { useView } from '../hooks/useView.ts';
 import { issueTarget } from '../model/issueTarget.ts';
-import { listLayers } from '../model/items.ts';
-import { isTransverse } from '../model/magnetization.ts';
+import { isTransverse, workingVectors } from '../model/magnetization.ts';
 import { filmCautions } from '../model/media.ts';
 import type { Materials } from '../model/media.ts';
 import { kerrAngles } from '../model/solveStates.ts';
@@ -59,7 +58,7 @@ export function StackWorkbench({ stack, library, mayEdit, onCopied, keepButton }
   const axis = useMemo(() => axisOf(view, film, materials), [view, film, materials]);
   const rangeNm = wavelengthRange(point, axis);
   const live = useReadings(film, point);
-  const transverse = useMemo(() => isTransverse(workingVectors(film, point)), [film, point]);
+  const transverse = useMemo(() => isTransverse(workingVectors(film, point.magnetization)), [film, point]);
   const solveIssues = live.error instanceof ApiError ? live.error.issues : noIssues;
   const issues = useMemo(() => [...solveIssues, ...editor.saveIssues], [solveIssues, editor.saveIssues]);
   const canEdit = mayEdit && newer === null;
@@ -147,15 +146,6 @@ const noIssues: readonly Issue[] = [];
 function wavelengthRange(point: WorkingPoint, axis: SweepAxis | null): readonly [number, number] {
   const all = axis?.kind === 'wavelength' ? [point.wavelengthNm, axis.from, axis.to] : [point.wavelengthNm];
   return [Math.min(...all), Math.max(...all)];
-}
-
-/** Every m as the working point has it; a free tensor counts as not transverse. */
-function workingVectors(document: StackDocument, { magnetization }: WorkingPoint) {
-  const layers = listLayers(document.layers).map(({ m, fixed }) => ({ m, fixed: fixed === true }));
-  return [...layers, { m: document.substrateM, fixed: false }].flatMap(({ m, fixed }) => {
-    if (m === undefined) return [];
-    return [magnetization.mode === 'direction' && !fixed ? magnetization.m : m];
-  });
 }
 
 function pointProblems(document: StackDocument, issues: readonly Issue[]) {

@@ -1,5 +1,6 @@
 import type { Vector } from '../../../../shared/complex.ts';
-import type { WorkingMagnetization } from '../../../../shared/stack.ts';
+import type { StackDocument, WorkingMagnetization } from '../../../../shared/stack.ts';
+import { listLayers } from './items.ts';
 
 /** The geometries by name; + polar points into the film. */
 export const geometries: readonly { name: string; m: Vector }[] = [
@@ -56,10 +57,12 @@ export function drawnAngleDeg(m: Vector): number {
  * other part, the whole of it turns into the plane of the drawing. m = 0 becomes a full arrow.
  */
 export function turnedTo(m: Vector, angleDeg: number): Vector {
+  // The angle comes from an arctangent: without its last digits, steps of 15 deg end on the axes.
+  const angle = Number(angleDeg.toFixed(6));
   const inPlane = Math.hypot(m[0], m[2]);
   const length = inPlane < NOTHING ? lengthOf(m) || 1 : inPlane;
   const y = inPlane < NOTHING ? 0 : m[1];
-  return [exact(length * cosDeg(angleDeg)), y, exact(length * cosDeg(angleDeg - 90))];
+  return [exact(length * cosDeg(angle)), y, exact(length * cosDeg(angle - 90))];
 }
 
 /** The cosine with its zeros and ones exact, so that an arrow turned to an axis lies on it. */
@@ -70,7 +73,7 @@ function cosDeg(angleDeg: number): number {
 }
 
 function exact(value: number): number {
-  return Number(value.toPrecision(12)) + 0;
+  return Number(value.toFixed(12)) + 0;
 }
 
 /** m scaled to this length; m = 0 has no direction and becomes polar. */
@@ -92,6 +95,15 @@ export function withComponent(m: Vector, index: 0 | 1 | 2, value: number): Vecto
   const room = Math.sqrt(Math.max(0, 1 - value * value));
   for (const other of others) next[other] = rest === 0 ? 0 : exact((m[other] / rest) * room);
   return next;
+}
+
+/** Every m of the film as the working point has it. */
+export function workingVectors(document: StackDocument, magnetization: WorkingMagnetization): Vector[] {
+  const media = [...listLayers(document.layers), { m: document.substrateM, fixed: false }];
+  return media.flatMap(({ m, fixed }) => {
+    if (m === undefined) return [];
+    return [magnetization.mode === 'direction' && fixed !== true ? magnetization.m : m];
+  });
 }
 
 /** Whether the readings are for a magnetization along y only, in which case the contrast is what there is to read. */

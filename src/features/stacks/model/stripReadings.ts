@@ -44,10 +44,23 @@ export function stripReadings(
         family === 'cross' ? `${names.cross.label} ${readingDefinitions[name].symbol}` : names[family].label,
       anchor: readingDefinitions[name].anchor,
       value: value === null ? null : format(family, value, unit),
-      unit: family === 'rotation' || family === 'ellipticity' ? unit : family === 'cross' ? '× 10⁻³' : '',
+      unit: unitOf(family, unit),
       other: `${other} light ${otherValue === null ? '–' : format(family, otherValue, unit)}`,
     };
   });
+}
+
+function unitOf(family: StripReading['family'], angleUnit: AngleUnit): string {
+  switch (family) {
+    case 'rotation':
+    case 'ellipticity':
+      return angleUnit;
+    case 'reflectance':
+      return '';
+    case 'cross':
+    case 'contrast':
+      return '× 10⁻³';
+  }
 }
 
 function format(family: StripReading['family'], value: number, unit: AngleUnit): string {
@@ -61,6 +74,6 @@ function format(family: StripReading['family'], value: number, unit: AngleUnit):
       return formatNumber(value * 1000);
     case 'contrast':
       // A difference of two reflectances: below this it is the rounding of doubles, not a signal.
-      return Math.abs(value) < 1e-13 ? '0' : formatNumber(value, { signed: true });
+      return Math.abs(value) < 1e-13 ? '0' : formatNumber(value * 1000, { signed: true });
   }
 }
