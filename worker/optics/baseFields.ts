@@ -48,7 +48,7 @@ export function baseFields(stack: CompiledStack, wavelengthIndex: number, angleD
 }
 
 function emptyLayer(medium: Medium, thicknessNm: number, geometry: Geometry, k0: number): BaseLayer {
-  const root = forwardRoot(medium.yyLessXi2(geometry));
+  const root = forwardRoot(medium.diagonalLessXi2(1, geometry));
   const q: Complex = root[0] === 0 && root[1] === 0 ? [1e-150, 0] : root;
   const permittivity = medium.permittivity ?? [medium.tensor[0]!, medium.tensor[1]!];
   const none = (): Amplitudes => ({ a: [0, 0], b: [0, 0] });

@@ -2,17 +2,9 @@ import type { Complex } from '../../shared/complex.ts';
 import { toComplex } from '../../shared/complex.ts';
 import type { MediumInput } from '../../shared/medium.ts';
 import type { SolveCase, StackItemInput } from '../../shared/solve.ts';
-import type { GradedLayer } from './gradedInterfaces.ts';
 import { gradeSequence } from './gradedInterfaces.ts';
+import type { GradedLayer, WrittenLayer } from './layers.ts';
 import { Medium, sampleAt, samplesOf } from './medium.ts';
-
-/** A layer as written in the case; a block refers to it as often as it repeats. */
-export type WrittenLayer = {
-  /** Positions into nested `layers` arrays. */
-  path: number[];
-  medium: Medium;
-  thicknessNm: number;
-};
 
 export type CompileOptions = {
   /** Every layer of the expanded stack has a medium of its own, for `isolateGyration`. */

@@ -88,7 +88,7 @@ function sliceFields(
   }
   const slices = cut(stack, modes, k0, slicesPerLayer);
   const state = new FieldState();
-  state.start(modes.get(stack.substrate)!);
+  state.start(modes.get(stack.substrate)!, geometry);
   const faces: { m: Matrix2; n: Matrix2; toNext: Matrix2 }[] = [];
   const keep = (toNext: Matrix2) => faces.push({ m: state.m.slice(), n: state.n.slice(), toNext });
   keep(createMatrix2());

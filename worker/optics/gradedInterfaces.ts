@@ -1,9 +1,6 @@
 import type { MediumInput, MixtureInput } from '../../shared/medium.ts';
-import type { WrittenLayer } from './compiledStack.ts';
+import type { GradedLayer, WrittenLayer } from './layers.ts';
 import { Medium } from './medium.ts';
-
-/** A layer of the expanded sequence, and how wide its upper interface is graded. */
-export type GradedLayer = WrittenLayer & { gradedNm: number };
 
 /**
  * Graded interfaces as thin layers: between two media the composition runs evenly over the stated width, half of it

@@ -82,7 +82,7 @@ type Wave = { index: Complex; q: Complex };
 
 function waveIn(medium: Medium, geometry: Geometry): Wave {
   const index = medium.index ?? forwardRoot([medium.tensor[0]!, medium.tensor[1]!]);
-  return { index, q: forwardRoot(medium.yyLessXi2(geometry)) };
+  return { index, q: forwardRoot(medium.diagonalLessXi2(1, geometry)) };
 }
 
 /** Fresnel amplitudes of a bare face (physics.md section 1 gives the unit vectors): r_pp = -r_ss at normal incidence. */

@@ -61,6 +61,13 @@ export function add(out: Matrix2, x: Matrix2, y: Matrix2): void {
   for (let i = 0; i < 8; i++) out[i] = x[i]! + y[i]!;
 }
 
+export function determinant(x: Matrix2): [re: number, im: number] {
+  return [
+    x[0]! * x[6]! - x[1]! * x[7]! - x[2]! * x[4]! + x[3]! * x[5]!,
+    x[0]! * x[7]! + x[1]! * x[6]! - x[2]! * x[5]! - x[3]! * x[4]!,
+  ];
+}
+
 /** Smallest determinant that invert divides by; an exact zero is a guided mode met by accident. */
 const TINY = 1e-280;
 

@@ -185,16 +185,18 @@ export class Medium {
   }
 
   /**
-   * eps_yy - xi^2. Far from normal incidence it is written with xi^2 = N0^2 - q0^2 as (N - N0)(N + N0) + q0^2, so
-   * that nothing cancels near grazing incidence in a layer that has the index of the incident medium.
+   * eps_yy - xi^2 (position 1) or eps_zz - xi^2 (position 2). Far from normal incidence it is written with
+   * xi^2 = N0^2 - q0^2 as (N - N0)(N + N0) + q0^2, so that nothing cancels near grazing incidence in a layer that has
+   * the index of the incident medium.
    */
-  yyLessXi2({ n0, xi, q0 }: Geometry): Complex {
-    if (xi < q0) return [this.tensor[8]! - xi * xi, this.tensor[9]!];
+  diagonalLessXi2(position: 1 | 2, { n0, xi, q0 }: Geometry): Complex {
+    const i = 8 * position;
+    if (xi < q0) return [this.tensor[i]! - xi * xi, this.tensor[i + 1]!];
     if (this.index && (this.scalarDiagonal || this.isotropic)) {
       const incident: Complex = [n0, 0];
       return plus(times(minus(this.index, incident), plus(this.index, incident)), [q0 * q0, 0]);
     }
-    return [this.tensor[8]! - n0 * n0 + q0 * q0, this.tensor[9]!];
+    return [this.tensor[i]! - n0 * n0 + q0 * q0, this.tensor[i + 1]!];
   }
 }
 

@@ -2,13 +2,14 @@ import type { Complex } from '../../shared/complex.ts';
 import { forwardRoot, minus, modulus, over, plus, scaled, squareRoot, times } from './complexNumber.ts';
 import type { Geometry } from './geometry.ts';
 import type { Matrix2 } from './matrix2.ts';
-import { createMatrix2, invert, subtract } from './matrix2.ts';
+import { createMatrix2, determinant, invert, setDiagonal, subtract } from './matrix2.ts';
 import { Medium } from './medium.ts';
 import type { Quartic, RootPair } from './quartic.ts';
 import { quarticRoots, refinePair } from './quartic.ts';
-import type { WaveEquation } from './waveEquation.ts';
+import type { FieldSystem, WaveEquation } from './waveEquation.ts';
+import type { Tensor } from './tensor.ts';
 import { gainOf } from './tensor.ts';
-import { secularQuartic, waveEquation } from './waveEquation.ts';
+import { exchanged, fieldSystem, polarizationGap, secularQuartic, waveEquation } from './waveEquation.ts';
 
 /**
  * The pair of waves that travel one way through a medium, as a whole: never as two eigenvectors, which coincide in
@@ -41,6 +42,9 @@ export class Modes {
   /** Z of the forward beam less Z of the backward beam, and its inverse. */
   readonly zStep: Matrix2 = createMatrix2();
   readonly zStepInverse: Matrix2 = createMatrix2();
+  /** The two beams are too much alike, or have no Z, to take the field apart into them. */
+  inseparable = false;
+  system: FieldSystem | null = null;
 
   constructor(medium: Medium) {
     this.medium = medium;
@@ -50,20 +54,59 @@ export class Modes {
     const { medium } = this;
     this.isotropic = medium.isotropic;
     if (medium.isotropic) {
-      this.q = forwardRoot(medium.yyLessXi2(geometry));
+      this.q = forwardRoot(medium.diagonalLessXi2(1, geometry));
       // At a critical angle the wave neither enters nor leaves; a trace of q keeps the formulas finite.
       if (this.q[0] === 0 && this.q[1] === 0) this.q = [1e-150, 0];
       this.zp = over(this.q, [medium.tensor[0]!, medium.tensor[1]!]);
       return;
     }
-    const equation = waveEquation(medium, geometry);
+    const system = fieldSystem(medium, geometry);
+    this.system = system;
+    const size = largest(medium.tensor);
+    this.inseparable = modulus(system.b11) < INSEPARABLE * size;
+    if (this.inseparable) return;
+    const equation = waveEquation(system, polarizationGap(medium, system, geometry));
     const quartic = secularQuartic(equation);
     const pair = refinePair(quartic, forwardPair(medium, quartic, geometry));
     fillBeam(this.forward, equation, pair);
     fillBeam(this.backward, equation, otherPair(quartic, pair));
     subtract(this.zStep, this.forward.z, this.backward.z);
+    // 4 q^2 in an isotropic medium.
+    const apart = modulus(times(determinant(this.zStep), system.b11));
+    this.inseparable = !(apart > INSEPARABLE * size);
     invert(this.zStepInverse, this.zStep);
   }
+
+  /**
+   * f = m x, g = n x of the waves that leave through a half space of this medium.
+   *
+   * @param geometry that of the last `update`
+   */
+  halfSpace(m: Matrix2, n: Matrix2, geometry: Geometry): void {
+    setDiagonal(m, 1, 0, 1, 0);
+    if (this.isotropic) {
+      setDiagonal(n, this.zp[0], this.zp[1], this.q[0], this.q[1]);
+    } else if (modulus(this.system!.b11) >= INSEPARABLE * largest(this.medium.tensor)) {
+      n.set(this.forward.z);
+    } else {
+      // With Hy and Ex exchanged: (Hy, -Hx) = Z (Ex, Ey), x = (Ex, Ey).
+      const equation = waveEquation(exchanged(this.system!));
+      const quartic = secularQuartic(equation);
+      const beam = createBeam();
+      fillBeam(beam, equation, refinePair(quartic, forwardPair(this.medium, quartic, geometry, exchanged)));
+      m.set(beam.z.subarray(0, 4));
+      n.set([1, 0, 0, 0, ...beam.z.subarray(4)]);
+    }
+  }
+}
+
+/** Relative size below which a determinant is taken for zero; the digits lost at this size are the last three. */
+const INSEPARABLE = 1e-5;
+
+function largest(tensor: Tensor): number {
+  let size = 0;
+  for (const value of tensor) size = Math.max(size, Math.abs(value));
+  return size;
 }
 
 function createBeam(): Beam {
@@ -81,7 +124,12 @@ const SORTING_LOSS = 1e-6;
  * Q: u^2 then solves a quadratic. Any other tensor has all four roots found, and those taken that lie nearest to the
  * two forward ones of the same medium with a trace of loss, where forward waves are the ones that decay.
  */
-function forwardPair(medium: Medium, quartic: Quartic, geometry: Geometry): RootPair {
+function forwardPair(
+  medium: Medium,
+  quartic: Quartic,
+  geometry: Geometry,
+  arranged: (system: FieldSystem) => FieldSystem = (system) => system,
+): RootPair {
   const { c2, c1, c0 } = quartic;
   const isWeak =
     modulus(c1) < 0.02 * modulus(c2) ** 1.5 &&
@@ -92,7 +140,7 @@ function forwardPair(medium: Medium, quartic: Quartic, geometry: Geometry): Root
     return pairOf(forwardRoot(plus(centre, spread)), forwardRoot(minus(centre, spread)));
   }
   const roots = quarticRoots(quartic);
-  const lossy = quarticRoots(secularQuartic(waveEquation(withLoss(medium), geometry)));
+  const lossy = quarticRoots(secularQuartic(waveEquation(arranged(fieldSystem(withLoss(medium), geometry)))));
   const [first, second] = lossy.sort((a, b) => b[1] - a[1]);
   const u1 = takeNearest(roots, first!);
   const u2 = takeNearest(roots, second!);
@@ -115,7 +163,7 @@ function takeNearest(roots: Complex[], target: Complex): Complex {
 /** The loaded medium as a bare tensor, made passive and then lossy by SORTING_LOSS of its size. */
 function withLoss(medium: Medium): Medium {
   const lossy = Medium.fromTensor(medium.tensor);
-  const loss = SORTING_LOSS * Math.max(...medium.tensor.map(Math.abs)) + gainOf(medium.tensor);
+  const loss = SORTING_LOSS * largest(medium.tensor) + gainOf(medium.tensor);
   for (const i of [1, 9, 17]) lossy.tensor[i] = lossy.tensor[i]! + loss;
   return lossy;
 }
@@ -131,20 +179,20 @@ function otherPair({ c3, c2 }: Quartic, { sum, product }: RootPair): RootPair {
  * P = (a - U)^-1 (b - V) without eigenvectors.
  */
 function fillBeam(beam: Beam, equation: WaveEquation, { sum, product }: RootPair): void {
-  const { u11, u12, u21, v12, v21, v22, vGap, a11, a12, kappa } = equation;
+  const { u11, u12, u21, v12, v21, v22, vGap, a11, a12, b11 } = equation;
   const aLessU11 = minus(sum, u11);
-  const determinant = minus(times(sum, aLessU11), times(u12, u21));
+  const scale = minus(times(sum, aLessU11), times(u12, u21));
   const bLessV22 = minus(product, v22);
   const bLessV11 = plus(bLessV22, vGap);
-  beam.p12 = over(minus(times(u12, bLessV22), times(sum, v12)), determinant);
-  beam.p21 = over(minus(times(u21, bLessV11), times(aLessU11, v21)), determinant);
+  beam.p12 = over(minus(times(u12, bLessV22), times(sum, v12)), scale);
+  beam.p21 = over(minus(times(u21, bLessV11), times(aLessU11, v21)), scale);
   const trace = plus(times(sum, vGap), times(u11, bLessV22));
   const coupling = minus(times(u21, v12), times(u12, v21));
-  beam.h = scaled(over(plus(trace, coupling), determinant), 0.5);
+  beam.h = scaled(over(plus(trace, coupling), scale), 0.5);
   beam.half = scaled(sum, 0.5);
   beam.splitting = plus(times(beam.h, beam.h), times(beam.p12, beam.p21));
-  const z11 = over(minus(plus(beam.half, beam.h), a11), kappa);
-  const z12 = over(minus(beam.p12, a12), kappa);
+  const z11 = over(minus(plus(beam.half, beam.h), a11), b11);
+  const z12 = over(minus(beam.p12, a12), b11);
   const z22 = minus(beam.half, beam.h);
   beam.z.set([...z11, ...z12, ...beam.p21, ...z22]);
 }

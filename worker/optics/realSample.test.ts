@@ -111,10 +111,7 @@ describe('graded interfaces', () => {
     { thicknessNm: 3, index: Au },
     { thicknessNm: 10, index: Fe, voigt: feVoigt, m: up },
   ];
-  const graded = (gradedNm: number): StackItemInput[] => [
-    sharp[0]!,
-    { ...sharp[1]!, gradedNm },
-  ];
+  const graded = (gradedNm: number): StackItemInput[] => [sharp[0]!, { ...sharp[1]!, gradedNm }];
 
   it('states its slices and is refined until doubling them changes less than 1e-6', () => {
     const { graded: refinement } = solveRequest({ cases: [caseOf(graded(2))] }).results[0]!;

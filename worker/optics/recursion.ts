@@ -9,6 +9,8 @@ import {
   setDiagonal,
   subtract,
 } from './matrix2.ts';
+import type { Geometry } from './geometry.ts';
+import { crossBySeries } from './crossBySeries.ts';
 import type { Modes } from './modes.ts';
 import { propagate } from './modes.ts';
 
@@ -26,14 +28,9 @@ export class FieldState {
   readonly chain: Matrix2 = createMatrix2();
 
   /** At the upper face of the substrate. */
-  start(substrate: Modes): void {
-    setDiagonal(this.m, 1, 0, 1, 0);
+  start(substrate: Modes, geometry: Geometry): void {
+    substrate.halfSpace(this.m, this.n, geometry);
     setDiagonal(this.chain, 1, 0, 1, 0);
-    if (substrate.isotropic) {
-      setDiagonal(this.n, substrate.zp[0], substrate.zp[1], substrate.q[0], substrate.q[1]);
-    } else {
-      this.n.set(substrate.forward.z);
-    }
   }
 }
 
@@ -50,6 +47,7 @@ const step = createMatrix2();
 export class LayerStep {
   readonly modes: Modes;
   readonly layer: { readonly thicknessNm: number };
+  #phase = 0;
   /** Isotropic: exp(i k0 d q), its square e, and 1 - e without cancellation. */
   #phiRe = 1;
   #phiIm = 0;
@@ -71,6 +69,8 @@ export class LayerStep {
   update(k0: number): void {
     const phase = k0 * this.layer.thicknessNm;
     const { modes } = this;
+    this.#phase = phase;
+    if (modes.inseparable && !modes.isotropic) return;
     if (!modes.isotropic) {
       propagate(this.#down, modes.forward, phase, 1);
       propagate(this.#up, modes.backward, phase, -1);
@@ -90,7 +90,9 @@ export class LayerStep {
 
   /** Moves the state from the lower to the upper face of the layer. */
   cross(state: FieldState): void {
+    if (this.layer.thicknessNm === 0) return;
     if (this.modes.isotropic) this.#crossIsotropic(state);
+    else if (this.modes.inseparable) crossBySeries(state, this.modes.system!, this.#phase);
     else this.#crossAnisotropic(state);
   }
 

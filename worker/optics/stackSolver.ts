@@ -1,8 +1,9 @@
 import type { Complex } from '../../shared/complex.ts';
 import type { SolveCase } from '../../shared/solve.ts';
-import type { CompileOptions, WrittenLayer } from './compiledStack.ts';
+import type { CompileOptions } from './compiledStack.ts';
 import { CompiledStack } from './compiledStack.ts';
 import { forwardRoot, minus, over, plus, scaled, times } from './complexNumber.ts';
+import type { WrittenLayer } from './layers.ts';
 import type { Geometry } from './geometry.ts';
 import { incidenceGeometry } from './geometry.ts';
 import type { Matrix2 } from './matrix2.ts';
@@ -97,7 +98,7 @@ export class StackSolver {
     this.solveAmplitudes(wavelengthIndex, geometry, index, [geometry.q0, 0]);
     const R = reflectance(point.r);
     point.R = R;
-    point.T = this.#transmittance(geometry.q0);
+    point.T = this.#transmittance(geometry);
     point.A = { p: 1 - R.p - point.T.p, s: 1 - R.s - point.T.s };
     point.kerr = { p: kerrAngles(point.r, 'p'), s: kerrAngles(point.r, 's') };
     return point;
@@ -116,7 +117,7 @@ export class StackSolver {
     const k0 = (2 * Math.PI) / this.wavelengthsNm[wavelengthIndex]!;
     for (const modes of this.#modes) modes.update(geometry);
     for (const step of this.#steps.values()) step.update(k0);
-    this.#state.start(this.#substrate);
+    this.#state.start(this.#substrate, geometry);
     for (const step of this.#upward) step.cross(this.#state);
     this.#leave(index, q);
   }
@@ -152,22 +153,19 @@ export class StackSolver {
     point.t = this.#transmittedAmplitudes(this.#exit);
   }
 
-  /** Energy through the last interface: Re(Ex Hy* - Ey Hx*) / (N0 cos theta) with f = x, g = Z x there. */
-  #transmittance(q0: number): Polarized {
+  /** Energy through the last interface: Re(Ex Hy* - Ey Hx*) / (N0 cos theta) = Re(f^H g) / q0 there. */
+  #transmittance(geometry: Geometry): Polarized {
+    const f = this.#inverse;
     const g = this.#product;
-    const x = this.#exit;
-    const substrate = this.#substrate;
-    if (substrate.isotropic) {
-      scaleRows(g, x, substrate.zp[0], substrate.zp[1], substrate.q[0], substrate.q[1]);
-    } else {
-      multiply(g, substrate.forward.z, x);
-    }
+    this.#substrate.halfSpace(f, g, geometry);
+    multiply(f, f, this.#exit);
+    multiply(g, g, this.#exit);
     const flux = (column: number) =>
-      g[column]! * x[column]! +
-      g[column + 1]! * x[column + 1]! +
-      g[column + 4]! * x[column + 4]! +
-      g[column + 5]! * x[column + 5]!;
-    return { p: flux(0) / q0, s: flux(2) / q0 };
+      g[column]! * f[column]! +
+      g[column + 1]! * f[column + 1]! +
+      g[column + 4]! * f[column + 4]! +
+      g[column + 5]! * f[column + 5]!;
+    return { p: flux(0) / geometry.q0, s: flux(2) / geometry.q0 };
   }
 
   /** t by the unit vectors of an isotropic exit medium: Hy = N t_p, Ey = t_s. */
