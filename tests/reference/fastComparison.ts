@@ -18,7 +18,7 @@ export type Difference = {
 };
 
 /** All points of a case, wavelength outermost. */
-export function batchOf({ wavelengthNm, angleDeg }: SolveCase): Batch {
+function batchOf({ wavelengthNm, angleDeg }: SolveCase): Batch {
   const angles = [angleDeg].flat();
   const wavelengths = [wavelengthNm].flat();
   return {
