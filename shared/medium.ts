@@ -135,7 +135,7 @@ export const mediumFields = {
 
 export type MixtureInput = z.infer<typeof mixtureSchema>;
 
-export const libraryFields = {
+const libraryFields = {
   material: z.string().min(1).max(80).optional().meta({ description: 'Id of a material in the library.' }),
   version: z
     .int()

@@ -1,8 +1,6 @@
 /** hc/e: photon energy in eV times vacuum wavelength in nm (CODATA 2018, exact constants, rounded). */
 export const EV_NM = 1239.841984;
 
-export const DEGREES_PER_RADIAN = 180 / Math.PI;
-
 /** Photon energy in eV of a vacuum wavelength in nm; the same formula turns eV back into nm. */
 export function photonEnergyEv(wavelengthNm: number): number {
   return EV_NM / wavelengthNm;
