@@ -1,15 +1,16 @@
 import { Op } from 'sequelize';
-import type { StackItemInput } from '../../shared/solve.ts';
 import type { MediumInput } from '../../shared/medium.ts';
-import type { StackDocument, StackItem, StackMedium } from '../../shared/stack.ts';
+import type { StackDocument } from '../../shared/stack.ts';
 import { ResolutionError, resolveCase } from '../../worker/dispersion/resolveCase.ts';
+import type { ResolvableMaterial } from '../../worker/dispersion/resolveCase.ts';
 import { materialKey } from '../../worker/sweep/sweepInput.ts';
 import { conflict } from '../errors.ts';
 import type { AppDependencies } from '../dependencies.ts';
 import type { Run } from '../models/run.ts';
 import { recordActivity } from './recordActivity.ts';
-import { runCase } from './runCases.ts';
 import { loadRunMaterials } from './runMaterials.ts';
+import { mapNamedMaterials } from './runMedia.ts';
+import type { NamesMaterial } from './runMedia.ts';
 import { createStack } from './stacks.ts';
 import type { StackWithVersion } from './stacks.ts';
 
@@ -68,32 +69,39 @@ async function withConstants(
   run: Run,
   foreign: Set<string>,
 ): Promise<StackDocument> {
-  const { document } = run.input;
   const materials = await loadRunMaterials(store, run);
-  const names = new Map(materials.map(({ id, name }) => [id, name]));
-  const constantsOf = (medium: StackMedium, { index, voigt }: MediumInput): StackMedium =>
-    medium.material === undefined || !foreign.has(medium.material)
-      ? medium
-      : { index, ...(voigt !== undefined && { voigt }), label: names.get(medium.material) };
-  const replaceItems = (items: StackItem[], resolved: StackItemInput[]): StackItem[] =>
-    items.map((item, position) => {
-      const other = resolved[position]!;
-      if ('layers' in item) {
-        return { ...item, layers: replaceItems(item.layers, 'layers' in other ? other.layers : []) };
-      }
-      return 'layers' in other ? item : { ...item, medium: constantsOf(item.medium, other) };
-    });
+  const known = new Map(materials.map((material) => [materialKey(material), material]));
+  const { document } = run.input;
+  return mapNamedMaterials(document, (named) => {
+    if (!foreign.has(named.material)) return named;
+    const name = materials.find(({ id }) => id === named.material)?.name;
+    const constants = constantsOf(named, document.workingPoint.wavelengthNm, known);
+    // A part of a mixture carries an m and no label; a medium of the stack is the other way round.
+    return { ...constants, ...('m' in named ? { m: named.m } : { label: name }) };
+  });
+}
+
+/** @throws Refusal 409 when the material is not known at that wavelength */
+function constantsOf(
+  { material, version, assumeConstant }: NamesMaterial,
+  wavelengthNm: number,
+  known: ReadonlyMap<string, ResolvableMaterial>,
+): Pick<MediumInput, 'index' | 'voigt'> {
+  const vacuum = { index: 1 };
   try {
-    const resolved = resolveCase(
-      runCase(document, document.workingPoint.wavelengthNm),
-      new Map(materials.map((material) => [materialKey(material), material])),
+    const { substrate } = resolveCase(
+      {
+        wavelengthNm,
+        angleDeg: 0,
+        incident: vacuum,
+        layers: [],
+        // With m the Voigt constant is put in too.
+        substrate: { material, version, assumeConstant, m: [0, 0, 1] },
+      },
+      known,
     );
-    return {
-      ...document,
-      incident: constantsOf(document.incident, resolved.incident),
-      layers: replaceItems(document.layers, resolved.layers),
-      substrate: constantsOf(document.substrate, resolved.substrate),
-    };
+    const { index, voigt } = substrate;
+    return { index, ...(voigt !== undefined && { voigt }) };
   } catch (error) {
     if (!(error instanceof ResolutionError)) throw error;
     throw conflict(`This run uses materials of its own group, which cannot be taken along: ${error.message}`);

@@ -1,5 +1,11 @@
 import type { ReadingName, SweepAxis, UsedMaterial } from '../../shared/run.ts';
-import type { StackDocument, StackItem, StackMedium, WorkingMagnetization } from '../../shared/stack.ts';
+import type {
+  StackDocument,
+  StackItem,
+  StackLayer,
+  StackMedium,
+  WorkingMagnetization,
+} from '../../shared/stack.ts';
 import { describeAxis } from './runNames.ts';
 
 /** Sentences that say what the numbers of a run rest on, so that they can be read alone years later. */
@@ -14,8 +20,7 @@ export function runAssumptions(
     magnetization(document.workingPoint.magnetization),
     'Convention: time factor exp(-iωt), so N = n + ik with k ≥ 0; z points into the film, x lies in the plane of incidence; a rotation is positive counter-clockwise for an observer who looks into the reflected beam.',
     ...meanings(readings),
-    'Light is a plane, monochromatic wave from a lossless medium; the film planes are infinite, flat and sharp, without roughness or intermixing.',
-    'All layers are homogeneous and interfere coherently; the substrate is infinitely thick. The relative permeability is 1.',
+    ...geometry(document),
     ...constants(document, axis, materials),
     'Constants of thin films differ from tabulated ones: use the numbers for planning.',
   ];
@@ -61,6 +66,43 @@ function meanings(readings: ReadingName[]): string[] {
   ];
 }
 
+/** What is ideal about light and film, and what is not. */
+function geometry(document: StackDocument): string[] {
+  const { spread, backside } = document;
+  const averaged = [
+    [spread?.thicknessPercent ?? 0, '% of every thickness'],
+    [spread?.divergenceDeg ?? 0, 'deg of the angle of incidence'],
+    [spread?.bandwidthNm ?? 0, 'nm of the wavelength'],
+  ] as const;
+  const deviations = averaged.filter(([deviation]) => deviation > 0).map(([value, of]) => `${value} ${of}`);
+  const beam =
+    deviations.length === 0
+      ? 'Light is a plane, monochromatic wave from a lossless medium.'
+      : `Intensities are averages over a ${spread!.shape} distribution with standard deviations of ${deviations.join(', ')}; light comes from a lossless medium.`;
+  const graded =
+    (document.substrateGradedNm ?? 0) > 0 || anyLayer(document.layers, (layer) => (layer.gradedNm ?? 0) > 0);
+  const substrate = backside
+    ? `the substrate is a slab of ${backside.thicknessNm} nm whose inner reflections add in intensity`
+    : 'the substrate is infinitely thick';
+  return [
+    beam,
+    `The film planes are infinite and flat; interfaces are sharp${graded ? ' except those given a width, where the composition runs evenly from one medium to the other (Bruggeman)' : ', without roughness or intermixing'}.`,
+    `All layers are homogeneous and interfere coherently; ${substrate}. The relative permeability is 1.`,
+    ...(anyLayer(document.layers, ({ oxide }) => oxide !== undefined)
+      ? [
+          'An oxide replaces the upper part of its layer and is thicker than what it consumed by the stated factor.',
+        ]
+      : []),
+    ...(anyLayer(document.layers, ({ dead }) => dead !== undefined)
+      ? ['Dead parts of a layer have its index and no magnetization; they belong to its thickness.']
+      : []),
+  ];
+}
+
+function anyLayer(items: StackItem[], holds: (layer: StackLayer) => boolean): boolean {
+  return items.some((item) => ('layers' in item ? anyLayer(item.layers, holds) : holds(item)));
+}
+
 function constants(document: StackDocument, axis: SweepAxis, materials: UsedMaterial[]): string[] {
   const sentences = materials.flatMap((material) => [
     ...(material.assumedConstant
@@ -81,7 +123,9 @@ function constants(document: StackDocument, axis: SweepAxis, materials: UsedMate
 function hasTypedConstants(document: StackDocument): boolean {
   // Vacuum and air do not change either, and nobody needs to be told.
   const typed = (medium: StackMedium) => medium.material === undefined && medium.index !== 1;
-  const any = (items: StackItem[]): boolean =>
-    items.some((item) => ('layers' in item ? any(item.layers) : typed(item.medium)));
-  return typed(document.incident) || typed(document.substrate) || any(document.layers);
+  return (
+    typed(document.incident) ||
+    typed(document.substrate) ||
+    anyLayer(document.layers, ({ medium }) => typed(medium))
+  );
 }

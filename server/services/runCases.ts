@@ -5,11 +5,12 @@ import type { SweepAxis } from '../../shared/run.ts';
 import { librarySolveCaseSchema, solveCaseSchema } from '../../shared/solve.ts';
 import type { LibrarySolveCase, SolveCase } from '../../shared/solve.ts';
 import { checkSolveRequest, forEachMedium } from '../../shared/solveRules.ts';
-import { findLayerPath, toSolveCase } from '../../shared/stackCase.ts';
+import { toSolveCase } from '../../shared/stackCase.ts';
 import type { StackDocument } from '../../shared/stack.ts';
 import { ResolutionError, resolveCase } from '../../worker/dispersion/resolveCase.ts';
 import type { ResolvableMaterial } from '../../worker/dispersion/resolveCase.ts';
 import { checkStackDocument } from './checkStackDocument.ts';
+import { findLayer } from './runNames.ts';
 import { toDocumentIssues } from './runPaths.ts';
 
 /**
@@ -36,22 +37,40 @@ function reach(document: StackDocument, axis: SweepAxis): { wavelengthNm: number
 export function checkRunDocument(document: StackDocument, axis: SweepAxis): Issue[] {
   const issues = checkStackDocument(document);
   if (issues.length > 0) return issues;
-  if (axis.kind === 'thickness' && findLayerPath(document.layers, axis.layerId) === null) {
-    issues.push({ path: 'axis.layerId', message: `the stack has no layer with the id ${axis.layerId}` });
-  }
+  if (axis.kind === 'thickness') issues.push(...checkSweptLayer(document, axis));
   const given = runCase(document, document.workingPoint.wavelengthNm);
-  if (axis.kind === 'wavelength') issues.push(...refuseSamples(given));
+  if (axis.kind === 'wavelength') issues.push(...refuseSamples(document, given));
   const parsed = librarySolveCaseSchema.safeParse(given);
   const problems = parsed.success
     ? checkSolveRequest({ cases: [given] }, { maxPoints: LIMITS.runPoints, beyond: '' })
     : describeIssues(parsed.error, given);
   // How many samples there should be does not matter once there should be none.
   const others = problems.filter(({ path }) => axis.kind !== 'wavelength' || !path.endsWith('.samples'));
-  return [...issues, ...toDocumentIssues(others)];
+  return [...issues, ...toDocumentIssues(others, document)];
+}
+
+/** The layer must be there, and thick enough at every point for what has become of its parts. */
+function checkSweptLayer(document: StackDocument, axis: SweepAxis & { kind: 'thickness' }): Issue[] {
+  const layer = findLayer(document.layers, axis.layerId);
+  if (!layer) {
+    return [{ path: 'axis.layerId', message: `the stack has no layer with the id ${axis.layerId}` }];
+  }
+  const { oxide, dead } = layer;
+  const usedNm = (oxide?.consumedNm ?? 0) + (dead?.topNm ?? 0) + (dead?.bottomNm ?? 0);
+  const ends = [
+    { path: 'axis.from', thicknessNm: axis.from },
+    { path: 'axis.to', thicknessNm: axis.to },
+  ];
+  return ends
+    .filter(({ thicknessNm }) => thicknessNm < usedNm)
+    .map(({ path, thicknessNm }) => ({
+      path,
+      message: `must be at least the ${usedNm} nm that the oxide and the dead parts of the layer take, got ${thicknessNm}`,
+    }));
 }
 
 /** Samples belong to one list of wavelengths, which the sweep would have to be. */
-function refuseSamples(given: LibrarySolveCase): Issue[] {
+function refuseSamples(document: StackDocument, given: LibrarySolveCase): Issue[] {
   const issues: Issue[] = [];
   forEachMedium(given, (medium, path) => {
     for (const key of ['index', 'voigt', 'extraordinary', 'epsilon'] as const) {
@@ -63,7 +82,7 @@ function refuseSamples(given: LibrarySolveCase): Issue[] {
       });
     }
   });
-  return toDocumentIssues(issues);
+  return toDocumentIssues(issues, document);
 }
 
 /** Whether every material reaches over the whole axis, and what comes out may be solved. */
@@ -73,9 +92,7 @@ export function checkRunMaterials(
   materials: ReadonlyMap<string, ResolvableMaterial>,
 ): Issue[] {
   const places = reach(document, axis);
-  const found = places.map(({ wavelengthNm }) =>
-    resolutionIssues(runCase(document, wavelengthNm), materials),
-  );
+  const found = places.map(({ wavelengthNm }) => resolutionIssues(document, wavelengthNm, materials));
   const everywhere = (message: string) =>
     found.every((issues) => issues.some((issue) => issue.message === message));
   const issues = found.flatMap((some, index) =>
@@ -93,19 +110,20 @@ export function checkRunMaterials(
 }
 
 function resolutionIssues(
-  given: LibrarySolveCase,
+  document: StackDocument,
+  wavelengthNm: number,
   materials: ReadonlyMap<string, ResolvableMaterial>,
 ): Issue[] {
   let resolved: SolveCase;
   try {
-    resolved = resolveCase(given, materials);
+    resolved = resolveCase(runCase(document, wavelengthNm), materials);
   } catch (error) {
-    if (error instanceof ResolutionError) return toDocumentIssues(error.issues);
+    if (error instanceof ResolutionError) return toDocumentIssues(error.issues, document);
     throw error;
   }
   const parsed = solveCaseSchema.safeParse(resolved);
   const problems = parsed.success
     ? checkSolveRequest({ cases: [resolved] }, { maxPoints: LIMITS.runPoints, beyond: '' })
     : describeIssues(parsed.error, resolved);
-  return toDocumentIssues(problems);
+  return toDocumentIssues(problems, document);
 }

@@ -24,7 +24,8 @@ function thicknessOf(layerId: string, document: StackDocument): string {
   return medium === undefined ? 'thickness' : `thickness of ${medium}`;
 }
 
-function findLayer(items: StackItem[], layerId: string): StackLayer | null {
+/** The layer with this id, in a block too; null when there is none. */
+export function findLayer(items: StackItem[], layerId: string): StackLayer | null {
   for (const item of items) {
     if ('layers' in item) {
       const inner = findLayer(item.layers, layerId);

@@ -1,6 +1,6 @@
 import type { CreateRun, UsedMaterial } from '../../shared/run.ts';
 import type { SolveWarning } from '../../shared/solve.ts';
-import type { StackDocument, StackItem, StackMedium } from '../../shared/stack.ts';
+import type { StackDocument } from '../../shared/stack.ts';
 import { dispersionRangeNm, isSameWavelength } from '../../worker/dispersion/range.ts';
 import { ResolutionError, resolveCase } from '../../worker/dispersion/resolveCase.ts';
 import type { ResolvableMaterial } from '../../worker/dispersion/resolveCase.ts';
@@ -14,6 +14,7 @@ import type { MaterialStore } from './materialStore.ts';
 import { runAssumptions } from './runAssumptions.ts';
 import { checkRunDocument, checkRunMaterials, runCase } from './runCases.ts';
 import { hashRunInput } from './runInputHash.ts';
+import { mapNamedMaterials, namedMaterialsOf } from './runMedia.ts';
 import { documentPath, toDocumentIssues } from './runPaths.ts';
 
 /** What a run is computed from and rests on, taken at the moment of its making and never changed. */
@@ -69,20 +70,9 @@ function withVersions(
   materials: ReadonlyMap<string, LoadedMaterial>,
 ): StackDocument {
   const newest = new Map([...materials.values()].map(({ id, material }) => [id, material.version]));
-  const pinned = (medium: StackMedium): StackMedium =>
-    medium.material === undefined || medium.version !== undefined
-      ? medium
-      : { ...medium, version: newest.get(medium.material) };
-  const pinnedItem = (item: StackItem): StackItem =>
-    'layers' in item
-      ? { ...item, layers: item.layers.map(pinnedItem) }
-      : { ...item, medium: pinned(item.medium) };
-  return {
-    ...document,
-    incident: pinned(document.incident),
-    layers: document.layers.map(pinnedItem),
-    substrate: pinned(document.substrate),
-  };
+  return mapNamedMaterials(document, (named) =>
+    named.version === undefined ? { ...named, version: newest.get(named.material) } : named,
+  );
 }
 
 /** The wavelengths at the ends of the run. */
@@ -118,11 +108,9 @@ function describeUse(
 }
 
 function isAssumedConstant(document: StackDocument, id: string, version: number): boolean {
-  const assumes = (medium: StackMedium) =>
-    medium.material === id && medium.version === version && medium.assumeConstant === true;
-  const any = (items: StackItem[]): boolean =>
-    items.some((item) => ('layers' in item ? any(item.layers) : assumes(item.medium)));
-  return assumes(document.incident) || assumes(document.substrate) || any(document.layers);
+  return namedMaterialsOf(document).some(
+    (named) => named.material === id && named.version === version && named.assumeConstant === true,
+  );
 }
 
 function warningsOf(input: RunInput, materials: ReadonlyMap<string, ResolvableMaterial>): SolveWarning[] {
@@ -133,10 +121,10 @@ function warningsOf(input: RunInput, materials: ReadonlyMap<string, ResolvableMa
       : document.workingPoint.wavelengthNm;
   try {
     const warnings = solveWarnings({ cases: [resolveCase(runCase(document, wavelengths), materials)] });
-    return warnings.map((warning) => ({ ...warning, path: documentPath(warning.path) }));
+    return warnings.map((warning) => ({ ...warning, path: documentPath(warning.path, document) }));
   } catch (error) {
     // A formula may have no value between two wavelengths where it has one.
-    if (error instanceof ResolutionError) throw invalid(toDocumentIssues(error.issues));
+    if (error instanceof ResolutionError) throw invalid(toDocumentIssues(error.issues, document));
     throw error;
   }
 }

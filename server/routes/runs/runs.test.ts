@@ -154,6 +154,53 @@ describe('a run', () => {
     });
   });
 
+  it('of an oxidized film in a spread beam on a slab is reproduced too, and says what is not ideal', async () => {
+    const material = await buildMaterial(server.models, { group: people.group });
+    const base = buildDocument();
+    const document: StackDocument = {
+      ...base,
+      layers: [
+        {
+          id: 'film',
+          medium: { index: [2.25, 4.07], voigt: [0.03, 0.01] },
+          thicknessNm: 6,
+          m: [0, 0, 1],
+          oxide: { medium: { material: material.id }, consumedNm: 1, expansion: 1.7 },
+          dead: { topNm: 0.2, bottomNm: 0.4 },
+        },
+      ],
+      substrate: { index: 1.5 },
+      backside: { thicknessNm: 500_000, exit: { index: 1 } },
+      spread: { shape: 'normal', thicknessPercent: 2, bandwidthNm: 3 },
+    };
+    const axis: SweepAxis = {
+      kind: 'thickness',
+      layerId: 'film',
+      from: 2,
+      to: 9,
+      points: 8,
+      spacing: 'linear',
+    };
+    const readings: ReadingName[] = ['rotationP', 'ellipticityS', 'reflectanceP', 'transmittanceS'];
+    const run = await finished({ document, axis, readings });
+    expect(run.document.layers).toMatchObject([{ oxide: { medium: { material: material.id, version: 1 } } }]);
+    expect(run.assumptions.join('\n')).toMatch(/standard deviations of 2 % of every thickness, 3 nm/);
+    expect(run.assumptions.join('\n')).not.toMatch(/plane, monochromatic|infinitely thick/);
+    const { columns } = await dataOf(run.id);
+    const expected = await reproduced(run.id, readings);
+    readings.forEach((name, column) => {
+      expect([...columns[name]!]).toEqual(expected.map((row) => row[column]));
+    });
+    expect(await refused({ document, axis: { ...axis, from: 1.5 } })).toMatchObject([{ path: 'axis.from' }]);
+    const unknown = {
+      ...document.layers[0]!,
+      oxide: { medium: { material: 'nope' }, consumedNm: 1, expansion: 1 },
+    };
+    expect(await refused({ document: { ...document, layers: [unknown] } })).toMatchObject([
+      { path: 'document.layers[0].oxide.medium' },
+    ]);
+  });
+
   it('pins the version of every material and keeps it when a newer one comes', async () => {
     const material = await buildMaterial(server.models, {
       contents: [buildContent(), buildContent({ voigt: null, voigtSource: null })],
