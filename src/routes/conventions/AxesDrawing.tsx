@@ -31,11 +31,11 @@ export function AxesDrawing() {
   const pTransmitted = [cosIn, -sinIn] as const;
   return (
     <svg
-      viewBox="0 32 640 336"
+      viewBox="14 50 540 312"
       role="img"
       aria-label="The plane of incidence. x runs to the right along the film, z down into the sample, y out of the page at the reader. The incident beam comes from the upper left at the angle theta to the normal, the reflected beam leaves to the upper right. s points at the reader for every beam. p of the incident beam points up and to the right, p of the reflected beam up and to the left."
       className="w-full max-w-[720px]"
-      fontSize="13"
+      fontSize="15"
     >
       <defs>
         <pattern id={hatch} width="7" height="7" patternTransform="rotate(45)" patternUnits="userSpaceOnUse">
@@ -54,7 +54,7 @@ export function AxesDrawing() {
           substrate
         </text>
       </g>
-      <line x1={origin[0]} y1="40" x2={origin[0]} y2="356" stroke="var(--muted)" strokeDasharray="3 4" />
+      <line x1={origin[0]} y1="62" x2={origin[0]} y2="356" stroke="var(--muted)" strokeDasharray="3 4" />
       <path
         d={`M ${origin[0]} ${origin[1] - 64} A 64 64 0 0 0 ${origin[0] - 64 * sin} ${origin[1] - 64 * cos}`}
         fill="none"
@@ -82,10 +82,10 @@ export function AxesDrawing() {
       <TowardReader at={atTransmitted} color="var(--ink)" />
       <Label x={atTransmitted[0] + 50} y={atTransmitted[1] - 12} main="p" low="t" />
 
-      <text x="92" y="84" fill="var(--accent)" fontWeight="600">
+      <text x="157" y="76" textAnchor="middle" fill="var(--accent)" fontWeight="600">
         incident
       </text>
-      <text x="516" y="84" fill="var(--accent)" fontWeight="600">
+      <text x="503" y="76" textAnchor="middle" fill="var(--accent)" fontWeight="600">
         reflected
       </text>
 
@@ -106,7 +106,7 @@ function Label({ x, y, main, low }: { x: number; y: number; main: string; low?: 
     <text x={x} y={y} fill="var(--ink)" fontStyle="italic" fontWeight="600">
       {main}
       {low ? (
-        <tspan dy="4" fontSize="10" fontStyle="normal">
+        <tspan dy="4" fontSize="11" fontStyle="normal">
           {low}
         </tspan>
       ) : null}
