@@ -77,8 +77,20 @@ async function buildIfChanged(bundles) {
   });
 }
 
+/** The numeric kernel; its file carries a hash of its sources, so it knows by itself when it is due. */
+async function buildKernel() {
+  const { compileKernel } = await import('../../../worker/kernel/compileKernel.mjs');
+  await withFileLock(inProject('dist', 'build.lock'), () => compileKernel());
+}
+
 /** Builds client, server and worker into dist/, each only when its sources changed. */
-export const buildAll = () => buildIfChanged([client, server]);
+export async function buildAll() {
+  await buildIfChanged([client, server]);
+  await buildKernel();
+}
 
 /** Builds what a compute host runs. */
-export const buildServer = () => buildIfChanged([server]);
+export async function buildServer() {
+  await buildIfChanged([server]);
+  await buildKernel();
+}
