@@ -5,6 +5,7 @@ import type { ChunkTask } from './sweep/runSweep.ts';
 import { SharedResult } from './sweep/sharedResult.ts';
 import type { SweepInput } from './sweep/sweepInput.ts';
 import { SweepSolver } from './sweep/sweepSolver.ts';
+import { warmUp } from './sweep/warmUp.ts';
 
 /**
  * What runs in a worker thread. Everything that crosses is plain: the fields of an error do not survive the
@@ -29,9 +30,12 @@ export function solve(request: SolveRequest): TaskOutcome<SolveResponse> {
   return outcomeOf(() => solveRequest(request));
 }
 
-/** Makes a thread load its code before the first question. */
+/** Makes a thread load and compile its code before the first question. */
 export function warm(): TaskOutcome<null> {
-  return outcomeOf(() => null);
+  return outcomeOf(() => {
+    warmUp();
+    return null;
+  });
 }
 
 function solverOf(task: ChunkTask): SweepSolver {
