@@ -105,3 +105,23 @@ describe('edits of the layer tree', () => {
     );
   });
 });
+
+describe('a layer of a real sample', () => {
+  const oxide = { medium: { index: 2.3 }, consumedNm: 1, expansion: 1.7 };
+  const film = buildDocument({
+    layers: [
+      buildLayer({ id: 'co', m: [0, 0, 1], gradedNm: 0.4, dead: { topNm: 0.2, bottomNm: 0.1 }, oxide }),
+    ],
+  });
+
+  it('keeps its graded interface, dead parts and oxide when a number beside them changes', () => {
+    const [layer] = withLayer(film, 'co', { thicknessNm: 5 }).layers;
+    expect(layer).toEqual({ ...film.layers[0], thicknessNm: 5 });
+  });
+
+  it('loses its dead parts with its magnetization', () => {
+    const [layer] = withLayer(film, 'co', { m: undefined }).layers;
+    expect(layer).not.toHaveProperty('dead');
+    expect(layer).toHaveProperty('oxide', oxide);
+  });
+});

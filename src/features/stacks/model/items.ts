@@ -140,20 +140,28 @@ function parentOf(items: readonly StackItem[], id: string): StackBlock | null {
 export function withLayer(document: StackDocument, id: string, patch: LayerPatch): StackDocument {
   const layers = replaceItem(document.layers, id, (item) => {
     if (isBlock(item)) return [item];
-    const { id: layerId, medium, thicknessNm, m, fixed, note } = { ...item, ...patch };
-    return [
-      {
-        id: layerId,
-        medium,
-        thicknessNm,
-        ...(m === undefined ? {} : { m }),
-        ...(fixed ? { fixed } : {}),
-        ...(note ? { note } : {}),
-      },
-    ];
+    const changed = { ...item, ...patch };
+    return [withoutEmpty(changed)];
   });
   return { ...document, layers };
 }
+
+/** Optional keys that say nothing are left out, so that equal layers are written alike. */
+function withoutEmpty({ m, fixed, note, gradedNm, dead, oxide, ...layer }: LayerDraft): StackLayer {
+  return {
+    ...layer,
+    ...(m === undefined ? {} : { m }),
+    ...(fixed ? { fixed } : {}),
+    ...(note ? { note } : {}),
+    ...(gradedNm ? { gradedNm } : {}),
+    ...(dead && m !== undefined && dead.topNm + dead.bottomNm > 0 ? { dead } : {}),
+    ...(oxide ? { oxide } : {}),
+  };
+}
+
+type LayerDraft = Pick<StackLayer, 'id' | 'medium' | 'thicknessNm'> & {
+  [Key in keyof Omit<StackLayer, 'id' | 'medium' | 'thicknessNm'>]: StackLayer[Key] | undefined;
+};
 
 export type LayerPatch = { [Key in Exclude<keyof StackLayer, 'id'>]?: StackLayer[Key] | undefined } & {
   medium?: StackLayer['medium'];
