@@ -10,7 +10,7 @@ import { withRepeat } from '../model/items.ts';
 import { DepthTick } from './DepthTick.tsx';
 import { useFilm } from './film.ts';
 import { itemMenu, stepItem } from './itemActions.ts';
-import { Handle } from './LayerRow.tsx';
+import { Handle } from './Handle.tsx';
 
 type Props = {
   block: StackBlock;

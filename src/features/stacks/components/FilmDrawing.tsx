@@ -37,16 +37,17 @@ export function FilmDrawing(props: Props) {
   const [said, setSaid] = useState('');
   const announce = useCallback((text: string) => setSaid(text), []);
   const [fromNm, toNm] = rangeNm;
+  const itemIssues = useMemo(() => issuesByItem(document, issues), [document, issues]);
   const film = useMemo(
     () => ({
       materials,
       library,
       edit,
       rangeNm: [fromNm, toNm] as const,
-      issues: issuesByItem(document, issues),
+      issues: itemIssues,
       announce,
     }),
-    [materials, library, edit, fromNm, toNm, document, issues, announce],
+    [materials, library, edit, fromNm, toNm, itemIssues, announce],
   );
   return (
     <FilmContext value={film}>
@@ -68,11 +69,15 @@ export function FilmDrawing(props: Props) {
   );
 }
 
+const nothing: ReadonlyMap<string, readonly Issue[]> = new Map();
+
 /** Issues at the item they name, each said once however many states and points repeat it. */
 function issuesByItem(
   document: StackDocument,
   issues: readonly Issue[],
 ): ReadonlyMap<string, readonly Issue[]> {
+  // The same map while there is nothing to say, so that the rows of a long film are not drawn at every keystroke.
+  if (issues.length === 0) return nothing;
   const byItem = new Map<string, Issue[]>();
   for (const { path, message } of issues) {
     const target = issueTarget(document, path);

@@ -22,6 +22,7 @@ import { FilmDrawing } from './FilmDrawing.tsx';
 import { FilmHeader } from './FilmHeader.tsx';
 import { LeaveGuard } from './LeaveGuard.tsx';
 import { ReadingsStrip } from './ReadingsStrip.tsx';
+import { StackDescription } from './StackDescription.tsx';
 import { SweepPanel } from './SweepPanel.tsx';
 import { WorkingPointBar } from './WorkingPointBar.tsx';
 
@@ -100,6 +101,14 @@ export function StackWorkbench({ stack, library, mayEdit, onCopied, keepButton }
             edit={canEdit ? editor.editDocument : null}
           />
         </div>
+        <StackDescription
+          text={newer?.description ?? editor.draft.description}
+          onChange={
+            canEdit
+              ? (description) => editor.editDraft((now) => ({ ...now, description }), 'description')
+              : null
+          }
+        />
       </section>
       <div className="min-w-0 px-6 pt-4 pb-6">
         <div className="mb-3 flex flex-wrap items-center gap-x-3 gap-y-2">

@@ -23,7 +23,8 @@ export function useEditorKeys({ undo, redo, save }: Actions, enabled: boolean): 
 /** A number being typed shows its text; it has to be left and entered again to show what undo made of it. */
 function besideTyping(change: () => void): void {
   const focused = document.activeElement;
-  if (focused instanceof HTMLInputElement) focused.blur();
+  const typing = focused instanceof HTMLInputElement || focused instanceof HTMLTextAreaElement;
+  if (typing) focused.blur();
   change();
-  if (focused instanceof HTMLInputElement) requestAnimationFrame(() => focused.focus());
+  if (typing) requestAnimationFrame(() => focused.focus());
 }
