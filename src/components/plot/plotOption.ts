@@ -6,6 +6,8 @@ import type { PlotTokens } from './plotTokens.ts';
 import type { PlotAxis, PlotSeries } from './plotTypes.ts';
 
 const FONT = '"Roboto Flex Variable", "Roboto Flex", sans-serif';
+/** How far the name of a right axis reaches beyond the frame, px: as far as its numbers do. */
+const RIGHT_NAME = 50;
 /** Open markers along one curve. */
 const MARKERS = 14;
 const dashes = { solid: 'solid', dashed: [7, 4], dotted: [1.5, 3.5] } as const;
@@ -27,6 +29,8 @@ export function plotOption(
     animation: false,
     textStyle: { fontFamily: FONT, fontSize: 12, color: tokens.muted },
     grid: {
+      // The overlay is laid over exactly this frame: a wide axis name must not move it.
+      outerBoundsMode: 'none',
       left: frame.left,
       top: frame.top,
       right: size.width - frame.right,
@@ -50,9 +54,9 @@ export function plotOption(
       nameTextStyle: {
         color: tokens.muted,
         fontSize: 11.5,
-        align: index === 0 ? 'right' : 'left',
-        // Over the numbers, clear of the working point's handle on the frame.
-        padding: index === 0 ? [0, 8, 0, 0] : [0, 0, 0, 8],
+        align: 'right',
+        // Over the numbers, clear of the working point's handle on the frame; a long name on the right ends at the edge.
+        padding: index === 0 ? [0, 8, 0, 0] : [0, -RIGHT_NAME, 0, 0],
       },
       splitLine: { show: index === 0, lineStyle: { color: tokens.line } },
       axisLine: { show: false },

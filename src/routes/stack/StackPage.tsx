@@ -52,7 +52,7 @@ export function StackPage() {
         <KeepAsRun
           body={{ groupId: stack.data.groupId, stackId, document, axis, readings }}
           problem={problem}
-          onKept={({ id }) => void navigate(generatePath(paths.run, { runId: id }))}
+          onKept={({ id }) => void navigate(generatePath(paths.run, { runId: id }), { state: { kept: true } })}
         />
       )}
     />

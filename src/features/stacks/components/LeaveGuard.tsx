@@ -2,10 +2,14 @@ import { useBlocker } from 'react-router-dom';
 import { Button } from '../../../components/Button.tsx';
 import { Dialog } from '../../../components/Dialog.tsx';
 
-/** Asks before another page is opened over unsaved changes. They stay in this tab either way. */
+/**
+ * Asks before another page is opened over unsaved changes. They stay in this tab either way; so the way to a run that
+ * was just kept, which holds the film as edited, is taken without a question.
+ */
 export function LeaveGuard({ dirty }: { dirty: boolean }) {
   const blocker = useBlocker(
-    ({ currentLocation, nextLocation }) => dirty && currentLocation.pathname !== nextLocation.pathname,
+    ({ currentLocation, nextLocation }) =>
+      dirty && currentLocation.pathname !== nextLocation.pathname && !isKeptRun(nextLocation.state),
   );
   return (
     <Dialog
@@ -22,4 +26,8 @@ export function LeaveGuard({ dirty }: { dirty: boolean }) {
       </div>
     </Dialog>
   );
+}
+
+function isKeptRun(state: unknown): boolean {
+  return typeof state === 'object' && state !== null && 'kept' in state && state.kept === true;
 }
