@@ -52,7 +52,9 @@ export function StackPage() {
         <KeepAsRun
           body={{ groupId: stack.data.groupId, stackId, document, axis, readings }}
           problem={problem}
-          onKept={({ id }) => void navigate(generatePath(paths.run, { runId: id }), { state: { kept: true } })}
+          onKept={({ id }) =>
+            void navigate(generatePath(paths.run, { runId: id }), { state: { kept: true } })
+          }
         />
       )}
     />
