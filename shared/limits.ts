@@ -9,8 +9,12 @@ export const LIMITS = {
   commandLinePoints: 1_000_000,
   /** Points of one `POST /api/v1/solve`; more than this is a run. */
   httpPoints: 20_000,
-  /** Points of one run. */
+  /** Points of one run, over all its axes. */
   runPoints: 1_000_000,
+  /** Readings that a run with two axes may store. */
+  mapReadings: 6,
+  /** Curves of a family. */
+  familyCurves: 12,
   /** Rounding allowed above |m| = 1. */
   magnetizationSlack: 1e-9,
   /** Layers and blocks that one stack document may list. */

@@ -48,6 +48,7 @@ const indexSchema = sampled(indexValueSchema, 'must be a number, [n, k] or {"sam
 const voigtSchema = sampled(complexSchema, 'must be a number, [re, im] or {"samples": [...]}').meta({
   description: 'Complex Voigt constant Q in the canonical sign: for m = +z, eps_xy = i Q eps_d.',
 });
+const voigtScaleSchema = z.number().min(0).optional().meta({ description: 'Multiplies Q; 1 when left out.' });
 const epsilonSchema = sampled(tensorValueSchema, 'must be a 3x3 complex array or {"samples": [...]}').meta({
   description: 'Full permittivity tensor, rows x, y, z; replaces every other key of the medium.',
 });
@@ -92,6 +93,7 @@ const mixtureRules = {
 const partFields = {
   index: indexSchema.optional(),
   voigt: voigtSchema.optional(),
+  voigtScale: voigtScaleSchema,
   m: magnetizationSchema.optional(),
 };
 
@@ -124,6 +126,7 @@ const orientationSchema = z
 export const mediumFields = {
   index: indexSchema.optional(),
   voigt: voigtSchema.optional(),
+  voigtScale: voigtScaleSchema,
   m: magnetizationSchema.optional(),
   extraordinary: indexSchema.optional(),
   axis: axisSchema.optional(),
@@ -189,19 +192,21 @@ export function checkMediumKeys(medium: LibraryMediumInput, context: z.Refinemen
   refuseBeside(['version', 'assumeConstant'], 'needs material');
   if (medium.epsilon !== undefined) {
     refuseBeside(
-      ['index', 'voigt', 'm', 'extraordinary', 'axis', 'quadratic', 'mixture'],
+      ['index', 'voigt', 'voigtScale', 'm', 'extraordinary', 'axis', 'quadratic', 'mixture'],
       'cannot stand beside epsilon, which replaces it',
     );
     return;
   }
   if (medium.mixture !== undefined) {
     refuseBeside(
-      ['index', 'voigt', 'm', 'extraordinary', 'axis', 'quadratic', 'orientationDeg'],
+      ['index', 'voigt', 'voigtScale', 'm', 'extraordinary', 'axis', 'quadratic', 'orientationDeg'],
       'cannot stand beside mixture: its parts give the constants',
     );
     return;
   }
   if (medium.index === undefined) refuse('index', 'is required (or epsilon, or mixture)');
+  if (medium.voigtScale !== undefined && medium.voigt === undefined)
+    refuse('voigtScale', 'needs voigt or material');
   if (medium.quadratic !== undefined && medium.extraordinary !== undefined) {
     refuse('quadratic', 'cannot stand beside extraordinary');
   }

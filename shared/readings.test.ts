@@ -6,6 +6,17 @@ import { EV_NM, foldDegrees, photonEnergyEv } from './units.ts';
 
 const angles = (rotationDeg: number, ellipticityDeg: number) => ({ rotationDeg, ellipticityDeg });
 
+/** Turns any polarization by so many degrees, from p toward s. */
+function turned(angleDeg: number): number[][] {
+  const [c, s] = [Math.cos((angleDeg * Math.PI) / 90), Math.sin((angleDeg * Math.PI) / 90)];
+  return [
+    [1, 0, 0, 0.1],
+    [0, c, -s, 0],
+    [0, s, c, 0],
+    [0, 0, 0, 1],
+  ];
+}
+
 function source(change: Partial<ReadingSource> = {}): ReadingSource {
   return {
     R: { p: 0.4, s: 0.6 },
@@ -13,13 +24,21 @@ function source(change: Partial<ReadingSource> = {}): ReadingSource {
     A: { p: 0.5, s: 0.2 },
     kerr: { p: angles(0.3, -0.1), s: angles(0.2, 0.05) },
     r: { sp: [3e-3, 4e-3], ps: [0, -2e-3] },
+    faraday: { p: angles(0.05, 0.01), s: angles(0.06, 0.02) },
+    ceiling: { stack: 0.01, material: 0.02, shareReached: 0.25 },
+    // An ideal mirror that turns light by 5 deg.
+    mueller: turned(5),
     ...change,
   };
 }
 
 describe('readings', () => {
-  const zero = source({ kerr: { p: angles(0.1, 0.2), s: angles(-0.1, 0) } });
-  const reversed = source({ R: { p: 0.2, s: 0.6 } });
+  const zero = source({
+    kerr: { p: angles(0.1, 0.2), s: angles(-0.1, 0) },
+    faraday: { p: angles(0.03, 0.01), s: angles(0.06, 0.02) },
+    mueller: turned(2),
+  });
+  const reversed = source({ R: { p: 0.2, s: 0.6 }, kerr: { p: angles(-0.1, 0.1), s: angles(0, -0.2) } });
 
   test.each([
     ['rotationP', 0.2],
@@ -36,8 +55,21 @@ describe('readings', () => {
     ['crossPs', 2e-3],
     ['contrastP', 0.2 / 0.6],
     ['contrastS', 0],
+    ['ceilingShare', 0.25],
+    ['stackCeiling', 0.01],
+    ['oddRotationP', 0.2],
+    ['oddEllipticityS', 0.125],
+    ['evenRotationP', 0],
+    ['evenEllipticityS', -0.075],
+    ['faradayRotationP', 0.02],
+    ['faradayEllipticityS', 0],
+    ['polarPart', Math.hypot(3e-3, 2e-3) / 2],
+    ['longitudinalPart', Math.hypot(3e-3, 6e-3) / 2],
+    ['circularContrast', 0.1],
+    ['rotationAtAzimuth', 3],
+    ['ellipticityAtAzimuth', 0],
   ] as const)('%s', (name, value) => {
-    expect(readingOf(name, source(), zero, reversed)).toBeCloseTo(value, 14);
+    expect(readingOf(name, source(), zero, reversed, 30)).toBeCloseTo(value, 13);
   });
 
   test('every reading has a definition and a value', () => {

@@ -1,4 +1,5 @@
 import { describe, expect, it } from 'vitest';
+import type { SweepAxis } from './run.ts';
 import {
   ResultFormatError,
   decodeResult,
@@ -9,10 +10,12 @@ import {
 import type { ResultHeader } from './resultFormat.ts';
 
 const axis = { kind: 'angle', from: 0, to: 80, points: 5, spacing: 'linear' } as const;
-const header = describeResult(axis, ['rotationP', 'reflectanceS'], {
+const header = describeResult({ axis }, ['rotationP', 'reflectanceS'], {
   solverVersion: '1.0.0',
   inputSha256: 'ab'.repeat(32),
 });
+const secondAxis: SweepAxis = { kind: 'wavelength', from: 400, to: 800, points: 3, spacing: 'linear' };
+const family: SweepAxis = { kind: 'repeat', blockId: 'b', from: 1, to: 3, points: 2, spacing: 'linear' };
 const columns = [
   [0, 20, 40, 60, 80],
   [0.1, -0.25, NaN, 1e-300, Math.PI],
@@ -61,7 +64,7 @@ describe('result format', () => {
     expect(() => decodeResult(new TextEncoder().encode('{"error": {"code": "gone"}}').buffer)).toThrow(
       /7b 22 65/,
     );
-    expect(() => decodeResult(changed(8, 9))).toThrow(/knows format 1, got format 9/);
+    expect(() => decodeResult(changed(8, 9))).toThrow(/knows the formats 1 and 2, got format 9/);
     expect(() => decodeResult(changed(12, 3))).toThrow(/multiple of 8 bytes within \d+, got 259/);
     expect(() => decodeResult(changed(15, 0x7f))).toThrow(/within \d+, got 21\d+/);
     expect(() => decodeResult(changed(16, 0x58))).toThrow(/not JSON: X/);
@@ -83,5 +86,30 @@ describe('result format', () => {
     expect(() => decodeResult(fileOf({ ...header, pointCount: 4 }))).toThrow(/5 points, but pointCount is 4/);
     const unknown = JSON.parse(JSON.stringify(header).replace('rotationP', 'rotationX')) as ResultHeader;
     expect(() => decodeResult(fileOf(unknown))).toThrow(/readings\.0\.name/);
+  });
+
+  it('carries every axis of a map with a family, first axis innermost', () => {
+    const map = { axis: { ...axis, points: 2 }, second: secondAxis, family };
+    const used = describeResult(map, ['rotationP'], { solverVersion: '1', inputSha256: 'ab' });
+    expect(used).toMatchObject({ pointCount: 12, axisUnit: 'deg', secondUnit: 'nm', familyUnit: '1' });
+    const values = Array.from({ length: 12 }, (_, index) => index / 7);
+    const file = fileOf(used, [[0, 80], [400, 600, 800], [1, 3], values]);
+    expect(file.byteLength).toBe(resultByteLength(used));
+    const result = decodeResult(file);
+    expect([...result.second!]).toEqual([400, 600, 800]);
+    expect([...result.family!]).toEqual([1, 3]);
+    expect([...result.columns.rotationP!]).toEqual(values);
+    expect(new DataView(file).getUint32(8, true)).toBe(2);
+    expect(() => decodeResult(fileOf(used, [[0, 80], [400, 600, 801], [1, 3], values]))).toThrow(
+      /axis must be 800 at point 2, got 801/,
+    );
+    expect(() => decodeResult(fileOf({ ...used, pointCount: 6 }, [[0, 80]]))).toThrow(
+      /axes have 12 points, but pointCount is 6/,
+    );
+  });
+
+  it('stays what it was for one axis, so that stored files are read', () => {
+    expect(new DataView(fileOf()).getUint32(8, true)).toBe(1);
+    expect(decodeResult(fileOf())).toMatchObject({ second: null, family: null });
   });
 });

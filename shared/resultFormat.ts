@@ -1,7 +1,8 @@
 import { z } from 'zod';
 import { readingDefinitions } from './readings.ts';
 import { axisSchema, readingNames } from './run.ts';
-import type { ReadingName, SweepAxis } from './run.ts';
+import type { ReadingName, SweepAxes, SweepAxis } from './run.ts';
+import { axesOf, pointCountOf } from './runAxes.ts';
 
 /**
  * The binary file of a run's numbers, the same in the database, over HTTP and in the browser.
@@ -10,23 +11,40 @@ import type { ReadingName, SweepAxis } from './run.ts';
  *     bytes 8..11     format version, Uint32
  *     bytes 12..15    length of the header in bytes, Uint32: a multiple of 8
  *     bytes 16..      header: JSON in UTF-8, filled up with spaces
- *     then            Float64 columns of `pointCount` values each: the axis, then header.readings in their order
+ *     then            Float64 columns: the values of each axis (axis, second, family: those that the run has), then
+ *                     header.readings in their order with `pointCount` values each
+ *
+ * A reading at the points of the axes: index = (familyIndex * second.points + secondIndex) * axis.points + index on
+ * the first axis. A file of one axis has format version 1, of several version 2.
  *
  * All numbers are little-endian. Columns start on 8-byte borders, so that a reader can lay a Float64Array over
- * each without copying. A reading that does not exist at a point is NaN.
+ * each without copying. A reading that does not exist at a point is NaN, and so is
+ * one that has not been computed yet in a file with `done`.
  */
 const MAGIC = [0x53, 0x4b, 0x45, 0x57, 0x52, 0x55, 0x4e, 0x00];
-const FORMAT_VERSION = 1;
+const ONE_AXIS_VERSION = 1;
+const SEVERAL_AXES_VERSION = 2;
 const PREAMBLE_BYTES = 16;
 const BYTES_PER_VALUE = 8;
 
 const columnSchema = z.object({ name: z.enum(readingNames), unit: z.string() });
 
+const axisUnits = ['nm', 'deg', '1'] as const;
+export type AxisUnit = (typeof axisUnits)[number];
+const axisUnitSchema = z.enum(axisUnits);
+
 const resultHeaderSchema = z.object({
   axis: axisSchema,
-  axisUnit: z.enum(['nm', 'deg']),
+  axisUnit: axisUnitSchema,
+  second: axisSchema.optional(),
+  secondUnit: axisUnitSchema.optional(),
+  family: axisSchema.optional(),
+  familyUnit: axisUnitSchema.optional(),
   readings: z.array(columnSchema),
+  /** Of all axes together. */
   pointCount: z.int().min(1),
+  /** Points computed when the file was made; absent once all are. */
+  done: z.int().min(0).optional(),
   solverVersion: z.string(),
   /** SHA-256 of everything the numbers were computed from. */
   inputSha256: z.string(),
@@ -37,6 +55,8 @@ export type ResultHeader = z.infer<typeof resultHeaderSchema>;
 export type RunResult = {
   header: ResultHeader;
   axis: Float64Array;
+  second: Float64Array | null;
+  family: Float64Array | null;
   columns: Partial<Record<ReadingName, Float64Array>>;
 };
 
@@ -45,21 +65,33 @@ export class ResultFormatError extends Error {
   override readonly name = 'ResultFormatError';
 }
 
-export function axisUnitOf(axis: SweepAxis): 'nm' | 'deg' {
-  return axis.kind === 'angle' ? 'deg' : 'nm';
+const unitsByKind: Record<SweepAxis['kind'], AxisUnit> = {
+  wavelength: 'nm',
+  angle: 'deg',
+  thickness: 'nm',
+  direction: 'deg',
+  voigtScale: '1',
+  repeat: '1',
+  graded: 'nm',
+};
+
+export function axisUnitOf(axis: SweepAxis): AxisUnit {
+  return unitsByKind[axis.kind];
 }
 
 /** The header of a result with these readings, in this order. */
 export function describeResult(
-  axis: SweepAxis,
+  { axis, second, family }: SweepAxes,
   readings: readonly ReadingName[],
   provenance: { solverVersion: string; inputSha256: string },
 ): ResultHeader {
   return {
     axis,
     axisUnit: axisUnitOf(axis),
+    ...(second && { second, secondUnit: axisUnitOf(second) }),
+    ...(family && { family, familyUnit: axisUnitOf(family) }),
     readings: readings.map((name) => ({ name, unit: readingDefinitions[name].unit })),
-    pointCount: axis.points,
+    pointCount: pointCountOf({ axis, second, family }),
     ...provenance,
   };
 }
@@ -71,7 +103,7 @@ export function encodeResultHeader(header: ResultHeader): Uint8Array {
   const bytes = new Uint8Array(PREAMBLE_BYTES + headerBytes).fill(0x20);
   bytes.set(MAGIC);
   const view = new DataView(bytes.buffer);
-  view.setUint32(8, FORMAT_VERSION, true);
+  view.setUint32(8, axesOf(header).length > 1 ? SEVERAL_AXES_VERSION : ONE_AXIS_VERSION, true);
   view.setUint32(12, headerBytes, true);
   bytes.set(json, PREAMBLE_BYTES);
   return bytes;
@@ -79,9 +111,17 @@ export function encodeResultHeader(header: ResultHeader): Uint8Array {
 
 /** Bytes of the whole file. */
 export function resultByteLength(header: ResultHeader): number {
-  return (
-    encodeResultHeader(header).length + (1 + header.readings.length) * header.pointCount * BYTES_PER_VALUE
-  );
+  return encodeResultHeader(header).length + valueCount(header) * BYTES_PER_VALUE;
+}
+
+/** Values in all columns together. */
+function valueCount(header: ResultHeader): number {
+  return axisValueCount(header) + header.readings.length * header.pointCount;
+}
+
+/** Values in the columns of the axes, which stand before the first reading. */
+export function axisValueCount(axes: SweepAxes): number {
+  return axesOf(axes).reduce((sum, { axis }) => sum + axis.points, 0);
 }
 
 /**
@@ -92,19 +132,29 @@ export function resultByteLength(header: ResultHeader): number {
 export function decodeResult(buffer: ArrayBuffer): RunResult {
   const columnsAt = columnsOffset(buffer, buffer.byteLength);
   const header = parseHeader(buffer, columnsAt - PREAMBLE_BYTES);
-  const expected = columnsAt + (1 + header.readings.length) * header.pointCount * BYTES_PER_VALUE;
+  const expected = columnsAt + valueCount(header) * BYTES_PER_VALUE;
   if (buffer.byteLength !== expected) {
     throw new ResultFormatError(
       `A result of ${header.pointCount} points and ${header.readings.length} readings has ${expected} bytes, got ${buffer.byteLength}: the transfer was cut off or changed; load it again.`,
     );
   }
-  const columnAt = (position: number) =>
-    new Float64Array(buffer, columnsAt + position * header.pointCount * BYTES_PER_VALUE, header.pointCount);
-  checkAxis(header.axis, columnAt(0));
+  let at = columnsAt;
+  const nextColumn = (length: number) => {
+    const column = new Float64Array(buffer, at, length);
+    at += length * BYTES_PER_VALUE;
+    return column;
+  };
+  const axisColumn = (axis: SweepAxis) => {
+    const values = nextColumn(axis.points);
+    checkAxis(axis, values);
+    return values;
+  };
   return {
     header,
-    axis: columnAt(0),
-    columns: Object.fromEntries(header.readings.map(({ name }, index) => [name, columnAt(1 + index)])),
+    axis: axisColumn(header.axis),
+    second: header.second ? axisColumn(header.second) : null,
+    family: header.family ? axisColumn(header.family) : null,
+    columns: Object.fromEntries(header.readings.map(({ name }) => [name, nextColumn(header.pointCount)])),
   };
 }
 
@@ -129,8 +179,10 @@ export function columnsOffset(start: ArrayBuffer, fileBytes: number): number {
   }
   const view = new DataView(start);
   const version = view.getUint32(8, true);
-  if (version !== FORMAT_VERSION) {
-    throw new ResultFormatError(`This reader knows format ${FORMAT_VERSION}, got format ${version}.`);
+  if (version !== ONE_AXIS_VERSION && version !== SEVERAL_AXES_VERSION) {
+    throw new ResultFormatError(
+      `This reader knows the formats ${ONE_AXIS_VERSION} and ${SEVERAL_AXES_VERSION}, got format ${version}.`,
+    );
   }
   const headerBytes = view.getUint32(12, true);
   if (headerBytes % BYTES_PER_VALUE !== 0 || PREAMBLE_BYTES + headerBytes > fileBytes) {
@@ -154,10 +206,10 @@ function parseHeader(buffer: ArrayBuffer, headerBytes: number): ResultHeader {
     const [issue] = parsed.error.issues;
     throw new ResultFormatError(`The header is not right at ${issue?.path.join('.')}: ${issue?.message}`);
   }
-  if (parsed.data.pointCount !== parsed.data.axis.points) {
-    throw new ResultFormatError(
-      `The axis has ${parsed.data.axis.points} points, but pointCount is ${parsed.data.pointCount}.`,
-    );
+  const points = pointCountOf(parsed.data);
+  if (parsed.data.pointCount !== points) {
+    const axes = axesOf(parsed.data).length > 1 ? 'axes have' : 'axis has';
+    throw new ResultFormatError(`The ${axes} ${points} points, but pointCount is ${parsed.data.pointCount}.`);
   }
   return parsed.data;
 }

@@ -1,6 +1,7 @@
 import { z } from 'zod';
 import { LIMITS } from './limits.ts';
 import { sourceSchema } from './material.ts';
+import { checkAxis, checkAxes } from './runAxes.ts';
 import { solveWarningSchema } from './solve.ts';
 import { stackDocumentSchema, stackNameSchema } from './stack.ts';
 import { strictObject } from './strictObject.ts';
@@ -21,6 +22,25 @@ export const readingNames = [
   'transmittanceS',
   'absorptanceP',
   'absorptanceS',
+  'ceilingShare',
+  'stackCeiling',
+  'oddRotationP',
+  'oddEllipticityP',
+  'oddRotationS',
+  'oddEllipticityS',
+  'evenRotationP',
+  'evenEllipticityP',
+  'evenRotationS',
+  'evenEllipticityS',
+  'faradayRotationP',
+  'faradayEllipticityP',
+  'faradayRotationS',
+  'faradayEllipticityS',
+  'polarPart',
+  'longitudinalPart',
+  'circularContrast',
+  'rotationAtAzimuth',
+  'ellipticityAtAzimuth',
 ] as const;
 
 export type ReadingName = (typeof readingNames)[number];
@@ -30,7 +50,21 @@ const span = {
   spacing: z.enum(['linear', 'log']),
 };
 
-/** The swept quantity. Ends are included; `from` may exceed `to`. Log spacing needs both ends > 0. */
+/** Planes in which a magnetization may turn. */
+export const directionPlanes = ['xz', 'yz', 'xy'] as const;
+
+/** The layer id that names the substrate on an axis. */
+export const SUBSTRATE = 'substrate';
+
+/**
+ * The swept quantity. Ends are included; `from` may exceed `to`. Log spacing needs both ends > 0.
+ *
+ * - `direction`: m turns in a plane and keeps its length, in every magnetic layer that is not fixed, or in one layer.
+ *   The angle counts from +z toward +x (`xz`), from +z toward +y (`yz`) or from +x toward +y (`xy`).
+ * - `voigtScale`: multiplies Q of every magnetic layer, or of one.
+ * - `repeat`: how often a block stands in the stack; whole numbers at every point.
+ * - `graded`: width of the interface above a layer, or above the substrate (`layerId: 'substrate'`).
+ */
 export const axisSchema = z
   .discriminatedUnion('kind', [
     strictObject({
@@ -52,19 +86,49 @@ export const axisSchema = z
       to: z.number().min(0),
       ...span,
     }),
+    strictObject({
+      kind: z.literal('direction'),
+      plane: z.enum(directionPlanes),
+      layerId: z.string().optional(),
+      from: z.number().min(-360).max(360),
+      to: z.number().min(-360).max(360),
+      ...span,
+    }),
+    strictObject({
+      kind: z.literal('voigtScale'),
+      layerId: z.string().optional(),
+      from: z.number().min(0),
+      to: z.number().min(0),
+      ...span,
+    }),
+    strictObject({
+      kind: z.literal('repeat'),
+      blockId: z.string(),
+      from: z.int().min(0).max(LIMITS.repeat),
+      to: z.int().min(0).max(LIMITS.repeat),
+      ...span,
+    }),
+    strictObject({
+      kind: z.literal('graded'),
+      layerId: z.string(),
+      from: z.number().min(0),
+      to: z.number().min(0),
+      ...span,
+    }),
   ])
-  .superRefine((axis, context) => {
-    if (axis.spacing === 'log' && (axis.from === 0 || axis.to === 0)) {
-      context.addIssue({
-        code: 'custom',
-        path: [axis.from === 0 ? 'from' : 'to'],
-        message: 'must be > 0 with log spacing',
-      });
-    }
-  });
+  .superRefine(checkAxis);
 
 export type SweepAxis = z.infer<typeof axisSchema>;
 export type AxisKind = SweepAxis['kind'];
+
+/** What a run sweeps. A second axis makes a map, a family repeats curve or map for each of its few values. */
+export type SweepAxes = { axis: SweepAxis; second?: SweepAxis | undefined; family?: SweepAxis | undefined };
+
+const axesFields = {
+  axis: axisSchema,
+  second: axisSchema.optional(),
+  family: axisSchema.optional(),
+};
 
 export const createRunSchema = strictObject({
   groupId: z.string(),
@@ -72,9 +136,9 @@ export const createRunSchema = strictObject({
   /** The stack the document comes from, when it is a saved one. */
   stackId: z.string().optional(),
   document: stackDocumentSchema,
-  axis: axisSchema,
+  ...axesFields,
   readings: z.array(z.enum(readingNames)).min(1).max(readingNames.length).optional(),
-});
+}).superRefine(checkAxes);
 
 export type CreateRun = z.infer<typeof createRunSchema>;
 
@@ -98,7 +162,7 @@ export const runSummarySchema = z.object({
   name: z.string(),
   stackId: z.string().nullable(),
   stackName: z.string().nullable(),
-  axis: axisSchema,
+  ...axesFields,
   progress: runProgressSchema,
   createdAt: z.iso.datetime(),
   finishedAt: z.iso.datetime().nullable(),
@@ -144,7 +208,7 @@ export type Run = z.infer<typeof runSchema>;
 /** A run as a share link shows it: nothing of the group but the run itself. */
 export const sharedRunSchema = z.object({
   name: z.string(),
-  axis: axisSchema,
+  ...axesFields,
   finishedAt: z.iso.datetime().nullable(),
   ...snapshotFields,
 });

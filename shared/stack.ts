@@ -9,7 +9,7 @@ import { strictObject } from './strictObject.ts';
  * A stack as people edit it: media by library id or by typed-in constants, every layer with an id of its own so
  * that a sweep can name it however the stack is reordered. stackCase.ts turns it into a solve case.
  */
-const { m: _m, ...constantFields } = libraryMediumFields;
+const { m: _m, voigtScale: _voigtScale, ...constantFields } = libraryMediumFields;
 
 /** What fills a layer: `{material, version}` of the library, or constants typed in (then `label` names them). */
 export const stackMediumSchema = strictObject({
@@ -29,6 +29,8 @@ export const stackLayerSchema = strictObject({
   m: magnetizationSchema.optional(),
   /** A fixed layer keeps its m when the working point reverses or replaces the magnetization. */
   fixed: z.boolean().optional(),
+  /** Multiplies Q of the layer's medium; 1 when absent. */
+  voigtScale: z.number().min(0).optional(),
   /** Role in the film, such as cap or buffer. */
   note: z.string().max(LIMITS.nameLength).optional(),
   /** Width of the graded interface with the medium above. */
@@ -90,10 +92,17 @@ export const workingPointSchema = strictObject({
   wavelengthNm: z.number().positive(),
   angleDeg: z.number().min(0).lt(90),
   input: z.enum(polarizations),
+  /** Azimuth of linear light, 0 = p toward 90 = s, for the readings at any azimuth; that of `input` when absent. */
+  inputAzimuthDeg: z.number().min(-90).max(180).optional(),
   magnetization: workingMagnetizationSchema,
 });
 
 export type WorkingPoint = z.infer<typeof workingPointSchema>;
+
+/** The azimuth for which `rotationAtAzimuth` and `ellipticityAtAzimuth` are read, deg from p toward s. */
+export function inputAzimuthOf({ input, inputAzimuthDeg }: WorkingPoint): number {
+  return inputAzimuthDeg ?? (input === 's' ? 90 : 0);
+}
 
 export const stackDocumentSchema = strictObject({
   incident: stackMediumSchema,
@@ -101,6 +110,7 @@ export const stackDocumentSchema = strictObject({
   substrate: stackMediumSchema,
   /** Magnetization of a magnetic substrate. */
   substrateM: magnetizationSchema.optional(),
+  substrateVoigtScale: z.number().min(0).optional(),
   substrateGradedNm: z.number().min(0).optional(),
   /** The substrate is a thick slab; inner reflections add in intensity, `exit` lies behind it. */
   backside: strictObject({ thicknessNm: z.number().min(0), exit: stackMediumSchema }).optional(),

@@ -33,12 +33,13 @@ export function toSolveCase(
       : layersOf(item, magnetization);
   const { substrateGradedNm, backside } = document;
   const substrateM = workingM(document.substrateM, false, magnetization);
+  const substrate = withVoigtScale(document.substrate, document.substrateVoigtScale);
   return {
     ...spreadOf(document, wavelengthNm, angleDeg),
     incident: mediumOf(document.incident, undefined, magnetization),
     layers: document.layers.flatMap(itemsOf),
     substrate: {
-      ...mediumOf(document.substrate, substrateM, magnetization),
+      ...mediumOf(substrate, substrateM, magnetization),
       ...(substrateGradedNm ? { gradedNm: substrateGradedNm } : {}),
     },
     ...(backside
@@ -55,7 +56,8 @@ export function toSolveCase(
 
 /** One layer as drawn: oxide on top, then dead, live and dead part; most have only the live one. */
 function layersOf(layer: StackLayer, magnetization: WorkingMagnetization): LibraryLayerInput[] {
-  const { medium, fixed = false, oxide, dead } = layer;
+  const { fixed = false, oxide, dead } = layer;
+  const medium = withVoigtScale(layer.medium, layer.voigtScale);
   const m = workingM(layer.m, fixed, magnetization);
   const live = mediumOf(medium, m, magnetization, fixed);
   const silent = m === undefined ? live : mediumOf(medium, [0, 0, 0], magnetization, fixed);
@@ -125,8 +127,30 @@ function workingM(
   }
 }
 
+type ScaledMedium = StackMedium & { voigtScale?: number | undefined };
+
+/** A medium without Q has nothing to scale; of a mixture both parts are scaled. */
+function withVoigtScale(medium: StackMedium, voigtScale: number | undefined): ScaledMedium {
+  if (voigtScale === undefined) return medium;
+  if (medium.mixture) {
+    const { parts } = medium.mixture;
+    return { ...medium, mixture: { ...medium.mixture, parts: [scaledPart(parts[0]), scaledPart(parts[1])] } };
+  }
+  const hasVoigt = medium.voigt !== undefined || medium.material !== undefined;
+  return hasVoigt ? { ...medium, voigtScale } : medium;
+
+  function scaledPart<Part extends { voigt?: unknown; material?: unknown; voigtScale?: number | undefined }>(
+    part: Part,
+  ): Part {
+    const { voigtScale: own = 1 } = part;
+    return part.voigt === undefined && part.material === undefined
+      ? part
+      : { ...part, voigtScale: own * voigtScale! };
+  }
+}
+
 function mediumOf(
-  medium: StackMedium,
+  medium: ScaledMedium,
   m: Vector | undefined,
   magnetization: WorkingMagnetization,
   fixed = false,

@@ -11,9 +11,9 @@ export function* resultPieces(
   run: Pick<Run, 'input' | 'inputSha256'>,
   result: SweepResult,
 ): Generator<Buffer> {
-  const { axis, readings } = run.input;
+  const { readings } = run.input;
   const header = encodeResultHeader(
-    describeResult(axis, readings, { solverVersion: SOLVER_VERSION, inputSha256: run.inputSha256 }),
+    describeResult(run.input, readings, { solverVersion: SOLVER_VERSION, inputSha256: run.inputSha256 }),
   );
   let waiting: Buffer[] = [Buffer.from(header)];
   let bytes = header.length;

@@ -34,7 +34,7 @@ function settings(document: StackDocument, axis: SweepAxis): string[] {
       return [swept, `Angle of incidence ${angleDeg} deg.`];
     case 'angle':
       return [swept, `Vacuum wavelength ${wavelengthNm} nm.`];
-    case 'thickness':
+    default:
       return [swept, `Vacuum wavelength ${wavelengthNm} nm, angle of incidence ${angleDeg} deg.`];
   }
 }

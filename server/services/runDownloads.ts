@@ -10,7 +10,7 @@ const ROWS_AT_A_TIME = 2_048;
 /** The result file with the chosen readings (shared/resultFormat.ts), piece by piece. */
 export async function* resultBytes(result: RunResult, readings: ReadingName[]): AsyncGenerator<Uint8Array> {
   const { input, solverVersion, inputSha256 } = result.run;
-  yield encodeResultHeader(describeResult(input.axis, readings, { solverVersion, inputSha256 }));
+  yield encodeResultHeader(describeResult(input, readings, { solverVersion, inputSha256 }));
   for (const column of [null, ...readings]) {
     for (const { start, count } of stretches(result.pointCount, POINTS_AT_A_TIME)) {
       yield await result.readBytes(column, start, count);
@@ -53,6 +53,10 @@ function axisTitle(axis: SweepAxis): string {
     wavelength: 'Vacuum wavelength',
     angle: 'Angle of incidence',
     thickness: 'Layer thickness',
+    direction: 'Direction of m',
+    voigtScale: 'Scale of Q',
+    repeat: 'Repeats',
+    graded: 'Interface width',
   }[axis.kind];
   return `${title} (${axisUnitOf(axis)})`;
 }

@@ -1,3 +1,4 @@
+import { applyAxis } from '../../shared/applyAxis.ts';
 import type { LibrarySolveCase } from '../../shared/solve.ts';
 import { toSolveCase } from '../../shared/stackCase.ts';
 import type { StackItem } from '../../shared/stack.ts';
@@ -5,7 +6,6 @@ import { resolveCase } from '../../worker/dispersion/resolveCase.ts';
 import type { ResolvableMaterial } from '../../worker/dispersion/resolveCase.ts';
 import { axisValues } from '../../worker/sweep/axisValues.ts';
 import { materialKey } from '../../worker/sweep/sweepInput.ts';
-import { withThickness } from '../../worker/sweep/withThickness.ts';
 import type { RunInput } from '../models/run.ts';
 
 /** Wavelengths or angles of one case at most; fewer in a large stack, so that a case stays a few MB of text. */
@@ -38,10 +38,8 @@ function casesOf({ document, axis }: RunInput, values: number[]): LibrarySolveCa
       return [toSolveCase(document, values, angleDeg)];
     case 'angle':
       return [toSolveCase(document, wavelengthNm, values)];
-    case 'thickness':
-      return values.map((value) =>
-        toSolveCase(withThickness(document, axis.layerId, value), wavelengthNm, angleDeg),
-      );
+    default:
+      return values.map((value) => toSolveCase(applyAxis(document, axis, value), wavelengthNm, angleDeg));
   }
 }
 
@@ -52,7 +50,7 @@ function piecesOf({ axis, document }: RunInput): number {
       return Math.max(1, Math.min(CASE_VALUES, Math.floor(CASE_SAMPLES / (2 + countItems(document.layers)))));
     case 'angle':
       return CASE_VALUES;
-    case 'thickness':
+    default:
       return CASES_AT_A_TIME;
   }
 }

@@ -31,7 +31,7 @@ export async function sendRunFile(
       const result = await RunResult.open(models, run);
       const readings = result.choose(file.readings);
       const { solverVersion, inputSha256, input } = run;
-      const header = describeResult(input.axis, readings, { solverVersion, inputSha256 });
+      const header = describeResult(input, readings, { solverVersion, inputSha256 });
       response.set({
         'Content-Type': 'application/octet-stream',
         'Content-Length': String(resultByteLength(header)),

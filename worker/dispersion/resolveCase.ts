@@ -27,7 +27,10 @@ export class ResolutionError extends Error {
 type Constants = Pick<MediumInput, 'index' | 'voigt'>;
 
 /** What may name a material: a medium or a part of a mixture. */
-type ByName = Pick<LibraryMediumInput, 'material' | 'version' | 'assumeConstant' | 'm' | 'index' | 'voigt'>;
+type ByName = Pick<
+  LibraryMediumInput,
+  'material' | 'version' | 'assumeConstant' | 'm' | 'index' | 'voigt' | 'voigtScale'
+>;
 
 /**
  * A case with numbers in place of library ids, one sample per wavelength where the case lists several.
@@ -108,7 +111,10 @@ class MediumResolver {
       constants = this.sample(id, version, assumeConstant, magnetized);
       this.known.set(key, constants);
     }
-    if (!Array.isArray(constants)) return { ...rest, ...constants };
+    if (!Array.isArray(constants)) {
+      const hasScaleOnly = rest.voigtScale !== undefined && constants.voigt === undefined;
+      return { ...rest, ...(hasScaleOnly && { voigtScale: undefined }), ...constants };
+    }
     for (const message of constants) this.issues.push({ path: `${path}.material`, message });
     return rest;
   }

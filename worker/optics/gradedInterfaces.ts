@@ -42,6 +42,11 @@ export function gradeSequence(
 }
 
 function partOf(medium: MediumInput): MixtureInput['parts'][0] {
-  const { index, voigt, m } = medium;
-  return { index, ...(voigt === undefined ? {} : { voigt }), ...(m === undefined ? {} : { m }) };
+  const { index, voigt, voigtScale, m } = medium;
+  return {
+    index,
+    ...(voigt === undefined ? {} : { voigt }),
+    ...(voigtScale === undefined ? {} : { voigtScale }),
+    ...(m === undefined ? {} : { m }),
+  };
 }

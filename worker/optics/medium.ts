@@ -1,7 +1,7 @@
-import type { Complex, Vector } from '../../shared/complex.ts';
+import type { Complex, ComplexInput, Vector } from '../../shared/complex.ts';
 import { toComplex } from '../../shared/complex.ts';
 import type { MediumInput, MixtureInput, TensorInput } from '../../shared/medium.ts';
-import { forwardRoot, minus, over, plus, times } from './complexNumber.ts';
+import { forwardRoot, minus, over, plus, scaled, times } from './complexNumber.ts';
 import type { Geometry } from './geometry.ts';
 import { bruggeman, maxwellGarnett } from './mixture.ts';
 import type { Rotation } from './rotation.ts';
@@ -72,7 +72,7 @@ export class Medium {
   constructor(input: MediumInput) {
     this.input = input;
     this.#index = samplesOf(input.index, toComplex);
-    this.#voigt = samplesOf(input.voigt, toComplex);
+    this.#voigt = samplesOf(input.voigt, scaledVoigt(input));
     this.#extraordinary = samplesOf(input.extraordinary, toComplex);
     this.#epsilon = samplesOf(input.epsilon, tensorFrom);
     this.m = input.m ?? [0, 0, 0];
@@ -200,6 +200,11 @@ export class Medium {
   }
 }
 
+/** Q as it counts: times `voigtScale`. */
+function scaledVoigt({ voigtScale = 1 }: Pick<MediumInput, 'voigtScale'>): (value: ComplexInput) => Complex {
+  return (value) => scaled(toComplex(value), voigtScale);
+}
+
 function tensorFrom(rows: TensorInput): Tensor {
   return Float64Array.from(rows.flatMap((row) => row.flatMap((value) => toComplex(value))));
 }
@@ -207,7 +212,7 @@ function tensorFrom(rows: TensorInput): Tensor {
 function partFrom(input: MixtureInput['parts'][0]): Part {
   return {
     index: samplesOf(input.index, toComplex) ?? [],
-    voigt: samplesOf(input.voigt, toComplex),
+    voigt: samplesOf(input.voigt, scaledVoigt(input)),
     m: input.m ?? [0, 0, 0],
   };
 }

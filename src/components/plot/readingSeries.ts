@@ -3,6 +3,7 @@ import type { ReadingName, SweepAxis } from '../../../shared/run.ts';
 import { formatNumber, fromDegrees } from '../../lib/format.ts';
 import type { AngleUnit } from '../../lib/format.ts';
 import type { PlotAxis, PlotSeries } from './plotTypes.ts';
+import { families } from './readingView.ts';
 import type { Family } from './readingView.ts';
 
 /** How each family looks everywhere: colour, dash, name at the curve. */
@@ -41,8 +42,7 @@ export function readingSeries(
     const { family, polarization } = readingDefinitions[name];
     const kind = axisOf(name);
     const values = columns[name];
-    if (kind === null || values === undefined || family === 'transmittance' || family === 'absorptance')
-      return [];
+    if (kind === null || values === undefined || !isFamily(family) || polarization === null) return [];
     const { word, width, ...look } = familyLooks[family];
     const plain = family === 'cross' ? crossNames[polarization] : word;
     return [
@@ -66,7 +66,11 @@ type AxisKind = (typeof axisOrder)[number];
 function axisOf(name: ReadingName): AxisKind | null {
   const { family } = readingDefinitions[name];
   if (family === 'rotation' || family === 'ellipticity') return 'angle';
-  return family === 'transmittance' || family === 'absorptance' ? null : family;
+  return isFamily(family) ? family : null;
+}
+
+function isFamily(family: string): family is Family {
+  return families.some((one) => one === family);
 }
 
 function scaled(values: ArrayLike<number>, kind: AxisKind, unit: AngleUnit): ArrayLike<number> {
@@ -111,6 +115,14 @@ export function sweepXAxis(axis: SweepAxis, layerName?: string): PlotAxis {
         log,
         format: (value) => `${plain(value)} nm`,
       };
+    case 'direction':
+      return { label: `direction of m in ${axis.plane} (deg)`, log, format: (value) => `${plain(value)}°` };
+    case 'voigtScale':
+      return { label: 'Q scaled by', log, format: plain };
+    case 'repeat':
+      return { label: 'repeats', log, format: plain };
+    case 'graded':
+      return { label: 'interface width (nm)', log, format: (value) => `${plain(value)} nm` };
   }
 }
 

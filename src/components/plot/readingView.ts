@@ -46,7 +46,7 @@ export function writeReadingView(view: ReadingView, search: URLSearchParams): vo
 export function readingsOf(shown: readonly Family[], light: Light): ReadingName[] {
   return readingNames.filter((name) => {
     const { family, polarization } = readingDefinitions[name];
-    return shown.some((one) => one === family) && light.includes(polarization);
+    return shown.some((one) => one === family) && (polarization === null || light.includes(polarization));
   });
 }
 

@@ -43,11 +43,13 @@ export class FastMedium {
     this.m = input.m ?? [0, 0, 0];
     const index = samplesOf(input.index ?? 1);
     const voigt = samplesOf(input.voigt ?? 0);
+    const { voigtScale = 1 } = input;
     const count = Math.max(index.length, voigt.length);
     this.samples = new Float64Array(4 * count);
     for (let i = 0; i < count; i++) {
       this.samples.set(toComplex(index[index.length === 1 ? 0 : i]!), 4 * i);
-      this.samples.set(toComplex(voigt[voigt.length === 1 ? 0 : i]!), 4 * i + 2);
+      const [re, im] = toComplex(voigt[voigt.length === 1 ? 0 : i]!);
+      this.samples.set([re * voigtScale, im * voigtScale], 4 * i + 2);
     }
     this.gyrotropic = this.m.some((part) => part !== 0) && this.samples.some((q, i) => i % 4 > 1 && q !== 0);
     this.even = this.m[0] * this.m[2] === 0;

@@ -76,7 +76,7 @@ function rowsOf(values: PlaceValues['values']): Row[] {
     if (values[name] === undefined) continue;
     const { family, label, anchor, polarization } = readingDefinitions[name];
     const row = rows.get(family) ?? { family, label: label.split(',')[0] ?? label, anchor, p: null, s: null };
-    rows.set(family, { ...row, [polarization]: name });
+    rows.set(family, { ...row, [polarization ?? 'p']: name });
   }
   return [...rows.values()];
 }

@@ -6,8 +6,10 @@ import { largestDifferences } from './largestDifferences.ts';
 function buildResult(rotation: number[], axis = [0, 30, 60]): RunResult {
   const swept = { kind: 'angle', from: 0, to: 60, points: axis.length, spacing: 'linear' } as const;
   return {
-    header: describeResult(swept, ['rotationP'], { solverVersion: '1', inputSha256: 'abc' }),
+    header: describeResult({ axis: swept }, ['rotationP'], { solverVersion: '1', inputSha256: 'abc' }),
     axis: Float64Array.from(axis),
+    second: null,
+    family: null,
     columns: { rotationP: Float64Array.from(rotation) },
   };
 }

@@ -21,6 +21,8 @@ function placeOf(axis: SweepAxis, document: StackDocument): number | null {
       return document.workingPoint.angleDeg;
     case 'thickness':
       return sweptLayer(axis, document)?.thicknessNm ?? null;
+    default:
+      return null;
   }
 }
 
@@ -45,7 +47,7 @@ export function pointAt(axis: SweepAxis, point: WorkingPoint, x: number): Workin
       return { ...point, wavelengthNm: x };
     case 'angle':
       return { ...point, angleDeg: x };
-    case 'thickness':
+    default:
       return point;
   }
 }
@@ -60,6 +62,14 @@ export function describePlace(axis: SweepAxis, x: number, layerName: string | nu
       return `angle ${value}°`;
     case 'thickness':
       return `thickness of ${layerName ?? 'the layer'} ${value} nm`;
+    case 'direction':
+      return `m at ${value}°`;
+    case 'voigtScale':
+      return `Q scaled by ${value}`;
+    case 'repeat':
+      return `${value} repeats`;
+    case 'graded':
+      return `interface width ${value} nm`;
   }
 }
 

@@ -12,7 +12,15 @@ type Props = {
   onChooseLayer: (layerId: string) => void;
 };
 
-const units = { wavelength: 'nm', angle: '°', thickness: 'nm' } as const;
+const units = {
+  wavelength: 'nm',
+  angle: '°',
+  thickness: 'nm',
+  direction: '°',
+  voigtScale: '',
+  repeat: '',
+  graded: 'nm',
+} as const;
 
 /** From, to, points and spacing of the swept quantity, in one line under its tab. */
 export function AxisForm({ axis, layers, onChange, onChooseLayer }: Props) {

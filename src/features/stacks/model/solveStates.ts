@@ -1,4 +1,5 @@
 import type { ReadingName, SweepAxis } from '../../../../shared/run.ts';
+import { applyAxis } from '../../../../shared/applyAxis.ts';
 import { readingDefinitions, readingOf } from '../../../../shared/readings.ts';
 import type { LibrarySolveCase, LibrarySolveRequest, SolveResponse } from '../../../../shared/solve.ts';
 import type { Polarization, StackDocument, WorkingPoint } from '../../../../shared/stack.ts';
@@ -23,7 +24,7 @@ export function pointRequest(document: StackDocument, point: WorkingPoint): Libr
   };
 }
 
-export type PointReadings = Record<ReadingName, number | null>;
+export type PointReadings = Partial<Record<ReadingName, number | null>>;
 
 /** The answer to `pointRequest`. */
 export function readPointResponse(response: SolveResponse): PointReadings {
@@ -83,6 +84,11 @@ function casesAlong(
       return grid.map((thicknessNm) =>
         caseOf(withLayer(document, axis.layerId, { thicknessNm }), point.wavelengthNm, point.angleDeg),
       );
+    default:
+      return grid.map((value) => {
+        const film = applyAxis({ ...document, workingPoint: point }, axis, value);
+        return inMagnetizationState(toSolveCase(film, point.wavelengthNm, point.angleDeg), state);
+      });
   }
 }
 

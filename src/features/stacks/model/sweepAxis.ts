@@ -44,6 +44,8 @@ export function defaultAxis(
       if (!layer || isBlock(layer)) return null;
       return { kind, layerId: layer.id, from: 0, to: roundUp(Math.max(2.5 * layer.thicknessNm, 1)), ...grid };
     }
+    default:
+      return null;
   }
 }
 
