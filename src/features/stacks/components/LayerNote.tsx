@@ -16,8 +16,8 @@ export function LayerNote({ note, label, onChange, crowded }: NoteProps) {
       onFocus={() => setFocused(true)}
       onBlur={() => setFocused(false)}
       onChange={(event) => onChange(event.target.value)}
-      className={`min-w-0 rounded-box border-0 bg-transparent px-1.5 py-[3px] text-note text-ink/80 ring-1 ring-transparent outline-none hover:ring-edge focus:bg-paper/85 focus:ring-2 focus:ring-accent ${
-        crowded ? 'w-14' : 'w-28'
+      className={`w-0 min-w-0 flex-1 rounded-box border-0 bg-transparent px-1.5 py-[3px] text-note text-ink/80 ring-1 ring-transparent outline-none hover:ring-edge focus:bg-paper/85 focus:ring-2 focus:ring-accent ${
+        crowded ? 'max-w-14' : 'max-w-36'
       } ${hidden ? 'placeholder:text-ink/0 group-hover:placeholder:text-ink/80' : ''}`}
     />
   );

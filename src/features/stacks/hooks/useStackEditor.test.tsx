@@ -89,6 +89,18 @@ describe('useStackEditor', () => {
     expect(result.current).toMatchObject({ dirty: false, version: 5, conflict: null });
   });
 
+  it('saves once however often it is pressed, and not at all when there is nothing to save', async () => {
+    const server = serve(buildStack());
+    const { result } = edit(buildStack());
+    await act(() => result.current.save());
+    expect(server.stored().version).toBe(4);
+    act(() => result.current.editDocument(thicker(4), null));
+    const { save } = result.current;
+    await act(() => Promise.all([save(), save()]));
+    expect(server.stored().version).toBe(5);
+    expect(result.current).toMatchObject({ dirty: false, conflict: null, saveError: null });
+  });
+
   it('keeps the edits when somebody else saved first, and saves them on top', async () => {
     const server = serve(buildStack());
     const { result } = edit(buildStack());

@@ -1,5 +1,5 @@
 import { useQueryClient } from '@tanstack/react-query';
-import { useCallback, useMemo, useState } from 'react';
+import { useCallback, useMemo, useRef, useState } from 'react';
 import type { Issue } from '../../../../shared/error.ts';
 import type { Stack, StackDocument } from '../../../../shared/stack.ts';
 import { ApiError } from '../../../lib/apiClient.ts';
@@ -30,6 +30,7 @@ export function useStackEditor(stack: Stack) {
   const [restored, setRestored] = useState(kept !== null && !sameDraft(kept.draft, base.draft));
   const [startedFrom, setStartedFrom] = useState(kept?.baseVersion ?? stack.version);
   const client = useQueryClient();
+  const underWay = useRef(false);
   const save = useSaveStack(stack.id);
   const copy = useSaveCopy(stack.groupId);
 
@@ -59,6 +60,9 @@ export function useStackEditor(stack: Stack) {
   );
 
   const saveOver = async (version: number) => {
+    // A second press before the first is answered would be a conflict with oneself.
+    if (!dirty || underWay.current) return;
+    underWay.current = true;
     setHistory(closeStep);
     try {
       const saved = await save.mutateAsync({ version, ...draft });
@@ -70,6 +74,8 @@ export function useStackEditor(stack: Stack) {
       if (error instanceof ApiError && error.status === 409) {
         await client.invalidateQueries({ queryKey: stackQuery(stack.id).queryKey });
       }
+    } finally {
+      underWay.current = false;
     }
   };
   const takeNewest = () => {
