@@ -8,7 +8,7 @@ import type { Quartic, RootPair } from './quartic.ts';
 import { quarticRoots, refinePair } from './quartic.ts';
 import type { FieldSystem, WaveEquation } from './waveEquation.ts';
 import type { Tensor } from './tensor.ts';
-import { gainOf } from './tensor.ts';
+import { gainOf, isPassive } from './tensor.ts';
 import { exchanged, fieldSystem, polarizationGap, secularQuartic, waveEquation } from './waveEquation.ts';
 
 /**
@@ -73,7 +73,9 @@ export class Modes {
     subtract(this.zStep, this.forward.z, this.backward.z);
     // 4 q^2 in an isotropic medium.
     const apart = modulus(times(determinant(this.zStep), system.b11));
-    this.inseparable = !(apart > INSEPARABLE * size);
+    // In a medium that gives energy a "forward" wave may grow: no pair is safe to carry through a thick layer.
+    const gives = !medium.scalarDiagonal && !isPassive(medium.tensor);
+    this.inseparable = gives || !(apart > INSEPARABLE * size);
     invert(this.zStepInverse, this.zStep);
   }
 
