@@ -108,6 +108,12 @@ function spreadOf(
   };
 }
 
+/** Whether intensities are added or averaged, so that no amplitude stands for the answer. */
+export function addsIntensities({ backside, spread }: StackDocument): boolean {
+  const { thicknessPercent = 0, divergenceDeg = 0, bandwidthNm = 0 } = spread ?? {};
+  return backside !== undefined || thicknessPercent > 0 || divergenceDeg > 0 || bandwidthNm > 0;
+}
+
 /** The last angle that an average over the divergence uses. */
 const GRAZING_DEG = 89.999;
 

@@ -7,8 +7,10 @@ import { Page, useDocumentTitle } from '../../components/Page.tsx';
 import { materialListQuery } from '../../features/materials/api/materialList.ts';
 import { KeepAsRun } from '../../features/runs/components/KeepAsRun.tsx';
 import { mayEdit, useMembership } from '../../features/session/hooks/useSession.ts';
+import { SignalPanels } from '../../features/signal/components/SignalPanels.tsx';
 import { stackQuery } from '../../features/stacks/api/stack.ts';
 import { StackWorkbench } from '../../features/stacks/components/StackWorkbench.tsx';
+import { profileHeights } from '../../features/stacks/model/depthScale.ts';
 import { paths } from '../../lib/paths.ts';
 import { rememberGroup } from '../../lib/rememberedGroup.ts';
 
@@ -55,6 +57,13 @@ export function StackPage() {
           onKept={({ id }) =>
             void navigate(generatePath(paths.run, { runId: id }), { state: { kept: true } })
           }
+        />
+      )}
+      explanation={({ onPoint, ...film }) => (
+        <SignalPanels
+          {...film}
+          heightsOf={profileHeights}
+          onAzimuth={(inputAzimuthDeg) => onPoint({ inputAzimuthDeg })}
         />
       )}
     />

@@ -1,13 +1,6 @@
 import type { LibrarySolveCase, LibrarySolveRequest, SolveOutput } from '../../../../shared/solve.ts';
 import type { StackDocument, WorkingPoint } from '../../../../shared/stack.ts';
-import { inMagnetizationState, toSolveCase } from '../../../../shared/stackCase.ts';
-
-/** Whether intensities are averaged or added, so that there is no one amplitude to take apart. */
-export function addsIntensities(document: StackDocument): boolean {
-  const { backside, spread } = document;
-  const { thicknessPercent = 0, divergenceDeg = 0, bandwidthNm = 0 } = spread ?? {};
-  return backside !== undefined || thicknessPercent > 0 || divergenceDeg > 0 || bandwidthNm > 0;
-}
+import { addsIntensities, inMagnetizationState, toSolveCase } from '../../../../shared/stackCase.ts';
 
 /** One request for all that explains the readings: the film as given, with m = 0 and reversed, in this order. */
 export function explainRequest(document: StackDocument, point: WorkingPoint): LibrarySolveRequest {

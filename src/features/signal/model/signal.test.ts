@@ -1,8 +1,8 @@
 import { describe as group, expect, it } from 'vitest';
 import type { StackDocument } from '../../../../shared/stack.ts';
-import { toSolveCase } from '../../../../shared/stackCase.ts';
+import { addsIntensities, toSolveCase } from '../../../../shared/stackCase.ts';
 import { arrowChain, namedArrows } from './arrowChain.ts';
-import { addsIntensities, explainRequest } from './explainRequest.ts';
+import { explainRequest } from './explainRequest.ts';
 import { filmLayers } from './filmLayers.ts';
 import type { DescribeMedium } from './filmLayers.ts';
 import { magneticStates, stepRequest } from './magneticStates.ts';

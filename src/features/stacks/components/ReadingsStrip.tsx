@@ -4,22 +4,33 @@ import { SeriesMark } from '../../../components/plot/SeriesMark.tsx';
 import { ApiError } from '../../../lib/apiClient.ts';
 import type { AngleUnit } from '../../../lib/format.ts';
 import type { LiveReadings } from '../hooks/useReadings.ts';
+import type { CeilingCell } from '../model/stripReadings.ts';
 import { stripReadings } from '../model/stripReadings.ts';
+import { CeilingReading } from './CeilingReading.tsx';
 import { ReadingCell } from './ReadingCell.tsx';
 
-type Props = { live: LiveReadings; input: Polarization; transverse: boolean; unit: AngleUnit };
+type Props = {
+  live: LiveReadings;
+  input: Polarization;
+  transverse: boolean;
+  unit: AngleUnit;
+  ceiling: CeilingCell | null;
+  /** Said in place of the cross-polarized amplitude where there is none. */
+  averaged: boolean;
+};
 
 /** The readings at the working point, large for the input light. */
-export function ReadingsStrip({ live, input, transverse, unit }: Props) {
+export function ReadingsStrip({ live, input, transverse, unit, ceiling, averaged }: Props) {
   const cells = stripReadings(live.readings, input, transverse, unit);
   const spoken = cells.map(({ label, value, unit: own }) => `${label} ${value ?? 'none'} ${own}`).join(', ');
   return (
     <section aria-label="Readings at the working point">
-      <div className="card grid grid-cols-1 overflow-hidden sm:grid-cols-4" aria-busy={live.pending}>
+      <div className="card grid grid-cols-1 overflow-hidden sm:grid-cols-5" aria-busy={live.pending}>
         {cells.map((cell) => (
           <ReadingCell
             key={cell.family}
             {...cell}
+            {...(averaged && cell.family === 'cross' ? { other: 'intensities are averaged' } : {})}
             mark={
               cell.family === 'rotation' || cell.family === 'ellipticity' ? (
                 <SeriesMark series={familyLooks[cell.family]} />
@@ -28,6 +39,7 @@ export function ReadingsStrip({ live, input, transverse, unit }: Props) {
             pending={live.pending || live.error !== null}
           />
         ))}
+        <CeilingReading ceiling={ceiling} pending={live.pending || live.error !== null} />
       </div>
       <p className="sr-only" role="status">
         {live.pending || live.error ? '' : spoken}

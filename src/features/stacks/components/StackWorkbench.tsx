@@ -1,22 +1,26 @@
-import { useMemo, useState } from 'react';
+import { useCallback, useMemo, useState } from 'react';
 import type { ReactNode } from 'react';
 import type { Issue } from '../../../../shared/error.ts';
 import type { MaterialSummary } from '../../../../shared/material.ts';
 import type { ReadingName, SweepAxis } from '../../../../shared/run.ts';
-import type { Stack, StackDocument, WorkingPoint } from '../../../../shared/stack.ts';
+import type { Stack, StackDocument, StackMedium, WorkingPoint } from '../../../../shared/stack.ts';
+import { addsIntensities } from '../../../../shared/stackCase.ts';
 import { Button } from '../../../components/Button.tsx';
 import { families, readingsOf } from '../../../components/plot/readingView.ts';
 import { ApiError } from '../../../lib/apiClient.ts';
+import type { AngleUnit } from '../../../lib/format.ts';
 import { useEditorKeys } from '../hooks/useEditorKeys.ts';
 import { useReadings } from '../hooks/useReadings.ts';
 import { useStackEditor } from '../hooks/useStackEditor.ts';
 import { useView } from '../hooks/useView.ts';
 import { issueTarget } from '../model/issueTarget.ts';
-import { isTransverse, workingVectors } from '../model/magnetization.ts';
-import { filmCautions } from '../model/media.ts';
+import { isTransverse, lengthOf, workingVectors } from '../model/magnetization.ts';
+import { filmCautions, mediumClass, mediumName } from '../model/media.ts';
 import type { Materials } from '../model/media.ts';
 import { kerrAngles } from '../model/solveStates.ts';
+import { ceilingCell } from '../model/stripReadings.ts';
 import { axisOf, samePoint, usualFamilies } from '../model/viewState.ts';
+import { classFill } from './classColours.ts';
 import { EditorNotices } from './EditorNotices.tsx';
 import { FilmDrawing } from './FilmDrawing.tsx';
 import { FilmHeader } from './FilmHeader.tsx';
@@ -35,6 +39,16 @@ export type KeptSweep = {
   problem: boolean;
 };
 
+/** The film at its working point, for what explains its readings. */
+export type ExplainedFilm = {
+  document: StackDocument;
+  point: WorkingPoint;
+  /** Name and fill of a medium on the drawing. */
+  describe: (medium: StackMedium) => { name: string; fill: string };
+  unit: AngleUnit;
+  onPoint: (change: Partial<WorkingPoint>) => void;
+};
+
 type Props = {
   stack: Stack;
   library: readonly MaterialSummary[];
@@ -42,13 +56,15 @@ type Props = {
   onCopied: (stack: Stack) => void;
   /** The button that keeps the sweep on the page as a run. */
   keepButton: (sweep: KeptSweep) => ReactNode;
+  /** Below the plot: where the readings come from. */
+  explanation: (film: ExplainedFilm) => ReactNode;
 };
 
 /** Up to here a run stores every reading that the page can show; above, those that are drawn. */
 const ALL_READINGS_UP_TO = 20_000;
 
 /** The heart of the program: the film on the left, its readings and the current question on the right. */
-export function StackWorkbench({ stack, library, mayEdit, onCopied, keepButton }: Props) {
+export function StackWorkbench({ stack, library, mayEdit, onCopied, keepButton, explanation }: Props) {
   const materials = useMemo<Materials>(() => new Map(library.map((one) => [one.id, one])), [library]);
   const editor = useStackEditor(stack);
   const [showsNewer, setShowsNewer] = useState(false);
@@ -59,7 +75,16 @@ export function StackWorkbench({ stack, library, mayEdit, onCopied, keepButton }
   const axis = useMemo(() => axisOf(view, film, materials), [view, film, materials]);
   const rangeNm = wavelengthRange(point, axis);
   const live = useReadings(film, point);
-  const transverse = useMemo(() => isTransverse(workingVectors(film, point.magnetization)), [film, point]);
+  const vectors = useMemo(() => workingVectors(film, point.magnetization), [film, point]);
+  const transverse = isTransverse(vectors);
+  const averaged = addsIntensities(film);
+  const describe = useCallback(
+    (medium: StackMedium) => ({
+      name: mediumName(medium, materials),
+      fill: classFill[mediumClass(medium, materials)],
+    }),
+    [materials],
+  );
   const solveIssues = live.error instanceof ApiError ? live.error.issues : noIssues;
   const issues = useMemo(() => [...solveIssues, ...editor.saveIssues], [solveIssues, editor.saveIssues]);
   const canEdit = mayEdit && newer === null;
@@ -128,7 +153,18 @@ export function StackWorkbench({ stack, library, mayEdit, onCopied, keepButton }
             )}
           </span>
         </div>
-        <ReadingsStrip live={live} input={point.input} transverse={transverse} unit={view.unit} />
+        <ReadingsStrip
+          live={live}
+          input={point.input}
+          transverse={transverse}
+          unit={view.unit}
+          ceiling={ceilingCell(
+            live.readings,
+            vectors.some((m) => lengthOf(m) > 0),
+            averaged,
+          )}
+          averaged={averaged}
+        />
         <div className="mt-4">
           <SweepPanel
             title={editor.draft.name}
@@ -143,6 +179,9 @@ export function StackWorkbench({ stack, library, mayEdit, onCopied, keepButton }
             onView={setView}
             keep={mayEdit ? keep : null}
           />
+        </div>
+        <div className="mt-4">
+          {explanation({ document: film, point, describe, unit: view.unit, onPoint: setPoint })}
         </div>
       </div>
       <LeaveGuard dirty={editor.dirty && mayEdit} />

@@ -1,6 +1,6 @@
 import fc from 'fast-check';
 import { describe, expect, it } from 'vitest';
-import { formatDepth, layerHeights } from './depthScale.ts';
+import { formatDepth, layerHeights, profileHeights } from './depthScale.ts';
 
 describe('layerHeights', () => {
   it('shows 0.4 nm and 500 nm on one drawing', () => {
@@ -38,5 +38,14 @@ describe('formatDepth', () => {
     expect(formatDepth(114)).toBe('114');
     expect(formatDepth(500_000)).toBe('500 µm');
     expect(formatDepth(1e6)).toBe('1 mm');
+  });
+});
+
+describe('profileHeights', () => {
+  it('keeps a thousand layers within the room, on the scale of the drawing', () => {
+    const heights = profileHeights(Array<number>(1000).fill(0.4), 210, 0.1);
+    expect(heights.reduce((sum, height) => sum + height, 0)).toBeCloseTo(210, 6);
+    const [thin, thick, thicker] = profileHeights([0, 2, 6], 30, 5);
+    expect((thicker! - thin!) / (thick! - thin!)).toBeCloseTo(2, 9);
   });
 });

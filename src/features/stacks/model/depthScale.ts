@@ -1,7 +1,28 @@
-/** Rows lower than this cannot carry their numbers. */
+/** Rows of the editor lower than this cannot carry their numbers. */
 const LEAST_PX = 34;
 /** The scale is linear for layers much thinner than this and logarithmic above: 1 nm and 500 nm are both seen. */
 const KNEE_NM = 2;
+
+/** Px of a unit of the compressed scale: most where few layers do not fill the room by force, least in the editor. */
+const MOST_PX = 13;
+const EDITOR_PX = 3;
+
+function compressed(thicknessNm: number): number {
+  return Math.log2(1 + Math.max(0, thicknessNm) / KNEE_NM);
+}
+
+function heightsWithin(
+  thicknessesNm: readonly number[],
+  roomPx: number,
+  leastPx: number,
+  leastPerUnit: number,
+): number[] {
+  const units = thicknessesNm.map(compressed);
+  const total = units.reduce((sum, value) => sum + value, 0);
+  const spare = (roomPx - leastPx * units.length) / total;
+  const pxPerUnit = total > 0 ? Math.min(MOST_PX, Math.max(leastPerUnit, spare)) : 0;
+  return units.map((value) => leastPx + pxPerUnit * value);
+}
 
 /**
  * Heights of layers on the compressed depth scale: the same monotone function of thickness for every layer of the
@@ -12,11 +33,12 @@ const KNEE_NM = 2;
  * @returns px, one a layer
  */
 export function layerHeights(thicknessesNm: readonly number[], roomPx: number): number[] {
-  const compressed = thicknessesNm.map((thickness) => Math.log2(1 + Math.max(0, thickness) / KNEE_NM));
-  const total = compressed.reduce((sum, value) => sum + value, 0);
-  const spare = roomPx - LEAST_PX * thicknessesNm.length;
-  const pxPerUnit = total > 0 ? Math.min(13, Math.max(3, spare / total)) : 0;
-  return compressed.map((value) => Math.round(LEAST_PX + pxPerUnit * value));
+  return heightsWithin(thicknessesNm, roomPx, LEAST_PX, EDITOR_PX).map(Math.round);
+}
+
+/** The same scale for a figure beside the drawing, which carries no numbers: every layer, however many, in the room. */
+export function profileHeights(thicknessesNm: readonly number[], roomPx: number, leastPx: number): number[] {
+  return heightsWithin(thicknessesNm, roomPx, leastPx, 0);
 }
 
 /** A depth as printed beside the drawing: as many digits as the thicknesses have, at most three decimals. */

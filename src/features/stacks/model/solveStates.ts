@@ -3,7 +3,7 @@ import { applyAxis } from '../../../../shared/applyAxis.ts';
 import { readingDefinitions, readingOf } from '../../../../shared/readings.ts';
 import type { LibrarySolveCase, LibrarySolveRequest, SolveResponse } from '../../../../shared/solve.ts';
 import type { Polarization, StackDocument, WorkingPoint } from '../../../../shared/stack.ts';
-import { inMagnetizationState, toSolveCase } from '../../../../shared/stackCase.ts';
+import { addsIntensities, inMagnetizationState, toSolveCase } from '../../../../shared/stackCase.ts';
 import type { MagnetizationState } from '../../../../shared/stackCase.ts';
 import { withLayer } from './items.ts';
 
@@ -19,34 +19,33 @@ export function statesFor(readings: readonly ReadingName[]): MagnetizationState[
 /** One request for everything the readings strip shows: the film as given, with m = 0 and reversed. */
 export function pointRequest(document: StackDocument, point: WorkingPoint): LibrarySolveRequest {
   const given = toSolveCase(document, point.wavelengthNm, point.angleDeg, point.magnetization);
-  return {
-    cases: (['given', 'zero', 'reversed'] as const).map((state) => inMagnetizationState(given, state)),
-  };
+  const cases = (['given', 'zero', 'reversed'] as const).map((state) => inMagnetizationState(given, state));
+  if (!addsIntensities(document)) cases[0] = { ...given, outputs: ['ceiling'] };
+  return { cases };
 }
 
 export type PointReadings = Partial<Record<ReadingName, number | null>>;
 
+/** What the strip shows, and the share of the ceiling. */
+const stripNames = [
+  'rotationP',
+  'ellipticityP',
+  'rotationS',
+  'ellipticityS',
+  'reflectanceP',
+  'reflectanceS',
+  'crossSp',
+  'crossPs',
+  'contrastP',
+  'contrastS',
+  'ceilingShare',
+] as const;
+
 /** The answer to `pointRequest`. */
 export function readPointResponse(response: SolveResponse): PointReadings {
   const [given, zero, reversed] = response.results.map((result) => result.points[0]);
-  const read = (name: ReadingName) =>
-    given && zero && reversed ? readingOf(name, given, zero, reversed) : null;
-  return {
-    rotationP: read('rotationP'),
-    ellipticityP: read('ellipticityP'),
-    rotationS: read('rotationS'),
-    ellipticityS: read('ellipticityS'),
-    reflectanceP: read('reflectanceP'),
-    reflectanceS: read('reflectanceS'),
-    crossSp: read('crossSp'),
-    crossPs: read('crossPs'),
-    contrastP: read('contrastP'),
-    contrastS: read('contrastS'),
-    transmittanceP: read('transmittanceP'),
-    transmittanceS: read('transmittanceS'),
-    absorptanceP: read('absorptanceP'),
-    absorptanceS: read('absorptanceS'),
-  };
+  if (!given || !zero || !reversed) return {};
+  return Object.fromEntries(stripNames.map((name) => [name, readingOf(name, given, zero, reversed)]));
 }
 
 export type Sweep = { axis: SweepAxis; grid: readonly number[]; readings: readonly ReadingName[] };

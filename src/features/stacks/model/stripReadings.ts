@@ -22,6 +22,27 @@ const names: Record<StripReading['family'], { p: ReadingName; s: ReadingName; la
   contrast: { p: 'contrastP', s: 'contrastS', label: 'Transverse contrast' },
 };
 
+/** The fifth cell: how much of what the magnet allows is reached, or why there is nothing to say. */
+export type CeilingCell = { percent: number } | { reason: string };
+
+/**
+ * @param magnetized whether any layer has an m other than 0
+ * @param averaged whether intensities are added or averaged
+ */
+export function ceilingCell(
+  readings: PointReadings | null,
+  magnetized: boolean,
+  averaged: boolean,
+): CeilingCell | null {
+  if (averaged) return { reason: 'intensities are averaged: no one amplitude' };
+  if (!magnetized) return { reason: 'no layer is magnetized' };
+  if (readings === null) return null;
+  const share = readings.ceilingShare ?? null;
+  return share === null
+    ? { reason: 'no ceiling: the magnet does not absorb here' }
+    : { percent: 100 * share };
+}
+
 /**
  * What the strip shows for the input light, the other light in small. For purely transverse m the contrast takes
  * the place of the rotation, which is zero then.

@@ -45,6 +45,7 @@ function readPoint(search: URLSearchParams, saved: WorkingPoint): WorkingPoint {
     wavelengthNm: numberIn(search, 'wl'),
     angleDeg: numberIn(search, 'angle'),
     input: search.get('input'),
+    inputAzimuthDeg: numberIn(search, 'azimuth'),
     magnetization:
       m === 'drawn' || m === 'reversed'
         ? { mode: m }
@@ -53,7 +54,10 @@ function readPoint(search: URLSearchParams, saved: WorkingPoint): WorkingPoint {
           : null,
   };
   const { shape } = workingPointSchema;
+  const inputAzimuthDeg =
+    shape.inputAzimuthDeg.safeParse(asked.inputAzimuthDeg).data ?? saved.inputAzimuthDeg;
   return {
+    ...(inputAzimuthDeg === undefined ? {} : { inputAzimuthDeg }),
     wavelengthNm: shape.wavelengthNm.safeParse(asked.wavelengthNm).data ?? saved.wavelengthNm,
     angleDeg: shape.angleDeg.safeParse(asked.angleDeg).data ?? saved.angleDeg,
     input: shape.input.safeParse(asked.input).data ?? saved.input,
@@ -73,6 +77,9 @@ export function writeView(view: ViewState, saved: WorkingPoint): URLSearchParams
   if (point.wavelengthNm !== saved.wavelengthNm) search.set('wl', String(point.wavelengthNm));
   if (point.angleDeg !== saved.angleDeg) search.set('angle', String(point.angleDeg));
   if (point.input !== saved.input) search.set('input', point.input);
+  if (point.inputAzimuthDeg !== undefined && point.inputAzimuthDeg !== saved.inputAzimuthDeg) {
+    search.set('azimuth', String(point.inputAzimuthDeg));
+  }
   if (!sameMagnetization(point, saved)) {
     const { magnetization } = point;
     search.set('m', magnetization.mode === 'direction' ? magnetization.m.join(',') : magnetization.mode);
@@ -94,6 +101,7 @@ export function samePoint(a: WorkingPoint, b: WorkingPoint): boolean {
     a.wavelengthNm === b.wavelengthNm &&
     a.angleDeg === b.angleDeg &&
     a.input === b.input &&
+    a.inputAzimuthDeg === b.inputAzimuthDeg &&
     sameMagnetization(a, b)
   );
 }
