@@ -75,7 +75,7 @@ export class Modes {
     const apart = modulus(times(determinant(this.zStep), system.b11));
     // In a medium that gives energy a "forward" wave may grow: no pair is safe to carry through a thick layer.
     const gives = !medium.scalarDiagonal && !isPassive(medium.tensor);
-    this.inseparable = gives || !(apart > INSEPARABLE * size);
+    this.inseparable = gives || !(apart > ALIKE * size);
     invert(this.zStepInverse, this.zStep);
   }
 
@@ -104,6 +104,9 @@ export class Modes {
 
 /** Relative size below which a determinant is taken for zero; the digits lost at this size are the last three. */
 const INSEPARABLE = 1e-5;
+
+/** Beams closer than this, as 4 q^2 against the permittivity, are too much alike: near a critical angle of the layer. */
+const ALIKE = 1e-2;
 
 function largest(tensor: Tensor): number {
   let size = 0;
