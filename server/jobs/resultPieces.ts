@@ -17,7 +17,7 @@ export function* resultPieces(
   );
   let waiting: Buffer[] = [Buffer.from(header)];
   let bytes = header.length;
-  for (const column of result.columns) {
+  for (const column of [...result.axes, ...result.columns]) {
     const whole = Buffer.from(column.buffer, column.byteOffset, column.byteLength);
     for (let start = 0; start < whole.length;) {
       const part = whole.subarray(start, start + PIECE_BYTES - bytes);

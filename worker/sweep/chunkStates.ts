@@ -1,95 +1,138 @@
 import type { ReadingSource } from '../../shared/readings.ts';
-import type { SolveCase } from '../../shared/solve.ts';
+import type { SolveCase, SolveOutput } from '../../shared/solve.ts';
 import { inMagnetizationState } from '../../shared/stackCase.ts';
 import type { MagnetizationState } from '../../shared/stackCase.ts';
 import { refineInterfaces } from '../optics/refine.ts';
 import { solveCasePoints } from '../optics/solveRequest.ts';
+import type { SolvedPoint } from '../optics/stackSolver.ts';
 import { StackSolver } from '../optics/stackSolver.ts';
 import type { StatesNeeded } from './magnetizationStates.ts';
-import { SolvedReadings, reflectsWeakly, unturned } from './solvedReadings.ts';
+import type { PointBatch } from './pointBatch.ts';
+import type { PartsNeeded } from './solvedReadings.ts';
+import { SolvedReadings, isWeak, unturned } from './solvedReadings.ts';
 
 /** One point in the states that its readings compare; overwritten by the next point. */
 export type PointStates = Record<MagnetizationState, ReadingSource>;
 
-/** Where a point stands; `thicknessNm` of the swept layer when there is one. */
-export type PointPlace = { wavelengthIndex: number; angleDeg: number; thicknessNm: number | null };
+/** What the readings of a sweep need to be solved for. */
+export type Needs = { states: StatesNeeded; parts: PartsNeeded };
+
+/** Solves points of one stack in the states that its readings compare. */
+export type States = {
+  /** Points to hand over at a time. */
+  readonly batchPoints: number;
+  /** @param take called for each point of the batch, in order */
+  solve(batch: PointBatch, take: (point: number, states: PointStates) => void): void;
+};
 
 /** A stack in one magnetization state, compiled when it is first solved. */
 class StateSolver {
-  readonly readings = new SolvedReadings();
+  readonly readings: SolvedReadings;
   readonly #resolved: SolveCase;
   readonly #state: MagnetizationState;
   readonly #sweptLayer: number[] | null;
   #solver: StackSolver | null = null;
 
-  constructor(resolved: SolveCase, state: MagnetizationState, sweptLayer: number[] | null) {
+  constructor(resolved: SolveCase, state: MagnetizationState, sweptLayer: number[] | null, needs: Needs) {
+    this.readings = new SolvedReadings(needs.parts);
     this.#resolved = resolved;
     this.#state = state;
     this.#sweptLayer = sweptLayer;
   }
 
-  solve({ wavelengthIndex, angleDeg, thicknessNm }: PointPlace): ReturnType<StackSolver['solve']> {
+  solve({ wavelengthIndex, anglesDeg, thicknessNm }: PointBatch, point: number): SolvedPoint {
     this.#solver ??= new StackSolver(inMagnetizationState(this.#resolved, this.#state));
-    if (thicknessNm !== null) this.#solver.setThickness(this.#sweptLayer!, thicknessNm);
-    return this.#solver.solve(wavelengthIndex, angleDeg);
+    if (this.#sweptLayer && thicknessNm) this.#solver.setThickness(this.#sweptLayer, thicknessNm[point]!);
+    const solved = this.#solver.solve(wavelengthIndex[point]!, anglesDeg[point]!);
+    this.readings.take(solved);
+    if (this.#state === 'given') {
+      this.readings.takeCeiling(this.#solver.stack, wavelengthIndex[point]!, anglesDeg[point]!);
+    }
+    return solved;
   }
 }
 
 /** Sharp layers in coherent light: solvers compiled once, no new objects at each point. */
-export class SharpStates {
+export class SharpStates implements States {
+  readonly batchPoints = 1;
   readonly #given: StateSolver;
   readonly #zero: StateSolver;
   readonly #reversed: StateSolver;
-  readonly #needed: StatesNeeded;
+  readonly #needs: Needs;
   readonly #states: PointStates = { given: unturned, zero: unturned, reversed: unturned };
 
   /** @param sweptLayer path of the layer whose thickness changes */
-  constructor(resolved: SolveCase, needed: StatesNeeded, sweptLayer: number[] | null) {
-    this.#needed = needed;
-    this.#given = new StateSolver(resolved, 'given', sweptLayer);
-    this.#zero = new StateSolver(resolved, 'zero', sweptLayer);
-    this.#reversed = new StateSolver(resolved, 'reversed', sweptLayer);
+  constructor(resolved: SolveCase, needs: Needs, sweptLayer: number[] | null) {
+    this.#needs = needs;
+    this.#given = new StateSolver(resolved, 'given', sweptLayer, needs);
+    this.#zero = new StateSolver(resolved, 'zero', sweptLayer, needs);
+    this.#reversed = new StateSolver(resolved, 'reversed', sweptLayer, needs);
   }
 
-  solve(place: PointPlace): PointStates {
-    const { zero, reversed } = this.#needed;
-    const given = this.#given.solve(place);
-    const solvesZero = zero === 'always' || (zero === 'weak reflection' && reflectsWeakly(given));
-    this.#states.given = this.#given.readings.take(given);
-    this.#states.zero = solvesZero ? this.#zero.readings.take(this.#zero.solve(place)) : unturned;
-    this.#states.reversed = reversed
-      ? this.#reversed.readings.take(this.#reversed.solve(place))
-      : this.#states.given;
-    return this.#states;
+  solve(batch: PointBatch, take: (point: number, states: PointStates) => void): void {
+    for (let point = 0; point < batch.anglesDeg.length; point += 1) {
+      this.#solvePoint(batch, point);
+      take(point, this.#states);
+    }
+  }
+
+  #solvePoint(batch: PointBatch, point: number): void {
+    const states = this.#states;
+    const { zero, reversed } = this.#needs.states;
+    const { r, t } = this.#given.solve(batch, point);
+    states.given = this.#given.readings;
+    states.zero = unturned;
+    states.reversed = states.given;
+    if (zero === 'always' || (zero === 'weak beam' && isWeak(r, t, this.#needs.parts))) {
+      this.#zero.solve(batch, point);
+      states.zero = this.#zero.readings;
+    }
+    if (reversed) {
+      this.#reversed.solve(batch, point);
+      states.reversed = this.#reversed.readings;
+    }
   }
 }
 
 /** Any stack, by the solver's general entry, one point after the other. */
-export class GeneralStates {
+export class GeneralStates implements States {
+  readonly batchPoints = 1;
   readonly #given: Iterator<ReadingSource>;
   readonly #zero: Iterator<ReadingSource> | null;
   readonly #reversed: Iterator<ReadingSource> | null;
 
-  /** @param cases whose points, in order, are those of the chunk; asked for once for each state */
-  constructor(cases: () => Iterable<SolveCase>, needed: StatesNeeded) {
-    this.#given = pointsOf(cases(), 'given');
-    this.#zero = needed.zero === 'never' ? null : pointsOf(cases(), 'zero');
-    this.#reversed = needed.reversed ? pointsOf(cases(), 'reversed') : null;
+  /** @param resolved its points, wavelength outermost, are those of the batches to come */
+  constructor(resolved: SolveCase, needs: Needs) {
+    // Interfaces are refined for the given state and cut alike in the others: only the magnetization must differ.
+    const refinement = refineInterfaces(resolved);
+    const outputs = outputsOf(resolved, needs.parts);
+    const pointsOf = (state: MagnetizationState) =>
+      solveCasePoints({ ...inMagnetizationState(resolved, state), outputs }, refinement);
+    this.#given = pointsOf('given');
+    this.#zero = needs.states.zero === 'never' ? null : pointsOf('zero');
+    this.#reversed = needs.states.reversed ? pointsOf('reversed') : null;
   }
 
-  solve(): PointStates {
-    const given = nextOf(this.#given);
-    return {
-      given,
-      zero: this.#zero ? nextOf(this.#zero) : unturned,
-      reversed: this.#reversed ? nextOf(this.#reversed) : given,
-    };
+  solve(batch: PointBatch, take: (point: number, states: PointStates) => void): void {
+    for (let point = 0; point < batch.anglesDeg.length; point += 1) {
+      const given = nextOf(this.#given);
+      take(point, {
+        given,
+        zero: this.#zero ? nextOf(this.#zero) : unturned,
+        reversed: this.#reversed ? nextOf(this.#reversed) : given,
+      });
+    }
   }
 }
 
-/** Interfaces are refined for the given state and cut alike in the others: only the magnetization must differ. */
-function* pointsOf(cases: Iterable<SolveCase>, state: MagnetizationState): Generator<ReadingSource, void> {
-  for (const one of cases) yield* solveCasePoints(inMagnetizationState(one, state), refineInterfaces(one));
+/** Intensities have neither amplitudes nor a ceiling. */
+function outputsOf({ average, backside }: SolveCase, parts: PartsNeeded): SolveOutput[] {
+  const addsIntensities = average !== undefined || backside !== undefined;
+  return [
+    ...(parts.mueller ? (['mueller'] as const) : []),
+    ...(parts.faraday && !addsIntensities ? (['faraday'] as const) : []),
+    ...(parts.ceiling && !addsIntensities ? (['ceiling'] as const) : []),
+  ];
 }
 
 function nextOf(points: Iterator<ReadingSource>): ReadingSource {

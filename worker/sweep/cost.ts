@@ -10,11 +10,26 @@ export function microsecondsPerPoint(layers: Item[]): number {
   return 2 + 1.2 * countExpanded(layers);
 }
 
+/** ... by the fast path; a repeated block is composed in few steps. */
+export function fastMicrosecondsPerPoint(layers: Item[]): number {
+  return 0.15 + 0.05 * countWritten(layers);
+}
+
+/** Making the solver of one stack, beside solving. */
+export function microsecondsPerStack(layers: Item[]): number {
+  return 50 + 10 * countWritten(layers);
+}
+
 function countExpanded(items: Item[]): number {
   return items.reduce<number>(
     (sum, item) => sum + ('layers' in item ? item.repeat * countExpanded(item.layers) : 1),
     0,
   );
+}
+
+/** Layers as written, blocks not expanded. */
+export function countWritten(items: Item[]): number {
+  return items.reduce<number>((sum, item) => sum + ('layers' in item ? countWritten(item.layers) : 1), 0);
 }
 
 /** ... and of a whole request. */

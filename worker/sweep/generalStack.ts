@@ -1,4 +1,6 @@
-import type { StackDocument, StackItem, StackLayer } from '../../shared/stack.ts';
+import type { SweepAxes } from '../../shared/run.ts';
+import { axesOf } from '../../shared/runAxes.ts';
+import type { StackDocument, StackItem, StackLayer, StackMedium } from '../../shared/stack.ts';
 
 /** Nodes of one average (shared/spread.ts). */
 const NODES = 7;
@@ -6,22 +8,45 @@ const NODES = 7;
 const GRADED_COST = 30;
 
 /**
- * Whether a stack has more than sharp layers in coherent light: averages, a thick slab, graded interfaces, or
- * layers that are solved as several. Such a stack goes through the solver's general entry.
+ * Whether a stack has more than sharp layers in coherent light: averages, a thick slab or graded interfaces. Such a
+ * stack goes through the solver's general entry.
  */
 export function isGeneral(document: StackDocument): boolean {
-  return (
-    document.backside !== undefined ||
-    averageCost(document) > 1 ||
-    isGraded(document) ||
-    anyLayer(document.layers, ({ dead, oxide }) => dead !== undefined || oxide !== undefined)
+  return document.backside !== undefined || averageCost(document) > 1 || isGraded(document);
+}
+
+/** ... or it is one somewhere on the axes. */
+export function isGeneralSomewhere({ document, ...axes }: SweepAxes & { document: StackDocument }): boolean {
+  return isGeneral(document) || axesOf(axes).some(({ axis }) => axis.kind === 'graded');
+}
+
+/** Layers with an oxide or dead parts are solved as several: a layer of the case is none of the document then. */
+export function splitsLayers(document: StackDocument): boolean {
+  return anyLayer(document.layers, ({ dead, oxide }) => dead !== undefined || oxide !== undefined);
+}
+
+/** Media whose p and s light may mix at m = 0. Second order in m is not among them: it vanishes with m. */
+export function turnsLightUnmagnetized(document: StackDocument): boolean {
+  return anyMedium(document, (medium) => medium.epsilon !== undefined || medium.extraordinary !== undefined);
+}
+
+/** Whether every medium has a scalar eps_d, as the fast path needs it. */
+export function hasScalarMedia(document: StackDocument): boolean {
+  return !anyMedium(
+    document,
+    (medium) =>
+      medium.epsilon !== undefined ||
+      medium.extraordinary !== undefined ||
+      medium.quadratic !== undefined ||
+      medium.mixture !== undefined,
   );
 }
 
 /** How many times the work of one point with sharp layers a point of this stack is, roughly. */
-export function generalCost(document: StackDocument): number {
+export function generalCost({ document, ...axes }: SweepAxes & { document: StackDocument }): number {
   const slab = document.backside ? 2 : 1;
-  return slab * averageCost(document) * (isGraded(document) ? GRADED_COST : 1);
+  const graded = isGraded(document) || axesOf(axes).some(({ axis }) => axis.kind === 'graded');
+  return slab * averageCost(document) * (graded ? GRADED_COST : 1);
 }
 
 function averageCost({ spread }: StackDocument): number {
@@ -32,6 +57,14 @@ function averageCost({ spread }: StackDocument): number {
 function isGraded(document: StackDocument): boolean {
   return (
     (document.substrateGradedNm ?? 0) > 0 || anyLayer(document.layers, ({ gradedNm = 0 }) => gradedNm > 0)
+  );
+}
+
+function anyMedium(document: StackDocument, holds: (medium: StackMedium) => boolean): boolean {
+  return (
+    holds(document.incident) ||
+    holds(document.substrate) ||
+    anyLayer(document.layers, ({ medium, oxide }) => holds(medium) || (oxide ? holds(oxide.medium) : false))
   );
 }
 

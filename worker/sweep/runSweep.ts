@@ -1,3 +1,5 @@
+import { axesOf, pointCountOf } from '../../shared/runAxes.ts';
+import { axisValues } from './axisValues.ts';
 import { ComputeError } from './computeError.ts';
 import { planChunks } from './planChunks.ts';
 import type { Chunk } from './planChunks.ts';
@@ -19,10 +21,20 @@ export type SweepOptions = {
   signal?: AbortSignal;
   /** Called about five times a second while points come in, and at the end. */
   onProgress?: (done: number, total: number) => void;
+  /** Gives the columns, which fill from now on, to whoever wants to look at them before all is done. */
+  onStart?: (soFar: PartialResult) => void;
+};
+
+/** A result that is being filled: NaN where nothing is computed yet. */
+export type PartialResult = Pick<SweepResult, 'axes' | 'columns' | 'points'> & {
+  /** Points computed so far. */
+  done: () => number;
 };
 
 export type SweepResult = {
-  /** The axis, then the readings in the order asked; NaN where a reading does not exist. */
+  /** Values of each axis, the first innermost (shared/runAxes.ts). */
+  axes: Float64Array[];
+  /** The readings in the order asked; NaN where one does not exist. */
   columns: Float64Array<SharedArrayBuffer>[];
   points: number;
   seconds: number;
@@ -46,12 +58,14 @@ export async function runSweep(
   input: SweepInput,
   threads: number,
   submit: (task: ChunkTask, signal: AbortSignal) => Promise<void>,
-  { signal, onProgress }: SweepOptions = {},
+  { signal, onProgress, onStart }: SweepOptions = {},
 ): Promise<SweepResult> {
   if (signal?.aborted) throw cancelled();
   const started = performance.now();
-  const { points } = input.axis;
+  const points = pointCountOf(input);
+  const axes = axesOf(input).map(({ axis }) => Float64Array.from(axisValues(axis)));
   const result = SharedResult.allocate(points, input.readings.length);
+  onStart?.({ axes, columns: result.columns, points, done: () => result.done });
   const task = {
     sweepId: (sweepsStarted += 1),
     input: toSharedJson(input),
@@ -76,7 +90,7 @@ export async function runSweep(
     clearInterval(progress);
   }
   onProgress?.(result.done, points);
-  return { columns: result.columns, points, seconds: (performance.now() - started) / 1000 };
+  return { axes, columns: result.columns, points, seconds: (performance.now() - started) / 1000 };
 }
 
 /** Settles with the lanes, or rejects as soon as the signal aborts; either way no lane goes on afterwards. */

@@ -1,13 +1,13 @@
 /**
  * The memory that the threads of one sweep share with the host.
  *
- *     bytes 0..3    Int32: 1 once the sweep is cancelled (read before every point)
+ *     bytes 0..3    Int32: 1 once the sweep is cancelled (read before every point, or few thousand quick ones)
  *     bytes 4..7    Int32: points done
  *     bytes 8..15   unused, so that the columns stand on 8-byte borders
- *     bytes 16..    Float64 columns of `points` values each: the axis, then the readings in the order asked
+ *     bytes 16..    Float64 columns of `points` values each: the readings in the order asked
  *
- * Columns and not rows, because that is how results are stored, sent and drawn. A reading that does not exist
- * at a point is NaN.
+ * Columns and not rows, because that is how results are stored, sent and drawn. Points stand in the order of
+ * shared/runAxes.ts. A reading that does not exist at a point is NaN, and so is one that is not computed yet.
  */
 const CANCELLED = 0;
 const DONE = 1;
@@ -29,18 +29,20 @@ export class SharedResult {
     this.buffer = buffer;
     this.#control = new Int32Array(buffer, 0, 2);
     this.columns = Array.from(
-      { length: 1 + readings },
+      { length: readings },
       (_, column) => new Float64Array(buffer, COLUMNS_AT + column * points * 8, points),
     );
   }
 
   static allocate(points: number, readings: number): SharedResult {
     const buffer = new SharedArrayBuffer(SharedResult.#byteLength(points, readings));
-    return new SharedResult(buffer, points, readings);
+    const result = new SharedResult(buffer, points, readings);
+    for (const column of result.columns) column.fill(NaN);
+    return result;
   }
 
   static #byteLength(points: number, readings: number): number {
-    return COLUMNS_AT + (1 + readings) * points * 8;
+    return COLUMNS_AT + readings * points * 8;
   }
 
   cancel(): void {

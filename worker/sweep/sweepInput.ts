@@ -1,4 +1,4 @@
-import type { ReadingName, SweepAxis } from '../../shared/run.ts';
+import type { ReadingName, SweepAxes } from '../../shared/run.ts';
 import type { StackDocument } from '../../shared/stack.ts';
 import type { ResolvableMaterial } from '../dispersion/resolveCase.ts';
 
@@ -6,9 +6,8 @@ import type { ResolvableMaterial } from '../dispersion/resolveCase.ts';
  * Everything that determines the numbers of a sweep. Plain data: it crosses into worker threads as JSON.
  * Every medium of the document that names a material names its version too, and `materials` holds all of them.
  */
-export type SweepInput = {
+export type SweepInput = SweepAxes & {
   document: StackDocument;
-  axis: SweepAxis;
   readings: ReadingName[];
   materials: ResolvableMaterial[];
 };

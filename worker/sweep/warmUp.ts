@@ -17,7 +17,12 @@ export function warmUp(): void {
   ];
   for (const axis of axes) {
     const solver = new SweepSolver({ document, axis, readings: [...readingNames], materials: [] });
-    solver.solve({ start: 0, count: POINTS }, SharedResult.allocate(POINTS, readingNames.length));
+    const chunk = {
+      first: { start: 0, count: POINTS },
+      second: { start: 0, stride: 1, count: 1 },
+      family: 0,
+    };
+    solver.solve(chunk, SharedResult.allocate(POINTS, readingNames.length));
   }
 }
 
