@@ -1,0 +1,102 @@
+import AxeBuilder from '@axe-core/playwright';
+import { afterAll, beforeAll, describe, expect, it } from 'vitest';
+import type { Page } from 'playwright-core';
+import { demoGroupId, demoRunId, demoStack } from './demo.ts';
+import { DEMO_LINK_TOKEN } from '../../server/seeders/demoData.ts';
+import { startSite } from './site.ts';
+import type { Site } from './site.ts';
+import type { Visitor } from './visitor.ts';
+
+// Each screen as somebody meets it, on a desk and on a phone, light and dark: nothing that keeps people out.
+
+const WIDTHS = [1280, 390] as const;
+const THEMES = ['light', 'dark'] as const;
+
+type Screen = {
+  name: string;
+  address: string;
+  /** What stands on the page once it has loaded what it shows. */
+  landmark: string | RegExp;
+  /** Opened by somebody who has not signed in. */
+  open?: boolean;
+};
+
+let site: Site;
+let member: Visitor;
+let stranger: Visitor;
+let ids: { group: string; stack: string; run: string };
+
+beforeAll(async () => {
+  site = await startSite();
+  member = await site.visit({ as: 'lead' });
+  stranger = await site.visit();
+  const { context } = member;
+  const [group, stack, run] = [
+    await demoGroupId(context),
+    await demoStack(context, 'Pt/Co/Pt'),
+    await demoRunId(context),
+  ];
+  ids = { group, stack: stack.id, run };
+});
+
+afterAll(async () => site?.stop());
+
+const screens: Screen[] = [
+  { name: 'sign-in', address: '/sign-in', landmark: 'Look around first', open: true },
+  { name: 'sign-up', address: '/sign-up', landmark: 'As the people of your groups', open: true },
+  { name: 'forgotten password', address: '/forgot-password', landmark: 'Send the link', open: true },
+  { name: 'new password', address: '/reset-password/none', landmark: 'Set the password', open: true },
+  { name: 'group home', address: '/groups/:group', landmark: 'NiFe under gold, transverse' },
+  { name: 'stack', address: '/stacks/:stack', landmark: /^200 points, / },
+  { name: 'runs', address: '/groups/:group/runs', landmark: 'Angle sweep at 632.8 nm' },
+  { name: 'run', address: '/runs/:run', landmark: 'Values at angle 30°' },
+  { name: 'share', address: `/share/${DEMO_LINK_TOKEN}`, landmark: 'Values at angle 30°', open: true },
+  { name: 'share that never was', address: '/share/none', landmark: 'There is no such link', open: true },
+  { name: 'materials', address: '/groups/:group/materials', landmark: 'Titanium nitride' },
+  { name: 'material', address: '/materials/fe-johnson-1974', landmark: 'Where Q comes from' },
+  { name: 'people', address: '/groups/:group/people', landmark: 'guest@northgate.example' },
+  { name: 'account', address: '/account', landmark: 'No tokens yet' },
+  { name: 'conventions', address: '/conventions', landmark: 'Transverse contrast', open: true },
+  { name: 'mails', address: '/development/mails', landmark: 'No mail yet', open: true },
+  { name: 'not found', address: '/nowhere', landmark: 'There is no such page', open: true },
+];
+
+/** Serious and critical findings of axe, each with where it is. */
+async function accessProblems(page: Page): Promise<string[]> {
+  // Legacy mode looks at this page alone instead of opening a blank one for frames, which there are none of.
+  const { violations } = await new AxeBuilder({ page }).setLegacyMode().analyze();
+  return violations
+    .filter(({ impact }) => impact === 'serious' || impact === 'critical')
+    .flatMap(({ id, help, nodes }) => nodes.map(({ target }) => `${id}: ${help} at ${target.join(' ')}`));
+}
+
+function widestContent(page: Page): Promise<number> {
+  return page.evaluate(() => document.documentElement.scrollWidth);
+}
+
+it('would find what keeps people out', async () => {
+  await stranger.page.setContent(
+    '<html lang="en"><title>Test</title><main><h1>A</h1><img src="data:,"></main></html>',
+  );
+  expect(await accessProblems(stranger.page)).toEqual([expect.stringMatching(/^image-alt:.* at img$/)]);
+});
+
+describe.each(screens)('the screen $name', ({ address, landmark, open }) => {
+  it.each(WIDTHS)('keeps nobody out and scrolls one way only, %i px wide', async (width) => {
+    const { page, complaints } = open ? stranger : member;
+    await page.setViewportSize({ width, height: width < 600 ? 844 : 900 });
+    const known: Record<string, string> = ids;
+    await page.goto(address.replace(/:(\w+)/g, (_, name: string) => known[name] ?? name));
+    await page.getByText(landmark).first().waitFor();
+    const problems: Record<string, string[]> = {};
+    for (const theme of THEMES) {
+      await page.emulateMedia({ colorScheme: theme });
+      await page.locator(`html[data-theme="${theme}"]`).waitFor();
+      problems[theme] = await accessProblems(page);
+    }
+    expect(problems).toEqual({ light: [], dark: [] });
+    expect(await widestContent(page)).toBeLessThanOrEqual(width);
+    // Chromium writes refused requests to the console; a link that never was is one.
+    expect(complaints.splice(0).filter((text) => !text.includes('404'))).toEqual([]);
+  });
+});
