@@ -2,6 +2,7 @@ import type { Logger } from 'pino';
 import type { Transaction } from 'sequelize';
 import type { RunProgress } from '../shared/run.ts';
 import type { ComputePool } from '../worker/pool.ts';
+import type { PartialResult } from '../worker/sweep/runSweep.ts';
 import type { Config } from './config.ts';
 import type { MailCatcher } from './mail/mailCatcher.ts';
 import type { Mailer } from './mail/mailer.ts';
@@ -35,6 +36,8 @@ export type Jobs = {
    * cancelled or deleted, or notices may have been lost.
    */
   watch(runId: string, listener: (progress: RunProgress | null) => void): () => void;
+  /** The numbers of a run that this process is computing, as far as they go; null for any other run. */
+  partialResult(runId: string): PartialResult | null;
 };
 
 /** What request handlers have: the queue is started after everything that it depends on. */

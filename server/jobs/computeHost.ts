@@ -3,6 +3,7 @@ import { hostname } from 'node:os';
 import { isDatabaseAway } from '../http/toRefusal.ts';
 import { LOST, executeRun } from './executeRun.ts';
 import type { ExecutionDependencies } from './executeRun.ts';
+import type { PartialResult } from '../../worker/sweep/runSweep.ts';
 import type { RunChannel } from './runChannel.ts';
 import { RunLease } from './runLease.ts';
 
@@ -13,7 +14,13 @@ const POLL_MS = 2_000;
 /** Says that its runs are alive, and notices when one is not its own any more. */
 const BEAT_MS = 1_000;
 
-type Running = { lease: RunLease; stopping: AbortController; ended: Promise<void> };
+type Running = {
+  lease: RunLease;
+  stopping: AbortController;
+  ended: Promise<void>;
+  /** Its numbers as they come in; null until the threads have it. */
+  soFar: PartialResult | null;
+};
 
 /** Takes runs out of the queue and computes them on this machine. */
 export class ComputeHost {
@@ -42,6 +49,11 @@ export class ComputeHost {
 
   get runCount(): number {
     return this.#running.size;
+  }
+
+  /** The numbers of a run that is being computed here, as far as they go. */
+  partialResult(runId: string): PartialResult | null {
+    return this.#running.get(runId)?.soFar ?? null;
   }
 
   /** Stops taking runs and gives those under way back to the queue. */
@@ -94,11 +106,15 @@ export class ComputeHost {
 
   #execute(lease: RunLease): void {
     const stopping = new AbortController();
-    const ended = executeRun(lease, this.#dependencies, stopping).finally(() => {
+    const onStart = (soFar: PartialResult) => {
+      const running = this.#running.get(lease.runId);
+      if (running) running.soFar = soFar;
+    };
+    const ended = executeRun(lease, this.#dependencies, stopping, onStart).finally(() => {
       this.#running.delete(lease.runId);
       if (!this.#stopped) this.#wake();
     });
-    this.#running.set(lease.runId, { lease, stopping, ended });
+    this.#running.set(lease.runId, { lease, stopping, ended, soFar: null });
   }
 
   #beating = false;

@@ -1,7 +1,7 @@
 import type { Logger } from 'pino';
 import type { ComputePool } from '../../worker/pool.ts';
 import { ComputeError } from '../../worker/sweep/computeError.ts';
-import type { SweepResult } from '../../worker/sweep/runSweep.ts';
+import type { SweepOptions, SweepResult } from '../../worker/sweep/runSweep.ts';
 import { Refusal } from '../errors.ts';
 import { isDatabaseAway } from '../http/toRefusal.ts';
 import type { Models } from '../models/models.ts';
@@ -27,16 +27,18 @@ export const LOST = 'cancelled, deleted or taken by another host';
  * stays away, the run is left to the sweeper.
  *
  * @param stopping aborted to stop the run, with `LOST` when it is not this host's any more
+ * @param onStart gets the numbers as they come in
  */
 export async function executeRun(
   lease: RunLease,
   dependencies: ExecutionDependencies,
   stopping: AbortController,
+  onStart: SweepOptions['onStart'],
 ): Promise<void> {
   const { logger, queue } = dependencies;
   const log = logger.child({ runId: lease.runId });
   try {
-    const outcome = await compute(lease, dependencies, stopping);
+    const outcome = await compute(lease, dependencies, stopping, onStart);
     switch (outcome.kind) {
       case 'stopped':
         if (stopping.signal.reason !== LOST) await lease.giveBack(queue);
@@ -68,8 +70,8 @@ async function compute(
   lease: RunLease,
   { materials: store, pool, logger }: ExecutionDependencies,
   stopping: AbortController,
+  onStart: SweepOptions['onStart'],
 ): Promise<Outcome> {
-  const { document, axis, readings } = lease.run.input;
   let reporting = false;
   const report = async (done: number) => {
     // A slow database gets fewer reports, not a queue of them.
@@ -85,9 +87,10 @@ async function compute(
   };
   try {
     const materials = await loadRunMaterials(store, lease.run);
-    const input = { document, axis, readings, materials };
+    const input = { ...lease.run.input, materials };
     const result = await pool.sweep(input, {
       signal: stopping.signal,
+      onStart,
       onProgress: (done, total) => {
         if (done < total) void report(done);
       },

@@ -31,6 +31,7 @@ export async function startJobs(dependencies: JobDependencies): Promise<Jobs> {
         else if (notice.kind === 'progress' && notice.runId === runId) listener(notice.progress);
         else if (notice.kind === 'stop' && notice.runId === runId) listener(null);
       }),
+    partialResult: (runId) => host?.partialResult(runId) ?? null,
     health() {
       const computing = host ? `${host.runCount} runs on this machine` : 'other machines compute';
       return Promise.resolve(

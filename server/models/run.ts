@@ -8,16 +8,15 @@ import type {
   NonAttribute,
   Sequelize,
 } from 'sequelize';
-import type { ReadingName, RunState, SweepAxis, UsedMaterial } from '../../shared/run.ts';
+import type { ReadingName, RunState, SweepAxes, UsedMaterial } from '../../shared/run.ts';
 import type { SolveWarning } from '../../shared/solve.ts';
 import type { StackDocument } from '../../shared/stack.ts';
 import type { Group } from './group.ts';
 import type { User } from './user.ts';
 
 /** Everything a run is computed from; never changed once stored, and what `inputSha256` is the hash of. */
-export type RunInput = {
+export type RunInput = SweepAxes & {
   document: StackDocument;
-  axis: SweepAxis;
   readings: ReadingName[];
   /** The library materials of the document, each with the version that was the newest when none was named. */
   materials: { id: string; version: number }[];

@@ -1,15 +1,15 @@
-import type { Run as PresentedRun, RunProgress, RunSummary, SharedRun, SweepAxis } from '../../shared/run.ts';
+import type { Run as PresentedRun, RunProgress, RunSummary, SharedRun, SweepAxes } from '../../shared/run.ts';
 import type { Run } from '../models/run.ts';
 
-/** @param axis apart from the row: a list leaves the rest of the input in the database */
-export function presentRunSummary(run: Run, axis: SweepAxis): RunSummary {
+/** @param axes apart from the row: a list leaves the rest of the input in the database */
+export function presentRunSummary(run: Run, axes: SweepAxes): RunSummary {
   return {
     id: run.id,
     groupId: run.groupId,
     name: run.name,
     stackId: run.stackId,
     stackName: run.stackName,
-    axis,
+    ...onlyAxes(axes),
     progress: presentRunProgress(run),
     createdAt: run.createdAt.toISOString(),
     finishedAt: run.finishedAt?.toISOString() ?? null,
@@ -20,17 +20,21 @@ export function presentRunSummary(run: Run, axis: SweepAxis): RunSummary {
 
 /** @param run with who made it */
 export function presentRun(run: Run): PresentedRun {
-  return { ...presentRunSummary(run, run.input.axis), ...snapshotOf(run) };
+  return { ...presentRunSummary(run, run.input), ...snapshotOf(run) };
 }
 
 /** What a share link shows of a run: nothing of the group, its people or its stack. */
 export function presentSharedRun(run: Run): SharedRun {
   return {
     name: run.name,
-    axis: run.input.axis,
+    ...onlyAxes(run.input),
     finishedAt: run.finishedAt?.toISOString() ?? null,
     ...snapshotOf(run),
   };
+}
+
+function onlyAxes({ axis, second, family }: SweepAxes): SweepAxes {
+  return { axis, ...(second && { second }), ...(family && { family }) };
 }
 
 export function presentRunProgress(run: Run): RunProgress {

@@ -1,4 +1,4 @@
-import type { ReadingName, SweepAxis, UsedMaterial } from '../../shared/run.ts';
+import type { ReadingName, SweepAxes, SweepAxis, UsedMaterial } from '../../shared/run.ts';
 import type {
   StackDocument,
   StackItem,
@@ -7,36 +7,67 @@ import type {
   WorkingMagnetization,
 } from '../../shared/stack.ts';
 import { describeAxis } from './runNames.ts';
+import { axesOf } from '../../shared/runAxes.ts';
+import { inputAzimuthOf } from '../../shared/stack.ts';
 
 /** Sentences that say what the numbers of a run rest on, so that they can be read alone years later. */
 export function runAssumptions(
   document: StackDocument,
-  axis: SweepAxis,
+  axes: SweepAxes,
   readings: ReadingName[],
   materials: UsedMaterial[],
 ): string[] {
   return [
-    ...settings(document, axis),
+    ...settings(document, axes),
     magnetization(document.workingPoint.magnetization),
+    ...axisMeanings(axes),
     'Convention: time factor exp(-iωt), so N = n + ik with k ≥ 0; z points into the film, x lies in the plane of incidence; a rotation is positive counter-clockwise for an observer who looks into the reflected beam.',
-    ...meanings(readings),
+    ...meanings(readings, document),
     ...geometry(document),
-    ...constants(document, axis, materials),
+    ...constants(document, axes, materials),
     'Constants of thin films differ from tabulated ones: use the numbers for planning.',
   ];
 }
 
-function settings(document: StackDocument, axis: SweepAxis): string[] {
+function settings(document: StackDocument, axes: SweepAxes): string[] {
   const { wavelengthNm, angleDeg } = document.workingPoint;
-  const swept = `Swept: ${describeAxis(axis, document)}.`;
-  switch (axis.kind) {
-    case 'wavelength':
-      return [swept, `Angle of incidence ${angleDeg} deg.`];
-    case 'angle':
-      return [swept, `Vacuum wavelength ${wavelengthNm} nm.`];
-    default:
-      return [swept, `Vacuum wavelength ${wavelengthNm} nm, angle of incidence ${angleDeg} deg.`];
-  }
+  const fixed = [
+    ...(sweeps(axes, 'wavelength') ? [] : [`vacuum wavelength ${wavelengthNm} nm`]),
+    ...(sweeps(axes, 'angle') ? [] : [`angle of incidence ${angleDeg} deg`]),
+  ].join(', ');
+  const roles = { axis: 'Swept', second: 'Second axis', family: 'Family' };
+  return [
+    ...axesOf(axes).map(({ field, axis }) => `${roles[field]}: ${describeAxis(axis, document)}.`),
+    ...(fixed === '' ? [] : [`${fixed.charAt(0).toUpperCase()}${fixed.slice(1)}.`]),
+  ];
+}
+
+function sweeps(axes: SweepAxes, kind: SweepAxis['kind']): boolean {
+  return axesOf(axes).some(({ axis }) => axis.kind === kind);
+}
+
+/** What the less usual axes do to the stack. */
+function axisMeanings(axes: SweepAxes): string[] {
+  return axesOf(axes).flatMap(({ axis }) => {
+    switch (axis.kind) {
+      case 'direction':
+        return [directionMeaning(axis)];
+      case 'voigtScale':
+        return [
+          `The swept factor multiplies the Voigt constant of ${axis.layerId === undefined ? 'every magnetic layer' : 'that layer'}.`,
+        ];
+      case 'graded':
+        return ['The swept width lies half in either layer at the interface.'];
+      default:
+        return [];
+    }
+  });
+}
+
+function directionMeaning({ plane, layerId }: SweepAxis & { kind: 'direction' }): string {
+  const turns = { xz: '+z toward +x', yz: '+z toward +y', xy: '+x toward +y' }[plane];
+  const whose = layerId === undefined ? 'every magnetic layer that is not marked fixed' : 'that layer';
+  return `m of ${whose} keeps its length and turns from ${turns}, whatever direction the working point gives it.`;
 }
 
 function magnetization(given: WorkingMagnetization): string {
@@ -50,7 +81,7 @@ function magnetization(given: WorkingMagnetization): string {
   }
 }
 
-function meanings(readings: ReadingName[]): string[] {
+function meanings(readings: ReadingName[], document: StackDocument): string[] {
   const asks = (pattern: RegExp) => readings.some((name) => pattern.test(name));
   return [
     ...(asks(/^(rotation|ellipticity)/)
@@ -61,6 +92,30 @@ function meanings(readings: ReadingName[]): string[] {
     ...(asks(/^contrast/)
       ? [
           'The transverse contrast compares the stack with the one in which every magnetization is reversed: (R(m) - R(-m)) / (R(m) + R(-m)).',
+        ]
+      : []),
+    ...(asks(/^(odd|even)/)
+      ? [
+          'Odd and even parts of a Kerr angle: half the difference of its values at m and -m, and half the sum of the changes that m and -m make against m = 0.',
+        ]
+      : []),
+    ...(asks(/^faraday/)
+      ? ['Faraday rotation and ellipticity are the change that magnetization makes to the transmitted beam.']
+      : []),
+    ...(asks(/eiling/)
+      ? [
+          'The ceiling of |r_sp| holds to first order in the Voigt constant and does not exist where a magnetic medium does not absorb or intensities are averaged; the share is |r_sp| over what the magnetic media can give in any stack, the ceiling of this stack follows from what its layers absorb.',
+        ]
+      : []),
+    ...(asks(/^(polar|longitudinal)Part/)
+      ? ['Polar- and longitudinal-like parts are |r_sp + r_ps|/2 and |r_sp - r_ps|/2.']
+      : []),
+    ...(asks(/^circular/)
+      ? ['The contrast of circular light is (R+ - R-) / (R+ + R-), with S3 > 0 for plus.']
+      : []),
+    ...(asks(/AtAzimuth$/)
+      ? [
+          `Readings at the input azimuth are for linear light at ${inputAzimuthOf(document.workingPoint)} deg from p toward s, as the change that magnetization makes.`,
         ]
       : []),
   ];
@@ -103,7 +158,7 @@ function anyLayer(items: StackItem[], holds: (layer: StackLayer) => boolean): bo
   return items.some((item) => ('layers' in item ? anyLayer(item.layers, holds) : holds(item)));
 }
 
-function constants(document: StackDocument, axis: SweepAxis, materials: UsedMaterial[]): string[] {
+function constants(document: StackDocument, axes: SweepAxes, materials: UsedMaterial[]): string[] {
   const sentences = materials.flatMap((material) => [
     ...(material.assumedConstant
       ? [
@@ -114,7 +169,7 @@ function constants(document: StackDocument, axis: SweepAxis, materials: UsedMate
       ? [`The Voigt constant of ${material.name} (${material.id}) is from memory: verify it before use.`]
       : []),
   ]);
-  if (axis.kind === 'wavelength' && hasTypedConstants(document)) {
+  if (sweeps(axes, 'wavelength') && hasTypedConstants(document)) {
     sentences.push('Constants typed into the stack do not change with wavelength.');
   }
   return sentences;

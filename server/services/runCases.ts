@@ -1,7 +1,8 @@
 import type { Issue } from '../../shared/error.ts';
 import { describeIssues } from '../../shared/issues.ts';
 import { LIMITS } from '../../shared/limits.ts';
-import type { SweepAxis } from '../../shared/run.ts';
+import type { SweepAxes } from '../../shared/run.ts';
+import { axesOf } from '../../shared/runAxes.ts';
 import { librarySolveCaseSchema, solveCaseSchema } from '../../shared/solve.ts';
 import type { LibrarySolveCase, SolveCase } from '../../shared/solve.ts';
 import { checkSolveRequest, forEachMedium } from '../../shared/solveRules.ts';
@@ -10,7 +11,7 @@ import type { StackDocument } from '../../shared/stack.ts';
 import { ResolutionError, resolveCase } from '../../worker/dispersion/resolveCase.ts';
 import type { ResolvableMaterial } from '../../worker/dispersion/resolveCase.ts';
 import { checkStackDocument } from './checkStackDocument.ts';
-import { findLayer } from './runNames.ts';
+import { checkSweptParts, cornersOf } from './runAxes.ts';
 import { toDocumentIssues } from './runPaths.ts';
 
 /**
@@ -23,54 +24,60 @@ export function runCase(document: StackDocument, wavelengthNm: number | number[]
   return toSolveCase(document, wavelengthNm, document.workingPoint.angleDeg);
 }
 
+/** The axis of a run that sweeps the wavelength, if one does. */
+export function wavelengthAxisOf(axes: SweepAxes) {
+  return axesOf(axes).find(({ axis }) => axis.kind === 'wavelength') ?? null;
+}
+
 /** Wavelengths that the run reaches to, with the field that a person changes to change each. */
-function reach(document: StackDocument, axis: SweepAxis): { wavelengthNm: number; path: string | null }[] {
-  if (axis.kind !== 'wavelength') return [{ wavelengthNm: document.workingPoint.wavelengthNm, path: null }];
+function reach(document: StackDocument, axes: SweepAxes): { wavelengthNm: number; path: string | null }[] {
+  const swept = wavelengthAxisOf(axes);
+  if (!swept) return [{ wavelengthNm: document.workingPoint.wavelengthNm, path: null }];
+  const { axis, field } = swept;
   const ends = [
-    { wavelengthNm: axis.from, path: 'axis.from' },
-    { wavelengthNm: axis.to, path: 'axis.to' },
+    { wavelengthNm: axis.from, path: `${field}.from` },
+    { wavelengthNm: axis.to, path: `${field}.to` },
   ];
   return axis.points === 1 ? ends.slice(0, 1) : ends;
 }
 
 /** Rules that need no material. */
-export function checkRunDocument(document: StackDocument, axis: SweepAxis): Issue[] {
+export function checkRunDocument(document: StackDocument, axes: SweepAxes): Issue[] {
   const issues = checkStackDocument(document);
   if (issues.length > 0) return issues;
-  if (axis.kind === 'thickness') issues.push(...checkSweptLayer(document, axis));
+  const sweepsWavelength = wavelengthAxisOf(axes) !== null;
+  issues.push(...checkSweptParts(document, axes));
+  if (sweepsWavelength) issues.push(...refuseSamples(document));
+  issues.push(...caseIssues(document, sweepsWavelength));
+  return issues.length > 0 ? issues : checkCorners(document, axes, sweepsWavelength);
+}
+
+function caseIssues(document: StackDocument, sweepsWavelength: boolean): Issue[] {
   const given = runCase(document, document.workingPoint.wavelengthNm);
-  if (axis.kind === 'wavelength') issues.push(...refuseSamples(document, given));
   const parsed = librarySolveCaseSchema.safeParse(given);
   const problems = parsed.success
     ? checkSolveRequest({ cases: [given] }, { maxPoints: LIMITS.runPoints, beyond: '' })
     : describeIssues(parsed.error, given);
   // How many samples there should be does not matter once there should be none.
-  const others = problems.filter(({ path }) => axis.kind !== 'wavelength' || !path.endsWith('.samples'));
-  return [...issues, ...toDocumentIssues(others, document)];
+  const others = problems.filter(({ path }) => !sweepsWavelength || !path.endsWith('.samples'));
+  return toDocumentIssues(others, document);
 }
 
-/** The layer must be there, and thick enough at every point for what has become of its parts. */
-function checkSweptLayer(document: StackDocument, axis: SweepAxis & { kind: 'thickness' }): Issue[] {
-  const layer = findLayer(document.layers, axis.layerId);
-  if (!layer) {
-    return [{ path: 'axis.layerId', message: `the stack has no layer with the id ${axis.layerId}` }];
+/** What goes wrong on the way, said at the end of the axis where it does. */
+function checkCorners(document: StackDocument, axes: SweepAxes, sweepsWavelength: boolean): Issue[] {
+  for (const corner of cornersOf(document, axes)) {
+    const tooLarge = checkStackDocument(corner.document);
+    const [problem] = tooLarge.length > 0 ? tooLarge : caseIssues(corner.document, sweepsWavelength);
+    if (problem) {
+      return [{ path: corner.path, message: `there, ${problem.path} ${problem.message}` }];
+    }
   }
-  const { oxide, dead } = layer;
-  const usedNm = (oxide?.consumedNm ?? 0) + (dead?.topNm ?? 0) + (dead?.bottomNm ?? 0);
-  const ends = [
-    { path: 'axis.from', thicknessNm: axis.from },
-    { path: 'axis.to', thicknessNm: axis.to },
-  ];
-  return ends
-    .filter(({ thicknessNm }) => thicknessNm < usedNm)
-    .map(({ path, thicknessNm }) => ({
-      path,
-      message: `must be at least the ${usedNm} nm that the oxide and the dead parts of the layer take, got ${thicknessNm}`,
-    }));
+  return [];
 }
 
 /** Samples belong to one list of wavelengths, which the sweep would have to be. */
-function refuseSamples(document: StackDocument, given: LibrarySolveCase): Issue[] {
+function refuseSamples(document: StackDocument): Issue[] {
+  const given = runCase(document, document.workingPoint.wavelengthNm);
   const issues: Issue[] = [];
   forEachMedium(given, (medium, path) => {
     for (const key of ['index', 'voigt', 'extraordinary', 'epsilon'] as const) {
@@ -88,10 +95,10 @@ function refuseSamples(document: StackDocument, given: LibrarySolveCase): Issue[
 /** Whether every material reaches over the whole axis, and what comes out may be solved. */
 export function checkRunMaterials(
   document: StackDocument,
-  axis: SweepAxis,
+  axes: SweepAxes,
   materials: ReadonlyMap<string, ResolvableMaterial>,
 ): Issue[] {
-  const places = reach(document, axis);
+  const places = reach(document, axes);
   const found = places.map(({ wavelengthNm }) => resolutionIssues(document, wavelengthNm, materials));
   const everywhere = (message: string) =>
     found.every((issues) => issues.some((issue) => issue.message === message));

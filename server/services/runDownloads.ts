@@ -1,38 +1,92 @@
 import { readingDefinitions } from '../../shared/readings.ts';
 import { axisUnitOf, describeResult, encodeResultHeader } from '../../shared/resultFormat.ts';
-import type { ReadingName, SweepAxis } from '../../shared/run.ts';
+import type { ResultHeader } from '../../shared/resultFormat.ts';
+import type { ReadingName, SweepAxes } from '../../shared/run.ts';
+import { axesOf } from '../../shared/runAxes.ts';
+import type { PartialResult } from '../../worker/sweep/runSweep.ts';
+import type { Run } from '../models/run.ts';
+import { quantityOf } from './runNames.ts';
 import type { RunResult } from './runResult.ts';
 
 /** Points read from the database at a time, and rows of CSV written at a time: the server stays responsive between. */
 const POINTS_AT_A_TIME = 65_536;
 const ROWS_AT_A_TIME = 2_048;
 
+/** The header of the file that hands out these readings of a run. */
+export function resultHeaderOf(run: Run, readings: ReadingName[]): ResultHeader {
+  const { input, solverVersion, inputSha256 } = run;
+  return describeResult(input, readings, { solverVersion, inputSha256 });
+}
+
 /** The result file with the chosen readings (shared/resultFormat.ts), piece by piece. */
 export async function* resultBytes(result: RunResult, readings: ReadingName[]): AsyncGenerator<Uint8Array> {
-  const { input, solverVersion, inputSha256 } = result.run;
-  yield encodeResultHeader(describeResult(input, readings, { solverVersion, inputSha256 }));
-  for (const column of [null, ...readings]) {
+  yield encodeResultHeader(resultHeaderOf(result.run, readings));
+  yield await result.readAxisBytes();
+  for (const reading of readings) {
     for (const { start, count } of stretches(result.pointCount, POINTS_AT_A_TIME)) {
-      yield await result.readBytes(column, start, count);
+      yield await result.readBytes(reading, start, count);
     }
   }
 }
 
 /**
- * The chosen readings as CSV (RFC 4180): a header line with names and units, a line for each point, an empty field
- * where a reading does not exist. Numbers are written so that they read back to the same double.
+ * The same file of a run that is still being computed on this machine: NaN where nothing is computed yet. Threads
+ * write meanwhile, so the end of a file may hold more points than its beginning; none that its header counts is
+ * missing.
+ *
+ * @param header with `done`
+ */
+export function* partialResultBytes(
+  run: Run,
+  soFar: PartialResult,
+  header: ResultHeader,
+): Generator<Uint8Array> {
+  yield encodeResultHeader(header);
+  for (const values of soFar.axes) yield bytesOf(values);
+  for (const { name } of header.readings) {
+    const column = soFar.columns[run.input.readings.indexOf(name)]!;
+    for (const { start, count } of stretches(soFar.points, POINTS_AT_A_TIME)) {
+      // Copied: what lies in shared memory may change while it is being sent.
+      yield bytesOf(Float64Array.from(column.subarray(start, start + count)));
+    }
+  }
+}
+
+function bytesOf(values: Float64Array): Uint8Array {
+  return new Uint8Array(values.buffer, values.byteOffset, values.byteLength);
+}
+
+/**
+ * The chosen readings as CSV (RFC 4180): a header line with names and units, a line for each point with the values
+ * of all axes, an empty field where a reading does not exist. Numbers are written so that they read back to the same
+ * double.
  */
 export async function* resultCsv(result: RunResult, readings: ReadingName[]): AsyncGenerator<string> {
+  const { input } = result.run;
   const names = readings.map((name) => {
     const { label, unit } = readingDefinitions[name];
     return `${label} (${unit})`;
   });
-  yield toLine([axisTitle(result.run.input.axis), ...names]);
+  yield toLine([...axisTitles(input), ...names]);
+  const axes = await result.readAxes();
   for (const { start, count } of stretches(result.pointCount, POINTS_AT_A_TIME)) {
-    const columns: Float64Array[] = [];
-    for (const column of [null, ...readings]) columns.push(await result.readValues(column, start, count));
+    const columns: Float64Array[] = axisColumns(axes, start, count);
+    for (const reading of readings) columns.push(await result.readValues(reading, start, count));
     for (const rows of stretches(count, ROWS_AT_A_TIME)) yield toLines(columns, rows.start, rows.count);
   }
+}
+
+/** The value of every axis at each of the points, the first axis running fastest. */
+function axisColumns(axes: Float64Array[], start: number, count: number): Float64Array[] {
+  let repeats = 1;
+  return axes.map((values) => {
+    const each = repeats;
+    repeats *= values.length;
+    return Float64Array.from(
+      { length: count },
+      (_, row) => values[Math.floor((start + row) / each) % values.length]!,
+    );
+  });
 }
 
 function toLines(columns: Float64Array[], start: number, count: number): string {
@@ -48,17 +102,22 @@ function toLine(fields: string[]): string {
   return `${fields.map((field) => (/[",\r\n]/.test(field) ? `"${field.replaceAll('"', '""')}"` : field)).join(',')}\r\n`;
 }
 
-function axisTitle(axis: SweepAxis): string {
-  const title = {
-    wavelength: 'Vacuum wavelength',
-    angle: 'Angle of incidence',
-    thickness: 'Layer thickness',
-    direction: 'Direction of m',
-    voigtScale: 'Scale of Q',
-    repeat: 'Repeats',
-    graded: 'Interface width',
-  }[axis.kind];
-  return `${title} (${axisUnitOf(axis)})`;
+const usualTitles = {
+  wavelength: 'Vacuum wavelength',
+  angle: 'Angle of incidence',
+  thickness: 'Layer thickness',
+} as const;
+
+/** Two axes may sweep the same of two layers: then the layers are named. */
+function axisTitles(input: Run['input']): string[] {
+  const axes = axesOf<SweepAxes['axis']>(input).map(({ axis }) => axis);
+  return axes.map((axis) => {
+    const isOnly = axes.filter(({ kind }) => kind === axis.kind).length === 1;
+    const title =
+      isOnly && axis.kind in usualTitles ? usualTitles[axis.kind as keyof typeof usualTitles] : null;
+    const text = title ?? quantityOf(axis, input.document);
+    return `${text.charAt(0).toUpperCase()}${text.slice(1)} (${axisUnitOf(axis)})`;
+  });
 }
 
 function* stretches(total: number, size: number): Generator<{ start: number; count: number }> {

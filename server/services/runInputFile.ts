@@ -1,7 +1,9 @@
 import { applyAxis } from '../../shared/applyAxis.ts';
+import { outputFor } from '../../shared/readings.ts';
+import type { SweepAxis } from '../../shared/run.ts';
 import type { LibrarySolveCase } from '../../shared/solve.ts';
 import { toSolveCase } from '../../shared/stackCase.ts';
-import type { StackItem } from '../../shared/stack.ts';
+import type { StackDocument, StackItem } from '../../shared/stack.ts';
 import { resolveCase } from '../../worker/dispersion/resolveCase.ts';
 import type { ResolvableMaterial } from '../../worker/dispersion/resolveCase.ts';
 import { axisValues } from '../../worker/sweep/axisValues.ts';
@@ -17,21 +19,35 @@ const CASES_AT_A_TIME = 200;
  * The run as a request of the solve contract, piece by piece: `npm run -s solve -- input.json` gives the points of the
  * run in their order. The magnetization of the working point is put in, and constants stand as numbers.
  *
- * A wavelength or an angle axis becomes one case (several where it is long), a thickness axis one for each thickness.
+ * For each value of the family and of the second axis, a wavelength or an angle axis becomes one case (several where
+ * it is long) and any other axis one for each of its values.
  */
 export function* runInputFile(input: RunInput, materials: ResolvableMaterial[]): Generator<string> {
   const known = new Map(materials.map((material) => [materialKey(material), material]));
-  const size = piecesOf(input);
+  let separator = '';
   yield '{"cases":[';
-  for (let start = 0; start < input.axis.points; start += size) {
-    const values = axisValues(input.axis, start, Math.min(size, input.axis.points - start));
-    const cases = casesOf(input, values).map((one) => JSON.stringify(resolveCase(one, known)));
-    yield `${start > 0 ? ',' : ''}${cases.join(',')}`;
+  for (const document of rowDocuments(input)) {
+    for (const values of piecesOf(input)) {
+      const cases = casesOf(document, input.axis, values).map((one) =>
+        JSON.stringify(resolveCase(withOutputs(one, input), known)),
+      );
+      yield `${separator}${cases.join(',')}`;
+      separator = ',';
+    }
   }
   yield ']}\n';
 }
 
-function casesOf({ document, axis }: RunInput, values: number[]): LibrarySolveCase[] {
+/** The document at each value of the family and the second axis, the second running faster. */
+function* rowDocuments({ document, second, family }: RunInput): Generator<StackDocument> {
+  for (const member of along(document, family)) yield* along(member, second);
+}
+
+function along(document: StackDocument, axis: SweepAxis | undefined): StackDocument[] {
+  return axis ? axisValues(axis).map((value) => applyAxis(document, axis, value)) : [document];
+}
+
+function casesOf(document: StackDocument, axis: SweepAxis, values: number[]): LibrarySolveCase[] {
   const { wavelengthNm, angleDeg } = document.workingPoint;
   switch (axis.kind) {
     case 'wavelength':
@@ -43,8 +59,24 @@ function casesOf({ document, axis }: RunInput, values: number[]): LibrarySolveCa
   }
 }
 
-/** Points that are written at a time: of a wavelength axis every medium has a sample for each. */
-function piecesOf({ axis, document }: RunInput): number {
+/** What the readings need beside the standard answer, where the stack can give it. */
+function withOutputs(one: LibrarySolveCase, { readings }: RunInput): LibrarySolveCase {
+  const addsIntensities = one.average !== undefined || one.backside !== undefined;
+  const outputs = [...new Set(readings.flatMap((name) => outputFor(name) ?? []))].filter(
+    (output) => !addsIntensities || output === 'mueller',
+  );
+  return outputs.length > 0 ? { ...one, outputs } : one;
+}
+
+/** Values of the first axis that are written at a time: of a wavelength axis every medium has a sample for each. */
+function* piecesOf({ axis, document }: RunInput): Generator<number[]> {
+  const size = pieceSize(axis, document);
+  for (let start = 0; start < axis.points; start += size) {
+    yield axisValues(axis, start, Math.min(size, axis.points - start));
+  }
+}
+
+function pieceSize(axis: SweepAxis, document: StackDocument): number {
   switch (axis.kind) {
     case 'wavelength':
       return Math.max(1, Math.min(CASE_VALUES, Math.floor(CASE_SAMPLES / (2 + countItems(document.layers)))));

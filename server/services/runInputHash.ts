@@ -10,9 +10,10 @@ export function hashRunInput(input: RunInput, materials: ResolvableMaterial[]): 
   const constants = materials
     .map(({ id, version, content }) => ({ id, version, content }))
     .sort((a, b) => (a.id < b.id ? -1 : a.id > b.id ? 1 : a.version - b.version));
-  const { document, axis, readings } = input;
+  // A run of one axis has the hash that it had before there were more: undefined keys do not count.
+  const { document, axis, second, family, readings } = input;
   return createHash('sha256')
-    .update(canonicalJson({ document, axis, readings, materials: constants }))
+    .update(canonicalJson({ document, axis, second, family, readings, materials: constants }))
     .digest('hex');
 }
 

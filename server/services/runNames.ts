@@ -1,27 +1,57 @@
-import type { SweepAxis } from '../../shared/run.ts';
+import { SUBSTRATE } from '../../shared/run.ts';
+import type { SweepAxes, SweepAxis } from '../../shared/run.ts';
+import { axesOf } from '../../shared/runAxes.ts';
+import { axisUnitOf } from '../../shared/resultFormat.ts';
 import type { StackDocument, StackItem, StackLayer } from '../../shared/stack.ts';
 
 /** Such as "wavelength from 400 to 800 nm in 401 points". */
 export function describeAxis(axis: SweepAxis, document: StackDocument): string {
-  const quantity = axis.kind === 'thickness' ? thicknessOf(axis.layerId, document) : axis.kind;
-  const unit = axis.kind === 'angle' ? 'deg' : 'nm';
   const spacing = axis.spacing === 'log' ? ', evenly on a log scale' : '';
-  return `${quantity} from ${axis.from} to ${axis.to} ${unit} in ${axis.points} points${spacing}`;
+  return `${quantityOf(axis, document)} from ${axis.from} to ${axis.to}${unitOf(axis)} in ${axis.points} points${spacing}`;
 }
 
 /** The name of a run whose maker gave none. */
-export function runNameFor(axis: SweepAxis, document: StackDocument, stackName: string | null): string {
-  const quantity = axis.kind === 'thickness' ? thicknessOf(axis.layerId, document) : axis.kind;
-  const unit = axis.kind === 'angle' ? 'deg' : 'nm';
-  const sweep = `${quantity} ${axis.from} to ${axis.to} ${unit}`;
+export function runNameFor(axes: SweepAxes, document: StackDocument, stackName: string | null): string {
+  const sweep = axesOf(axes)
+    .map(({ axis }) => `${quantityOf(axis, document)} ${axis.from} to ${axis.to}${unitOf(axis)}`)
+    .join(' × ');
   const name = stackName === null ? sweep : `${stackName}: ${sweep}`;
   return name.slice(0, 120);
 }
 
-function thicknessOf(layerId: string, document: StackDocument): string {
+/** Such as "thickness of Pt", or what the axis says of every layer. */
+export function quantityOf(axis: SweepAxis, document: StackDocument): string {
+  switch (axis.kind) {
+    case 'wavelength':
+    case 'angle':
+      return axis.kind;
+    case 'thickness':
+      return `thickness${of(axis.layerId, document)}`;
+    case 'direction':
+      return `direction of m in ${axis.plane}${of(axis.layerId, document)}`;
+    case 'voigtScale':
+      return `scale of Q${of(axis.layerId, document)}`;
+    case 'repeat':
+      return 'repeats of the block';
+    case 'graded':
+      return `interface width above ${nameOf(axis.layerId, document) ?? 'the layer'}`;
+  }
+}
+
+function unitOf(axis: SweepAxis): string {
+  const unit = axisUnitOf(axis);
+  return unit === '1' ? '' : ` ${unit}`;
+}
+
+function of(layerId: string | undefined, document: StackDocument): string {
+  const name = layerId === undefined ? undefined : nameOf(layerId, document);
+  return name === undefined ? '' : ` of ${name}`;
+}
+
+function nameOf(layerId: string, document: StackDocument): string | undefined {
   const layer = findLayer(document.layers, layerId);
-  const medium = layer?.medium.label ?? layer?.medium.material;
-  return medium === undefined ? 'thickness' : `thickness of ${medium}`;
+  if (!layer) return layerId === SUBSTRATE ? 'the substrate' : undefined;
+  return layer.medium.label ?? layer.medium.material;
 }
 
 /** The layer with this id, in a block too; null when there is none. */

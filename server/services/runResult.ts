@@ -1,6 +1,7 @@
 import { QueryTypes } from 'sequelize';
 import type { ReadingName } from '../../shared/run.ts';
-import { columnsOffset } from '../../shared/resultFormat.ts';
+import { axisValueCount, columnsOffset } from '../../shared/resultFormat.ts';
+import { axesOf, pointCountOf } from '../../shared/runAxes.ts';
 import { conflict, invalid } from '../errors.ts';
 import { PIECE_BYTES } from '../jobs/resultPieces.ts';
 import type { Models } from '../models/models.ts';
@@ -30,35 +31,53 @@ export class RunResult {
   }
 
   get pointCount(): number {
-    return this.run.input.axis.points;
+    return pointCountOf(this.run.input);
   }
 
-  /**
-   * The stored readings to hand out, in the order asked.
-   *
-   * @throws Refusal 422 for one that this run did not store
-   */
-  choose(wanted: ReadingName[] | undefined): ReadingName[] {
+  /** Float64 bytes of the values of all axes, one after the other. */
+  readAxisBytes(): Promise<Buffer> {
+    const length = axisValueCount(this.run.input) * BYTES_PER_VALUE;
+    return readBytes(this.#models, this.run.id, this.#columnsAt, length);
+  }
+
+  /** The values of each axis, innermost first. */
+  async readAxes(): Promise<Float64Array[]> {
+    const bytes = toArrayBuffer(await this.readAxisBytes());
+    let at = 0;
+    return axesOf(this.run.input).map(({ axis }) => {
+      const values = new Float64Array(bytes, at, axis.points);
+      at += axis.points * BYTES_PER_VALUE;
+      return values;
+    });
+  }
+
+  /** Float64 bytes of a reading, from point `start` on. */
+  async readBytes(reading: ReadingName, start: number, count: number): Promise<Buffer> {
     const { readings } = this.run.input;
-    const missing = (wanted ?? []).filter((name) => !readings.includes(name));
-    if (missing.length > 0) {
-      throw invalid([
-        { path: 'readings', message: `this run has no ${missing.join(', ')}; it has ${readings.join(', ')}` },
-      ]);
-    }
-    return wanted ?? readings;
-  }
-
-  /** Float64 bytes of the axis (`null`) or of a reading, from point `start` on. */
-  async readBytes(column: ReadingName | null, start: number, count: number): Promise<Buffer> {
-    const position = column === null ? 0 : 1 + this.run.input.readings.indexOf(column);
-    const offset = this.#columnsAt + (position * this.pointCount + start) * BYTES_PER_VALUE;
+    const before = axisValueCount(this.run.input) + readings.indexOf(reading) * this.pointCount + start;
+    const offset = this.#columnsAt + before * BYTES_PER_VALUE;
     return readBytes(this.#models, this.run.id, offset, count * BYTES_PER_VALUE);
   }
 
-  async readValues(column: ReadingName | null, start: number, count: number): Promise<Float64Array> {
-    return new Float64Array(toArrayBuffer(await this.readBytes(column, start, count)));
+  async readValues(reading: ReadingName, start: number, count: number): Promise<Float64Array> {
+    return new Float64Array(toArrayBuffer(await this.readBytes(reading, start, count)));
   }
+}
+
+/**
+ * The readings of a run to hand out, in the order asked.
+ *
+ * @throws Refusal 422 for one that this run does not store
+ */
+export function chooseReadings(run: Run, wanted: ReadingName[] | undefined): ReadingName[] {
+  const { readings } = run.input;
+  const missing = (wanted ?? []).filter((name) => !readings.includes(name));
+  if (missing.length > 0) {
+    throw invalid([
+      { path: 'readings', message: `this run has no ${missing.join(', ')}; it has ${readings.join(', ')}` },
+    ]);
+  }
+  return wanted ?? readings;
 }
 
 /** A stretch of the result file; the database cuts it out of the stored pieces. */

@@ -1,4 +1,5 @@
-import type { CreateRun, UsedMaterial } from '../../shared/run.ts';
+import type { ReadingName, SweepAxes, UsedMaterial } from '../../shared/run.ts';
+import { pointCountOf } from '../../shared/runAxes.ts';
 import type { SolveWarning } from '../../shared/solve.ts';
 import type { StackDocument } from '../../shared/stack.ts';
 import { dispersionRangeNm, isSameWavelength } from '../../worker/dispersion/range.ts';
@@ -12,7 +13,7 @@ import type { Material } from '../models/material.ts';
 import type { Run, RunInput } from '../models/run.ts';
 import type { MaterialStore } from './materialStore.ts';
 import { runAssumptions } from './runAssumptions.ts';
-import { checkRunDocument, checkRunMaterials, runCase } from './runCases.ts';
+import { checkRunDocument, checkRunMaterials, runCase, wavelengthAxisOf } from './runCases.ts';
 import { hashRunInput } from './runInputHash.ts';
 import { mapNamedMaterials, namedMaterialsOf } from './runMedia.ts';
 import { documentPath, toDocumentIssues } from './runPaths.ts';
@@ -35,20 +36,21 @@ const WARNING_POINTS = 21;
 export async function takeRunSnapshot(
   store: MaterialStore,
   groupId: string,
-  wanted: Required<Pick<CreateRun, 'document' | 'axis' | 'readings'>>,
+  wanted: SweepAxes & { document: StackDocument; readings: ReadingName[] },
 ): Promise<RunSnapshot> {
-  const { axis, readings } = wanted;
-  const issues = checkRunDocument(wanted.document, axis);
+  const { axis, second, family, readings } = wanted;
+  const axes = { axis, ...(second && { second }), ...(family && { family }) };
+  const issues = checkRunDocument(wanted.document, axes);
   if (issues.length > 0) throw invalid(issues);
   const given = runCase(wanted.document, wanted.document.workingPoint.wavelengthNm);
   const loaded = await store.loadFor([given], [groupId]);
-  const outOfReach = checkRunMaterials(wanted.document, axis, loaded);
+  const outOfReach = checkRunMaterials(wanted.document, axes, loaded);
   if (outOfReach.length > 0) throw invalid(outOfReach);
   const materials = [...loaded.values()];
   const document = withVersions(wanted.document, loaded);
   const input: RunInput = {
     document,
-    axis,
+    ...axes,
     readings,
     materials: materials.map(({ id, version }) => ({ id, version })),
   };
@@ -56,11 +58,11 @@ export async function takeRunSnapshot(
   return {
     input,
     materials: used,
-    assumptions: runAssumptions(document, axis, readings, used),
+    assumptions: runAssumptions(document, axes, readings, used),
     warnings: warningsOf(input, loaded),
     inputSha256: hashRunInput(input, materials),
     solverVersion: SOLVER_VERSION,
-    total: axis.points,
+    total: pointCountOf(axes),
   };
 }
 
@@ -76,8 +78,9 @@ function withVersions(
 }
 
 /** The wavelengths at the ends of the run. */
-function sweptNm({ axis, document }: RunInput): number[] {
-  return axis.kind === 'wavelength' ? [axis.from, axis.to] : [document.workingPoint.wavelengthNm];
+function sweptNm(input: RunInput): number[] {
+  const swept = wavelengthAxisOf(input)?.axis;
+  return swept ? [swept.from, swept.to] : [input.document.workingPoint.wavelengthNm];
 }
 
 function describeUse(
@@ -114,11 +117,11 @@ function isAssumedConstant(document: StackDocument, id: string, version: number)
 }
 
 function warningsOf(input: RunInput, materials: ReadonlyMap<string, ResolvableMaterial>): SolveWarning[] {
-  const { axis, document } = input;
-  const wavelengths =
-    axis.kind === 'wavelength'
-      ? axisValues({ ...axis, points: Math.min(axis.points, WARNING_POINTS) })
-      : document.workingPoint.wavelengthNm;
+  const { document } = input;
+  const swept = wavelengthAxisOf(input)?.axis;
+  const wavelengths = swept
+    ? axisValues({ ...swept, points: Math.min(swept.points, WARNING_POINTS) })
+    : document.workingPoint.wavelengthNm;
   try {
     const warnings = solveWarnings({ cases: [resolveCase(runCase(document, wavelengths), materials)] });
     return warnings.map((warning) => ({ ...warning, path: documentPath(warning.path, document) }));

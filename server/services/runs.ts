@@ -2,7 +2,9 @@ import { createHash } from 'node:crypto';
 import { isDeepStrictEqual } from 'node:util';
 import { Op, UniqueConstraintError, fn, literal } from 'sequelize';
 import type { CreationAttributes, Transaction } from 'sequelize';
-import type { CreateRun, ReadingName, SweepAxis } from '../../shared/run.ts';
+import type { CreateRun, ReadingName, SweepAxes, SweepAxis } from '../../shared/run.ts';
+import { LIMITS } from '../../shared/limits.ts';
+import { axisFields } from '../../shared/runAxes.ts';
 import type { StackDocument } from '../../shared/stack.ts';
 import { SOLVER_VERSION } from '../../worker/optics/version.ts';
 import type { AppDependencies } from '../dependencies.ts';
@@ -20,7 +22,7 @@ import { loadStack } from './stacks.ts';
 
 type Person = { userId: string; name: string };
 type RunDependencies = Pick<AppDependencies, 'models' | 'materials' | 'jobs'>;
-export type ListedRun = { run: Run; axis: SweepAxis };
+export type ListedRun = { run: Run; axes: SweepAxes };
 
 /** What is stored when nobody says: everything that the stack page draws. */
 const USUAL_READINGS: ReadingName[] = [
@@ -36,6 +38,9 @@ const USUAL_READINGS: ReadingName[] = [
   'contrastS',
 ];
 
+/** ... and of a map, which stores fewer. */
+const USUAL_MAP_READINGS: ReadingName[] = USUAL_READINGS.slice(0, LIMITS.mapReadings);
+
 /** Runs of a group that a list shows. */
 const LISTED_RUNS = 500;
 
@@ -50,7 +55,7 @@ export async function listRuns(models: Models, groupId: string): Promise<ListedR
     where: { groupId },
     attributes: {
       exclude: ['input', 'materials', 'assumptions', 'warnings'],
-      include: [[literal(`"Run"."input"->'axis'`), 'axis']],
+      include: axisFields.map((field) => [literal(`"Run"."input"->'${field}'`), field]),
     },
     include: 'createdBy',
     order: [
@@ -59,7 +64,13 @@ export async function listRuns(models: Models, groupId: string): Promise<ListedR
     ],
     limit: LISTED_RUNS,
   });
-  return runs.map((run) => ({ run, axis: run.get('axis') as SweepAxis }));
+  return runs.map((run) => ({ run, axes: listedAxes(run) }));
+}
+
+/** The axes that `listRuns` cut out of the input. */
+function listedAxes(run: Run): SweepAxes {
+  const [axis, second, family] = axisFields.map((field) => run.get(field) as SweepAxis | null);
+  return { axis: axis!, ...(second && { second }), ...(family && { family }) };
 }
 
 /**
@@ -76,13 +87,14 @@ export async function createRun(
   idempotencyKey: string | null,
 ): Promise<Run> {
   const stack = await loadNamedStack(models, group.id, wanted.stackId, wanted.document);
-  const readings = [...new Set(wanted.readings ?? USUAL_READINGS)];
+  const usual = wanted.second ? USUAL_MAP_READINGS : USUAL_READINGS;
+  const readings = [...new Set(wanted.readings ?? usual)];
   const snapshot = await takeRunSnapshot(materials, group.id, { ...wanted, readings });
   const values = {
     ...snapshot,
     ...stack,
     groupId: group.id,
-    name: wanted.name ?? runNameFor(wanted.axis, wanted.document, stack.stackName),
+    name: wanted.name ?? runNameFor(wanted, wanted.document, stack.stackName),
     createdById: actor.userId,
   };
   if (idempotencyKey === null) return storeRun({ models, jobs }, actor, 'run.create', values);

@@ -1,14 +1,14 @@
 import { Readable } from 'node:stream';
 import { pipeline } from 'node:stream/promises';
 import type { Response } from 'express';
-import { describeResult, resultByteLength } from '../../shared/resultFormat.ts';
+import { resultByteLength } from '../../shared/resultFormat.ts';
 import type { ReadingName } from '../../shared/run.ts';
 import type { AppDependencies } from '../dependencies.ts';
 import type { Run } from '../models/run.ts';
-import { resultBytes, resultCsv } from './runDownloads.ts';
+import { partialResultBytes, resultBytes, resultCsv, resultHeaderOf } from './runDownloads.ts';
 import { runInputFile } from './runInputFile.ts';
 import { loadRunMaterials } from './runMaterials.ts';
-import { RunResult } from './runResult.ts';
+import { RunResult, chooseReadings } from './runResult.ts';
 
 /**
  * The files that a run is handed out as, to members and through links alike. All are streamed: a run of a million
@@ -16,12 +16,14 @@ import { RunResult } from './runResult.ts';
  */
 export type RunFile =
   | { kind: 'binary'; readings?: ReadingName[] }
+  /** What is computed so far while this machine computes the run, afterwards all of it. */
+  | { kind: 'partial'; readings?: ReadingName[] }
   | { kind: 'csv'; readings?: ReadingName[] }
   | { kind: 'input' };
 
 /** @throws Refusal 409 while the run has no numbers, 422 for a reading that it does not have; nothing is sent then */
 export async function sendRunFile(
-  { models, materials }: Pick<AppDependencies, 'models' | 'materials'>,
+  { models, materials, jobs }: Pick<AppDependencies, 'models' | 'materials' | 'jobs'>,
   run: Run,
   file: RunFile,
   response: Response,
@@ -29,18 +31,24 @@ export async function sendRunFile(
   switch (file.kind) {
     case 'binary': {
       const result = await RunResult.open(models, run);
-      const readings = result.choose(file.readings);
-      const { solverVersion, inputSha256, input } = run;
-      const header = describeResult(input, readings, { solverVersion, inputSha256 });
-      response.set({
-        'Content-Type': 'application/octet-stream',
-        'Content-Length': String(resultByteLength(header)),
-      });
+      const readings = chooseReadings(run, file.readings);
+      announce(response, resultByteLength(resultHeaderOf(run, readings)));
       return send(resultBytes(result, readings), response);
+    }
+    case 'partial': {
+      const soFar = run.state === 'done' ? null : jobs.partialResult(run.id);
+      if (!soFar) {
+        // It may have come to its end since the row was read.
+        await run.reload({ attributes: ['state'] });
+        return sendRunFile({ models, materials, jobs }, run, { ...file, kind: 'binary' }, response);
+      }
+      const header = { ...resultHeaderOf(run, chooseReadings(run, file.readings)), done: soFar.done() };
+      announce(response, resultByteLength(header));
+      return send(partialResultBytes(run, soFar, header), response);
     }
     case 'csv': {
       const result = await RunResult.open(models, run);
-      const readings = result.choose(file.readings);
+      const readings = chooseReadings(run, file.readings);
       response.attachment(`${fileNameOf(run)}.csv`).type('text/csv; charset=utf-8');
       return send(resultCsv(result, readings), response);
     }
@@ -52,8 +60,16 @@ export async function sendRunFile(
   }
 }
 
+function announce(response: Response, bytes: number): void {
+  response.set({
+    'Content-Type': 'application/octet-stream',
+    'Content-Length': String(bytes),
+    'Cache-Control': 'no-store',
+  });
+}
+
 async function send(
-  pieces: AsyncIterable<Uint8Array | string> | Iterable<string>,
+  pieces: AsyncIterable<Uint8Array | string> | Iterable<Uint8Array | string>,
   response: Response,
 ): Promise<void> {
   try {

@@ -4,7 +4,7 @@ import type { Route } from '../../routing/route.ts';
 import { streamRoute } from '../../routing/route.ts';
 import { loadRun } from '../../services/runs.ts';
 import { sendRunFile } from '../../services/sendRunFile.ts';
-import { readingsQuerySchema } from './readingsQuery.ts';
+import { dataQuerySchema, readingsQuerySchema } from './readingsQuery.ts';
 
 const load = ({ dependencies, params }: { dependencies: AppDependencies; params: { runId: string } }) =>
   loadRun(dependencies.models, params.runId);
@@ -12,14 +12,20 @@ const load = ({ dependencies, params }: { dependencies: AppDependencies; params:
 const readRunData = streamRoute({
   method: 'get',
   path: '/runs/:runId/data',
-  summary: 'The numbers as Float64 columns behind a JSON header (shared/resultFormat.ts).',
+  summary:
+    'The numbers as Float64 columns behind a JSON header (shared/resultFormat.ts). With partial=true those of a run that is still being computed on this machine too: NaN where nothing is computed yet, `done` in the header.',
   noun: 'run',
   policy: readRun,
-  query: readingsQuerySchema,
+  query: dataQuerySchema,
   load,
   answer: { contentType: 'application/octet-stream' },
   handler: ({ dependencies, subject, query, response }) =>
-    sendRunFile(dependencies, subject, { kind: 'binary', readings: query.readings }, response),
+    sendRunFile(
+      dependencies,
+      subject,
+      { kind: query.partial === 'true' ? 'partial' : 'binary', readings: query.readings },
+      response,
+    ),
 });
 
 const readRunCsv = streamRoute({

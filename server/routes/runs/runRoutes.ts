@@ -24,7 +24,7 @@ const listRunsOfGroup = route({
   answer: { status: 200, schema: runListSchema },
   async handler({ dependencies, subject }) {
     const runs = await listRuns(dependencies.models, subject.id);
-    return { runs: runs.map(({ run, axis }) => presentRunSummary(run, axis)) };
+    return { runs: runs.map(({ run, axes }) => presentRunSummary(run, axes)) };
   },
 });
 
