@@ -114,6 +114,12 @@ export function addsIntensities({ backside, spread }: StackDocument): boolean {
   return backside !== undefined || thicknessPercent > 0 || divergenceDeg > 0 || bandwidthNm > 0;
 }
 
+/** Points of the numeric core behind one point of a spread film's answer: wavelengths times angles. */
+export function spreadNodeCount(document: StackDocument): number {
+  const { wavelengthNm, angleDeg } = spreadOf(document, 1000, 45);
+  return [wavelengthNm].flat().length * [angleDeg].flat().length;
+}
+
 /** The last angle that an average over the divergence uses. */
 const GRAZING_DEG = 89.999;
 

@@ -60,13 +60,14 @@ describe('the reading view in the address', () => {
     const view = {
       shown: ['cross', 'contrast'] as const,
       light: 's' as const,
+      reading: 'crossPs' as const,
       log: true,
       unit: 'deg' as const,
     };
     const search = new URLSearchParams('compare=abc');
     writeReadingView(view, search);
     expect(readReadingView(search)).toEqual(view);
-    writeReadingView({ shown: null, light: null, log: false, unit: 'mdeg' }, search);
+    writeReadingView({ shown: null, light: null, reading: null, log: false, unit: 'mdeg' }, search);
     expect(search.toString()).toBe('compare=abc');
   });
 

@@ -16,6 +16,7 @@ export const familyLooks: Record<
   reflectance: { tone: 'reflectance', dash: 'dotted', word: 'R', width: 1.8 },
   cross: { tone: 'magnet', dash: 'solid', word: '|r|', width: 2 },
   contrast: { tone: 'ink', dash: 'dashed', word: 'contrast', width: 2 },
+  ceiling: { tone: 'accent', dash: 'dotted', word: 'share of ceiling', width: 2.2 },
 };
 
 const crossNames = { p: '|r_sp|', s: '|r_ps|' } as const;
@@ -36,22 +37,23 @@ export function readingSeries(
   log: boolean,
 ): ReadingPlotData {
   const present = readings.filter((name) => columns[name] !== undefined);
-  const both = new Set(present.map((name) => readingDefinitions[name].polarization)).size > 1;
+  const lights = present.flatMap((name) => readingDefinitions[name].polarization ?? []);
+  const both = new Set(lights).size > 1;
   const kinds = axisOrder.filter((kind) => present.some((name) => axisOf(name) === kind));
   const series = present.flatMap((name): PlotSeries[] => {
     const { family, polarization } = readingDefinitions[name];
     const kind = axisOf(name);
     const values = columns[name];
-    if (kind === null || values === undefined || !isFamily(family) || polarization === null) return [];
+    if (kind === null || values === undefined || !isFamily(family)) return [];
     const { word, width, ...look } = familyLooks[family];
-    const plain = family === 'cross' ? crossNames[polarization] : word;
+    const plain = family === 'cross' && polarization ? crossNames[polarization] : word;
     return [
       {
         ...look,
-        name: both && family !== 'cross' ? `${plain} ${polarization}` : plain,
+        name: both && family !== 'cross' && polarization ? `${plain} ${polarization}` : plain,
         x: grid,
         y: scaled(values, kind, unit),
-        width: polarization === 'p' ? width : width * 0.6,
+        width: polarization === 's' ? width * 0.6 : width,
         symbol: polarization === 's' ? 'open' : 'none',
         yAxisIndex: kinds.indexOf(kind),
       },
@@ -60,7 +62,7 @@ export function readingSeries(
   return { series, yAxes: kinds.map((kind) => axisFor(kind, unit, log)) };
 }
 
-const axisOrder = ['angle', 'reflectance', 'cross', 'contrast'] as const;
+const axisOrder = ['angle', 'reflectance', 'cross', 'contrast', 'ceiling'] as const;
 type AxisKind = (typeof axisOrder)[number];
 
 function axisOf(name: ReadingName): AxisKind | null {
@@ -74,7 +76,10 @@ function isFamily(family: string): family is Family {
 }
 
 function scaled(values: ArrayLike<number>, kind: AxisKind, unit: AngleUnit): ArrayLike<number> {
-  const factor = kind === 'angle' ? fromDegrees(1, unit) : kind === 'reflectance' ? 1 : 1000;
+  const factor =
+    kind === 'angle'
+      ? fromDegrees(1, unit)
+      : { reflectance: 1, cross: 1000, contrast: 1000, ceiling: 100 }[kind];
   return factor === 1 ? values : Float64Array.from(values, (value) => value * factor);
 }
 
@@ -94,12 +99,17 @@ function axisFor(kind: AxisKind, unit: AngleUnit, log: boolean): PlotAxis {
         include: [0],
         format: (value) => `${signed(value)} × 10⁻³`,
       };
+    case 'ceiling':
+      return { label: '% of ceiling', log, include: [0], format: (value) => `${formatNumber(value)} %` };
   }
 }
 
 function signed(value: number): string {
   return formatNumber(value, { signed: true });
 }
+
+/** From where to where m turns as its angle rises, by plane. */
+export const planeEnds = { xz: '+z toward +x', yz: '+z toward +y', xy: '+x toward +y' } as const;
 
 /** The x axis of a sweep in words. */
 export function sweepXAxis(axis: SweepAxis, layerName?: string): PlotAxis {
@@ -116,17 +126,50 @@ export function sweepXAxis(axis: SweepAxis, layerName?: string): PlotAxis {
         format: (value) => `${plain(value)} nm`,
       };
     case 'direction':
-      return { label: `direction of m in ${axis.plane} (deg)`, log, format: (value) => `${plain(value)}°` };
+      return {
+        label: `m from ${planeEnds[axis.plane]}${layerName ? `, ${layerName}` : ''} (deg)`,
+        log,
+        format: (value) => `${plain(value)}°`,
+      };
     case 'voigtScale':
-      return { label: 'Q scaled by', log, format: plain };
+      return {
+        label: `Q of ${layerName ?? 'every magnet'} times`,
+        log,
+        format: (value) => `Q × ${plain(value)}`,
+      };
     case 'repeat':
-      return { label: 'repeats', log, format: plain };
+      return { label: 'repeats', log, format: (value) => `${plain(value)} repeats` };
     case 'graded':
-      return { label: 'interface width (nm)', log, format: (value) => `${plain(value)} nm` };
+      return {
+        label: `interface width above ${layerName ?? 'the layer'} (nm)`,
+        log,
+        format: (value) => `${plain(value)} nm`,
+      };
   }
 }
 
 /** Seven digits: a grid of 1e6 points over 90 deg still has distinct values. */
 function plain(value: number): string {
   return String(Number(value.toPrecision(7)));
+}
+
+/** One reading as every plot draws it, for a map or a family: values in the unit of the screen, look and axis. */
+export function oneReading(
+  name: ReadingName,
+  values: ArrayLike<number>,
+  unit: AngleUnit,
+  log: boolean,
+): {
+  values: ArrayLike<number>;
+  look: Pick<PlotSeries, 'name' | 'tone' | 'dash' | 'width'>;
+  axis: PlotAxis;
+} | null {
+  const { series, yAxes } = readingSeries(values, { [name]: values }, [name], unit, log);
+  const [one] = series;
+  const [axis] = yAxes;
+  if (!one || !axis) return null;
+  const { polarization, family } = readingDefinitions[name];
+  const light = polarization && family !== 'cross' ? ` ${polarization}` : '';
+  const { tone, dash = 'solid', width = 2 } = one;
+  return { values: one.y, look: { name: one.name + light, tone, dash, width }, axis };
 }

@@ -4,7 +4,7 @@ import type { ReadingName } from '../../../shared/run.ts';
 import type { AngleUnit } from '../../lib/format.ts';
 
 /** The kinds of reading that a plot offers, in the order of their switches. */
-export const families = ['rotation', 'ellipticity', 'reflectance', 'cross', 'contrast'] as const;
+export const families = ['rotation', 'ellipticity', 'reflectance', 'cross', 'contrast', 'ceiling'] as const;
 export type Family = (typeof families)[number];
 export type Light = 'p' | 's' | 'ps';
 
@@ -12,6 +12,8 @@ export type Light = 'p' | 's' | 'ps';
 export type ReadingView = {
   shown: readonly Family[] | null;
   light: Light | null;
+  /** The one reading that a map or a family shows. */
+  reading: ReadingName | null;
   /** Logarithm of the absolute value on the y axes. */
   log: boolean;
   unit: AngleUnit;
@@ -25,6 +27,7 @@ export function readReadingView(search: URLSearchParams): ReadingView {
   return {
     shown: shown ? families.filter((family) => shown.includes(family)) : null,
     light: light === 'p' || light === 's' || light === 'ps' ? light : null,
+    reading: readingNames.find((name) => name === search.get('reading')) ?? null,
     log: search.get('scale') === 'log',
     unit: unit === 'deg' || unit === 'mrad' ? unit : 'mdeg',
   };
@@ -38,6 +41,7 @@ export function writeReadingView(view: ReadingView, search: URLSearchParams): vo
   };
   set('show', view.shown?.join(',') ?? null);
   set('light', view.light);
+  set('reading', view.reading);
   set('scale', view.log ? 'log' : null);
   set('unit', view.unit === 'mdeg' ? null : view.unit);
 }
@@ -46,7 +50,8 @@ export function writeReadingView(view: ReadingView, search: URLSearchParams): vo
 export function readingsOf(shown: readonly Family[], light: Light): ReadingName[] {
   return readingNames.filter((name) => {
     const { family, polarization } = readingDefinitions[name];
-    return shown.some((one) => one === family) && (polarization === null || light.includes(polarization));
+    const drawn = shown.some((one) => one === family) && name !== 'stackCeiling';
+    return drawn && (polarization === null || light.includes(polarization));
   });
 }
 

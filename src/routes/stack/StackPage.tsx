@@ -50,9 +50,9 @@ export function StackPage() {
       library={library.data.materials}
       mayEdit={mayEdit(membership)}
       onCopied={({ id }) => void navigate(generatePath(paths.stack, { stackId: id }))}
-      keepButton={({ document, axis, readings, problem }) => (
+      keepButton={({ document, sweep, readings, problem }) => (
         <KeepAsRun
-          body={{ groupId: stack.data.groupId, stackId, document, axis, readings }}
+          body={{ groupId: stack.data.groupId, stackId, document, ...sweep, readings }}
           problem={problem}
           onKept={({ id }) =>
             void navigate(generatePath(paths.run, { runId: id }), { state: { kept: true } })

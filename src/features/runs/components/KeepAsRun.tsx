@@ -1,5 +1,6 @@
 import { useState } from 'react';
 import type { CreateRun, Run } from '../../../../shared/run.ts';
+import { pointCountOf } from '../../../../shared/runAxes.ts';
 import { Button } from '../../../components/Button.tsx';
 import { ApiError } from '../../../lib/apiClient.ts';
 import { formatCount } from '../../../lib/format.ts';
@@ -17,7 +18,7 @@ export function KeepAsRun({ body, problem, onKept }: Props) {
   const create = useCreateRun();
   // One key a press; it changes only once the press has been answered.
   const [key, setKey] = useState(() => crypto.randomUUID());
-  const points = formatCount(body.axis.points);
+  const points = formatCount(pointCountOf(body));
   const failure = create.error instanceof ApiError ? create.error : null;
   const press = () => {
     create.mutate(

@@ -4,6 +4,7 @@ import { useElementWidth } from '../../../components/plot/useElementWidth.ts';
 import { formatNumber } from '../../../lib/format.ts';
 import { paths } from '../../../lib/paths.ts';
 import type { FilmLayer } from '../model/filmLayers.ts';
+import { thousandths } from '../model/moreReadings.ts';
 import { amplitudes, modulus, partOfTotal, sharesOf } from '../model/shares.ts';
 import type { Amplitude, Contributions, ShareSum } from '../model/shares.ts';
 import { ShareArrows } from './ShareArrows.tsx';
@@ -128,10 +129,6 @@ function ShareTable({ sum, onActive }: { sum: ShareSum; onActive: (index: number
       </table>
     </div>
   );
-}
-
-function thousandths(value: number, digits = 4): string {
-  return value === 0 ? '0' : `${formatNumber(value * 1000, { digits })} × 10⁻³`;
 }
 
 function phase([re, im]: readonly [number, number]): string {

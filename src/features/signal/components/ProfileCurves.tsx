@@ -12,6 +12,8 @@ type Props = {
   cursor: number | null;
 };
 
+/** Boundaries closer than this would only grey the figure, px. */
+const LINED_PX = 6;
 /** Lower rows than this have no room for a name, px. */
 const NAMED_PX = 13;
 
@@ -33,7 +35,9 @@ export function ProfileCurves({ width, stripPx, scale, pixels, curves, substrate
               {layer.label}
             </text>
           )}
-          <line x1={0} x2={right} y1={top} y2={top} className="stroke-line" />
+          {(height >= LINED_PX || index === 0) && (
+            <line x1={0} x2={right} y1={top} y2={top} className="stroke-line" />
+          )}
         </g>
       ))}
       <rect

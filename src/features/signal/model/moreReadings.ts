@@ -111,6 +111,10 @@ export function printReading(name: ReadingName, value: number | null, unit: Angl
   return thousandths(value, 4, family === 'contrast' || family === 'circular');
 }
 
-function thousandths(value: number, digits = 4, signed = false): string {
-  return value === 0 ? '0' : `${formatNumber(value * 1000, { digits, signed })} × 10⁻³`;
+/** A small number without unit in thousandths. */
+export function thousandths(value: number, digits = 4, signed = false): string {
+  if (value === 0) return '0';
+  // Its own power of ten where thousandths would need another one.
+  if (Math.abs(value) < 1e-6) return formatNumber(value, { digits, signed });
+  return `${formatNumber(value * 1000, { digits, signed })} × 10⁻³`;
 }

@@ -1,15 +1,25 @@
-import type { SweepAxis } from '../../../../shared/run.ts';
+import type { ReactNode } from 'react';
 import { LIMITS } from '../../../../shared/limits.ts';
-import type { StackLayer } from '../../../../shared/stack.ts';
+import { directionPlanes } from '../../../../shared/run.ts';
+import type { SweepAxis } from '../../../../shared/run.ts';
+import { planeEnds } from '../../../components/plot/readingSeries.ts';
 import { Quantity } from '../../../components/Quantity.tsx';
+import { targetOf } from '../model/axisTargets.ts';
+import type { AxisTarget } from '../model/axisTargets.ts';
 import { axisProblems } from '../model/sweepAxis.ts';
 
 type Props = {
   axis: SweepAxis;
-  /** Layers to choose from for a thickness. */
-  layers: readonly { layer: StackLayer; name: string }[];
+  /** What it can be of. */
+  targets: readonly AxisTarget[];
+  /** Most points of this axis. */
+  most?: number;
   onChange: (axis: SweepAxis) => void;
-  onChooseLayer: (layerId: string) => void;
+  onTarget: (id: string) => void;
+  /** Before the rest, such as the choice of the quantity. */
+  lead?: ReactNode;
+  /** After the rest. */
+  end?: ReactNode;
 };
 
 const units = {
@@ -17,31 +27,63 @@ const units = {
   angle: '°',
   thickness: 'nm',
   direction: '°',
-  voigtScale: '',
-  repeat: '',
+  voigtScale: '×',
+  repeat: '×',
   graded: 'nm',
 } as const;
 
-/** From, to, points and spacing of the swept quantity, in one line under its tab. */
-export function AxisForm({ axis, layers, onChange, onChooseLayer }: Props) {
+const limits = {
+  wavelength: { min: 1 },
+  angle: { min: 0, max: 90, below: true },
+  thickness: { min: 0 },
+  direction: { min: -360, max: 360 },
+  voigtScale: { min: 0 },
+  repeat: { min: 0, max: LIMITS.repeat, whole: true },
+  graded: { min: 0 },
+} as const;
+
+export const quietBox =
+  'h-7 max-w-44 field-sizing-content rounded-box border border-line bg-panel px-1.5 text-ink';
+
+/** Of what, from, to, points and spacing of one swept quantity, in a line. */
+export function AxisForm(props: Props) {
+  const { axis, targets, most = LIMITS.runPoints, onChange, onTarget, lead, end } = props;
   const problems = axisProblems(axis);
-  const limits =
-    axis.kind === 'angle' ? { min: 0, max: 90, below: true } : { min: axis.kind === 'thickness' ? 0 : 1 };
   const unit = units[axis.kind];
+  const bound = { unit, ...limits[axis.kind], className: '[&>span:first-child]:bg-panel' };
   return (
     <div className="flex flex-wrap items-center gap-x-2.5 gap-y-1 text-note text-muted">
-      {axis.kind === 'thickness' && (
+      {lead}
+      {targets.length > 0 && (
         <label className="inline-flex items-center gap-1.5">
           of
           <select
-            value={axis.layerId}
-            onChange={(event) => onChooseLayer(event.target.value)}
-            className="h-7 max-w-44 field-sizing-content rounded-box border border-line bg-panel px-1.5 text-ink"
+            value={targetOf(axis)}
+            onChange={(event) => onTarget(event.target.value)}
+            className={quietBox}
           >
-            {layers.map(({ layer, name }, index) => (
-              <option key={layer.id} value={layer.id}>
-                {index + 1}. {name}
-                {layer.note ? `, ${layer.note}` : ''}
+            {targets.map(({ id, label }) => (
+              <option key={id} value={id}>
+                {label}
+              </option>
+            ))}
+          </select>
+        </label>
+      )}
+      {axis.kind === 'direction' && (
+        <label className="inline-flex items-center gap-1.5">
+          turning
+          <select
+            value={axis.plane}
+            onChange={(event) => {
+              const plane = directionPlanes.find((one) => one === event.target.value);
+              if (plane) onChange({ ...axis, plane });
+            }}
+            className={quietBox}
+          >
+            {directionPlanes.map((plane) => (
+              <option key={plane} value={plane}>
+                {planeEnds[plane]}
               </option>
             ))}
           </select>
@@ -51,39 +93,35 @@ export function AxisForm({ axis, layers, onChange, onChooseLayer }: Props) {
         from
         <Quantity
           label={`${axis.kind} from`}
-          unit={unit}
           value={axis.from}
           error={problems.from}
-          {...limits}
+          {...bound}
           onChange={(from) => onChange({ ...axis, from })}
-          className="[&>span:first-child]:bg-panel"
         />
         to
         <Quantity
           label={`${axis.kind} to`}
-          unit={unit}
           value={axis.to}
           error={problems.to}
-          {...limits}
+          {...bound}
           onChange={(to) => onChange({ ...axis, to })}
-          className="[&>span:first-child]:bg-panel"
         />
       </span>
       <Quantity
-        label="points of the run"
+        label={`points of the run along ${axis.kind}`}
         unit="points"
         value={axis.points}
         whole
         min={1}
-        max={LIMITS.runPoints}
-        step={100}
+        max={most}
+        step={most > 20 ? 100 : 1}
         error={problems.points}
         onChange={(points) => onChange({ ...axis, points })}
         className="[&>span:first-child]:bg-panel"
       />
-      <label className="inline-flex items-center gap-1.5">
-        <span className="sr-only">Spacing of the points</span>
+      {axis.kind !== 'repeat' && (
         <select
+          aria-label="Spacing of the points"
           value={axis.spacing}
           onChange={(event) =>
             onChange({ ...axis, spacing: event.target.value === 'log' ? 'log' : 'linear' })
@@ -93,7 +131,8 @@ export function AxisForm({ axis, layers, onChange, onChooseLayer }: Props) {
           <option value="linear">evenly spaced</option>
           <option value="log">log spaced</option>
         </select>
-      </label>
+      )}
+      {end}
     </div>
   );
 }

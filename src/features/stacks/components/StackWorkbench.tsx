@@ -2,7 +2,9 @@ import { useCallback, useMemo, useState } from 'react';
 import type { ReactNode } from 'react';
 import type { Issue } from '../../../../shared/error.ts';
 import type { MaterialSummary } from '../../../../shared/material.ts';
-import type { ReadingName, SweepAxis } from '../../../../shared/run.ts';
+import { LIMITS } from '../../../../shared/limits.ts';
+import type { ReadingName, SweepAxes } from '../../../../shared/run.ts';
+import { pointCountOf } from '../../../../shared/runAxes.ts';
 import type { Stack, StackDocument, StackMedium, WorkingPoint } from '../../../../shared/stack.ts';
 import { addsIntensities } from '../../../../shared/stackCase.ts';
 import { Button } from '../../../components/Button.tsx';
@@ -18,8 +20,11 @@ import { isTransverse, lengthOf, workingVectors } from '../model/magnetization.t
 import { filmCautions, mediumClass, mediumName } from '../model/media.ts';
 import type { Materials } from '../model/media.ts';
 import { kerrAngles } from '../model/solveStates.ts';
+import { fitsFilm } from '../model/sweepAxis.ts';
+import type { PreviewAxes } from '../model/sweepAxis.ts';
 import { ceilingCell } from '../model/stripReadings.ts';
-import { axisOf, samePoint, usualFamilies } from '../model/viewState.ts';
+import { axisOf, samePoint, secondAxisOf, usualFamilies } from '../model/viewState.ts';
+import type { ViewState } from '../model/viewState.ts';
 import { classFill } from './classColours.ts';
 import { EditorNotices } from './EditorNotices.tsx';
 import { FilmDrawing } from './FilmDrawing.tsx';
@@ -33,7 +38,7 @@ import { WorkingPointBar } from './WorkingPointBar.tsx';
 /** What "keep as run" keeps. */
 export type KeptSweep = {
   document: StackDocument;
-  axis: SweepAxis;
+  sweep: SweepAxes;
   readings: ReadingName[];
   /** Whether the axis or the film is such that the run would be refused. */
   problem: boolean;
@@ -72,8 +77,8 @@ export function StackWorkbench({ stack, library, mayEdit, onCopied, keepButton, 
   const film = newer?.document ?? editor.draft.document;
   const [view, setView] = useView(film.workingPoint);
   const { point } = view;
-  const axis = useMemo(() => axisOf(view, film, materials), [view, film, materials]);
-  const rangeNm = wavelengthRange(point, axis);
+  const axes = useMemo(() => axesOf(view, film, materials), [view, film, materials]);
+  const rangeNm = wavelengthRange(point, axes);
   const live = useReadings(film, point);
   const vectors = useMemo(() => workingVectors(film, point.magnetization), [film, point]);
   const transverse = isTransverse(vectors);
@@ -91,13 +96,12 @@ export function StackWorkbench({ stack, library, mayEdit, onCopied, keepButton, 
   useEditorKeys({ undo: editor.undo, redo: editor.redo, save: () => void editor.save() }, canEdit);
 
   const setPoint = (change: Partial<WorkingPoint>) => setView({ point: { ...point, ...change } });
-  const keep = ({ axis, problem }: { axis: SweepAxis; problem: boolean }) => {
-    const shown = view.shown ?? usualFamilies(transverse);
-    const all = axis.points <= ALL_READINGS_UP_TO;
+  const keep = ({ axes: { axis, second, family }, problem }: { axes: PreviewAxes; problem: boolean }) => {
+    const sweep = { axis, ...(second ? { second } : {}), ...(family ? { family } : {}) };
     return keepButton({
       document: { ...film, workingPoint: point },
-      axis,
-      readings: all ? readingsOf(families, 'ps') : readingsOf(shown, view.light ?? point.input),
+      sweep,
+      readings: keptReadings(sweep, view, transverse, averaged),
       problem,
     });
   };
@@ -171,7 +175,7 @@ export function StackWorkbench({ stack, library, mayEdit, onCopied, keepButton, 
             document={film}
             materials={materials}
             view={view}
-            axis={axis}
+            axes={axes}
             notes={filmCautions(film, materials, rangeNm)
               .filter(({ kind }) => kind === 'extended')
               .map(({ text }) => text)}
@@ -191,8 +195,40 @@ export function StackWorkbench({ stack, library, mayEdit, onCopied, keepButton, 
 
 const noIssues: readonly Issue[] = [];
 
-function wavelengthRange(point: WorkingPoint, axis: SweepAxis | null): readonly [number, number] {
-  const all = axis?.kind === 'wavelength' ? [point.wavelengthNm, axis.from, axis.to] : [point.wavelengthNm];
+function axesOf(view: ViewState, film: StackDocument, materials: Materials): PreviewAxes | null {
+  const axis = axisOf(view, film, materials);
+  if (axis === null) return null;
+  const { family } = view;
+  return {
+    axis,
+    second: secondAxisOf(view, axis, film, materials),
+    family: family && fitsFilm(family, film) && !view.isMap ? family : null,
+  };
+}
+
+/** A short run stores all that the page can show, a long one what is drawn, a map at most six. */
+function keptReadings(
+  sweep: SweepAxes,
+  view: ViewState,
+  transverse: boolean,
+  averaged: boolean,
+): ReadingName[] {
+  const usual = usualFamilies(transverse);
+  if (sweep.second) {
+    const drawn = view.reading && !(averaged && view.reading === 'ceilingShare') ? [view.reading] : [];
+    return [...new Set([...drawn, ...readingsOf(usual, 'ps')])].slice(0, LIMITS.mapReadings);
+  }
+  const all = families.filter((family) => !(averaged && family === 'ceiling'));
+  if (pointCountOf(sweep) <= ALL_READINGS_UP_TO) return readingsOf(all, 'ps');
+  return readingsOf(
+    (view.shown ?? usual).filter((family) => all.includes(family)),
+    view.light ?? view.point.input,
+  );
+}
+
+function wavelengthRange(point: WorkingPoint, axes: PreviewAxes | null): readonly [number, number] {
+  const swept = [axes?.axis, axes?.second, axes?.family].find((axis) => axis?.kind === 'wavelength');
+  const all = swept ? [point.wavelengthNm, swept.from, swept.to] : [point.wavelengthNm];
   return [Math.min(...all), Math.max(...all)];
 }
 

@@ -1,26 +1,25 @@
 import { useMemo } from 'react';
 import type { ReactNode } from 'react';
-import type { AxisKind, SweepAxis } from '../../../../shared/run.ts';
+import { pointCountOf } from '../../../../shared/runAxes.ts';
 import type { StackDocument } from '../../../../shared/stack.ts';
-import { FamilyControls, ScaleControls } from '../../../components/plot/ReadingControls.tsx';
-import { ReadingPlot } from '../../../components/plot/ReadingPlot.tsx';
-import { usePlotHeight } from '../../../components/plot/usePlotHeight.ts';
-import { PlotButton } from '../../../components/plot/PlotToolbar.tsx';
+import { addsIntensities } from '../../../../shared/stackCase.ts';
+import { ScaleControls } from '../../../components/plot/ReadingControls.tsx';
 import { families, readingsOf } from '../../../components/plot/readingView.ts';
-import type { Light } from '../../../components/plot/readingView.ts';
-import { fileNameOf, saveFile, toCsv } from '../../../components/plot/saveFile.ts';
+import type { Family, Light } from '../../../components/plot/readingView.ts';
+import { usePlotHeight } from '../../../components/plot/usePlotHeight.ts';
 import { Tabs } from '../../../components/Tabs.tsx';
 import { formatCount, formatDuration } from '../../../lib/format.ts';
 import { useSweep } from '../hooks/useSweep.ts';
 import type { LiveSweep } from '../hooks/useSweep.ts';
-import { findItem, isBlock, listLayers } from '../model/items.ts';
-import { mediumName } from '../model/media.ts';
+import { axesProblem } from '../model/axesProblem.ts';
 import type { Materials } from '../model/media.ts';
-import { axisProblems, defaultAxis } from '../model/sweepAxis.ts';
+import { axisProblems, defaultAxis, sweepableKinds, withFewerPoints } from '../model/sweepAxis.ts';
+import type { PreviewAxes } from '../model/sweepAxis.ts';
 import { usualFamilies } from '../model/viewState.ts';
 import type { ViewState } from '../model/viewState.ts';
-import { AxisForm } from './AxisForm.tsx';
+import { AxesForm } from './AxesForm.tsx';
 import { SolveProblem } from './ReadingsStrip.tsx';
+import { SweepFigure } from './SweepFigure.tsx';
 
 type Props = {
   title: string;
@@ -28,118 +27,109 @@ type Props = {
   materials: Materials;
   view: ViewState;
   /** What is swept; null where there is nothing to sweep. */
-  axis: SweepAxis | null;
+  axes: PreviewAxes | null;
   transverse: boolean;
   /** What to know of the constants along the sweep. */
   notes: readonly string[];
   onView: (change: Partial<ViewState>) => void;
   /** The one primary button; absent for those who may not keep runs. */
-  keep: ((sweep: { axis: SweepAxis; problem: boolean }) => ReactNode) | null;
+  keep: ((sweep: { axes: PreviewAxes; problem: boolean }) => ReactNode) | null;
 };
 
 /** Header, working point, readings and controls above the plot and its margin below, px. */
 const PAGE_ABOVE_PLOT = 420;
 
-const kinds = [
+const tabs = [
   { value: 'wavelength', label: 'wavelength' },
   { value: 'angle', label: 'angle' },
   { value: 'thickness', label: 'thickness' },
+  { value: 'direction', label: 'magnetization' },
+  { value: 'map', label: 'two axes' },
+  { value: 'more', label: 'more' },
 ] as const;
 
+type Tab = (typeof tabs)[number]['value'];
+
+const moreKinds = ['voigtScale', 'repeat', 'graded'] as const;
+
 /** The plot of the current question: which quantity is swept, over what, and which readings are drawn. */
-export function SweepPanel({
-  title,
-  document,
-  materials,
-  view,
-  axis,
-  transverse,
-  notes,
-  onView,
-  keep,
-}: Props) {
+export function SweepPanel(props: Props) {
+  const { title, document, materials, view, axes, transverse, notes, onView, keep } = props;
   const plotHeight = usePlotHeight(PAGE_ABOVE_PLOT);
+  const averaged = addsIntensities(document);
+  const offered = useMemo<readonly Family[]>(
+    () => families.filter((family) => !(family === 'ceiling' && averaged)),
+    [averaged],
+  );
   const shown = view.shown ?? usualFamilies(transverse);
   const light: Light = view.light ?? view.point.input;
-  const readings = useMemo(() => readingsOf(shown, light), [shown, light]);
-  const sweep = useSweep(document, view.point, axis, readings);
-  const layers = listLayers(document.layers).map((layer) => ({
-    layer,
-    name: mediumName(layer.medium, materials),
-  }));
-  const nameOf = (id: string) => layers.find(({ layer }) => layer.id === id)?.name;
+  const several = axes !== null && (axes.second !== null || axes.family !== null);
+  const choices = useMemo(() => readingsOf(offered, 'ps'), [offered]);
+  const usual = `${transverse ? 'contrast' : 'rotation'}${view.point.input === 's' ? 'S' : 'P'}`;
+  const one = choices.find((name) => name === (view.reading ?? usual)) ?? 'reflectanceP';
+  const readings = useMemo(
+    () =>
+      several
+        ? [one]
+        : readingsOf(
+            shown.filter((family) => offered.includes(family)),
+            light,
+          ),
+    [several, one, shown, offered, light],
+  );
+  const sweep = useSweep(document, view.point, axes, readings);
+  const between = axes && axesProblem(axes);
+  const tab = tabOf(view);
+  const kinds = tab === 'more' || tab === 'map' ? sweepableKinds(document) : [];
 
   return (
     <section aria-label="Plot">
       <Tabs
         label="What is swept"
-        value={view.kind}
-        onValueChange={(kind) => onView({ kind, axis: null })}
-        tabs={kinds}
+        value={tab}
+        onValueChange={(next) => onView(viewOfTab(next, props))}
+        tabs={tabs}
         end={
           <>
-            <span className="text-[13px] text-muted">{axis && <SweepNote sweep={sweep} axis={axis} />}</span>
-            {axis &&
-              keep?.({ axis, problem: Object.keys(axisProblems(axis)).length > 0 || sweep.error !== null })}
+            <span className="text-[13px] text-muted">{axes && <SweepNote sweep={sweep} axes={axes} />}</span>
+            {axes && keep?.({ axes, problem: hasProblem(axes) || between !== null || sweep.error !== null })}
           </>
         }
       >
-        {axis === null ? (
-          <p className="card mt-1.5 px-4 py-10 text-center text-muted">
-            There is no layer whose thickness could be swept. Add one to the drawing.
-          </p>
+        {axes === null ? (
+          <p className="card mt-1.5 px-4 py-10 text-center text-muted">{nothingToSweep(view)}</p>
         ) : (
           <div className="card mt-1.5 px-4 pt-2.5 pb-2">
-            <div className="flex flex-wrap items-center justify-between gap-x-3 gap-y-1">
-              <AxisForm
-                axis={axis}
-                layers={layers}
-                onChange={(next) => onView({ axis: next })}
-                onChooseLayer={(layerId) =>
-                  onView({ axis: defaultAxis('thickness', document, materials, layerId) })
-                }
+            <div className="flex flex-wrap items-start justify-between gap-x-3 gap-y-1">
+              <AxesForm
+                document={document}
+                materials={materials}
+                axes={axes}
+                kinds={tab === 'more' ? kinds.filter(isMoreKind) : kinds}
+                onView={onView}
               />
-              <ScaleControls light={light} lights="ps" log={view.log} unit={view.unit} onChange={onView} />
+              <ScaleControls
+                light={light}
+                lights={several ? light : 'ps'}
+                log={view.log}
+                unit={view.unit}
+                onChange={onView}
+              />
             </div>
+            {between && <p className="text-small text-danger">{between}</p>}
             <div className="mt-1 border-t border-line pt-1.5">
-              {sweep.drawn ? (
-                <div
-                  className={`transition-opacity ${sweep.error ? 'opacity-45' : ''}`}
-                  aria-busy={sweep.pending}
-                >
-                  <ReadingPlot
-                    axis={sweep.drawn.axis}
-                    layerName={
-                      sweep.drawn.axis.kind === 'thickness' ? nameOf(sweep.drawn.axis.layerId) : undefined
-                    }
-                    grid={sweep.drawn.grid}
-                    columns={sweep.drawn.columns}
-                    readings={readings}
-                    unit={view.unit}
-                    log={view.log}
-                    height={plotHeight}
-                    marker={markerOf(sweep.drawn.axis, document, view)}
-                    onPickX={
-                      sweep.drawn.axis.kind === 'thickness' ? undefined : (x) => onView(picked(axis, x, view))
-                    }
-                    fileName={`${title} ${axis.kind}`}
-                    controls={<FamilyControls families={families} shown={shown} onChange={onView} />}
-                    downloads={
-                      <PlotButton label="Download the values as CSV" onClick={() => saveCsv(title, sweep)}>
-                        CSV
-                      </PlotButton>
-                    }
-                  />
-                </div>
-              ) : (
-                <div
-                  className="flex items-center justify-center text-muted"
-                  style={{ height: plotHeight + 36 }}
-                  role="status"
-                >
-                  {sweep.error ? '' : 'Solving the film'}
-                </div>
-              )}
+              <SweepFigure
+                title={title}
+                document={document}
+                materials={materials}
+                view={view}
+                sweep={sweep}
+                offered={offered}
+                shown={shown}
+                choices={choices}
+                height={plotHeight}
+                onView={onView}
+              />
               {sweep.error && <SolveProblem error={sweep.error} />}
               {notes.map((note) => (
                 <p key={note} className="text-small text-warn">
@@ -154,52 +144,53 @@ export function SweepPanel({
   );
 }
 
-function markerOf(axis: SweepAxis, document: StackDocument, view: ViewState): number | undefined {
-  switch (axis.kind) {
-    case 'wavelength':
-      return view.point.wavelengthNm;
-    case 'angle':
-      return view.point.angleDeg;
-    case 'thickness': {
-      const layer = findItem(document.layers, axis.layerId);
-      return layer && !isBlock(layer) ? layer.thicknessNm : undefined;
-    }
+function isMoreKind(kind: string): boolean {
+  return moreKinds.some((one) => one === kind);
+}
+
+function tabOf({ isMap, kind }: ViewState): Tab {
+  if (isMap) return 'map';
+  return tabs.find(({ value }) => value === kind)?.value ?? 'more';
+}
+
+/** The view that a tab opens: a map starts from the axis on the page, everything else from the default of its kind. */
+function viewOfTab(tab: Tab, { axes, document, materials, view }: Props): Partial<ViewState> {
+  if (tab === 'map') {
+    const axis = axes?.axis ?? defaultAxis('angle', document, materials);
+    if (!axis) return { isMap: true, family: null };
+    return { isMap: true, kind: axis.kind, axis: withFewerPoints(axis, 'map'), second: null, family: null };
+  }
+  const possible = sweepableKinds(document);
+  const kind = tab === 'more' ? (moreKinds.find((one) => possible.includes(one)) ?? 'graded') : tab;
+  return { isMap: false, kind, axis: null, family: view.family?.kind === kind ? null : view.family };
+}
+
+function nothingToSweep({ kind }: ViewState): string {
+  switch (kind) {
+    case 'direction':
+    case 'voigtScale':
+      return 'No layer of this film is magnetic. Choose a material that has a Q.';
+    case 'repeat':
+      return 'There is no repeated block in this film. Make one from the menu of a layer.';
+    default:
+      return 'There is no layer to sweep here. Add one to the drawing.';
   }
 }
 
-/** The working point moved to where the plot was clicked, in steps that can be read. */
-function picked(axis: SweepAxis, x: number, view: ViewState): Partial<ViewState> {
-  const rounded = Number(x.toFixed(Math.abs(axis.to - axis.from) < 10 ? 3 : 1));
-  const kind: AxisKind = axis.kind;
-  return {
-    point:
-      kind === 'wavelength' ? { ...view.point, wavelengthNm: rounded } : { ...view.point, angleDeg: rounded },
-  };
+function hasProblem({ axis, second, family }: PreviewAxes): boolean {
+  return [axis, second, family].some((one) => one !== null && Object.keys(axisProblems(one)).length > 0);
 }
 
-function SweepNote({ sweep, axis }: { sweep: LiveSweep; axis: SweepAxis }) {
-  if (sweep.drawn === null) return null;
-  const previewed = sweep.drawn.grid.length;
-  const time = formatDuration(sweep.drawn.seconds);
-  return axis.points > previewed
+function SweepNote({ sweep: { drawn }, axes }: { sweep: LiveSweep; axes: PreviewAxes }) {
+  if (drawn === null) return null;
+  const { second, family } = drawn;
+  const previewed = drawn.grid.length * (second?.grid.length ?? 1) * (family?.grid.length ?? 1);
+  const time = formatDuration(drawn.seconds);
+  return pointCountOf(asked(axes)) > previewed
     ? `preview of ${formatCount(previewed)} points, ${time}`
     : `${formatCount(previewed)} points, ${time}`;
 }
 
-function saveCsv(title: string, { drawn }: LiveSweep): void {
-  if (drawn === null) return;
-  const unit = drawn.axis.kind === 'angle' ? 'Deg' : 'Nm';
-  saveFile(
-    fileNameOf(`${title} ${drawn.axis.kind}`, 'csv'),
-    toCsv([
-      { header: drawn.axis.kind + unit, values: drawn.grid },
-      ...Object.entries(drawn.columns).map(([name, values]) => ({ header: csvHeader(name), values })),
-    ]),
-    'text/csv',
-  );
-}
-
-/** Angles say their unit; the rest has none. */
-function csvHeader(reading: string): string {
-  return /^(rotation|ellipticity)/.test(reading) ? `${reading}Deg` : reading;
+function asked({ axis, second, family }: PreviewAxes) {
+  return { axis, ...(second ? { second } : {}), ...(family ? { family } : {}) };
 }

@@ -1,39 +1,40 @@
 import { keepPreviousData, useQuery } from '@tanstack/react-query';
 import { useMemo } from 'react';
-import type { ReadingName, SweepAxis } from '../../../../shared/run.ts';
+import type { ReadingName } from '../../../../shared/run.ts';
 import type { StackDocument, WorkingPoint } from '../../../../shared/stack.ts';
 import { sweepQuery } from '../api/solve.ts';
-import { axisGrid, axisProblems, previewPoints } from '../model/sweepAxis.ts';
+import { axesProblem } from '../model/axesProblem.ts';
 import { readSweepResponse, sweepRequest } from '../model/solveStates.ts';
 import type { ReadingColumns, Sweep } from '../model/solveStates.ts';
+import { axisGrid, axisProblems, previewGrid } from '../model/sweepAxis.ts';
+import type { PreviewAxes } from '../model/sweepAxis.ts';
 import { useSettled } from './useSettled.ts';
 
 /** Longer than that of the readings strip, which comes first. */
 const PAUSE_MS = 110;
 
 export type LiveSweep = {
-  /** The last sweep there was: the axis and grid that its columns belong to. */
-  drawn: { axis: SweepAxis; grid: readonly number[]; columns: ReadingColumns; seconds: number } | null;
+  /** The last sweep there was: the axes and grids that its columns belong to. */
+  drawn: (Sweep & { columns: ReadingColumns; seconds: number }) | null;
   pending: boolean;
   error: Error | null;
 };
 
 /**
- * The preview of a sweep, solved anew as film, point and axis change.
+ * The preview of a sweep, solved anew as film, point and axes change.
  *
- * @param axis null while it cannot be swept
+ * @param axes null while there is nothing to sweep
  */
 export function useSweep(
   document: StackDocument,
   point: WorkingPoint,
-  axis: SweepAxis | null,
+  axes: PreviewAxes | null,
   readings: readonly ReadingName[],
 ): LiveSweep {
   const asked = useMemo(() => {
-    if (axis === null || Object.keys(axisProblems(axis)).length > 0) return null;
-    const sweep: Sweep = { axis, grid: axisGrid(axis, previewPoints(axis, document)), readings };
-    return { sweep, request: sweepRequest(document, point, sweep) };
-  }, [document, point, axis, readings]);
+    const sweep = axes && previewOf(axes, document, readings);
+    return sweep && { sweep, request: sweepRequest(document, point, sweep) };
+  }, [document, point, axes, readings]);
   const settled = useSettled(asked, PAUSE_MS);
   const query = useQuery({ ...sweepQuery(settled), placeholderData: keepPreviousData, retry: false });
   const answer = query.data;
@@ -41,8 +42,7 @@ export function useSweep(
     () =>
       answer
         ? {
-            axis: answer.sweep.axis,
-            grid: answer.sweep.grid,
+            ...answer.sweep,
             columns: readSweepResponse(answer.response, answer.sweep),
             seconds: answer.seconds,
           }
@@ -53,5 +53,24 @@ export function useSweep(
     drawn,
     pending: settled !== asked || query.isFetching,
     error: settled === asked ? query.error : null,
+  };
+}
+
+/** The sweep with as many points as a preview has; null while an axis cannot be swept. */
+function previewOf(
+  axes: PreviewAxes,
+  document: StackDocument,
+  readings: readonly ReadingName[],
+): Sweep | null {
+  const { axis, second, family } = axes;
+  const all = [axis, second, family].filter((one) => one !== null);
+  if (all.some((one) => Object.keys(axisProblems(one)).length > 0) || axesProblem(axes)) return null;
+  const points = previewGrid(axes, document);
+  const gridded = (one: typeof axis, count: number) => ({ axis: one, grid: axisGrid(one, count) });
+  return {
+    ...gridded(axis, points.axis),
+    readings,
+    ...(second ? { second: gridded(second, points.second) } : {}),
+    ...(family ? { family: gridded(family, family.points) } : {}),
   };
 }

@@ -29,6 +29,11 @@ export function listLayers(items: readonly StackItem[]): StackLayer[] {
   return items.flatMap((item) => (isBlock(item) ? listLayers(item.layers) : [item]));
 }
 
+/** Every block, outer ones before those inside them. */
+export function listBlocks(items: readonly StackItem[]): StackBlock[] {
+  return items.flatMap((item) => (isBlock(item) ? [item, ...listBlocks(item.layers)] : []));
+}
+
 /** Replaces the item of that id by what `change` makes of it: none, one or several. */
 export function replaceItem(
   items: readonly StackItem[],

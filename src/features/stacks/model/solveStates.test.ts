@@ -2,6 +2,7 @@ import { describe, expect, it } from 'vitest';
 import { librarySolveRequestSchema } from '../../../../shared/solve.ts';
 import type { SolvePoint } from '../../../../shared/solve.ts';
 import {
+  sweepPoints,
   pointRequest,
   readPointResponse,
   readSweepResponse,
@@ -85,6 +86,40 @@ describe('a sweep', () => {
     expect(sweepRequest(document, document.workingPoint, angle).cases).toMatchObject([
       { angleDeg: [0, 45], wavelengthNm: 632.8 },
       { angleDeg: [0, 45] },
+    ]);
+  });
+
+  it('runs over the family outermost and the first axis innermost', () => {
+    const map: Sweep = {
+      ...sweep,
+      readings: ['reflectanceP'],
+      second: { axis: { kind: 'voigtScale', from: 0, to: 1, points: 2, spacing: 'linear' }, grid: [0, 1] },
+      family: { axis: { ...axis, kind: 'angle', from: 10, to: 20 } as never, grid: [10, 20] },
+    };
+    const { cases } = sweepRequest(document, document.workingPoint, map);
+    expect(sweepPoints(map)).toBe(12);
+    expect(cases.map(({ angleDeg }) => angleDeg)).toEqual([
+      ...Array<number>(6).fill(10),
+      ...Array<number>(6).fill(20),
+    ]);
+    expect(cases.slice(0, 6).map(({ layers }) => layers[1])).toMatchObject([
+      { thicknessNm: 1, voigtScale: 0 },
+      { thicknessNm: 2, voigtScale: 0 },
+      { thicknessNm: 4, voigtScale: 0 },
+      { thicknessNm: 1, voigtScale: 1 },
+      { thicknessNm: 2, voigtScale: 1 },
+      { thicknessNm: 4, voigtScale: 1 },
+    ]);
+  });
+
+  it('asks for the ceiling only in the state that is read', () => {
+    const { cases } = sweepRequest(document, document.workingPoint, {
+      ...sweep,
+      readings: ['ceilingShare', 'rotationP'],
+    });
+    expect(cases.map(({ outputs }) => outputs)).toEqual([
+      ...Array<string[]>(3).fill(['ceiling']),
+      ...Array<undefined>(3).fill(undefined),
     ]);
   });
 

@@ -1,18 +1,17 @@
 import type { ReadingName, SweepAxis } from '../../../../shared/run.ts';
 import { applyAxis } from '../../../../shared/applyAxis.ts';
-import { readingDefinitions, readingOf } from '../../../../shared/readings.ts';
+import { comparedStates, outputFor, readingOf } from '../../../../shared/readings.ts';
 import type { LibrarySolveCase, LibrarySolveRequest, SolveResponse } from '../../../../shared/solve.ts';
 import type { Polarization, StackDocument, WorkingPoint } from '../../../../shared/stack.ts';
 import { addsIntensities, inMagnetizationState, toSolveCase } from '../../../../shared/stackCase.ts';
 import type { MagnetizationState } from '../../../../shared/stackCase.ts';
-import { withLayer } from './items.ts';
 
 /** Which magnetization states the readings are made of; `given` is always first. */
 export function statesFor(readings: readonly ReadingName[]): MagnetizationState[] {
-  const families = new Set(readings.map((name) => readingDefinitions[name].family));
+  const compared = readings.map(comparedStates);
   const states: MagnetizationState[] = ['given'];
-  if (families.has('rotation') || families.has('ellipticity')) states.push('zero');
-  if (families.has('contrast')) states.push('reversed');
+  if (compared.some(({ zero }) => zero)) states.push('zero');
+  if (compared.some(({ reversed }) => reversed)) states.push('reversed');
   return states;
 }
 
@@ -48,46 +47,62 @@ export function readPointResponse(response: SolveResponse): PointReadings {
   return Object.fromEntries(stripNames.map((name) => [name, readingOf(name, given, zero, reversed)]));
 }
 
-export type Sweep = { axis: SweepAxis; grid: readonly number[]; readings: readonly ReadingName[] };
+type GridAxis = { axis: SweepAxis; grid: readonly number[] };
+
+/** What the page sweeps: one axis, a second one for a map, a third for a family. */
+export type Sweep = GridAxis & {
+  readings: readonly ReadingName[];
+  second?: GridAxis | undefined;
+  family?: GridAxis | undefined;
+};
+
+/** Points of a sweep over all its axes. */
+export function sweepPoints({ grid, second, family }: Sweep): number {
+  return grid.length * (second?.grid.length ?? 1) * (family?.grid.length ?? 1);
+}
 
 /**
- * One request for a whole sweep. Over wavelength or angle a case holds the grid; a thickness needs a case at each
- * of its values. The states follow each other, each over the whole grid.
+ * One request for a whole sweep. Over wavelength or angle a case holds the grid; anything else needs a case at each
+ * of its values. The states follow each other, each over all points, the first axis innermost.
  */
 export function sweepRequest(
   document: StackDocument,
   point: WorkingPoint,
   sweep: Sweep,
 ): LibrarySolveRequest {
-  const { axis, grid } = sweep;
+  const start = { ...document, workingPoint: point };
+  const films = along(sweep.family, [start]).flatMap((film) => along(sweep.second, [film]));
+  const outputs = [...new Set(sweep.readings.flatMap((name) => outputFor(name) ?? []))];
   return {
-    cases: statesFor(sweep.readings).flatMap((state) => casesAlong(axis, grid, state, document, point)),
+    cases: statesFor(sweep.readings).flatMap((state) =>
+      films
+        .flatMap((film) => casesAlong(sweep, state, film))
+        .map((one) => (state === 'given' && outputs.length > 0 ? { ...one, outputs } : one)),
+    ),
   };
 }
 
+/** The film at every value of an axis; as it is where there is none. */
+function along(swept: GridAxis | undefined, films: StackDocument[]): StackDocument[] {
+  if (!swept) return films;
+  return swept.grid.flatMap((value) => films.map((film) => applyAxis(film, swept.axis, value)));
+}
+
 function casesAlong(
-  axis: SweepAxis,
-  grid: readonly number[],
+  { axis, grid }: GridAxis,
   state: MagnetizationState,
-  document: StackDocument,
-  point: WorkingPoint,
+  film: StackDocument,
 ): LibrarySolveCase[] {
-  const caseOf = (film: StackDocument, wavelengths: number | number[], angles: number | number[]) =>
-    inMagnetizationState(toSolveCase(film, wavelengths, angles, point.magnetization), state);
+  const { wavelengthNm, angleDeg } = film.workingPoint;
+  const caseOf = (one: StackDocument, wavelengths: number | number[], angles: number | number[]) =>
+    inMagnetizationState(toSolveCase(one, wavelengths, angles), state);
   switch (axis.kind) {
     case 'wavelength':
-      return [caseOf(document, [...grid], point.angleDeg)];
+      return [caseOf(film, [...grid], angleDeg)];
     case 'angle':
-      return [caseOf(document, point.wavelengthNm, [...grid])];
-    case 'thickness':
-      return grid.map((thicknessNm) =>
-        caseOf(withLayer(document, axis.layerId, { thicknessNm }), point.wavelengthNm, point.angleDeg),
-      );
+      return [caseOf(film, wavelengthNm, [...grid])];
     default:
-      return grid.map((value) => {
-        const film = applyAxis({ ...document, workingPoint: point }, axis, value);
-        return inMagnetizationState(toSolveCase(film, point.wavelengthNm, point.angleDeg), state);
-      });
+      return grid.map((value) => caseOf(applyAxis(film, axis, value), wavelengthNm, angleDeg));
   }
 }
 
@@ -97,7 +112,7 @@ export type ReadingColumns = Partial<Record<ReadingName, Float64Array>>;
 export function readSweepResponse(response: SolveResponse, sweep: Sweep): ReadingColumns {
   const states = statesFor(sweep.readings);
   const points = response.results.flatMap((result) => result.points);
-  const count = sweep.grid.length;
+  const count = sweepPoints(sweep);
   const at = (state: MagnetizationState, index: number) => {
     const position = states.indexOf(state);
     // A state that no reading needs was not asked for; the reading then does not look at it.

@@ -5,15 +5,19 @@ import type { StackDocument, WorkingPoint } from '../../../../shared/stack.ts';
 import { readReadingView, writeReadingView } from '../../../components/plot/readingView.ts';
 import type { Family, ReadingView } from '../../../components/plot/readingView.ts';
 
-import { findItem, isBlock } from './items.ts';
 import type { Materials } from './media.ts';
-import { defaultAxis } from './sweepAxis.ts';
+import { defaultAxis, fitsFilm, withFewerPoints } from './sweepAxis.ts';
 
 /** What the address restores. Null stands for the choice that follows from the stack. */
 export type ViewState = ReadingView & {
   point: WorkingPoint;
   kind: AxisKind;
   axis: SweepAxis | null;
+  /** Whether two axes are swept; `second` is then the other one, null for its default. */
+  isMap: boolean;
+  second: SweepAxis | null;
+  /** A parameter that the curve or map is repeated for. */
+  family: SweepAxis | null;
 };
 
 /**
@@ -21,21 +25,57 @@ export type ViewState = ReadingView & {
  * the default, never to an error: addresses are edited by hand and outlive layers.
  */
 export function readView(search: URLSearchParams, saved: WorkingPoint): ViewState {
-  const kind = search.get('axis');
-  const view: Omit<ViewState, 'axis'> = {
+  const kind = axisKinds.find((one) => one === search.get('axis')) ?? 'angle';
+  return {
     point: readPoint(search, saved),
-    kind: kind === 'wavelength' || kind === 'thickness' ? kind : ('angle' as const),
+    kind,
     ...readReadingView(search),
+    axis: readAxis(search, '', kind),
+    isMap: search.get('map') === '1',
+    second: readAxis(search, 'second-'),
+    family: readAxis(search, 'family-'),
   };
+}
+
+const axisKinds = [
+  'wavelength',
+  'angle',
+  'thickness',
+  'direction',
+  'voigtScale',
+  'repeat',
+  'graded',
+] as const;
+
+/** An axis of the address; its keys begin with the prefix. */
+function readAxis(
+  search: URLSearchParams,
+  prefix: string,
+  kind = search.get(`${prefix}axis`),
+): SweepAxis | null {
+  const text = (key: string) => search.get(prefix + key) ?? undefined;
+  const layer = text('layer');
   const axis = axisSchema.safeParse({
-    kind: view.kind,
-    ...(view.kind === 'thickness' ? { layerId: search.get('layer') ?? '' } : {}),
-    from: numberIn(search, 'from'),
-    to: numberIn(search, 'to'),
-    points: numberIn(search, 'points'),
-    spacing: search.get('spacing') ?? 'linear',
+    kind,
+    ...(layer === undefined ? {} : { layerId: layer }),
+    ...(kind === 'repeat' ? { blockId: text('block') } : {}),
+    ...(kind === 'direction' ? { plane: text('plane') } : {}),
+    from: numberIn(search, `${prefix}from`),
+    to: numberIn(search, `${prefix}to`),
+    points: numberIn(search, `${prefix}points`),
+    spacing: text('spacing') ?? 'linear',
   });
-  return { ...view, axis: axis.success ? axis.data : null };
+  return axis.success ? axis.data : null;
+}
+
+function writeAxis(search: URLSearchParams, prefix: string, axis: SweepAxis): void {
+  if ('layerId' in axis && axis.layerId !== undefined) search.set(`${prefix}layer`, axis.layerId);
+  if (axis.kind === 'repeat') search.set(`${prefix}block`, axis.blockId);
+  if (axis.kind === 'direction') search.set(`${prefix}plane`, axis.plane);
+  search.set(`${prefix}from`, String(axis.from));
+  search.set(`${prefix}to`, String(axis.to));
+  search.set(`${prefix}points`, String(axis.points));
+  if (axis.spacing === 'log') search.set(`${prefix}spacing`, 'log');
 }
 
 function readPoint(search: URLSearchParams, saved: WorkingPoint): WorkingPoint {
@@ -85,12 +125,15 @@ export function writeView(view: ViewState, saved: WorkingPoint): URLSearchParams
     search.set('m', magnetization.mode === 'direction' ? magnetization.m.join(',') : magnetization.mode);
   }
   if (view.kind !== 'angle') search.set('axis', view.kind);
-  if (axis !== null) {
-    if (axis.kind === 'thickness') search.set('layer', axis.layerId);
-    search.set('from', String(axis.from));
-    search.set('to', String(axis.to));
-    search.set('points', String(axis.points));
-    if (axis.spacing === 'log') search.set('spacing', 'log');
+  if (axis !== null) writeAxis(search, '', axis);
+  if (view.isMap) search.set('map', '1');
+  for (const [prefix, other] of [
+    ['second-', view.isMap ? view.second : null],
+    ['family-', view.family],
+  ] as const) {
+    if (other === null) continue;
+    search.set(`${prefix}axis`, other.kind);
+    writeAxis(search, prefix, other);
   }
   writeReadingView(view, search);
   return search;
@@ -117,10 +160,21 @@ export function axisOf(
   materials: Materials,
 ): SweepAxis | null {
   const { axis, kind } = view;
-  if (axis === null) return defaultAxis(kind, document, materials);
-  if (axis.kind !== 'thickness') return axis;
-  const layer = findItem(document.layers, axis.layerId);
-  return layer && !isBlock(layer) ? axis : defaultAxis(kind, document, materials);
+  if (axis !== null && fitsFilm(axis, document)) return axis;
+  return defaultAxis(kind, document, materials);
+}
+
+/** The second axis of a map: that of the address where it fits, else wavelength or angle, whichever is free. */
+export function secondAxisOf(
+  view: Pick<ViewState, 'isMap' | 'second'>,
+  first: SweepAxis | null,
+  document: StackDocument,
+  materials: Materials,
+): SweepAxis | null {
+  if (!view.isMap || first === null) return null;
+  if (view.second && fitsFilm(view.second, document)) return view.second;
+  const other = defaultAxis(first.kind === 'wavelength' ? 'angle' : 'wavelength', document, materials);
+  return other && withFewerPoints(other, 'map');
 }
 
 /** What is drawn until somebody chooses. For purely transverse m there is no rotation to draw. */

@@ -1,0 +1,171 @@
+import type { ReadingName, SweepAxis } from '../../../../shared/run.ts';
+import type { StackDocument } from '../../../../shared/stack.ts';
+import { AxesPlot } from '../../../components/plot/AxesPlot.tsx';
+import type { SweptAxis } from '../../../components/plot/AxesPlot.tsx';
+import { PlotButton } from '../../../components/plot/PlotToolbar.tsx';
+import { FamilyControls } from '../../../components/plot/ReadingControls.tsx';
+import { ReadingPlot } from '../../../components/plot/ReadingPlot.tsx';
+import { ReadingSelect } from '../../../components/plot/ReadingSelect.tsx';
+import type { Family } from '../../../components/plot/readingView.ts';
+import { fileNameOf, saveFile, toCsv } from '../../../components/plot/saveFile.ts';
+import type { LiveSweep } from '../hooks/useSweep.ts';
+import { targetName } from '../model/axisTargets.ts';
+import { findItem, isBlock } from '../model/items.ts';
+import type { Materials } from '../model/media.ts';
+import type { Sweep } from '../model/solveStates.ts';
+import type { ViewState } from '../model/viewState.ts';
+
+type Props = {
+  title: string;
+  document: StackDocument;
+  materials: Materials;
+  view: ViewState;
+  sweep: LiveSweep;
+  /** Families that curves can be drawn of, and those that are. */
+  offered: readonly Family[];
+  shown: readonly Family[];
+  /** Readings that a map or a family can show. */
+  choices: readonly ReadingName[];
+  height: number;
+  onView: (change: Partial<ViewState>) => void;
+};
+
+/** The preview as it suits its axes: curves of several readings, a family of one reading, or a map of one. */
+export function SweepFigure(props: Props) {
+  const { title, document, materials, view, sweep, offered, shown, choices, height, onView } = props;
+  const { drawn, error, pending } = sweep;
+  if (drawn === null) {
+    return (
+      <div
+        className="flex items-center justify-center text-muted"
+        style={{ height: height + 36 }}
+        role="status"
+      >
+        {error ? '' : 'Solving the film'}
+      </div>
+    );
+  }
+  const { axis, grid, columns } = drawn;
+  const swept = (one: Sweep['second']): SweptAxis | null =>
+    one ? { ...one, layerName: targetName(one.axis, document, materials) } : null;
+  const marker = markerOf(axis, document, view);
+  const [reading] = drawn.readings;
+  const values = reading && columns[reading];
+  const several = drawn.second !== undefined || drawn.family !== undefined;
+  return (
+    <div className={`transition-opacity ${error ? 'opacity-45' : ''}`} aria-busy={pending}>
+      {several && reading && values ? (
+        <AxesPlot
+          x={{ axis, grid, layerName: targetName(axis, document, materials) }}
+          second={swept(drawn.second)}
+          family={swept(drawn.family)}
+          member={0}
+          reading={reading}
+          values={values}
+          unit={view.unit}
+          log={view.log}
+          height={height}
+          marker={{
+            x: marker ?? null,
+            y: drawn.second ? (markerOf(drawn.second.axis, document, view) ?? null) : null,
+          }}
+          fileName={`${title} ${axis.kind}`}
+          controls={
+            <ReadingSelect
+              readings={choices}
+              value={reading}
+              onChange={(next) => onView({ reading: next })}
+            />
+          }
+        />
+      ) : (
+        <ReadingPlot
+          axis={axis}
+          layerName={targetName(axis, document, materials)}
+          grid={grid}
+          columns={columns}
+          readings={drawn.readings}
+          unit={view.unit}
+          log={view.log}
+          height={height}
+          marker={marker}
+          onPickX={isPointAxis(axis) ? (x) => onView(picked(axis, x, view)) : undefined}
+          fileName={`${title} ${axis.kind}`}
+          controls={<FamilyControls families={offered} shown={shown} onChange={onView} />}
+          downloads={
+            <PlotButton label="Download the values as CSV" onClick={() => saveCsv(title, drawn)}>
+              CSV
+            </PlotButton>
+          }
+        />
+      )}
+    </div>
+  );
+}
+
+function isPointAxis({ kind }: SweepAxis): boolean {
+  return kind === 'wavelength' || kind === 'angle';
+}
+
+function markerOf(axis: SweepAxis, document: StackDocument, view: ViewState): number | undefined {
+  switch (axis.kind) {
+    case 'wavelength':
+      return view.point.wavelengthNm;
+    case 'angle':
+      return view.point.angleDeg;
+    case 'thickness': {
+      const layer = findItem(document.layers, axis.layerId);
+      return layer && !isBlock(layer) ? layer.thicknessNm : undefined;
+    }
+    case 'repeat': {
+      const block = findItem(document.layers, axis.blockId);
+      return block && isBlock(block) ? block.repeat : undefined;
+    }
+    case 'graded': {
+      const layer = findItem(document.layers, axis.layerId);
+      const below = layer && !isBlock(layer) ? layer.gradedNm : document.substrateGradedNm;
+      return below ?? 0;
+    }
+    case 'voigtScale':
+      return 1;
+    case 'direction':
+      return undefined;
+  }
+}
+
+/** The working point moved to where the plot was clicked, in steps that can be read. */
+function picked(axis: SweepAxis, x: number, view: ViewState): Partial<ViewState> {
+  const rounded = Number(x.toFixed(Math.abs(axis.to - axis.from) < 10 ? 3 : 1));
+  return {
+    point:
+      axis.kind === 'wavelength'
+        ? { ...view.point, wavelengthNm: rounded }
+        : { ...view.point, angleDeg: rounded },
+  };
+}
+
+const unitEndings = {
+  wavelength: 'Nm',
+  angle: 'Deg',
+  thickness: 'Nm',
+  direction: 'Deg',
+  voigtScale: '',
+  repeat: '',
+  graded: 'Nm',
+} as const;
+
+function saveCsv(title: string, { axis, grid, columns }: NonNullable<LiveSweep['drawn']>): void {
+  saveFile(
+    fileNameOf(`${title} ${axis.kind}`, 'csv'),
+    toCsv([
+      { header: axis.kind + unitEndings[axis.kind], values: grid },
+      ...Object.entries(columns).map(([name, values]) => ({ header: csvHeader(name), values })),
+    ]),
+    'text/csv',
+  );
+}
+
+/** Angles say their unit; the rest has none. */
+function csvHeader(reading: string): string {
+  return /^(rotation|ellipticity)/.test(reading) ? `${reading}Deg` : reading;
+}
