@@ -35,7 +35,8 @@ export async function openSharedRun(
   const replaced =
     foreign.size > 0 ? ` Own materials of its group stand as constants at the working point.` : '';
   const opened = await createStack(models, actor, groupId, {
-    name: run.stackName ?? run.name,
+    // The share view does not show what the stack is called in its group.
+    name: run.name,
     description: `From the shared run "${run.name}".${replaced}`,
     document,
   });
