@@ -36,3 +36,11 @@ export function isDrawn(page: Page): Promise<boolean> {
       return new Set(new Uint32Array(pixels?.buffer ?? new ArrayBuffer(0))).size > 10;
     });
 }
+
+/** Waits for the shipped font, and for the figure that is drawn anew with it. */
+export function fontsShown(page: Page): Promise<void> {
+  return page.evaluate(async () => {
+    await document.fonts.ready;
+    await new Promise((resolve) => requestAnimationFrame(() => requestAnimationFrame(resolve)));
+  });
+}

@@ -8,6 +8,7 @@ export type VisitorOptions = {
   as?: DemoName;
   theme?: 'light' | 'dark';
   width?: number;
+  height?: number;
 };
 
 export type Visitor = {
@@ -26,12 +27,12 @@ export const PATIENCE_MS = 20_000;
 export async function openVisitor(
   browser: Browser,
   url: string,
-  { as, theme = 'light', width = 1280 }: VisitorOptions,
+  { as, theme = 'light', width = 1280, height = 900 }: VisitorOptions,
 ): Promise<Visitor> {
   const context = await browser.newContext({
     baseURL: url,
     colorScheme: theme,
-    viewport: { width, height: width < 600 ? 844 : 900 },
+    viewport: { width, height },
     locale: 'en-GB',
     timezoneId: 'UTC',
     reducedMotion: 'reduce',
