@@ -9,7 +9,7 @@ const names: Record<Family, string> = {
   reflectance: 'reflectance',
   cross: 'cross-polarized',
   contrast: 'contrast',
-  ceiling: 'share of ceiling',
+  ceiling: 'ceiling',
 };
 
 const chip =

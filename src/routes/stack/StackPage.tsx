@@ -6,6 +6,7 @@ import { LoadingState } from '../../components/LoadingState.tsx';
 import { Page, useDocumentTitle } from '../../components/Page.tsx';
 import { materialListQuery } from '../../features/materials/api/materialList.ts';
 import { KeepAsRun } from '../../features/runs/components/KeepAsRun.tsx';
+import { SamplePanel } from '../../features/sample/components/SamplePanel.tsx';
 import { mayEdit, useMembership } from '../../features/session/hooks/useSession.ts';
 import { SignalPanels } from '../../features/signal/components/SignalPanels.tsx';
 import { stackQuery } from '../../features/stacks/api/stack.ts';
@@ -59,6 +60,7 @@ export function StackPage() {
           }
         />
       )}
+      samplePanel={(film) => <SamplePanel {...film} />}
       explanation={({ onPoint, ...film }) => (
         <SignalPanels
           {...film}

@@ -17,13 +17,14 @@ import { LayerRow } from './LayerRow.tsx';
 import { MagnetizationChip } from './MagnetizationChip.tsx';
 import { MediumNotes } from './MediumNotes.tsx';
 import { MediumPicker } from './MediumPicker.tsx';
+import { GradedBand, SlabBreak } from './SampleMarks.tsx';
 
 /** Height that the layers of the drawing keep to where they can, px. */
 const ROOM = 430;
 
 /** The film from its surface down: layers on a compressed depth scale, blocks in brackets, the substrate fading out. */
 export function CrossSection({ document }: { document: StackDocument }) {
-  const { edit, announce } = useFilm();
+  const { materials, edit, announce } = useFilm();
   const onDrop = useCallback(
     (id: string, target: DropTarget) => {
       edit?.((now) => ({ ...now, layers: dropItem(now.layers, id, target) }), null);
@@ -41,7 +42,12 @@ export function CrossSection({ document }: { document: StackDocument }) {
     return new Map(layers.map((layer, index) => [layer.id, px[index]!]));
   }, [document.layers]);
 
-  const rowsOf = (items: readonly StackItem[], startNm: number, prefix: string) => {
+  const fillBefore = (items: readonly StackItem[], index: number, first: string) => {
+    const above = listLayers(items.slice(0, index)).at(-1);
+    return above ? fillOf(above.medium) : first;
+  };
+  const fillOf = (medium: StackMedium) => classFill[mediumClass(medium, materials)];
+  const rowsOf = (items: readonly StackItem[], startNm: number, prefix: string, fillAbove: string) => {
     let depthNm = startNm;
     return items.map((item, index) => {
       const position = `${prefix}${index + 1}`;
@@ -50,13 +56,14 @@ export function CrossSection({ document }: { document: StackDocument }) {
       depthNm += thicknessOf(item);
       return isBlock(item) ? (
         <BlockFrame key={item.id} block={item} periodNm={periodOf(item.layers)} depthNm={depthNm} {...common}>
-          {rowsOf(item.layers, topNm, `${position}.`)}
+          {rowsOf(item.layers, topNm, `${position}.`, fillBefore(items, index, fillAbove))}
         </BlockFrame>
       ) : (
         <LayerRow
           key={item.id}
           layer={item}
           height={heights.get(item.id) ?? 34}
+          fillAbove={fillBefore(items, index, fillAbove)}
           // The face of a block's last layer is that of the block, many repetitions further down.
           depthNm={prefix !== '' && index === items.length - 1 ? null : depthNm}
           {...common}
@@ -82,10 +89,13 @@ export function CrossSection({ document }: { document: StackDocument }) {
         </div>
       )}
       <ol aria-label="Layers, from the surface down" className="relative">
-        {rowsOf(document.layers, 0, '')}
+        {rowsOf(document.layers, 0, '', 'transparent')}
       </ol>
       <DepthTick depthNm={0} atTop />
-      <Substrate document={document} />
+      <Substrate
+        document={document}
+        fillAbove={fillBefore(document.layers, document.layers.length, 'transparent')}
+      />
       {target && (
         <div
           className="pointer-events-none absolute inset-x-0 z-10 h-[3px] -translate-y-1/2 rounded-full bg-accent"
@@ -101,10 +111,12 @@ function periodOf(items: readonly StackItem[]): number {
 }
 
 function thicknessOf(item: StackItem): number {
-  return isBlock(item) ? item.repeat * periodOf(item.layers) : item.thicknessNm;
+  if (isBlock(item)) return item.repeat * periodOf(item.layers);
+  // An oxide is thicker than the metal that it grew from.
+  return item.thicknessNm + (item.oxide ? item.oxide.consumedNm * (item.oxide.expansion - 1) : 0);
 }
 
-function Substrate({ document }: { document: StackDocument }) {
+function Substrate({ document, fillAbove }: { document: StackDocument; fillAbove: string }) {
   const { materials, edit, issues } = useFilm();
   const { substrate, substrateM } = document;
   const name = mediumName(substrate, materials);
@@ -121,6 +133,7 @@ function Substrate({ document }: { document: StackDocument }) {
         ...(substrateM ? { backgroundImage: `${magnetHatch}` } : {}),
       }}
     >
+      {document.substrateGradedNm !== undefined && <GradedBand fillAbove={fillAbove} />}
       <div className="flex items-center gap-1.5 px-3">
         {edit ? (
           <MediumPicker
@@ -156,6 +169,7 @@ function Substrate({ document }: { document: StackDocument }) {
           onChange={edit ? (medium) => change(medium, null) : undefined}
         />
       </div>
+      {document.backside && <SlabBreak backside={document.backside} />}
     </div>
   );
 }

@@ -1,4 +1,5 @@
 import { useCallback, useMemo, useState } from 'react';
+import type { ReactNode } from 'react';
 import type { Issue } from '../../../../shared/error.ts';
 import type { MaterialSummary } from '../../../../shared/material.ts';
 import type { StackDocument, WorkingPoint } from '../../../../shared/stack.ts';
@@ -25,6 +26,8 @@ type Props = {
   /** What a layer can be made of, for the editor. */
   library?: readonly MaterialSummary[];
   edit: EditDocument | null;
+  /** Below the layers, such as the settings of a real sample. */
+  children?: ReactNode;
 };
 
 const noIssues: readonly Issue[] = [];
@@ -62,6 +65,7 @@ export function FilmDrawing(props: Props) {
       </div>
       <CrossSection document={document} />
       <FilmCautions document={document} />
+      {props.children}
       <p role="status" className="sr-only">
         {said}
       </p>

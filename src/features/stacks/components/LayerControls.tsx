@@ -51,13 +51,13 @@ export const LayerControls = memo(function LayerControls({ layer, position, onGr
             medium={layer.medium}
             label={`layer ${position}`}
             onChange={changeMedium}
-            className={`text-lead font-semibold ${magnetic ? 'bg-paper/85' : ''}`}
+            className={`shrink-0 text-left text-lead font-semibold wrap-anywhere ${magnetic ? 'max-w-[30%] bg-paper/85' : 'max-w-[55%]'}`}
           >
             {name}
           </MediumPicker>
         ) : (
           <span
-            className={`rounded-box px-2 py-[2px] text-lead font-semibold ${magnetic ? 'bg-paper/85' : 'ml-1'}`}
+            className={`shrink-0 rounded-box px-2 py-[2px] text-lead font-semibold wrap-anywhere ${magnetic ? 'max-w-[30%] bg-paper/85' : 'ml-1 max-w-[55%]'}`}
           >
             {name}
           </span>

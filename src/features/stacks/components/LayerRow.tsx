@@ -6,6 +6,7 @@ import { DepthTick } from './DepthTick.tsx';
 import { useFilm } from './film.ts';
 import { stepItem } from './itemActions.ts';
 import { LayerControls } from './LayerControls.tsx';
+import { BottomPart, GradedBand, TopParts } from './SampleMarks.tsx';
 
 type Props = {
   layer: StackLayer;
@@ -14,12 +15,14 @@ type Props = {
   height: number;
   /** Depth of its lower face, nm; null where the tick would say nothing new. */
   depthNm: number | null;
+  /** Fill of what lies above, which a graded interface runs over from. */
+  fillAbove: string;
   dragged: boolean;
   onGrab?: ((id: string) => (event: PointerEvent) => void) | undefined;
 };
 
 /** One layer of the drawing: its colour, its height, the depth of its lower face, and its controls. */
-export function LayerRow({ layer, position, height, depthNm, dragged, onGrab }: Props) {
+export function LayerRow({ layer, position, height, depthNm, fillAbove, dragged, onGrab }: Props) {
   const { materials, edit, announce } = useFilm();
   const onKeyDown = (event: KeyboardEvent) => {
     if (!edit || !event.altKey || event.defaultPrevented) return;
@@ -33,7 +36,7 @@ export function LayerRow({ layer, position, height, depthNm, dragged, onGrab }: 
       data-drop-id={layer.id}
       data-drop-kind="layer"
       aria-label={`${mediumName(layer.medium, materials)}, layer ${position}`}
-      className={`group relative flex flex-col justify-center border-b-[1.5px] border-paper ${dragged ? 'opacity-45' : ''}`}
+      className={`group relative flex flex-col border-b-[1.5px] border-paper ${dragged ? 'opacity-45' : ''}`}
       style={{
         minHeight: height,
         background: classFill[mediumClass(layer.medium, materials)],
@@ -41,7 +44,12 @@ export function LayerRow({ layer, position, height, depthNm, dragged, onGrab }: 
       }}
       onKeyDown={onKeyDown}
     >
-      <LayerControls layer={layer} position={position} onGrab={onGrab} />
+      {layer.gradedNm !== undefined && <GradedBand fillAbove={fillAbove} />}
+      <TopParts layer={layer} />
+      <div className="flex flex-1 flex-col justify-center">
+        <LayerControls layer={layer} position={position} onGrab={onGrab} />
+      </div>
+      <BottomPart layer={layer} />
       {depthNm !== null && <DepthTick depthNm={depthNm} />}
     </li>
   );

@@ -14,10 +14,11 @@ import type { AngleUnit } from '../../../lib/format.ts';
 import { useEditorKeys } from '../hooks/useEditorKeys.ts';
 import { useReadings } from '../hooks/useReadings.ts';
 import { useStackEditor } from '../hooks/useStackEditor.ts';
+import type { EditDocument } from '../hooks/useStackEditor.ts';
 import { useView } from '../hooks/useView.ts';
 import { issueTarget } from '../model/issueTarget.ts';
 import { isTransverse, lengthOf, workingVectors } from '../model/magnetization.ts';
-import { filmCautions, mediumClass, mediumName } from '../model/media.ts';
+import { filmCautions, isMagnetic, mediumClass, mediumName } from '../model/media.ts';
 import type { Materials } from '../model/media.ts';
 import { kerrAngles } from '../model/solveStates.ts';
 import { fitsFilm } from '../model/sweepAxis.ts';
@@ -30,6 +31,7 @@ import { EditorNotices } from './EditorNotices.tsx';
 import { FilmDrawing } from './FilmDrawing.tsx';
 import { FilmHeader } from './FilmHeader.tsx';
 import { LeaveGuard } from './LeaveGuard.tsx';
+import { MediumPicker } from './MediumPicker.tsx';
 import { ReadingsStrip } from './ReadingsStrip.tsx';
 import { StackDescription } from './StackDescription.tsx';
 import { SweepPanel } from './SweepPanel.tsx';
@@ -54,6 +56,19 @@ export type ExplainedFilm = {
   onPoint: (change: Partial<WorkingPoint>) => void;
 };
 
+/** The film as the panel of a real sample changes it. */
+export type SampledFilm = {
+  document: StackDocument;
+  edit: EditDocument | null;
+  nameOf: (medium: StackMedium) => string;
+  isMagnetic: (medium: StackMedium) => boolean;
+  pickMedium: (props: {
+    medium: StackMedium;
+    label: string;
+    onChange: (medium: StackMedium) => void;
+  }) => ReactNode;
+};
+
 type Props = {
   stack: Stack;
   library: readonly MaterialSummary[];
@@ -63,13 +78,23 @@ type Props = {
   keepButton: (sweep: KeptSweep) => ReactNode;
   /** Below the plot: where the readings come from. */
   explanation: (film: ExplainedFilm) => ReactNode;
+  /** Below the drawing: what of the sample is not ideal. */
+  samplePanel: (film: SampledFilm) => ReactNode;
 };
 
 /** Up to here a run stores every reading that the page can show; above, those that are drawn. */
 const ALL_READINGS_UP_TO = 20_000;
 
 /** The heart of the program: the film on the left, its readings and the current question on the right. */
-export function StackWorkbench({ stack, library, mayEdit, onCopied, keepButton, explanation }: Props) {
+export function StackWorkbench({
+  stack,
+  library,
+  mayEdit,
+  onCopied,
+  keepButton,
+  explanation,
+  samplePanel,
+}: Props) {
   const materials = useMemo<Materials>(() => new Map(library.map((one) => [one.id, one])), [library]);
   const editor = useStackEditor(stack);
   const [showsNewer, setShowsNewer] = useState(false);
@@ -83,6 +108,7 @@ export function StackWorkbench({ stack, library, mayEdit, onCopied, keepButton, 
   const vectors = useMemo(() => workingVectors(film, point.magnetization), [film, point]);
   const transverse = isTransverse(vectors);
   const averaged = addsIntensities(film);
+  const nameOf = (medium: StackMedium) => mediumName(medium, materials);
   const describe = useCallback(
     (medium: StackMedium) => ({
       name: mediumName(medium, materials),
@@ -128,7 +154,15 @@ export function StackWorkbench({ stack, library, mayEdit, onCopied, keepButton, 
             rangeNm={rangeNm}
             issues={issues}
             edit={canEdit ? editor.editDocument : null}
-          />
+          >
+            {samplePanel({
+              document: film,
+              edit: canEdit ? editor.editDocument : null,
+              nameOf,
+              isMagnetic: (medium) => isMagnetic(medium, materials),
+              pickMedium: pickMedium(materials),
+            })}
+          </FilmDrawing>
         </div>
         <StackDescription
           text={newer?.description ?? editor.draft.description}
@@ -191,6 +225,17 @@ export function StackWorkbench({ stack, library, mayEdit, onCopied, keepButton, 
       <LeaveGuard dirty={editor.dirty && mayEdit} />
     </div>
   );
+}
+
+/** The control of the drawing that chooses a medium, for panels below it. */
+function pickMedium(materials: Materials): SampledFilm['pickMedium'] {
+  return function pick({ medium, label, onChange }) {
+    return (
+      <MediumPicker medium={medium} label={label} onChange={onChange} className="bg-paper font-semibold">
+        {mediumName(medium, materials)}
+      </MediumPicker>
+    );
+  };
 }
 
 const noIssues: readonly Issue[] = [];

@@ -24,6 +24,11 @@ export function mediumName(medium: StackMedium, materials: Materials): string {
     return material ? formatFormula(material.formula) : medium.material;
   }
   if (medium.label) return medium.label;
+  if (medium.mixture) {
+    const { parts, fraction } = medium.mixture;
+    const percent = Math.round(100 * fraction);
+    return `${parts.map((part) => mediumName(part, materials)).join('/')} ${100 - percent}:${percent}`;
+  }
   if (medium.epsilon !== undefined) return 'free tensor';
   if (medium.index === undefined || isSampled(medium.index)) return 'table';
   const [n, k] = toComplex(medium.index);
@@ -39,6 +44,12 @@ export function isSampled<Value>(value: Value | { samples: Value[] }): value is 
 export function mediumClass(medium: StackMedium, materials: Materials): MaterialClass {
   const material = materialOf(medium, materials);
   if (material) return material.class;
+  if (medium.mixture) {
+    const [first, second] = medium.mixture.parts;
+    return isMagnetic(medium, materials)
+      ? 'magnet'
+      : mediumClass(medium.mixture.fraction > 0.5 ? second : first, materials);
+  }
   if (medium.voigt !== undefined || medium.epsilon !== undefined) return 'magnet';
   if (medium.index === undefined || isSampled(medium.index)) return 'refractory';
   const [n, k] = toComplex(medium.index);
@@ -48,6 +59,7 @@ export function mediumClass(medium: StackMedium, materials: Materials): Material
 
 /** Whether an m of this medium does anything. */
 export function isMagnetic(medium: StackMedium, materials: Materials): boolean {
+  if (medium.mixture) return medium.mixture.parts.some((part) => isMagnetic(part, materials));
   if (medium.material === undefined) return medium.voigt !== undefined || medium.quadratic !== undefined;
   return (materialOf(medium, materials)?.voigtRangeNm ?? null) !== null;
 }
