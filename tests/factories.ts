@@ -82,6 +82,18 @@ export function buildDocument(overrides: Partial<StackDocument> = {}): StackDocu
   };
 }
 
+/** A stack that the fast path does not take: a run of it lasts long enough to be looked at, cancelled or lost. */
+export function buildSlowDocument(): StackDocument {
+  const document = buildDocument();
+  const underlayer: StackDocument['substrate'] = {
+    mixture: { model: 'bruggeman', fraction: 0.5, parts: [{ index: 1.5 }, { index: 2 }] },
+  };
+  return {
+    ...document,
+    layers: [...document.layers, { id: 'underlayer', medium: underlayer, thicknessNm: 40 }],
+  };
+}
+
 type StackOverrides = { name?: string; document?: StackDocument; author?: User };
 
 /** Version 1 of a stack. */

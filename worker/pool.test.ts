@@ -6,7 +6,7 @@ import { pathToFileURL } from 'node:url';
 import { afterAll, beforeAll, describe, expect, it } from 'vitest';
 import type { SweepAxis } from '../shared/run.ts';
 import type { SolveRequest } from '../shared/solve.ts';
-import type { StackDocument } from '../shared/stack.ts';
+import type { StackDocument, StackMedium } from '../shared/stack.ts';
 import { solveRequest } from './optics/solveRequest.ts';
 import { createPool } from './pool.ts';
 import type { ComputePool } from './pool.ts';
@@ -48,8 +48,19 @@ const request: SolveRequest = {
 /** Threads that translate TypeScript start slowly on a busy machine. */
 const SLOW_MS = 60_000;
 
-/** A sweep that takes this machine some minutes. */
-const endless = sweepOf(angles(1_000_000));
+const mixed: StackMedium = {
+  mixture: { model: 'bruggeman', fraction: 0.5, parts: [{ index: 1.5 }, { index: 2 }] },
+};
+
+/** A sweep that takes this machine some time. */
+const endless: SweepInput = {
+  ...sweepOf(angles(1_000_000)),
+  document: {
+    ...document,
+    // A mixed layer: no fast path.
+    layers: [...document.layers, { id: 'underlayer', medium: mixed, thicknessNm: 40 }],
+  },
+};
 
 function failureOf(work: Promise<unknown>): Promise<ComputeError> {
   return work.then(
@@ -84,7 +95,7 @@ describe('the pool', () => {
       },
     });
     expect(points).toBe(50_000);
-    expect(columns).toHaveLength(5);
+    expect(columns).toHaveLength(4);
     expect(columns.every((column) => column.every(Number.isFinite))).toBe(true);
     expect(seen).toEqual([...seen].sort((a, b) => a - b));
     expect(seen.at(-1)).toBe(50_000);

@@ -15,7 +15,7 @@ import type { Models } from '../models/models.ts';
 import type { Run } from '../models/run.ts';
 import { createMaterialStore } from '../services/materialStore.ts';
 import { cancelRun } from '../services/runs.ts';
-import { buildGroup, buildRun, buildRunInput, buildUser } from '../../tests/factories.ts';
+import { buildGroup, buildRun, buildRunInput, buildUser, buildSlowDocument } from '../../tests/factories.ts';
 import { waitForRun } from '../../tests/waitForRun.ts';
 import { RunQueue } from './runQueue.ts';
 import { startJobs } from './start.ts';
@@ -66,7 +66,9 @@ async function startHost(compute: 'on' | 'off' = 'on'): Promise<Jobs> {
 /** A run in the queue. */
 async function enqueued(axis: SweepAxis = longer): Promise<Run> {
   const group = await buildGroup(models);
-  const run = await buildRun(models, group, { input: buildRunInput({ axis, readings: ['rotationP'] }) });
+  const run = await buildRun(models, group, {
+    input: buildRunInput({ document: buildSlowDocument(), axis, readings: ['rotationP'] }),
+  });
   await models.sequelize.transaction((transaction) => queue.send(run.id, transaction));
   return run;
 }

@@ -49,6 +49,16 @@ export function generalCost({ document, ...axes }: SweepAxes & { document: Stack
   return slab * averageCost(document) * (graded ? GRADED_COST : 1);
 }
 
+/** Layers whose waves have to be found without a formula, which takes far longer than all else of a layer. */
+export function countAnisotropic(items: StackItem[]): number {
+  return items.reduce((sum, item) => {
+    if ('layers' in item) return sum + countAnisotropic(item.layers);
+    const { epsilon, extraordinary, quadratic } = item.medium;
+    const isAnisotropic = epsilon !== undefined || extraordinary !== undefined || quadratic !== undefined;
+    return sum + (isAnisotropic ? 1 : 0);
+  }, 0);
+}
+
 function averageCost({ spread }: StackDocument): number {
   const { thicknessPercent = 0, divergenceDeg = 0, bandwidthNm = 0 } = spread ?? {};
   return NODES ** [thicknessPercent, divergenceDeg, bandwidthNm].filter((deviation) => deviation > 0).length;

@@ -7,7 +7,7 @@ import {
   microsecondsPerPoint,
   microsecondsPerStack,
 } from './cost.ts';
-import { generalCost, hasScalarMedia, isGeneralSomewhere } from './generalStack.ts';
+import { countAnisotropic, generalCost, hasScalarMedia, isGeneralSomewhere } from './generalStack.ts';
 import { countStates, statesNeeded } from './magnetizationStates.ts';
 import type { SweepInput } from './sweepInput.ts';
 
@@ -29,6 +29,9 @@ const CHUNKS_PER_THREAD = 4;
 const FEWEST_POINTS = 32;
 /** Layers x wavelengths whose constants one chunk holds at a time (about 100 bytes each). */
 const MOST_SAMPLES = 200_000;
+
+/** Of one layer at one point. */
+const ANISOTROPIC_MICROSECONDS = 100;
 
 export function chunkPoints({ first, second }: Chunk): number {
   return first.count * second.count;
@@ -90,7 +93,10 @@ function microsecondsOf(input: SweepInput, roles: { first: AxisRole; second: Axi
   const perStack = pointsPerStack(input, roles);
   const isFast = perStack > 1 && !isGeneralSomewhere(input) && hasScalarMedia(document);
   const asksCeiling = readings.some((name) => name === 'ceilingShare' || name === 'stackCeiling');
-  const solving = isFast && !asksCeiling ? fastMicrosecondsPerPoint(layers) : microsecondsPerPoint(layers);
+  const solving =
+    isFast && !asksCeiling
+      ? fastMicrosecondsPerPoint(layers)
+      : microsecondsPerPoint(layers) + ANISOTROPIC_MICROSECONDS * countAnisotropic(layers);
   const states = countStates(statesNeeded(input, readings));
   return states * (generalCost(input) * solving + microsecondsPerStack(layers) / perStack);
 }

@@ -41,8 +41,11 @@ export type SweepResult = {
 };
 
 const PROGRESS_MS = 200;
-/** How long threads get to see the cancel flag before they are ended: a single point of a huge stack is slow. */
-const GRACE_MS = 60;
+/**
+ * How long threads get to see the cancel flag before they are ended. A single point of a huge stack is slow, but new
+ * threads take seconds to load their code, above all on a busy machine.
+ */
+const GRACE_MS = 500;
 
 let sweepsStarted = 0;
 
@@ -52,7 +55,7 @@ let sweepsStarted = 0;
  *
  * @param submit solves one chunk; rejects with a ComputeError, at the latest when its signal aborts
  * @throws ComputeError; nothing of the sweep is running any more when it is thrown, except on `cancelled`, where
- *   threads that do not answer within 60 ms are being ended
+ *   threads that do not answer within half a second are being ended
  */
 export async function runSweep(
   input: SweepInput,

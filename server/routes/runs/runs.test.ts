@@ -17,6 +17,7 @@ import {
   buildMaterial,
   buildPeople,
   buildRun,
+  buildSlowDocument,
   buildStack,
 } from '../../../tests/factories.ts';
 import { waitForRun } from '../../../tests/waitForRun.ts';
@@ -371,7 +372,7 @@ describe('downloads', () => {
 
 describe('a long run', () => {
   it('reports progress as events and is over at once when it is cancelled', async () => {
-    const run = await start({ axis: endless, readings: ['rotationP'] });
+    const run = await start({ document: buildSlowDocument(), axis: endless, readings: ['rotationP'] });
     const events = await eventsUntil(run.id, async (seen) => {
       if (seen.filter(({ state }) => state === 'running').length < 3) return;
       const asked = performance.now();
@@ -389,7 +390,7 @@ describe('a long run', () => {
   });
 
   it('is dropped when it is deleted on the way', async () => {
-    const run = await start({ axis: endless, readings: ['rotationP'] });
+    const run = await start({ document: buildSlowDocument(), axis: endless, readings: ['rotationP'] });
     await waitForRun(server.models, run.id, 'running');
     const events = eventsUntil(run.id, async (seen) => {
       if (seen.length === 1) await editor.delete(`/api/v1/runs/${run.id}`).expect(204);
