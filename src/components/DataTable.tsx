@@ -144,7 +144,7 @@ function BodyCell<Row>({ column, row, isName }: { column: Column<Row>; row: Row;
       <th
         role="rowheader"
         scope="row"
-        className={`px-3 py-2 align-middle font-semibold max-md:block max-md:pt-0 max-md:pr-14 max-md:pb-1 ${align}`}
+        className={`px-3 py-2 align-middle font-semibold wrap-anywhere max-md:block max-md:pt-0 max-md:pr-14 max-md:pb-1 ${align}`}
       >
         {content}
       </th>
