@@ -1,8 +1,10 @@
+import fc from 'fast-check';
 import { describe, expect, it } from 'vitest';
 import { applyAxis } from '../../shared/applyAxis.ts';
 import { outputFor, readingOf } from '../../shared/readings.ts';
 import { readingNames } from '../../shared/run.ts';
 import type { ReadingName, SweepAxis } from '../../shared/run.ts';
+import { pointCountOf } from '../../shared/runAxes.ts';
 import type { SolveCase } from '../../shared/solve.ts';
 import { inMagnetizationState, toSolveCase } from '../../shared/stackCase.ts';
 import { inputAzimuthOf } from '../../shared/stack.ts';
@@ -10,7 +12,9 @@ import type { StackDocument, StackLayer } from '../../shared/stack.ts';
 import { resolveCase } from '../dispersion/resolveCase.ts';
 import { solveRequest } from '../optics/solveRequest.ts';
 import { axisValues } from './axisValues.ts';
+import { planChunks } from './planChunks.ts';
 import { SharedResult } from './sharedResult.ts';
+import type { SweepInput } from './sweepInput.ts';
 import { SweepSolver } from './sweepSolver.ts';
 
 const film: StackLayer = {
@@ -136,6 +140,147 @@ describe.each(general)('a stack with %s', (_what, document) => {
       });
     },
   );
+});
+
+/** All of a sweep of several axes, chunk by chunk as the threads get them. */
+function sweepAll(input: SweepInput): Float64Array[] {
+  const points = pointCountOf(input);
+  const result = SharedResult.allocate(points, input.readings.length);
+  const solver = new SweepSolver(input);
+  for (const chunk of planChunks(input, 2)) solver.solve(chunk, result);
+  expect(result.done).toBe(points);
+  return result.columns;
+}
+
+/** Expects every point to be what a document with the values of all axes put in gives, first axis innermost. */
+function expectPointByPoint(input: SweepInput): void {
+  const columns = sweepAll(input);
+  const along = (documents: StackDocument[], axis: SweepAxis | undefined) =>
+    axis
+      ? documents.flatMap((one) => axisValues(axis).map((value) => applyAxis(one, axis, value)))
+      : documents;
+  const documents = along(along(along([input.document], input.family), input.second), input.axis);
+  const rows = documents.map((one) => readingsAt(one, input.readings));
+  columns.forEach((column, position) =>
+    expectClose(
+      column,
+      rows.map((row) => row[position]!),
+    ),
+  );
+}
+
+const span = (points: number) => ({ points, spacing: 'linear' }) as const;
+const byKind = {
+  wavelength: { kind: 'wavelength', from: 400, to: 800, ...span(5) },
+  angle: { kind: 'angle', from: 0, to: 85, ...span(6) },
+  thickness: { kind: 'thickness', layerId: 'film', from: 0, to: 12, ...span(4) },
+  spacer: { kind: 'thickness', layerId: 'spacer', from: 0.5, to: 4, ...span(3) },
+  direction: { kind: 'direction', plane: 'xz', from: 0, to: 90, ...span(4) },
+  oneDirection: { kind: 'direction', plane: 'xy', layerId: 'film', from: -45, to: 135, ...span(5) },
+  voigtScale: { kind: 'voigtScale', from: 0, to: 2, ...span(3) },
+  repeat: { kind: 'repeat', blockId: 'block', from: 0, to: 6, ...span(4) },
+  graded: { kind: 'graded', layerId: 'film', from: 0, to: 0.4, ...span(2) },
+} as const satisfies Record<string, SweepAxis>;
+
+describe('a sweep of several axes', () => {
+  const readings: ReadingName[] = ['rotationP', 'ellipticityS', 'oddRotationS', 'reflectanceP', 'polarPart'];
+  it.each([
+    ['wavelength', 'angle', null],
+    ['angle', 'wavelength', 'voigtScale'],
+    ['wavelength', 'thickness', null],
+    ['thickness', 'angle', 'repeat'],
+    ['thickness', 'spacer', 'angle'],
+    ['direction', 'wavelength', null],
+    ['angle', 'direction', 'thickness'],
+    ['direction', 'repeat', 'wavelength'],
+    ['voigtScale', 'angle', 'oneDirection'],
+  ] as const)('%s, %s, %s: every point is what its own document gives', (first, second, family) => {
+    const axes = {
+      axis: byKind[first],
+      second: byKind[second],
+      ...(family ? { family: byKind[family] } : {}),
+    };
+    expectPointByPoint({ document: stack(), ...axes, readings, materials: [] });
+  });
+
+  it('sweeps an interface width, which makes the stack a graded one on the way', () => {
+    const input: SweepInput = {
+      document: stack(),
+      axis: byKind.graded,
+      readings: ['reflectanceP', 'crossSp'],
+      materials: [],
+    };
+    expectPointByPoint(input);
+  });
+
+  it('turns m as light sees it, where the working point reverses or replaces it', () => {
+    for (const magnetization of [
+      { mode: 'reversed' as const },
+      { mode: 'direction' as const, m: [0, 0.6, 0] as [number, number, number] },
+    ]) {
+      const workingPoint = { ...stack().workingPoint, magnetization };
+      const columns = sweepAll({
+        document: stack([film], { workingPoint }),
+        axis: { kind: 'direction', plane: 'xz', from: 0, to: 180, points: 2, spacing: 'linear' },
+        readings: ['rotationP'],
+        materials: [],
+      });
+      const length = magnetization.mode === 'direction' ? 0.6 : Math.hypot(0.3, 0.4, 0.8);
+      const polar = stack([{ ...film, m: [0, 0, length] }]);
+      expectClose([columns[0]![0]!], readingsAt(polar, ['rotationP']));
+      // In polar geometry the rotation is odd in m.
+      expect(columns[0]![1]).toBeCloseTo(-columns[0]![0]!, 6);
+      expect(Math.abs(columns[0]![0]!)).toBeGreaterThan(1e-3);
+    }
+  });
+});
+
+describe('the fast path of a sweep', () => {
+  it('agrees with the general one on random stacks to 1e-9', () => {
+    const layer = fc.record({
+      n: fc.double({ min: 0.2, max: 4, noNaN: true }),
+      k: fc.double({ min: 0, max: 5, noNaN: true }),
+      thicknessNm: fc.double({ min: 0, max: 60, noNaN: true }),
+      q: fc.tuple(
+        fc.double({ min: -0.05, max: 0.05, noNaN: true }),
+        fc.double({ min: 0, max: 0.02, noNaN: true }),
+      ),
+      m: fc.tuple(...[0, 1, 2].map(() => fc.double({ min: -0.57, max: 0.57, noNaN: true }))),
+    });
+    fc.assert(
+      fc.property(
+        fc.array(layer, { minLength: 1, maxLength: 6 }),
+        fc.integer({ min: 0, max: 3 }),
+        (layers, repeat) => {
+          const items = layers.map(({ n, k, thicknessNm, q, m }, position): StackLayer => {
+            const [x, y, z] = m as [number, number, number];
+            const medium = { index: [n, k] as [number, number], voigt: q };
+            return { id: `l${position}`, medium, thicknessNm, m: [x, y, z] };
+          });
+          const document: StackDocument = {
+            ...stack(),
+            layers: [...items.slice(1), { id: 'block', repeat, layers: items.slice(0, 1) }],
+            substrate: { index: [3.88, 0.02] },
+          };
+          expectPointByPoint({
+            document,
+            axis: byKind.angle,
+            second: { ...byKind.wavelength, points: 3 },
+            readings: [
+              'rotationP',
+              'ellipticityS',
+              'reflectanceS',
+              'contrastP',
+              'absorptanceP',
+              'evenRotationS',
+            ],
+            materials: [],
+          });
+        },
+      ),
+      { numRuns: 40 },
+    );
+  });
 });
 
 describe('a sweep', () => {
