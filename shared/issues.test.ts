@@ -1,6 +1,6 @@
 import { describe, expect, test } from 'vitest';
 import { z } from 'zod';
-import { describeIssues, formatPath } from './issues.ts';
+import { describeIssues, formatPath, isNestedTooDeep } from './issues.ts';
 import { solveRequestSchema } from './solve.ts';
 import { strictObject } from './strictObject.ts';
 
@@ -159,5 +159,18 @@ describe('a union speaks for the branch that was meant', () => {
       path: 'cases[0].wavelengthNm[1]',
       message: 'must be a number, got "red"',
     });
+  });
+});
+
+describe('isNestedTooDeep', () => {
+  it('stops what would overflow the stack of a schema, and lets through what requests need', () => {
+    const nested = (depth: number) => {
+      let value: unknown = 1;
+      for (let i = 0; i < depth; i++) value = [value];
+      return value;
+    };
+    expect(isNestedTooDeep(nested(40))).toBe(false);
+    expect(isNestedTooDeep(nested(20_000))).toBe(true);
+    expect(isNestedTooDeep({ cases: [{ layers: [] }] })).toBe(false);
   });
 });

@@ -14,6 +14,21 @@ export function formatPath(path: readonly Key[]): string {
 }
 
 /**
+ * Whether a parsed JSON value is nested deeper than any request of ours; a schema that follows it down would run out
+ * of stack. Looked at without recursion, for the same reason.
+ */
+export function isNestedTooDeep(input: unknown, limit = 64): boolean {
+  let level: unknown[] = [input];
+  for (let depth = 0; level.length > 0; depth++) {
+    if (depth > limit) return true;
+    level = level.flatMap((value) =>
+      typeof value === 'object' && value !== null ? Object.values(value) : [],
+    );
+  }
+  return false;
+}
+
+/**
  * Every problem zod found, each with its full path and a remedy in words.
  *
  * @param error what `safeParse` returned

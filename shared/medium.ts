@@ -18,6 +18,15 @@ const tensorSchema = z.tuple(
 
 export type TensorInput = z.infer<typeof tensorSchema>;
 
+/** Constants beyond this have no physical meaning, and their squares would leave the range of doubles. */
+const LARGEST = 1e20;
+
+function refuseAbsurd(size: number, least: number, what: string, context: z.RefinementCtx): void {
+  if (size > LARGEST)
+    context.addIssue({ code: 'custom', message: `${what} must be <= ${LARGEST}, got ${size}` });
+  if (size < least) context.addIssue({ code: 'custom', message: `${what} must be >= ${least}, got ${size}` });
+}
+
 /** A refractive index N = n + ik: the convention exp(-iwt) makes k >= 0 for a medium that absorbs. */
 const indexValueSchema = complexSchema.superRefine((value, context) => {
   const [n, k] = toComplex(value);
@@ -29,13 +38,22 @@ const indexValueSchema = complexSchema.superRefine((value, context) => {
     });
   }
   if (n === 0 && k === 0) context.addIssue({ code: 'custom', message: 'must not be 0' });
+  else refuseAbsurd(Math.hypot(n, k), 1 / LARGEST, '|N|', context);
+});
+
+const voigtValueSchema = complexSchema.superRefine((value, context) => {
+  refuseAbsurd(Math.hypot(...toComplex(value)), 0, '|Q|', context);
 });
 
 const tensorValueSchema = tensorSchema.superRefine((tensor, context) => {
   const [re, im] = toComplex(tensor[2][2]);
   if (re === 0 && im === 0) {
     context.addIssue({ code: 'custom', message: 'eps_zz must not be 0', path: [2, 2] });
+  } else {
+    refuseAbsurd(Math.hypot(re, im), 1 / LARGEST, '|eps_zz|', context);
   }
+  const largest = Math.max(...tensor.flatMap((row) => row.map((value) => Math.hypot(...toComplex(value)))));
+  refuseAbsurd(largest, 0, 'every element', context);
 });
 
 function sampled<Value extends z.ZodType>(value: Value, error: string) {
@@ -45,7 +63,7 @@ function sampled<Value extends z.ZodType>(value: Value, error: string) {
 const indexSchema = sampled(indexValueSchema, 'must be a number, [n, k] or {"samples": [...]}').meta({
   description: 'Complex refractive index N = n + ik.',
 });
-const voigtSchema = sampled(complexSchema, 'must be a number, [re, im] or {"samples": [...]}').meta({
+const voigtSchema = sampled(voigtValueSchema, 'must be a number, [re, im] or {"samples": [...]}').meta({
   description: 'Complex Voigt constant Q in the canonical sign: for m = +z, eps_xy = i Q eps_d.',
 });
 const voigtScaleSchema = z.number().min(0).optional().meta({ description: 'Multiplies Q; 1 when left out.' });

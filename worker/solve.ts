@@ -1,6 +1,6 @@
 import { createReadStream } from 'node:fs';
 import { text } from 'node:stream/consumers';
-import { describeIssues } from '../shared/issues.ts';
+import { describeIssues, isNestedTooDeep } from '../shared/issues.ts';
 import type { ErrorEnvelope, Issue } from '../shared/error.ts';
 import { LIMITS } from '../shared/limits.ts';
 import type { SolveRequest } from '../shared/solve.ts';
@@ -41,6 +41,7 @@ async function readInput(path: string | undefined): Promise<unknown> {
 }
 
 function parseRequest(input: unknown): SolveRequest {
+  if (isNestedTooDeep(input)) throw new Refusal('the input is nested too deeply to be a request');
   const parsed = solveRequestSchema.safeParse(input);
   const issues = parsed.success
     ? checkSolveRequest(parsed.data, {

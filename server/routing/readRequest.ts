@@ -1,6 +1,6 @@
 import type { Request } from 'express';
 import type { ZodType } from 'zod';
-import { describeIssues } from '../../shared/issues.ts';
+import { describeIssues, isNestedTooDeep } from '../../shared/issues.ts';
 import { invalid } from '../errors.ts';
 import { hostileParts } from './hostileParts.ts';
 
@@ -23,6 +23,7 @@ export function readQuery(schema: ZodType | undefined, request: Request): unknow
 }
 
 function parse(schema: ZodType, input: unknown): unknown {
+  if (isNestedTooDeep(input)) throw invalid([{ path: '', message: 'is nested too deeply to be a request' }]);
   const hostile = hostileParts(input);
   if (hostile.length > 0) throw invalid(hostile);
   const parsed = schema.safeParse(input);

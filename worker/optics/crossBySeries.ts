@@ -11,6 +11,16 @@ type Fields = { m: Matrix2; n: Matrix2; chain: Matrix2 };
 const SLICE = 0.5;
 const TERMS = 16;
 
+/** Beyond this many slices the series takes too long; the layer is then crossed by its beams. */
+const MOST_SLICES = 4096;
+
+/** How many slices a layer needs; null for more than it may have. */
+export function slicesOf(system: FieldSystem, phase: number): number | null {
+  const size = Math.max(1, ...Object.values(system).map(modulus));
+  const slices = Math.max(1, Math.ceil((phase * size) / SLICE));
+  return slices <= MOST_SLICES ? slices : null;
+}
+
 const blocks = { a: createMatrix2(), b: createMatrix2(), c: createMatrix2(), f: createMatrix2() };
 const termM = createMatrix2();
 const termN = createMatrix2();
@@ -23,16 +33,15 @@ const product = createMatrix2();
  * its own critical angle, or one in which b11 vanishes.
  *
  * @param phase k0 d
+ * @param slices as `slicesOf` gives them
  */
-export function crossBySeries(state: Fields, system: FieldSystem, phase: number): void {
+export function crossBySeries(state: Fields, system: FieldSystem, phase: number, slices: number): void {
   const { a11, a12, b11, c11, c12, c21, c22, f11, f21 } = system;
   const none: Complex = [0, 0];
   blocks.a.set([...a11, ...a12, ...none, ...none]);
   blocks.b.set([...b11, ...none, ...none, 1, 0]);
   blocks.c.set([...c11, ...c12, ...c21, ...c22]);
   blocks.f.set([...f11, ...none, ...f21, ...none]);
-  const size = Math.max(1, ...Object.values(system).map(modulus));
-  const slices = Math.max(1, Math.ceil((phase * size) / SLICE));
   for (let i = 0; i < slices; i++) crossSlice(state, phase / slices);
 }
 

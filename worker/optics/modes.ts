@@ -60,11 +60,11 @@ export class Modes {
       this.zp = over(this.q, [medium.tensor[0]!, medium.tensor[1]!]);
       return;
     }
-    const system = fieldSystem(medium, geometry);
-    this.system = system;
+    this.system = fieldSystem(medium, geometry);
     const size = largest(medium.tensor);
-    this.inseparable = modulus(system.b11) < INSEPARABLE * size;
-    if (this.inseparable) return;
+    const hasNoZ = modulus(this.system.b11) < INSEPARABLE * size;
+    // Beams are made in any case, for layers too thick for the series; then of a medium a trace away.
+    const system = hasNoZ ? { ...this.system, b11: [NUDGE * size, 0] as Complex } : this.system;
     const equation = waveEquation(system, polarizationGap(medium, system, geometry));
     const quartic = secularQuartic(equation);
     const pair = refinePair(quartic, forwardPair(medium, quartic, geometry));
@@ -75,7 +75,7 @@ export class Modes {
     const apart = modulus(times(determinant(this.zStep), system.b11));
     // In a medium that gives energy a "forward" wave may grow: no pair is safe to carry through a thick layer.
     const gives = !medium.scalarDiagonal && !isPassive(medium.tensor);
-    this.inseparable = gives || !(apart > ALIKE * size);
+    this.inseparable = hasNoZ || gives || !(apart > ALIKE * size);
     invert(this.zStepInverse, this.zStep);
   }
 
@@ -104,6 +104,9 @@ export class Modes {
 
 /** Relative size below which a determinant is taken for zero; the digits lost at this size are the last three. */
 const INSEPARABLE = 1e-5;
+
+/** b11 of a medium that has none, by the tensor's size: wrong by as much, and as much lost in digits. */
+const NUDGE = 1e-8;
 
 /** Beams closer than this, as 4 q^2 against the permittivity, are too much alike: near a critical angle of the layer. */
 const ALIKE = 1e-2;

@@ -10,7 +10,7 @@ import {
   subtract,
 } from './matrix2.ts';
 import type { Geometry } from './geometry.ts';
-import { crossBySeries } from './crossBySeries.ts';
+import { crossBySeries, slicesOf } from './crossBySeries.ts';
 import type { Modes } from './modes.ts';
 import { propagate } from './modes.ts';
 
@@ -48,6 +48,8 @@ export class LayerStep {
   readonly modes: Modes;
   readonly layer: { readonly thicknessNm: number };
   #phase = 0;
+  /** Slices of the series, where the medium's beams cannot be told apart. */
+  #slices: number | null = null;
   /** Isotropic: exp(i k0 d q), its square e, and 1 - e without cancellation. */
   #phiRe = 1;
   #phiIm = 0;
@@ -70,7 +72,8 @@ export class LayerStep {
     const phase = k0 * this.layer.thicknessNm;
     const { modes } = this;
     this.#phase = phase;
-    if (modes.inseparable && !modes.isotropic) return;
+    this.#slices = modes.inseparable && !modes.isotropic ? slicesOf(modes.system!, phase) : null;
+    if (this.#slices !== null) return;
     if (!modes.isotropic) {
       propagate(this.#down, modes.forward, phase, 1);
       propagate(this.#up, modes.backward, phase, -1);
@@ -92,7 +95,7 @@ export class LayerStep {
   cross(state: FieldState): void {
     if (this.layer.thicknessNm === 0) return;
     if (this.modes.isotropic) this.#crossIsotropic(state);
-    else if (this.modes.inseparable) crossBySeries(state, this.modes.system!, this.#phase);
+    else if (this.#slices !== null) crossBySeries(state, this.modes.system!, this.#phase, this.#slices);
     else this.#crossAnisotropic(state);
   }
 
