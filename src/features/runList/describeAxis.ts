@@ -1,4 +1,5 @@
-import type { SweepAxis } from '../../../shared/run.ts';
+import type { SweepAxes, SweepAxis } from '../../../shared/run.ts';
+import { pointCountOf } from '../../../shared/runAxes.ts';
 import { formatCount, formatPlain } from '../../lib/format.ts';
 
 const kinds = {
@@ -21,9 +22,15 @@ const units = {
 } as const;
 
 /** What a run sweeps: `angle 0–85°` and `171 points`. */
-export function describeAxis(axis: SweepAxis): { span: string; points: string } {
-  const span = `${formatPlain(axis.from)}–${formatPlain(axis.to)}${units[axis.kind]}`;
+export function describeAxes({ axis, second, family }: SweepAxes): { span: string; points: string } {
+  const spans = [axis, second, family].flatMap((one) => (one ? [spanOf(one)] : []));
+  const count = pointCountOf({ axis, second, family });
   const spacing = axis.spacing === 'log' ? ', log spacing' : '';
-  const points = axis.points === 1 ? '1 point' : `${formatCount(axis.points)} points`;
-  return { span: `${kinds[axis.kind]} ${span}`, points: points + spacing };
+  const points = count === 1 ? '1 point' : `${formatCount(count)} points`;
+  return { span: spans.join(' × '), points: points + spacing };
+}
+
+function spanOf(axis: SweepAxis): string {
+  const span = `${formatPlain(axis.from)}–${formatPlain(axis.to)}${units[axis.kind]}`;
+  return `${kinds[axis.kind]} ${span}`;
 }

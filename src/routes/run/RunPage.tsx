@@ -1,6 +1,7 @@
 import { useQuery } from '@tanstack/react-query';
 import { useEffect } from 'react';
 import { Link, generatePath, useNavigate, useParams, useSearchParams } from 'react-router-dom';
+import { pointCountOf } from '../../../shared/runAxes.ts';
 import type { Run } from '../../../shared/run.ts';
 import { Button } from '../../components/Button.tsx';
 import { ErrorState } from '../../components/ErrorState.tsx';
@@ -95,11 +96,12 @@ function LoadedRun({ run }: { run: Run }) {
       <StoredRun
         run={run}
         dataPath={done ? path : null}
+        partialPath={run.progress.state === 'running' && run.second ? path : null}
         waiting={<RunState run={run} mayEdit={editor} onRerun={startRerun} rerunning={rerun.isPending} />}
-        besideFilm={({ result, layerName }) => (
+        besideFilm={({ result, placeOf }) => (
           <div className="mt-6 flex flex-col gap-7">
             {compareWith && result && (
-              <Comparison run={run} result={result} olderId={compareWith} layerName={layerName} />
+              <Comparison run={run} result={result} olderId={compareWith} placeOf={placeOf} />
             )}
             {editor && done && <SharePanel runId={run.id} />}
             <RunDownloads path={path} hasData={done} />
@@ -115,7 +117,8 @@ function LoadedRun({ run }: { run: Run }) {
 }
 
 function RunLine({ run }: { run: Run }) {
-  const points = `${formatCount(run.axis.points)} ${run.axis.points === 1 ? 'point' : 'points'}`;
+  const count = pointCountOf(run);
+  const points = `${formatCount(count)} ${count === 1 ? 'point' : 'points'}`;
   return (
     <>
       {run.stackId ? (

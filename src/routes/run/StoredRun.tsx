@@ -1,25 +1,27 @@
 import { useQuery } from '@tanstack/react-query';
-import { useMemo, useState } from 'react';
+import { useCallback, useMemo, useState } from 'react';
 import type { ReactNode } from 'react';
 import { materialClasses } from '../../../shared/material.ts';
 import type { RunResult } from '../../../shared/resultFormat.ts';
-import type { SharedRun, UsedMaterial } from '../../../shared/run.ts';
+import type { SharedRun, SweepAxis, UsedMaterial } from '../../../shared/run.ts';
+import type { WorkingPoint } from '../../../shared/stack.ts';
 import { ErrorState } from '../../components/ErrorState.tsx';
 import { LoadingState } from '../../components/LoadingState.tsx';
 import { usePlotHeight } from '../../components/plot/usePlotHeight.ts';
-import { runDataQuery } from '../../features/runs/api/runData.ts';
+import { partialRunDataQuery, runDataQuery } from '../../features/runs/api/runData.ts';
 import { RunPlot } from '../../features/runs/components/RunPlot.tsx';
 import { ValueTable } from '../../features/runs/components/ValueTable.tsx';
 import {
-  describePlace,
+  describeGridPlace,
+  homePlace,
+  placeAt,
   pointAt,
-  sweptLayer,
-  valuesNear,
-  workingPlace,
+  valuesAt,
 } from '../../features/runs/model/sweepPlace.ts';
+import type { GridPlace } from '../../features/runs/model/sweepPlace.ts';
 import { FilmDrawing } from '../../features/stacks/components/FilmDrawing.tsx';
 import { isTransverse, workingVectors } from '../../features/stacks/model/magnetization.ts';
-import { mediumName } from '../../features/stacks/model/media.ts';
+import { targetName } from '../../features/stacks/model/axisTargets.ts';
 import type { DrawnMaterial } from '../../features/stacks/model/media.ts';
 import { usualFamilies } from '../../features/stacks/model/viewState.ts';
 import { useReadingView } from './useReadingView.ts';
@@ -28,10 +30,12 @@ type Props = {
   run: SharedRun;
   /** Where its numbers are: `/runs/…` or `/shared/…`; null while there are none. */
   dataPath: string | null;
+  /** Where a map is that is still being computed. */
+  partialPath?: string | null;
   /** In place of the plot while there are no numbers. */
   waiting: ReactNode;
   /** Right below the plot; it may compare the numbers with others. */
-  besideFilm?: (loaded: { result: RunResult | null; layerName: string | null }) => ReactNode;
+  besideFilm?: (loaded: { result: RunResult | null; placeOf: (index: number) => string }) => ReactNode;
   /** Below film and plot, over the whole width. */
   children: ReactNode;
 };
@@ -40,19 +44,26 @@ type Props = {
  * A stored run: the film as it was, the values at the cursor, the curves. On a phone in this order, one below the
  * other. The drawing follows the cursor along an angle or a wavelength.
  */
-export function StoredRun({ run, dataPath, waiting, besideFilm, children }: Props) {
+export function StoredRun({ run, dataPath, partialPath = null, waiting, besideFilm, children }: Props) {
   const [view, setView] = useReadingView();
-  const [cursor, setCursor] = useState<number | null>(null);
+  const [cursor, setCursor] = useState<Pick<GridPlace, 'ix' | 'iy'> | null>(null);
+  const [member, setMember] = useState<number | null>(null);
   const data = useQuery({ ...runDataQuery(dataPath ?? ''), enabled: dataPath !== null });
   const materials = useMemo(() => drawnMaterials(run.materials), [run.materials]);
   const plotHeight = usePlotHeight(330);
-  const { axis, document } = run;
-  const layer = sweptLayer(axis, document);
-  const layerName = layer && mediumName(layer.medium, materials);
-  const result = data.data ?? null;
+  const partial = useQuery({ ...partialRunDataQuery(partialPath ?? ''), enabled: partialPath !== null });
+  const { axis, second, document } = run;
+  const nameOf = useCallback((one: SweepAxis) => targetName(one, document, materials), [document, materials]);
+  const result = data.data ?? (partialPath === null ? null : (partial.data ?? null));
   const usual = usualFamilies(isTransverse(workingVectors(document, document.workingPoint.magnetization)));
-  const near = result && valuesNear(result, cursor ?? workingPlace(axis, document) ?? axis.from);
-  const point = near ? pointAt(axis, document.workingPoint, near.x) : document.workingPoint;
+  const home = result && homePlace(run, result, document);
+  const place = home && { ...home, ...cursor, ...(member === null ? {} : { member }) };
+  const values = result && place ? valuesAt(result, place) : null;
+  const point = result && place ? pointOf(run, result, place) : document.workingPoint;
+  const swept = [axis, second, run.family].find((one) => one?.kind === 'wavelength');
+  const rangeNm: readonly [number, number] = swept
+    ? [Math.min(swept.from, swept.to), Math.max(swept.from, swept.to)]
+    : [point.wavelengthNm, point.wavelengthNm];
   const [rotation, ellipticity] =
     point.input === 'p' ? (['rotationP', 'ellipticityP'] as const) : (['rotationS', 'ellipticityS'] as const);
 
@@ -64,20 +75,16 @@ export function StoredRun({ run, dataPath, waiting, besideFilm, children }: Prop
             document={document}
             materials={materials}
             point={point}
-            kerr={kerrOf(near?.values[rotation], near?.values[ellipticity])}
-            rangeNm={
-              axis.kind === 'wavelength'
-                ? [Math.min(axis.from, axis.to), Math.max(axis.from, axis.to)]
-                : [point.wavelengthNm, point.wavelengthNm]
-            }
+            kerr={kerrOf(values?.[rotation], values?.[ellipticity])}
+            rangeNm={rangeNm}
             edit={null}
           />
         </section>
-        {near && (
+        {values && result && place && (
           <section aria-label="Readings" className="mt-3">
             <ValueTable
-              place={describePlace(axis, near.x, layerName)}
-              values={near.values}
+              place={describeGridPlace(run, result, place, nameOf)}
+              values={values}
               unit={view.unit}
             />
           </section>
@@ -85,15 +92,18 @@ export function StoredRun({ run, dataPath, waiting, besideFilm, children }: Prop
       </div>
       <div className="min-w-0">
         <section aria-label="Plot">
-          {result ? (
+          {partialPath !== null && <div className="mb-3">{waiting}</div>}
+          {result && place ? (
             <RunPlot
               run={run}
               result={result}
               view={view}
               usual={usual}
               onView={setView}
-              onCursorX={setCursor}
-              layerName={layerName}
+              onPlace={setCursor}
+              member={place.member}
+              onMember={setMember}
+              nameOf={nameOf}
               height={plotHeight}
             />
           ) : data.error ? (
@@ -103,15 +113,31 @@ export function StoredRun({ run, dataPath, waiting, besideFilm, children }: Prop
               onRetry={() => void data.refetch()}
             />
           ) : dataPath === null ? (
-            waiting
+            partialPath === null && waiting
           ) : (
             <LoadingState label="Loading the values" rows={8} />
           )}
         </section>
-        {besideFilm?.({ result, layerName })}
+        {besideFilm?.({
+          result: data.data ?? null,
+          placeOf: (index) => (result ? describeGridPlace(run, result, placeAt(result, index), nameOf) : ''),
+        })}
       </div>
       <div className="min-w-0 lg:col-span-2">{children}</div>
     </div>
+  );
+}
+
+/** The working point moved to a point of the grid, as far as an axis moves it. */
+function pointOf(run: SharedRun, result: RunResult, { ix, iy, member }: GridPlace): WorkingPoint {
+  const moves = [
+    [run.axis, result.axis[ix]],
+    [run.second, result.second?.[iy]],
+    [run.family, result.family?.[member]],
+  ] as const;
+  return moves.reduce(
+    (point, [axis, x]) => (axis && x !== undefined ? pointAt(axis, point, x) : point),
+    run.document.workingPoint,
   );
 }
 

@@ -1,6 +1,7 @@
 import { useQuery } from '@tanstack/react-query';
 import type { ReactNode } from 'react';
 import { Link, generatePath, useNavigate, useParams } from 'react-router-dom';
+import { pointCountOf } from '../../../shared/runAxes.ts';
 import type { SharedRun } from '../../../shared/run.ts';
 import { ErrorState } from '../../components/ErrorState.tsx';
 import { LoadingState } from '../../components/LoadingState.tsx';
@@ -32,7 +33,8 @@ function OpenShare({ token, run }: { token: string; run: SharedRun }) {
   const session = useSession();
   const navigate = useNavigate();
   const path = sharedPath(token);
-  const points = `${formatCount(run.axis.points)} ${run.axis.points === 1 ? 'point' : 'points'}`;
+  const count = pointCountOf(run);
+  const points = `${formatCount(count)} ${count === 1 ? 'point' : 'points'}`;
   return (
     <Page
       title={run.name}

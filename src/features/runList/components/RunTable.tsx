@@ -10,7 +10,7 @@ import { useNotify } from '../../../components/Notices.tsx';
 import { formatDateTime, formatSince } from '../../../lib/format.ts';
 import { paths } from '../../../lib/paths.ts';
 import { useCancelRun } from '../api/cancelRun.ts';
-import { describeAxis } from '../describeAxis.ts';
+import { describeAxes } from '../describeAxis.ts';
 import { DeleteRunDialog } from './DeleteRunDialog.tsx';
 import { RunStateCell } from './RunStateCell.tsx';
 
@@ -27,11 +27,11 @@ export function RunTable({ groupId, runs, mayEdit, empty }: RunTableProps) {
       {
         id: 'sweep',
         header: 'Sweep',
-        value: (run) => describeAxis(run.axis).span,
+        value: (run) => describeAxes(run).span,
         cell: (run) => (
           <div>
-            {describeAxis(run.axis).span}
-            <div className="text-note text-muted">{describeAxis(run.axis).points}</div>
+            {describeAxes(run).span}
+            <div className="text-note text-muted">{describeAxes(run).points}</div>
           </div>
         ),
       },

@@ -16,3 +16,19 @@ export function runDataQuery(path: string) {
     gcTime: 60_000,
   });
 }
+
+/** How often a map that is being computed is drawn anew, ms. */
+const PARTIAL_MS = 700;
+
+/** What there is so far of a run that is being computed; NaN where nothing is computed yet. */
+export function partialRunDataQuery(path: string) {
+  return queryOptions({
+    queryKey: ['run data so far', path],
+    queryFn: async ({ signal }) =>
+      decodeResult(await requestBinary({ path: `${path}/data?partial=true`, signal })),
+    refetchInterval: PARTIAL_MS,
+    gcTime: 0,
+    // Another machine may be computing it; then there is only the progress to show.
+    retry: false,
+  });
+}

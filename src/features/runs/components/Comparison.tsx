@@ -10,12 +10,17 @@ import { runQuery } from '../api/run.ts';
 import { runDataQuery } from '../api/runData.ts';
 import { largestDifferences } from '../model/largestDifferences.ts';
 import type { Difference } from '../model/largestDifferences.ts';
-import { describePlace } from '../model/sweepPlace.ts';
 
-type Props = { run: Run; result: RunResult; olderId: string; layerName: string | null };
+type Props = {
+  run: Run;
+  result: RunResult;
+  olderId: string;
+  /** A point of the result in words. */
+  placeOf: (index: number) => string;
+};
 
 /** What today's solver changed against the stored answer of an older run of the same input. */
-export function Comparison({ run, result, olderId, layerName }: Props) {
+export function Comparison({ run, result, olderId, placeOf }: Props) {
   const older = useQuery(runQuery(olderId));
   const data = useQuery(runDataQuery(`/runs/${olderId}`));
   const error = older.error ?? data.error;
@@ -36,17 +41,14 @@ export function Comparison({ run, result, olderId, layerName }: Props) {
               ? ' Both have the same input.'
               : ' Their inputs differ, so the numbers may too.'}
           </p>
-          <Differences
-            differences={largestDifferences(data.data, result)}
-            place={(x) => describePlace(run.axis, x, layerName)}
-          />
+          <Differences differences={largestDifferences(data.data, result)} place={placeOf} />
         </>
       )}
     </section>
   );
 }
 
-type DifferencesProps = { differences: Difference[] | null; place: (x: number) => string };
+type DifferencesProps = { differences: Difference[] | null; place: (index: number) => string };
 
 function Differences({ differences, place }: DifferencesProps) {
   if (differences === null) {
@@ -73,7 +75,7 @@ function Differences({ differences, place }: DifferencesProps) {
         </tr>
       </thead>
       <tbody>
-        {differences.map(({ reading, largest, x, oneSided }) => (
+        {differences.map(({ reading, largest, index, oneSided }) => (
           <tr key={reading}>
             <th scope="row" className="pr-6 font-normal">
               {readingDefinitions[reading].label}
@@ -83,7 +85,7 @@ function Differences({ differences, place }: DifferencesProps) {
               {readingDefinitions[reading].unit === 'deg' ? '°' : ''}
             </td>
             <td className="text-muted">
-              {largest > 0 ? place(x) : ''}
+              {largest > 0 ? place(index) : ''}
               {oneSided > 0 ? `; ${oneSided} points have a value in one run only` : ''}
             </td>
           </tr>

@@ -1,7 +1,17 @@
 import { describe, expect, it } from 'vitest';
+import { describeResult } from '../../../../shared/resultFormat.ts';
+import type { RunResult } from '../../../../shared/resultFormat.ts';
 import type { SweepAxis } from '../../../../shared/run.ts';
 import type { StackDocument } from '../../../../shared/stack.ts';
-import { describePlace, pointAt, sweptLayer, workingPlace } from './sweepPlace.ts';
+import {
+  describeGridPlace,
+  describePlace,
+  homePlace,
+  placeAt,
+  pointAt,
+  valuesAt,
+  workingPlace,
+} from './sweepPlace.ts';
 
 const document: StackDocument = {
   incident: { index: 1 },
@@ -26,16 +36,33 @@ describe('a place on a sweep', () => {
     expect(workingPlace(thickness, document)).toBe(0.4);
   });
 
-  it('finds the swept layer inside a block', () => {
-    expect(sweptLayer(thickness, document)?.thicknessNm).toBe(0.4);
-    expect(sweptLayer({ ...thickness, layerId: 'gone' }, document)).toBeNull();
-    expect(sweptLayer(angle, document)).toBeNull();
-  });
-
   it('moves the drawing along with angle and wavelength, and says where it is', () => {
     expect(pointAt(angle, document.workingPoint, 25).angleDeg).toBe(25);
     expect(pointAt(thickness, document.workingPoint, 1)).toBe(document.workingPoint);
     expect(describePlace(angle, 29.9648241206, null)).toBe('angle 29.96482°');
     expect(describePlace(thickness, 1.5, 'Co')).toBe('thickness of Co 1.5 nm');
+  });
+});
+
+describe('a point of a map', () => {
+  const wavelength: SweepAxis = { kind: 'wavelength', from: 500, to: 600, points: 2, spacing: 'linear' };
+  const axes = { axis: { ...angle, points: 3, from: 10, to: 80 }, second: wavelength };
+  const result: RunResult = {
+    header: describeResult(axes, ['rotationP'], { solverVersion: '1', inputSha256: 'abc' }),
+    axis: Float64Array.from([10, 45, 80]),
+    second: Float64Array.from([500, 600]),
+    family: null,
+    columns: { rotationP: Float64Array.from([1, 2, 3, 4, 5, 6]) },
+  };
+
+  it('is found by its index, read and said in words', () => {
+    const place = placeAt(result, 5);
+    expect(place).toEqual({ ix: 2, iy: 1, member: 0 });
+    expect(valuesAt(result, place)).toEqual({ rotationP: 6 });
+    expect(describeGridPlace(axes, result, place, () => undefined)).toBe('angle 80°, wavelength 600 nm');
+  });
+
+  it('lies where the film stands, or at the start of an axis that does not reach it', () => {
+    expect(homePlace(axes, result, document)).toEqual({ ix: 1, iy: 0, member: 0 });
   });
 });

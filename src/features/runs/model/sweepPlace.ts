@@ -1,7 +1,6 @@
-import type { ReadingName, SweepAxis } from '../../../../shared/run.ts';
+import type { ReadingName, SweepAxes, SweepAxis } from '../../../../shared/run.ts';
 import type { RunResult } from '../../../../shared/resultFormat.ts';
-import type { StackDocument, WorkingPoint } from '../../../../shared/stack.ts';
-import { findLayerPath } from '../../../../shared/stackCase.ts';
+import type { StackDocument, StackItem, StackLayer, WorkingPoint } from '../../../../shared/stack.ts';
 import { nearestIndex } from '../../../components/plot/curveValues.ts';
 import { formatPlain } from '../../../lib/format.ts';
 
@@ -20,24 +19,16 @@ function placeOf(axis: SweepAxis, document: StackDocument): number | null {
     case 'angle':
       return document.workingPoint.angleDeg;
     case 'thickness':
-      return sweptLayer(axis, document)?.thicknessNm ?? null;
+      return layersIn(document.layers).find(({ id }) => id === axis.layerId)?.thicknessNm ?? null;
+    case 'voigtScale':
+      return 1;
     default:
       return null;
   }
 }
 
-/** The layer whose thickness is swept. */
-export function sweptLayer(axis: SweepAxis, document: StackDocument) {
-  if (axis.kind !== 'thickness') return null;
-  let items = document.layers;
-  const path = findLayerPath(items, axis.layerId) ?? [];
-  for (const position of path) {
-    const item = items[position];
-    if (item === undefined) return null;
-    if (!('layers' in item)) return item;
-    items = item.layers;
-  }
-  return null;
+function layersIn(items: readonly StackItem[]): StackLayer[] {
+  return items.flatMap((item) => ('layers' in item ? layersIn(item.layers) : [item]));
 }
 
 /** The working point moved along the sweep, for the drawing that goes with a value that is being read. */
@@ -73,12 +64,51 @@ export function describePlace(axis: SweepAxis, x: number, layerName: string | nu
   }
 }
 
-export type PlaceValues = { x: number; values: Partial<Record<ReadingName, number>> };
+export type PlaceValues = { values: Partial<Record<ReadingName, number>> };
 
-/** The stored values at the grid point nearest to x; a reading that does not exist there is NaN. */
-export function valuesNear(result: RunResult, x: number): PlaceValues {
-  const index = nearestIndex(result.axis, x);
-  const values: Partial<Record<ReadingName, number>> = {};
+/** A point of the grid: along the first axis, the second, and the member of the family. */
+export type GridPlace = { ix: number; iy: number; member: number };
+
+/** What a swept layer is called; undefined where an axis is of nothing in particular. */
+export type NameOfTarget = (axis: SweepAxis) => string | undefined;
+
+/** The point of an index into the values (resultFormat.ts: first axis innermost, family outermost). */
+export function placeAt({ axis, second }: RunResult, index: number): GridPlace {
+  const [nx, ny] = [axis.length, second?.length ?? 1];
+  return { ix: index % nx, iy: Math.floor(index / nx) % ny, member: Math.floor(index / (nx * ny)) };
+}
+
+/** The grid point nearest to where the film itself stands; the first of an axis that does not reach it. */
+export function homePlace(axes: SweepAxes, result: RunResult, document: StackDocument): GridPlace {
+  const nearest = (axis: SweepAxis | undefined, grid: Float64Array | null) =>
+    axis && grid ? Math.max(0, nearestIndex(grid, workingPlace(axis, document) ?? axis.from)) : 0;
+  return {
+    ix: nearest(axes.axis, result.axis),
+    iy: nearest(axes.second, result.second),
+    member: nearest(axes.family, result.family),
+  };
+}
+
+/** `angle 30°, wavelength 632.8 nm`: a point of the grid in words. */
+export function describeGridPlace(
+  axes: SweepAxes,
+  result: RunResult,
+  { ix, iy, member }: GridPlace,
+  nameOf: NameOfTarget,
+): string {
+  const say = (axis: SweepAxis | undefined, x: number | undefined) =>
+    axis && x !== undefined ? [describePlace(axis, x, nameOf(axis) ?? null)] : [];
+  return [
+    ...say(axes.axis, result.axis[ix]),
+    ...say(axes.second, result.second?.[iy]),
+    ...say(axes.family, result.family?.[member]),
+  ].join(', ');
+}
+
+/** The stored values at a point of the grid; a reading that does not exist there is NaN. */
+export function valuesAt(result: RunResult, { ix, iy, member }: GridPlace): PlaceValues['values'] {
+  const index = (member * (result.second?.length ?? 1) + iy) * result.axis.length + ix;
+  const values: PlaceValues['values'] = {};
   for (const { name } of result.header.readings) values[name] = result.columns[name]?.[index] ?? NaN;
-  return { x: result.axis[index] ?? NaN, values };
+  return values;
 }
