@@ -163,7 +163,7 @@ describe('a union speaks for the branch that was meant', () => {
 });
 
 describe('isNestedTooDeep', () => {
-  it('stops what would overflow the stack of a schema, and lets through what requests need', () => {
+  test('stops what would overflow the stack of a schema, and lets through what requests need', () => {
     const nested = (depth: number) => {
       let value: unknown = 1;
       for (let i = 0; i < depth; i++) value = [value];

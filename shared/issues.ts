@@ -21,11 +21,13 @@ export function isNestedTooDeep(input: unknown, limit = 64): boolean {
   let level: unknown[] = [input];
   for (let depth = 0; level.length > 0; depth++) {
     if (depth > limit) return true;
-    level = level.flatMap((value) =>
-      typeof value === 'object' && value !== null ? Object.values(value) : [],
-    );
+    level = level.flatMap(childrenOf);
   }
   return false;
+}
+
+function childrenOf(value: unknown): unknown[] {
+  return typeof value === 'object' && value !== null ? Object.values(value) : [];
 }
 
 /**
