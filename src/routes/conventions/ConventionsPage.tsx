@@ -7,6 +7,7 @@ import { FurtherSections } from './FurtherSections.tsx';
 import { IntensitySections } from './IntensitySections.tsx';
 import { KerrSections } from './KerrSections.tsx';
 import { MaterialSections } from './MaterialSections.tsx';
+import { SignalSections } from './SignalSections.tsx';
 import { UnitSections } from './UnitSections.tsx';
 
 type Chapter = { title: string; Body: () => ReactNode; entries: readonly [id: string, name: string][] };
@@ -58,12 +59,23 @@ const chapters: readonly Chapter[] = [
     title: 'Further quantities',
     Body: FurtherSections,
     entries: [
-      ['odd-and-even', 'Odd and even part'],
+      ['odd-even', 'Odd and even part'],
       ['ceiling', 'Ceiling'],
       ['parts', 'Polar and longitudinal part'],
       ['faraday', 'Faraday angles'],
-      ['circular', 'Circular light'],
+      ['circular-contrast', 'Circular contrast'],
       ['mueller', 'Mueller matrix'],
+      ['input-azimuth', 'Input azimuth'],
+    ],
+  },
+  {
+    title: 'Where the signal comes from',
+    Body: SignalSections,
+    entries: [
+      ['layer-shares', 'Layer shares'],
+      ['depth-profile', 'Depth profile'],
+      ['real-sample', 'Real samples'],
+      ['degree-of-polarization', 'Degree of polarization'],
     ],
   },
   { title: 'Units', Body: UnitSections, entries: [['units', 'Units']] },

@@ -1,14 +1,10 @@
 import { ConventionSection, Formula, Fraction } from './ConventionSection.tsx';
 
-/** Quantities that follow from the amplitudes and are defined for whoever computes them from a download. */
+/** Quantities that follow from the amplitudes, beside those of the readings strip. */
 export function FurtherSections() {
   return (
     <>
-      <p className="mb-6 max-w-prose text-muted">
-        These follow from the amplitudes and are not readings of the stack page yet. They are defined here so
-        that whoever computes them from a download or the API uses the same words and signs.
-      </p>
-      <ConventionSection id="odd-and-even" title="Odd and even part in m">
+      <ConventionSection id="odd-even" title="Odd and even part in m">
         <p>
           Reversing a field measures the odd part, half the difference of the angles at <var>m</var> and −
           <var>m</var>:
@@ -84,7 +80,7 @@ export function FurtherSections() {
         </p>
       </ConventionSection>
 
-      <ConventionSection id="circular" title="Circular light">
+      <ConventionSection id="circular-contrast" title="Contrast of circular light">
         <p>
           Plus is the light with <var>S</var>
           <sub>3</sub> &gt; 0:
@@ -111,6 +107,15 @@ export function FurtherSections() {
           <sub>0</sub> to <var>S</var>
           <sub>3</sub>, not normalized. The rows of <var>U</var> are (1, 0, 0, 1), (1, 0, 0, −1), (0, 1, 1, 0)
           and (0, <var>i</var>, −<var>i</var>, 0).
+        </p>
+      </ConventionSection>
+
+      <ConventionSection id="input-azimuth" title="Any input azimuth">
+        <p>
+          For linear light at the azimuth <var>α</var>, from <var>p</var> (0°) toward <var>s</var> (90°), Kerr
+          rotation and ellipticity are the changes that magnetization makes, as for <var>p</var> and{' '}
+          <var>s</var>: the stack as it is against the same stack with <var>m</var> = 0, both with that input.
+          They are read from the Mueller matrices of the two, so they exist for partly polarized beams too.
         </p>
       </ConventionSection>
     </>

@@ -34,9 +34,7 @@ export function KerrSections() {
           <sub>p</sub>* <var>E</var>
           <sub>s</sub>)
         </Formula>
-        <p>
-          and from them azimuth and ellipticity, of the polarized part where the beam is partly polarized:
-        </p>
+        <p>and from them azimuth and ellipticity, for a fully polarized beam</p>
         <Formula>
           <var>φ</var> = ½ atan2(<var>S</var>
           <sub>2</sub>, <var>S</var>
@@ -47,6 +45,14 @@ export function KerrSections() {
           <sub>2</sub>
           <sup>2</sup>))
         </Formula>
+        <p>
+          For a beam that is fully polarized 2<var>χ</var> is also the arc sine of <var>S</var>
+          <sub>3</sub>/<var>S</var>
+          <sub>0</sub>. Where a beam is partly polarized (a back face, a spread) the two differ, and the
+          ellipticity given is half the arc sine of <var>S</var>
+          <sub>3</sub>/<var>S</var>
+          <sub>0</sub>: what a modulated detector reads against all of the light.
+        </p>
         <p>
           An ellipse turned by 180° is the same ellipse, so differences of azimuths are folded into (−90°,
           90°]. Where <var>S</var>

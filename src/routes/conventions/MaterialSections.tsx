@@ -249,8 +249,10 @@ export function MaterialSections() {
           <sub>d</sub>
         </Formula>
         <p>
-          A medium that is not passive is computed with a warning that names it. Refused are <var>k</var> &lt;
-          0, <var>n</var> &lt; 0, <var>N</var> = 0 and <var>ε</var>
+          A medium that is not passive is computed with a warning that names it. Which of its waves run into
+          the film is decided by continuity: the medium is followed from the passive one that it turns into
+          when its loss is raised, so that a <var>Q</var> a little too large changes the answer a little.
+          Refused are <var>k</var> &lt; 0, <var>n</var> &lt; 0, <var>N</var> = 0 and <var>ε</var>
           <sub>zz</sub> = 0.
         </p>
       </ConventionSection>
