@@ -7,6 +7,8 @@ import { ComputeError } from './computeError.ts';
 
 /** Heap of one thread. Results live in shared memory outside of it, so this is room for stacks and constants. */
 const HEAP_MB = 1_024;
+/** ... of it for what is dropped at once. Left alone, each thread takes tens of MB for that and keeps them. */
+const YOUNG_HEAP_MB = 8;
 
 /** A set of threads that run the functions of task.ts. */
 export class Threads {
@@ -28,7 +30,10 @@ export class Threads {
       maxThreads: options.count,
       niceIncrement: options.niceIncrement ?? 0,
       execArgv: isBundle(file) ? [] : ['--import', typescriptLoader()],
-      resourceLimits: { maxOldGenerationSizeMb: options.heapMb ?? HEAP_MB },
+      resourceLimits: {
+        maxOldGenerationSizeMb: options.heapMb ?? HEAP_MB,
+        maxYoungGenerationSizeMb: YOUNG_HEAP_MB,
+      },
     });
     // A thread that dies while idle is replaced at once; without a listener its error would end this process.
     this.#piscina.on('error', () => {});
