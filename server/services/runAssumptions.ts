@@ -18,7 +18,7 @@ export function runAssumptions(
   materials: UsedMaterial[],
 ): string[] {
   return [
-    ...settings(document, axes),
+    ...settings(document, axes, materials),
     magnetization(document.workingPoint.magnetization),
     ...axisMeanings(axes),
     'Convention: time factor exp(-iωt), so N = n + ik with k ≥ 0; z points into the film, x lies in the plane of incidence; a rotation is positive counter-clockwise for an observer who looks into the reflected beam.',
@@ -29,7 +29,7 @@ export function runAssumptions(
   ];
 }
 
-function settings(document: StackDocument, axes: SweepAxes): string[] {
+function settings(document: StackDocument, axes: SweepAxes, materials: UsedMaterial[]): string[] {
   const { wavelengthNm, angleDeg } = document.workingPoint;
   const fixed = [
     ...(sweeps(axes, 'wavelength') ? [] : [`vacuum wavelength ${wavelengthNm} nm`]),
@@ -37,7 +37,7 @@ function settings(document: StackDocument, axes: SweepAxes): string[] {
   ].join(', ');
   const roles = { axis: 'Swept', second: 'Second axis', family: 'Family' };
   return [
-    ...axesOf(axes).map(({ field, axis }) => `${roles[field]}: ${describeAxis(axis, document)}.`),
+    ...axesOf(axes).map(({ field, axis }) => `${roles[field]}: ${describeAxis(axis, document, materials)}.`),
     ...(fixed === '' ? [] : [`${fixed.charAt(0).toUpperCase()}${fixed.slice(1)}.`]),
   ];
 }

@@ -62,12 +62,12 @@ function bytesOf(values: Float64Array): Uint8Array {
  * double.
  */
 export async function* resultCsv(result: RunResult, readings: ReadingName[]): AsyncGenerator<string> {
-  const { input } = result.run;
+  const { input, materials } = result.run;
   const names = readings.map((name) => {
     const { label, unit } = readingDefinitions[name];
     return `${label} (${unit})`;
   });
-  yield toLine([...axisTitles(input), ...names]);
+  yield toLine([...axisTitles(input, materials), ...names]);
   const axes = await result.readAxes();
   for (const { start, count } of stretches(result.pointCount, POINTS_AT_A_TIME)) {
     const columns: Float64Array[] = axisColumns(axes, start, count);
@@ -109,13 +109,13 @@ const usualTitles = {
 } as const;
 
 /** Two axes may sweep the same of two layers: then the layers are named. */
-function axisTitles(input: Run['input']): string[] {
+function axisTitles(input: Run['input'], materials: Run['materials']): string[] {
   const axes = axesOf<SweepAxes['axis']>(input).map(({ axis }) => axis);
   return axes.map((axis) => {
     const isOnly = axes.filter(({ kind }) => kind === axis.kind).length === 1;
     const title =
       isOnly && axis.kind in usualTitles ? usualTitles[axis.kind as keyof typeof usualTitles] : null;
-    const text = title ?? quantityOf(axis, input.document);
+    const text = title ?? quantityOf(axis, input.document, materials);
     return `${text.charAt(0).toUpperCase()}${text.slice(1)} (${axisUnitOf(axis)})`;
   });
 }

@@ -94,7 +94,7 @@ export async function createRun(
     ...snapshot,
     ...stack,
     groupId: group.id,
-    name: wanted.name ?? runNameFor(wanted, wanted.document, stack.stackName),
+    name: wanted.name ?? runNameFor(wanted, wanted.document, snapshot.materials, stack.stackName),
     createdById: actor.userId,
   };
   if (idempotencyKey === null) return storeRun({ models, jobs }, actor, 'run.create', values);
