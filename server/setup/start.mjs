@@ -16,6 +16,11 @@ await runEntry(async () => {
   await buildAll();
   const environment = await serverEnvironment();
   return runUntilStopped([
-    { name: 'The server', args: ['--enable-source-maps', 'dist/server/index.js'], env: environment },
+    {
+      name: 'The server',
+      // Five isolates with V8's usual young generation hold 150 MB at rest that nothing here needs.
+      args: ['--enable-source-maps', '--max-semi-space-size=2', 'dist/server/index.js'],
+      env: environment,
+    },
   ]);
 });
