@@ -22,8 +22,10 @@ import { GradedBand, SlabBreak } from './SampleMarks.tsx';
 /** Height that the layers of the drawing keep to where they can, px. */
 const ROOM = 430;
 
+type Props = { document: StackDocument; activeLayer: string | null };
+
 /** The film from its surface down: layers on a compressed depth scale, blocks in brackets, the substrate fading out. */
-export function CrossSection({ document }: { document: StackDocument }) {
+export function CrossSection({ document, activeLayer }: Props) {
   const { materials, edit, announce } = useFilm();
   const onDrop = useCallback(
     (id: string, target: DropTarget) => {
@@ -62,6 +64,7 @@ export function CrossSection({ document }: { document: StackDocument }) {
         <LayerRow
           key={item.id}
           layer={item}
+          active={item.id === activeLayer}
           height={heights.get(item.id) ?? 34}
           fillAbove={fillBefore(items, index, fillAbove)}
           // The face of a block's last layer is that of the block, many repetitions further down.

@@ -26,6 +26,8 @@ type Props = {
   /** What a layer can be made of, for the editor. */
   library?: readonly MaterialSummary[];
   edit: EditDocument | null;
+  /** The layer that is pointed at elsewhere on the page. */
+  activeLayer?: string | null;
   /** Below the layers, such as the settings of a real sample. */
   children?: ReactNode;
 };
@@ -63,7 +65,7 @@ export function FilmDrawing(props: Props) {
           nm
         </span>
       </div>
-      <CrossSection document={document} />
+      <CrossSection document={document} activeLayer={props.activeLayer ?? null} />
       <FilmCautions document={document} />
       {props.children}
       <p role="status" className="sr-only">

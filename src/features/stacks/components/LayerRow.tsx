@@ -18,11 +18,13 @@ type Props = {
   /** Fill of what lies above, which a graded interface runs over from. */
   fillAbove: string;
   dragged: boolean;
+  /** Whether it is pointed at elsewhere on the page, such as at its share of the signal. */
+  active: boolean;
   onGrab?: ((id: string) => (event: PointerEvent) => void) | undefined;
 };
 
 /** One layer of the drawing: its colour, its height, the depth of its lower face, and its controls. */
-export function LayerRow({ layer, position, height, depthNm, fillAbove, dragged, onGrab }: Props) {
+export function LayerRow({ layer, position, height, depthNm, fillAbove, dragged, active, onGrab }: Props) {
   const { materials, edit, announce } = useFilm();
   const onKeyDown = (event: KeyboardEvent) => {
     if (!edit || !event.altKey || event.defaultPrevented) return;
@@ -36,7 +38,7 @@ export function LayerRow({ layer, position, height, depthNm, fillAbove, dragged,
       data-drop-id={layer.id}
       data-drop-kind="layer"
       aria-label={`${mediumName(layer.medium, materials)}, layer ${position}`}
-      className={`group relative flex flex-col border-b-[1.5px] border-paper ${dragged ? 'opacity-45' : ''}`}
+      className={`group relative flex flex-col border-b-[1.5px] border-paper ${dragged ? 'opacity-45' : ''} ${active ? 'outline-2 -outline-offset-2 outline-magnet' : ''}`}
       style={{
         minHeight: height,
         background: classFill[mediumClass(layer.medium, materials)],

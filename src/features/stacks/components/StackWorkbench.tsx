@@ -54,6 +54,8 @@ export type ExplainedFilm = {
   describe: (medium: StackMedium) => { name: string; fill: string };
   unit: AngleUnit;
   onPoint: (change: Partial<WorkingPoint>) => void;
+  /** Marks a layer of the drawing while its share is pointed at. */
+  onActiveLayer: (layerId: string | null) => void;
 };
 
 /** The film as the panel of a real sample changes it. */
@@ -108,6 +110,7 @@ export function StackWorkbench({
   const vectors = useMemo(() => workingVectors(film, point.magnetization), [film, point]);
   const transverse = isTransverse(vectors);
   const averaged = addsIntensities(film);
+  const [activeLayer, setActiveLayer] = useState<string | null>(null);
   const nameOf = (medium: StackMedium) => mediumName(medium, materials);
   const describe = useCallback(
     (medium: StackMedium) => ({
@@ -154,6 +157,7 @@ export function StackWorkbench({
             rangeNm={rangeNm}
             issues={issues}
             edit={canEdit ? editor.editDocument : null}
+            activeLayer={activeLayer}
           >
             {samplePanel({
               document: film,
@@ -219,7 +223,14 @@ export function StackWorkbench({
           />
         </div>
         <div className="mt-4">
-          {explanation({ document: film, point, describe, unit: view.unit, onPoint: setPoint })}
+          {explanation({
+            document: film,
+            point,
+            describe,
+            unit: view.unit,
+            onPoint: setPoint,
+            onActiveLayer: setActiveLayer,
+          })}
         </div>
       </div>
       <LeaveGuard dirty={editor.dirty && mayEdit} />

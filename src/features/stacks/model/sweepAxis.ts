@@ -1,3 +1,4 @@
+import { axisValues } from '../../../../shared/axisValues.ts';
 import { LIMITS } from '../../../../shared/limits.ts';
 import { SUBSTRATE, axisSchema } from '../../../../shared/run.ts';
 import type { AxisKind, SweepAxis } from '../../../../shared/run.ts';
@@ -15,26 +16,11 @@ const MAP_PREVIEW_POINTS = 40;
 const MAP_POINTS = 100;
 const FAMILY_POINTS = 6;
 
-/** The values of an axis at `points` points: ends exact, the values between never beyond them. */
+/** The values of an axis at `points` points instead of its own. */
 export function axisGrid(axis: SweepAxis, points: number): number[] {
-  if (points <= 1) return [axis.from];
+  const values = axisValues({ ...axis, points: Math.max(1, points) });
   // Repeats are whole numbers; fewer points than there are numbers leave some out.
-  if (axis.kind === 'repeat') return [...new Set(evenGrid(axis, points).map(Math.round))];
-  return evenGrid(axis, points);
-}
-
-function evenGrid(axis: SweepAxis, points: number): number[] {
-  const [low, high] = [Math.min(axis.from, axis.to), Math.max(axis.from, axis.to)];
-  return Array.from({ length: points }, (_, index) => {
-    if (index === 0) return axis.from;
-    if (index === points - 1) return axis.to;
-    const share = index / (points - 1);
-    const value =
-      axis.spacing === 'linear'
-        ? axis.from + (axis.to - axis.from) * share
-        : axis.from * Math.exp(share * Math.log(axis.to / axis.from));
-    return Math.min(Math.max(value, low), high);
-  });
+  return axis.kind === 'repeat' ? [...new Set(values.map(Math.round))] : values;
 }
 
 /** An axis that makes sense for this film: within the constants' range, around the layer's thickness. */
