@@ -4,6 +4,7 @@ import { eventually } from './eventually.ts';
 import { stripReading } from './readings.ts';
 import { startSite } from './site.ts';
 import type { Site } from './site.ts';
+import { sweepDrawn, sweepFields, workingPoint } from './stackPage.ts';
 import type { Visitor } from './visitor.ts';
 
 let site: Site;
@@ -18,14 +19,16 @@ afterAll(async () => site?.stop());
 
 /** What somebody set on the stack page, as the page shows it. */
 async function shownView({ page }: Visitor) {
+  const { from, to, points } = sweepFields(page, 'thickness');
+  const { wavelength, angle, sLight } = workingPoint(page);
   return {
-    wavelength: await page.getByLabel('wavelength (nm)').inputValue(),
-    angle: await page.getByLabel('angle of incidence (°)').inputValue(),
-    input: await page.getByRole('button', { name: 's light' }).getAttribute('aria-pressed'),
+    wavelength: await wavelength.inputValue(),
+    angle: await angle.inputValue(),
+    input: await sLight.getAttribute('aria-pressed'),
     swept: await page.getByRole('tab', { selected: true }).innerText(),
-    from: await page.getByLabel('thickness from (nm)').inputValue(),
-    to: await page.getByLabel('thickness to (nm)').inputValue(),
-    points: await page.getByLabel('points of the run (points)').inputValue(),
+    from: await from.inputValue(),
+    to: await to.inputValue(),
+    points: await points.inputValue(),
     unit: await page.getByLabel('Unit of the angles').inputValue(),
     rotation: await stripReading(page, 'Kerr rotation'),
   };
@@ -35,17 +38,19 @@ it('restores the stack page from its address, after a reload and for somebody el
   const { page, context } = grower;
   const stack = await demoStack(context, 'Pt/Co/Pt');
   await grower.open(`/stacks/${stack.id}`);
-  await page.getByLabel('wavelength (nm)').fill('550');
-  await page.getByLabel('angle of incidence (°)').fill('52');
-  await page.getByRole('button', { name: 's light' }).click();
-  await page.getByText(/^200 points, /).waitFor();
+  const { wavelength, angle, sLight } = workingPoint(page);
+  await wavelength.fill('550');
+  await angle.fill('52');
+  await sLight.click();
+  await sweepDrawn(page, 200);
   await page.getByRole('tab', { name: 'thickness' }).click();
-  await page.getByLabel('thickness from (nm)').fill('0.5');
-  await page.getByLabel('thickness to (nm)').fill('12');
-  await page.getByLabel('points of the run (points)').fill('60');
+  const { from, to, points } = sweepFields(page, 'thickness');
+  await from.fill('0.5');
+  await to.fill('12');
+  await points.fill('60');
   await page.getByLabel('Unit of the angles').selectOption('mrad');
   await page.waitForURL(/to=12&points=60.*unit=mrad/);
-  await page.getByText(/^60 points, /).waitFor();
+  await sweepDrawn(page, 60);
   await eventually(() => stripReading(page, 'Kerr rotation')).not.toBeNaN();
   const before = await shownView(grower);
   expect(before).toMatchObject({

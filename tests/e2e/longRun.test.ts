@@ -7,6 +7,7 @@ import { ask, newStack } from './demo.ts';
 import { eventually } from './eventually.ts';
 import { startSite } from './site.ts';
 import type { Site } from './site.ts';
+import { keepAsRun, sweepDrawn, sweepFields } from './stackPage.ts';
 import type { Visitor } from './visitor.ts';
 
 const POINTS = 1_000_000;
@@ -42,10 +43,9 @@ it('goes on with a run over a reload of its page, and cancels it', async () => {
   const { page, context } = theorist;
   const stack = await newStack(context, 'A long film', longFilm);
   await theorist.open(`/stacks/${stack.id}`);
-  await page.getByLabel('points of the run (points)').fill(String(POINTS));
-  await page.getByText(/^preview of \d+ points/).waitFor();
-  await page.getByRole('button', { name: 'Keep as run' }).click();
-  await page.waitForURL(/\/runs\/[^/]+$/);
+  await sweepFields(page, 'angle').points.fill(String(POINTS));
+  await sweepDrawn(page, 'preview');
+  await keepAsRun(page);
   await page.getByRole('progressbar').waitFor();
   await eventually(() => pointsDone(page)).toBeGreaterThan(0);
 

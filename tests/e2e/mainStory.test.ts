@@ -12,6 +12,7 @@ import { eventually } from './eventually.ts';
 import { asPrinted, isDrawn, stripReading, tableReading } from './readings.ts';
 import { startSite } from './site.ts';
 import type { Site } from './site.ts';
+import { keepAsRun, sweepDrawn, sweepFields, thicknessOf } from './stackPage.ts';
 import type { Visitor } from './visitor.ts';
 
 // From the sign-in to a link that no longer opens: each part goes on where the one before ended.
@@ -44,14 +45,14 @@ it('signs in and opens a stack of the group', async () => {
   await page.getByRole('heading', { level: 1, name: 'Northgate Films' }).waitFor();
   const stacks = page.getByRole('region', { name: 'Stacks' });
   await stacks.getByRole('link', { name: 'Pt/Co/Pt on oxidised silicon', exact: true }).click();
-  await page.getByLabel('thickness of Co, layer 2 (nm)').waitFor();
+  await thicknessOf(page, 'Co, layer 2').waitFor();
 });
 
 it('shows new readings when a thickness is changed on the drawing', async () => {
   const { page, context } = lead;
   await eventually(() => stripReading(page, 'Kerr rotation')).not.toBeNaN();
   const before = await stripReading(page, 'Kerr rotation');
-  await page.getByLabel('thickness of Co, layer 2 (nm)').fill(String(COBALT_NM));
+  await thicknessOf(page, 'Co, layer 2').fill(String(COBALT_NM));
 
   const { document } = await demoStack(context, 'Pt/Co/Pt');
   film = {
@@ -73,12 +74,11 @@ it('shows new readings when a thickness is changed on the drawing', async () => 
 it('sweeps the angle and keeps the sweep as a run', async () => {
   const { page } = lead;
   await page.getByRole('tab', { name: 'angle' }).click();
-  await page.getByLabel('angle to (°)').fill('80');
-  await page.getByLabel('points of the run (points)').fill('161');
-  await page.getByText(/^161 points, /).waitFor();
+  await sweepFields(page, 'angle').to.fill('80');
+  await sweepFields(page, 'angle').points.fill('161');
+  await sweepDrawn(page, 161);
   expect(await isDrawn(page)).toBe(true);
-  await page.getByRole('button', { name: 'Keep as run' }).click();
-  await page.waitForURL(/\/runs\/[^/]+$/);
+  await keepAsRun(page);
   await page.getByText(`Values at angle ${ANGLE_DEG}°`).waitFor();
   expect(await tableReading(page, 'Kerr rotation')).toBe(asPrinted(rotationDeg * 1000));
   await eventually(() => isDrawn(page)).toBe(true);

@@ -7,6 +7,7 @@ import { testDatabases } from '../../server/setup/testing/testDatabases.mjs';
 import { testServer } from '../../server/setup/testing/testServer.mjs';
 import { demoStack } from './demo.ts';
 import { startSite } from './site.ts';
+import { sweepDrawn } from './stackPage.ts';
 import { fontsShown } from './readings.ts';
 
 /** `npm run screenshot`: the pictures of the README, of the demo as a fresh machine shows it. */
@@ -27,7 +28,7 @@ await runEntry(async () => {
       const { context, page, open } = await site.visit({ as: 'lead', theme, height: 800 });
       const stack = await demoStack(context, 'Pt/Co/Pt');
       await open(`/stacks/${stack.id}`);
-      await page.getByText(/^200 points, /).waitFor();
+      await sweepDrawn(page, 200);
       await fontsShown(page);
       await page.screenshot({ path: file });
       process.stdout.write(`${file} (${Math.ceil(statSync(file).size / 1000)} kB)\n`);

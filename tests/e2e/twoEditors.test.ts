@@ -4,6 +4,7 @@ import { stackSchema } from '../../shared/stack.ts';
 import { ask, newStack } from './demo.ts';
 import { startSite } from './site.ts';
 import type { Site } from './site.ts';
+import { thicknessOf } from './stackPage.ts';
 import type { Visitor } from './visitor.ts';
 
 let site: Site;
@@ -14,7 +15,7 @@ beforeAll(async () => {
 
 afterAll(async () => site?.stop());
 
-const thickness = (visitor: Visitor, layer: string) => visitor.page.getByLabel(`thickness of ${layer} (nm)`);
+const thickness = (visitor: Visitor, layer: string) => thicknessOf(visitor.page, layer);
 
 async function thicknessesOf(visitor: Visitor, { id }: Stack): Promise<unknown[]> {
   const { document } = await ask(visitor.context, `/stacks/${id}`, stackSchema);

@@ -5,6 +5,7 @@ import type { Stack } from '../../shared/stack.ts';
 import { ask, demoRunId, demoStack } from './demo.ts';
 import { startSite } from './site.ts';
 import type { Site } from './site.ts';
+import { workingPoint } from './stackPage.ts';
 import type { Visitor } from './visitor.ts';
 
 /** Names of controls that change what belongs to the group; a viewer meets none of them, an owner several a page. */
@@ -62,7 +63,7 @@ describe('somebody who may look and not change', () => {
   it('still reads the film at a working point of their own', async () => {
     await viewer.open(`/stacks/${stack.id}`);
     await viewer.page.getByText('You may look, not change.').waitFor();
-    await viewer.page.getByLabel('angle of incidence (°)').fill('45');
+    await workingPoint(viewer.page).angle.fill('45');
     await viewer.page.waitForURL(/angle=45/);
   });
 
