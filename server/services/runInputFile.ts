@@ -6,7 +6,7 @@ import { toSolveCase } from '../../shared/stackCase.ts';
 import type { StackDocument, StackItem } from '../../shared/stack.ts';
 import { resolveCase } from '../../worker/dispersion/resolveCase.ts';
 import type { ResolvableMaterial } from '../../worker/dispersion/resolveCase.ts';
-import { axisValues } from '../../worker/sweep/axisValues.ts';
+import { axisValues } from '../../shared/axisValues.ts';
 import { materialKey } from '../../worker/sweep/sweepInput.ts';
 import type { RunInput } from '../models/run.ts';
 

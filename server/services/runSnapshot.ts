@@ -7,7 +7,7 @@ import { ResolutionError, resolveCase } from '../../worker/dispersion/resolveCas
 import type { ResolvableMaterial } from '../../worker/dispersion/resolveCase.ts';
 import { SOLVER_VERSION } from '../../worker/optics/version.ts';
 import { solveWarnings } from '../../worker/optics/warnings.ts';
-import { axisValues } from '../../worker/sweep/axisValues.ts';
+import { axisValues } from '../../shared/axisValues.ts';
 import { invalid } from '../errors.ts';
 import type { Material } from '../models/material.ts';
 import type { Run, RunInput } from '../models/run.ts';

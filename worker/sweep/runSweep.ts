@@ -1,5 +1,5 @@
 import { axesOf, pointCountOf } from '../../shared/runAxes.ts';
-import { axisValues } from './axisValues.ts';
+import { axisValues } from '../../shared/axisValues.ts';
 import { ComputeError } from './computeError.ts';
 import { planChunks } from './planChunks.ts';
 import type { Chunk } from './planChunks.ts';

@@ -11,7 +11,7 @@ import { inputAzimuthOf } from '../../shared/stack.ts';
 import type { StackDocument, StackLayer } from '../../shared/stack.ts';
 import { resolveCase } from '../dispersion/resolveCase.ts';
 import { solveRequest } from '../optics/solveRequest.ts';
-import { axisValues } from './axisValues.ts';
+import { axisValues } from '../../shared/axisValues.ts';
 import { planChunks } from './planChunks.ts';
 import { SharedResult } from './sharedResult.ts';
 import type { SweepInput } from './sweepInput.ts';

@@ -11,7 +11,7 @@ import type { ResolvableMaterial } from '../dispersion/resolveCase.ts';
 import { FastSolver } from '../optics/fast/fastSolver.ts';
 import type { AxisRole } from './axisRoles.ts';
 import { axisRoles } from './axisRoles.ts';
-import { axisValueAt } from './axisValues.ts';
+import { axisValueAt } from '../../shared/axisValues.ts';
 import { GeneralStates, SharpStates } from './chunkStates.ts';
 import type { Needs, PointStates, States } from './chunkStates.ts';
 import { BATCH_POINTS, FastStates } from './fastStates.ts';

@@ -1,4 +1,4 @@
-import type { SweepAxis } from '../../shared/run.ts';
+import type { SweepAxis } from './run.ts';
 
 /**
  * The value of an axis at one of its points, in the axis's own unit (nm or deg).

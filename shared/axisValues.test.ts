@@ -1,6 +1,6 @@
 import fc from 'fast-check';
 import { describe, expect, it } from 'vitest';
-import type { SweepAxis } from '../../shared/run.ts';
+import type { SweepAxis } from './run.ts';
 import { axisValueAt, axisValues } from './axisValues.ts';
 
 const axis = (overrides: Partial<SweepAxis> = {}): SweepAxis =>
