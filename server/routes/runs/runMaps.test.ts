@@ -82,8 +82,8 @@ describe('a map with a family', () => {
     expect(lines[0]).toMatch(/^Angle of incidence \(deg\),Vacuum wavelength \(nm\),Scale of Q \(1\),/);
     expect(lines[1 + 9 * 6 + 2]!.split(',').slice(0, 3)).toEqual(['20', '500', '2']);
 
-    const { body } = await editor.get(`/api/v1/groups/${people.group.id}/runs`).expect(200);
-    const listed = (body as { runs: RunSummary[] }).runs.find(({ id }) => id === run.id);
+    const list = await editor.get(`/api/v1/groups/${people.group.id}/runs`).expect(200);
+    const listed = (list.body as { runs: RunSummary[] }).runs.find(({ id }) => id === run.id);
     expect(listed).toMatchObject(axes);
     expect(run.assumptions.join('\n')).toMatch(/Second axis: wavelength.*\nFamily: scale of Q/);
   });
