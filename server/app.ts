@@ -43,7 +43,8 @@ export function createApp(dependencies: AppDependencies): Express {
 /** Compressing server-sent events would hold each back until a block is full; Float64 bytes hardly shrink. */
 const isCompressible: compression.CompressionFilter = (request, response) => {
   const type = String(response.getHeader('Content-Type') ?? '');
-  return !type.startsWith('text/event-stream') && compression.filter(request, response);
+  const isLeftAlone = type.startsWith('text/event-stream') || type.startsWith('application/octet-stream');
+  return !isLeftAlone && compression.filter(request, response);
 };
 
 const neverStored: RequestHandler = (_request, response, next) => {
