@@ -117,12 +117,21 @@ export const stackDocumentSchema = strictObject({
   /** Averages over what light and film are not sharp in; standard deviations of the stated shape. */
   spread: strictObject({
     shape: z.enum(spreadShapes),
-    thicknessPercent: z.number().min(0).max(30).optional(),
+    // The outermost node of a normal distribution lies at 3.75 standard deviations.
+    thicknessPercent: z.number().min(0).max(25).optional(),
     divergenceDeg: z.number().min(0).max(10).optional(),
     bandwidthNm: z.number().min(0).max(200).optional(),
   }).optional(),
   workingPoint: workingPointSchema,
 }).superRefine((document, context) => {
+  const bandwidthNm = document.spread?.bandwidthNm ?? 0;
+  if (bandwidthNm > document.workingPoint.wavelengthNm / 4) {
+    context.addIssue({
+      code: 'custom',
+      path: ['spread', 'bandwidthNm'],
+      message: `must be at most a quarter of the wavelength (${document.workingPoint.wavelengthNm} nm), got ${bandwidthNm}`,
+    });
+  }
   const seen = new Set<string>();
   const visit = (items: StackItem[], path: (string | number)[]) => {
     items.forEach((item, position) => {
