@@ -1,4 +1,5 @@
-import type { Jones, KerrAngles } from './observables.ts';
+import { linearStokes, NO_BEAM } from '../../shared/stokes.ts';
+import type { Jones } from './observables.ts';
 
 /**
  * Mueller matrices of physics.md section 4: sixteen doubles, rows and columns S0..S3, not normalized. They act on
@@ -115,46 +116,14 @@ export function stokesForAzimuth(mueller: Mueller, azimuthDeg: number): Stokes {
   return applyMueller(mueller, s1, s2, 0);
 }
 
-/** S1 and S2 of linear light; p, s and the diagonals exactly, so that rounding never mixes them. */
-function linearStokes(azimuthDeg: number): [s1: number, s2: number] {
-  const eighths = (((azimuthDeg / 45) % 4) + 4) % 4;
-  if (Number.isInteger(eighths)) return [[1, 0, -1, 0][eighths]!, [0, 1, 0, -1][eighths]!];
-  const angle = (azimuthDeg * Math.PI) / 90;
-  return [Math.cos(angle), Math.sin(angle)];
-}
-
 /** M (1, s1, s2, s3) */
-export function applyMueller(mueller: Mueller, s1: number, s2: number, s3: number): Stokes {
+function applyMueller(mueller: Mueller, s1: number, s2: number, s3: number): Stokes {
   const out = new Float64Array(4);
   for (let row = 0; row < 4; row++) {
     const i = 4 * row;
     out[row] = mueller[i]! + mueller[i + 1]! * s1 + mueller[i + 2]! * s2 + mueller[i + 3]! * s3;
   }
   return out;
-}
-
-/** A beam weaker than this has no polarization worth the name (physics.md section 4). */
-export const NO_BEAM = 1e-28;
-
-const HALF_IN_DEGREES = 90 / Math.PI;
-
-/**
- * Azimuth of the ellipse less that of the input, folded into (-90, 90], and ellipticity angle, deg (physics.md
- * section 4). For a partly polarized beam the ellipticity is half the arc sine of S3 / S0, what a detector of
- * circular light reads against the whole intensity. Null for a beam with S0 < 1e-28.
- */
-export function polarizationOf(stokes: Stokes, azimuthDeg: number): KerrAngles | null {
-  const [s0, s1, s2, s3] = [stokes[0]!, stokes[1]!, stokes[2]!, stokes[3]!];
-  if (s0 < NO_BEAM) return null;
-  // Turned into the frame of the input first, so that a small rotation keeps its digits.
-  const [cos, sin] = linearStokes(azimuthDeg);
-  const rotationDeg = HALF_IN_DEGREES * Math.atan2(s2 * cos - s1 * sin, s1 * cos + s2 * sin);
-  // atan2 of the rest of the intensity is the arc sine without its loss of digits near circular light.
-  const rest = Math.sqrt(Math.max(0, (s0 - s3) * (s0 + s3)));
-  return {
-    rotationDeg: rotationDeg <= -90 ? rotationDeg + 180 : rotationDeg,
-    ellipticityDeg: HALF_IN_DEGREES * Math.atan2(s3, rest),
-  };
 }
 
 /** Polarized share of the intensity, 0..1; 0 for no beam. */

@@ -1,10 +1,11 @@
 import type { Complex } from '../../shared/complex.ts';
 import type { SolveCase, SolvePoint, SolveRequest, SolveResponse } from '../../shared/solve.ts';
+import { polarizationOf } from '../../shared/stokes.ts';
 import { explain } from './explain.ts';
 import type { IntensityPoint } from './intensitySolver.ts';
 import { IntensitySolver } from './intensitySolver.ts';
 import type { Mueller } from './mueller.ts';
-import { degreeOfPolarization, polarizationOf, stokesForAzimuth } from './mueller.ts';
+import { degreeOfPolarization, stokesForAzimuth } from './mueller.ts';
 import type { Jones } from './observables.ts';
 import type { Refinement } from './refine.ts';
 import { refineInterfaces } from './refine.ts';
