@@ -8,6 +8,8 @@ import type { PlotAxis, PlotSeries } from './plotTypes.ts';
 const FONT = '"Roboto Flex Variable", "Roboto Flex", sans-serif';
 /** How far the name of a right axis reaches beyond the frame, px: as far as its numbers do. */
 const RIGHT_NAME = 50;
+/** Letters of a name that fits beside a right axis. */
+const SHORT_NAME = 5;
 /** Open markers along one curve. */
 const MARKERS = 14;
 const dashes = { solid: 'solid', dashed: [7, 4], dotted: [1.5, 3.5] } as const;
@@ -54,9 +56,10 @@ export function plotOption(
       nameTextStyle: {
         color: tokens.muted,
         fontSize: 11.5,
-        align: 'right',
         // Over the numbers, clear of the working point's handle on the frame; a long name on the right ends at the edge.
-        padding: index === 0 ? [0, 8, 0, 0] : [0, -RIGHT_NAME, 0, 0],
+        ...(index > 0 && axis.label.length <= SHORT_NAME
+          ? { align: 'left', padding: [0, 0, 0, 8] }
+          : { align: 'right', padding: index === 0 ? [0, 8, 0, 0] : [0, -RIGHT_NAME, 0, 0] }),
       },
       splitLine: { show: index === 0, lineStyle: { color: tokens.line } },
       axisLine: { show: false },
