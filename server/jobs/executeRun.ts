@@ -7,6 +7,7 @@ import { isDatabaseAway } from '../http/toRefusal.ts';
 import type { Models } from '../models/models.ts';
 import type { MaterialStore } from '../services/materialStore.ts';
 import { loadRunMaterials } from '../services/runMaterials.ts';
+import { releaseMemory } from './releaseMemory.ts';
 import type { RunLease } from './runLease.ts';
 import type { RunQueue } from './runQueue.ts';
 import { retryWhileAway } from './retryWhileAway.ts';
@@ -37,6 +38,7 @@ export async function executeRun(
 ): Promise<void> {
   const { logger, queue } = dependencies;
   const log = logger.child({ runId: lease.runId });
+  let storedBytes = 0;
   try {
     const outcome = await compute(lease, dependencies, stopping, onStart);
     switch (outcome.kind) {
@@ -52,12 +54,15 @@ export async function executeRun(
         const { seconds, points } = outcome.result;
         const stored = await retryWhileAway(() => lease.finish(outcome.result), stopping.signal);
         log.info({ seconds, points, stored }, 'A run was solved');
+        storedBytes = 8 * points * outcome.result.columns.length;
         break;
       }
     }
   } catch (error) {
     log.error({ err: error }, 'A run could not be brought to an end; it will be tried again');
   }
+  // Once this function has returned, nothing holds the columns any more.
+  setImmediate(() => releaseMemory(storedBytes));
 }
 
 type Outcome =
