@@ -1,6 +1,7 @@
 import type { Issue } from '../shared/error.ts';
 import type { SolveRequest, SolveResponse } from '../shared/solve.ts';
 import { solveRequest } from './optics/solveRequest.ts';
+import { releaseMemory } from './releaseMemory.ts';
 import type { ChunkTask } from './sweep/runSweep.ts';
 import { SharedResult } from './sweep/sharedResult.ts';
 import type { SweepInput } from './sweep/sweepInput.ts';
@@ -16,10 +17,18 @@ export type TaskOutcome<Value> = { ok: true; value: Value } | { ok: false; messa
 /** Sweeps that this thread has compiled, the one used last at the end. */
 const solvers = new Map<number, SweepSolver>();
 /** A host runs few sweeps at a time; old ones must not keep their stacks in memory. */
-const MOST_SOLVERS = 4;
+const MOST_SOLVERS = 2;
+
+/** Size of the columns of the sweep before. */
+let formerBytes = 0;
 
 export function sweepChunk(task: ChunkTask): TaskOutcome<null> {
   return outcomeOf(() => {
+    if (!solvers.has(task.sweepId)) {
+      // A thread that makes little garbage collects seldom, and would keep the columns of several past sweeps.
+      releaseMemory(formerBytes);
+      formerBytes = task.result.byteLength;
+    }
     const result = new SharedResult(task.result, task.points, task.readings);
     solverOf(task).solve(task.chunk, result);
     return null;

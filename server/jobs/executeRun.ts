@@ -7,7 +7,7 @@ import { isDatabaseAway } from '../http/toRefusal.ts';
 import type { Models } from '../models/models.ts';
 import type { MaterialStore } from '../services/materialStore.ts';
 import { loadRunMaterials } from '../services/runMaterials.ts';
-import { releaseMemory } from './releaseMemory.ts';
+import { releaseMemory } from '../../worker/releaseMemory.ts';
 import type { RunLease } from './runLease.ts';
 import type { RunQueue } from './runQueue.ts';
 import { retryWhileAway } from './retryWhileAway.ts';

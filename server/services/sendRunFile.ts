@@ -5,6 +5,7 @@ import { resultByteLength } from '../../shared/resultFormat.ts';
 import type { ReadingName } from '../../shared/run.ts';
 import type { AppDependencies } from '../dependencies.ts';
 import type { Run } from '../models/run.ts';
+import { releaseMemory } from '../../worker/releaseMemory.ts';
 import { partialResultBytes, resultBytes, resultCsv, resultHeaderOf } from './runDownloads.ts';
 import { runInputFile } from './runInputFile.ts';
 import { loadRunMaterials } from './runMaterials.ts';
@@ -32,8 +33,11 @@ export async function sendRunFile(
     case 'binary': {
       const result = await RunResult.open(models, run);
       const readings = chooseReadings(run, file.readings);
-      announce(response, resultByteLength(resultHeaderOf(run, readings)));
-      return send(resultBytes(result, readings), response);
+      const bytes = resultByteLength(resultHeaderOf(run, readings));
+      announce(response, bytes);
+      await send(resultBytes(result, readings), response);
+      releaseMemory(bytes);
+      return;
     }
     case 'partial': {
       const soFar = run.state === 'done' ? null : jobs.partialResult(run.id);

@@ -7,8 +7,8 @@ const WORTH_BYTES = 8_000_000;
 let collect: (() => void) | null = null;
 
 /**
- * Gives back the buffers of a large run at once. The collector learns late of memory outside its heap, and several
- * maps in a row would pile up buffers that nobody holds any more. Takes some 20 ms on the thread that serves.
+ * Gives back the buffers of a large run or download at once. The collector learns late of memory outside its heap, and several
+ * maps in a row would pile up buffers that nobody holds any more. Takes some 20 ms of the calling thread.
  *
  * @param bytes size of what was dropped
  */
