@@ -1,13 +1,14 @@
 import { afterAll, beforeAll, describe, expect, it } from 'vitest';
 import type TestAgent from 'supertest/lib/agent.js';
-import type { Issue } from '../../../shared/error.ts';
+import type { RunSummary, SweepAxis } from '../../../shared/run.ts';
 import { decodeResult } from '../../../shared/resultFormat.ts';
-import type { CreateRun, Run, RunSummary, SweepAxis } from '../../../shared/run.ts';
 import { solveRequestSchema } from '../../../shared/solve.ts';
 import { solveRequest } from '../../../worker/optics/solveRequest.ts';
 import { startApiServer } from '../../../tests/apiServer.ts';
 import type { ApiServer } from '../../../tests/apiServer.ts';
-import { buildDocument, buildPeople, buildSlowDocument } from '../../../tests/factories.ts';
+import { buildPeople, buildSlowDocument } from '../../../tests/factories.ts';
+import type { RunCalls, WantedRun } from '../../../tests/runCalls.ts';
+import { runCalls } from '../../../tests/runCalls.ts';
 import { waitForRun } from '../../../tests/waitForRun.ts';
 
 const angles: SweepAxis = { kind: 'angle', from: 0, to: 80, points: 9, spacing: 'linear' };
@@ -17,44 +18,18 @@ const scales: SweepAxis = { kind: 'voigtScale', from: 1, to: 2, points: 2, spaci
 let server: ApiServer;
 let people: Awaited<ReturnType<typeof buildPeople>>;
 let editor: TestAgent;
+let start: RunCalls['start'];
+let refused: RunCalls['refused'];
+let dataOf: RunCalls['dataOf'];
 
 beforeAll(async () => {
   server = await startApiServer();
   await server.dependencies.pool.warm();
   people = await buildPeople(server.models);
   editor = await server.signedIn(people.editor);
+  ({ start, refused, dataOf } = runCalls(editor, people.group.id, angles));
 });
 afterAll(() => server.stop());
-
-type Wanted = Partial<Omit<CreateRun, 'groupId'>>;
-
-const requestOf = (wanted: Wanted) => ({
-  groupId: people.group.id,
-  document: buildDocument(),
-  axis: angles,
-  ...wanted,
-});
-
-async function start(wanted: Wanted): Promise<Run> {
-  const { body } = (await editor.post('/api/v1/runs').send(requestOf(wanted)).expect(201)) as { body: Run };
-  return body;
-}
-
-async function refused(wanted: Wanted): Promise<Issue[]> {
-  const { body } = (await editor.post('/api/v1/runs').send(requestOf(wanted)).expect(422)) as {
-    body: { error: { issues: Issue[] } };
-  };
-  return body.error.issues;
-}
-
-async function dataOf(runId: string, query = '') {
-  const { body } = (await editor
-    .get(`/api/v1/runs/${runId}/data${query}`)
-    .buffer(true)
-    .responseType('blob')
-    .expect(200)) as { body: Buffer };
-  return decodeResult(Uint8Array.from(body).buffer);
-}
 
 describe('a map with a family', () => {
   it('is stored with all axes and handed out as numbers, CSV and input in one order', async () => {
@@ -90,7 +65,7 @@ describe('a map with a family', () => {
 
   it('is refused with the field of the axis that is wrong', async () => {
     const swept = { from: 0, to: 2, points: 3, spacing: 'linear' } as const;
-    const paths = async (wanted: Wanted) => (await refused(wanted)).map(({ path }) => path);
+    const paths = async (wanted: WantedRun) => (await refused(wanted)).map(({ path }) => path);
     expect(await paths({ second: { kind: 'thickness', layerId: 'nope', ...swept } })).toEqual([
       'second.layerId',
     ]);

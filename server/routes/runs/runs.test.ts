@@ -2,7 +2,6 @@ import { afterAll, beforeAll, describe, expect, it } from 'vitest';
 import type TestAgent from 'supertest/lib/agent.js';
 import type { Issue } from '../../../shared/error.ts';
 import { readingOf } from '../../../shared/readings.ts';
-import { decodeResult } from '../../../shared/resultFormat.ts';
 import type { ReadingName, Run, SweepAxis } from '../../../shared/run.ts';
 import { solveRequestSchema } from '../../../shared/solve.ts';
 import type { SolvePoint } from '../../../shared/solve.ts';
@@ -20,6 +19,8 @@ import {
   buildSlowDocument,
   buildStack,
 } from '../../../tests/factories.ts';
+import type { RunCalls, WantedRun } from '../../../tests/runCalls.ts';
+import { runCalls } from '../../../tests/runCalls.ts';
 import { waitForRun } from '../../../tests/waitForRun.ts';
 
 const angles: SweepAxis = { kind: 'angle', from: 0, to: 80, points: 81, spacing: 'linear' };
@@ -28,6 +29,10 @@ const endless: SweepAxis = { kind: 'angle', from: 0, to: 89, points: 1_000_000, 
 let server: ApiServer;
 let people: Awaited<ReturnType<typeof buildPeople>>;
 let editor: TestAgent;
+let requestOf: RunCalls['requestOf'];
+let start: RunCalls['start'];
+let refused: RunCalls['refused'];
+let dataOf: RunCalls['dataOf'];
 let viewer: TestAgent;
 let stranger: TestAgent;
 
@@ -36,45 +41,16 @@ beforeAll(async () => {
   await server.dependencies.pool.warm();
   people = await buildPeople(server.models);
   editor = await server.signedIn(people.editor);
+  ({ requestOf, start, refused, dataOf } = runCalls(editor, people.group.id, angles));
   viewer = await server.signedIn(people.viewer);
   stranger = await server.signedIn(people.stranger);
 });
 afterAll(() => server.stop());
 
-type Wanted = { document?: StackDocument; axis?: SweepAxis; readings?: ReadingName[]; name?: string };
-
-const requestOf = ({ document = buildDocument(), axis = angles, ...rest }: Wanted = {}) => ({
-  groupId: people.group.id,
-  document,
-  axis,
-  ...rest,
-});
-
-async function start(wanted: Wanted = {}): Promise<Run> {
-  const { body } = (await editor.post('/api/v1/runs').send(requestOf(wanted)).expect(201)) as { body: Run };
-  return body;
-}
-
-async function finished(wanted: Wanted = {}): Promise<Run> {
+async function finished(wanted: WantedRun = {}): Promise<Run> {
   const run = await start(wanted);
   await waitForRun(server.models, run.id, 'done');
   return run;
-}
-
-async function refused(wanted: Wanted): Promise<Issue[]> {
-  const { body } = (await editor.post('/api/v1/runs').send(requestOf(wanted)).expect(422)) as {
-    body: { error: { issues: Issue[] } };
-  };
-  return body.error.issues;
-}
-
-async function dataOf(runId: string, query = '') {
-  const { body } = (await editor
-    .get(`/api/v1/runs/${runId}/data${query}`)
-    .buffer(true)
-    .responseType('blob')
-    .expect(200)) as { body: Buffer };
-  return decodeResult(Uint8Array.from(body).buffer);
 }
 
 /** What a run must hold at each point, from the three states of its own input file. */
