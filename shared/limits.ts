@@ -21,6 +21,10 @@ export const LIMITS = {
   documentItems: 2_000,
   nameLength: 120,
   noteLength: 2_000,
+  /** Bytes of an imported table. */
+  importBytes: 20_000_000,
+  importRows: 200_000,
+  importColumns: 64,
   /** Bytes of a JSON request body. */
   bodyBytes: 4_000_000,
 } as const;

@@ -1,57 +1,31 @@
 import { z } from 'zod';
 import { complexPairSchema } from './complex.ts';
+import { anisotropySchema, indexDispersionSchema, voigtDispersionSchema } from './dispersion.ts';
+import { importOriginSchema } from './materialImport.ts';
+import { sourceSchema } from './materialSource.ts';
+import { confidences } from './materialSource.ts';
+import { thermalLawSchema } from './thermal.ts';
 import { strictObject } from './strictObject.ts';
 
 /** The classes that colour the cross-section. */
 export const materialClasses = ['magnet', 'noble', 'refractory', 'dielectric', 'semiconductor'] as const;
 export type MaterialClass = (typeof materialClasses)[number];
 
-/** How far a constant can be trusted; shown wherever the constant is used. */
-export const confidences = ['measured', 'fitted', 'from memory', 'invented for the demo'] as const;
-
-export const sourceSchema = strictObject({
-  citation: z.string(),
-  doi: z.string().nullable(),
-  licence: z.string().nullable(),
-  sample: z.string().nullable(),
-  method: z.string().nullable(),
-  confidence: z.enum(confidences),
-  /** What a reader must know before use, in a sentence. */
-  caution: z.string().nullable(),
-});
-
-const wavelengthsNm = z.array(z.number().positive()).min(1);
-
-/** Refractive index against wavelength: a table in ascending wavelength, a formula, or one point. */
-export const indexDispersionSchema = z.discriminatedUnion('kind', [
-  strictObject({
-    kind: z.literal('table'),
-    wavelengthsNm,
-    n: z.array(z.number().min(0)),
-    k: z.array(z.number().min(0)),
-  }),
-  strictObject({
-    kind: z.literal('formula'),
-    /** An expression for n (lossless) in the wavelength L in micrometres and the coefficients c1, c2, ... */
-    expression: z.string(),
-    coefficients: z.array(z.number()),
-    rangeNm: z.tuple([z.number().positive(), z.number().positive()]),
-  }),
-]);
-
-/** Voigt constant Q in the canonical sign against wavelength; one entry means known at one wavelength only. */
-export const voigtDispersionSchema = strictObject({
-  kind: z.literal('table'),
-  wavelengthsNm,
-  q: z.array(complexPairSchema),
-});
-
-/** One version of a material as stored: everything a solve needs and where it comes from. */
+/** One version of a material as stored: everything a solve needs and where it comes from. Never changed. */
 export const materialContentSchema = strictObject({
   index: indexDispersionSchema,
   indexSource: sourceSchema,
   voigt: voigtDispersionSchema.nullable(),
   voigtSource: sourceSchema.nullable(),
+  anisotropy: anisotropySchema.optional(),
+  anisotropySource: sourceSchema.optional(),
+  /** How the magnetization falls with temperature, as a helper for layers of this material. */
+  thermal: thermalLawSchema.optional(),
+  /** What was entered, where the constants came from a file. */
+  origin: strictObject({
+    index: importOriginSchema.optional(),
+    voigt: importOriginSchema.optional(),
+  }).optional(),
 });
 
 export const materialSummarySchema = z.object({
@@ -70,6 +44,11 @@ export const materialSummarySchema = z.object({
   citation: z.string(),
   confidence: z.enum(confidences),
   voigtConfidence: z.enum(confidences).nullable(),
+  /** How n and k, and Q, are given. */
+  indexKind: z.string(),
+  voigtKind: z.string().nullable(),
+  anisotropy: z.enum(['uniaxial', 'cubic', 'tensor']).nullable(),
+  updatedAt: z.iso.datetime(),
 });
 
 /** Curves for the material page, sampled by the server within the table's range. */
@@ -77,20 +56,33 @@ export const materialCurvesSchema = z.object({
   wavelengthsNm: z.array(z.number()),
   n: z.array(z.number()),
   k: z.array(z.number()),
-  voigt: z.object({ wavelengthsNm: z.array(z.number()), q: z.array(complexPairSchema) }).nullable(),
+  voigt: z
+    .object({
+      wavelengthsNm: z.array(z.number()),
+      q: z.array(complexPairSchema),
+      /** N at these wavelengths, with which eps_xy = i Q N^2; null where the index is not known there. */
+      index: z.array(complexPairSchema.nullable()),
+    })
+    .nullable(),
+  /** The extraordinary index of a uniaxial crystal. */
+  extraordinary: z
+    .object({ wavelengthsNm: z.array(z.number()), n: z.array(z.number()), k: z.array(z.number()) })
+    .nullable(),
 });
 
 export const materialSchema = materialSummarySchema.extend({
   content: materialContentSchema,
   curves: materialCurvesSchema,
   notes: z.array(z.string()),
+  /** The newest version; `version` may be an older one. */
+  newestVersion: z.int(),
+  /** Who made this version; null for the shipped library. */
+  author: z.string().nullable(),
+  madeAt: z.iso.datetime(),
 });
 
 export const materialListSchema = z.object({ materials: z.array(materialSummarySchema) });
 
-export type MaterialSource = z.infer<typeof sourceSchema>;
-export type IndexDispersion = z.infer<typeof indexDispersionSchema>;
-export type VoigtDispersion = z.infer<typeof voigtDispersionSchema>;
 export type MaterialContent = z.infer<typeof materialContentSchema>;
 export type MaterialSummary = z.infer<typeof materialSummarySchema>;
 export type Material = z.infer<typeof materialSchema>;

@@ -167,6 +167,10 @@ const libraryFields = {
     .boolean()
     .optional()
     .meta({ description: 'Use a constant known at one wavelength at every other one too.' }),
+  tensorState: z.enum(['reversed', 'unmagnetized']).optional().meta({
+    description:
+      'For a material that is a free tensor: its magnetization reversed (transposed) or absent (symmetric part).',
+  }),
 };
 
 const libraryPartSchema = strictObject({ ...partFields, ...libraryFields }).superRefine((part, context) => {
@@ -201,13 +205,10 @@ export function checkMediumKeys(medium: LibraryMediumInput, context: z.Refinemen
     for (const key of keys) if (medium[key] !== undefined) refuse(key, message);
   };
   if (medium.material !== undefined) {
-    refuseBeside(
-      [...constantKeys, 'orientationDeg'],
-      'cannot stand beside material: the library gives the constants',
-    );
+    refuseBeside([...constantKeys], 'cannot stand beside material: the library gives the constants');
     return;
   }
-  refuseBeside(['version', 'assumeConstant'], 'needs material');
+  refuseBeside(['version', 'assumeConstant', 'tensorState'], 'needs material');
   if (medium.epsilon !== undefined) {
     refuseBeside(
       ['index', 'voigt', 'voigtScale', 'm', 'extraordinary', 'axis', 'quadratic', 'mixture'],

@@ -1,6 +1,6 @@
 import { z } from 'zod';
 import { LIMITS } from './limits.ts';
-import { sourceSchema } from './material.ts';
+import { sourceSchema } from './materialSource.ts';
 import { checkAxis, checkAxes } from './runAxes.ts';
 import { solveWarningSchema } from './solve.ts';
 import { stackDocumentSchema, stackNameSchema } from './stack.ts';
@@ -183,6 +183,8 @@ export const usedMaterialSchema = z.object({
   voigtRangeNm: z.tuple([z.number(), z.number()]).nullable(),
   /** True where a constant known at one wavelength was used at others, as the user allowed. */
   assumedConstant: z.boolean(),
+  /** How imported constants were read and what was noticed then, in sentences; absent in runs made before it was kept. */
+  origin: z.array(z.string()).optional(),
 });
 
 export type UsedMaterial = z.infer<typeof usedMaterialSchema>;

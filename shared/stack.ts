@@ -4,12 +4,13 @@ import { LIMITS } from './limits.ts';
 import { checkMediumKeys, libraryMediumFields, magnetizationSchema } from './medium.ts';
 import { spreadShapes } from './spread.ts';
 import { strictObject } from './strictObject.ts';
+import { layerThermalSchema } from './thermal.ts';
 
 /**
  * A stack as people edit it: media by library id or by typed-in constants, every layer with an id of its own so
  * that a sweep can name it however the stack is reordered. stackCase.ts turns it into a solve case.
  */
-const { m: _m, voigtScale: _voigtScale, ...constantFields } = libraryMediumFields;
+const { m: _m, voigtScale: _voigtScale, tensorState: _tensorState, ...constantFields } = libraryMediumFields;
 
 /** What fills a layer: `{material, version}` of the library, or constants typed in (then `label` names them). */
 export const stackMediumSchema = strictObject({
@@ -31,6 +32,8 @@ export const stackLayerSchema = strictObject({
   fixed: z.boolean().optional(),
   /** Multiplies Q of the layer's medium; 1 when absent. */
   voigtScale: z.number().min(0).optional(),
+  /** Q of the layer at a temperature other than that at which it is known; multiplies Q like voigtScale. */
+  thermal: layerThermalSchema.optional(),
   /** Role in the film, such as cap or buffer. */
   note: z.string().max(LIMITS.nameLength).optional(),
   /** Width of the graded interface with the medium above. */

@@ -1,8 +1,4 @@
-import type {
-  Material as PresentedMaterial,
-  MaterialContent,
-  MaterialSummary,
-} from '../../shared/material.ts';
+import type { Material as PresentedMaterial, MaterialContent, MaterialSummary } from '../../shared/material.ts';
 import { materialCurves } from '../../worker/dispersion/materialCurves.ts';
 import { dispersionRangeNm } from '../../worker/dispersion/range.ts';
 import type { Material } from '../models/material.ts';

@@ -1,5 +1,6 @@
 import type { Issue } from '../../shared/error.ts';
-import type { IndexDispersion, MaterialContent } from '../../shared/material.ts';
+import type { MaterialContent } from '../../shared/material.ts';
+import type { IndexDispersion } from '../../shared/dispersion.ts';
 import { compileFormula, FormulaError } from './formula.ts';
 
 /** What the schema of a material cannot say: columns of one length, rising wavelengths, a formula that works. */

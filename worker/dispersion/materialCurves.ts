@@ -1,4 +1,5 @@
-import type { IndexDispersion, Material, MaterialContent } from '../../shared/material.ts';
+import type { Material, MaterialContent } from '../../shared/material.ts';
+import type { IndexDispersion } from '../../shared/dispersion.ts';
 import { photonEnergyEv } from '../../shared/units.ts';
 import { dispersionRangeNm } from './range.ts';
 import { sampleIndex, sampleVoigt } from './sample.ts';

@@ -1,4 +1,4 @@
-import type { IndexDispersion, VoigtDispersion } from '../../shared/material.ts';
+import type { IndexDispersion, VoigtDispersion } from '../../shared/dispersion.ts';
 
 export type RangeNm = [fromNm: number, toNm: number];
 

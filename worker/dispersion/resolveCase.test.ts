@@ -1,5 +1,6 @@
 import { describe, expect, test } from 'vitest';
-import type { MaterialContent, MaterialSource } from '../../shared/material.ts';
+import type { MaterialContent } from '../../shared/material.ts';
+import type { MaterialSource } from '../../shared/materialSource.ts';
 import { solveCaseSchema } from '../../shared/solve.ts';
 import type { LibrarySolveCase } from '../../shared/solve.ts';
 import { ResolutionError, resolveCase } from './resolveCase.ts';

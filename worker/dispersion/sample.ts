@@ -1,4 +1,4 @@
-import type { IndexDispersion, VoigtDispersion } from '../../shared/material.ts';
+import type { IndexDispersion, VoigtDispersion } from '../../shared/dispersion.ts';
 import { photonEnergyEv } from '../../shared/units.ts';
 import { compileFormula } from './formula.ts';
 import { cubicValue, monotoneSlopes } from './monotoneCubic.ts';

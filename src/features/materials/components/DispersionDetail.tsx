@@ -1,4 +1,4 @@
-import type { IndexDispersion } from '../../../../shared/material.ts';
+import type { IndexDispersion } from '../../../../shared/dispersion.ts';
 import { formatNumber, formatPlain } from '../../../lib/format.ts';
 
 /** What is stored: the tabulated points, or the formula with its coefficients. */

@@ -1,6 +1,6 @@
 import { TriangleAlert } from 'lucide-react';
 import type { ReactNode } from 'react';
-import type { MaterialSource } from '../../../../shared/material.ts';
+import type { MaterialSource } from '../../../../shared/materialSource.ts';
 
 /** Where a constant comes from and how far it can be trusted. */
 export function SourceList({ source }: { source: MaterialSource }) {

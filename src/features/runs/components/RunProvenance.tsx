@@ -1,6 +1,6 @@
 import type { ReactNode } from 'react';
 import { Link } from 'react-router-dom';
-import type { MaterialSource } from '../../../../shared/material.ts';
+import type { MaterialSource } from '../../../../shared/materialSource.ts';
 import type { SharedRun, UsedMaterial } from '../../../../shared/run.ts';
 import { formatDuration, formatFormula, formatRange } from '../../../lib/format.ts';
 import { paths } from '../../../lib/paths.ts';
