@@ -19,6 +19,10 @@ function buildMaterial(id: string, overrides: Partial<MaterialSummary> = {}): Ma
     citation: 'invented for this test',
     confidence: 'invented for the demo',
     voigtConfidence: null,
+    indexKind: 'table',
+    voigtKind: null,
+    anisotropy: null,
+    updatedAt: '2026-03-01T09:00:00.000Z',
     ...overrides,
   };
 }

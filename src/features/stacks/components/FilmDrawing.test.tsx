@@ -25,6 +25,10 @@ const gold: MaterialSummary = {
   citation: 'Measured on evaporated films, 1972',
   confidence: 'measured',
   voigtConfidence: null,
+  indexKind: 'table',
+  voigtKind: null,
+  anisotropy: null,
+  updatedAt: '2026-03-01T09:00:00.000Z',
 };
 
 type Setup = { document?: StackDocument; editable?: boolean; issues?: Issue[]; rangeNm?: [number, number] };

@@ -16,6 +16,10 @@ function buildSummary(id: string, formula: string, name: string, preferred = tru
     citation: 'Optical constants, 1972',
     confidence: 'measured',
     voigtConfidence: null,
+    indexKind: 'table',
+    voigtKind: null,
+    anisotropy: null,
+    updatedAt: '2026-03-01T09:00:00.000Z',
   };
 }
 
