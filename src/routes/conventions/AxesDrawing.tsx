@@ -1,5 +1,5 @@
 import { useId } from 'react';
-import { Arrow, TowardReader } from './Arrow.tsx';
+import { Arrow, TowardReader } from '../../components/Arrow.tsx';
 
 const origin = [330, 232] as const;
 const thetaDeg = 50;

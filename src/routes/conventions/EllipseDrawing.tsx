@@ -1,4 +1,4 @@
-import { Arrow } from './Arrow.tsx';
+import { Arrow } from '../../components/Arrow.tsx';
 
 const center = [150, 132] as const;
 const major = 92;

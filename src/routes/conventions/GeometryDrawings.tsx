@@ -1,5 +1,5 @@
 import { useId } from 'react';
-import { Arrow, TowardReader } from './Arrow.tsx';
+import { Arrow, TowardReader } from '../../components/Arrow.tsx';
 
 const geometries = [
   { name: 'polar', m: '(0, 0, ±1)', hint: 'along the normal, + into the film' },

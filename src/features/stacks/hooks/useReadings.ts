@@ -5,7 +5,7 @@ import type { StackDocument, WorkingPoint } from '../../../../shared/stack.ts';
 import { solveQuery } from '../api/solve.ts';
 import { pointRequest, readPointResponse } from '../model/solveStates.ts';
 import type { PointReadings } from '../model/solveStates.ts';
-import { useSettled } from './useSettled.ts';
+import { useSettled } from '../../../lib/useSettled.ts';
 
 /** A pause in typing after which the film is solved; together with the solve it stays under 150 ms. */
 const PAUSE_MS = 40;

@@ -8,7 +8,7 @@ import { readSweepResponse, sweepRequest } from '../model/solveStates.ts';
 import type { ReadingColumns, Sweep } from '../model/solveStates.ts';
 import { axisGrid, axisProblems, previewGrid } from '../model/sweepAxis.ts';
 import type { PreviewAxes } from '../model/sweepAxis.ts';
-import { useSettled } from './useSettled.ts';
+import { useSettled } from '../../../lib/useSettled.ts';
 
 /** Longer than that of the readings strip, which comes first. */
 const PAUSE_MS = 110;
