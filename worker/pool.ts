@@ -1,6 +1,8 @@
 import { availableParallelism } from 'node:os';
 import type { SolveRequest, SolveResponse } from '../shared/solve.ts';
-import { ComputeError } from './sweep/computeError.ts';
+import { materialPool } from './materialPool.ts';
+import type { MaterialPool } from './materialPool.ts';
+import { runLimited } from './runLimited.ts';
 import { microsecondsOf } from './sweep/cost.ts';
 import { runSweep } from './sweep/runSweep.ts';
 import type { SweepOptions, SweepResult } from './sweep/runSweep.ts';
@@ -18,7 +20,7 @@ const SOLVE_TIMEOUT_MS = 60_000;
 type PoolState = { ok: boolean; detail: string };
 
 /** The threads of one process: all numbers of Skewlight are computed here. */
-export type ComputePool = {
+export type ComputePool = MaterialPool & {
   /**
    * Solves a request whose input is valid (schema and `solveRules.ts`); a small one is answered while sweeps run.
    *
@@ -51,18 +53,13 @@ export function createPool(options: { threads?: number; taskFile?: URL; heapMb?:
   const small = new Threads({ count: SMALL_THREADS, taskFile, heapMb });
 
   return {
-    async solve(request) {
+    ...materialPool({ small, large: sweeps }),
+    solve(request) {
       const chosen = microsecondsOf(request) <= SMALL_MICROSECONDS ? small : sweeps;
-      const signal = AbortSignal.timeout(SOLVE_TIMEOUT_MS);
-      try {
-        return await chosen.run<SolveResponse>('solve', request, signal);
-      } catch (error) {
-        if (!signal.aborted) throw error;
-        throw new ComputeError(
-          'timeout',
-          `The request took longer than ${SOLVE_TIMEOUT_MS / 1000} s: ask fewer points, or start a run instead.`,
-        );
-      }
+      return runLimited(chosen, 'solve', request, {
+        milliseconds: SOLVE_TIMEOUT_MS,
+        message: `The request took longer than ${SOLVE_TIMEOUT_MS / 1000} s: ask fewer points, or start a run instead.`,
+      });
     },
     sweep: (input, sweepOptions) =>
       runSweep(input, threads, (task, signal) => sweeps.run('sweepChunk', task, signal), sweepOptions),

@@ -1,18 +1,21 @@
 import type { Issue } from '../shared/error.ts';
-import type { SolveRequest, SolveResponse } from '../shared/solve.ts';
+import type { Material, MaterialContent } from '../shared/material.ts';
+import type { LibrarySolveCase, SolveCase, SolveRequest, SolveResponse } from '../shared/solve.ts';
+import { checkContent as issuesOf } from './dispersion/checkContent.ts';
+import { materialCurves } from './dispersion/materialCurves.ts';
+import type { ResolvableMaterial } from './dispersion/resolveCase.ts';
 import { solveRequest } from './optics/solveRequest.ts';
 import { releaseMemory } from './releaseMemory.ts';
+import { resolveCases } from './resolveCases.ts';
 import type { ChunkTask } from './sweep/runSweep.ts';
 import { SharedResult } from './sweep/sharedResult.ts';
 import type { SweepInput } from './sweep/sweepInput.ts';
 import { SweepSolver } from './sweep/sweepSolver.ts';
 import { warmUp } from './sweep/warmUp.ts';
+import { outcomeOf } from './taskOutcome.ts';
+import type { TaskOutcome } from './taskOutcome.ts';
 
-/**
- * What runs in a worker thread. Everything that crosses is plain: the fields of an error do not survive the
- * way, so a refusal comes back as a value.
- */
-export type TaskOutcome<Value> = { ok: true; value: Value } | { ok: false; message: string; issues: Issue[] };
+/* What runs in a worker thread: the pool calls these functions by name. */
 
 /** Sweeps that this thread has compiled, the one used last at the end. */
 const solvers = new Map<number, SweepSolver>();
@@ -39,6 +42,21 @@ export function solve(request: SolveRequest): TaskOutcome<SolveResponse> {
   return outcomeOf(() => solveRequest(request));
 }
 
+export function curves(content: MaterialContent): TaskOutcome<Material['curves']> {
+  return outcomeOf(() => materialCurves(content));
+}
+
+export function checkContent(content: MaterialContent): TaskOutcome<Issue[]> {
+  return outcomeOf(() => issuesOf(content));
+}
+
+export function resolve(task: {
+  cases: LibrarySolveCase[];
+  materials: ReadonlyMap<string, ResolvableMaterial>;
+}): TaskOutcome<SolveCase[]> {
+  return outcomeOf(() => resolveCases(task.cases, task.materials));
+}
+
 /** Makes a thread load and compile its code before the first question. */
 export function warm(): TaskOutcome<null> {
   return outcomeOf(() => {
@@ -62,14 +80,4 @@ function readInput(bytes: SharedArrayBuffer): SweepInput {
   const text = new TextDecoder().decode(new Uint8Array(bytes).slice());
   // Written by runSweep from a SweepInput in this same process.
   return JSON.parse(text) as SweepInput;
-}
-
-function outcomeOf<Value>(work: () => Value): TaskOutcome<Value> {
-  try {
-    return { ok: true, value: work() };
-  } catch (error) {
-    const message = error instanceof Error ? error.message : String(error);
-    const issues = error instanceof Error && 'issues' in error ? (error.issues as Issue[]) : [];
-    return { ok: false, message, issues };
-  }
 }

@@ -2,7 +2,7 @@ import { existsSync } from 'node:fs';
 import { createRequire } from 'node:module';
 import { fileURLToPath, pathToFileURL } from 'node:url';
 import { Piscina } from 'piscina';
-import type { TaskOutcome } from '../task.ts';
+import type { TaskOutcome } from '../taskOutcome.ts';
 import { ComputeError } from './computeError.ts';
 
 /** Heap of one thread. Results live in shared memory outside of it, so this is room for stacks and constants. */
