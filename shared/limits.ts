@@ -21,6 +21,17 @@ export const LIMITS = {
   documentItems: 2_000,
   nameLength: 120,
   noteLength: 2_000,
+  /** Working points of one design question. */
+  designPoints: 6,
+  /** Thicknesses that one optimisation varies. */
+  designVariables: 8,
+  capCandidates: 12,
+  capPoints: 400,
+  toleranceSamples: 20_000,
+  /** Points of a curve that is computed while somebody drags. */
+  liveCurvePoints: 400,
+  studyItems: 100,
+  studyNoteLength: 20_000,
   /** Bytes of an imported table. */
   importBytes: 20_000_000,
   importRows: 200_000,
