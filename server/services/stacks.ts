@@ -8,6 +8,7 @@ import type { Models } from '../models/models.ts';
 import type { Stack } from '../models/stack.ts';
 import type { StackVersion } from '../models/stackVersion.ts';
 import { checkStackDocument } from './checkStackDocument.ts';
+import { pinVersions } from './pinVersions.ts';
 import { recordActivity } from './recordActivity.ts';
 
 type Person = { userId: string; name: string };
@@ -49,7 +50,7 @@ function withVersion(stack: Stack): StackWithVersion {
 }
 
 /**
- * Puts a new stack into the group, as its version 1.
+ * Puts a new stack into the group, as its version 1, with the version of each of its materials named.
  *
  * @throws Refusal 422 when the document is too deep or too large
  */
@@ -57,10 +58,11 @@ export async function createStack(
   models: Models,
   actor: Person,
   groupId: string,
-  { name, description, document, isDemo = false }: NewStack,
+  { name, description, document: entered, isDemo = false }: NewStack,
 ): Promise<StackWithVersion> {
-  refuseBadDocument(document);
+  refuseBadDocument(entered);
   const stackId = await models.sequelize.transaction(async (transaction) => {
+    const document = await pinVersions(models, groupId, entered, transaction);
     const stack = await models.Stack.create(
       { groupId, name, description, version: 1, isDemo },
       { transaction },
@@ -88,7 +90,8 @@ export async function createStack(
 }
 
 /**
- * Saves a new version over the one that the edit started from. The same save sent twice is one save.
+ * Saves a new version over the one that the edit started from, with the version of each of its materials named.
+ * The same save sent twice is one save.
  *
  * @throws Refusal 409 when somebody saved meanwhile, 422 when the document is too deep or too large
  */
@@ -108,8 +111,10 @@ export async function updateStack(
       transaction,
     });
     if (!newest) throw new Error(`Stack ${stackId} has no version ${stack.version}`);
+    const entered = update.document ?? newest.document;
+    const document = await pinVersions(models, stack.groupId, entered, transaction);
     if (update.version !== stack.version) {
-      if (isSameSave(newest, update, actor)) return;
+      if (isSameSave(newest, update.document ? { ...update, document } : update, actor)) return;
       throw staleVersion(newest, update.version);
     }
     const next = {
@@ -117,7 +122,6 @@ export async function updateStack(
       description: update.description ?? newest.description,
       version: stack.version + 1,
     };
-    const document = update.document ?? newest.document;
     await models.StackVersion.create(
       { ...next, stackId, document, layerCount: countLayers(document.layers), authorId: actor.userId },
       { transaction },

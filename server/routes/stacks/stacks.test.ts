@@ -6,7 +6,14 @@ import type { StackItem } from '../../../shared/stack.ts';
 import { issuePaths, read, refusalOf } from '../../../tests/answers.ts';
 import type { ApiServer } from '../../../tests/apiServer.ts';
 import { startApiServer } from '../../../tests/apiServer.ts';
-import { buildDocument, buildPeople, buildRun, buildStack } from '../../../tests/factories.ts';
+import {
+  buildContent,
+  buildDocument,
+  buildMaterial,
+  buildPeople,
+  buildRun,
+  buildStack,
+} from '../../../tests/factories.ts';
 
 let api: ApiServer;
 let people: Awaited<ReturnType<typeof buildPeople>>;
@@ -42,6 +49,65 @@ describe('a stack', () => {
     expect(trail.map((line) => [line.action, line.actorId, line.subjectId])).toEqual(
       ['stack.create', 'stack.update', 'stack.delete'].map((action) => [action, people.editor.id, made.id]),
     );
+  });
+
+  test('is stored with the version of every material, which a later version does not change', async () => {
+    const browser = await api.signedIn(people.editor);
+    const own = await buildMaterial(api.models, {
+      group: people.group,
+      contents: [buildContent(), buildContent()],
+    });
+    const foreign = await buildMaterial(api.models, { group: people.strangersGroup });
+    const part = { material: own.id };
+    const document = buildDocument({
+      incident: { material: own.id },
+      layers: [
+        {
+          id: 'block',
+          repeat: 2,
+          layers: [
+            {
+              id: 'mix',
+              thicknessNm: 3,
+              medium: { mixture: { model: 'bruggeman', fraction: 0.5, parts: [part, { index: 1 }] } },
+              oxide: { medium: part, consumedNm: 1, expansion: 1.5 },
+            },
+            { id: 'old', thicknessNm: 3, medium: { material: own.id, version: 1 } },
+            { id: 'foreign', thicknessNm: 3, medium: { material: foreign.id } },
+          ],
+        },
+      ],
+      substrate: part,
+      backside: { thicknessNm: 5e5, exit: part },
+    });
+    const made = read(
+      stackSchema,
+      await browser.post(groupUrl()).send({ name: 'Film', document }).expect(201),
+    );
+    const pinned = { material: own.id, version: 2 };
+    expect(made.document).toMatchObject({
+      incident: pinned,
+      layers: [
+        {
+          layers: [
+            { medium: { mixture: { parts: [pinned, { index: 1 }] } }, oxide: { medium: pinned } },
+            { medium: { material: own.id, version: 1 } },
+            { medium: { material: foreign.id } },
+          ],
+        },
+      ],
+      substrate: pinned,
+      backside: { exit: pinned },
+    });
+    await own.update({ version: 3 });
+    // The same save sent twice is one save, although the document came without versions.
+    const body = { version: 1, document };
+    const saved = read(stackSchema, await browser.patch(stackUrl(made)).send(body).expect(200));
+    expect(saved.document.substrate).toEqual({ material: own.id, version: 3 });
+    await browser.patch(stackUrl(made)).send(body).expect(200);
+    await browser.patch(stackUrl(made)).send({ version: 2, name: 'Renamed' }).expect(200);
+    const read3 = read(stackSchema, await browser.get(stackUrl(made)).expect(200));
+    expect([read3.version, read3.document]).toEqual([3, saved.document]);
   });
 
   test('is listed with its group only, the one saved last first', async () => {
