@@ -17,6 +17,12 @@ export interface MaterialVersion extends Model<
   materialId: string;
   version: number;
   content: MaterialContent;
+  /** Null for the shipped library, and when the account is gone. */
+  authorId: CreationOptional<string | null>;
+  /** The name at that time, which outlives the account; null for the shipped library. */
+  authorName: CreationOptional<string | null>;
+  /** Why it was made, for those who read the history. */
+  note: CreationOptional<string>;
   createdAt: CreationOptional<Date>;
 }
 
@@ -27,6 +33,9 @@ export function defineMaterialVersion(sequelize: Sequelize): ModelStatic<Materia
       materialId: { type: DataTypes.TEXT, primaryKey: true },
       version: { type: DataTypes.INTEGER, primaryKey: true },
       content: { type: DataTypes.JSONB, allowNull: false },
+      authorId: DataTypes.UUID,
+      authorName: DataTypes.TEXT,
+      note: { type: DataTypes.TEXT, allowNull: false, defaultValue: '' },
       createdAt: DataTypes.DATE,
     },
     { tableName: 'material_versions', updatedAt: false },

@@ -3,6 +3,7 @@ import { defineActivity } from './activity.ts';
 import { defineApiToken } from './apiToken.ts';
 import { defineGroup } from './group.ts';
 import { defineMaterial } from './material.ts';
+import { defineMaterialImport } from './materialImport.ts';
 import { defineMaterialVersion } from './materialVersion.ts';
 import { defineMembership } from './membership.ts';
 import { definePasswordReset } from './passwordReset.ts';
@@ -37,6 +38,7 @@ export function createModels(databaseUrl: string) {
     PasswordReset: definePasswordReset(sequelize),
     Material: defineMaterial(sequelize),
     MaterialVersion: defineMaterialVersion(sequelize),
+    MaterialImport: defineMaterialImport(sequelize),
     Stack: defineStack(sequelize),
     StackVersion: defineStackVersion(sequelize),
     Run: defineRun(sequelize),

@@ -1,13 +1,14 @@
-import type { Material as PresentedMaterial, MaterialContent, MaterialSummary } from '../../shared/material.ts';
-import { materialCurves } from '../../worker/dispersion/materialCurves.ts';
-import { dispersionRangeNm } from '../../worker/dispersion/range.ts';
+import type { Material as PresentedMaterial, MaterialSummary } from '../../shared/material.ts';
 import type { Material } from '../models/material.ts';
+import { materialFacts } from '../services/materialFacts.ts';
+import type { MaterialFacts } from '../services/materialFacts.ts';
+import type { StoredVersion } from '../services/versionCache.ts';
 
-/** @param version the one that `content` is of, not always the newest */
+/** @param version the one that the facts are of, not always the newest */
 export function presentMaterialSummary(
   material: Material,
   version: number,
-  content: MaterialContent,
+  facts: MaterialFacts,
 ): MaterialSummary {
   return {
     id: material.id,
@@ -16,24 +17,25 @@ export function presentMaterialSummary(
     formula: material.formula,
     class: material.class,
     groupId: material.groupId,
-    rangeNm: dispersionRangeNm(content.index),
-    voigtRangeNm: content.voigt && dispersionRangeNm(content.voigt),
     preferred: material.preferred,
-    citation: content.indexSource.citation,
-    confidence: content.indexSource.confidence,
-    voigtConfidence: content.voigtSource?.confidence ?? null,
+    updatedAt: material.updatedAt.toISOString(),
+    ...facts,
   };
 }
 
+/** @param curves of this version, sampled in the pool */
 export function presentMaterial(
   material: Material,
-  version: number,
-  content: MaterialContent,
+  stored: StoredVersion,
+  curves: PresentedMaterial['curves'],
 ): PresentedMaterial {
   return {
-    ...presentMaterialSummary(material, version, content),
-    content,
-    curves: materialCurves(content),
+    ...presentMaterialSummary(material, stored.version, materialFacts(stored.content)),
+    content: stored.content,
+    curves,
     notes: material.notes,
+    newestVersion: material.version,
+    author: stored.author,
+    madeAt: stored.madeAt.toISOString(),
   };
 }

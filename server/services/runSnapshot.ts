@@ -2,16 +2,15 @@ import type { ReadingName, SweepAxes, UsedMaterial } from '../../shared/run.ts';
 import { pointCountOf } from '../../shared/runAxes.ts';
 import type { SolveWarning } from '../../shared/solve.ts';
 import type { StackDocument } from '../../shared/stack.ts';
-import { dispersionRangeNm, isSameWavelength } from '../../worker/dispersion/range.ts';
+import { indexRangeNm, isSameWavelength, voigtRangeNm } from '../../worker/dispersion/range.ts';
 import { ResolutionError, resolveCase } from '../../worker/dispersion/resolveCase.ts';
 import type { ResolvableMaterial } from '../../worker/dispersion/resolveCase.ts';
 import { SOLVER_VERSION } from '../../worker/optics/version.ts';
 import { solveWarnings } from '../../worker/optics/warnings.ts';
 import { axisValues } from '../../shared/axisValues.ts';
 import { invalid } from '../errors.ts';
-import type { Material } from '../models/material.ts';
 import type { Run, RunInput } from '../models/run.ts';
-import type { MaterialStore } from './materialStore.ts';
+import type { LoadedMaterial, MaterialStore } from './materialStore.ts';
 import { runAssumptions } from './runAssumptions.ts';
 import { checkRunDocument, checkRunMaterials, runCase, wavelengthAxisOf } from './runCases.ts';
 import { hashRunInput } from './runInputHash.ts';
@@ -23,8 +22,6 @@ export type RunSnapshot = Pick<
   Run,
   'input' | 'materials' | 'assumptions' | 'warnings' | 'inputSha256' | 'solverVersion' | 'total'
 >;
-
-type LoadedMaterial = ResolvableMaterial & { material: Material };
 
 /** Wavelengths at which media are looked at for warnings. */
 const WARNING_POINTS = 21;
@@ -88,9 +85,9 @@ function describeUse(
   document: StackDocument,
   wavelengthsNm: number[],
 ): UsedMaterial {
-  const voigtRangeNm = content.voigt && dispersionRangeNm(content.voigt);
-  const rangeNm = dispersionRangeNm(content.index);
-  const stretched = [rangeNm, voigtRangeNm].some(
+  const knownVoigtNm = voigtRangeNm(content);
+  const rangeNm = indexRangeNm(content);
+  const stretched = [rangeNm, knownVoigtNm].some(
     (range) =>
       range !== null &&
       range[0] === range[1] &&
@@ -105,7 +102,7 @@ function describeUse(
     indexSource: content.indexSource,
     voigtSource: content.voigtSource,
     rangeNm,
-    voigtRangeNm,
+    voigtRangeNm: knownVoigtNm,
     assumedConstant: stretched && isAssumedConstant(document, id, version),
   };
 }

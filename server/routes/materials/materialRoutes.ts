@@ -1,6 +1,7 @@
 import { Op } from 'sequelize';
 import { z } from 'zod';
 import { materialListSchema, materialSchema } from '../../../shared/material.ts';
+import { materialCurves } from '../../../worker/dispersion/materialCurves.ts';
 import { notFound } from '../../errors.ts';
 import { readGroup } from '../../policies/group.ts';
 import { readMaterial as mayRead } from '../../policies/material.ts';
@@ -25,8 +26,8 @@ const listMaterials = route({
       ],
     });
     const summaries = rows.map(async (row) => {
-      const content = await materials.contentOf(row.id, row.version);
-      return content ? [presentMaterialSummary(row, row.version, content)] : [];
+      const facts = await materials.factsOf(row.id, row.version);
+      return facts ? [presentMaterialSummary(row, row.version, facts)] : [];
     });
     return { materials: (await Promise.all(summaries)).flat() };
   },
@@ -45,9 +46,9 @@ const readMaterial = route({
   answer: { status: 200, schema: materialSchema },
   async handler({ dependencies, subject, query }) {
     const wanted = query.version ?? subject.version;
-    const content = await dependencies.materials.contentOf(subject.id, wanted);
-    if (!content) throw notFound(`version ${wanted} of ${subject.name}`);
-    return presentMaterial(subject, wanted, content);
+    const stored = await dependencies.materials.versionOf(subject.id, wanted);
+    if (!stored) throw notFound(`version ${wanted} of ${subject.name}`);
+    return presentMaterial(subject, stored, materialCurves(stored.content));
   },
 });
 
