@@ -25,6 +25,15 @@ export type States = {
   solve(batch: PointBatch, take: (point: number, states: PointStates) => void): void;
 };
 
+/** ... whose layers can change from batch to batch without compiling it anew. */
+export type AdjustableStates = States & {
+  /**
+   * @param path positions into nested `layers` arrays of the case, as `findLayerPath` gives them
+   * @throws RangeError when there is no layer at that path
+   */
+  setThickness(path: number[], thicknessNm: number): void;
+};
+
 /** A stack in one magnetization state, compiled when it is first solved. */
 class StateSolver {
   readonly readings: SolvedReadings;
@@ -32,6 +41,8 @@ class StateSolver {
   readonly #state: MagnetizationState;
   readonly #sweptLayer: number[] | null;
   #solver: StackSolver | null = null;
+  /** Thicknesses set before the first solve. */
+  readonly #thicknesses = new Map<string, { path: number[]; nm: number }>();
 
   constructor(resolved: SolveCase, state: MagnetizationState, sweptLayer: number[] | null, needs: Needs) {
     this.readings = new SolvedReadings(needs.parts);
@@ -40,8 +51,13 @@ class StateSolver {
     this.#sweptLayer = sweptLayer;
   }
 
+  setThickness(path: number[], nm: number): void {
+    if (this.#solver) this.#solver.setThickness(path, nm);
+    else this.#thicknesses.set(path.join('/'), { path, nm });
+  }
+
   solve({ wavelengthIndex, anglesDeg, thicknessNm }: PointBatch, point: number): SolvedPoint {
-    this.#solver ??= new StackSolver(inMagnetizationState(this.#resolved, this.#state));
+    this.#solver ??= this.#compile();
     if (this.#sweptLayer && thicknessNm) this.#solver.setThickness(this.#sweptLayer, thicknessNm[point]!);
     const solved = this.#solver.solve(wavelengthIndex[point]!, anglesDeg[point]!);
     this.readings.take(solved);
@@ -50,10 +66,16 @@ class StateSolver {
     }
     return solved;
   }
+
+  #compile(): StackSolver {
+    const solver = new StackSolver(inMagnetizationState(this.#resolved, this.#state));
+    for (const { path, nm } of this.#thicknesses.values()) solver.setThickness(path, nm);
+    return solver;
+  }
 }
 
 /** Sharp layers in coherent light: solvers compiled once, no new objects at each point. */
-export class SharpStates implements States {
+export class SharpStates implements AdjustableStates {
   readonly batchPoints = 1;
   readonly #given: StateSolver;
   readonly #zero: StateSolver;
@@ -67,6 +89,10 @@ export class SharpStates implements States {
     this.#given = new StateSolver(resolved, 'given', sweptLayer, needs);
     this.#zero = new StateSolver(resolved, 'zero', sweptLayer, needs);
     this.#reversed = new StateSolver(resolved, 'reversed', sweptLayer, needs);
+  }
+
+  setThickness(path: number[], thicknessNm: number): void {
+    for (const state of [this.#given, this.#zero, this.#reversed]) state.setThickness(path, thicknessNm);
   }
 
   solve(batch: PointBatch, take: (point: number, states: PointStates) => void): void {

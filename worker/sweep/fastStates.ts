@@ -6,7 +6,7 @@ import { CompiledStack } from '../optics/compiledStack.ts';
 import { BatchResult, COLUMN } from '../optics/fast/batchResult.ts';
 import { FastSolver } from '../optics/fast/fastSolver.ts';
 import type { Jones } from '../optics/observables.ts';
-import type { Needs, PointStates, States } from './chunkStates.ts';
+import type { AdjustableStates, Needs, PointStates } from './chunkStates.ts';
 import type { PointBatch } from './pointBatch.ts';
 import { BatchRoom } from './pointBatch.ts';
 import type { PartsNeeded } from './solvedReadings.ts';
@@ -35,6 +35,10 @@ class FastState {
     this.#sweptLayer = sweptLayer;
     this.#result = new BatchResult(capacity, needs.parts.transmission);
     this.#source = new BatchReadings(this.#result, needs.parts);
+  }
+
+  setThickness(path: number[], thicknessNm: number): void {
+    this.#solver.setThickness(path, thicknessNm);
   }
 
   solve({ wavelengthIndex, anglesDeg, thicknessNm }: PointBatch): void {
@@ -95,7 +99,7 @@ class BatchReadings extends SolvedReadings {
 }
 
 /** Sharp layers of media with a scalar eps_d, thousands of points at a time (optics/fast). */
-export class FastStates implements States {
+export class FastStates implements AdjustableStates {
   readonly batchPoints: number;
   readonly #needs: Needs;
   readonly #sweptLayer: number[] | null;
@@ -126,6 +130,12 @@ export class FastStates implements States {
     this.#zero = needs.states.zero === 'never' ? null : stateOf('zero');
     this.#reversed = needs.states.reversed ? stateOf('reversed') : null;
     this.#stack = needs.parts.ceiling ? new CompiledStack(resolved) : null;
+  }
+
+  setThickness(path: number[], thicknessNm: number): void {
+    for (const state of [this.#given, this.#zero, this.#reversed]) state?.setThickness(path, thicknessNm);
+    const layer = this.#stack?.layerAt(path);
+    if (layer) layer.thicknessNm = thicknessNm;
   }
 
   solve(batch: PointBatch, take: (point: number, states: PointStates) => void): void {
