@@ -1,5 +1,5 @@
 import type { MaterialContent, MaterialSummary } from '../../shared/material.ts';
-import { dispersionRangeNm } from '../../worker/dispersion/range.ts';
+import { indexRangeNm, voigtRangeNm } from '../../worker/dispersion/range.ts';
 
 /** What a list says of one version of a material: follows from its content alone, and never changes. */
 export type MaterialFacts = Omit<
@@ -10,8 +10,8 @@ export type MaterialFacts = Omit<
 export function materialFacts(content: MaterialContent): MaterialFacts {
   const { index, indexSource, voigt, voigtSource, anisotropy } = content;
   return {
-    rangeNm: dispersionRangeNm(index),
-    voigtRangeNm: voigt && dispersionRangeNm(voigt),
+    rangeNm: indexRangeNm(content),
+    voigtRangeNm: voigtRangeNm(content),
     citation: indexSource.citation,
     confidence: indexSource.confidence,
     voigtConfidence: voigtSource?.confidence ?? null,

@@ -6,6 +6,7 @@ import { afterEach, beforeEach, describe, expect, test } from 'vitest';
 import { materialCurvesSchema } from '../../shared/material.ts';
 import { loadLibrary } from '../../worker/dispersion/loadLibrary.ts';
 import { materialCurves } from '../../worker/dispersion/materialCurves.ts';
+import { sampleIndex } from '../../worker/dispersion/sample.ts';
 
 const library = loadLibrary(fileURLToPath(new URL('../../data/library', import.meta.url)));
 
@@ -42,7 +43,7 @@ describe('the shipped library', () => {
     const magnetoOptic = library.filter((entry) => entry.content.voigt !== null);
     expect(new Set(magnetoOptic.map((entry) => entry.formula))).toEqual(new Set(['Fe', 'Co', 'Ni', 'NiFe']));
     for (const { id, content, notes } of magnetoOptic) {
-      expect(content.voigt!.wavelengthsNm, id).toEqual([632.8]);
+      expect(content.voigt, id).toMatchObject({ kind: 'table', wavelengthsNm: [632.8] });
       expect(content.voigtSource!.confidence, id).toBe('from memory');
       expect(content.voigtSource!.caution, id).toMatch(/from memory, verify before use/i);
       expect(notes.join(' '), id).toContain('No complete published spectrum of Q');
@@ -74,7 +75,12 @@ describe('the shipped library', () => {
         (cobalt.index as { k: number[] }).k[i],
       ]);
     });
-    expect(curves.voigt).toEqual({ wavelengthsNm: [632.8], q: [[0.03, 0.007]] });
+    const { n, k } = sampleIndex('Co', cobalt.index, [632.8]);
+    expect(curves.voigt).toEqual({
+      wavelengthsNm: [632.8],
+      q: [[0.03, 0.007]],
+      index: [[n[0], k[0]]],
+    });
   });
 });
 

@@ -16,6 +16,12 @@ function indexOf(id: string, wavelengthNm: number): [n: number, k: number] {
   return [n[0]!, k[0]!];
 }
 
+function voigtOf(id: string, wavelengthNm: number) {
+  const { index, voigt } = entryOf(id).content;
+  if (!voigt) throw new Error(`no Voigt constant of ${id}`);
+  return sampleVoigt(id, { index, voigt }, [wavelengthNm]);
+}
+
 describe('tabulated points come back as printed', () => {
   test.each([
     ['au-johnson-1972', 616.8, 0.21, 3.272, 'Johnson and Christy, Phys. Rev. B 6, 4370 (1972), 2.01 eV'],
@@ -95,8 +101,7 @@ describe('between the points, at 632.8 nm', () => {
 
 describe('Voigt constants', () => {
   test('iron is the value of physics: 0.0376 + 0.0066i at 632.8 nm, from memory of the work of Zak et al.', () => {
-    const { voigt } = entryOf('fe-johnson-1974').content;
-    const { re, im } = sampleVoigt('Fe', voigt!, [632.8]);
+    const { re, im } = voigtOf('fe-johnson-1974', 632.8);
     expect([re[0], im[0]]).toEqual([0.0376, 0.0066]);
   });
 
@@ -109,7 +114,7 @@ describe('Voigt constants', () => {
     ['nife-tikuisis-2017', 0.17],
   ])('%s gives a bulk polar Kerr angle of about %d deg', (id, expectedDeg) => {
     const [n, k] = indexOf(id, 632.8);
-    const { re, im } = sampleVoigt(id, entryOf(id).content.voigt!, [632.8]);
+    const { re, im } = voigtOf(id, 632.8);
     const kerr = (Math.hypot(n, k) * Math.hypot(re[0]!, im[0]!)) / Math.hypot(n * n - k * k - 1, 2 * n * k);
     const kerrDeg = (kerr * 180) / Math.PI;
     expect(kerrDeg).toBeGreaterThan(expectedDeg / 1.5);

@@ -1,89 +1,63 @@
-import { parse } from 'mathjs/number';
-import type { ConstantNode, FunctionNode, MathNode, OperatorNode, ParenthesisNode, SymbolNode } from 'mathjs';
+import type { Complex } from '../../shared/complex.ts';
+import type { formulaQuantities } from '../../shared/dispersion.ts';
+import { photonEnergyEv } from '../../shared/units.ts';
+import type { FormulaAlgebra } from './formulaAlgebra.ts';
+import { complexAlgebra, realAlgebra } from './formulaAlgebra.ts';
+import type { FormulaEvaluator, FormulaVariables } from './formulaTree.ts';
+import { FormulaError, translateFormula } from './formulaTree.ts';
+import { finiteVoigt, passiveIndex, passiveRoot } from './opticalValue.ts';
 
-/** A dispersion formula that cannot be used: not arithmetic, or without a real index at some wavelength. */
-export class FormulaError extends Error {
-  override readonly name = 'FormulaError';
-}
-
-/** Longer texts are refused before they are parsed. */
-const longestExpression = 1_000;
-
-const arithmetic = new Set(['add', 'subtract', 'multiply', 'divide', 'pow', 'unaryMinus', 'unaryPlus']);
+/** What the value of a formula is; `n` is a real index > 0, the others may be complex. */
+export type FormulaQuantity = (typeof formulaQuantities)[number] | 'Q';
 
 /**
- * A formula as a function of the vacuum wavelength in nm; inside the expression L is in micrometres.
+ * A formula as a function of the vacuum wavelength in nm; inside the expression L is the wavelength in micrometres,
+ * E the photon energy in eV, c1 ... cN the coefficients, and i the imaginary unit unless the quantity is n.
+ * The value is N = n + ik, for `eps` its root with n >= 0 and k >= 0, or Q.
  *
- * Expressions reach us from people, so only numbers, + - * / ^, parentheses, sqrt(), L and the coefficients
- * c1 ... cN pass; everything else of the expression language is refused before anything is evaluated.
+ * Expressions reach us from people. They are parsed by mathjs and evaluated here, never by it: whatever is not
+ * arithmetic or one of `formulaFunctions` is refused before anything is evaluated.
  *
- * @throws FormulaError on a refused expression, and from the function where n is not a positive real number
+ * @throws FormulaError on a refused expression, DispersionValueError from the function where the value is unusable
  */
 export function compileFormula(
   expression: string,
   coefficients: readonly number[],
-): (wavelengthNm: number) => number {
-  const node = parseFormula(expression);
-  refuseAllButArithmetic(node, coefficients.length);
-  const compiled = node.compile();
-  const scope = new Map(coefficients.map((value, position) => [`c${position + 1}`, value]));
+  quantity: FormulaQuantity = 'n',
+): (wavelengthNm: number) => Complex {
+  const subject = `the formula ${expression}`;
+  if (quantity === 'n') {
+    const evaluate = evaluatorOf(expression, coefficients, realAlgebra, {});
+    return (wavelengthNm) => {
+      const n = evaluate(wavelengthNm);
+      if (n > 0 && n < Infinity) return [n, 0];
+      throw new FormulaError(`${subject} gives n = ${n} at ${wavelengthNm} nm: n must be a real number > 0`);
+    };
+  }
+  const evaluate = evaluatorOf<Complex>(expression, coefficients, complexAlgebra, { i: [0, 1] });
+  const toValue = { N: passiveIndex, eps: passiveRoot, Q: finiteVoigt }[quantity];
+  return (wavelengthNm) => toValue(subject, evaluate(wavelengthNm), wavelengthNm);
+}
+
+function evaluatorOf<Value>(
+  expression: string,
+  coefficients: readonly number[],
+  algebra: FormulaAlgebra<Value>,
+  constants: Record<string, Value>,
+): (wavelengthNm: number) => Value {
+  const values = new Map(Object.entries(constants));
+  coefficients.forEach((value, position) => values.set(`c${position + 1}`, algebra.fromNumber(value)));
+  const evaluate: FormulaEvaluator<Value> = translateFormula(
+    expression,
+    algebra,
+    values,
+    coefficients.length,
+  );
   return (wavelengthNm) => {
-    scope.set('L', wavelengthNm / 1000);
-    const n: unknown = compiled.evaluate(scope);
-    if (typeof n !== 'number' || !(n > 0 && n < Infinity)) {
-      throw new FormulaError(
-        `the formula ${expression} gives n = ${String(n)} at ${wavelengthNm} nm: n must be a real number > 0`,
-      );
-    }
-    return n;
+    const variables: FormulaVariables<Value> = {
+      L: algebra.fromNumber(wavelengthNm / 1000),
+      E: algebra.fromNumber(photonEnergyEv(wavelengthNm)),
+    };
+    return evaluate(variables);
   };
 }
-
-function parseFormula(expression: string): MathNode {
-  if (expression.length > longestExpression) {
-    throw new FormulaError(
-      `a formula may have ${longestExpression} characters at most, got ${expression.length}`,
-    );
-  }
-  try {
-    return parse(expression);
-  } catch (error) {
-    throw new FormulaError(
-      `cannot be read as a formula: ${error instanceof Error ? error.message : String(error)}`,
-    );
-  }
-}
-
-function refuseAllButArithmetic(node: MathNode, coefficientCount: number): void {
-  const visit = (child: MathNode) => refuseAllButArithmetic(child, coefficientCount);
-  if (isConstant(node)) {
-    if (typeof node.value === 'number') return;
-  } else if (isSymbol(node)) {
-    if (node.name === 'L' || isCoefficient(node.name, coefficientCount)) return;
-    throw new FormulaError(`${node.name} is not known here: use L and ${namesOf(coefficientCount)}`);
-  } else if (isOperator(node)) {
-    if (arithmetic.has(node.fn)) return node.args.forEach(visit);
-  } else if (isParenthesis(node)) {
-    return visit(node.content);
-  } else if (isFunction(node)) {
-    // `fn` is a symbol for sqrt(...), but a property access for anything.sqrt(...).
-    if (isSymbol(node.fn) && node.fn.name === 'sqrt' && node.args.length === 1) return visit(node.args[0]!);
-  }
-  throw new FormulaError(
-    `${node.toString()} is not allowed in a formula: use numbers, + - * / ^, parentheses, sqrt(), L and ${namesOf(coefficientCount)}`,
-  );
-}
-
-function isCoefficient(name: string, count: number): boolean {
-  return /^c[1-9]\d{0,3}$/.test(name) && Number(name.slice(1)) <= count;
-}
-
-function namesOf(count: number): string {
-  return count === 0 ? 'no coefficients' : count === 1 ? 'c1' : `c1 to c${count}`;
-}
-
-const isConstant = (node: MathNode): node is ConstantNode => node.type === 'ConstantNode';
-const isSymbol = (node: MathNode): node is SymbolNode => node.type === 'SymbolNode';
-const isOperator = (node: MathNode): node is OperatorNode => node.type === 'OperatorNode';
-const isParenthesis = (node: MathNode): node is ParenthesisNode => node.type === 'ParenthesisNode';
-const isFunction = (node: MathNode): node is FunctionNode => node.type === 'FunctionNode';

@@ -1,36 +1,65 @@
-import type { Material, MaterialContent } from '../../shared/material.ts';
 import type { IndexDispersion } from '../../shared/dispersion.ts';
+import type { Material, MaterialContent } from '../../shared/material.ts';
 import { photonEnergyEv } from '../../shared/units.ts';
-import { dispersionRangeNm } from './range.ts';
+import type { RangeNm } from './range.ts';
+import { dispersionRangeNm, isSameWavelength, voigtRangeNm } from './range.ts';
 import { sampleIndex, sampleVoigt } from './sample.ts';
+import { logarithmicGrid } from './wavelengthGrid.ts';
 
 /** More than a plot can show. */
 const mostPoints = 400;
 
-/** Curves for the plot of a material, within the wavelengths for which it is known. */
+const subject = 'the material';
+
+/**
+ * Curves for the plot of a material, each within the wavelengths for which it is known.
+ *
+ * @throws DispersionValueError where a formula that `checkContent` has tried has a pole between its trials
+ */
 export function materialCurves(content: MaterialContent): Material['curves'] {
-  const wavelengthsNm = indexGrid(content.index);
-  const { n, k } = sampleIndex('the material', content.index, wavelengthsNm);
-  return { wavelengthsNm, n: Array.from(n), k: Array.from(k), voigt: voigtCurve(content) };
+  const { index, anisotropy } = content;
+  return {
+    ...indexCurve(index),
+    voigt: voigtCurve(content),
+    extraordinary: anisotropy?.kind === 'uniaxial' ? indexCurve(anisotropy.extraordinary) : null,
+  };
 }
 
-function voigtCurve({ voigt }: MaterialContent): Material['curves']['voigt'] {
-  if (voigt === null) return null;
-  const wavelengthsNm = tableGrid(voigt.wavelengthsNm);
-  const { re, im } = sampleVoigt('the material', voigt, wavelengthsNm);
-  return { wavelengthsNm, q: Array.from(re, (value, i): [number, number] => [value, im[i]!]) };
+function indexCurve(index: IndexDispersion): { wavelengthsNm: number[]; n: number[]; k: number[] } {
+  const wavelengthsNm = gridOf(index, dispersionRangeNm(index));
+  const { n, k } = sampleIndex(subject, index, wavelengthsNm);
+  return { wavelengthsNm, n: Array.from(n), k: Array.from(k) };
 }
 
-function indexGrid(dispersion: IndexDispersion): number[] {
-  if (dispersion.kind === 'table') return tableGrid(dispersion.wavelengthsNm);
-  const [fromNm, toNm] = dispersionRangeNm(dispersion);
-  // Even in log wavelength: a formula bends most at its blue end and may reach far into the infrared.
-  const grid = Array.from(
-    { length: mostPoints },
-    (_, i) => fromNm * (toNm / fromNm) ** (i / (mostPoints - 1)),
-  );
-  grid[mostPoints - 1] = toNm;
-  return grid;
+function voigtCurve(content: MaterialContent): Material['curves']['voigt'] {
+  const { index, voigt } = content;
+  const rangeNm = voigtRangeNm(content);
+  if (voigt === null || rangeNm === null) return null;
+  const wavelengthsNm = gridOf(voigt, rangeNm);
+  const { re, im } = sampleVoigt(subject, { index, voigt }, wavelengthsNm);
+  const q = Array.from(re, (value, i): [number, number] => [value, im[i]!]);
+  return { wavelengthsNm, q, index: indexWhereKnown(index, wavelengthsNm) };
+}
+
+function indexWhereKnown(index: IndexDispersion, wavelengthsNm: number[]): ([number, number] | null)[] {
+  const [fromNm, toNm] = dispersionRangeNm(index);
+  const isKnown = (wavelengthNm: number) =>
+    (wavelengthNm >= fromNm && wavelengthNm <= toNm) ||
+    isSameWavelength(wavelengthNm, fromNm) ||
+    isSameWavelength(wavelengthNm, toNm);
+  const { n, k } = sampleIndex(subject, index, wavelengthsNm.filter(isKnown));
+  let next = 0;
+  return wavelengthsNm.map((wavelengthNm) => {
+    if (!isKnown(wavelengthNm)) return null;
+    const value: [number, number] = [n[next]!, k[next]!];
+    next += 1;
+    return value;
+  });
+}
+
+function gridOf(dispersion: { kind: string; wavelengthsNm?: number[] }, rangeNm: RangeNm): number[] {
+  const { wavelengthsNm } = dispersion;
+  return wavelengthsNm ? tableGrid(wavelengthsNm) : logarithmicGrid(rangeNm, mostPoints);
 }
 
 /** The table's own points with even steps of photon energy between them; a longer table is thinned evenly. */

@@ -8,7 +8,7 @@ import type {
   SolveCase,
   StackItemInput,
 } from '../../shared/solve.ts';
-import { FormulaError } from './formula.ts';
+import { DispersionValueError } from './opticalValue.ts';
 import { DispersionRangeError } from './range.ts';
 import { sampleIndex, sampleVoigt } from './sample.ts';
 
@@ -140,7 +140,9 @@ class MediumResolver {
     const { voigt } = content;
     if (voigt === null || !magnetized) return messages.length > 0 ? messages : { index };
     const q = collect(messages, () => {
-      const { re, im } = sampleVoigt(name, voigt, this.wavelengthsNm, { assumeConstant });
+      const { re, im } = sampleVoigt(name, { index: content.index, voigt }, this.wavelengthsNm, {
+        assumeConstant,
+      });
       return this.asInput(re, im);
     });
     return messages.length > 0 ? messages : { index, voigt: q };
@@ -157,7 +159,7 @@ function collect<Value>(messages: string[], sample: () => Value): Value | undefi
   try {
     return sample();
   } catch (error) {
-    if (!(error instanceof DispersionRangeError || error instanceof FormulaError)) throw error;
+    if (!(error instanceof DispersionRangeError || error instanceof DispersionValueError)) throw error;
     messages.push(error.message);
     return undefined;
   }

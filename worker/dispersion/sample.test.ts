@@ -10,6 +10,7 @@ const cobalt = {
   k: [1.71, 4.2, 7.79],
 };
 const oneQ = { kind: 'table' as const, wavelengthsNm: [632.8], q: [[0.03, 0.007]] as [number, number][] };
+const magnetic = { index: cobalt, voigt: oneQ };
 
 function errorOf(action: () => unknown): DispersionRangeError {
   try {
@@ -42,9 +43,10 @@ describe('outside the range', () => {
       'Silica is known from 210 to 6700 nm; 209 nm was asked',
     );
     const q = { ...oneQ, wavelengthsNm: [400, 800], q: [...oneQ.q, ...oneQ.q] };
-    expect(errorOf(() => sampleVoigt('Cobalt', q, [900], { assumeConstant: true })).message).toContain(
-      'the Voigt constant of Cobalt is known from 400 to 800 nm; 900 nm was asked',
-    );
+    expect(
+      errorOf(() => sampleVoigt('Cobalt', { ...magnetic, voigt: q }, [900], { assumeConstant: true }))
+        .message,
+    ).toContain('the Voigt constant of Cobalt is known from 400 to 800 nm; 900 nm was asked');
   });
 
   test('takes the rounding of a converted unit for the end itself', () => {
@@ -60,20 +62,20 @@ describe('outside the range', () => {
 
 describe('a constant known at one wavelength', () => {
   test('is used there without asking', () => {
-    const { re, im } = sampleVoigt('Cobalt', oneQ, [632.8, 632.8 * (1 + 1e-12)]);
+    const { re, im } = sampleVoigt('Cobalt', magnetic, [632.8, 632.8 * (1 + 1e-12)]);
     expect(Array.from(re)).toEqual([0.03, 0.03]);
     expect(Array.from(im)).toEqual([0.007, 0.007]);
   });
 
   test('is refused elsewhere with the two remedies', () => {
-    const error = errorOf(() => sampleVoigt('Cobalt (co-johnson-1974)', oneQ, [632.8, 700]));
+    const error = errorOf(() => sampleVoigt('Cobalt (co-johnson-1974)', magnetic, [632.8, 700]));
     expect(error.message).toBe(
       'the Voigt constant of Cobalt (co-johnson-1974) is known at 632.8 nm only; 700 nm was asked: allow this constant at other wavelengths in the stack, or work at 632.8 nm',
     );
   });
 
   test('is used elsewhere when that is allowed', () => {
-    const { re } = sampleVoigt('Cobalt', oneQ, [400, 700], { assumeConstant: true });
+    const { re } = sampleVoigt('Cobalt', magnetic, [400, 700], { assumeConstant: true });
     expect(Array.from(re)).toEqual([0.03, 0.03]);
   });
 });

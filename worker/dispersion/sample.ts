@@ -1,13 +1,19 @@
-import type { IndexDispersion, VoigtDispersion } from '../../shared/dispersion.ts';
+import type { Complex } from '../../shared/complex.ts';
+import type { IndexDispersion, IndexModel, PlainIndex, PlainVoigt } from '../../shared/dispersion.ts';
+import type { MaterialContent } from '../../shared/material.ts';
 import { photonEnergyEv } from '../../shared/units.ts';
+import { over, times } from '../optics/complexNumber.ts';
+import { cauchyIndex } from './cauchy.ts';
 import { compileFormula } from './formula.ts';
-import { cubicValue, monotoneSlopes } from './monotoneCubic.ts';
-import { DispersionRangeError, dispersionRangeNm, isSameWavelength } from './range.ts';
-
-export type SampleOptions = {
-  /** Use a constant known at one wavelength at every other one too. */
-  assumeConstant?: boolean;
-};
+import { sumOfLines } from './magnetoOpticLines.ts';
+import { mixedIndex, mixedVoigt } from './mixedParts.ts';
+import { finiteVoigt } from './opticalValue.ts';
+import { oscillatorsIndex } from './oscillators.ts';
+import { dispersionRangeNm } from './range.ts';
+import { sellmeierIndex } from './sellmeier.ts';
+import type { SampleOptions } from './table.ts';
+import { inRange, sampleTable } from './table.ts';
+import { meanIndex, sampleTensor } from './tensorTable.ts';
 
 /** Refractive index N = n + ik, one entry per wavelength. */
 export type SampledIndex = { n: Float64Array; k: Float64Array };
@@ -16,11 +22,11 @@ export type SampledIndex = { n: Float64Array; k: Float64Array };
 export type SampledVoigt = { re: Float64Array; im: Float64Array };
 
 /**
- * Samples a refractive index.
+ * Samples a refractive index. Of a tensor it is the root of the mean of the diagonal, which is for plots only.
  *
  * @param name what an error calls the material, such as "Cobalt (co-johnson-1974)"
  * @param wavelengthsNm vacuum wavelengths in nm, in any order
- * @throws DispersionRangeError where the index is not known; FormulaError where a formula fails
+ * @throws DispersionRangeError where the index is not known; DispersionValueError where a formula or model fails
  */
 export function sampleIndex(
   name: string,
@@ -28,103 +34,127 @@ export function sampleIndex(
   wavelengthsNm: ArrayLike<number>,
   options: SampleOptions = {},
 ): SampledIndex {
-  if (dispersion.kind === 'table') {
-    const [n, k] = sampleTable(
-      name,
-      dispersion.wavelengthsNm,
-      [dispersion.n, dispersion.k],
-      wavelengthsNm,
-      options,
-    );
-    return { n: n!, k: k! };
+  switch (dispersion.kind) {
+    case 'table': {
+      const { wavelengthsNm: tableNm, n, k } = dispersion;
+      const [sampledN, sampledK] = sampleTable(name, tableNm, [n, k], wavelengthsNm, options);
+      return { n: sampledN!, k: sampledK! };
+    }
+    case 'tensor':
+      return meanIndex(sampleTensor(name, dispersion, wavelengthsNm, options));
+    case 'mixture': {
+      const parts = dispersion.parts.map((part) =>
+        sampleIndex(partName(part.name, name), part.index, wavelengthsNm, options),
+      );
+      return mixedIndex(dispersion, parts);
+    }
+    case 'formula':
+    case 'model': {
+      const [n, k] = sampleValues(name, dispersionRangeNm(dispersion), valueOf(dispersion), wavelengthsNm);
+      return { n, k };
+    }
   }
-  const [fromNm, toNm] = dispersionRangeNm(dispersion);
-  const formula = compileFormula(dispersion.expression, dispersion.coefficients);
-  const n = new Float64Array(wavelengthsNm.length);
-  for (let i = 0; i < n.length; i++) {
-    n[i] = formula(inRange(name, fromNm, toNm, wavelengthsNm[i]!));
-  }
-  return { n, k: new Float64Array(n.length) };
-}
-
-/** Samples a Voigt constant; arguments and errors as for `sampleIndex`. */
-export function sampleVoigt(
-  name: string,
-  dispersion: VoigtDispersion,
-  wavelengthsNm: ArrayLike<number>,
-  options: SampleOptions = {},
-): SampledVoigt {
-  const columns = [dispersion.q.map((q) => q[0]), dispersion.q.map((q) => q[1])];
-  const subject = `the Voigt constant of ${name}`;
-  const [re, im] = sampleTable(subject, dispersion.wavelengthsNm, columns, wavelengthsNm, options);
-  return { re: re!, im: im! };
-}
-
-/** The wavelength itself, or the end of the range it equals but for rounding. */
-function inRange(subject: string, fromNm: number, toNm: number, wavelengthNm: number): number {
-  if (wavelengthNm >= fromNm && wavelengthNm <= toNm) return wavelengthNm;
-  if (isSameWavelength(wavelengthNm, fromNm)) return fromNm;
-  if (isSameWavelength(wavelengthNm, toNm)) return toNm;
-  throw new DispersionRangeError(subject, [fromNm, toNm], wavelengthNm);
 }
 
 /**
- * Columns of a table at the asked wavelengths, interpolated over photon energy: there the structures of a
- * spectrum have about equal widths and most tables are measured in about equal steps, whereas over wavelength
- * the steps at the red end are many times those at the blue end. Table points come back to the last bit.
+ * Samples the Voigt constant of a material; arguments and errors as for `sampleIndex`.
+ *
+ * @param content Q that is given as a gyration or by the parts of a mixture needs the index
  */
-function sampleTable(
-  subject: string,
-  tableNm: readonly number[],
-  columns: readonly (readonly number[])[],
+export function sampleVoigt(
+  name: string,
+  content: Pick<MaterialContent, 'index'> & { voigt: NonNullable<MaterialContent['voigt']> },
   wavelengthsNm: ArrayLike<number>,
-  options: SampleOptions,
-): Float64Array[] {
-  if (tableNm.length === 1) return sampleConstant(subject, tableNm[0]!, columns, wavelengthsNm, options);
-  const energies = Float64Array.from(tableNm, photonEnergyEv);
-  const values = columns.map((column) => Float64Array.from(column));
-  const slopes = values.map((column) => monotoneSlopes(energies, column));
-  const sampled = columns.map(() => new Float64Array(wavelengthsNm.length));
-  const last = tableNm.length - 1;
-  let interval = 0;
-  for (let i = 0; i < wavelengthsNm.length; i++) {
-    const wavelengthNm = inRange(subject, tableNm[0]!, tableNm[last]!, wavelengthsNm[i]!);
-    if (wavelengthNm === tableNm[last]) {
-      for (let column = 0; column < values.length; column++) sampled[column]![i] = values[column]![last]!;
-      continue;
-    }
-    interval = findInterval(tableNm, wavelengthNm, interval);
-    const energy = energies[interval]!;
-    const t = (photonEnergyEv(wavelengthNm) - energy) / (energies[interval + 1]! - energy);
-    for (let column = 0; column < values.length; column++) {
-      sampled[column]![i] = cubicValue(energies, values[column]!, slopes[column]!, interval, t);
-    }
-  }
-  return sampled;
+  options: SampleOptions = {},
+): SampledVoigt {
+  const { index, voigt } = content;
+  if (voigt.kind !== 'mixture') return samplePlainVoigt(name, index, voigt, wavelengthsNm, options);
+  if (index.kind !== 'mixture') throw new Error(`${name}: Q of a mixture without a mixed index`);
+  const parts = index.parts.map((part) => {
+    const own = partName(part.name, name);
+    return {
+      ...sampleIndex(own, part.index, wavelengthsNm, options),
+      voigt: part.voigt && samplePlainVoigt(own, part.index, part.voigt, wavelengthsNm, options),
+    };
+  });
+  return mixedVoigt(index, parts);
 }
 
-function sampleConstant(
-  subject: string,
-  knownAtNm: number,
-  columns: readonly (readonly number[])[],
+function samplePlainVoigt(
+  name: string,
+  index: IndexDispersion,
+  voigt: PlainVoigt,
   wavelengthsNm: ArrayLike<number>,
   options: SampleOptions,
-): Float64Array[] {
-  for (let i = 0; i < wavelengthsNm.length && options.assumeConstant !== true; i++) {
-    inRange(subject, knownAtNm, knownAtNm, wavelengthsNm[i]!);
+): SampledVoigt {
+  const subject = `the Voigt constant of ${name}`;
+  const range = dispersionRangeNm(voigt);
+  switch (voigt.kind) {
+    case 'table': {
+      const columns = [voigt.q.map((q) => q[0]), voigt.q.map((q) => q[1])];
+      const [re, im] = sampleTable(subject, voigt.wavelengthsNm, columns, wavelengthsNm, options);
+      return { re: re!, im: im! };
+    }
+    case 'formula': {
+      const formula = compileFormula(voigt.expression, voigt.coefficients, 'Q');
+      const [re, im] = sampleValues(subject, range, formula, wavelengthsNm);
+      return { re, im };
+    }
+    case 'lines': {
+      const sum = (wavelengthNm: number) => sumOfLines(voigt.lines, photonEnergyEv(wavelengthNm));
+      const [re, im] = sampleValues(subject, range, sum, wavelengthsNm);
+      return voigt.of === 'voigt'
+        ? { re, im }
+        : overPermittivity({ re, im }, sampleIndex(name, index, wavelengthsNm, options), wavelengthsNm);
+    }
   }
-  return columns.map((column) => new Float64Array(wavelengthsNm.length).fill(column[0]!));
 }
 
-/** i with table[i] <= wavelength < table[i + 1]. A sweep mostly stays in the interval of the point before. */
-function findInterval(table: readonly number[], wavelengthNm: number, hint: number): number {
-  if (table[hint]! <= wavelengthNm && wavelengthNm < table[hint + 1]!) return hint;
-  let low = 0;
-  let high = table.length - 1;
-  while (high - low > 1) {
-    const middle = (low + high) >> 1;
-    if (table[middle]! <= wavelengthNm) low = middle;
-    else high = middle;
+/** Q = g / N^2. */
+function overPermittivity(
+  { re, im }: SampledVoigt,
+  { n, k }: SampledIndex,
+  wavelengthsNm: ArrayLike<number>,
+): SampledVoigt {
+  for (let i = 0; i < re.length; i++) {
+    const index: Complex = [n[i]!, k[i]!];
+    const q = over([re[i]!, im[i]!], times(index, index));
+    [re[i], im[i]] = finiteVoigt('the gyration over N^2', q, wavelengthsNm[i]!);
   }
-  return low;
+  return { re, im };
+}
+
+function valueOf(dispersion: Exclude<PlainIndex, { kind: 'table' }>): (wavelengthNm: number) => Complex {
+  return dispersion.kind === 'formula'
+    ? compileFormula(dispersion.expression, dispersion.coefficients, dispersion.quantity)
+    : (wavelengthNm) => modelIndex(dispersion.model, wavelengthNm);
+}
+
+function modelIndex(model: IndexModel, wavelengthNm: number): Complex {
+  switch (model.name) {
+    case 'sellmeier':
+      return sellmeierIndex(model, wavelengthNm);
+    case 'cauchy':
+      return cauchyIndex(model, wavelengthNm);
+    case 'oscillators':
+      return oscillatorsIndex(model, wavelengthNm);
+  }
+}
+
+function sampleValues(
+  subject: string,
+  [fromNm, toNm]: [number, number],
+  valueAt: (wavelengthNm: number) => Complex,
+  wavelengthsNm: ArrayLike<number>,
+): [re: Float64Array, im: Float64Array] {
+  const re = new Float64Array(wavelengthsNm.length);
+  const im = new Float64Array(wavelengthsNm.length);
+  for (let i = 0; i < re.length; i++) {
+    [re[i], im[i]] = valueAt(inRange(subject, fromNm, toNm, wavelengthsNm[i]!));
+  }
+  return [re, im];
+}
+
+function partName(part: string, name: string): string {
+  return `${part} in ${name}`;
 }
