@@ -1,13 +1,32 @@
 import { materialClasses } from '../../../../shared/material.ts';
+import { confidences } from '../../../../shared/materialSource.ts';
 import { Field } from '../../../components/Field.tsx';
 import { Select } from '../../../components/Select.tsx';
 import { TextInput } from '../../../components/TextInput.tsx';
-import type { MaterialFilter } from '../hooks/useMaterialFilter.ts';
+import { places, voigtChoices } from '../model/materialFilter.ts';
+import type { MaterialFilter } from '../model/materialFilter.ts';
 import { classLabel } from './ClassMark.tsx';
+import { WavelengthFields } from './WavelengthFields.tsx';
 
 const classOptions = [
   { value: 'all' as const, label: 'Any class' },
   ...materialClasses.map((one) => ({ value: one, label: classLabel(one) })),
+];
+
+const voigtTexts = {
+  any: 'With or without Q',
+  known: 'With Q',
+  'over the range': 'With Q at both wavelengths',
+  unknown: 'Without Q',
+} as const;
+const voigtOptions = voigtChoices.map((value) => ({ value, label: voigtTexts[value] }));
+
+const placeTexts = { all: 'Both libraries', group: 'This group', shipped: 'Shipped library' } as const;
+const placeOptions = places.map((value) => ({ value, label: placeTexts[value] }));
+
+const confidenceOptions = [
+  { value: 'all' as const, label: 'Any confidence' },
+  ...confidences.map((value) => ({ value, label: value })),
 ];
 
 type MaterialFilterBarProps = {
@@ -20,7 +39,7 @@ type MaterialFilterBarProps = {
 export function MaterialFilterBar({ filter, onChange, found, total }: MaterialFilterBarProps) {
   return (
     <div role="search" aria-label="Materials" className="mb-4 flex flex-wrap items-end gap-x-4 gap-y-3">
-      <Field label="Search" className="w-72 max-sm:w-full">
+      <Field label="Search" className="min-w-56 flex-1 max-sm:basis-full">
         {(control) => (
           <TextInput
             {...control}
@@ -41,15 +60,37 @@ export function MaterialFilterBar({ filter, onChange, found, total }: MaterialFi
           />
         )}
       </Field>
-      <label className="flex items-center gap-2 py-2">
-        <input
-          type="checkbox"
-          className="size-4 accent-accent"
-          checked={filter.magnetoOptic}
-          onChange={(event) => onChange({ magnetoOptic: event.target.checked })}
-        />
-        With magneto-optic constant
-      </label>
+      <WavelengthFields filter={filter} onChange={onChange} />
+      <Field label="Magneto-optic data">
+        {(control) => (
+          <Select
+            {...control}
+            value={filter.voigt}
+            options={voigtOptions}
+            onValueChange={(value) => onChange({ voigt: value })}
+          />
+        )}
+      </Field>
+      <Field label="Where">
+        {(control) => (
+          <Select
+            {...control}
+            value={filter.place}
+            options={placeOptions}
+            onValueChange={(value) => onChange({ place: value })}
+          />
+        )}
+      </Field>
+      <Field label="n, k or Q are">
+        {(control) => (
+          <Select
+            {...control}
+            value={filter.confidence}
+            options={confidenceOptions}
+            onValueChange={(value) => onChange({ confidence: value })}
+          />
+        )}
+      </Field>
       <p role="status" className="ml-auto py-2 text-note text-muted">
         {found === total ? `${total} materials` : `${found} of ${total} materials`}
       </p>

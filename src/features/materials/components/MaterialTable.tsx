@@ -1,4 +1,5 @@
 import { TriangleAlert } from 'lucide-react';
+import { useMemo } from 'react';
 import type { ReactNode } from 'react';
 import { Link, generatePath } from 'react-router-dom';
 import type { MaterialSummary } from '../../../../shared/material.ts';
@@ -22,14 +23,7 @@ const columns: readonly Column<MaterialSummary>[] = [
           {formatFormula(material.formula)}
           <span className="font-normal text-muted"> {material.name}</span>
         </Link>
-        <div className="text-small font-normal text-muted">
-          {[
-            material.preferred ? null : 'another source is preferred',
-            material.groupId ? 'of this group' : null,
-          ]
-            .filter(Boolean)
-            .join(', ')}
-        </div>
+        <div className="text-small font-normal text-muted">{remarks(material)}</div>
       </div>
     ),
   },
@@ -43,7 +37,12 @@ const columns: readonly Column<MaterialSummary>[] = [
     id: 'range',
     header: 'n, k known',
     value: (material) => material.rangeNm[0],
-    cell: (material) => <span className="whitespace-nowrap">{formatRange(material.rangeNm, 'nm')}</span>,
+    cell: (material) => (
+      <div className="whitespace-nowrap">
+        {formatRange(material.rangeNm, 'nm')}
+        <div className="text-small text-muted">{material.indexKind}</div>
+      </div>
+    ),
   },
   {
     id: 'voigt',
@@ -66,6 +65,19 @@ const columns: readonly Column<MaterialSummary>[] = [
   },
 ];
 
+const anisotropyTexts = { uniaxial: 'uniaxial', cubic: 'cubic, second order in m', tensor: 'free tensor' };
+
+/** What to know of a row beside its columns; only of several sources of one substance is one preferred. */
+function remarks({ anisotropy, version, preferred, groupId }: MaterialSummary): string {
+  return [
+    anisotropy ? anisotropyTexts[anisotropy] : null,
+    version > 1 ? `version ${version}` : null,
+    preferred || groupId ? null : 'another source is preferred',
+  ]
+    .filter(Boolean)
+    .join(', ');
+}
+
 function VoigtCell({ material }: { material: MaterialSummary }) {
   if (!material.voigtRangeNm) return <span className="text-muted">–</span>;
   const doubtful = material.voigtConfidence !== 'measured';
@@ -82,17 +94,45 @@ function VoigtCell({ material }: { material: MaterialSummary }) {
   );
 }
 
-export function MaterialTable({
-  materials,
-  empty,
-}: {
+type MaterialTableProps = {
+  caption: string;
   materials: readonly MaterialSummary[];
+  /** Ids of the rows picked for a comparison. */
+  picked: readonly string[];
+  onPick: (id: string) => void;
   empty: ReactNode;
-}) {
+};
+
+export function MaterialTable({ caption, materials, picked, onPick, empty }: MaterialTableProps) {
+  const all = useMemo<readonly Column<MaterialSummary>[]>(
+    () => [
+      ...columns,
+      {
+        id: 'pick',
+        header: 'Compare',
+        hideHeader: true,
+        sortable: false,
+        value: () => null,
+        cell: (material) => (
+          <label className="inline-flex cursor-pointer p-2">
+            <input
+              type="checkbox"
+              className="size-4 accent-accent"
+              aria-label={`Compare ${material.name}`}
+              title="Pick two to compare"
+              checked={picked.includes(material.id)}
+              onChange={() => onPick(material.id)}
+            />
+          </label>
+        ),
+      },
+    ],
+    [picked, onPick],
+  );
   return (
     <DataTable
-      caption="Materials"
-      columns={columns}
+      caption={caption}
+      columns={all}
       rows={materials}
       rowKey={(material) => material.id}
       empty={empty}

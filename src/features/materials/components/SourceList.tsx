@@ -31,6 +31,7 @@ export function SourceList({ source }: { source: MaterialSource }) {
         </Entry>
         <Entry name="Confidence">{source.confidence}</Entry>
         <Entry name="Sample">{source.sample}</Entry>
+        <Entry name="Temperature">{source.temperature ?? null}</Entry>
         <Entry name="Method">{source.method}</Entry>
         <Entry name="Licence">{source.licence}</Entry>
       </dl>
