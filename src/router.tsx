@@ -39,6 +39,14 @@ const groupPages = [
   page(paths.groupHome, async () => (await import('./routes/groupHome/GroupHomePage.tsx')).GroupHomePage),
   page(paths.runs, async () => (await import('./routes/runs/RunsPage.tsx')).RunsPage),
   page(paths.materials, async () => (await import('./routes/materials/MaterialsPage.tsx')).MaterialsPage),
+  page(
+    paths.compareMaterials,
+    async () => (await import('./routes/compareMaterials/CompareMaterialsPage.tsx')).CompareMaterialsPage,
+  ),
+  page(
+    paths.importMaterial,
+    async () => (await import('./routes/importMaterial/ImportMaterialPage.tsx')).ImportMaterialPage,
+  ),
   page(paths.people, async () => (await import('./routes/people/PeoplePage.tsx')).PeoplePage),
   page(paths.account, async () => (await import('./routes/account/AccountPage.tsx')).AccountPage),
   page(paths.material, async () => (await import('./routes/material/MaterialPage.tsx')).MaterialPage),

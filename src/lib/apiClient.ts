@@ -3,7 +3,7 @@ import { errorEnvelopeSchema } from '../../shared/error.ts';
 import type { ErrorCode, Issue } from '../../shared/error.ts';
 import { reportConnection } from './connection.ts';
 
-const base = '/api/v1';
+export const apiBase = '/api/v1';
 
 /** Codes of the server, and two that arise here: no answer at all, and an answer that is not what was agreed. */
 export type ApiErrorCode = ErrorCode | 'network' | 'unreadable';
@@ -69,6 +69,14 @@ export async function request<Schema extends z.ZodType>(
     ...(body === undefined ? {} : { body: JSON.stringify(body) }),
     ...(signal ? { signal } : {}),
   });
+  return readAnswer(response, schema);
+}
+
+/** The answer as its schema makes it. Rejects as `request` does. */
+export async function readAnswer<Schema extends z.ZodType>(
+  response: Response,
+  schema: Schema,
+): Promise<z.output<Schema>> {
   const received = await readJson(response);
   const parsed = schema.safeParse(received);
   if (parsed.success) return parsed.data;
@@ -93,12 +101,22 @@ export async function requestBinary({ path, signal }: BinaryRequest): Promise<Ar
 async function answerTo(path: string, init: RequestInit): Promise<Response> {
   let response: Response;
   try {
-    response = await fetch(base + path, { credentials: 'same-origin', ...init });
+    response = await fetch(apiBase + path, { credentials: 'same-origin', ...init });
   } catch (error) {
     if (isAbort(error)) throw error;
-    reportConnection('unreachable');
-    throw new ApiError(0, 'network', 'The server cannot be reached. Check the connection, then try again.');
+    throw unreachable();
   }
+  return acceptAnswer(path, response);
+}
+
+/** The failure of a request that no answer came to. */
+export function unreachable(): ApiError {
+  reportConnection('unreachable');
+  return new ApiError(0, 'network', 'The server cannot be reached. Check the connection, then try again.');
+}
+
+/** The answer if it is a success; rejects with the refusal in it otherwise. */
+export async function acceptAnswer(path: string, response: Response): Promise<Response> {
   reportConnection(response.status === 503 ? 'unavailable' : 'ok');
   if (response.ok) return response;
   if (response.status === 401 && path !== '/session') unauthenticatedHandler();
