@@ -1,0 +1,25 @@
+import type { ReactNode } from 'react';
+import { Field } from '../../../components/Field.tsx';
+import { Select } from '../../../components/Select.tsx';
+import { useIssue } from '../hooks/issueContext.ts';
+
+type Props<Value extends string> = {
+  label: string;
+  path: string;
+  value: Value;
+  options: readonly { value: Value; label: string }[];
+  hint?: ReactNode;
+  className?: string;
+  onChange: (value: Value) => void;
+};
+
+/** One of several, with what the API finds wrong at its path. */
+export function ChoiceField<Value extends string>(props: Props<Value>) {
+  const { label, path, value, options, hint, className = '', onChange } = props;
+  const error = useIssue(path);
+  return (
+    <Field label={label} hint={hint} error={error} className={className}>
+      {(control) => <Select {...control} value={value} options={options} onValueChange={onChange} />}
+    </Field>
+  );
+}
