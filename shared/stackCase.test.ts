@@ -104,6 +104,65 @@ describe('a document as a case', () => {
   });
 });
 
+describe('a layer at a temperature', () => {
+  const law = { curieK: 600, a: 2, b: 0.5, citation: 'made up for this test' };
+  const layersAt = (temperatureK: number, more: object = {}) =>
+    toSolveCase(
+      stackDocumentSchema.parse({
+        ...document,
+        layers: [
+          {
+            id: 'warm',
+            medium: { material: 'co' },
+            thicknessNm: 10,
+            m: [0, 0, 1],
+            thermal: { ...law, temperatureK, referenceK: 300 },
+            ...more,
+          },
+        ],
+      }),
+      633,
+      0,
+    ).layers;
+
+  // By hand: m(T) = sqrt(1 - (T/600)^2) is 0.8 at 360 K and sqrt(3)/2 at 300 K.
+  test('has its Q scaled by the magnetization, and by hand besides', () => {
+    const scale = 0.8 / (Math.sqrt(3) / 2);
+    expect(layersAt(360)).toMatchObject([
+      { material: 'co', voigtScale: expect.closeTo(scale, 14) as number },
+    ]);
+    expect(layersAt(360, { voigtScale: 0.5 })).toMatchObject([
+      { voigtScale: expect.closeTo(scale / 2, 14) as number },
+    ]);
+    expect(layersAt(300)).toMatchObject([{ voigtScale: 1 }]);
+  });
+
+  test('has no Q from the Curie temperature on', () => {
+    expect(layersAt(600)).toMatchObject([{ voigtScale: 0 }]);
+    expect(layersAt(2000)).toMatchObject([{ voigtScale: 0 }]);
+  });
+
+  test('keeps its dead parts dead', () => {
+    expect(layersAt(0, { dead: { topNm: 1, bottomNm: 2 } })).toMatchObject([
+      { thicknessNm: 1, m: [0, 0, 0] },
+      { thicknessNm: 7, m: [0, 0, 1] },
+      { thicknessNm: 2, m: [0, 0, 0] },
+    ]);
+  });
+
+  test('scales Q typed in and every part of a mixture, and nothing that has no Q', () => {
+    expect(layersAt(600, { medium: { index: 2, voigt: 0.1 } })).toMatchObject([
+      { voigt: 0.1, voigtScale: 0 },
+    ]);
+    const parts = [{ index: 2 }, { material: 'co' }];
+    const medium = { mixture: { model: 'bruggeman', fraction: 0.5, parts } };
+    expect(layersAt(600, { medium })).toMatchObject([
+      { mixture: { parts: [{ index: 2 }, { material: 'co', voigtScale: 0 }] } },
+    ]);
+    expect(layersAt(600, { medium: { index: 2 } })[0]).not.toHaveProperty('voigtScale');
+  });
+});
+
 describe('magnetization states', () => {
   const given = caseOf({ mode: 'drawn' });
 
@@ -147,6 +206,30 @@ describe('magnetization states', () => {
       substrate: { m: [0, -1, 0] },
     });
     expect(inMagnetizationState(reversed, 'reversed')).toEqual(given);
+  });
+
+  test('a medium by material is told its state in case it is a free tensor', () => {
+    const zero = inMagnetizationState(given, 'zero');
+    const reversed = inMagnetizationState(given, 'reversed');
+    expect(zero.layers[0]).toMatchObject({ material: 'pt', tensorState: 'unmagnetized' });
+    expect(reversed.layers[0]).toMatchObject({ material: 'pt', tensorState: 'reversed' });
+    expect(given.layers[0]).not.toHaveProperty('tensorState');
+    expect(zero.substrate).not.toHaveProperty('tensorState');
+    expect(inMagnetizationState(reversed, 'zero').layers[0]).toMatchObject({ tensorState: 'unmagnetized' });
+    expect(inMagnetizationState(zero, 'reversed').layers[0]).toMatchObject({ tensorState: 'unmagnetized' });
+    for (const one of [zero, reversed]) expect(librarySolveCaseSchema.safeParse(one).success).toBe(true);
+  });
+
+  test('of a reversed working point: what is drawn, unless the layer is fixed', () => {
+    const working = caseOf({ mode: 'reversed' });
+    const block = { layers: [{ tensorState: 'reversed' }, {}] };
+    expect(working).toMatchObject({ layers: [{ tensorState: 'reversed' }, block, {}, {}] });
+    const [, inBlock] = working.layers;
+    if (!inBlock || !('layers' in inBlock)) throw new Error('a block was expected');
+    expect(inBlock.layers[1]).not.toHaveProperty('tensorState');
+    const back = inMagnetizationState(working, 'reversed');
+    expect(back.layers[0]).not.toHaveProperty('tensorState');
+    expect(back.layers[1]).toMatchObject({ layers: [{}, { tensorState: 'reversed' }] });
   });
 
   test('each sample of a tensor is transposed', () => {

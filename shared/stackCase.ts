@@ -4,6 +4,7 @@ import type { LibraryLayerInput, LibrarySolveCase, LibraryStackItemInput } from 
 import type { Node } from './spread.ts';
 import { spreadNodes } from './spread.ts';
 import type { StackDocument, StackItem, StackLayer, StackMedium, WorkingMagnetization } from './stack.ts';
+import { thermalVoigtScale } from './thermal.ts';
 
 /**
  * The same stack in its three magnetization states. The Kerr angles on screen are the change of `given` against
@@ -57,7 +58,7 @@ export function toSolveCase(
 /** One layer as drawn: oxide on top, then dead, live and dead part; most have only the live one. */
 function layersOf(layer: StackLayer, magnetization: WorkingMagnetization): LibraryLayerInput[] {
   const { fixed = false, oxide, dead } = layer;
-  const medium = withVoigtScale(layer.medium, layer.voigtScale);
+  const medium = withVoigtScale(layer.medium, voigtScaleOf(layer));
   const m = workingM(layer.m, fixed, magnetization);
   const live = mediumOf(medium, m, magnetization, fixed);
   const silent = m === undefined ? live : mediumOf(medium, [0, 0, 0], magnetization, fixed);
@@ -141,6 +142,11 @@ function workingM(
 
 type ScaledMedium = StackMedium & { voigtScale?: number | undefined };
 
+/** By how much Q of a layer is scaled by hand and by its temperature; absent where by neither. */
+function voigtScaleOf({ voigtScale, thermal }: StackLayer): number | undefined {
+  return thermal ? (voigtScale ?? 1) * thermalVoigtScale(thermal) : voigtScale;
+}
+
 /** A medium without Q has nothing to scale; of a mixture both parts are scaled. */
 function withVoigtScale(medium: StackMedium, voigtScale: number | undefined): ScaledMedium {
   if (voigtScale === undefined) return medium;
@@ -186,7 +192,10 @@ function mediumOf(
   };
 }
 
-/** The case with every magnetization taken away (`zero`) or turned round (`reversed`), free tensors included. */
+/**
+ * The case with every magnetization taken away (`zero`) or turned round (`reversed`), free tensors included: one given
+ * by numbers is changed here, one that a material gives is changed when the material is put in (`tensorState`).
+ */
 export function inMagnetizationState<Case extends LibrarySolveCase>(
   given: Case,
   state: MagnetizationState,
@@ -216,11 +225,18 @@ function negated(m: Vector): Vector {
 
 /** A free tensor carries its own magnetization: its reversal is the transpose (physics.md section 2). */
 function reversedTensor<Medium extends LibraryMediumInput>(medium: Medium): Medium {
+  if (medium.material !== undefined && medium.tensorState !== 'unmagnetized') {
+    if (medium.tensorState === undefined) return { ...medium, tensorState: 'reversed' };
+    const given = { ...medium };
+    delete given.tensorState;
+    return given;
+  }
   return mapTensor(medium, (tensor, row, column) => tensor[column]![row]!);
 }
 
 /** ... and its m = 0 state is the symmetric part. */
 function symmetricTensor<Medium extends LibraryMediumInput>(medium: Medium): Medium {
+  if (medium.material !== undefined) return { ...medium, tensorState: 'unmagnetized' };
   return mapTensor(medium, (tensor, row, column) => {
     const a = tensor[row]![column]!;
     const b = tensor[column]![row]!;

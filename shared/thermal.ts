@@ -19,8 +19,9 @@ export const layerThermalSchema = strictObject({
   ...lawFields,
   temperatureK: z.number().min(0),
   referenceK: z.number().min(0),
-}).superRefine(({ referenceK, curieK }, context) => {
-  if (referenceK >= curieK) {
+}).superRefine(({ referenceK, curieK, a, b }, context) => {
+  // Just below the Curie temperature the law may round to no magnetization at all, and nothing could be scaled.
+  if (!(magnetizationAt(referenceK, { curieK, a, b }) > 0)) {
     context.addIssue({
       code: 'custom',
       path: ['referenceK'],

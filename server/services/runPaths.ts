@@ -2,7 +2,7 @@ import type { Issue } from '../../shared/error.ts';
 import type { StackDocument, StackItem, StackLayer } from '../../shared/stack.ts';
 
 /** Fields that a layer of a document carries itself; everything else of a layer of a case is its medium's. */
-const OWN_FIELDS = /^(thicknessNm|gradedNm|m|repeat|layers)\b/;
+const OWN_FIELDS = /^(thicknessNm|gradedNm|m|voigtScale|repeat|layers)\b/;
 
 /**
  * Where a field of a solve case stands in the document that the case was made from: `layers[1].index` is
@@ -23,6 +23,7 @@ export function documentPath(casePath: string, document: StackDocument): string 
     return OWN_FIELDS.test(field) ? `${place.path}.${field}` : `${place.medium}.${field}`;
   }
   if (path === 'substrate.m') return 'document.substrateM';
+  if (path === 'substrate.voigtScale') return 'document.substrateVoigtScale';
   if (path === 'substrate.gradedNm') return 'document.substrateGradedNm';
   return /^(wavelengthNm|angleDeg)/.test(path)
     ? `document.workingPoint.${path.replace(/\[\d+\]/, '')}`

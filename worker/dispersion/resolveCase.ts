@@ -1,4 +1,3 @@
-import type { Complex } from '../../shared/complex.ts';
 import type { Issue } from '../../shared/error.ts';
 import type { MaterialContent } from '../../shared/material.ts';
 import type { LibraryMediumInput, MediumInput, MixtureInput } from '../../shared/medium.ts';
@@ -8,9 +7,9 @@ import type {
   SolveCase,
   StackItemInput,
 } from '../../shared/solve.ts';
-import { DispersionValueError } from './opticalValue.ts';
-import { DispersionRangeError } from './range.ts';
-import { sampleIndex, sampleVoigt } from './sample.ts';
+import { checkMaterialUse } from './checkMaterialUse.ts';
+import type { MaterialConstants, MaterialUse } from './materialConstants.ts';
+import { materialConstants } from './materialConstants.ts';
 
 /** A stored version of a material, as the solve needs it. */
 export type ResolvableMaterial = { id: string; version: number; name: string; content: MaterialContent };
@@ -24,18 +23,17 @@ export class ResolutionError extends Error {
   }
 }
 
-type Constants = Pick<MediumInput, 'index' | 'voigt'>;
+/** A medium, or a part of a mixture, without the mixture itself. */
+type PlainMedium = Omit<LibraryMediumInput, 'mixture'>;
 
-/** What may name a material: a medium or a part of a mixture. */
-type ByName = Pick<
-  LibraryMediumInput,
-  'material' | 'version' | 'assumeConstant' | 'm' | 'index' | 'voigt' | 'voigtScale'
->;
+/** A material with its constants, or what keeps it from being used. */
+type Sampled = { material: ResolvableMaterial; constants: MaterialConstants } | string[];
 
 /**
  * A case with numbers in place of library ids, one sample per wavelength where the case lists several.
  * Layers of one material share their samples. `m` is kept as it stands; the Voigt constant is put in only where
- * m is not zero, so that a film without magnetization is not bound to the wavelengths at which Q is known.
+ * m is not zero, so that a film without magnetization is not bound to the wavelengths at which Q is known; so is the
+ * second order of a cubic crystal. `tensorState` is used for free tensors and means nothing for other materials.
  *
  * @param materials by `${id}@${version}`; a medium without `version` takes the newest one in it
  * @throws ResolutionError with every issue at once, paths such as `layers[1].material`
@@ -73,16 +71,14 @@ function graded(gradedNm: number | undefined): { gradedNm?: number } {
 
 class MediumResolver {
   readonly issues: Issue[] = [];
-  private readonly wavelengthsNm: number[];
   private readonly newest = new Map<string, ResolvableMaterial>();
   /** What was sampled or refused before: a stack names few materials in many layers. */
-  private readonly known = new Map<string, Constants | string[]>();
+  private readonly known = new Map<string, Sampled>();
 
   constructor(
     private readonly wavelengthNm: number | number[],
     private readonly materials: ReadonlyMap<string, ResolvableMaterial>,
   ) {
-    this.wavelengthsNm = typeof wavelengthNm === 'number' ? [wavelengthNm] : wavelengthNm;
     for (const material of materials.values()) {
       const other = this.newest.get(material.id);
       if (!other || other.version < material.version) this.newest.set(material.id, material);
@@ -91,76 +87,59 @@ class MediumResolver {
 
   resolve(medium: LibraryMediumInput, path: string): MediumInput {
     const { mixture, ...plain } = medium;
-    const resolved = this.resolvePlain(plain, path);
+    const resolved = this.resolvePlain(plain, path, false);
     if (!mixture) return resolved;
     const part = (position: 0 | 1): MixtureInput['parts'][0] =>
-      this.resolvePlain(mixture.parts[position], `${path}.mixture.parts[${position}]`);
+      this.resolvePlain(mixture.parts[position], `${path}.mixture.parts[${position}]`, true);
     return { ...resolved, mixture: { ...mixture, parts: [part(0), part(1)] } };
   }
 
-  private resolvePlain<Plain extends ByName>(
-    medium: Plain,
-    path: string,
-  ): Omit<Plain, 'material' | 'version' | 'assumeConstant'> & Constants {
-    const { material: id, version, assumeConstant = false, ...rest } = medium;
+  private resolvePlain(medium: PlainMedium, path: string, isPart: boolean): Omit<MediumInput, 'mixture'> {
+    const { material: id, version, assumeConstant = false, tensorState, ...rest } = medium;
     if (id === undefined) return rest;
     const magnetized = rest.m !== undefined && rest.m.some((component) => component !== 0);
-    const key = JSON.stringify([id, version, assumeConstant, magnetized]);
-    let constants = this.known.get(key);
-    if (constants === undefined) {
-      constants = this.sample(id, version, assumeConstant, magnetized);
-      this.known.set(key, constants);
+    const use = { assumeConstant, magnetized, tensorState };
+    const key = JSON.stringify([id, version, use]);
+    let sampled = this.known.get(key);
+    if (sampled === undefined) {
+      sampled = this.sample(id, version, use);
+      this.known.set(key, sampled);
     }
-    if (!Array.isArray(constants)) {
-      const hasScaleOnly = rest.voigtScale !== undefined && constants.voigt === undefined;
-      return { ...rest, ...(hasScaleOnly && { voigtScale: undefined }), ...constants };
+    if (Array.isArray(sampled)) {
+      for (const message of sampled) this.issues.push({ path: `${path}.material`, message });
+      return rest;
     }
-    for (const message of constants) this.issues.push({ path: `${path}.material`, message });
-    return rest;
+    const { material, constants } = sampled;
+    this.issues.push(...checkMaterialUse(nameOf(material), material.content, rest, path, isPart));
+    return { ...withoutIdleKeys(rest, constants), ...constants };
   }
 
-  private sample(
-    id: string,
-    version: number | undefined,
-    assumeConstant: boolean,
-    magnetized: boolean,
-  ): Constants | string[] {
+  private sample(id: string, version: number | undefined, use: MaterialUse): Sampled {
     const material = version === undefined ? this.newest.get(id) : this.materials.get(`${id}@${version}`);
     if (!material) {
       const which = version === undefined ? '' : ` in version ${version}`;
       return [`there is no material ${id}${which}: choose one that is listed among the materials`];
     }
-    const { content } = material;
-    const name = `${material.name} (${material.id})`;
     const messages: string[] = [];
-    const index = collect(messages, () => {
-      const { n, k } = sampleIndex(name, content.index, this.wavelengthsNm, { assumeConstant });
-      return this.asInput(n, k);
-    });
-    const { voigt } = content;
-    if (voigt === null || !magnetized) return messages.length > 0 ? messages : { index };
-    const q = collect(messages, () => {
-      const { re, im } = sampleVoigt(name, { index: content.index, voigt }, this.wavelengthsNm, {
-        assumeConstant,
-      });
-      return this.asInput(re, im);
-    });
-    return messages.length > 0 ? messages : { index, voigt: q };
-  }
-
-  private asInput(re: Float64Array, im: Float64Array): Complex | { samples: Complex[] } {
-    if (typeof this.wavelengthNm === 'number') return [re[0]!, im[0]!];
-    return { samples: Array.from(re, (value, position): Complex => [value, im[position]!]) };
+    const constants = materialConstants(nameOf(material), material.content, this.wavelengthNm, use, messages);
+    return messages.length > 0 ? messages : { material, constants };
   }
 }
 
-/** Runs one sampling; what is wrong with the material at these wavelengths becomes a message, the rest is thrown. */
-function collect<Value>(messages: string[], sample: () => Value): Value | undefined {
-  try {
-    return sample();
-  } catch (error) {
-    if (!(error instanceof DispersionRangeError || error instanceof DispersionValueError)) throw error;
-    messages.push(error.message);
-    return undefined;
-  }
+function nameOf({ name, id }: ResolvableMaterial): string {
+  return `${name} (${id})`;
+}
+
+/** Keys that may stand beside the material but have nothing to act on in what it gave. */
+function withoutIdleKeys(
+  { m, voigtScale, orientationDeg, ...rest }: Omit<MediumInput, 'mixture'>,
+  { epsilon, voigt, extraordinary, quadratic }: MaterialConstants,
+): Omit<MediumInput, 'mixture'> {
+  const hasAxes = epsilon !== undefined || extraordinary !== undefined || quadratic !== undefined;
+  return {
+    ...rest,
+    ...(m !== undefined && epsilon === undefined && { m }),
+    ...(voigtScale !== undefined && voigt !== undefined && { voigtScale }),
+    ...(orientationDeg !== undefined && hasAxes && { orientationDeg }),
+  };
 }
