@@ -47,6 +47,14 @@ const groupPages = [
     paths.importMaterial,
     async () => (await import('./routes/importMaterial/ImportMaterialPage.tsx')).ImportMaterialPage,
   ),
+  page(
+    paths.newMaterial,
+    async () => (await import('./routes/editMaterial/NewMaterialPage.tsx')).NewMaterialPage,
+  ),
+  page(
+    paths.editMaterial,
+    async () => (await import('./routes/editMaterial/EditMaterialPage.tsx')).EditMaterialPage,
+  ),
   page(paths.people, async () => (await import('./routes/people/PeoplePage.tsx')).PeoplePage),
   page(paths.account, async () => (await import('./routes/account/AccountPage.tsx')).AccountPage),
   page(paths.material, async () => (await import('./routes/material/MaterialPage.tsx')).MaterialPage),
