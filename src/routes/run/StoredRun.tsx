@@ -22,7 +22,8 @@ import type { GridPlace } from '../../features/runs/model/sweepPlace.ts';
 import { FilmDrawing } from '../../features/stacks/components/FilmDrawing.tsx';
 import { isTransverse, workingVectors } from '../../features/stacks/model/magnetization.ts';
 import { targetName } from '../../features/stacks/model/axisTargets.ts';
-import type { DrawnMaterial } from '../../features/stacks/model/media.ts';
+import { versionKey } from '../../features/stacks/model/media.ts';
+import type { DrawnMaterial, Materials } from '../../features/stacks/model/media.ts';
 import { usualFamilies } from '../../features/stacks/model/viewState.ts';
 import { useReadingView } from './useReadingView.ts';
 
@@ -142,18 +143,21 @@ function pointOf(run: SharedRun, result: RunResult, { ix, iy, member }: GridPlac
 }
 
 /** The materials of a run as the drawing takes them, each as it was in the version that was used. */
-function drawnMaterials(used: readonly UsedMaterial[]): ReadonlyMap<string, DrawnMaterial> {
+function drawnMaterials(used: readonly UsedMaterial[]): Materials {
   return new Map(
-    used.map((material) => [
-      material.id,
-      {
+    used.flatMap((material) => {
+      const drawn: DrawnMaterial = {
+        version: material.version,
         formula: material.formula,
         class: materialClasses.find((one) => one === material.class) ?? 'refractory',
         rangeNm: material.rangeNm,
         voigtRangeNm: material.voigtRangeNm,
         voigtConfidence: material.voigtSource?.confidence ?? null,
-      },
-    ]),
+        // The drawing of a stored run shows each m as it was given; it does not ask what could be magnetic.
+        anisotropy: null,
+      };
+      return [[material.id, drawn] as const, [versionKey(material.id, material.version), drawn] as const];
+    }),
   );
 }
 

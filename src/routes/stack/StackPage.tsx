@@ -4,6 +4,7 @@ import { generatePath, useNavigate, useParams } from 'react-router-dom';
 import { ErrorState } from '../../components/ErrorState.tsx';
 import { LoadingState } from '../../components/LoadingState.tsx';
 import { Page, useDocumentTitle } from '../../components/Page.tsx';
+import { materialQuery } from '../../features/materials/api/material.ts';
 import { materialListQuery } from '../../features/materials/api/materialList.ts';
 import { KeepAsRun } from '../../features/runs/components/KeepAsRun.tsx';
 import { SamplePanel } from '../../features/sample/components/SamplePanel.tsx';
@@ -49,6 +50,7 @@ export function StackPage() {
       key={stackId}
       stack={stack.data}
       library={library.data.materials}
+      materialAt={materialQuery}
       mayEdit={mayEdit(membership)}
       onCopied={({ id }) => void navigate(generatePath(paths.stack, { stackId: id }))}
       keepButton={({ document, sweep, readings, problem }) => (

@@ -1,6 +1,7 @@
 import type { StackDocument, StackLayer, StackMedium } from '../../../../shared/stack.ts';
-import { canBeMixed, hasAxes, mixedWith, oxideText, plain, withSample } from '../model/sampleParts.ts';
+import { mixedWith, oxideText, withSample } from '../model/sampleParts.ts';
 import type { EditFilm } from '../model/sampleParts.ts';
+import { AxesRow } from './AxesRow.tsx';
 import { MixtureForm } from './MixtureForm.tsx';
 import type { PickMedium } from './pickMedium.ts';
 import { Check, Row, SampleQuantity } from './SampleQuantity.tsx';
@@ -11,6 +12,7 @@ type Props = {
   edit: EditFilm;
   nameOf: (medium: StackMedium) => string;
   isMagnetic: (medium: StackMedium) => boolean;
+  hasAxes: (medium: StackMedium) => boolean;
   pickMedium: PickMedium;
 };
 
@@ -18,7 +20,7 @@ type Props = {
 const FIRST_OXIDE: StackMedium = { index: [2.3, 0], label: 'oxide' };
 
 /** One layer of a real sample. */
-export function LayerForm({ document, layer, edit, nameOf, isMagnetic, pickMedium }: Props) {
+export function LayerForm({ document, layer, edit, nameOf, isMagnetic, hasAxes, pickMedium }: Props) {
   const name = nameOf(layer.medium);
   const change = (patch: Parameters<typeof withSample>[2], what: string | null) =>
     edit((now) => withSample(now, layer.id, patch), what && `${what} of ${layer.id}`);
@@ -102,7 +104,7 @@ export function LayerForm({ document, layer, edit, nameOf, isMagnetic, pickMediu
           onChange={(medium) => changeMedium(medium)}
         />
       ) : (
-        canBeMixed(layer.medium) && (
+        !hasAxes(layer.medium) && (
           <button
             type="button"
             className="w-fit rounded-box text-accent hover:underline"
@@ -113,27 +115,7 @@ export function LayerForm({ document, layer, edit, nameOf, isMagnetic, pickMediu
         )
       )}
       {hasAxes(layer.medium) && (
-        <Row label="Axes turned (z, y, z)">
-          {([0, 1, 2] as const).map((index) => {
-            const angles = layer.medium.orientationDeg ?? [0, 0, 0];
-            return (
-              <SampleQuantity
-                key={index}
-                label={`turn ${index + 1} of the axes of ${name}`}
-                unit="°"
-                min={-360}
-                max={360}
-                step={1}
-                value={Number(plain(angles[index]))}
-                onChange={(value) => {
-                  const next: [number, number, number] = [...angles];
-                  next[index] = value;
-                  change({ medium: { ...layer.medium, orientationDeg: next } }, `turn ${index}`);
-                }}
-              />
-            );
-          })}
-        </Row>
+        <AxesRow medium={layer.medium} name={name} onChange={(medium, what) => change({ medium }, what)} />
       )}
     </>
   );

@@ -2,6 +2,7 @@ import { useState } from 'react';
 import type { StackDocument, StackMedium } from '../../../../shared/stack.ts';
 import { numberedLayers, sampleSummary } from '../model/sampleParts.ts';
 import type { EditFilm } from '../model/sampleParts.ts';
+import { AxesRow } from './AxesRow.tsx';
 import { BacksideForm } from './BacksideForm.tsx';
 import { LayerForm } from './LayerForm.tsx';
 import type { PickMedium } from './pickMedium.ts';
@@ -14,6 +15,7 @@ type Props = {
   edit: EditFilm | null;
   nameOf: (medium: StackMedium) => string;
   isMagnetic: (medium: StackMedium) => boolean;
+  hasAxes: (medium: StackMedium) => boolean;
   pickMedium: PickMedium;
 };
 
@@ -55,18 +57,29 @@ export function SamplePanel(props: Props) {
           {picked ? (
             <LayerForm {...props} edit={edit} layer={picked.layer} key={picked.layer.id} />
           ) : (
-            <Row label="Graded interface above">
-              <SampleQuantity
-                label="width of the graded interface above the substrate"
-                unit="nm"
-                value={document.substrateGradedNm ?? 0}
-                onChange={(value) =>
-                  edit(({ substrateGradedNm: _before, ...now }) => {
-                    return value > 0 ? { ...now, substrateGradedNm: value } : now;
-                  }, 'graded substrate')
-                }
-              />
-            </Row>
+            <>
+              <Row label="Graded interface above">
+                <SampleQuantity
+                  label="width of the graded interface above the substrate"
+                  unit="nm"
+                  value={document.substrateGradedNm ?? 0}
+                  onChange={(value) =>
+                    edit(({ substrateGradedNm: _before, ...now }) => {
+                      return value > 0 ? { ...now, substrateGradedNm: value } : now;
+                    }, 'graded substrate')
+                  }
+                />
+              </Row>
+              {props.hasAxes(document.substrate) && (
+                <AxesRow
+                  medium={document.substrate}
+                  name={nameOf(document.substrate)}
+                  onChange={(substrate, what) =>
+                    edit((now) => ({ ...now, substrate }), `${what} of substrate`)
+                  }
+                />
+              )}
+            </>
           )}
           <BacksideForm {...props} edit={edit} />
           <SpreadForm document={document} edit={edit} />

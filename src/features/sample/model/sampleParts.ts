@@ -85,11 +85,6 @@ function partOf({ material, version, assumeConstant, index, voigt }: StackMedium
   return { index: index ?? 1.5, ...(voigt === undefined ? {} : { voigt }) };
 }
 
-/** Whether a medium can be mixed with another: not one with axes of its own, and no mixture. */
-export function canBeMixed(medium: StackMedium): boolean {
-  return !medium.mixture && !medium.epsilon && !medium.extraordinary && !medium.quadratic;
-}
-
 /** A mixture that begins as the medium itself, half and half with the other. */
 export function mixedWith(medium: StackMedium, other: StackMedium): StackMedium {
   return { mixture: { model: 'bruggeman', fraction: 0.5, parts: [partOf(medium), partOf(other)] } };
@@ -104,11 +99,6 @@ export function withPart(mixture: Mixture, index: 0 | 1, medium: StackMedium): M
 /** The part as a medium of its own. */
 export function mediumOfPart({ m: _m, voigtScale: _voigtScale, ...part }: Part): StackMedium {
   return part;
-}
-
-/** Whether the medium has axes that can be turned. */
-export function hasAxes(medium: StackMedium): boolean {
-  return medium.epsilon !== undefined || medium.extraordinary !== undefined || medium.quadratic !== undefined;
 }
 
 type Spread = NonNullable<StackDocument['spread']>;

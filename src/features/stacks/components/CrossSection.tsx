@@ -7,17 +7,14 @@ import { layerHeights } from '../model/depthScale.ts';
 import { dropItem } from '../model/dropTarget.ts';
 import type { DropTarget } from '../model/dropTarget.ts';
 import { isBlock, listLayers } from '../model/items.ts';
-import { isMagnetic, mediumClass, mediumName } from '../model/media.ts';
+import { mediumClass } from '../model/media.ts';
 import { layerLike } from '../model/newStackItems.ts';
 import { BlockFrame } from './BlockFrame.tsx';
-import { classFill, magnetHatch } from './classColours.ts';
+import { classFill } from './classColours.ts';
 import { DepthTick } from './DepthTick.tsx';
 import { useFilm } from './film.ts';
 import { LayerRow } from './LayerRow.tsx';
-import { MagnetizationChip } from './MagnetizationChip.tsx';
-import { MediumNotes } from './MediumNotes.tsx';
-import { MediumPicker } from './MediumPicker.tsx';
-import { GradedBand, SlabBreak } from './SampleMarks.tsx';
+import { Substrate } from './Substrate.tsx';
 
 /** Height that the layers of the drawing keep to where they can, px. */
 const ROOM = 430;
@@ -117,62 +114,4 @@ function thicknessOf(item: StackItem): number {
   if (isBlock(item)) return item.repeat * periodOf(item.layers);
   // An oxide is thicker than the metal that it grew from.
   return item.thicknessNm + (item.oxide ? item.oxide.consumedNm * (item.oxide.expansion - 1) : 0);
-}
-
-function Substrate({ document, fillAbove }: { document: StackDocument; fillAbove: string }) {
-  const { materials, edit, issues } = useFilm();
-  const { substrate, substrateM } = document;
-  const name = mediumName(substrate, materials);
-  const change = (medium: StackMedium, editName: string | null) =>
-    edit?.(({ substrateM: m, ...now }) => {
-      const magnetic = isMagnetic(medium, materials);
-      return { ...now, substrate: medium, ...(magnetic ? { substrateM: m ?? [0, 0, 1] } : {}) };
-    }, editName);
-  return (
-    <div
-      className="relative flex min-h-[104px] flex-col pt-3"
-      style={{
-        background: `linear-gradient(${classFill[mediumClass(substrate, materials)]}, transparent)`,
-        ...(substrateM ? { backgroundImage: `${magnetHatch}` } : {}),
-      }}
-    >
-      {document.substrateGradedNm !== undefined && <GradedBand fillAbove={fillAbove} />}
-      <div className="flex items-center gap-1.5 px-3">
-        {edit ? (
-          <MediumPicker
-            medium={substrate}
-            label="the substrate"
-            onChange={change}
-            className="text-lead font-semibold"
-          >
-            {name}
-          </MediumPicker>
-        ) : (
-          <span className="px-2 text-lead font-semibold">{name}</span>
-        )}
-        <span className="text-note text-ink/80">substrate</span>
-        {substrateM && (
-          <span className="ml-auto">
-            <MagnetizationChip
-              m={substrateM}
-              label="the substrate"
-              fixed={false}
-              onChange={
-                edit ? (m) => edit((now) => ({ ...now, substrateM: m }), 'm of the substrate') : undefined
-              }
-            />
-          </span>
-        )}
-      </div>
-      <div className="px-1 pt-1">
-        <MediumNotes
-          medium={substrate}
-          magnetized={substrateM !== undefined && substrateM.some((part) => part !== 0)}
-          issues={issues.get('substrate') ?? []}
-          onChange={edit ? (medium) => change(medium, null) : undefined}
-        />
-      </div>
-      {document.backside && <SlabBreak backside={document.backside} />}
-    </div>
-  );
 }

@@ -1,12 +1,14 @@
 import { cleanup, fireEvent, render, screen, within } from '@testing-library/react';
 import userEvent from '@testing-library/user-event';
 import { useState } from 'react';
+import { MemoryRouter } from 'react-router-dom';
 import { afterEach, describe, expect, it } from 'vitest';
 import type { Issue } from '../../../../shared/error.ts';
 import type { MaterialSummary } from '../../../../shared/material.ts';
 import type { StackDocument } from '../../../../shared/stack.ts';
 import { stackDocumentSchema } from '../../../../shared/stack.ts';
 import { listLayers } from '../model/items.ts';
+import type { Materials } from '../model/media.ts';
 import { buildBlock, buildDocument, buildLayer, buildMaterials } from '../model/stackFixtures.ts';
 import { FilmDrawing } from './FilmDrawing.tsx';
 
@@ -31,7 +33,13 @@ const gold: MaterialSummary = {
   updatedAt: '2026-03-01T09:00:00.000Z',
 };
 
-type Setup = { document?: StackDocument; editable?: boolean; issues?: Issue[]; rangeNm?: [number, number] };
+type Setup = {
+  document?: StackDocument;
+  editable?: boolean;
+  issues?: Issue[];
+  rangeNm?: [number, number];
+  materials?: Materials;
+};
 
 /** The drawing on a document that lives in the test; `current()` is what it has become. */
 function show({
@@ -39,6 +47,7 @@ function show({
   editable = true,
   issues = [],
   rangeNm = [632.8, 632.8],
+  materials = buildMaterials(),
 }: Setup = {}) {
   let latest = document;
   function Harness() {
@@ -47,7 +56,7 @@ function show({
     return (
       <FilmDrawing
         document={film}
-        materials={new Map([...buildMaterials(), ['au', gold]])}
+        materials={new Map([...materials, ['au', gold]])}
         library={[gold]}
         point={film.workingPoint}
         kerr={{ rotationDeg: 0.04, ellipticityDeg: 0.06 }}
@@ -57,7 +66,7 @@ function show({
       />
     );
   }
-  render(<Harness />);
+  render(<Harness />, { wrapper: MemoryRouter });
   return { user: userEvent.setup(), current: () => latest };
 }
 
@@ -139,6 +148,53 @@ describe('the drawing as editor', () => {
     expect(
       within(screen.getByRole('list', { name: 'Cautions' })).getByText(/used at 500–700 nm too/),
     ).toBeTruthy();
+  });
+
+  it('says that a material has a newer version, and takes it only when asked', async () => {
+    const newer = new Map(
+      [...buildMaterials()].map(([id, one]) => [id, { ...one, version: id === 'co' ? 2 : 1 }]),
+    );
+    const { user, current } = show({ materials: newer });
+    const row = within(screen.getByRole('listitem', { name: 'Co, layer 2' }));
+    expect(row.getByText(/Co version 1; version 2 exists/)).toBeTruthy();
+    expect(row.getByRole('link', { name: 'what changed' }).getAttribute('href')).toBe(
+      '/materials/co#history',
+    );
+    expect(current()).toEqual(buildDocument());
+    await user.click(screen.getByRole('button', { name: 'Take version 2' }));
+    expect(current().layers[1]).toMatchObject({ medium: { material: 'co', version: 2 }, m: [0, 0, 1] });
+    expect(screen.queryByText(/version 2 exists/)).toBeNull();
+  });
+
+  it('sets the temperature of a magnetic layer once everything is known, and takes it away again', async () => {
+    const { user, current } = show();
+    await user.click(screen.getByRole('button', { name: /Magnetization of Co, layer 2/ }));
+    const panel = within(screen.getByRole('dialog', { name: 'Magnetization of Co, layer 2' }));
+    await user.click(panel.getByText('Temperature'));
+    // Invented numbers: 1 - (300/600)^1 = 0.5 and 1 - (450/600)^1 = 0.25, so Q halves.
+    const entries = { 'T (K)': '450', 'Curie T (K)': '600', a: '1', b: '1' };
+    for (const [label, text] of Object.entries(entries)) await user.type(panel.getByLabelText(label), text);
+    await user.clear(panel.getByLabelText('Q known at (K)'));
+    await user.type(panel.getByLabelText('Q known at (K)'), '300');
+    expect(panel.getByRole('status').textContent).toBe('Still needed: where they come from.');
+    expect(current()).toEqual(buildDocument());
+    await user.type(panel.getByLabelText('Where Tc, a and b come from'), 'mine');
+    const thermal = { temperatureK: 450, referenceK: 300, curieK: 600, a: 1, b: 1, citation: 'mine' };
+    expect(current().layers[1]).toMatchObject({ id: 'co', thermal });
+    expect(stackDocumentSchema.safeParse(current()).success).toBe(true);
+    expect(screen.getByText('T 450 K: Q × 0.5')).toBeTruthy();
+    await user.click(panel.getByRole('button', { name: 'Use Q as it is known' }));
+    expect(current()).toEqual(buildDocument());
+  });
+
+  it('does not use a temperature at which Q cannot have been known, and says why at its field', async () => {
+    const thermal = { temperatureK: 450, referenceK: 300, curieK: 600, a: 1, b: 1, citation: 'mine' };
+    const layers = buildDocument().layers.map((layer) => (layer.id === 'co' ? { ...layer, thermal } : layer));
+    const { user, current } = show({ document: buildDocument({ layers }) });
+    await user.click(screen.getByRole('button', { name: /Magnetization of Co, layer 2/ }));
+    await user.type(screen.getByLabelText('Q known at (K)'), '0');
+    expect(screen.getByText(/Must be below the Curie temperature \(600 K\)/)).toBeTruthy();
+    expect(current().layers[1]).toMatchObject({ thermal });
   });
 
   it('shows an issue of the server at the layer it names, once for all states', () => {

@@ -3,6 +3,7 @@ import type { ReactNode } from 'react';
 import type { Issue } from '../../../../shared/error.ts';
 import type { MaterialSummary } from '../../../../shared/material.ts';
 import type { StackDocument, WorkingPoint } from '../../../../shared/stack.ts';
+import type { MaterialAt } from '../hooks/useMaterials.ts';
 import type { EditDocument } from '../hooks/useStackEditor.ts';
 import type { Materials } from '../model/media.ts';
 import { issueTarget } from '../model/issueTarget.ts';
@@ -25,6 +26,8 @@ type Props = {
   issues?: readonly Issue[];
   /** What a layer can be made of, for the editor. */
   library?: readonly MaterialSummary[];
+  /** Asks for a material in full, for the editor. */
+  materialAt?: MaterialAt;
   edit: EditDocument | null;
   /** The layer that is pointed at elsewhere on the page. */
   activeLayer?: string | null;
@@ -38,7 +41,7 @@ const noLibrary: readonly MaterialSummary[] = [];
 /** The film as a drawing: the light, the layers, the substrate. With `edit` it is the editor, without it a picture. */
 export function FilmDrawing(props: Props) {
   const { document, materials, point, kerr, rangeNm, edit } = props;
-  const { issues = noIssues, library = noLibrary } = props;
+  const { issues = noIssues, library = noLibrary, materialAt = null } = props;
   const [said, setSaid] = useState('');
   const announce = useCallback((text: string) => setSaid(text), []);
   const [fromNm, toNm] = rangeNm;
@@ -47,12 +50,13 @@ export function FilmDrawing(props: Props) {
     () => ({
       materials,
       library,
+      materialAt,
       edit,
       rangeNm: [fromNm, toNm] as const,
       issues: itemIssues,
       announce,
     }),
-    [materials, library, edit, fromNm, toNm, itemIssues, announce],
+    [materials, library, materialAt, edit, fromNm, toNm, itemIssues, announce],
   );
   return (
     <FilmContext value={film}>

@@ -1,8 +1,10 @@
 import type { StackDocument, StackMedium, WorkingPoint } from '../../../../shared/stack.ts';
 import { mediumName } from '../model/media.ts';
+import { withNewest } from '../model/versions.ts';
 import { useFilm } from './film.ts';
 import { MediumNotes } from './MediumNotes.tsx';
 import { MediumPicker } from './MediumPicker.tsx';
+import { VersionNote } from './VersionNote.tsx';
 
 /** What the light comes through, at the top of the drawing. */
 export function IncidentMedium({ document, point }: { document: StackDocument; point: WorkingPoint }) {
@@ -12,7 +14,7 @@ export function IncidentMedium({ document, point }: { document: StackDocument; p
   const change = (medium: StackMedium, editName: string | null) =>
     edit?.((now) => ({ ...now, incident: medium }), editName);
   return (
-    <div className="relative z-10">
+    <div className="relative z-10 max-w-52">
       {edit ? (
         <MediumPicker
           medium={incident}
@@ -27,8 +29,15 @@ export function IncidentMedium({ document, point }: { document: StackDocument; p
         <span className="text-note text-muted">{name}</span>
       )}
       <p className="text-[11.5px] text-muted">
-        {String(Number(point.wavelengthNm.toPrecision(7)))} nm, {point.input} light
+        {String(Number(point.wavelengthNm.toPrecision(7)))} nm
+        {/* Two lines: the beam comes in close by. */}
+        <br />
+        {point.input} light
       </p>
+      <VersionNote
+        media={[incident]}
+        onTake={edit ? () => change(withNewest(incident, materials), null) : undefined}
+      />
       <MediumNotes
         medium={incident}
         magnetized={false}

@@ -9,13 +9,17 @@ import { withLayer } from '../model/items.ts';
 import type { LayerPatch } from '../model/items.ts';
 import { isMagnetic, mediumName } from '../model/media.ts';
 import { lengthOf } from '../model/magnetization.ts';
+import { withNewest } from '../model/versions.ts';
 import { useFilm } from './film.ts';
 import { Handle } from './Handle.tsx';
 import { itemMenu } from './itemActions.ts';
+import { LayerFacts } from './LayerFacts.tsx';
 import { LayerNote } from './LayerNote.tsx';
 import { MagnetizationChip } from './MagnetizationChip.tsx';
 import { MediumNotes } from './MediumNotes.tsx';
 import { MediumPicker } from './MediumPicker.tsx';
+import { ThermalSection } from './ThermalSection.tsx';
+import { VersionNote } from './VersionNote.tsx';
 
 type Props = {
   layer: StackLayer;
@@ -39,7 +43,15 @@ export const LayerControls = memo(function LayerControls({ layer, position, onGr
   const changeMedium = (medium: StackMedium, what: string | null) => {
     const willBe = isMagnetic(medium, materials);
     // A material that can be magnetic arrives magnetized, or nothing would show what it does.
-    change({ medium, m: willBe ? (layer.m ?? [0, 0, 1]) : undefined }, what && 'constants');
+    const m = willBe ? (layer.m ?? [0, 0, 1]) : undefined;
+    // A law of the temperature belongs to the material that it was given for.
+    const thermal = medium.material === layer.medium.material ? layer.thermal : undefined;
+    change({ medium, m, thermal }, what && 'constants');
+  };
+  const takeNewest = () => {
+    const { medium, oxide } = layer;
+    const newer = oxide && { ...oxide, medium: withNewest(oxide.medium, materials) };
+    change({ medium: withNewest(medium, materials), oxide: newer }, null);
   };
 
   return (
@@ -75,7 +87,9 @@ export const LayerControls = memo(function LayerControls({ layer, position, onGr
               label={label}
               fixed={layer.fixed === true}
               onChange={edit ? (m) => change({ m }, 'm') : undefined}
-            />
+            >
+              <ThermalSection layer={layer} onChange={(thermal) => change({ thermal }, 'temperature')} />
+            </MagnetizationChip>
           )}
           <Quantity
             label={`thickness of ${label}`}
@@ -99,6 +113,8 @@ export const LayerControls = memo(function LayerControls({ layer, position, onGr
           )}
         </span>
       </div>
+      <LayerFacts layer={layer} />
+      <VersionNote media={[layer.medium, layer.oxide?.medium]} onTake={edit ? takeNewest : undefined} />
       <MediumNotes
         medium={layer.medium}
         magnetized={layer.m !== undefined && lengthOf(layer.m) > 0}

@@ -1,3 +1,4 @@
+import type { ReactNode } from 'react';
 import type { Vector } from '../../../../shared/complex.ts';
 import { describeM } from '../model/magnetization.ts';
 import { DirectionDial } from './DirectionDial.tsx';
@@ -9,10 +10,12 @@ type Props = {
   label: string;
   fixed: boolean;
   onChange?: ((m: Vector) => void) | undefined;
+  /** Below the form of m, such as the temperature. */
+  children?: ReactNode;
 };
 
 /** m of a layer: the arrow to drag, and its geometry, which opens the exact form. */
-export function MagnetizationChip({ m, label, fixed, onChange }: Props) {
+export function MagnetizationChip({ m, label, fixed, onChange, children }: Props) {
   const text = describeM(m) + (fixed ? ', fixed' : '');
   return (
     <span className="inline-flex items-center rounded-box bg-paper/85 whitespace-nowrap">
@@ -31,6 +34,7 @@ export function MagnetizationChip({ m, label, fixed, onChange }: Props) {
           }
         >
           <DirectionForm m={m} label={label} onChange={onChange} />
+          {children}
         </Popup>
       ) : (
         <span aria-hidden="true" className="py-[3px] pr-2 pl-0.5 text-note">

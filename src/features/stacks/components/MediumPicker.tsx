@@ -1,5 +1,6 @@
 import { useState } from 'react';
 import type { ReactNode } from 'react';
+import type { MaterialSummary } from '../../../../shared/material.ts';
 import type { StackMedium } from '../../../../shared/stack.ts';
 import { Tabs } from '../../../components/Tabs.tsx';
 import { mediumName } from '../model/media.ts';
@@ -18,6 +19,11 @@ type Props = {
   className?: string;
   children: ReactNode;
 };
+
+/** Whether light may come through it: neither magnetic nor with axes of its own. */
+function isPlain({ voigtRangeNm, anisotropy }: MaterialSummary): boolean {
+  return voigtRangeNm === null && anisotropy === null;
+}
 
 /** The name of a medium as a button that opens the library, or constants typed in. */
 export function MediumPicker({ medium, label, lossless = false, onChange, className = '', children }: Props) {
@@ -54,9 +60,7 @@ export function MediumPicker({ medium, label, lossless = false, onChange, classN
         <div className="pt-3">
           {way === 'library' ? (
             <MaterialSearch
-              materials={
-                lossless ? film.library.filter((material) => material.voigtRangeNm === null) : film.library
-              }
+              materials={lossless ? film.library.filter(isPlain) : film.library}
               chosen={medium.material}
               onChoose={({ id, version }) => {
                 onChange({ material: id, version }, null);

@@ -2,34 +2,33 @@ import { useCallback, useMemo, useState } from 'react';
 import type { ReactNode } from 'react';
 import type { Issue } from '../../../../shared/error.ts';
 import type { MaterialSummary } from '../../../../shared/material.ts';
-import { LIMITS } from '../../../../shared/limits.ts';
 import type { ReadingName, SweepAxes } from '../../../../shared/run.ts';
-import { pointCountOf } from '../../../../shared/runAxes.ts';
 import type { Stack, StackDocument, StackMedium, WorkingPoint } from '../../../../shared/stack.ts';
 import { addsIntensities } from '../../../../shared/stackCase.ts';
 import { Button } from '../../../components/Button.tsx';
-import { families, readingsOf } from '../../../components/plot/readingView.ts';
 import { ApiError } from '../../../lib/apiClient.ts';
 import type { AngleUnit } from '../../../lib/format.ts';
 import { useEditorKeys } from '../hooks/useEditorKeys.ts';
+import { useMaterials } from '../hooks/useMaterials.ts';
+import type { MaterialAt } from '../hooks/useMaterials.ts';
 import { useReadings } from '../hooks/useReadings.ts';
 import { useStackEditor } from '../hooks/useStackEditor.ts';
 import type { EditDocument } from '../hooks/useStackEditor.ts';
 import { useView } from '../hooks/useView.ts';
 import { issueTarget } from '../model/issueTarget.ts';
 import { isTransverse, lengthOf, workingVectors } from '../model/magnetization.ts';
-import { filmCautions, isMagnetic, mediumClass, mediumName } from '../model/media.ts';
+import { filmCautions, hasAxes, isMagnetic, mediumClass, mediumName } from '../model/media.ts';
 import type { Materials } from '../model/media.ts';
+import { axesOf, keptReadings, wavelengthRange } from '../model/pageSweep.ts';
 import { kerrAngles } from '../model/solveStates.ts';
-import { fitsFilm } from '../model/sweepAxis.ts';
 import type { PreviewAxes } from '../model/sweepAxis.ts';
 import { ceilingCell } from '../model/stripReadings.ts';
-import { axisOf, samePoint, secondAxisOf, usualFamilies } from '../model/viewState.ts';
-import type { ViewState } from '../model/viewState.ts';
+import { samePoint } from '../model/viewState.ts';
 import { classFill } from './classColours.ts';
 import { EditorNotices } from './EditorNotices.tsx';
 import { FilmDrawing } from './FilmDrawing.tsx';
 import { FilmHeader } from './FilmHeader.tsx';
+import { FilmMaterials } from './FilmMaterials.tsx';
 import { LeaveGuard } from './LeaveGuard.tsx';
 import { MediumPicker } from './MediumPicker.tsx';
 import { ReadingsStrip } from './ReadingsStrip.tsx';
@@ -64,6 +63,7 @@ export type SampledFilm = {
   edit: EditDocument | null;
   nameOf: (medium: StackMedium) => string;
   isMagnetic: (medium: StackMedium) => boolean;
+  hasAxes: (medium: StackMedium) => boolean;
   pickMedium: (props: {
     medium: StackMedium;
     label: string;
@@ -74,6 +74,7 @@ export type SampledFilm = {
 type Props = {
   stack: Stack;
   library: readonly MaterialSummary[];
+  materialAt: MaterialAt;
   mayEdit: boolean;
   onCopied: (stack: Stack) => void;
   /** The button that keeps the sweep on the page as a run. */
@@ -84,24 +85,22 @@ type Props = {
   samplePanel: (film: SampledFilm) => ReactNode;
 };
 
-/** Up to here a run stores every reading that the page can show; above, those that are drawn. */
-const ALL_READINGS_UP_TO = 20_000;
-
 /** The heart of the program: the film on the left, its readings and the current question on the right. */
 export function StackWorkbench({
   stack,
   library,
+  materialAt,
   mayEdit,
   onCopied,
   keepButton,
   explanation,
   samplePanel,
 }: Props) {
-  const materials = useMemo<Materials>(() => new Map(library.map((one) => [one.id, one])), [library]);
   const editor = useStackEditor(stack);
   const [showsNewer, setShowsNewer] = useState(false);
   const newer = showsNewer ? editor.conflict : null;
   const film = newer?.document ?? editor.draft.document;
+  const materials = useMaterials(library, film, materialAt);
   const [view, setView] = useView(film.workingPoint);
   const { point } = view;
   const axes = useMemo(() => axesOf(view, film, materials), [view, film, materials]);
@@ -152,6 +151,7 @@ export function StackWorkbench({
             document={film}
             materials={materials}
             library={library}
+            materialAt={materialAt}
             point={point}
             kerr={kerrAngles(live.readings, point.input)}
             rangeNm={rangeNm}
@@ -164,8 +164,14 @@ export function StackWorkbench({
               edit: canEdit ? editor.editDocument : null,
               nameOf,
               isMagnetic: (medium) => isMagnetic(medium, materials),
+              hasAxes: (medium) => hasAxes(medium, materials),
               pickMedium: pickMedium(materials),
             })}
+            <FilmMaterials
+              document={film}
+              materials={materials}
+              edit={canEdit ? editor.editDocument : null}
+            />
           </FilmDrawing>
         </div>
         <StackDescription
@@ -250,43 +256,6 @@ function pickMedium(materials: Materials): SampledFilm['pickMedium'] {
 }
 
 const noIssues: readonly Issue[] = [];
-
-function axesOf(view: ViewState, film: StackDocument, materials: Materials): PreviewAxes | null {
-  const axis = axisOf(view, film, materials);
-  if (axis === null) return null;
-  const { family } = view;
-  return {
-    axis,
-    second: secondAxisOf(view, axis, film, materials),
-    family: family && fitsFilm(family, film) && !view.isMap ? family : null,
-  };
-}
-
-/** A short run stores all that the page can show, a long one what is drawn, a map at most six. */
-function keptReadings(
-  sweep: SweepAxes,
-  view: ViewState,
-  transverse: boolean,
-  averaged: boolean,
-): ReadingName[] {
-  const usual = usualFamilies(transverse);
-  if (sweep.second) {
-    const drawn = view.reading && !(averaged && view.reading === 'ceilingShare') ? [view.reading] : [];
-    return [...new Set([...drawn, ...readingsOf(usual, 'ps')])].slice(0, LIMITS.mapReadings);
-  }
-  const all = families.filter((family) => !(averaged && family === 'ceiling'));
-  if (pointCountOf(sweep) <= ALL_READINGS_UP_TO) return readingsOf(all, 'ps');
-  return readingsOf(
-    (view.shown ?? usual).filter((family) => all.includes(family)),
-    view.light ?? view.point.input,
-  );
-}
-
-function wavelengthRange(point: WorkingPoint, axes: PreviewAxes | null): readonly [number, number] {
-  const swept = [axes?.axis, axes?.second, axes?.family].find((axis) => axis?.kind === 'wavelength');
-  const all = swept ? [point.wavelengthNm, swept.from, swept.to] : [point.wavelengthNm];
-  return [Math.min(...all), Math.max(...all)];
-}
 
 function pointProblems(document: StackDocument, issues: readonly Issue[]) {
   const find = (field: string) =>

@@ -29,6 +29,7 @@ function buildStack(overrides: Partial<Stack> = {}): Stack {
 /** What a server that keeps versions would answer: a save over an older version than its own is a conflict. */
 function serve(start: Stack) {
   let stored = start;
+  let saved = (document: Stack['document']) => document;
   const answer = (status: number, body: unknown) =>
     new Response(JSON.stringify(body), { status, headers: { 'content-type': 'application/json' } });
   vi.stubGlobal('fetch', (_path: string, init: { method?: string; body?: string } = {}) => {
@@ -39,11 +40,14 @@ function serve(start: Stack) {
         answer(409, { error: { code: 'conflict', message: 'There is a newer version.' } }),
       );
     }
-    stored = { ...stored, ...body, version: stored.version + 1 };
+    const next = { ...stored, ...body, version: stored.version + 1 };
+    stored = { ...next, document: saved(next.document) };
     return Promise.resolve(answer(200, stored));
   });
   return {
     stored: () => stored,
+    /** What the server makes of a document when it is saved. */
+    onSave: (change: typeof saved) => (saved = change),
     /** Somebody else saves. */
     saveElsewhere: (change: Partial<Stack>) => {
       stored = { ...stored, ...change, version: stored.version + 1 };
@@ -86,6 +90,18 @@ describe('useStackEditor', () => {
     act(() => result.current.redo());
     await act(() => result.current.save());
     expect(server.stored().document.layers[0]).toMatchObject({ thicknessNm: 4 });
+    expect(result.current).toMatchObject({ dirty: false, version: 5, conflict: null });
+  });
+
+  it('takes over the versions that the server names for materials without one', async () => {
+    const unnamed = { material: 'pt' };
+    const start = buildStack({ document: buildDocument({ substrate: unnamed }) });
+    const server = serve(start);
+    server.onSave((document) => ({ ...document, substrate: { ...unnamed, version: 7 } }));
+    const { result } = edit(start);
+    act(() => result.current.editDocument(thicker(4), null));
+    await act(() => result.current.save());
+    expect(result.current.draft.document.substrate).toEqual({ material: 'pt', version: 7 });
     expect(result.current).toMatchObject({ dirty: false, version: 5, conflict: null });
   });
 

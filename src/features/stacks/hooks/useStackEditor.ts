@@ -66,7 +66,10 @@ export function useStackEditor(stack: Stack) {
     setHistory(closeStep);
     try {
       const saved = await save.mutateAsync({ version, ...draft });
-      setBase({ version: saved.version, draft });
+      // The server names the version of every material; what was typed meanwhile stays.
+      const stored = draftOf(saved);
+      setBase({ version: saved.version, draft: stored });
+      setHistory((now) => (now.present === draft ? { ...now, present: stored } : now));
       setStartedFrom(saved.version);
       setRestored(false);
     } catch (error) {

@@ -152,11 +152,12 @@ export function withLayer(document: StackDocument, id: string, patch: LayerPatch
 }
 
 /** Optional keys that say nothing are left out, so that equal layers are written alike. */
-function withoutEmpty({ m, fixed, note, gradedNm, dead, oxide, ...layer }: LayerDraft): StackLayer {
+function withoutEmpty({ m, fixed, thermal, note, gradedNm, dead, oxide, ...layer }: LayerDraft): StackLayer {
   return {
     ...layer,
     ...(m === undefined ? {} : { m }),
     ...(fixed ? { fixed } : {}),
+    ...(thermal && m !== undefined ? { thermal } : {}),
     ...(note ? { note } : {}),
     ...(gradedNm ? { gradedNm } : {}),
     ...(dead && m !== undefined && dead.topNm + dead.bottomNm > 0 ? { dead } : {}),

@@ -1,5 +1,13 @@
 import { describe, expect, it } from 'vitest';
-import { filmCautions, isMagnetic, mediumClass, mediumName, mediumNotes } from './media.ts';
+import {
+  filmCautions,
+  hasAxes,
+  isMagnetic,
+  mediumClass,
+  mediumName,
+  mediumNotes,
+  versionKey,
+} from './media.ts';
 import { buildDocument, buildMaterials } from './stackFixtures.ts';
 
 const materials = buildMaterials();
@@ -27,6 +35,39 @@ describe('a medium on the drawing', () => {
     expect(isMagnetic(co, materials)).toBe(true);
     expect(isMagnetic({ material: 'pt' }, materials)).toBe(false);
     expect(isMagnetic({ index: [2.3, 4.1], voigt: [0.03, 0] }, materials)).toBe(true);
+  });
+});
+
+describe('a crystal of the library', () => {
+  const co2 = materials.get('co')!;
+  const crystals = new Map([
+    ['plain', { ...co2, voigtRangeNm: null }],
+    ['uniaxial', { ...co2, voigtRangeNm: null, anisotropy: 'uniaxial' as const }],
+    ['cubic', { ...co2, voigtRangeNm: null, anisotropy: 'cubic' as const }],
+    ['tensor', { ...co2, anisotropy: 'tensor' as const }],
+  ]);
+  const which = (test: (id: string) => boolean) => [...crystals.keys()].filter(test);
+
+  it('has axes to turn, and an m where that does anything', () => {
+    expect(which((material) => hasAxes({ material }, crystals))).toEqual(['uniaxial', 'cubic', 'tensor']);
+    // A free tensor carries its own magnetization.
+    expect(which((material) => isMagnetic({ material }, crystals))).toEqual(['cubic']);
+  });
+
+  it('says ε, not n and k, of a tensor that is known at other wavelengths', () => {
+    const [note] = mediumNotes({ material: 'tensor' }, crystals, [100, 100], false);
+    expect(note?.text).toBe('ε of Co is known for 450–1937 nm, not at 100 nm.');
+  });
+});
+
+describe('an older version', () => {
+  it('is judged by its own range, not by that of the newest', () => {
+    const co1 = { ...materials.get('co')!, rangeNm: [600, 700] as [number, number] };
+    const both = new Map([...materials, [versionKey('co', 1), co1] as const]);
+    const textOf = (version: number) =>
+      mediumNotes({ material: 'co', version }, both, [500, 500], false).map(({ text }) => text);
+    expect(textOf(1)).toEqual(['n, k of Co is known for 600–700 nm, not at 500 nm.']);
+    expect(textOf(2)).toEqual([]);
   });
 });
 

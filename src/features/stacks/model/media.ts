@@ -7,14 +7,26 @@ import { listLayers } from './items.ts';
 /** What the drawing and its cautions need of a material. */
 export type DrawnMaterial = Pick<
   MaterialSummary,
-  'formula' | 'class' | 'rangeNm' | 'voigtRangeNm' | 'voigtConfidence'
+  'version' | 'formula' | 'class' | 'rangeNm' | 'voigtRangeNm' | 'voigtConfidence' | 'anisotropy'
 >;
 
-/** Materials by id: the group's library, or those that a run was computed with. */
+/**
+ * Materials: by id the group's library in its newest versions, or those that a run was computed with; by
+ * `versionKey` those used in an older version.
+ */
 export type Materials = ReadonlyMap<string, DrawnMaterial>;
 
-export function materialOf(medium: StackMedium, materials: Materials): DrawnMaterial | null {
-  return medium.material === undefined ? null : (materials.get(medium.material) ?? null);
+export function versionKey(id: string, version: number): string {
+  return `${id}@${version}`;
+}
+
+export function materialOf(
+  { material, version }: Pick<StackMedium, 'material' | 'version'>,
+  materials: Materials,
+): DrawnMaterial | null {
+  if (material === undefined) return null;
+  const asUsed = version === undefined ? undefined : materials.get(versionKey(material, version));
+  return asUsed ?? materials.get(material) ?? null;
 }
 
 /** What the drawing prints in a layer: the formula, else the name given to typed-in constants, else the constants. */
@@ -57,11 +69,24 @@ export function mediumClass(medium: StackMedium, materials: Materials): Material
   return k > 0.001 || n > 3 ? 'semiconductor' : 'dielectric';
 }
 
-/** Whether an m of this medium does anything. */
+/** Whether an m of this medium does anything. A free tensor has no m: it carries its own magnetization. */
 export function isMagnetic(medium: StackMedium, materials: Materials): boolean {
   if (medium.mixture) return medium.mixture.parts.some((part) => isMagnetic(part, materials));
   if (medium.material === undefined) return medium.voigt !== undefined || medium.quadratic !== undefined;
-  return (materialOf(medium, materials)?.voigtRangeNm ?? null) !== null;
+  const material = materialOf(medium, materials);
+  if (material === null || material.anisotropy === 'tensor') return false;
+  return material.voigtRangeNm !== null || material.anisotropy === 'cubic';
+}
+
+/** Whether the medium is a free tensor, typed in or of the library. */
+export function isFreeTensor(medium: StackMedium, materials: Materials): boolean {
+  return medium.epsilon !== undefined || materialOf(medium, materials)?.anisotropy === 'tensor';
+}
+
+/** Whether the medium has axes that can be turned. */
+export function hasAxes(medium: StackMedium, materials: Materials): boolean {
+  if (medium.material !== undefined) return (materialOf(medium, materials)?.anisotropy ?? null) !== null;
+  return medium.epsilon !== undefined || medium.extraordinary !== undefined || medium.quadratic !== undefined;
 }
 
 export type MediumNote = {
@@ -110,7 +135,7 @@ export function mediumNotes(
       offer: one ? 'assumeConstant' : null,
     });
   };
-  check('n, k', material.rangeNm);
+  check(material.anisotropy === 'tensor' ? 'ε' : 'n, k', material.rangeNm);
   if (magnetized && material.voigtRangeNm) check('Q', material.voigtRangeNm);
   if (magnetized && material.voigtConfidence === 'from memory') {
     notes.push({

@@ -5,6 +5,12 @@ import { isBlock, newItemId } from './items.ts';
 export function layerLike(item: StackItem | undefined, fallback: StackMedium): StackLayer {
   if (item === undefined) return { id: newItemId(), medium: fallback, thicknessNm: 10 };
   if (isBlock(item)) return layerLike(item.layers.at(-1), fallback);
-  const { medium, thicknessNm, m } = item;
-  return { id: newItemId(), medium, thicknessNm, ...(m === undefined ? {} : { m }) };
+  const { medium, thicknessNm, m, thermal } = item;
+  return {
+    id: newItemId(),
+    medium,
+    thicknessNm,
+    ...(m === undefined ? {} : { m }),
+    ...(thermal === undefined ? {} : { thermal }),
+  };
 }

@@ -26,11 +26,13 @@ export function buildDocument(overrides: Partial<StackDocument> = {}): StackDocu
 
 export function buildMaterials(): Materials {
   const plain: DrawnMaterial = {
+    version: 1,
     formula: 'Pt',
     class: 'noble',
     rangeNm: [248, 2032],
     voigtRangeNm: null,
     voigtConfidence: null,
+    anisotropy: null,
   };
   return new Map([
     ['pt', plain],
