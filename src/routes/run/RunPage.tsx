@@ -125,8 +125,10 @@ function RunLine({ run }: { run: Run }) {
         <Link className="prose-link" to={generatePath(paths.stack, { stackId: run.stackId })}>
           {run.stackName ?? 'its stack'}
         </Link>
+      ) : run.stackName === null ? (
+        'not made from a saved stack'
       ) : (
-        (run.stackName ?? 'a stack that was deleted')
+        `${run.stackName}, a stack that was deleted`
       )}
       {`, ${points}, ${formatDateTime(run.createdAt)}`}
       {run.createdBy ? ` by ${run.createdBy}` : ''}

@@ -1,9 +1,9 @@
 import type { ReactNode } from 'react';
 import { Link } from 'react-router-dom';
-import type { MaterialSource } from '../../../../shared/materialSource.ts';
-import type { SharedRun, UsedMaterial } from '../../../../shared/run.ts';
-import { formatDuration, formatFormula, formatRange } from '../../../lib/format.ts';
+import type { SharedRun } from '../../../../shared/run.ts';
+import { formatDuration } from '../../../lib/format.ts';
 import { paths } from '../../../lib/paths.ts';
+import { MaterialProvenance } from './MaterialProvenance.tsx';
 
 type Props = { run: SharedRun };
 
@@ -54,10 +54,10 @@ export function RunProvenance({ run }: Props) {
         {run.materials.length === 0 ? (
           <p className="text-muted">Every constant was typed in; the drawing shows them.</p>
         ) : (
-          <ul className="space-y-3">
+          <ul className="space-y-4">
             {run.materials.map((material) => (
               <li key={`${material.id} ${material.version}`}>
-                <MaterialSources material={material} />
+                <MaterialProvenance material={material} />
               </li>
             ))}
           </ul>
@@ -73,51 +73,5 @@ function Part({ title, children }: { title: string; children: ReactNode }) {
       <h2 className="mb-2 text-lead">{title}</h2>
       {children}
     </section>
-  );
-}
-
-function MaterialSources({ material }: { material: UsedMaterial }) {
-  return (
-    <>
-      <p>
-        <b className="font-semibold">{formatFormula(material.formula)}</b>{' '}
-        <span className="text-muted">
-          {material.name}, version {material.version}
-        </span>
-      </p>
-      <SourceLine what="n, k" range={material.rangeNm} source={material.indexSource} />
-      {material.voigtSource && material.voigtRangeNm && (
-        <SourceLine what="Q" range={material.voigtRangeNm} source={material.voigtSource} />
-      )}
-      {material.assumedConstant && (
-        <p className="text-note text-warn">
-          A constant known at one wavelength was used at others too, as the person who made the run allowed.
-        </p>
-      )}
-    </>
-  );
-}
-
-type SourceProps = { what: string; range: readonly [number, number]; source: MaterialSource };
-
-function SourceLine({ what, range, source }: SourceProps) {
-  const unsure = source.confidence === 'from memory' || source.confidence === 'invented for the demo';
-  return (
-    <p className="text-note text-muted wrap-anywhere">
-      {what}, {formatRange(range, 'nm')}: {source.citation}
-      {source.doi && (
-        <>
-          {' '}
-          <a className="prose-link" href={`https://doi.org/${source.doi}`} rel="noreferrer" target="_blank">
-            {source.doi}
-          </a>
-        </>
-      )}{' '}
-      <span className={unsure ? 'text-warn' : ''}>
-        ({source.confidence}
-        {unsure ? ', verify before use' : ''})
-      </span>
-      {source.caution && <span className="block">{source.caution}</span>}
-    </p>
   );
 }
