@@ -7,6 +7,7 @@ import { FurtherSections } from './FurtherSections.tsx';
 import { IntensitySections } from './IntensitySections.tsx';
 import { KerrSections } from './KerrSections.tsx';
 import { MaterialSections } from './MaterialSections.tsx';
+import { ModelSections } from './ModelSections.tsx';
 import { SignalSections } from './SignalSections.tsx';
 import { UnitSections } from './UnitSections.tsx';
 
@@ -30,9 +31,22 @@ const chapters: readonly Chapter[] = [
       ['voigt-constant', 'Voigt constant Q'],
       ['geometries', 'Geometries'],
       ['sign-habits', 'Sign habits'],
-      ['kerr-tables', 'From Kerr angles to Q'],
+      ['bulk-kerr', 'From Kerr angles to Q'],
+      ['kerr-tables', 'From a conductivity to Q'],
       ['media', 'Other media'],
+      ['cubic-second-order', 'Cubic, second order'],
       ['passive', 'Lossless and passive'],
+    ],
+  },
+  {
+    title: 'Models',
+    Body: ModelSections,
+    entries: [
+      ['index-models', 'Models of the index'],
+      ['magneto-optic-lines', 'Lines of Q'],
+      ['user-formulas', 'Formulas of your own'],
+      ['temperature', 'Temperature'],
+      ['mixed-materials', 'Mixtures as materials'],
     ],
   },
   {

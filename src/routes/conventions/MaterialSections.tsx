@@ -1,5 +1,6 @@
-import { ConventionSection, Formula, Fraction, Matrix } from './ConventionSection.tsx';
+import { ConventionSection, Formula, Matrix } from './ConventionSection.tsx';
 import { GeometryDrawings } from './GeometryDrawings.tsx';
+import { ImportSections } from './ImportSections.tsx';
 
 const i = <var>i</var>;
 const q = <var>Q</var>;
@@ -51,7 +52,7 @@ const voigtRows = [
   ],
 ];
 
-/** Media, magnetization and the sign habits of sources. */
+/** Media, magnetization, and what sources are turned into. */
 export function MaterialSections() {
   return (
     <>
@@ -82,128 +83,7 @@ export function MaterialSections() {
         </p>
       </ConventionSection>
 
-      <ConventionSection id="sign-habits" title="Sign habits of other sources">
-        <p>
-          Papers differ in the time factor and in the sign of <var>ε</var>
-          <sub>xy</sub>. What is typed or imported is turned into the habit of this page, and what was entered
-          is kept beside it:
-        </p>
-        <div className="card overflow-x-auto" tabIndex={0} role="region" aria-label="Sign habits">
-          <table className="w-full min-w-[420px] text-left">
-            <thead className="text-note text-muted">
-              <tr className="border-b border-line">
-                <th className="px-4 py-2 font-medium">time factor of the source</th>
-                <th className="px-4 py-2 font-medium">
-                  its <var>ε</var>
-                  <sub>xy</sub> for +<var>z</var>
-                </th>
-                <th className="px-4 py-2 font-medium">
-                  <var>Q</var> here
-                </th>
-                <th className="px-4 py-2 font-medium">
-                  <var>N</var> here
-                </th>
-              </tr>
-            </thead>
-            <tbody>
-              <Habit time="exp(−iωt)" element="+iQε" voigt="Q" index="N" />
-              <Habit time="exp(−iωt)" element="−iQε" voigt="−Q" index="N" />
-              <Habit time="exp(+iωt)" element="+iQε" voigt="−Q*" index="N*" />
-              <Habit time="exp(+iωt)" element="−iQε" voigt="Q*" index="N*" />
-            </tbody>
-          </table>
-        </div>
-        <p>
-          An entered tensor element is conjugated for exp(+<var>iωt</var>) only; then <var>Q</var> ={' '}
-          <var>ε</var>
-          <sub>xy</sub>/(<var>iε</var>
-          <sub>d</sub>). Ask of every source also whether its positive field points into or out of the film.
-        </p>
-      </ConventionSection>
-
-      <ConventionSection id="kerr-tables" title="From a measured Kerr angle or a conductivity to Q">
-        <p>
-          A bulk sample at normal incidence, <var>m</var> along +<var>z</var>, <var>p</var> light, signs of
-          this page. With
-        </p>
-        <Formula>
-          <var>ρ</var>(<var>Q</var>) ={' '}
-          <Fraction
-            top={
-              <>
-                <var>N</var>
-                <sub>0</sub> − <var>N</var>√(1+<var>Q</var>)
-              </>
-            }
-            bottom={
-              <>
-                <var>N</var>
-                <sub>0</sub> + <var>N</var>√(1+<var>Q</var>)
-              </>
-            }
-          />
-        </Formula>
-        <p>the ratio of the amplitudes is exactly</p>
-        <Formula>
-          <var>κ</var> = <var>r</var>
-          <sub>sp</sub>/<var>r</var>
-          <sub>pp</sub> = <var>i</var>{' '}
-          <Fraction
-            top={
-              <>
-                <var>ρ</var>(<var>Q</var>) − <var>ρ</var>(−<var>Q</var>)
-              </>
-            }
-            bottom={
-              <>
-                <var>ρ</var>(<var>Q</var>) + <var>ρ</var>(−<var>Q</var>)
-              </>
-            }
-          />{' '}
-          ≈{' '}
-          <Fraction
-            top={
-              <>
-                <var>iN</var>
-                <sub>0</sub>
-                <var>NQ</var>
-              </>
-            }
-            bottom={
-              <>
-                <var>N</var>
-                <sup>2</sup> − <var>N</var>
-                <sub>0</sub>
-                <sup>2</sup>
-              </>
-            }
-          />
-        </Formula>
-        <p>and rotation and ellipticity give it as</p>
-        <Formula>
-          <var>κ</var> ={' '}
-          <Fraction
-            top={
-              <>
-                tan <var>φ</var> + <var>i</var> tan <var>χ</var>
-              </>
-            }
-            bottom={
-              <>
-                1 − <var>i</var> tan <var>φ</var> tan <var>χ</var>
-              </>
-            }
-          />
-        </Formula>
-        <p>
-          A conductivity, for exp(−<var>iωt</var>), gives <var>ε</var>
-          <sub>xy</sub> = <var>iσ</var>
-          <sub>xy</sub>/(<var>ε</var>
-          <sub>0</sub>
-          <var>ω</var>) in SI units and 4π<var>iσ</var>
-          <sub>xy</sub>/<var>ω</var> in CGS units.
-        </p>
-      </ConventionSection>
+      <ImportSections />
 
       <ConventionSection id="media" title="Other media">
         <p>
@@ -212,6 +92,9 @@ export function MaterialSections() {
           tensor may stand instead of everything else; it carries its own magnetization, so its reversal is
           the transpose and its state at <var>m</var> = 0 the symmetric part.
         </p>
+      </ConventionSection>
+
+      <ConventionSection id="cubic-second-order" title="Second order of a cubic crystal">
         <p>
           Second order in <var>m</var>, for a cubic crystal with [100] turned by <var>γ</var> from{' '}
           <var>x</var> toward <var>y</var> and [001] along <var>z</var>, in the axes of the crystal:
@@ -234,6 +117,12 @@ export function MaterialSections() {
           <var>m</var>
           <sub>2</sub>, and cyclic
         </Formula>
+        <p>
+          The three <var>G</var> are complex, have no unit and are known at one wavelength. They add to{' '}
+          <var>ε</var> beside <var>Q</var>; a layer may turn the crystal further, by three angles about{' '}
+          <var>z</var>, the new <var>y</var> and the new <var>z</var>. The even part of a reading shows what
+          they do.
+        </p>
       </ConventionSection>
 
       <ConventionSection id="passive" title="Lossless and passive media">
@@ -257,29 +146,5 @@ export function MaterialSections() {
         </p>
       </ConventionSection>
     </>
-  );
-}
-
-function Habit({
-  time,
-  element,
-  voigt,
-  index,
-}: {
-  time: string;
-  element: string;
-  voigt: string;
-  index: string;
-}) {
-  return (
-    <tr className="border-b border-line last:border-b-0">
-      <td className="px-4 py-1.5">{time}</td>
-      <td className="px-4 py-1.5 italic">
-        {element}
-        <sub>d</sub>
-      </td>
-      <td className="px-4 py-1.5 italic">{voigt}</td>
-      <td className="px-4 py-1.5 italic">{index}</td>
-    </tr>
   );
 }
