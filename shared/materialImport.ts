@@ -47,8 +47,7 @@ export const ownHabits: SignHabits = {
   ellipticity: 'counter-clockwise',
 };
 
-/** Which column means what. A quantity without an imaginary column is real. */
-export const importMappingSchema = strictObject({
+const mappingFields = strictObject({
   spectral: strictObject({ column, unit: z.enum(spectralUnits) }),
   /** Null when the file has no index; a Q given as eps_xy, sigma_xy or Kerr angles then takes N from `indexOf`. */
   index: z
@@ -80,7 +79,10 @@ export const importMappingSchema = strictObject({
   /** The material whose N turns the magneto-optic columns into Q, where the file has no index. */
   indexOf: strictObject({ material: z.string(), version: z.int().min(1) }).nullable(),
   habits: signHabitsSchema,
-}).superRefine((mapping, context) => {
+});
+
+/** Which column means what. A quantity without an imaginary column is real. */
+export const importMappingSchema = mappingFields.superRefine((mapping, context) => {
   if (mapping.index === null && mapping.voigt === null) {
     context.addIssue({
       code: 'custom',
@@ -147,8 +149,11 @@ export const importTableSchema = z.object({
   rowCount: z.int(),
   firstRows: z.array(z.object({ line: z.int(), cells: z.array(z.number().nullable()) })),
   lastRows: z.array(z.object({ line: z.int(), cells: z.array(z.number().nullable()) })),
-  /** What the headers and values look like; habits are never guessed. Null when no wavelength column was found. */
-  suggestion: importMappingSchema.nullable(),
+  /**
+   * What the headers and values look like; habits are never guessed, and what is still to be chosen (such as the
+   * material that gives N) is null. Null when no wavelength column was found.
+   */
+  suggestion: mappingFields.nullable(),
   /** What was noticed while reading: skipped lines, empty cells. */
   warnings: z.array(importWarningSchema),
 });

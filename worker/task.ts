@@ -1,9 +1,16 @@
 import type { Issue } from '../shared/error.ts';
 import type { Material, MaterialContent } from '../shared/material.ts';
+import type { ImportMapping, ImportTable } from '../shared/materialImport.ts';
 import type { LibrarySolveCase, SolveCase, SolveRequest, SolveResponse } from '../shared/solve.ts';
 import { checkContent as issuesOf } from './dispersion/checkContent.ts';
 import { materialCurves } from './dispersion/materialCurves.ts';
 import type { ResolvableMaterial } from './dispersion/resolveCase.ts';
+import { convertTable as tableConverted } from './import/convertTable.ts';
+import type { ConvertedTable } from './import/convertTable.ts';
+import { decodeText } from './import/decodeText.ts';
+import type { ExportedMaterial } from './import/exportedMaterial.ts';
+import { readExportedMaterial } from './import/readExportedMaterial.ts';
+import { readTable as tableFrom } from './import/readTable.ts';
 import { solveRequest } from './optics/solveRequest.ts';
 import { releaseMemory } from './releaseMemory.ts';
 import { resolveCases } from './resolveCases.ts';
@@ -55,6 +62,27 @@ export function resolve(task: {
   materials: ReadonlyMap<string, ResolvableMaterial>;
 }): TaskOutcome<SolveCase[]> {
   return outcomeOf(() => resolveCases(task.cases, task.materials));
+}
+
+/** @param task.progress one number in shared memory, which rises to 1 */
+export function readTable(task: {
+  bytes: Uint8Array;
+  progress: Float64Array;
+}): TaskOutcome<{ table: ImportTable; exported: ExportedMaterial | null }> {
+  return outcomeOf(() => {
+    const { table } = tableFrom(task.bytes, (fraction) => {
+      task.progress[0] = fraction;
+    });
+    return { table, exported: readExportedMaterial(decodeText(task.bytes)) };
+  });
+}
+
+export function convertTable(task: {
+  bytes: Uint8Array;
+  mapping: ImportMapping;
+  indexOf: MaterialContent | null;
+}): TaskOutcome<ConvertedTable> {
+  return outcomeOf(() => tableConverted(tableFrom(task.bytes), task.mapping, task.indexOf));
 }
 
 /** Makes a thread load and compile its code before the first question. */
