@@ -2,7 +2,12 @@ import type { ReadingName, SweepAxes, UsedMaterial } from '../../shared/run.ts';
 import { pointCountOf } from '../../shared/runAxes.ts';
 import type { SolveWarning } from '../../shared/solve.ts';
 import type { StackDocument } from '../../shared/stack.ts';
-import { indexRangeNm, isSameWavelength, voigtRangeNm } from '../../worker/dispersion/range.ts';
+import {
+  indexRangeNm,
+  isSameWavelength,
+  quadraticRangeNm,
+  voigtRangeNm,
+} from '../../worker/dispersion/range.ts';
 import { ResolutionError, resolveCase } from '../../worker/dispersion/resolveCase.ts';
 import type { ResolvableMaterial } from '../../worker/dispersion/resolveCase.ts';
 import { SOLVER_VERSION } from '../../worker/optics/version.ts';
@@ -87,7 +92,7 @@ function describeUse(
 ): UsedMaterial {
   const knownVoigtNm = voigtRangeNm(content);
   const rangeNm = indexRangeNm(content);
-  const stretched = [rangeNm, knownVoigtNm].some(
+  const stretched = [rangeNm, knownVoigtNm, quadraticRangeNm(content)].some(
     (range) =>
       range !== null &&
       range[0] === range[1] &&

@@ -1,9 +1,6 @@
 import type { Issue } from '../../shared/error.ts';
 import { DispersionValueError } from './opticalValue.ts';
-import { logarithmicGrid } from './wavelengthGrid.ts';
-
-/** At how many wavelengths of its range a formula or model is tried. */
-const TRIALS = 1_001;
+import { logarithmicGrid, TRIAL_POINTS } from './wavelengthGrid.ts';
 
 /** Every column as long as the wavelengths, and these rising. */
 export function checkColumns(
@@ -44,7 +41,7 @@ export function checkValues(
   sample: (wavelengthsNm: number[]) => unknown,
 ): Issue[] {
   try {
-    sample(logarithmicGrid(rangeNm, TRIALS));
+    sample(logarithmicGrid(rangeNm, TRIAL_POINTS));
     return [];
   } catch (error) {
     if (!(error instanceof DispersionValueError)) throw error;

@@ -4,17 +4,15 @@ import { photonEnergyEv } from '../../shared/units.ts';
 import type { RangeNm } from './range.ts';
 import { dispersionRangeNm, isSameWavelength, voigtRangeNm } from './range.ts';
 import { sampleIndex, sampleVoigt } from './sample.ts';
-import { logarithmicGrid } from './wavelengthGrid.ts';
-
-/** More than a plot can show. */
-const mostPoints = 400;
+import { CURVE_POINTS, logarithmicGrid } from './wavelengthGrid.ts';
 
 const subject = 'the material';
 
 /**
  * Curves for the plot of a material, each within the wavelengths for which it is known.
  *
- * @throws DispersionValueError where a formula that `checkContent` has tried has a pole between its trials
+ * @throws DispersionValueError for a content that `checkContent` refuses, or whose index has no value at one of the
+ *   wavelengths at which Q is tabled
  */
 export function materialCurves(content: MaterialContent): Material['curves'] {
   const { index, anisotropy } = content;
@@ -59,19 +57,19 @@ function indexWhereKnown(index: IndexDispersion, wavelengthsNm: number[]): ([num
 
 function gridOf(dispersion: { kind: string; wavelengthsNm?: number[] }, rangeNm: RangeNm): number[] {
   const { wavelengthsNm } = dispersion;
-  return wavelengthsNm ? tableGrid(wavelengthsNm) : logarithmicGrid(rangeNm, mostPoints);
+  return wavelengthsNm ? tableGrid(wavelengthsNm) : logarithmicGrid(rangeNm, CURVE_POINTS);
 }
 
 /** The table's own points with even steps of photon energy between them; a longer table is thinned evenly. */
 function tableGrid(tableNm: readonly number[]): number[] {
   const intervals = tableNm.length - 1;
-  if (tableNm.length > mostPoints) {
+  if (tableNm.length > CURVE_POINTS) {
     return Array.from(
-      { length: mostPoints },
-      (_, i) => tableNm[Math.round((i * intervals) / (mostPoints - 1))]!,
+      { length: CURVE_POINTS },
+      (_, i) => tableNm[Math.round((i * intervals) / (CURVE_POINTS - 1))]!,
     );
   }
-  const steps = intervals === 0 ? 1 : Math.max(1, Math.floor((mostPoints - 1) / intervals));
+  const steps = intervals === 0 ? 1 : Math.max(1, Math.floor((CURVE_POINTS - 1) / intervals));
   const grid: number[] = [];
   for (let i = 0; i < intervals; i++) {
     grid.push(tableNm[i]!);

@@ -2,7 +2,8 @@ import { describe, expect, test } from 'vitest';
 import type { MaterialContent } from '../../shared/material.ts';
 import { buildContent, givenTensor } from './materialFixtures.ts';
 import { materialCurves } from './materialCurves.ts';
-import { indexRangeNm, isEmptyRange, voigtRangeNm } from './range.ts';
+import { indexRangeNm, isEmptyRange, quadraticRangeNm, voigtRangeNm } from './range.ts';
+import { CURVE_POINTS, logarithmicGrid, TRIAL_POINTS } from './wavelengthGrid.ts';
 
 const table = (wavelengthsNm: number[]) => ({
   kind: 'table' as const,
@@ -62,7 +63,33 @@ describe('where a material is known', () => {
   });
 });
 
+test('the second order of a cubic crystal is known at one wavelength', () => {
+  const zero: [number, number] = [0, 0];
+  const anisotropy = {
+    kind: 'cubic' as const,
+    wavelengthNm: 633,
+    g11: zero,
+    g12: zero,
+    g44: zero,
+    azimuthDeg: 0,
+  };
+  expect(quadraticRangeNm(buildContent({ anisotropy }))).toEqual([633, 633]);
+  expect(quadraticRangeNm(uniaxial([500, 900]))).toBeNull();
+});
+
 describe('curves', () => {
+  test('show a formula only where it has been tried', () => {
+    for (const rangeNm of [
+      [190, 25_000],
+      [300, 301],
+      [0.1, 3e5],
+    ] as const) {
+      const tried = new Set(logarithmicGrid(rangeNm, TRIAL_POINTS));
+      expect(tried.size).toBeGreaterThan(1_000);
+      expect(logarithmicGrid(rangeNm, CURVE_POINTS).every((point) => tried.has(point))).toBe(true);
+    }
+  });
+
   test('of lines of Q name the index where it is known', () => {
     const curves = materialCurves(buildContent({ index: table([400, 800]), voigt: lines('voigt') }));
     const { wavelengthsNm, index } = curves.voigt!;

@@ -47,6 +47,11 @@ export function voigtRangeNm({ index, voigt }: Pick<MaterialContent, 'index' | '
   return intersectionOf([dispersionRangeNm(index), ...magnetic]);
 }
 
+/** The one wavelength at which the second order in m of a cubic crystal is known. */
+export function quadraticRangeNm({ anisotropy }: MaterialContent): RangeNm | null {
+  return anisotropy?.kind === 'cubic' ? [anisotropy.wavelengthNm, anisotropy.wavelengthNm] : null;
+}
+
 /** Empty ranges, those with ends in the wrong order, stay empty. */
 export function isEmptyRange([fromNm, toNm]: RangeNm): boolean {
   return fromNm > toNm;
