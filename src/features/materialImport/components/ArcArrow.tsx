@@ -1,6 +1,8 @@
 type ArcArrowProps = {
   center: readonly [x: number, y: number];
   radius: number;
+  /** Height over width: below 1 the path is an ellipse. */
+  flatten?: number;
   /** Counter-clockwise from the right, as on paper; the head stands at `toDeg`. */
   fromDeg: number;
   toDeg: number;
@@ -9,24 +11,29 @@ type ArcArrowProps = {
 };
 
 const HEAD = 8;
+const STEPS = 48;
 
-/** A circular arrow of the drawings of sign habits. */
-export function ArcArrow({ center, radius, fromDeg, toDeg, color, width = 2 }: ArcArrowProps) {
-  const sense = Math.sign(toDeg - fromDeg);
-  // The shaft ends where the head begins.
-  const baseDeg = toDeg - sense * ((HEAD / radius) * (180 / Math.PI));
-  const at = (angleDeg: number, distance = radius): [number, number] => {
+/** A curved arrow of the drawings of sign habits. */
+export function ArcArrow(props: ArcArrowProps) {
+  const { center, radius, flatten = 1, fromDeg, toDeg, color, width = 2 } = props;
+  // The page's y points down.
+  const at = (angleDeg: number): [number, number] => {
     const angle = (angleDeg * Math.PI) / 180;
-    return [center[0] + distance * Math.cos(angle), center[1] - distance * Math.sin(angle)];
+    return [center[0] + radius * Math.cos(angle), center[1] - radius * flatten * Math.sin(angle)];
   };
-  const large = Math.abs(baseDeg - fromDeg) > 180 ? 1 : 0;
-  // The page's y points down, so counter-clockwise is sweep 0.
-  const sweep = sense > 0 ? 0 : 1;
-  const head = [at(toDeg), at(baseDeg, radius - HEAD * 0.5), at(baseDeg, radius + HEAD * 0.5)];
+  // The shaft ends where the head begins.
+  const baseDeg = toDeg - Math.sign(toDeg - fromDeg) * ((HEAD / radius) * (180 / Math.PI));
+  const shaft = Array.from({ length: STEPS + 1 }, (_, step) =>
+    at(fromDeg + ((baseDeg - fromDeg) * step) / STEPS),
+  );
+  const [tip, base] = [at(toDeg), at(baseDeg)];
+  const [dx, dy] = [tip[0] - base[0], tip[1] - base[1]];
+  const half = HEAD / 2 / Math.hypot(dx, dy);
+  const head = [tip, [base[0] - dy * half, base[1] + dx * half], [base[0] + dy * half, base[1] - dx * half]];
   return (
     <g>
-      <path
-        d={`M ${at(fromDeg).join(' ')} A ${radius} ${radius} 0 ${large} ${sweep} ${at(baseDeg).join(' ')}`}
+      <polyline
+        points={shaft.map((point) => point.join(',')).join(' ')}
         fill="none"
         stroke={color}
         strokeWidth={width}

@@ -62,16 +62,15 @@ export function EllipticityDrawing({ turns }: { turns: Turn }) {
   const sense = turns === 'counter-clockwise' ? 1 : -1;
   return (
     <BeamView>
-      <g transform={`translate(0 ${center[1] * 0.5}) scale(1 0.5)`}>
-        <ArcArrow
-          center={center}
-          radius={38}
-          fromDeg={30}
-          toDeg={30 + sense * 335}
-          color="var(--ellipticity)"
-          width={2.6}
-        />
-      </g>
+      <ArcArrow
+        center={center}
+        radius={38}
+        flatten={0.55}
+        fromDeg={90 + sense * 20}
+        toDeg={90 + sense * 350}
+        color="var(--ellipticity)"
+        width={2.4}
+      />
       <text x={center[0] - 8} y={center[1] + 4} fill="var(--ellipticity)" fontWeight="600">
         +χ
       </text>

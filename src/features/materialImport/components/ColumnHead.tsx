@@ -24,7 +24,7 @@ export function ColumnHead({ number, column, role, units, onRole, onUnits }: Col
   const id = useId();
   const name = column.header ?? `column ${number}`;
   return (
-    <div className="flex min-w-36 flex-col gap-1.5">
+    <div className="flex min-w-48 flex-col gap-1.5">
       <Select
         aria-label={`Meaning of column ${number}, ${name}`}
         aria-describedby={`${id}-range`}

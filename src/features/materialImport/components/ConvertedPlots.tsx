@@ -37,7 +37,7 @@ function IndexPlot({ index, axis }: { index: NonNullable<ImportPreview['index']>
       { name: 'k', x, y: index.k, tone: 'accent', width: 1.6, dash: 'dashed' },
     ];
   }, [index, axis]);
-  return <Curves title="n and k" series={series} axis={axis} fileName="import-index" />;
+  return <Curves title="n and k" label="n, k" series={series} axis={axis} fileName="import-index" />;
 }
 
 function VoigtPlot({ voigt, axis }: { voigt: NonNullable<ImportPreview['voigt']>; axis: Axis }) {
@@ -48,19 +48,19 @@ function VoigtPlot({ voigt, axis }: { voigt: NonNullable<ImportPreview['voigt']>
       { name: 'Im Q', x, y: voigt.q.map(([, im]) => im), tone: 'magnet', width: 2, dash: 'dashed' },
     ];
   }, [voigt, axis]);
-  return <Curves title="Voigt constant Q" series={series} axis={axis} fileName="import-voigt" />;
+  return <Curves title="Voigt constant Q" label="Q" series={series} axis={axis} fileName="import-voigt" />;
 }
 
-type CurvesProps = { title: string; series: PlotSeries[]; axis: Axis; fileName: string };
+type CurvesProps = { title: string; label: string; series: PlotSeries[]; axis: Axis; fileName: string };
 
-function Curves({ title, series, axis, fileName }: CurvesProps) {
+function Curves({ title, label, series, axis, fileName }: CurvesProps) {
   return (
     <div className="min-w-0">
       <h3 className="mb-1 text-body">{title}, converted</h3>
       <LinePlot
         series={series}
         xAxis={{ label: axis.label }}
-        yAxes={[{ label: title, include: [0] }]}
+        yAxes={[{ label, include: [0] }]}
         height={250}
         ariaLabel={`${title} as converted against ${axis.label}`}
         fileName={fileName}

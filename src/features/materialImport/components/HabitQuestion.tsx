@@ -30,7 +30,7 @@ export function HabitQuestion<Value extends string>(props: HabitQuestionProps<Va
       <p id={`${name}-why`} className="clear-both mb-2.5 max-w-prose text-note text-muted">
         {why}
       </p>
-      <div className="grid max-w-[640px] grid-cols-2 gap-3 max-[460px]:grid-cols-1">
+      <div className="grid max-w-[640px] grid-cols-2 gap-3 max-sm:gap-2">
         {choices.map(({ value, label, says, drawing }, place) => (
           <label
             key={value}
@@ -43,11 +43,14 @@ export function HabitQuestion<Value extends string>(props: HabitQuestionProps<Va
                 name={name}
                 value={value}
                 checked={answer === value}
+                aria-labelledby={`${name}-${place}-label`}
                 aria-describedby={`${name}-why ${name}-${place}`}
                 className="accent-accent"
                 onChange={() => onAnswer(value)}
               />
-              <span className="font-medium">{label}</span>
+              <span id={`${name}-${place}-label`} className="font-medium">
+                {label}
+              </span>
             </span>
             <span id={`${name}-${place}`} className="text-note text-muted">
               {says}

@@ -79,7 +79,11 @@ function Question({ name, answers, onAnswer }: Omit<HabitQuestionsProps, 'needed
               </p>
               <p>
                 Or look at the numbers: every absorber has Im N above 0 with exp(−iωt) and below 0 with
-                exp(+iωt). If the result in the next step warns of negative k, take the other choice.
+                exp(+iωt). If the next step refuses negative k, take the other choice.
+              </p>
+              <p>
+                A k or ε₂ that is written without its sign, as in N = n − ik with k = 3.4, is understood for
+                both; the result says how it was read.
               </p>
             </>
           }

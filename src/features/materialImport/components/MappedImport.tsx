@@ -2,7 +2,6 @@ import { useCallback, useMemo } from 'react';
 import type { ReactNode } from 'react';
 import type { Material, MaterialSummary } from '../../../../shared/material.ts';
 import type { ImportTable } from '../../../../shared/materialImport.ts';
-import { ErrorState } from '../../../components/ErrorState.tsx';
 import { LoadingState } from '../../../components/LoadingState.tsx';
 import { useKeepImported } from '../api/keepImported.ts';
 import { useConversion } from '../hooks/useConversion.ts';
@@ -15,6 +14,7 @@ import { HabitQuestions } from './HabitQuestions.tsx';
 import { ImportStep, StepList } from './ImportStep.tsx';
 import type { StepState } from './ImportStep.tsx';
 import { KeepForm } from './KeepForm.tsx';
+import { MappingRefusal } from './MappingRefusal.tsx';
 
 type MappedImportProps = {
   groupId: string;
@@ -87,11 +87,7 @@ export function MappedImport(props: MappedImportProps) {
           {preview.data ? (
             <ConversionResult table={table} plan={plan} preview={preview.data} stale={stale} />
           ) : preview.isError ? (
-            <ErrorState
-              title="The table could not be converted so"
-              error={preview.error}
-              onRetry={() => void preview.refetch()}
-            />
+            <MappingRefusal error={preview.error} onRetry={() => void preview.refetch()} />
           ) : (
             <LoadingState label="Converting the table" />
           )}

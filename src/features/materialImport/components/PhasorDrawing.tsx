@@ -17,10 +17,10 @@ export function PhasorDrawing({ time }: { time: SignHabits['time'] }) {
   const minus = time === 'exp(-iwt)';
   return (
     <svg viewBox="0 0 200 104" aria-hidden="true" className="w-full max-w-[230px]" fontSize="11">
-      <line x1="8" x2="90" y1={center[1]} y2={center[1]} stroke="var(--line)" />
+      <line x1="8" x2="94" y1={center[1]} y2={center[1]} stroke="var(--line)" />
       <line x1={center[0]} x2={center[0]} y1="10" y2="94" stroke="var(--line)" />
       <circle cx={center[0]} cy={center[1]} r={radius} fill="none" stroke="var(--edge)" />
-      <text x="78" y="65" fill="var(--muted)">
+      <text x="84" y="66" fill="var(--muted)">
         Re
       </text>
       <text x="51" y="12" fill="var(--muted)">

@@ -1,4 +1,4 @@
-import type { Material } from '../../../../shared/material.ts';
+import type { MaterialContent } from '../../../../shared/material.ts';
 import { materialDraftSchema } from '../../../../shared/materialEdit.ts';
 import type { MaterialDraft } from '../../../../shared/materialEdit.ts';
 import type { ImportMapping } from '../../../../shared/materialImport.ts';
@@ -9,10 +9,10 @@ type Parts = {
   importId: string;
   mapping: ImportMapping;
   form: NamingForm;
-  /** The material that gets a new version; what the table does not replace stays as it is. */
-  target: Material | null;
-  /** The material that gives N where the table gives none. */
-  indexFrom: Material | null;
+  /** Those of the material that gets a new version; what the table does not replace stays as it is. */
+  target: MaterialContent | null;
+  /** Those of the material that gives N where the table gives none. */
+  base: MaterialContent | null;
 };
 
 /**
@@ -20,23 +20,23 @@ type Parts = {
  *
  * @throws ZodError when neither the table nor another material gives N
  */
-export function importedContent({ importId, mapping, form, target, indexFrom }: Parts): MaterialDraft {
+export function importedContent({ importId, mapping, form, target, base }: Parts): MaterialDraft {
   const imported = { kind: 'import', importId, mapping } as const;
-  const base = (target ?? indexFrom)?.content;
+  const kept = target ?? base;
   const { indexSource, voigtSource } = form.content;
   const own = mapping.index !== null && !form.apart ? indexSource : voigtSource;
   return materialDraftSchema.parse({
-    index: mapping.index ? imported : base?.index,
-    indexSource: mapping.index ? sourceOf(indexSource) : base?.indexSource,
-    voigt: mapping.voigt ? imported : (target?.content.voigt ?? null),
-    voigtSource: mapping.voigt ? sourceOf(own) : (target?.content.voigtSource ?? null),
-    ...kept(target),
+    index: mapping.index ? imported : kept?.index,
+    indexSource: mapping.index ? sourceOf(indexSource) : kept?.indexSource,
+    voigt: mapping.voigt ? imported : (target?.voigt ?? null),
+    voigtSource: mapping.voigt ? sourceOf(own) : (target?.voigtSource ?? null),
+    ...further(target),
   });
 }
 
-function kept(target: Material | null) {
+function further(target: MaterialContent | null) {
   if (!target) return {};
-  const { anisotropy, anisotropySource, thermal } = target.content;
+  const { anisotropy, anisotropySource, thermal } = target;
   return {
     ...(anisotropy ? { anisotropy } : {}),
     ...(anisotropySource ? { anisotropySource } : {}),

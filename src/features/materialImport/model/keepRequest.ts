@@ -16,8 +16,13 @@ type Kept = {
 };
 
 /** What is sent to keep an import: a version of the target where there is one, else a material of its own. */
-export function keepRequest({ groupId, form, target, ...rest }: Kept): KeepImported {
-  const content = importedContent({ ...rest, form, target });
+export function keepRequest({ groupId, form, target, indexFrom, ...rest }: Kept): KeepImported {
+  const content = importedContent({
+    ...rest,
+    form,
+    target: target?.content ?? null,
+    base: indexFrom?.content ?? null,
+  });
   if (target) {
     const body = { version: target.version, note: form.versionNote.trim(), content };
     return { kind: 'version', materialId: target.id, body: createMaterialVersionSchema.parse(body) };
