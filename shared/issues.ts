@@ -77,6 +77,10 @@ function sentence(issue: ZodIssue, value: unknown): string {
         ? `must be ${article(issue.expected)}, got ${quote(value)}`
         : `${issue.message}, got ${quote(value)}`;
     case 'too_small':
+      // An empty text: the schema's own sentence says what belongs there.
+      if (issue.origin === 'string' && issue.minimum === 1) {
+        return issue.message.startsWith('Too small') ? 'must not be empty' : issue.message;
+      }
       return `must ${limit(issue.origin, issue.inclusive !== false ? '>=' : '>', 'at least', issue.minimum)}${got(value)}`;
     case 'too_big':
       return `must ${limit(issue.origin, issue.inclusive !== false ? '<=' : '<', 'at most', issue.maximum)}${got(value)}`;

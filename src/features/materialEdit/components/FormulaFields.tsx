@@ -33,8 +33,9 @@ function ExpressionFields<Form extends Fields>({ form, path, complex, onChange }
         hint={
           <>
             L is the vacuum wavelength in µm, E the photon energy in eV, c1, c2, … the coefficients below
-            {complex ? ', i the imaginary unit' : ''}. Allowed are numbers, + − * / ^, parentheses and plain
-            functions such as sqrt, exp and log; nothing else.
+            {complex ? ', i the imaginary unit' : ''}. Allowed are numbers, + − * / ^, parentheses and sqrt,
+            exp, log, sin, cos, tan, atan, sinh, cosh, tanh, abs{complex ? ', re, im, conj' : ''} of one
+            value; a product is written with *; nothing else.
           </>
         }
       />

@@ -33,10 +33,11 @@ export function MaterialEditorForm({ editor, groupId, materials, nextVersion }: 
   const { form, editContent, refusal } = editor;
   const { content } = form;
   const preview = usePreview(groupId, content);
-  const issues = useMemo<readonly Issue[]>(
-    () => (refusal ? [...refusal.issues, ...preview.issues] : withoutUntouched(preview.issues, content)),
-    [refusal, preview.issues, content],
-  );
+  const issues = useMemo<readonly Issue[]>(() => {
+    if (!refusal) return withoutUntouched(preview.issues, content);
+    const said = new Set(refusal.issues.map(({ path, message }) => path + message));
+    return [...refusal.issues, ...preview.issues.filter(({ path, message }) => !said.has(path + message))];
+  }, [refusal, preview.issues, content]);
   const starts = useMemo(() => fitStart(content), [content]);
   const useIndex = (fitted: PlainIndex | PlainVoigt, source: SourceForm) => {
     if (fitted.kind === 'model' || (fitted.kind === 'formula' && content.index.kind === 'formula')) {
