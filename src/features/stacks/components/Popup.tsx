@@ -32,7 +32,7 @@ export function Popup({ trigger, label, open, onOpenChange, className = 'w-80', 
             event.preventDefault();
             wanted.focus();
           }}
-          className={`card z-40 max-w-[calc(100vw-24px)] p-3.5 shadow-float ${className}`}
+          className={`card z-40 max-h-(--radix-popover-content-available-height) max-w-[calc(100vw-24px)] overflow-y-auto p-3.5 shadow-float ${className}`}
         >
           {children}
         </Popover.Content>

@@ -1,4 +1,5 @@
 import { useState } from 'react';
+import { Link } from 'react-router-dom';
 import { describeIssues } from '../../../../shared/issues.ts';
 import { layerThermalSchema, magnetizationAt } from '../../../../shared/thermal.ts';
 import type { LayerThermal, ThermalLaw } from '../../../../shared/thermal.ts';
@@ -6,6 +7,7 @@ import { Button } from '../../../components/Button.tsx';
 import { Field } from '../../../components/Field.tsx';
 import { TextInput } from '../../../components/TextInput.tsx';
 import { parseNumber } from '../../../lib/parseNumber.ts';
+import { paths } from '../../../lib/paths.ts';
 import { scaleWords } from '../model/thermalWords.ts';
 
 type Props = {
@@ -72,7 +74,10 @@ export function ThermalForm({ thermal, law, knownAt, onChange }: Props) {
         {value ? resultWords(value) : missingWords(texts)}
       </p>
       <p className="text-note text-muted">
-        m(T) = (1 − (T/Tc)^a)^b{law ? ', with the numbers of the material' : ''}.
+        <Link className="prose-link" to={`${paths.conventions}#temperature`}>
+          m(T) = (1 − (T/Tc)<sup>a</sup>)<sup>b</sup>
+        </Link>
+        {law && isOf(texts, law) ? ', with the numbers of the material' : ''}.
         {knownAt ? ` The source of Q says ${knownAt}.` : ''}
       </p>
       {thermal && (
@@ -100,6 +105,12 @@ function textsOf(thermal: LayerThermal | undefined, law: ThermalLaw | null): Tex
     b: known ? String(known.b) : '',
     citation: known?.citation ?? '',
   };
+}
+
+/** Whether the law entered is still that of the material. */
+function isOf(texts: Texts, law: ThermalLaw): boolean {
+  const own = textsOf(undefined, law);
+  return (['curieK', 'a', 'b', 'citation'] as const).every((key) => texts[key] === own[key]);
 }
 
 type Judged = { value: LayerThermal | null; problems: Partial<Record<keyof Texts, string>> };
