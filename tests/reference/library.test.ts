@@ -40,13 +40,30 @@ describe('the shipped library', () => {
   });
 
   test('has magneto-optic constants for Fe, Co, Ni and NiFe, none of them passed off as published', () => {
-    const magnetoOptic = library.filter((entry) => entry.content.voigt !== null);
+    const magnetoOptic = library.filter(({ content }) => content.voigt !== null);
     expect(new Set(magnetoOptic.map((entry) => entry.formula))).toEqual(new Set(['Fe', 'Co', 'Ni', 'NiFe']));
-    for (const { id, content, notes } of magnetoOptic) {
-      expect(content.voigt, id).toMatchObject({ kind: 'table', wavelengthsNm: [632.8] });
+    for (const { id, notes } of magnetoOptic) {
+      expect(notes.join(' '), id).toContain('No complete published spectrum of Q');
+    }
+    const remembered = magnetoOptic.filter(({ content }) => content.voigt!.kind === 'table');
+    expect(remembered).toHaveLength(5);
+    for (const { id, content } of remembered) {
+      expect(content.voigt, id).toMatchObject({ wavelengthsNm: [632.8] });
       expect(content.voigtSource!.confidence, id).toBe('from memory');
       expect(content.voigtSource!.caution, id).toMatch(/from memory, verify before use/i);
-      expect(notes.join(' '), id).toContain('No complete published spectrum of Q');
+    }
+  });
+
+  test('calls its spectra of Q what they are: illustrative models, never preferred', () => {
+    const models = library.filter(({ content }) => content.voigt !== null && content.voigt.kind !== 'table');
+    expect(models.map(({ formula }) => formula)).toEqual(['Co', 'Fe', 'Ni']);
+    for (const { id, name, preferred, content } of models) {
+      expect(content.voigt, id).toMatchObject({ kind: 'lines', of: 'gyration' });
+      expect(name, id).toMatch(/, illustrative model, not data$/);
+      expect(preferred, id).toBe(false);
+      expect(content.voigtSource!.confidence, id).toBe('invented for the demo');
+      expect(content.voigtSource!.caution, id).toMatch(/^An illustrative model, not data/);
+      expect(content.voigtSource!.citation, id).toMatch(/^Invented for the demo.*Magnetics Society of Japan/);
     }
   });
 

@@ -1,7 +1,12 @@
+import { readFileSync } from 'node:fs';
 import { fileURLToPath } from 'node:url';
 import { describe, expect, test } from 'vitest';
+import { z } from 'zod';
+import { magnetizationAt } from '../../shared/thermal.ts';
+import { photonEnergyEv } from '../../shared/units.ts';
 import { loadLibrary } from '../../worker/dispersion/loadLibrary.ts';
 import { sampleIndex, sampleVoigt } from '../../worker/dispersion/sample.ts';
+import { solvePoint } from './solvePoint.ts';
 
 const library = loadLibrary(fileURLToPath(new URL('../../data/library', import.meta.url)));
 
@@ -40,6 +45,39 @@ describe('tabulated points come back as printed', () => {
   });
 });
 
+describe('every shipped table is its source', () => {
+  // Four points of each table as its source has them, the first and the last among them; the citation stands beside.
+  const file = new URL('./library-spot-values.json', import.meta.url);
+  const sources = z
+    .array(
+      z.object({
+        id: z.string(),
+        citation: z.string(),
+        points: z.array(z.tuple([z.number(), z.number(), z.number()])).min(3),
+      }),
+    )
+    .parse(JSON.parse(readFileSync(file, 'utf8')));
+
+  test.each(sources)('$id', ({ id, citation, points }) => {
+    const { index, indexSource } = entryOf(id).content;
+    expect(indexSource.citation).toBe(citation);
+    for (const [wavelengthNm, n, k] of points) expect(indexOf(id, wavelengthNm)).toEqual([n, k]);
+    if (index.kind !== 'table') throw new Error('a table was expected');
+    expect([index.wavelengthsNm[0], index.wavelengthsNm.at(-1)]).toEqual([points[0]![0], points.at(-1)![0]]);
+  });
+
+  test('none is left out, and an illustrative entry has the index of the entry it belongs to', () => {
+    const checked = new Set(sources.map(({ id }) => id));
+    const others = library.filter(({ id, content }) => content.index.kind === 'table' && !checked.has(id));
+    expect(others.map(({ id }) => id)).toEqual(
+      ['co', 'fe', 'ni'].map((metal) => `${metal}-illustrative-lines`),
+    );
+    for (const { id, content } of others) {
+      expect(content.index, id).toEqual(entryOf(`${id.slice(0, 2)}-johnson-1974`).content.index);
+    }
+  });
+});
+
 describe('dispersion formulas give the index printed elsewhere', () => {
   // Digits: the last printed one, so half a unit of it is the tolerance.
   test.each([
@@ -48,6 +86,11 @@ describe('dispersion formulas give the index printed elsewhere', () => {
     ['bk7-schott-2017', 587.5618, 1.5168, 5, 'data sheet N-BK7, SCHOTT: n_d'],
     ['bk7-schott-2017', 486.1327, 1.52238, 5, 'the same: n_F'],
     ['bk7-schott-2017', 656.2725, 1.51432, 5, 'the same: n_C'],
+    ['bk7-schott-2017', 1060, 1.50669, 5, 'the same: n_1060'],
+    ['sio2-malitson-1965', 1064, 1.4496, 4, 'fused silica, data sheets of makers, from memory'],
+    ['quartz-ghosh-1999-o', 589.3, 1.5442, 4, 'crystal quartz n_o, CRC Handbook, from memory'],
+    ['sapphire-malitson-1972-o', 632.8, 1.766, 3, 'sapphire n_o, data sheets of makers, from memory'],
+    ['mgo-stephens-1952', 589.3, 1.737, 3, 'MgO n_D, CRC Handbook, from memory'],
     ['mgf2-dodge-1984-o', 589.3, 1.3777, 4, 'Dodge, Appl. Opt. 23, 1980 (1984), ordinary'],
     ['sapphire-malitson-1972-o', 589.3, 1.768, 3, 'sapphire n_o, handbook value, from memory'],
     ['mgo-stephens-1952', 632.8, 1.735, 3, 'Stephens and Malitson, J. Res. NBS 49, 249 (1952)'],
@@ -82,6 +125,17 @@ describe('between the points, at 632.8 nm', () => {
     expect(Math.abs(sampledN - n)).toBeLessThan(0.01);
     expect(Math.abs(sampledK - k)).toBeLessThan(0.03);
   });
+
+  // D. W. Lynch and W. R. Hunter in Palik, Handbook of Optical Constants of Solids (1985), gold at 635.8 nm, from
+  // memory: 0.166 + 3.15i. Sources of gold differ by a tenth in k.
+  test.each(['au-johnson-1972', 'au-olmon-2012'])(
+    '%s agrees with the handbook of Palik as far as gold does',
+    (id) => {
+      const [n, k] = indexOf(id, 635.8);
+      expect(Math.abs(n - 0.166)).toBeLessThan(0.05);
+      expect(Math.abs(k / 3.15 - 1)).toBeLessThan(0.12);
+    },
+  );
 
   test('two sources of silicon agree at 600 nm', () => {
     const [aspnes, green] = [indexOf('si-aspnes-1983', 600), indexOf('si-green-2008', 600)];
@@ -120,4 +174,56 @@ describe('Voigt constants', () => {
     expect(kerrDeg).toBeGreaterThan(expectedDeg / 1.5);
     expect(kerrDeg).toBeLessThan(expectedDeg * 1.5);
   });
+});
+
+describe('illustrative lines of Fe, Co and Ni', () => {
+  /** Kerr rotation of the bulk in deg, normal incidence, m into the film. */
+  const rotationDeg = (id: string, wavelengthNm: number): number => {
+    const { re, im } = voigtOf(id, wavelengthNm);
+    const { kerr } = solvePoint({
+      wavelengthNm,
+      angleDeg: 0,
+      incident: { index: 1 },
+      layers: [],
+      substrate: { index: indexOf(id, wavelengthNm), voigt: [re[0]!, im[0]!], m: [0, 0, 1] },
+    });
+    return kerr.p!.rotationDeg;
+  };
+
+  // Sizes and energies: Magnetics Society of Japan, questions and answers by T. Ishibashi, citing K. Sato, "Hikari to
+  // Jiki" (Light and Magnetism). The cobalt peak, 0.62 eV there, is beyond the table of n and k, which ends at 0.640 eV.
+  test.each([
+    ['fe', 0.87, 0.75],
+    ['co', 0.85, 0.665],
+    ['ni', 0.19, 3.1],
+  ])('%s: the largest polar Kerr rotation is %d deg at %d eV', (metal, peakDeg, peakEv) => {
+    const id = `${metal}-illustrative-lines`;
+    const curve = Array.from({ length: 400 }, (_, i) => 350 + (i * 1587) / 399).map((wavelengthNm) => ({
+      energyEv: photonEnergyEv(wavelengthNm),
+      rotation: rotationDeg(id, wavelengthNm),
+    }));
+    const peak = curve.reduce((most, at) => (Math.abs(at.rotation) > Math.abs(most.rotation) ? at : most));
+    expect(Math.abs(peak.rotation) / peakDeg).toBeGreaterThan(0.99);
+    expect(Math.abs(peak.rotation) / peakDeg).toBeLessThan(1.01);
+    expect(Math.abs(peak.energyEv / peakEv - 1)).toBeLessThan(0.02);
+    // The sign of the peak, and that at 632.8 nm, is the one of the constant known at 632.8 nm.
+    const known = rotationDeg(`${metal}-johnson-1974`, 632.8);
+    expect(Math.sign(peak.rotation)).toBe(Math.sign(known));
+    expect(Math.sign(rotationDeg(id, 632.8))).toBe(Math.sign(known));
+  });
+});
+
+// C. Kittel, Introduction to Solid State Physics, table of ferromagnetic crystals, from memory: saturation magnetization
+// in G at room temperature and at 0 K, Curie temperature in K.
+test.each([
+  ['fe', 1707, 1740, 1043],
+  ['co', 1400, 1446, 1388],
+  ['ni', 485, 510, 627],
+])('the law of %s gives its magnetization at room temperature', (metal, warm, cold, curieK) => {
+  for (const id of [`${metal}-johnson-1974`, `${metal}-illustrative-lines`]) {
+    const { thermal } = entryOf(id).content;
+    expect(thermal!.curieK).toBe(curieK);
+    expect(magnetizationAt(293, thermal!)).toBeCloseTo(warm / cold, 3);
+    expect(thermal!.citation).toMatch(/Kittel.*from memory.*common practice, no source/);
+  }
 });
