@@ -1,0 +1,102 @@
+import type { CapDesign } from '../../../shared/capDesign.ts';
+import type { DesignPoint, PointReadings, SignalName } from '../../../shared/designPoint.ts';
+import type { DemandName } from '../demands.ts';
+import { failedDemands } from '../demands.ts';
+import type { Window } from './capWindows.ts';
+
+/** Numbers as sentences have them: three digits, angles in mdeg. */
+export function signalWords(signal: SignalName, value: number): string {
+  return signal === 'rotation' || signal === 'ellipticity' ? `${digits(1000 * value)} mdeg` : digits(value);
+}
+
+export function nmWords(nm: number): string {
+  return `${digits(nm)} nm`;
+}
+
+function digits(value: number): string {
+  return String(Number(value.toPrecision(3)));
+}
+
+const signalLabels: Record<SignalName, string> = {
+  rotation: 'Kerr rotation',
+  ellipticity: 'Kerr ellipticity',
+  amplitude: 'cross-polarized amplitude',
+  contrast: 'transverse contrast',
+};
+
+/** Why a thickness was chosen. */
+export function reasonFor(
+  design: CapDesign,
+  choice: {
+    nm: number;
+    yield: number;
+    isRobust: boolean;
+    window: Window | undefined;
+    worst: { label: string; signal: number; costPercent: number | null };
+  },
+): string {
+  const { worst, window } = choice;
+  const label = signalLabels[design.signal];
+  const where = window
+    ? ` in the window from ${nmWords(window.fromNm)} to ${nmWords(window.toNm)} where all demands hold`
+    : '';
+  const robust = choice.isRobust
+    ? `${percent(choice.yield)} of the films meet all demands, and the lower edge of the ${label} is the greatest`
+    : `only ${percent(choice.yield)} of the films meet all demands (${percent(design.leastYield)} were asked), the most`;
+  const cost =
+    worst.costPercent === null
+      ? ''
+      : worst.costPercent >= 0
+        ? `, ${digits(worst.costPercent)} % less than without a cap`
+        : `, ${digits(-worst.costPercent)} % more than without a cap`;
+  const at = design.points.length > 1 ? ` at ${worst.label}, its weakest working point` : '';
+  return `${nmWords(choice.nm)}: ${robust}${where}; ${label} ${signalWords(design.signal, worst.signal)}${at}${cost}.`;
+}
+
+function percent(share: number): string {
+  return `${Math.round(100 * share)} %`;
+}
+
+const demandLabels: Record<DemandName, string> = {
+  leastRotationDeg: 'Kerr rotation',
+  leastAmplitude: 'cross-polarized amplitude',
+  leastContrast: 'transverse contrast',
+  leastReflectance: 'reflectance',
+  mostEllipticityDeg: 'Kerr ellipticity',
+  mostSlopePercentPerNm: 'change of the signal per nm',
+};
+
+/** What keeps every thickness from meeting the demands. */
+export function obstacleOf(
+  { points, demands, range }: CapDesign,
+  nm: readonly number[],
+  leastNm: number,
+  readings: PointReadings[][],
+  slopes: (number | null)[][],
+): string {
+  if (leastNm === Infinity) {
+    return 'The layer of fixed thickness is thinner than the least thickness that protects: make it thicker.';
+  }
+  const thick = nm.flatMap((one, position) => (one >= leastNm ? [position] : []));
+  if (thick.length === 0) {
+    return `The range ends at ${nmWords(range.toNm)}, below the ${nmWords(leastNm)} that protect: extend the range.`;
+  }
+  const failsAt = (point: number, position: number) =>
+    failedDemands(readings[point]![position]!, demands, slopes[point]![position]);
+  for (const name of Object.keys(demands) as DemandName[]) {
+    const point = points.findIndex((_, index) =>
+      thick.every((position) => failsAt(index, position).includes(name)),
+    );
+    if (point >= 0) return neverMet(name, points[point]!);
+  }
+  return 'Each demand is met at some thickness, but no thickness meets all of them at every working point.';
+
+  function neverMet(name: DemandName, point: DesignPoint): string {
+    const limit = demands[name]!;
+    const value = name.endsWith('Deg')
+      ? `${digits(1000 * limit)} mdeg`
+      : `${digits(limit)}${name === 'mostSlopePercentPerNm' ? ' % per nm' : ''}`;
+    const bound = name.startsWith('least') ? `never reaches ${value}` : `is never as small as ${value}`;
+    return `The ${demandLabels[name]} ${bound} at ${point.label} for any thickness that protects.`;
+  }
+}

@@ -1,0 +1,54 @@
+import type { CapDesign } from '../../shared/capDesign.ts';
+import { CapCurves, capThicknesses } from './cap/capCurves.ts';
+import { capOutcome } from './cap/capOutcome.ts';
+import { CapSamples } from './cap/capSamples.ts';
+import type { DesignStep, DesignTask, DesignWork } from './designInput.ts';
+
+/** What a thread keeps of the calculation that it last took a step of. */
+type Kept = { designId: number; work: DesignWork; curves: CapCurves | null };
+
+let kept: Kept | null = null;
+
+/** One step of a design calculation; what it answers depends on the kind of step. */
+export function designStep({ designId, work, flags, step }: DesignTask): unknown {
+  if (kept?.designId !== designId) kept = { designId, work: readWork(work), curves: null };
+  return takeStep(kept, step, new Int32Array(flags));
+}
+
+function takeStep(mine: Kept, step: DesignStep, flags: Int32Array): unknown {
+  switch (step.kind) {
+    case 'cap samples': {
+      const { design, curves } = capCurvesOf(mine, step.candidateId);
+      const nm = capThicknesses(design);
+      const samples = samplesOf(design, nm, step.samples);
+      for (let sample = step.from; sample < step.to && Atomics.load(flags, 1) === 0; sample += 1) {
+        samples.fill(sample, nm, curves);
+        Atomics.add(flags, 0, 1);
+      }
+      return null;
+    }
+    case 'cap outcome': {
+      const { design, curves } = capCurvesOf(mine, step.candidateId);
+      const nm = capThicknesses(design);
+      return capOutcome(design, curves, nm, samplesOf(design, nm, step.samples), step.bare);
+    }
+  }
+}
+
+function capCurvesOf(mine: Kept, candidateId: string): { design: CapDesign; curves: CapCurves } {
+  const { design, materials } = mine.work;
+  if (design.kind !== 'cap') throw new Error(`a cap step of a calculation of kind ${design.kind}`);
+  if (mine.curves?.candidate.id !== candidateId) mine.curves = new CapCurves(design, candidateId, materials);
+  return { design, curves: mine.curves };
+}
+
+function samplesOf(design: CapDesign, nm: number[], buffer: SharedArrayBuffer): CapSamples {
+  const size = { points: design.points.length, thicknesses: nm.length, samples: design.tolerance.samples };
+  return new CapSamples(size, buffer);
+}
+
+function readWork(bytes: SharedArrayBuffer): DesignWork {
+  const text = new TextDecoder().decode(new Uint8Array(bytes).slice());
+  // Written by DesignThreads from a DesignWork in this same process.
+  return JSON.parse(text) as DesignWork;
+}

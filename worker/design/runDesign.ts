@@ -1,0 +1,42 @@
+import type { DesignInput, DesignResult } from '../../shared/design.ts';
+import { capTotal, runCap } from './cap/runCap.ts';
+import type { DesignWork } from './designInput.ts';
+import type { DesignOptions, SubmitStep } from './designThreads.ts';
+import { DesignThreads } from './designThreads.ts';
+
+export type DesignOutcome = { result: DesignResult; seconds: number };
+
+/** How much work a question is, in its own unit: films that are solved. */
+export function designTotal(design: DesignInput): number {
+  switch (design.kind) {
+    case 'cap':
+      return capTotal(design);
+    default:
+      throw new Error(`not yet: ${design.kind}`);
+  }
+}
+
+/**
+ * Answers a design question on all threads. The same input gives the same answer on any number of them.
+ *
+ * @throws ComputeError `cancelled`, `refused`, `crashed` or `closed`
+ */
+export async function runDesign(
+  work: DesignWork,
+  count: number,
+  submit: SubmitStep,
+  options: DesignOptions<DesignResult> = {},
+): Promise<DesignOutcome> {
+  const started = performance.now();
+  const threads = new DesignThreads(work, count, submit);
+  const { design } = work;
+  const result = await threads.watch(designTotal(design), options, () => {
+    switch (design.kind) {
+      case 'cap':
+        return runCap(design, work, threads);
+      default:
+        throw new Error(`not yet: ${design.kind}`);
+    }
+  });
+  return { result, seconds: (performance.now() - started) / 1000 };
+}
