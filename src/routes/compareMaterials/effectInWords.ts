@@ -21,10 +21,11 @@ export function effectInWords({ reading, grid, values, names, workingNm }: Effec
   const angle = readingDefinitions[reading].unit === 'deg';
   const text = (value: number) =>
     angle ? `${formatAngle(value)} mdeg` : formatNumber(value, { signed: true });
-  const share = (pair: { a: number; b: number }) => {
-    const percent = (100 * (pair.b - pair.a)) / Math.abs(pair.a);
-    return Number.isFinite(percent) ? ` (${formatNumber(percent, { digits: 2, signed: true })} %)` : '';
-  };
+  // Across a change of sign, or from nothing, a share in percent says nothing.
+  const share = (pair: { a: number; b: number }) =>
+    pair.a * pair.b > 0
+      ? ` (${formatNumber((100 * (pair.b - pair.a)) / Math.abs(pair.a), { digits: 2, signed: true })} %)`
+      : '';
   const most = at(farthest);
   const difference = most.b - most.a;
   if (difference === 0) return 'The exchange changes nothing.';

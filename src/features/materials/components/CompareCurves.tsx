@@ -92,8 +92,8 @@ function inWords(
   const index = farthestApart(overlap);
   if (index === null) return `${symbol} of both is known nowhere together.`;
   const [a, b] = [overlap.a[index] ?? NaN, overlap.b[index] ?? NaN];
-  const percent =
-    a === 0 ? '' : `, ${formatNumber((100 * (b - a)) / Math.abs(a), { digits: 2, signed: true })} %`;
+  const share = (100 * (b - a)) / Math.abs(a);
+  const percent = a * b > 0 ? `, ${formatNumber(share, { digits: 2, signed: true })} %` : '';
   const at = `${formatNumber(overlap.x[index] ?? NaN)} ${unit}`;
   const verb = overlap.x.length > 1 ? 'differs most at' : 'can be compared at one place only,';
   return `${symbol} ${verb} ${at}: ${formatNumber(a)} (${names[0]}) and ${formatNumber(b)} (${names[1]})${percent}.`;

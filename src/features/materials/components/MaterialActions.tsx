@@ -27,24 +27,21 @@ export function MaterialActions({ material, groupId, onDeleted }: Props) {
         <Download size={15} aria-hidden />
         Export CSV
       </a>
-      {groupId ? (
+      {groupId !== null && own ? (
         <>
           <ButtonLink to={`${generatePath(paths.importMaterial, { groupId })}?for=${id}`}>
             Import Q for it
           </ButtonLink>
-          {own ? (
-            <>
-              <DeleteMaterial material={material} groupId={groupId} onDeleted={onDeleted} />
-              <ButtonLink tone="primary" to={generatePath(paths.editMaterial, { materialId: id })}>
-                Edit
-              </ButtonLink>
-            </>
-          ) : (
-            <ButtonLink tone="primary" to={`${generatePath(paths.newMaterial, { groupId })}?${copy}`}>
-              Copy into this group and edit
-            </ButtonLink>
-          )}
+          <DeleteMaterial material={material} groupId={groupId} onDeleted={onDeleted} />
+          <ButtonLink tone="primary" to={generatePath(paths.editMaterial, { materialId: id })}>
+            Edit
+          </ButtonLink>
         </>
+      ) : null}
+      {groupId !== null && !own ? (
+        <ButtonLink tone="primary" to={`${generatePath(paths.newMaterial, { groupId })}?${copy}`}>
+          Copy into this group and edit
+        </ButtonLink>
       ) : null}
     </>
   );
