@@ -53,6 +53,7 @@ const screens: Screen[] = [
   { name: 'share', address: `/share/${DEMO_LINK_TOKEN}`, landmark: 'Values at angle 30°', open: true },
   { name: 'share that never was', address: '/share/none', landmark: 'There is no such link', open: true },
   { name: 'materials', address: '/groups/:group/materials', landmark: 'Titanium nitride' },
+  { name: 'import', address: '/groups/:group/materials/import', landmark: 'At most 20 MB' },
   { name: 'material', address: '/materials/fe-johnson-1974', landmark: 'Where Q comes from' },
   { name: 'people', address: '/groups/:group/people', landmark: 'guest@northgate.example' },
   { name: 'account', address: '/account', landmark: 'No tokens yet' },

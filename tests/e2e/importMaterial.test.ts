@@ -146,3 +146,23 @@ it('adds Q from Kerr angles to the material as a new version', async () => {
   expect(content.voigt?.kind).toBe('table');
   expect(grower.complaints.filter((text) => !text.includes('422'))).toEqual([]);
 });
+
+it('reads a file that it exported itself back to the same numbers, asking only for the name', async () => {
+  const { page, context } = grower;
+  const exported = await context.request.get(`/api/v1/materials/${materialId}/export.csv`);
+  const file = { name: 'invented-metal.csv', mimeType: 'text/csv', buffer: await exported.body() };
+  await grower.open(`/groups/${group}/materials/import`);
+  await page.getByLabel('Choose a file').setInputFiles(file);
+  await page.getByText('as Skewlight exported it').waitFor();
+  expect(await page.getByLabel('Formula', { exact: true }).inputValue()).toBe('Im');
+  await page.getByLabel('Name', { exact: true }).fill('Invented metal again');
+  await page.getByRole('button', { name: 'Create material' }).click();
+  await page.getByRole('heading', { level: 1, name: 'Im, Invented metal again' }).waitFor();
+  const [before, after] = [
+    await ask(context, `/materials/${materialId}`, materialSchema),
+    await ask(context, `/materials/${page.url().split('/').at(-1)}`, materialSchema),
+  ];
+  expect(after.content.index).toEqual(before.content.index);
+  expect(after.content.voigt).toEqual(before.content.voigt);
+  expect(after.content.voigtSource).toEqual(before.content.voigtSource);
+});

@@ -36,7 +36,8 @@ export function ExportedImport({ groupId, importId, exported, tableStep, onKept 
         {tableStep}
         <p className="rounded-control bg-accent-soft px-3 py-2">
           This is {formatFormula(exported.formula)}, {exported.name}, as Skewlight exported it. Its columns,
-          signs, units and sources are in the file, so it is read back to the same numbers without questions.
+          signs, units and sources are in the file, so it is read back to the same numbers without questions,
+          as a material of its own.
         </p>
         <ImportStep id="keep" state="open">
           <KeepForm
