@@ -17,6 +17,9 @@ const MALITSON = [
   [0.8974794, 9.896161 ** 2],
 ] as const;
 
+/** Of a stored material, not of the form for a new one. */
+const PAGE_OF_MATERIAL = /\/materials\/(?!new)[^/]+$/;
+
 let site: Site;
 let editor: Visitor;
 let groupId: string;
@@ -61,7 +64,7 @@ it('makes a material of a Sellmeier formula, shows its curve before it is saved,
     .getByLabel('Citation (required)')
     .fill('I. H. Malitson, J. Opt. Soc. Am. 55, 1205 (1965)');
   await page.getByRole('button', { name: 'Save material' }).click();
-  await page.waitForURL(/\/materials\/[^/]+$/);
+  await page.waitForURL(PAGE_OF_MATERIAL);
   await page.getByRole('heading', { level: 1, name: NAME }).waitFor();
   materialId = page.url().split('/').at(-1) ?? '';
   const stored = await ask(editor.context, `/materials/${materialId}`, materialSchema);
@@ -87,7 +90,7 @@ it('keeps unsaved edits over a reload, warns before they are left, and saves the
 
   await page.getByLabel('What changes, and why').fill('Known farther into the infrared');
   await page.getByRole('button', { name: 'Save as version 2' }).click();
-  await page.waitForURL(/\/materials\/[^/]+$/);
+  await page.waitForURL(PAGE_OF_MATERIAL);
   await page.getByText('version 2').first().waitFor();
   await page.getByText('Known farther into the infrared').waitFor();
   const stored = await ask(editor.context, `/materials/${materialId}`, materialSchema);
@@ -101,7 +104,8 @@ it('does not lose edits to somebody who was faster', async () => {
   await editor.open(`/materials/${materialId}/edit`);
   const { content } = await ask(editor.context, `/materials/${materialId}`, materialSchema);
   const grower = await site.visit({ as: 'grower' });
-  const body = { version: 2, note: 'faster', content: { ...content, thermal: undefined } };
+  const theirs = { ...content, indexSource: { ...content.indexSource, sample: 'bulk' } };
+  const body = { version: 2, note: 'The sample is named', content: theirs };
   await ask(grower.context, `/materials/${materialId}/versions`, materialSchema, body);
 
   await page.getByLabel('Valid from').fill('300');
@@ -109,7 +113,7 @@ it('does not lose edits to somebody who was faster', async () => {
   await page.getByText(/made version 3 of this material while you were editing/).waitFor();
   expect(await page.getByLabel('Valid from').inputValue()).toBe('300');
   await page.getByRole('button', { name: 'Save mine as version 4' }).click();
-  await page.waitForURL(/\/materials\/[^/]+$/);
+  await page.waitForURL(PAGE_OF_MATERIAL);
   const stored = await ask(editor.context, `/materials/${materialId}`, materialSchema);
   expect([stored.version, ...stored.rangeNm]).toEqual([4, 300, 2000]);
 });

@@ -1,8 +1,8 @@
 import { FORMULA_LENGTH, formulaQuantities } from '../../../../shared/dispersion.ts';
 import type { FormOf, PlainIndexForm, VoigtForm } from '../model/form.ts';
+import { Button } from '../../../components/Button.tsx';
 import { ChoiceField } from './ChoiceField.tsx';
 import { NumberField } from './NumberField.tsx';
-import { TermList } from './TermList.tsx';
 import { TextField } from './TextField.tsx';
 
 /** Most coefficients of a formula (shared/dispersion.ts refuses more). */
@@ -39,25 +39,47 @@ function ExpressionFields<Form extends Fields>({ form, path, complex, onChange }
           </>
         }
       />
-      <TermList
-        noun="coefficient"
-        most={MOST_COEFFICIENTS}
-        least={0}
-        terms={form.coefficients}
+      <Coefficients
+        path={`${path}.coefficients`}
+        values={form.coefficients}
         onChange={(coefficients) => onChange({ ...form, coefficients })}
-        additions={[{ label: 'Add a coefficient', make: () => 0 }]}
-      >
-        {(value, at, change) => (
-          <NumberField
-            label={`c${at + 1}`}
-            path={`${path}.coefficients[${at}]`}
-            value={value}
-            className="w-44"
-            onChange={change}
-          />
-        )}
-      </TermList>
+      />
     </>
+  );
+}
+
+type CoefficientsProps = { path: string; values: number[]; onChange: (values: number[]) => void };
+
+/** The numbers c1, c2, ... Only the last can go: taking one from the middle would rename those after it. */
+function Coefficients({ path, values, onChange }: CoefficientsProps) {
+  return (
+    <div role="group" aria-label="Coefficients" className="flex flex-col gap-2">
+      <div className="flex flex-wrap gap-3">
+        {values.map((value, position) => (
+          <NumberField
+            key={position}
+            label={`c${position + 1}`}
+            path={`${path}[${position}]`}
+            value={value}
+            onChange={(next) => onChange(values.map((one, at) => (at === position ? next : one)))}
+          />
+        ))}
+      </div>
+      <div className="flex flex-wrap gap-1.5">
+        <Button
+          className="py-1!"
+          disabled={values.length >= MOST_COEFFICIENTS}
+          onClick={() => onChange([...values, 0])}
+        >
+          Add c{values.length + 1}
+        </Button>
+        {values.length > 0 ? (
+          <Button className="py-1!" tone="plain" onClick={() => onChange(values.slice(0, -1))}>
+            Remove c{values.length}
+          </Button>
+        ) : null}
+      </div>
+    </div>
   );
 }
 

@@ -33,11 +33,12 @@ export function MaterialEditorForm({ editor, groupId, materials, nextVersion }: 
   const { form, editContent, refusal } = editor;
   const { content } = form;
   const preview = usePreview(groupId, content);
+  const marked = useMemo(() => withoutUntouched(preview.issues, content), [preview.issues, content]);
   const issues = useMemo<readonly Issue[]>(() => {
-    if (!refusal) return withoutUntouched(preview.issues, content);
+    if (!refusal) return marked;
     const said = new Set(refusal.issues.map(({ path, message }) => path + message));
     return [...refusal.issues, ...preview.issues.filter(({ path, message }) => !said.has(path + message))];
-  }, [refusal, preview.issues, content]);
+  }, [refusal, preview.issues, marked]);
   const starts = useMemo(() => fitStart(content), [content]);
   const useIndex = (fitted: PlainIndex | PlainVoigt, source: SourceForm) => {
     if (fitted.kind === 'model' || (fitted.kind === 'formula' && content.index.kind === 'formula')) {
@@ -87,7 +88,7 @@ export function MaterialEditorForm({ editor, groupId, materials, nextVersion }: 
           <ThermalSection thermal={content.thermal} onChange={(thermal) => editContent({ thermal })} />
         </div>
         <div className="flex min-w-0 flex-col gap-4 lg:sticky lg:top-4">
-          <PreviewPanel preview={preview} name={form.name.trim() || 'the material'} />
+          <PreviewPanel preview={preview} marked={marked.length} name={form.name.trim() || 'the material'} />
           <SavePanel editor={editor} nextVersion={nextVersion} />
         </div>
       </div>

@@ -10,15 +10,21 @@ type Curves = Material['curves'];
 
 const xAxis = { label: 'vacuum wavelength (nm)' };
 
-type Props = { preview: Preview; name: string; renderer?: 'canvas' | 'svg' };
+type Props = {
+  preview: Preview;
+  /** How many problems are shown at their fields; what is not yet filled in has no mark. */
+  marked: number;
+  name: string;
+  renderer?: 'canvas' | 'svg';
+};
 
 /** What the constants in the form look like to a stack; nothing is stored for it. */
-export function PreviewPanel({ preview, name, renderer = 'canvas' }: Props) {
+export function PreviewPanel({ preview, marked, name, renderer = 'canvas' }: Props) {
   const { curves, pending, issues, error } = preview;
   return (
     <Section title="Preview">
       <p role="status" className={`text-note ${error ? 'text-danger' : 'text-muted'}`}>
-        {stateOf(preview)}
+        {stateOf(preview, marked)}
       </p>
       {curves ? (
         <div className={pending || issues.length > 0 ? 'opacity-50' : ''}>
@@ -34,11 +40,13 @@ export function PreviewPanel({ preview, name, renderer = 'canvas' }: Props) {
   );
 }
 
-function stateOf({ curves, pending, issues, error }: Preview): string {
+function stateOf({ curves, pending, issues, error }: Preview, marked: number): string {
   if (error) return `No preview: ${error.message}`;
   if (issues.length > 0) {
-    const what = issues.length === 1 ? 'One value' : `${issues.length} values`;
-    return `${what} cannot be used yet; see the marked fields.${curves ? ' The curves are those of before.' : ''}`;
+    const before = curves ? ' The curves are those of before.' : '';
+    if (marked === 0) return `Something is not filled in yet.${before}`;
+    const what = marked === 1 ? 'One value' : `${marked} values`;
+    return `${what} cannot be used yet; see the marked fields.${before}`;
   }
   return pending ? 'Computing the curves' : 'As a stack will use it; nothing is stored yet.';
 }

@@ -7,8 +7,6 @@ type Props<Term> = {
   noun: string;
   terms: readonly Term[];
   most: number;
-  /** How few there may be. */
-  least?: number;
   onChange: (terms: Term[]) => void;
   /** A further one; several kinds have several buttons. */
   additions: readonly { label: string; make: () => Term }[];
@@ -16,11 +14,11 @@ type Props<Term> = {
   children: (term: Term, position: number, change: (term: Term) => void) => ReactNode;
 };
 
-/** A list of like things that can be added to and taken from: terms of a sum, coefficients, lines. */
+/** A list of like things that can be added to and taken from: terms of a sum, lines, wavelengths. */
 export function TermList<Term>(props: Props<Term>) {
-  const { noun, terms, most, least = 1, onChange, additions, nameOf, children } = props;
+  const { noun, terms, most, onChange, additions, nameOf, children } = props;
   return (
-    <div className="flex flex-col gap-2">
+    <div className="flex flex-col gap-3">
       {terms.map((term, position) => {
         const name = `${noun} ${position + 1}`;
         return (
@@ -39,7 +37,7 @@ export function TermList<Term>(props: Props<Term>) {
                 onChange(terms.map((one, at) => (at === position ? next : one))),
               )}
             </div>
-            {terms.length > least ? (
+            {terms.length > 1 ? (
               <IconButton
                 label={`Remove ${name}`}
                 className="absolute -top-1.5 right-0"

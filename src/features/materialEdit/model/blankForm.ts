@@ -29,7 +29,7 @@ export function blankPlainIndex(
 ): PlainIndexForm {
   switch (kind) {
     case 'table':
-      return { kind, rows: [['', '', '']] };
+      return { kind, rows: Array.from({ length: 4 }, () => ['', '', '']) };
     case 'sellmeier':
       return { kind, rangeNm, constant: 1, terms: [{ b: 1, cUm2: 0.01 }] };
     case 'cauchy':
@@ -96,7 +96,7 @@ export function blankVoigt(kind: Exclude<VoigtForm['kind'], 'import'>, rangeNm: 
     case 'mixture':
       return { kind };
     case 'table':
-      return { kind, rows: [['', '', '']] };
+      return { kind, rows: Array.from({ length: 4 }, () => ['', '', '']) };
     case 'lines':
       return { kind, rangeNm, of: 'gyration', lines: [blankLine()] };
     case 'formula':
