@@ -25,6 +25,14 @@ export type Dependencies = {
   publicUrl: () => string;
 };
 
+/** The reading of uploaded files as the rest of the server sees it. */
+export type ImportReading = {
+  /** Begins to read the file of a row that was just made; what becomes of it stands in the row. */
+  begin(importId: string, attempts: 0): void;
+  /** How far this process is with it, 0..1. */
+  progressOf(importId: string): number;
+};
+
 /** The queue of runs as the rest of the server sees it. */
 export type Jobs = {
   health(): Promise<PartHealth>;
@@ -38,6 +46,7 @@ export type Jobs = {
   watch(runId: string, listener: (progress: RunProgress | null) => void): () => void;
   /** The numbers of a run that this process is computing, as far as they go; null for any other run. */
   partialResult(runId: string): PartialResult | null;
+  imports: ImportReading;
 };
 
 /** What request handlers have: the queue is started after everything that it depends on. */

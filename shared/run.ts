@@ -183,6 +183,8 @@ export const usedMaterialSchema = z.object({
   voigtRangeNm: z.tuple([z.number(), z.number()]).nullable(),
   /** True where a constant known at one wavelength was used at others, as the user allowed. */
   assumedConstant: z.boolean(),
+  /** Of what makes a crystal more than N and Q; absent where there is none. */
+  anisotropySource: sourceSchema.optional(),
   /** How imported constants were read and what was noticed then, in sentences; absent in runs made before it was kept. */
   origin: z.array(z.string()).optional(),
 });

@@ -6,6 +6,7 @@ import { countLayers } from '../shared/stackCase.ts';
 import { hashPassword } from '../server/auth/passwords.ts';
 import type { Group } from '../server/models/group.ts';
 import type { Material } from '../server/models/material.ts';
+import type { MaterialImport } from '../server/models/materialImport.ts';
 import type { Models } from '../server/models/models.ts';
 import type { Run, RunInput } from '../server/models/run.ts';
 import type { ShareLink } from '../server/models/shareLink.ts';
@@ -163,6 +164,28 @@ export async function buildMaterial(
     await models.MaterialVersion.create({ materialId: material.id, version: position + 1, content });
   }
   return material;
+}
+
+type ImportOverrides = Partial<Pick<MaterialImport, 'fileName' | 'state' | 'readingAt' | 'createdAt'>> & {
+  text?: string;
+};
+
+/** A file of constants as its sender left it, which nobody reads unless told to. */
+export async function buildImport(
+  models: Models,
+  group: Group,
+  { text = 'nm,n,k\n400,2,3\n600,2.2,3.5\n800,2.4,4\n', ...overrides }: ImportOverrides = {},
+): Promise<MaterialImport> {
+  const bytes = Buffer.from(text, 'utf8');
+  return models.MaterialImport.create({
+    groupId: group.id,
+    createdById: null,
+    fileName: 'table.csv',
+    sha256: hashSecret(text),
+    bytes,
+    size: bytes.length,
+    ...overrides,
+  });
 }
 
 export function buildRunInput(overrides: Partial<RunInput> = {}): RunInput {

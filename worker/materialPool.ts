@@ -1,8 +1,10 @@
 import type { Issue } from '../shared/error.ts';
 import type { Material, MaterialContent } from '../shared/material.ts';
 import type { ImportMapping, ImportTable } from '../shared/materialImport.ts';
+import type { FitResult } from '../shared/materialFit.ts';
 import type { LibrarySolveCase, SolveCase } from '../shared/solve.ts';
 import type { ResolvableMaterial } from './dispersion/resolveCase.ts';
+import type { FitInput } from './fit/fitMaterial.ts';
 import type { ConvertedTable } from './import/convertTable.ts';
 import type { ExportedMaterial } from './import/exportedMaterial.ts';
 import { runLimited } from './runLimited.ts';
@@ -12,6 +14,10 @@ import type { Threads } from './sweep/threads.ts';
 const CONSTANTS_TIMEOUT_MS = 5_000;
 const tooSlow =
   'The constants took longer than 5 s to evaluate: simplify the formula or ask fewer wavelengths.';
+
+const FIT_TIMEOUT_MS = 60_000;
+const fitTooSlow =
+  'The fit took longer than 60 s: fit fewer points over a shorter range, or fix some parameters.';
 
 /** Far more than the largest table needs. */
 const TABLE_TIMEOUT_MS = 60_000;
@@ -65,6 +71,13 @@ export type MaterialPool = {
     cases: LibrarySolveCase[],
     materials: ReadonlyMap<string, ResolvableMaterial>,
   ): Promise<SolveCase[]>;
+  /**
+   * Fits a model to a tabulated constant.
+   *
+   * @throws ComputeError `refused` with issues whose paths are those of the request, `cancelled`, `timeout` (60 s) or
+   *   `crashed`
+   */
+  fit(input: FitInput, options?: { signal?: AbortSignal }): Promise<FitResult>;
 };
 
 /** @param small threads for what is quick; @param large threads that are shared with the sweeps */
@@ -86,6 +99,8 @@ export function materialPool({ small, large }: { small: Threads; large: Threads 
       runLimited(large, 'convertTable', { bytes, mapping, indexOf }, tableLimits),
     curves: (content) => runLimited(small, 'curves', content, limits),
     checkContent: (content) => runLimited(small, 'checkContent', content, limits),
+    fit: (input, { signal } = {}) =>
+      runLimited(large, 'fit', input, { milliseconds: FIT_TIMEOUT_MS, message: fitTooSlow, signal }),
     resolve: (cases, materials) => runLimited(small, 'resolve', { cases, materials }, limits),
   };
 }

@@ -1,6 +1,7 @@
 import type { Issue } from '../shared/error.ts';
 import type { Material, MaterialContent } from '../shared/material.ts';
 import type { ImportMapping, ImportTable } from '../shared/materialImport.ts';
+import type { FitResult } from '../shared/materialFit.ts';
 import type { LibrarySolveCase, SolveCase, SolveRequest, SolveResponse } from '../shared/solve.ts';
 import { checkContent as issuesOf } from './dispersion/checkContent.ts';
 import { materialCurves } from './dispersion/materialCurves.ts';
@@ -11,6 +12,8 @@ import { decodeText } from './import/decodeText.ts';
 import type { ExportedMaterial } from './import/exportedMaterial.ts';
 import { readExportedMaterial } from './import/readExportedMaterial.ts';
 import { readTable as tableFrom } from './import/readTable.ts';
+import type { FitInput } from './fit/fitMaterial.ts';
+import { fitMaterial } from './fit/fitMaterial.ts';
 import { solveRequest } from './optics/solveRequest.ts';
 import { releaseMemory } from './releaseMemory.ts';
 import { resolveCases } from './resolveCases.ts';
@@ -43,6 +46,10 @@ export function sweepChunk(task: ChunkTask): TaskOutcome<null> {
     solverOf(task).solve(task.chunk, result);
     return null;
   });
+}
+
+export function fit(input: FitInput): TaskOutcome<FitResult> {
+  return outcomeOf(() => fitMaterial(input));
 }
 
 export function solve(request: SolveRequest): TaskOutcome<SolveResponse> {

@@ -45,7 +45,7 @@ function fromComputeError(error: ComputeError): Refusal {
     case 'refused':
       return invalid(error.issues.length > 0 ? error.issues : [{ path: '', message: error.message }]);
     case 'timeout':
-      return invalid([{ path: 'cases', message: 'takes too long for one request: start a run instead' }]);
+      return invalid([{ path: '', message: error.message }]);
     case 'closed':
     case 'cancelled':
       return unavailable('The server is stopping. Try again shortly.');

@@ -1,5 +1,6 @@
 import type { Dependencies, Jobs } from '../dependencies.ts';
 import { ComputeHost } from './computeHost.ts';
+import { ImportReader } from './importReader.ts';
 import { RunChannel } from './runChannel.ts';
 import { RunQueue } from './runQueue.ts';
 import { Sweeper } from './sweeper.ts';
@@ -7,7 +8,7 @@ import { Sweeper } from './sweeper.ts';
 type JobDependencies = Pick<Dependencies, 'config' | 'models' | 'materials' | 'logger' | 'pool'>;
 
 /**
- * Starts everything about runs that does not answer requests: the queue, the listener, the sweeper and, unless
+ * Starts everything that goes on beside requests: the reader of imports, the queue of runs, the listener, the sweeper and, unless
  * COMPUTE is off, the compute host of this process.
  *
  * @throws Error when the database cannot be reached or is not migrated; a database that goes away later is waited for
@@ -19,7 +20,9 @@ export async function startJobs(dependencies: JobDependencies): Promise<Jobs> {
   await queue.start();
   const channel = new RunChannel(config.databaseUrl, logger);
   await channel.start();
-  const sweeper = new Sweeper({ models, queue, logger });
+  const imports = new ImportReader({ ...dependencies, logger });
+  await imports.readLost();
+  const sweeper = new Sweeper({ models, queue, imports, logger });
   const host = config.compute ? new ComputeHost({ ...dependencies, queue, logger }, channel) : null;
   if (host) logger.info({ host: host.name }, 'Taking runs from the queue');
 
@@ -32,6 +35,7 @@ export async function startJobs(dependencies: JobDependencies): Promise<Jobs> {
         else if (notice.kind === 'stop' && notice.runId === runId) listener(null);
       }),
     partialResult: (runId) => host?.partialResult(runId) ?? null,
+    imports,
     health() {
       const computing = host ? `${host.runCount} runs on this machine` : 'other machines compute';
       return Promise.resolve(
@@ -43,6 +47,7 @@ export async function startJobs(dependencies: JobDependencies): Promise<Jobs> {
     async stop() {
       await host?.stop();
       await sweeper.stop();
+      await imports.stop();
       await channel.stop();
       await queue.stop();
     },

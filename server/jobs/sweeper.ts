@@ -4,6 +4,8 @@ import type { Logger } from 'pino';
 import { isDatabaseAway } from '../http/toRefusal.ts';
 import type { Models } from '../models/models.ts';
 import type { Run } from '../models/run.ts';
+import { expireImports } from './expireImports.ts';
+import type { ImportReader } from './importReader.ts';
 import { sendRunNotice } from './runNotices.ts';
 import type { RunQueue } from './runQueue.ts';
 
@@ -12,6 +14,8 @@ const SILENT_SECONDS = 20;
 /** A run waiting this long without an entry in the queue has lost it. */
 const LOST_ENTRY_SECONDS = 60;
 const INTERVAL_MS = 5_000;
+/** Old imports are looked for this often. */
+const EXPIRY_INTERVAL_MS = 3_600_000;
 /** How long every host gets to beat after the database came back, before silence counts. */
 const GRACE_MS = 10_000;
 /** How often hosts may die over the same run before the run is blamed. */
@@ -19,7 +23,8 @@ const MOST_ATTEMPTS = 3;
 /** Runs looked at in one go; the rest come at the next. */
 const BATCH = 100;
 
-type SweeperDependencies = { models: Models; queue: RunQueue; logger: Logger };
+type OrphanDependencies = { models: Models; queue: RunQueue; logger: Logger };
+type SweeperDependencies = OrphanDependencies & { imports: ImportReader };
 
 /**
  * Returns orphaned runs to the queue: those whose host fell silent, and those that wait without an entry in the queue.
@@ -29,7 +34,7 @@ type SweeperDependencies = { models: Models; queue: RunQueue; logger: Logger };
  * @returns how many runs went back, and how many failed
  */
 export async function sweepOrphans(
-  { models, queue, logger }: SweeperDependencies,
+  { models, queue, logger }: OrphanDependencies,
   silentSeconds = SILENT_SECONDS,
 ): Promise<{ returned: number; failed: number }> {
   return models.sequelize.transaction(async (transaction) => {
@@ -93,6 +98,7 @@ export class Sweeper {
   readonly #timer: NodeJS.Timeout;
   #sweeping: Promise<void> | null = null;
   #seenSince: number | null = null;
+  #expiredAt: number | null = null;
 
   constructor(dependencies: SweeperDependencies) {
     this.#dependencies = dependencies;
@@ -106,6 +112,12 @@ export class Sweeper {
     await this.#sweeping;
   }
 
+  async #expireNowAndThen(): Promise<void> {
+    if (this.#expiredAt !== null && performance.now() - this.#expiredAt < EXPIRY_INTERVAL_MS) return;
+    this.#expiredAt = performance.now();
+    await expireImports(this.#dependencies.models);
+  }
+
   async #sweep(): Promise<void> {
     try {
       // After the database was away every host looks silent: first give them time to say that they are not.
@@ -113,6 +125,8 @@ export class Sweeper {
       this.#seenSince ??= performance.now();
       if (performance.now() - this.#seenSince < GRACE_MS) return;
       await sweepOrphans(this.#dependencies);
+      await this.#dependencies.imports.readLost();
+      await this.#expireNowAndThen();
     } catch (error) {
       this.#seenSince = null;
       if (!isDatabaseAway(error)) this.#dependencies.logger.error({ err: error }, 'The sweeper failed');

@@ -26,11 +26,15 @@ export const materialImports: Migration = {
       error text,
       table_json jsonb,
       exported jsonb,
+      -- When a server last began to read it, and how often one has.
+      reading_at timestamptz NOT NULL DEFAULT now(),
+      attempts integer NOT NULL DEFAULT 0,
       created_at timestamptz NOT NULL DEFAULT now()
     );
     CREATE INDEX material_imports_group ON material_imports (group_id);
     CREATE INDEX material_imports_created_by ON material_imports (created_by_id);
     CREATE INDEX material_imports_age ON material_imports (created_at);
+    CREATE INDEX material_imports_unread ON material_imports (reading_at) WHERE state = 'reading';
     -- Which versions rest on an import, and which runs on a material.
     CREATE INDEX material_versions_index_import ON material_versions ((content #>> '{origin,index,importId}'));
     CREATE INDEX material_versions_voigt_import ON material_versions ((content #>> '{origin,voigt,importId}'));

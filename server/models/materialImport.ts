@@ -7,14 +7,8 @@ import type {
   ModelStatic,
   Sequelize,
 } from 'sequelize';
-import type { MaterialContent } from '../../shared/material.ts';
 import type { ImportTable, MaterialImport as PresentedImport } from '../../shared/materialImport.ts';
-
-/** What a file that Skewlight wrote says of itself. */
-export type ExportedFacts = NonNullable<PresentedImport['exported']> & {
-  notes: string[];
-  content: MaterialContent;
-};
+import type { ExportedMaterial } from '../../worker/import/exportedMaterial.ts';
 
 /** A file of constants as it came, and how it was read. Nobody changes it; what rests on it names it. */
 export interface MaterialImport extends Model<
@@ -33,7 +27,11 @@ export interface MaterialImport extends Model<
   error: CreationOptional<string | null>;
   tableJson: CreationOptional<ImportTable | null>;
   /** Set for a file that Skewlight exported. */
-  exported: CreationOptional<ExportedFacts | null>;
+  exported: CreationOptional<ExportedMaterial | null>;
+  /** When a server last began to read it. */
+  readingAt: CreationOptional<Date>;
+  /** How often one has. */
+  attempts: CreationOptional<number>;
   createdAt: CreationOptional<Date>;
 }
 
@@ -52,6 +50,8 @@ export function defineMaterialImport(sequelize: Sequelize): ModelStatic<Material
       error: DataTypes.TEXT,
       tableJson: DataTypes.JSONB,
       exported: DataTypes.JSONB,
+      readingAt: DataTypes.DATE,
+      attempts: { type: DataTypes.INTEGER, allowNull: false, defaultValue: 0 },
       createdAt: DataTypes.DATE,
     },
     {

@@ -4,7 +4,8 @@ import { Refusal } from '../errors.ts';
 import type { Actor } from './actor.ts';
 import { revokeApiToken } from './apiToken.ts';
 import { addToGroup, manageGroup, readGroup } from './group.ts';
-import { readMaterial } from './material.ts';
+import { changeMaterial, readMaterial } from './material.ts';
+import { deleteImport, readImport } from './materialImport.ts';
 import { changeMember, removeMember } from './member.ts';
 import { anyone, signedIn, signedInWithSession } from './policy.ts';
 import { changeRun, readRun } from './run.ts';
@@ -53,6 +54,18 @@ describe('what somebody outside, a viewer, an editor and an owner may', () => {
       (actor: Actor) => readMaterial.decide(actor, { groupId: null }),
       'allow allow allow allow',
     ],
+    [
+      'change a material of the group',
+      (actor: Actor) => changeMaterial.decide(actor, inGroup),
+      'hide refuse allow allow',
+    ],
+    [
+      'change a shipped material',
+      (actor: Actor) => changeMaterial.decide(actor, { groupId: null }),
+      'refuse refuse refuse refuse',
+    ],
+    ['read an import', (actor: Actor) => readImport.decide(actor, inGroup), 'hide allow allow allow'],
+    ['delete an import', (actor: Actor) => deleteImport.decide(actor, inGroup), 'hide refuse allow allow'],
     [
       'revoke their own token',
       (actor: Actor) => revokeApiToken.decide(actor, { userId: 'me' }),

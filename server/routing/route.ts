@@ -10,6 +10,8 @@ import { assertAnswer } from './assertAnswer.ts';
 import { readPathParams } from './pathParams.ts';
 import type { PathParams } from './pathParams.ts';
 import { readBody, readQuery } from './readRequest.ts';
+import { readUpload } from './readUpload.ts';
+import type { Upload, UploadedFile } from './readUpload.ts';
 import { refuseForgedRequest } from './refuseForgedRequest.ts';
 
 type Method = 'get' | 'post' | 'patch' | 'delete';
@@ -60,6 +62,8 @@ export type Route = {
   authentication: Policy<Actor | null, never>['authentication'];
   body: ZodType | null;
   query: ZodType | null;
+  /** Set where a file is taken instead of the body. */
+  upload: Upload | null;
   /** `schema` for JSON, `contentType` alone for a file or stream, neither for an empty answer. */
   answer: { status: number; schema: ZodType | null; contentType: string | null };
   handle(request: Request, response: Response, services: RouteServices): Promise<void>;
@@ -123,6 +127,53 @@ export function route<
 type AnswerOf<Given> = Given extends ZodType ? z.input<Given> : void;
 
 /**
+ * Declares a route that takes either one file as multipart/form-data or a JSON body, and answers JSON. Neither is
+ * looked at before the asker is known to be allowed.
+ */
+export function uploadRoute<
+  Path extends string,
+  Who extends Actor | null,
+  Answer extends ZodType,
+  Body extends ZodType,
+  Subject = null,
+>(
+  declaration: Omit<Declaration<Path, undefined, undefined, Who, Subject>, 'body'> & {
+    upload: Upload;
+    body: Body;
+    answer: { status: number; schema: Answer };
+    handler: (
+      context: Omit<RouteContext<Path, undefined, undefined, Who>, 'body'> & {
+        subject: Subject;
+        given: { file: UploadedFile } | { body: z.output<Body> };
+      },
+    ) => Promise<NoInfer<AnswerOf<Answer>>>;
+  },
+): Route {
+  const { upload, body, answer, handler, ...rest } = declaration;
+  return {
+    ...describe({ ...rest, body }),
+    upload,
+    answer: { ...answer, contentType: 'application/json' },
+    async handle(request, response, services) {
+      const context = await prepare<Path, undefined, undefined, Who, Subject>(
+        rest,
+        request,
+        response,
+        services,
+        upload,
+      );
+      const given = request.is('multipart/form-data')
+        ? { file: await readUpload(request, response, upload) }
+        : // Exactly what this schema puts out.
+          { body: readBody(body, request) as z.output<Body> };
+      const result = await handler({ ...context, given });
+      if (services.dependencies.config.checkAnswers) assertAnswer(answer.schema, result);
+      response.status(answer.status).json(result);
+    },
+  };
+}
+
+/**
  * Declares a route whose handler writes the response itself: files, server-sent events. Everything before the
  * handler is as in `route`.
  */
@@ -148,13 +199,14 @@ export function streamRoute<
   };
 }
 
-function describe<
-  Path extends string,
-  Body extends Schema,
-  Query extends Schema,
-  Who extends Actor | null,
-  Subject,
->(declaration: Declaration<Path, Body, Query, Who, Subject>): Omit<Route, 'answer' | 'handle'> {
+function describe<Who extends Actor | null, Subject>(declaration: {
+  method: Method;
+  path: string;
+  summary: string;
+  policy: Policy<Who, Subject>;
+  body?: Schema;
+  query?: Schema;
+}): Omit<Route, 'answer' | 'handle'> {
   const { method, path, summary, policy, body, query } = declaration;
   return {
     method,
@@ -164,6 +216,7 @@ function describe<
     authentication: policy.authentication,
     body: body ?? null,
     query: query ?? null,
+    upload: null,
   };
 }
 
@@ -178,10 +231,11 @@ async function prepare<
   request: Request,
   response: Response,
   { dependencies, authenticate }: RouteServices,
+  upload: Upload | null = null,
 ): Promise<RouteContext<Path, Output<Body>, Output<Query>, Who> & { subject: Subject }> {
   const { policy, noun = 'thing' } = declaration;
   const actor = policy.admit(policy.authentication === 'none' ? null : await authenticate(request, response));
-  refuseForgedRequest(request, dependencies.publicUrl());
+  refuseForgedRequest(request, dependencies.publicUrl(), upload !== null);
   const context = {
     dependencies,
     log: request.log,
@@ -199,7 +253,9 @@ async function prepare<
   const subject = loaded as Subject;
   const decision = policy.decide(actor, subject);
   if (decision === 'hide') throw notFound(noun);
-  if (decision === 'refuse')
-    throw forbidden(`This needs the right of: ${policy.who}. Ask an owner of the group.`);
+  if (decision === 'refuse') {
+    const remedy = policy.remedy?.(subject) ?? 'Ask an owner of the group.';
+    throw forbidden(`This needs the right of: ${policy.who}. ${remedy}`);
+  }
   return { ...context, subject };
 }

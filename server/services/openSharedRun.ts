@@ -1,7 +1,7 @@
 import { Op } from 'sequelize';
 import type { MediumInput } from '../../shared/medium.ts';
 import type { StackDocument } from '../../shared/stack.ts';
-import { ResolutionError, resolveCase } from '../../worker/dispersion/resolveCase.ts';
+import { ResolutionError } from '../../worker/dispersion/resolveCase.ts';
 import type { ResolvableMaterial } from '../../worker/dispersion/resolveCase.ts';
 import { materialKey } from '../../worker/sweep/sweepInput.ts';
 import { conflict } from '../errors.ts';
@@ -9,7 +9,8 @@ import type { AppDependencies } from '../dependencies.ts';
 import type { Run } from '../models/run.ts';
 import { recordActivity } from './recordActivity.ts';
 import { loadRunMaterials } from './runMaterials.ts';
-import { mapNamedMaterials } from './runMedia.ts';
+import { resolveOneSafely } from './resolveSafely.ts';
+import { mapNamedMaterials, namedMaterialsOf } from './runMedia.ts';
 import type { NamesMaterial } from './runMedia.ts';
 import { createStack } from './stacks.ts';
 import type { StackWithVersion } from './stacks.ts';
@@ -24,7 +25,7 @@ type Person = { userId: string; name: string };
  * @throws Refusal 409 when such a material is not known at the wavelength of the working point
  */
 export async function openSharedRun(
-  dependencies: Pick<AppDependencies, 'models' | 'materials'>,
+  dependencies: Pick<AppDependencies, 'models' | 'materials' | 'pool'>,
   actor: Person,
   run: Run,
   groupId: string,
@@ -66,43 +67,43 @@ async function foreignMaterials(
 }
 
 async function withConstants(
-  { materials: store }: Pick<AppDependencies, 'materials'>,
+  { materials: store, pool }: Pick<AppDependencies, 'materials' | 'pool'>,
   run: Run,
   foreign: Set<string>,
 ): Promise<StackDocument> {
   const materials = await loadRunMaterials(store, run);
   const known = new Map(materials.map((material) => [materialKey(material), material]));
   const { document } = run.input;
+  const constants = new Map<NamesMaterial, Constants>();
+  for (const named of namedMaterialsOf(document)) {
+    if (!foreign.has(named.material)) continue;
+    constants.set(named, await constantsOf(pool, named, document.workingPoint.wavelengthNm, known));
+  }
   return mapNamedMaterials(document, (named) => {
-    if (!foreign.has(named.material)) return named;
+    const found = constants.get(named);
+    if (!found) return named;
     const name = materials.find(({ id }) => id === named.material)?.name;
-    const constants = constantsOf(named, document.workingPoint.wavelengthNm, known);
     // A part of a mixture carries an m and no label; a medium of the stack is the other way round.
-    return { ...constants, ...('m' in named ? { m: named.m } : { label: name }) };
+    return { ...found, ...('m' in named ? { m: named.m } : { label: name }) };
   });
 }
 
+type Constants = Omit<MediumInput, 'm'>;
+
 /** @throws Refusal 409 when the material is not known at that wavelength */
-function constantsOf(
+async function constantsOf(
+  pool: AppDependencies['pool'],
   { material, version, assumeConstant }: NamesMaterial,
   wavelengthNm: number,
   known: ReadonlyMap<string, ResolvableMaterial>,
-): Pick<MediumInput, 'index' | 'voigt'> {
+): Promise<Constants> {
   const vacuum = { index: 1 };
+  // With m the Voigt constant is put in too.
+  const substrate = { material, version, assumeConstant, m: [0, 0, 1] as [number, number, number] };
+  const one = { wavelengthNm, angleDeg: 0, incident: vacuum, layers: [], substrate };
   try {
-    const { substrate } = resolveCase(
-      {
-        wavelengthNm,
-        angleDeg: 0,
-        incident: vacuum,
-        layers: [],
-        // With m the Voigt constant is put in too.
-        substrate: { material, version, assumeConstant, m: [0, 0, 1] },
-      },
-      known,
-    );
-    const { index, voigt } = substrate;
-    return { index, ...(voigt !== undefined && { voigt }) };
+    const { m: _m, ...constants } = (await resolveOneSafely(pool, one, known)).substrate;
+    return constants;
   } catch (error) {
     if (!(error instanceof ResolutionError)) throw error;
     throw conflict(`This run uses materials of its own group, which cannot be taken along: ${error.message}`);

@@ -1,4 +1,5 @@
 import type { ReadingName, SweepAxes, SweepAxis, UsedMaterial } from '../../shared/run.ts';
+import type { Confidence } from '../../shared/materialSource.ts';
 import type {
   StackDocument,
   StackItem,
@@ -25,6 +26,7 @@ export function runAssumptions(
     ...meanings(readings, document),
     ...geometry(document),
     ...constants(document, axes, materials),
+    ...thermalLaws(document.layers),
     'Constants of thin films differ from tabulated ones: use the numbers for planning.',
   ];
 }
@@ -165,6 +167,14 @@ function constants(document: StackDocument, axes: SweepAxes, materials: UsedMate
           `A constant of ${material.name} (${material.id}) is known at one wavelength only and was used at others as if it did not change.`,
         ]
       : []),
+    ...(['fitted', 'invented for the demo'] as const).flatMap((confidence) =>
+      constantsOf(material, confidence).map(
+        (what) => `${what} of ${material.name} (${material.id}) is ${confidence}, not measured.`,
+      ),
+    ),
+    ...(material.anisotropySource
+      ? [`${material.name} (${material.id}) is not isotropic: its crystal axes stand as its version says.`]
+      : []),
     ...(material.voigtSource?.confidence === 'from memory'
       ? [`The Voigt constant of ${material.name} (${material.id}) is from memory: verify it before use.`]
       : []),
@@ -173,6 +183,27 @@ function constants(document: StackDocument, axes: SweepAxes, materials: UsedMate
     sentences.push('Constants typed into the stack do not change with wavelength.');
   }
   return sentences;
+}
+
+function constantsOf({ indexSource, voigtSource }: UsedMaterial, confidence: Confidence): string[] {
+  return [
+    ...(indexSource.confidence === confidence ? ['The index'] : []),
+    ...(voigtSource?.confidence === confidence ? ['The Voigt constant'] : []),
+  ];
+}
+
+/** Layers whose Q stands for another temperature than the one at which it is known. */
+function thermalLaws(items: StackItem[]): string[] {
+  return items.flatMap((item) => {
+    if ('layers' in item) return thermalLaws(item.layers);
+    const { thermal, medium, note, id } = item;
+    if (!thermal) return [];
+    const { temperatureK, referenceK, curieK, a, b, citation } = thermal;
+    const name = note ?? medium.label ?? medium.material ?? id;
+    return [
+      `Layer ${name}: Q is that of ${temperatureK} K, scaled from ${referenceK} K by m(T) = (1 - (T/Tc)^${a})^${b} with Tc = ${curieK} K (${citation}).`,
+    ];
+  });
 }
 
 function hasTypedConstants(document: StackDocument): boolean {

@@ -8,8 +8,7 @@ import type { LibrarySolveCase, SolveCase } from '../../shared/solve.ts';
 import { checkSolveRequest, forEachMedium } from '../../shared/solveRules.ts';
 import { toSolveCase } from '../../shared/stackCase.ts';
 import type { StackDocument } from '../../shared/stack.ts';
-import { ResolutionError, resolveCase } from '../../worker/dispersion/resolveCase.ts';
-import type { ResolvableMaterial } from '../../worker/dispersion/resolveCase.ts';
+import { ResolutionError } from '../../worker/dispersion/resolveCase.ts';
 import { checkStackDocument } from './checkStackDocument.ts';
 import { checkSweptParts, cornersOf } from './runAxes.ts';
 import { toDocumentIssues } from './runPaths.ts';
@@ -18,6 +17,9 @@ import { toDocumentIssues } from './runPaths.ts';
  * What keeps a run from being computed, found before it waits in the queue: the rules of the solve contract on the
  * stack as it will be solved, and the reach of its materials at both ends of the axis.
  */
+
+/** Puts numbers in place of library ids. @throws ResolutionError */
+export type CaseResolver = (one: LibrarySolveCase) => Promise<SolveCase>;
 
 /** The case at one wavelength of the run: for a wavelength axis at that one, else at the working point. */
 export function runCase(document: StackDocument, wavelengthNm: number | number[]): LibrarySolveCase {
@@ -93,13 +95,15 @@ function refuseSamples(document: StackDocument): Issue[] {
 }
 
 /** Whether every material reaches over the whole axis, and what comes out may be solved. */
-export function checkRunMaterials(
+export async function checkRunMaterials(
   document: StackDocument,
   axes: SweepAxes,
-  materials: ReadonlyMap<string, ResolvableMaterial>,
-): Issue[] {
+  resolve: CaseResolver,
+): Promise<Issue[]> {
   const places = reach(document, axes);
-  const found = places.map(({ wavelengthNm }) => resolutionIssues(document, wavelengthNm, materials));
+  const found = await Promise.all(
+    places.map(({ wavelengthNm }) => resolutionIssues(document, wavelengthNm, resolve)),
+  );
   const everywhere = (message: string) =>
     found.every((issues) => issues.some((issue) => issue.message === message));
   const issues = found.flatMap((some, index) =>
@@ -116,14 +120,14 @@ export function checkRunMaterials(
   });
 }
 
-function resolutionIssues(
+async function resolutionIssues(
   document: StackDocument,
   wavelengthNm: number,
-  materials: ReadonlyMap<string, ResolvableMaterial>,
-): Issue[] {
+  resolve: CaseResolver,
+): Promise<Issue[]> {
   let resolved: SolveCase;
   try {
-    resolved = resolveCase(runCase(document, wavelengthNm), materials);
+    resolved = await resolve(runCase(document, wavelengthNm));
   } catch (error) {
     if (error instanceof ResolutionError) return toDocumentIssues(error.issues, document);
     throw error;

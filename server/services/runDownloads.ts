@@ -1,3 +1,4 @@
+import type { MaterialSource } from '../../shared/materialSource.ts';
 import { readingDefinitions } from '../../shared/readings.ts';
 import { axisUnitOf, describeResult, encodeResultHeader } from '../../shared/resultFormat.ts';
 import type { ResultHeader } from '../../shared/resultFormat.ts';
@@ -57,7 +58,7 @@ function bytesOf(values: Float64Array): Uint8Array {
 }
 
 /**
- * The chosen readings as CSV (RFC 4180): a header line with names and units, a line for each point with the values
+ * The chosen readings as CSV (RFC 4180) behind comment lines with the sources of every constant: a header line with names and units, a line for each point with the values
  * of all axes, an empty field where a reading does not exist. Numbers are written so that they read back to the same
  * double.
  */
@@ -67,6 +68,7 @@ export async function* resultCsv(result: RunResult, readings: ReadingName[]): As
     const { label, unit } = readingDefinitions[name];
     return `${label} (${unit})`;
   });
+  yield sourceLines(materials);
   yield toLine([...axisTitles(input, materials), ...names]);
   const axes = await result.readAxes();
   for (const { start, count } of stretches(result.pointCount, POINTS_AT_A_TIME)) {
@@ -74,6 +76,28 @@ export async function* resultCsv(result: RunResult, readings: ReadingName[]): As
     for (const reading of readings) columns.push(await result.readValues(reading, start, count));
     for (const rows of stretches(count, ROWS_AT_A_TIME)) yield toLines(columns, rows.start, rows.count);
   }
+}
+
+/** Where every constant comes from, a line of `# ` for each: what is computed is worth no more than they are. */
+function sourceLines(materials: Run['materials']): string {
+  const lines = materials.flatMap(({ name, id, version, indexSource, voigtSource, anisotropySource }) => {
+    const given = [
+      { of: 'n and k', source: indexSource },
+      { of: 'Q', source: voigtSource },
+      { of: 'anisotropy', source: anisotropySource },
+    ];
+    return given.flatMap(({ of, source }) =>
+      source ? [`${name} (${id}, version ${version}), ${of}: ${describeSource(source)}`] : [],
+    );
+  });
+  return lines.map((line) => `# ${line.replace(/\s+/g, ' ')}\r\n`).join('');
+}
+
+function describeSource(source: MaterialSource): string {
+  const { citation, doi, licence, sample, temperature, method, confidence, caution } = source;
+  const parts = { DOI: doi, licence, sample, temperature, method, confidence, caution };
+  const said = Object.entries(parts).flatMap(([field, value]) => (value ? [`${field}: ${value}`] : []));
+  return [citation, ...said].join('; ');
 }
 
 /** The value of every axis at each of the points, the first axis running fastest. */

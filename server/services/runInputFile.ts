@@ -4,11 +4,12 @@ import type { SweepAxis } from '../../shared/run.ts';
 import type { LibrarySolveCase } from '../../shared/solve.ts';
 import { toSolveCase } from '../../shared/stackCase.ts';
 import type { StackDocument, StackItem } from '../../shared/stack.ts';
-import { resolveCase } from '../../worker/dispersion/resolveCase.ts';
 import type { ResolvableMaterial } from '../../worker/dispersion/resolveCase.ts';
 import { axisValues } from '../../shared/axisValues.ts';
 import { materialKey } from '../../worker/sweep/sweepInput.ts';
+import type { ComputePool } from '../../worker/pool.ts';
 import type { RunInput } from '../models/run.ts';
+import { resolveSafely } from './resolveSafely.ts';
 
 /** Wavelengths or angles of one case at most; fewer in a large stack, so that a case stays a few MB of text. */
 const CASE_VALUES = 10_000;
@@ -22,16 +23,19 @@ const CASES_AT_A_TIME = 200;
  * For each value of the family and of the second axis, a wavelength or an angle axis becomes one case (several where
  * it is long) and any other axis one for each of its values.
  */
-export function* runInputFile(input: RunInput, materials: ResolvableMaterial[]): Generator<string> {
+export async function* runInputFile(
+  pool: Pick<ComputePool, 'resolve'>,
+  input: RunInput,
+  materials: ResolvableMaterial[],
+): AsyncGenerator<string> {
   const known = new Map(materials.map((material) => [materialKey(material), material]));
   let separator = '';
   yield '{"cases":[';
   for (const document of rowDocuments(input)) {
     for (const values of piecesOf(input)) {
-      const cases = casesOf(document, input.axis, values).map((one) =>
-        JSON.stringify(resolveCase(withOutputs(one, input), known)),
-      );
-      yield `${separator}${cases.join(',')}`;
+      const cases = casesOf(document, input.axis, values).map((one) => withOutputs(one, input));
+      const resolved = await resolveSafely(pool, cases, known);
+      yield `${separator}${resolved.map((one) => JSON.stringify(one)).join(',')}`;
       separator = ',';
     }
   }

@@ -1,3 +1,4 @@
+import type { MaterialContent } from '../../shared/material.ts';
 import type { ReadingName, SweepAxes, UsedMaterial } from '../../shared/run.ts';
 import { pointCountOf } from '../../shared/runAxes.ts';
 import type { SolveWarning } from '../../shared/solve.ts';
@@ -8,16 +9,18 @@ import {
   quadraticRangeNm,
   voigtRangeNm,
 } from '../../worker/dispersion/range.ts';
-import { ResolutionError, resolveCase } from '../../worker/dispersion/resolveCase.ts';
-import type { ResolvableMaterial } from '../../worker/dispersion/resolveCase.ts';
+import { ResolutionError } from '../../worker/dispersion/resolveCase.ts';
 import { SOLVER_VERSION } from '../../worker/optics/version.ts';
 import { solveWarnings } from '../../worker/optics/warnings.ts';
 import { axisValues } from '../../shared/axisValues.ts';
+import type { Dependencies } from '../dependencies.ts';
 import { invalid } from '../errors.ts';
 import type { Run, RunInput } from '../models/run.ts';
-import type { LoadedMaterial, MaterialStore } from './materialStore.ts';
+import type { LoadedMaterial } from './materialStore.ts';
+import { resolveOneSafely } from './resolveSafely.ts';
 import { runAssumptions } from './runAssumptions.ts';
 import { checkRunDocument, checkRunMaterials, runCase, wavelengthAxisOf } from './runCases.ts';
+import type { CaseResolver } from './runCases.ts';
 import { hashRunInput } from './runInputHash.ts';
 import { mapNamedMaterials, namedMaterialsOf } from './runMedia.ts';
 import { documentPath, toDocumentIssues } from './runPaths.ts';
@@ -36,7 +39,7 @@ const WARNING_POINTS = 21;
  * @throws Refusal 422 with everything that keeps it from being computed
  */
 export async function takeRunSnapshot(
-  store: MaterialStore,
+  { materials: store, pool }: Pick<Dependencies, 'materials' | 'pool'>,
   groupId: string,
   wanted: SweepAxes & { document: StackDocument; readings: ReadingName[] },
 ): Promise<RunSnapshot> {
@@ -46,7 +49,8 @@ export async function takeRunSnapshot(
   if (issues.length > 0) throw invalid(issues);
   const given = runCase(wanted.document, wanted.document.workingPoint.wavelengthNm);
   const loaded = await store.loadFor([given], [groupId]);
-  const outOfReach = checkRunMaterials(wanted.document, axes, loaded);
+  const resolve: CaseResolver = (one) => resolveOneSafely(pool, one, loaded);
+  const outOfReach = await checkRunMaterials(wanted.document, axes, resolve);
   if (outOfReach.length > 0) throw invalid(outOfReach);
   const materials = [...loaded.values()];
   const document = withVersions(wanted.document, loaded);
@@ -61,7 +65,7 @@ export async function takeRunSnapshot(
     input,
     materials: used,
     assumptions: runAssumptions(document, axes, readings, used),
-    warnings: warningsOf(input, loaded),
+    warnings: await warningsOf(input, resolve),
     inputSha256: hashRunInput(input, materials),
     solverVersion: SOLVER_VERSION,
     total: pointCountOf(axes),
@@ -108,8 +112,24 @@ function describeUse(
     voigtSource: content.voigtSource,
     rangeNm,
     voigtRangeNm: knownVoigtNm,
+    ...(content.anisotropySource && { anisotropySource: content.anisotropySource }),
+    ...(content.origin && { origin: originSentences(content.origin) }),
     assumedConstant: stretched && isAssumedConstant(document, id, version),
   };
+}
+
+/** How imported constants were read, and what was noticed then. */
+function originSentences({ index, voigt }: NonNullable<MaterialContent['origin']>): string[] {
+  const given = [index && { what: 'n and k', ...index }, voigt && { what: 'Q', ...voigt }];
+  return given.flatMap((origin) =>
+    origin
+      ? [
+          `${origin.what} imported from ${origin.fileName} (${origin.rows} rows, SHA-256 ${origin.sha256}).`,
+          ...origin.sentences.map((sentence) => `${origin.what}: ${sentence}`),
+          ...origin.warnings.map(({ message }) => `${origin.what}, warning at import: ${message}`),
+        ]
+      : [],
+  );
 }
 
 function isAssumedConstant(document: StackDocument, id: string, version: number): boolean {
@@ -118,14 +138,14 @@ function isAssumedConstant(document: StackDocument, id: string, version: number)
   );
 }
 
-function warningsOf(input: RunInput, materials: ReadonlyMap<string, ResolvableMaterial>): SolveWarning[] {
+async function warningsOf(input: RunInput, resolve: CaseResolver): Promise<SolveWarning[]> {
   const { document } = input;
   const swept = wavelengthAxisOf(input)?.axis;
   const wavelengths = swept
     ? axisValues({ ...swept, points: Math.min(swept.points, WARNING_POINTS) })
     : document.workingPoint.wavelengthNm;
   try {
-    const warnings = solveWarnings({ cases: [resolveCase(runCase(document, wavelengths), materials)] });
+    const warnings = solveWarnings({ cases: [await resolve(runCase(document, wavelengths))] });
     return warnings.map((warning) => ({ ...warning, path: documentPath(warning.path, document) }));
   } catch (error) {
     // A formula may have no value between two wavelengths where it has one.

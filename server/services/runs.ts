@@ -21,7 +21,7 @@ import { takeRunSnapshot } from './runSnapshot.ts';
 import { loadStack } from './stacks.ts';
 
 type Person = { userId: string; name: string };
-type RunDependencies = Pick<AppDependencies, 'models' | 'materials' | 'jobs'>;
+type RunDependencies = Pick<AppDependencies, 'models' | 'materials' | 'pool' | 'jobs'>;
 export type ListedRun = { run: Run; axes: SweepAxes };
 
 /** What is stored when nobody says: everything that the stack page draws. */
@@ -80,7 +80,7 @@ function listedAxes(run: Run): SweepAxes {
  * @throws Refusal 422 when it cannot be computed, 409 when the key was used for something else
  */
 export async function createRun(
-  { models, materials, jobs }: RunDependencies,
+  { models, materials, pool, jobs }: RunDependencies,
   actor: Person,
   group: Group,
   wanted: CreateRun,
@@ -89,7 +89,7 @@ export async function createRun(
   const stack = await loadNamedStack(models, group.id, wanted.stackId, wanted.document);
   const usual = wanted.second ? USUAL_MAP_READINGS : USUAL_READINGS;
   const readings = [...new Set(wanted.readings ?? usual)];
-  const snapshot = await takeRunSnapshot(materials, group.id, { ...wanted, readings });
+  const snapshot = await takeRunSnapshot({ materials, pool }, group.id, { ...wanted, readings });
   const values = {
     ...snapshot,
     ...stack,

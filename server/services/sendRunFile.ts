@@ -7,6 +7,7 @@ import type { AppDependencies } from '../dependencies.ts';
 import type { Run } from '../models/run.ts';
 import { releaseMemory } from '../../worker/releaseMemory.ts';
 import { partialResultBytes, resultBytes, resultCsv, resultHeaderOf } from './runDownloads.ts';
+import { plainFileName } from './fileNames.ts';
 import { runInputFile } from './runInputFile.ts';
 import { loadRunMaterials } from './runMaterials.ts';
 import { RunResult, chooseReadings } from './runResult.ts';
@@ -24,7 +25,7 @@ export type RunFile =
 
 /** @throws Refusal 409 while the run has no numbers, 422 for a reading that it does not have; nothing is sent then */
 export async function sendRunFile(
-  { models, materials, jobs }: Pick<AppDependencies, 'models' | 'materials' | 'jobs'>,
+  { models, materials, pool, jobs }: Pick<AppDependencies, 'models' | 'materials' | 'pool' | 'jobs'>,
   run: Run,
   file: RunFile,
   response: Response,
@@ -44,7 +45,7 @@ export async function sendRunFile(
       if (!soFar) {
         // It may have come to its end since the row was read.
         await run.reload({ attributes: ['state'] });
-        return sendRunFile({ models, materials, jobs }, run, { ...file, kind: 'binary' }, response);
+        return sendRunFile({ models, materials, pool, jobs }, run, { ...file, kind: 'binary' }, response);
       }
       const header = { ...resultHeaderOf(run, chooseReadings(run, file.readings)), done: soFar.done() };
       announce(response, resultByteLength(header));
@@ -59,7 +60,7 @@ export async function sendRunFile(
     case 'input': {
       const constants = await loadRunMaterials(materials, run);
       response.attachment(`${fileNameOf(run)}-input.json`).type('application/json');
-      return send(runInputFile(run.input, constants), response);
+      return send(runInputFile(pool, run.input, constants), response);
     }
   }
 }
@@ -85,11 +86,4 @@ async function send(
   }
 }
 
-function fileNameOf(run: Run): string {
-  const name = run.name
-    .normalize('NFKD')
-    .replace(/[^\w.-]+/g, '-')
-    .replace(/^-+|-+$/g, '')
-    .slice(0, 60);
-  return name || 'run';
-}
+const fileNameOf = (run: Run) => plainFileName(run.name, 'run');

@@ -2,11 +2,12 @@ import type { Issue } from '../../shared/error.ts';
 import { LIMITS } from '../../shared/limits.ts';
 import type { LibrarySolveRequest, SolveCase, SolveResponse } from '../../shared/solve.ts';
 import { checkSolveRequest } from '../../shared/solveRules.ts';
-import { resolveCase, ResolutionError } from '../../worker/dispersion/resolveCase.ts';
-import type { ResolvableMaterial } from '../../worker/dispersion/resolveCase.ts';
+import { ResolutionError } from '../../worker/dispersion/resolveCase.ts';
 import type { Dependencies } from '../dependencies.ts';
 import { invalid } from '../errors.ts';
+import type { LoadedMaterial } from './materialStore.ts';
 import { namedMaterials } from './namedMaterials.ts';
+import { resolveSafely } from './resolveSafely.ts';
 
 const limits = {
   maxPoints: LIMITS.httpPoints,
@@ -26,7 +27,7 @@ export async function solve(
 ): Promise<SolveResponse> {
   refuse(checkSolveRequest(request, limits));
   const found = await materials.loadFor(request.cases, groupIds);
-  const cases = resolveCases(request, found);
+  const cases = await resolveOrRefuse(pool, request, found);
   // Again: what the library put in must keep the rules too, such as an incident medium that does not absorb.
   refuse(checkSolveRequest({ cases }, limits));
   const response = await pool.solve({ cases });
@@ -41,22 +42,15 @@ function refuse(issues: Issue[]): void {
   if (issues.length > 0) throw invalid(issues);
 }
 
-function resolveCases(
+async function resolveOrRefuse(
+  pool: Dependencies['pool'],
   { cases }: LibrarySolveRequest,
-  materials: ReadonlyMap<string, ResolvableMaterial>,
-): SolveCase[] {
-  const issues: Issue[] = [];
-  const resolved = cases.flatMap((one, position) => {
-    try {
-      return [resolveCase(one, materials)];
-    } catch (error) {
-      if (!(error instanceof ResolutionError)) throw error;
-      issues.push(
-        ...error.issues.map(({ path, message }) => ({ path: `cases[${position}].${path}`, message })),
-      );
-      return [];
-    }
-  });
-  refuse(issues);
-  return resolved;
+  materials: ReadonlyMap<string, LoadedMaterial>,
+): Promise<SolveCase[]> {
+  try {
+    return await resolveSafely(pool, cases, materials);
+  } catch (error) {
+    if (error instanceof ResolutionError) throw invalid(error.issues);
+    throw error;
+  }
 }

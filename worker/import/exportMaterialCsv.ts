@@ -1,4 +1,4 @@
-import type { MaterialContent } from '../../shared/material.ts';
+import type { Material, MaterialContent } from '../../shared/material.ts';
 import type { MaterialSource } from '../../shared/materialSource.ts';
 import { materialCurves } from '../dispersion/materialCurves.ts';
 import { DEFINITION_MARK, EXPORT_COLUMNS, EXPORT_MARK, inColumns } from './exportedMaterial.ts';
@@ -8,8 +8,13 @@ import type { ExportedMaterial } from './exportedMaterial.ts';
  * A material as a CSV file that people, spreadsheets and `readExportedMaterial` can read. Comment lines give names,
  * sources and notes in words; one of them holds, as JSON, everything that the columns do not. Tables stand in the columns
  * with all digits; of formulas and models the columns show a sampled curve, and the JSON line has the formula.
+ *
+ * @param curves of this content, where a thread has sampled it: a formula may be somebody's
  */
-export function exportMaterialCsv(material: ExportedMaterial & { version: number }): string {
+export function exportMaterialCsv(
+  material: ExportedMaterial & { version: number },
+  curves = materialCurves(material.content),
+): string {
   const { name, formula, class: kind, version, notes, content } = material;
   const definition = {
     name,
@@ -39,7 +44,7 @@ export function exportMaterialCsv(material: ExportedMaterial & { version: number
     ...sampledLines(content),
     `${DEFINITION_MARK}${JSON.stringify(definition)}`,
   ];
-  return [...header, EXPORT_COLUMNS.join(','), ...bodyLines(content), ''].join('\n');
+  return [...header, EXPORT_COLUMNS.join(','), ...bodyLines(content, curves), ''].join('\n');
 }
 
 function sourceLines(of: string, source: MaterialSource | null): string[] {
@@ -63,12 +68,9 @@ function comment(field: string, text: string): string {
   return `# ${field}: ${text.replace(/\s+/g, ' ').trim()}`;
 }
 
-function bodyLines(content: MaterialContent): string[] {
-  const isSampled =
-    content.index.kind !== 'table' || (content.voigt !== null && content.voigt.kind !== 'table');
-  const curves = isSampled ? materialCurves(content) : null;
-  const index = content.index.kind === 'table' ? content.index : curves!;
-  const voigt = content.voigt?.kind === 'table' ? content.voigt : (curves?.voigt ?? null);
+function bodyLines(content: MaterialContent, curves: Material['curves']): string[] {
+  const index = content.index.kind === 'table' ? content.index : curves;
+  const voigt = content.voigt?.kind === 'table' ? content.voigt : curves.voigt;
   const rows = new Map<number, string[]>();
   index.wavelengthsNm.forEach((nm, i) => rows.set(nm, [digits(index.n[i]!), digits(index.k[i]!), '', '']));
   voigt?.wavelengthsNm.forEach((nm, i) => {

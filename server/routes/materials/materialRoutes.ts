@@ -1,13 +1,18 @@
 import { Op } from 'sequelize';
 import { z } from 'zod';
 import { materialListSchema, materialSchema } from '../../../shared/material.ts';
-import { materialCurves } from '../../../worker/dispersion/materialCurves.ts';
+import { materialUsesSchema, materialVersionListSchema } from '../../../shared/materialEdit.ts';
+import { exportMaterialCsv } from '../../../worker/import/exportMaterialCsv.ts';
 import { notFound } from '../../errors.ts';
+import type { AppDependencies } from '../../dependencies.ts';
 import { readGroup } from '../../policies/group.ts';
 import { readMaterial as mayRead } from '../../policies/material.ts';
 import { presentMaterial, presentMaterialSummary } from '../../presenters/presentMaterial.ts';
 import type { Route } from '../../routing/route.ts';
-import { route } from '../../routing/route.ts';
+import { route, streamRoute } from '../../routing/route.ts';
+import { plainFileName } from '../../services/fileNames.ts';
+import { materialHistory } from '../../services/materialHistory.ts';
+import { materialUses } from '../../services/materialUses.ts';
 
 const listMaterials = route({
   method: 'get',
@@ -48,8 +53,61 @@ const readMaterial = route({
     const wanted = query.version ?? subject.version;
     const stored = await dependencies.materials.versionOf(subject.id, wanted);
     if (!stored) throw notFound(`version ${wanted} of ${subject.name}`);
-    return presentMaterial(subject, stored, materialCurves(stored.content));
+    return presentMaterial(subject, stored, await dependencies.pool.curves(stored.content));
   },
 });
 
-export const materialRoutes: Route[] = [listMaterials, readMaterial];
+const load = ({ dependencies, params }: { dependencies: AppDependencies; params: { materialId: string } }) =>
+  dependencies.models.Material.findByPk(params.materialId);
+
+const listVersions = route({
+  method: 'get',
+  path: '/materials/:materialId/versions',
+  summary: 'Who made which version, when, why, and what it changed; newest first.',
+  noun: 'material',
+  policy: mayRead,
+  load,
+  answer: { status: 200, schema: materialVersionListSchema },
+  handler: async ({ dependencies, subject }) => ({
+    versions: await materialHistory(dependencies.materials, subject),
+  }),
+});
+
+const listUses = route({
+  method: 'get',
+  path: '/materials/:materialId/uses',
+  summary: "The stacks, runs and mixtures of the asker's groups that use it.",
+  noun: 'material',
+  policy: mayRead,
+  load,
+  answer: { status: 200, schema: materialUsesSchema },
+  handler: ({ dependencies, actor, subject }) =>
+    materialUses(dependencies.models, subject, [...actor.roles.keys()]),
+});
+
+const exportMaterial = streamRoute({
+  method: 'get',
+  path: '/materials/:materialId/export.csv',
+  summary: 'One version as CSV with its sources, which an import reads back to the same numbers.',
+  noun: 'material',
+  policy: mayRead,
+  query: z.strictObject({ version: version.optional() }),
+  load,
+  answer: { contentType: 'text/csv' },
+  async handler({ dependencies, subject, query, response }) {
+    const wanted = query.version ?? subject.version;
+    const content = await dependencies.materials.contentOf(subject.id, wanted);
+    if (!content) throw notFound(`version ${wanted} of ${subject.name}`);
+    const { name, formula, notes } = subject;
+    // Sampled in the pool: a formula may be somebody's.
+    const curves = await dependencies.pool.curves(content);
+    const text = exportMaterialCsv(
+      { name, formula, class: subject.class, notes, content, version: wanted },
+      curves,
+    );
+    const fileName = `${plainFileName(`${formula}-${name}`, 'material')}-v${wanted}.csv`;
+    response.attachment(fileName).type('text/csv; charset=utf-8').send(text);
+  },
+});
+
+export const materialRoutes: Route[] = [listMaterials, readMaterial, listVersions, listUses, exportMaterial];

@@ -1,15 +1,13 @@
 import { createRunSchema, runListSchema, runProgressSchema, runSchema } from '../../../shared/run.ts';
 import type { AppDependencies } from '../../dependencies.ts';
-import { invalid } from '../../errors.ts';
 import { addToGroup, readGroup } from '../../policies/group.ts';
 import { changeRun, readRun as mayRead } from '../../policies/run.ts';
 import { presentRun, presentRunProgress, presentRunSummary } from '../../presenters/presentRun.ts';
 import { isRowId } from '../../routing/pathParams.ts';
+import { readIdempotencyKey } from '../../routing/readIdempotencyKey.ts';
 import type { Route } from '../../routing/route.ts';
 import { route } from '../../routing/route.ts';
 import { cancelRun, createRun, deleteRun, listRuns, loadRun, rerunRun } from '../../services/runs.ts';
-
-const LONGEST_KEY = 200;
 
 const load = ({ dependencies, params }: { dependencies: AppDependencies; params: { runId: string } }) =>
   loadRun(dependencies.models, params.runId);
@@ -40,10 +38,7 @@ const createRunInGroup = route({
     isRowId(body.groupId) ? dependencies.models.Group.findByPk(body.groupId) : null,
   answer: { status: 201, schema: runSchema },
   async handler({ dependencies, actor, subject, body, request }) {
-    const key = request.get('idempotency-key') ?? null;
-    if (key !== null && key.length > LONGEST_KEY) {
-      throw invalid([{ path: 'Idempotency-Key', message: `must have at most ${LONGEST_KEY} characters` }]);
-    }
+    const key = readIdempotencyKey(request);
     return presentRun(await createRun(dependencies, actor, subject, body, key));
   },
 });
