@@ -4,6 +4,7 @@ import path from 'node:path';
 import { setTimeout as sleep } from 'node:timers/promises';
 import { pathToFileURL } from 'node:url';
 import { afterAll, beforeAll, describe, expect, it } from 'vitest';
+import type { MaterialContent } from '../shared/material.ts';
 import type { SweepAxis } from '../shared/run.ts';
 import type { SolveRequest } from '../shared/solve.ts';
 import type { StackDocument, StackMedium } from '../shared/stack.ts';
@@ -61,6 +62,16 @@ const endless: SweepInput = {
     layers: [...document.layers, { id: 'underlayer', medium: mixed, thicknessNm: 40 }],
   },
 };
+
+const madeUp = {
+  citation: 'made up for this test',
+  doi: null,
+  licence: null,
+  sample: null,
+  method: null,
+  confidence: 'invented for the demo',
+  caution: null,
+} as const;
 
 function failureOf(work: Promise<unknown>): Promise<ComputeError> {
   return work.then(
@@ -152,16 +163,66 @@ describe('the pool', () => {
     await long;
   });
 
+  it('reads a table, tells how far it is, and converts it', async () => {
+    const rows = Array.from({ length: 60_000 }, (_, i) => `${400 + i / 100};${2 + i / 1e5};3`);
+    const bytes = new TextEncoder().encode(`nm;n;k\n${rows.join('\n')}\n`);
+    const seen: number[] = [];
+    const { table, exported } = await pool.readTable(bytes, { onProgress: (part) => seen.push(part) });
+    expect([table.rowCount, exported]).toEqual([60_000, null]);
+    expect(seen.length).toBeGreaterThan(1);
+    expect(seen).toEqual([...seen].sort((a, b) => a - b));
+    expect(seen.at(-1)).toBe(1);
+    const { index } = await pool.convertTable(bytes, table.suggestion!, null);
+    expect([index!.wavelengthsNm[100], index!.n[100], index!.k[100]]).toEqual([401, 2.001, 3]);
+  });
+
+  it('refuses what is no table, and a mapping that does not fit, with their own words', async () => {
+    const bytes = new TextEncoder().encode('nm,n,k\n400,1,-2\n');
+    const refused = await failureOf(pool.readTable(bytes.slice(0, 6)));
+    expect([refused.failure, refused.message]).toEqual([
+      'refused',
+      expect.stringMatching(/No row of numbers/),
+    ]);
+    const { table } = await pool.readTable(bytes);
+    const failure = await failureOf(pool.convertTable(bytes, table.suggestion!, null));
+    expect(failure.failure).toBe('refused');
+    expect(failure.issues.map(({ path }) => path)).toEqual(['habits.time']);
+  });
+
+  it('stops reading when it is cancelled, and reads the next', async () => {
+    const bytes = new TextEncoder().encode('400,1,2\n'.repeat(190_000));
+    const cancelling = new AbortController();
+    const failure = failureOf(pool.readTable(bytes, { signal: cancelling.signal }));
+    await sleep(20);
+    cancelling.abort();
+    expect((await failure).failure).toBe('cancelled');
+    expect((await pool.readTable(new TextEncoder().encode('400,1\n500,2'))).table.rowCount).toBe(2);
+  });
+
+  it('gives curves, issues and resolved cases of constants, and says in which case a material is missing', async () => {
+    const content: MaterialContent = {
+      index: { kind: 'table', wavelengthsNm: [400, 800], n: [1, 3], k: [0, 0] },
+      indexSource: madeUp,
+      voigt: null,
+      voigtSource: null,
+    };
+    expect((await pool.curves(content)).n[0]).toBe(1);
+    expect(await pool.checkContent(content)).toEqual([]);
+    const falling = { ...content, index: { ...content.index, wavelengthsNm: [800, 400] } } as MaterialContent;
+    expect((await pool.checkContent(falling)).map(({ path }) => path)).toEqual(['index.wavelengthsNm[1]']);
+    const materials = new Map([['x@1', { id: 'x', version: 1, name: 'Testium', content }]]);
+    const caseOf = (material: string) => ({
+      ...request.cases[0]!,
+      wavelengthNm: 600,
+      substrate: { material },
+    });
+    const [resolved] = await pool.resolve([caseOf('x')], materials);
+    expect(resolved!.substrate.index).toEqual([3, 0]);
+    const failure = await failureOf(pool.resolve([caseOf('x'), caseOf('y')], materials));
+    expect(failure.issues.map(({ path }) => path)).toEqual(['cases[1].substrate.material']);
+  });
+
   it('says which material does not reach to a wavelength of the sweep', async () => {
-    const source = {
-      citation: 'made up for this test',
-      doi: null,
-      licence: null,
-      sample: null,
-      method: null,
-      confidence: 'invented for the demo',
-      caution: null,
-    } as const;
     const film = { id: 'film', medium: { material: 'x', version: 1 }, thicknessNm: 1 };
     const failure = await failureOf(
       pool.sweep({
@@ -175,7 +236,7 @@ describe('the pool', () => {
             name: 'Testium',
             content: {
               index: { kind: 'table', wavelengthsNm: [400, 600, 800], n: [1, 2, 3], k: [0, 0, 0] },
-              indexSource: source,
+              indexSource: madeUp,
               voigt: null,
               voigtSource: null,
             },

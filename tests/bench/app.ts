@@ -7,18 +7,20 @@ import type { CreateRun } from '../../shared/run.ts';
 import { projectRoot } from '../../server/projectRoot.ts';
 import { readDemoData } from '../../server/seeders/demoData.ts';
 import { startBenchServer } from './benchServer.ts';
+import { timeReadTable } from './readTable.ts';
 import { User } from './user.ts';
 import { mapRun, stripRequest, sweepRun } from './workloads.ts';
 
 /**
  * `npm run bench:app`: what a person waits for, against a real server on a throw-away database (of the PostgreSQL at
  * DATABASE_URL or TEST_DATABASE_URL, else the project's own). The way of a run from its request to its stored numbers,
- * and the readings strip under four parallel users. `--json` prints one JSON object.
+ * the readings strip under four parallel users, and the reading of a large table of constants. `--json` prints one JSON object.
  */
 const { values: options } = parseArgs({ options: { json: { type: 'boolean', default: false } } });
 
 const SWEEPS = 7;
 const MAPS = 3;
+const TABLES = 5;
 const USERS = 4;
 const STRIP_REQUESTS = 100;
 
@@ -36,6 +38,7 @@ async function measure(databaseUrl: string): Promise<{ rows: Row[]; peakMemoryMb
       ...(await timeStrip(users)),
       ...(await timeRuns(first!, 'sweep of 2,000 points, 10 layers', sweepRun, SWEEPS)),
       ...(await timeRuns(first!, 'map of 1,000 x 1,000 points', mapRun, MAPS)),
+      rowOf('reading a table of 100,000 rows', await timeReadTable(TABLES)),
     ];
     return { rows, peakMemoryMb: server.peakMemoryMb() };
   } finally {

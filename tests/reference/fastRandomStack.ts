@@ -3,7 +3,7 @@ import type { MediumInput } from '../../shared/medium.ts';
 import type { LayerInput, SolveCase, StackItemInput } from '../../shared/solve.ts';
 
 /** Random numbers that are the same in every run (mulberry32, public domain, T. Ettinger). */
-function randomNumbers(seed: number): () => number {
+export function randomNumbers(seed: number): () => number {
   let state = seed;
   return () => {
     state = (state + 0x6d2b79f5) | 0;
