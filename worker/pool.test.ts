@@ -213,7 +213,7 @@ describe('the pool', () => {
     const materials = new Map([['x@1', { id: 'x', version: 1, name: 'Testium', content }]]);
     const caseOf = (material: string) => ({
       ...request.cases[0]!,
-      wavelengthNm: 600,
+      wavelengthNm: 800,
       substrate: { material },
     });
     const [resolved] = await pool.resolve([caseOf('x')], materials);
