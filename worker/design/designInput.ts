@@ -15,7 +15,9 @@ export type DesignStep =
       candidateId: string;
       samples: SharedArrayBuffer;
       bare: (number | null)[];
-    };
+    }
+  | { kind: 'tolerance samples'; from: number; to: number; samples: SharedArrayBuffer }
+  | { kind: 'tolerance outcome'; samples: SharedArrayBuffer };
 
 /** What a thread needs for one step; the buffers are shared, not copied. */
 export type DesignTask = {

@@ -2,16 +2,21 @@ import type { CapDesign } from '../../shared/capDesign.ts';
 import { CapCurves, capThicknesses } from './cap/capCurves.ts';
 import { capOutcome } from './cap/capOutcome.ts';
 import { CapSamples } from './cap/capSamples.ts';
+import type { ToleranceDesign } from '../../shared/toleranceDesign.ts';
 import type { DesignStep, DesignTask, DesignWork } from './designInput.ts';
+import type { Evaluation } from './optimise/film.ts';
+import { OptimiseFilms } from './optimise/optimiseFilms.ts';
+import { toleranceOutcome } from './tolerance/toleranceOutcome.ts';
+import { ToleranceFilms, ToleranceSamples } from './tolerance/toleranceSamples.ts';
 
 /** What a thread keeps of the calculation that it last took a step of. */
-type Kept = { designId: number; work: DesignWork; curves: CapCurves | null };
+type Kept = { designId: number; work: DesignWork; curves: CapCurves | null; films: ToleranceFilms | null };
 
 let kept: Kept | null = null;
 
 /** One step of a design calculation; what it answers depends on the kind of step. */
 export function designStep({ designId, work, flags, step }: DesignTask): unknown {
-  if (kept?.designId !== designId) kept = { designId, work: readWork(work), curves: null };
+  if (kept?.designId !== designId) kept = { designId, work: readWork(work), curves: null, films: null };
   return takeStep(kept, step, new Int32Array(flags));
 }
 
@@ -32,6 +37,31 @@ function takeStep(mine: Kept, step: DesignStep, flags: Int32Array): unknown {
       const nm = capThicknesses(design);
       return capOutcome(design, curves, nm, samplesOf(design, nm, step.samples), step.bare);
     }
+    case 'optimise films': {
+      const evaluations: Evaluation[] = [];
+      for (const nm of step.nm) {
+        if (Atomics.load(flags, 1) !== 0) return null;
+        evaluations.push(filmsOf(mine).evaluate(nm));
+        Atomics.add(flags, 0, 1);
+      }
+      return evaluations;
+    }
+    case 'optimise readings':
+      return filmsOf(mine).readings(step.nm);
+    case 'tolerance samples': {
+      const design = toleranceOf(mine.work);
+      mine.films ??= new ToleranceFilms(design, mine.work.materials);
+      const samples = new ToleranceSamples(design, step.samples);
+      for (let sample = step.from; sample < step.to && Atomics.load(flags, 1) === 0; sample += 1) {
+        mine.films.solve(sample).forEach((readings, point) => samples.set(point, sample, readings));
+        Atomics.add(flags, 0, 1);
+      }
+      return null;
+    }
+    case 'tolerance outcome': {
+      const design = toleranceOf(mine.work);
+      return toleranceOutcome(design, mine.work.materials, new ToleranceSamples(design, step.samples));
+    }
   }
 }
 
@@ -40,6 +70,18 @@ function capCurvesOf(mine: Kept, candidateId: string): { design: CapDesign; curv
   if (design.kind !== 'cap') throw new Error(`a cap step of a calculation of kind ${design.kind}`);
   if (mine.curves?.candidate.id !== candidateId) mine.curves = new CapCurves(design, candidateId, materials);
   return { design, curves: mine.curves };
+}
+
+function toleranceOf({ design }: DesignWork): ToleranceDesign {
+  if (design.kind !== 'tolerance')
+    throw new Error(`a tolerance step of a calculation of kind ${design.kind}`);
+  return design;
+}
+
+function filmsOf(mine: Kept): OptimiseFilms {
+  const { design, materials } = mine.work;
+  if (design.kind !== 'optimise') throw new Error(`an optimise step of a calculation of kind ${design.kind}`);
+  return (mine.films ??= new OptimiseFilms(design, materials));
 }
 
 function samplesOf(design: CapDesign, nm: number[], buffer: SharedArrayBuffer): CapSamples {

@@ -65,12 +65,13 @@ export class FilmErrors {
       ]),
     );
     if (!this.#scalesConstants) return { thickness, constants: null };
-    const constants = new Map(
+    const constants = new Map<string, ConstantFactors>(
       this.#materials.map(({ key, index, voigt }) => {
         // A negative n or k means nothing; errors so large are cut off at a tenth.
         const n = Math.max(0.1, 1 + index * nextConstant());
         const k = Math.max(0.1, 1 + index * nextConstant());
-        return [key, { n, k, q: 1 + voigt * nextConstant() }];
+        const q = 1 + voigt * nextConstant();
+        return [key, { n, k, q: [q, q] }];
       }),
     );
     return { thickness, constants };

@@ -73,7 +73,7 @@ describe('a film solved over and over', () => {
     const fast = solver.curve(change, { layerId: 'cap', nm });
     const key = JSON.stringify({ index: [2.25, 4.07], voigt: [0.03, 0.01] });
     const rebuilt = solver.curve(
-      { ...change, constants: new Map([[key, { n: 1, k: 1, q: 1 }]]) },
+      { ...change, constants: new Map([[key, { n: 1, k: 1, q: [1, 1] }]]) },
       { layerId: 'cap', nm },
     );
     nm.forEach((thickness, i) => {
@@ -94,7 +94,7 @@ describe('a film solved over and over', () => {
     const solver = new FilmSolver(buildFilm(), new Map(), plain);
     const scaled = solver.readings({
       thicknessNm: new Map(),
-      constants: new Map([[key, { n: 1.1, k: 0.9, q: 2 }]]),
+      constants: new Map([[key, { n: 1.1, k: 0.9, q: [2, 2] }]]),
     });
     const film = buildFilm();
     film.layers[1] = {

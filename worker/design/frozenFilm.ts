@@ -7,8 +7,8 @@ import { toSolveCase } from '../../shared/stackCase.ts';
 import type { ResolvableMaterial } from '../dispersion/resolveCase.ts';
 import { resolveCase } from '../dispersion/resolveCase.ts';
 
-/** Factors on the constants of one material. */
-export type ConstantFactors = { n: number; k: number; q: number };
+/** Factors on the constants of one material; on Re Q and Im Q each. */
+export type ConstantFactors = { n: number; k: number; q: [re: number, im: number] };
 
 /**
  * The document with numbers in place of library materials, for its own working point. Media can then be changed
@@ -100,7 +100,7 @@ export function scaleConstants(
       index: scaleSamples(medium.index, ([n, k]) => [n * factor.n, k * factor.k]),
       ...(medium.voigt === undefined
         ? {}
-        : { voigt: scaleSamples(medium.voigt, ([re, im]) => [re * factor.q, im * factor.q]) }),
+        : { voigt: scaleSamples(medium.voigt, ([re, im]) => [re * factor.q[0], im * factor.q[1]]) }),
     };
   });
 }

@@ -3,6 +3,9 @@ import { capTotal, runCap } from './cap/runCap.ts';
 import type { DesignWork } from './designInput.ts';
 import type { DesignOptions, SubmitStep } from './designThreads.ts';
 import { DesignThreads } from './designThreads.ts';
+import { optimiseTotal } from './optimise/effort.ts';
+import { runOptimise } from './optimise/runOptimise.ts';
+import { runTolerance } from './tolerance/runTolerance.ts';
 
 export type DesignOutcome = { result: DesignResult; seconds: number };
 
@@ -11,6 +14,10 @@ export function designTotal(design: DesignInput): number {
   switch (design.kind) {
     case 'cap':
       return capTotal(design);
+    case 'optimise':
+      return optimiseTotal(design);
+    case 'tolerance':
+      return design.tolerance.samples;
     default:
       throw new Error(`not yet: ${design.kind}`);
   }
@@ -30,10 +37,14 @@ export async function runDesign(
   const started = performance.now();
   const threads = new DesignThreads(work, count, submit);
   const { design } = work;
-  const result = await threads.watch(designTotal(design), options, () => {
+  const result = await threads.watch<DesignResult>(designTotal(design), options, () => {
     switch (design.kind) {
       case 'cap':
         return runCap(design, work, threads);
+      case 'optimise':
+        return runOptimise(design, threads, options.onPartial);
+      case 'tolerance':
+        return runTolerance(design, threads);
       default:
         throw new Error(`not yet: ${design.kind}`);
     }

@@ -1,0 +1,23 @@
+import type { ToleranceDesign, ToleranceResult } from '../../../shared/toleranceDesign.ts';
+import type { DesignThreads } from '../designThreads.ts';
+import { piecesOf } from '../designThreads.ts';
+import { ToleranceSamples } from './toleranceSamples.ts';
+
+const SAMPLES_PER_STEP = 100;
+
+/** The samples over all threads, then what comes of them. */
+export async function runTolerance(
+  design: ToleranceDesign,
+  threads: DesignThreads,
+): Promise<ToleranceResult> {
+  const { buffer } = new ToleranceSamples(design);
+  await threads.runAll(
+    piecesOf(design.tolerance.samples, SAMPLES_PER_STEP).map((piece) => ({
+      kind: 'tolerance samples',
+      ...piece,
+      samples: buffer,
+    })),
+  );
+  // Given by designTask.ts for this kind of step.
+  return (await threads.run({ kind: 'tolerance outcome', samples: buffer })) as ToleranceResult;
+}

@@ -1,0 +1,173 @@
+import type { DesignPoint, PointReadings } from '../../../shared/designPoint.ts';
+import { materialKeyOf } from '../../../shared/designPoint.ts';
+import { toComplex } from '../../../shared/complex.ts';
+import type { StackDocument, StackMedium } from '../../../shared/stack.ts';
+import type { Sensitivity, SensitivityAnswer } from '../../../shared/toleranceDesign.ts';
+import type { ResolvableMaterial } from '../../dispersion/resolveCase.ts';
+import { materialKey } from '../../sweep/sweepInput.ts';
+import { drawnLayers } from '../expandBlocks.ts';
+import type { FilmChange } from '../filmSolver.ts';
+import { FilmSolver, UNCHANGED } from '../filmSolver.ts';
+import type { ConstantFactors } from '../frozenFilm.ts';
+import { freezeDocument } from '../frozenFilm.ts';
+
+/** Step of a thickness, nm: the readings bend over nanometres, rounding is at 1e-13. */
+const STEP_NM = 1e-3;
+/** Relative step of a constant. */
+const STEP_FACTOR = 1e-4;
+
+const names = ['rotationDeg', 'ellipticityDeg', 'amplitude', 'contrast', 'reflectance'] as const;
+type Derivative = Sensitivity['derivative'];
+
+/**
+ * How much every reading changes with every thickness and constant: fourth-order central differences
+ * (f(-2h) - 8 f(-h) + 8 f(h) - f(2h)) / 12h, Abramowitz and Stegun, table 25.2; at a thickness near 0 a one-sided
+ * difference of second order.
+ *
+ * @param materials by id and version, all that the document names
+ * @throws ResolutionError when a material is not known at a working point
+ */
+export function sensitivities(
+  document: StackDocument,
+  points: readonly DesignPoint[],
+  materials: readonly ResolvableMaterial[],
+): SensitivityAnswer {
+  const known = new Map(materials.map((material) => [materialKey(material), material]));
+  const names = new Map(materials.map(({ id, name }) => [id, name]));
+  const answer: SensitivityAnswer = { readings: [], sensitivities: [] };
+  for (const { id: pointId, workingPoint } of points) {
+    const film = { ...document, workingPoint };
+    const solver = new FilmSolver(film, known, { contrast: true, ceiling: true });
+    answer.readings.push({ pointId, readings: solver.readings(UNCHANGED) });
+    answer.sensitivities.push(
+      ...thicknessSensitivities(film, solver, names).map((one) => ({ pointId, ...one })),
+      ...constantSensitivities(freezeDocument(film, known), film, solver, names).map((one) => ({
+        pointId,
+        ...one,
+      })),
+    );
+  }
+  return answer;
+}
+
+type OneSensitivity = Omit<Sensitivity, 'pointId'>;
+
+function thicknessSensitivities(
+  film: StackDocument,
+  solver: FilmSolver,
+  names: ReadonlyMap<string, string>,
+): OneSensitivity[] {
+  return drawnLayers(film.layers).map((layer) => {
+    const at = (shiftNm: number) =>
+      solver.readings({
+        thicknessNm: new Map([[layer.id, layer.thicknessNm + shiftNm]]),
+        constants: null,
+      });
+    return {
+      parameter: 'thickness',
+      of: layer.id,
+      label: `thickness of ${layer.note ? `${layer.note} ` : ''}${mediumLabel(layer.medium, names)}`,
+      value: layer.thicknessNm,
+      derivative: layer.thicknessNm < 2 * STEP_NM ? forward(at, STEP_NM) : central(at, STEP_NM),
+    };
+  });
+}
+
+/** Of every material once, however many layers it has; typed tensors and mixtures have no n, k and Q of their own. */
+function constantSensitivities(
+  frozen: StackDocument,
+  film: StackDocument,
+  solver: FilmSolver,
+  names: ReadonlyMap<string, string>,
+): OneSensitivity[] {
+  const media = new Map<string, { frozen: StackMedium; drawn: StackMedium }>();
+  const drawn = [...drawnLayers(film.layers).map(({ medium }) => medium), film.substrate];
+  const solved = [...drawnLayers(frozen.layers).map(({ medium }) => medium), frozen.substrate];
+  drawn.forEach((medium, position) => {
+    const key = materialKeyOf(medium);
+    const before = media.get(key);
+    const now = { frozen: solved[position]!, drawn: medium };
+    // The layer that is magnetized has Q, another of the same material may not.
+    if (!before || before.frozen.voigt === undefined) media.set(key, now);
+  });
+  return [...media].flatMap(([of, { frozen: medium, drawn: asDrawn }]) => {
+    const label = mediumLabel(asDrawn, names);
+    const at = (change: (step: number) => ConstantFactors) => (step: number) => {
+      const film: FilmChange = { thicknessNm: new Map(), constants: new Map([[of, change(step)]]) };
+      return solver.readings(film);
+    };
+    return parametersOf(medium).map(({ parameter, value, change }): OneSensitivity => {
+      const perFactor = central(at(change), STEP_FACTOR);
+      return { parameter, of, label: `${parameter} of ${label}`, value, derivative: over(perFactor, value) };
+    });
+  });
+}
+
+type Parameter = {
+  parameter: 'n' | 'k' | 'Re Q' | 'Im Q';
+  value: number;
+  change: (step: number) => ConstantFactors;
+};
+
+/** The constants of a medium given as one index; a k of 0 cannot be scaled and has no derivative here. */
+function parametersOf({ index, voigt }: StackMedium): Parameter[] {
+  if (index === undefined || (typeof index === 'object' && 'samples' in index)) return [];
+  const [n, k] = toComplex(index);
+  const same: ConstantFactors = { n: 1, k: 1, q: [1, 1] };
+  const parameters: Parameter[] = [
+    { parameter: 'n', value: n, change: (step) => ({ ...same, n: 1 + step }) },
+    { parameter: 'k', value: k, change: (step) => ({ ...same, k: 1 + step }) },
+  ];
+  if (voigt !== undefined && !(typeof voigt === 'object' && 'samples' in voigt)) {
+    const [re, im] = toComplex(voigt);
+    parameters.push(
+      { parameter: 'Re Q', value: re, change: (step) => ({ ...same, q: [1 + step, 1] }) },
+      { parameter: 'Im Q', value: im, change: (step) => ({ ...same, q: [1, 1 + step] }) },
+    );
+  }
+  return parameters.filter(({ value }) => value !== 0);
+}
+
+function central(at: (step: number) => PointReadings, h: number): Derivative {
+  const values = [-2, -1, 1, 2].map((steps) => at(steps * h));
+  return combine(values, [1, -8, 8, -1], 12 * h);
+}
+
+function forward(at: (step: number) => PointReadings, h: number): Derivative {
+  return combine([at(0), at(h), at(2 * h)], [-3, 4, -1], 2 * h);
+}
+
+function combine(values: PointReadings[], weights: number[], divisor: number): Derivative {
+  const entry = (name: (typeof names)[number]) => {
+    let sum = 0;
+    for (const [i, readings] of values.entries()) {
+      const value = readings[name];
+      if (value === null) return null;
+      sum += weights[i]! * value;
+    }
+    return sum / divisor;
+  };
+  return {
+    rotationDeg: entry('rotationDeg'),
+    ellipticityDeg: entry('ellipticityDeg'),
+    amplitude: entry('amplitude'),
+    contrast: entry('contrast'),
+    reflectance: entry('reflectance'),
+  };
+}
+
+function over(derivative: Derivative, value: number): Derivative {
+  const divided = (entry: number | null) => (entry === null ? null : entry / value);
+  return {
+    rotationDeg: divided(derivative.rotationDeg),
+    ellipticityDeg: divided(derivative.ellipticityDeg),
+    amplitude: divided(derivative.amplitude),
+    contrast: divided(derivative.contrast),
+    reflectance: divided(derivative.reflectance),
+  };
+}
+
+function mediumLabel(medium: StackMedium, names: ReadonlyMap<string, string>): string {
+  if (medium.material !== undefined) return names.get(medium.material) ?? medium.material;
+  return medium.label ?? 'a medium given by numbers';
+}
