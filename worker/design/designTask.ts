@@ -10,13 +10,21 @@ import { toleranceOutcome } from './tolerance/toleranceOutcome.ts';
 import { ToleranceFilms, ToleranceSamples } from './tolerance/toleranceSamples.ts';
 
 /** What a thread keeps of the calculation that it last took a step of. */
-type Kept = { designId: number; work: DesignWork; curves: CapCurves | null; films: ToleranceFilms | null };
+type Kept = {
+  designId: number;
+  work: DesignWork;
+  curves: CapCurves | null;
+  films: ToleranceFilms | null;
+  optimised: OptimiseFilms | null;
+};
 
 let kept: Kept | null = null;
 
 /** One step of a design calculation; what it answers depends on the kind of step. */
 export function designStep({ designId, work, flags, step }: DesignTask): unknown {
-  if (kept?.designId !== designId) kept = { designId, work: readWork(work), curves: null, films: null };
+  if (kept?.designId !== designId) {
+    kept = { designId, work: readWork(work), curves: null, films: null, optimised: null };
+  }
   return takeStep(kept, step, new Int32Array(flags));
 }
 
@@ -41,13 +49,13 @@ function takeStep(mine: Kept, step: DesignStep, flags: Int32Array): unknown {
       const evaluations: Evaluation[] = [];
       for (const nm of step.nm) {
         if (Atomics.load(flags, 1) !== 0) return null;
-        evaluations.push(filmsOf(mine).evaluate(nm));
+        evaluations.push(optimisedOf(mine).evaluate(nm));
         Atomics.add(flags, 0, 1);
       }
       return evaluations;
     }
     case 'optimise readings':
-      return filmsOf(mine).readings(step.nm);
+      return optimisedOf(mine).readings(step.nm);
     case 'tolerance samples': {
       const design = toleranceOf(mine.work);
       mine.films ??= new ToleranceFilms(design, mine.work.materials);
@@ -78,10 +86,10 @@ function toleranceOf({ design }: DesignWork): ToleranceDesign {
   return design;
 }
 
-function filmsOf(mine: Kept): OptimiseFilms {
+function optimisedOf(mine: Kept): OptimiseFilms {
   const { design, materials } = mine.work;
   if (design.kind !== 'optimise') throw new Error(`an optimise step of a calculation of kind ${design.kind}`);
-  return (mine.films ??= new OptimiseFilms(design, materials));
+  return (mine.optimised ??= new OptimiseFilms(design, materials));
 }
 
 function samplesOf(design: CapDesign, nm: number[], buffer: SharedArrayBuffer): CapSamples {

@@ -1,0 +1,31 @@
+import type { OptimiseDesign } from '../../../shared/optimiseDesign.ts';
+
+/** How many films a search may solve. Common practice, no source. */
+type Budget = { population: number; generations: number; local: number };
+
+const EFFORTS = {
+  quick: { perVariable: 10, least: 24, leastOfTwo: 40, generations: 120, local: 250 },
+  normal: { perVariable: 15, least: 40, leastOfTwo: 80, generations: 300, local: 500 },
+  thorough: { perVariable: 25, least: 60, leastOfTwo: 120, generations: 700, local: 1000 },
+} as const;
+
+/** A front for two goals needs enough films to be seen as one. */
+export function budgetOf({ effort, variables, second }: OptimiseDesign): Budget {
+  const { perVariable, least, leastOfTwo, generations, local } = EFFORTS[effort];
+  return {
+    population: Math.max(second ? leastOfTwo : least, perVariable * variables.length),
+    generations,
+    local: local * variables.length,
+  };
+}
+
+/** Films that the global search solves at the most, the drawn one included. */
+export function globalTotal(design: OptimiseDesign): number {
+  const { population, generations } = budgetOf(design);
+  return 1 + population * (generations + 1);
+}
+
+/** Films that are solved at the most: the unit of progress. With two goals each end of the front has a local search. */
+export function optimiseTotal(design: OptimiseDesign): number {
+  return globalTotal(design) + (design.second ? 2 : 1) * budgetOf(design).local;
+}
