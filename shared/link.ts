@@ -8,10 +8,17 @@ export const createLinkSchema = strictObject({
   expiresAt: z.iso.datetime().nullable().optional(),
 });
 
+export const linkSubjects = ['run', 'design', 'study', 'card'] as const;
+
+/** What a link opens, before it is opened. */
+export const sharedSubjectSchema = z.object({ opens: z.enum(linkSubjects) });
+
 export const linkSchema = z.object({
   id: z.string(),
-  runId: z.string(),
-  runName: z.string(),
+  /** What it opens; a design is a run with a question in place of axes. */
+  opens: z.enum(linkSubjects),
+  subjectId: z.string(),
+  subjectName: z.string(),
   label: z.string(),
   createdAt: z.iso.datetime(),
   createdBy: z.string().nullable(),

@@ -1,5 +1,7 @@
 import { availableParallelism } from 'node:os';
 import type { SolveRequest, SolveResponse } from '../shared/solve.ts';
+import { designPool } from './designPool.ts';
+import type { DesignPool } from './designPool.ts';
 import { materialPool } from './materialPool.ts';
 import type { MaterialPool } from './materialPool.ts';
 import { runLimited } from './runLimited.ts';
@@ -20,26 +22,27 @@ const SOLVE_TIMEOUT_MS = 60_000;
 type PoolState = { ok: boolean; detail: string };
 
 /** The threads of one process: all numbers of Skewlight are computed here. */
-export type ComputePool = MaterialPool & {
-  /**
-   * Solves a request whose input is valid (schema and `solveRules.ts`); a small one is answered while sweeps run.
-   *
-   * @throws ComputeError `refused`, `crashed` or `timeout` (60 s)
-   */
-  solve(request: SolveRequest): Promise<SolveResponse>;
-  /**
-   * Runs a sweep over all cores. A cancelled one rejects at once.
-   *
-   * @throws ComputeError `cancelled`, `refused` (issues inside a solve case, such as `layers[1].material`),
-   *   `crashed` or `closed`
-   */
-  sweep(input: SweepInput, options?: SweepOptions): Promise<SweepResult>;
-  /** Loads the code in every thread, so that the first question does not wait for it. */
-  warm(): Promise<void>;
-  /** Ends the threads; work under way fails with `closed`. */
-  close(): Promise<void>;
-  state(): PoolState;
-};
+export type ComputePool = MaterialPool &
+  DesignPool & {
+    /**
+     * Solves a request whose input is valid (schema and `solveRules.ts`); a small one is answered while sweeps run.
+     *
+     * @throws ComputeError `refused`, `crashed` or `timeout` (60 s)
+     */
+    solve(request: SolveRequest): Promise<SolveResponse>;
+    /**
+     * Runs a sweep over all cores. A cancelled one rejects at once.
+     *
+     * @throws ComputeError `cancelled`, `refused` (issues inside a solve case, such as `layers[1].material`),
+     *   `crashed` or `closed`
+     */
+    sweep(input: SweepInput, options?: SweepOptions): Promise<SweepResult>;
+    /** Loads the code in every thread, so that the first question does not wait for it. */
+    warm(): Promise<void>;
+    /** Ends the threads; work under way fails with `closed`. */
+    close(): Promise<void>;
+    state(): PoolState;
+  };
 
 /**
  * Starts the threads.
@@ -54,6 +57,7 @@ export function createPool(options: { threads?: number; taskFile?: URL; heapMb?:
 
   return {
     ...materialPool({ small, large: sweeps }),
+    ...designPool(sweeps),
     solve(request) {
       const chosen = microsecondsOf(request) <= SMALL_MICROSECONDS ? small : sweeps;
       return runLimited(chosen, 'solve', request, {

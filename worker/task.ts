@@ -3,6 +3,10 @@ import type { Material, MaterialContent } from '../shared/material.ts';
 import type { ImportMapping, ImportTable } from '../shared/materialImport.ts';
 import type { FitResult } from '../shared/materialFit.ts';
 import type { LibrarySolveCase, SolveCase, SolveRequest, SolveResponse } from '../shared/solve.ts';
+import type { SensitivityAnswer, SensitivityRequest } from '../shared/toleranceDesign.ts';
+import type { DesignTask } from './design/designInput.ts';
+import { designStep as stepTaken } from './design/designTask.ts';
+import { sensitivities } from './design/tolerance/sensitivity.ts';
 import { checkContent as issuesOf } from './dispersion/checkContent.ts';
 import { materialCurves } from './dispersion/materialCurves.ts';
 import type { ResolvableMaterial } from './dispersion/resolveCase.ts';
@@ -90,6 +94,18 @@ export function convertTable(task: {
   indexOf: MaterialContent | null;
 }): TaskOutcome<ConvertedTable> {
   return outcomeOf(() => tableConverted(tableFrom(task.bytes), task.mapping, task.indexOf));
+}
+
+/** One step of a design question; what it answers depends on the kind of step. */
+export function designStep(task: DesignTask): TaskOutcome<unknown> {
+  return outcomeOf(() => stepTaken(task));
+}
+
+export function sensitivity(task: {
+  request: SensitivityRequest;
+  materials: ResolvableMaterial[];
+}): TaskOutcome<SensitivityAnswer> {
+  return outcomeOf(() => sensitivities(task.request.document, task.request.points, task.materials));
 }
 
 /** Makes a thread load and compile its code before the first question. */
