@@ -65,7 +65,8 @@ function GroupLinks({ groupId }: { groupId: string }) {
         Share links
       </h2>
       <p className="mb-3 max-w-prose text-note text-muted">
-        Every link that opens a run of this group without an account. Revoking one does not touch the run.
+        Every link that opens something of this group without an account. Revoking one does not touch what it
+        opens.
       </p>
       <QueryGate query={links} what="share links">
         {(data) => (

@@ -103,7 +103,7 @@ function LoadedRun({ run }: { run: Run }) {
             {compareWith && result && (
               <Comparison run={run} result={result} olderId={compareWith} placeOf={placeOf} />
             )}
-            {editor && done && <SharePanel runId={run.id} />}
+            {editor && done && <SharePanel subject={{ opens: 'run', id: run.id }} />}
             <RunDownloads path={path} hasData={done} />
           </div>
         )}

@@ -1,5 +1,5 @@
 import { useMemo, useState } from 'react';
-import { Link as RouterLink, generatePath } from 'react-router-dom';
+import { Link as RouterLink } from 'react-router-dom';
 import type { Link } from '../../../../shared/link.ts';
 import { Button } from '../../../components/Button.tsx';
 import { ConfirmDialog } from '../../../components/ConfirmDialog.tsx';
@@ -8,9 +8,9 @@ import type { Column } from '../../../components/DataTable.tsx';
 import { EmptyState } from '../../../components/EmptyState.tsx';
 import { useNotify } from '../../../components/Notices.tsx';
 import { formatCount, formatDate, formatSince } from '../../../lib/format.ts';
-import { paths } from '../../../lib/paths.ts';
 import { useRevokeGroupLink } from '../api/revokeGroupLink.ts';
 import { linkState } from '../linkState.ts';
+import { subjectPath, subjectWords } from '../linkSubject.ts';
 
 export function GroupLinkTable({ groupId, links }: { groupId: string; links: readonly Link[] }) {
   const [revoking, setRevoking] = useState<Link | null>(null);
@@ -19,17 +19,18 @@ export function GroupLinkTable({ groupId, links }: { groupId: string; links: rea
   const columns = useMemo<Column<Link>[]>(
     () => [
       {
-        id: 'run',
-        header: 'Run',
-        value: (link) => link.runName,
+        id: 'subject',
+        header: 'Opens',
+        value: (link) => link.subjectName,
         cell: (link) => (
           <div>
             <RouterLink
-              to={generatePath(paths.run, { runId: link.runId })}
+              to={subjectPath(link)}
               className="font-semibold text-ink no-underline hover:text-accent hover:underline"
             >
-              {link.runName}
+              {link.subjectName}
             </RouterLink>
+            <span className="ml-2 text-small font-normal text-muted">{subjectWords[link.opens]}</span>
             {link.label ? <div className="text-note font-normal text-muted">{link.label}</div> : null}
           </div>
         ),
@@ -66,7 +67,7 @@ export function GroupLinkTable({ groupId, links }: { groupId: string; links: rea
         cell: (link) =>
           linkState(link).open ? (
             <Button tone="plain" onClick={() => setRevoking(link)}>
-              Revoke<span className="sr-only"> the link to {link.runName}</span>
+              Revoke<span className="sr-only"> the link to {link.subjectName}</span>
             </Button>
           ) : null,
       },
@@ -83,7 +84,8 @@ export function GroupLinkTable({ groupId, links }: { groupId: string; links: rea
         initialSort={{ id: 'made', descending: true }}
         empty={
           <EmptyState title="No share links">
-            A link opens one run without an account. Editors make them on the page of the run.
+            A link opens one run, design, study or growth card without an account. Editors make them on its
+            page.
           </EmptyState>
         }
       />
@@ -93,7 +95,7 @@ export function GroupLinkTable({ groupId, links }: { groupId: string; links: rea
           onOpenChange={(open) => {
             if (!open) setRevoking(null);
           }}
-          title={`Revoke the link to “${revoking.runName}”?`}
+          title={`Revoke the link to “${revoking.subjectName}”?`}
           description="Whoever has it sees from now on that it was revoked. It cannot be opened again; a new link can be made."
           action="Revoke link"
           busy={revoke.isPending}

@@ -8,7 +8,8 @@ import { Button, IconButton } from '../../../components/Button.tsx';
 import { Field, FormError } from '../../../components/Field.tsx';
 import { TextInput } from '../../../components/TextInput.tsx';
 import { showServerIssues } from '../../../lib/formIssues.ts';
-import { useCreateLink } from '../api/runLinks.ts';
+import { useCreateLink } from '../api/links.ts';
+import type { LinkSubject } from '../api/links.ts';
 
 /** As a person fills it in: the last day on which the link opens, empty for no end. */
 const formSchema = z.object({
@@ -28,8 +29,8 @@ function endOfDay(day: string): Date {
 }
 
 /** Makes a link and shows its address, which the server cannot show again. */
-export function NewLinkForm({ runId }: { runId: string }) {
-  const create = useCreateLink(runId);
+export function NewLinkForm({ subject }: { subject: LinkSubject }) {
+  const create = useCreateLink(subject);
   const form = useForm<Values>({
     resolver: zodResolver(formSchema),
     defaultValues: { label: '', lastDay: '' },
