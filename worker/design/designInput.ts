@@ -20,7 +20,7 @@ export type DesignStep =
   | { kind: 'tolerance outcome'; samples: SharedArrayBuffer }
   /** Thicknesses of the variables of each film. */
   | { kind: 'optimise films'; nm: number[][] }
-  | { kind: 'optimise readings'; nm: number[] };
+  | { kind: 'optimise start' | 'optimise readings'; nm: number[] };
 
 /** What a thread needs for one step; the buffers are shared, not copied. */
 export type DesignTask = {

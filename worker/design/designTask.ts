@@ -4,7 +4,7 @@ import { capOutcome } from './cap/capOutcome.ts';
 import { CapSamples } from './cap/capSamples.ts';
 import type { ToleranceDesign } from '../../shared/toleranceDesign.ts';
 import type { DesignStep, DesignTask, DesignWork } from './designInput.ts';
-import type { Evaluation } from './optimise/film.ts';
+import type { Film } from './optimise/film.ts';
 import { OptimiseFilms } from './optimise/optimiseFilms.ts';
 import { toleranceOutcome } from './tolerance/toleranceOutcome.ts';
 import { ToleranceFilms, ToleranceSamples } from './tolerance/toleranceSamples.ts';
@@ -46,14 +46,16 @@ function takeStep(mine: Kept, step: DesignStep, flags: Int32Array): unknown {
       return capOutcome(design, curves, nm, samplesOf(design, nm, step.samples), step.bare);
     }
     case 'optimise films': {
-      const evaluations: Evaluation[] = [];
+      const films: Film[] = [];
       for (const nm of step.nm) {
         if (Atomics.load(flags, 1) !== 0) return null;
-        evaluations.push(optimisedOf(mine).evaluate(nm));
+        films.push(optimisedOf(mine).trial(nm));
         Atomics.add(flags, 0, 1);
       }
-      return evaluations;
+      return films;
     }
+    case 'optimise start':
+      return optimisedOf(mine).evaluate(step.nm);
     case 'optimise readings':
       return optimisedOf(mine).readings(step.nm);
     case 'tolerance samples': {

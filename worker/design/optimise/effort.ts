@@ -4,9 +4,9 @@ import type { OptimiseDesign } from '../../../shared/optimiseDesign.ts';
 type Budget = { population: number; generations: number; local: number };
 
 const EFFORTS = {
-  quick: { perVariable: 10, least: 24, leastOfTwo: 40, generations: 120, local: 250 },
-  normal: { perVariable: 15, least: 40, leastOfTwo: 80, generations: 300, local: 500 },
-  thorough: { perVariable: 25, least: 60, leastOfTwo: 120, generations: 700, local: 1000 },
+  quick: { perVariable: 15, least: 40, leastOfTwo: 50, generations: 150, local: 400 },
+  normal: { perVariable: 30, least: 60, leastOfTwo: 100, generations: 300, local: 1000 },
+  thorough: { perVariable: 60, least: 120, leastOfTwo: 200, generations: 600, local: 2000 },
 } as const;
 
 /** A front for two goals needs enough films to be seen as one. */
@@ -25,7 +25,7 @@ export function globalTotal(design: OptimiseDesign): number {
   return 1 + population * (generations + 1);
 }
 
-/** Films that are solved at the most: the unit of progress. With two goals each end of the front has a local search. */
+/** Films that are solved at the most: the unit of progress. Each goal has two local searches. */
 export function optimiseTotal(design: OptimiseDesign): number {
-  return globalTotal(design) + (design.second ? 2 : 1) * budgetOf(design).local;
+  return globalTotal(design) + 2 * (design.second ? 2 : 1) * budgetOf(design).local;
 }

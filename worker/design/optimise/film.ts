@@ -13,7 +13,7 @@ export type Film = Evaluation & { nm: number[] };
 
 export type Bounds = readonly { fromNm: number; toNm: number }[];
 
-/** Solves films; the answers are in the order of the thicknesses. */
+/** Solves films, in the order of the thicknesses; one that lacks reflectance may come back thicker or thinner. */
 export type EvaluateFilms = (nm: number[][]) => Promise<Film[]>;
 
 /**

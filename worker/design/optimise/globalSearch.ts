@@ -20,17 +20,19 @@ export type GlobalSearch = {
  * worse; with two the best of both generations stay.
  *
  * @param onGeneration called with all films, the first time with those to begin with
+ * @returns the last generation, and the film begun with as it was solved
  */
 export async function searchGlobally(
   { bounds, population, generations, goals, start, random }: GlobalSearch,
   evaluate: EvaluateFilms,
   onGeneration: (films: readonly Film[]) => void,
-): Promise<{ films: Film[]; isSettled: boolean }> {
+): Promise<{ films: Film[]; start: Film; isSettled: boolean }> {
   const isSettled = goals === 1 ? settlingOfCosts() : settlingOfFront();
   let films = await evaluate([start, ...scattered(bounds, population - 1, random)]);
+  const first = films[0]!;
   onGeneration(films);
   for (let generation = 0; generation < generations; generation += 1) {
-    if (isSettled(films)) return { films, isSettled: true };
+    if (isSettled(films)) return { films, start: first, isSettled: true };
     const trials = await evaluate(trialsOf(films, bounds, random));
     films =
       goals === 1
@@ -38,5 +40,5 @@ export async function searchGlobally(
         : selectByFronts([...films, ...trials], population);
     onGeneration(films);
   }
-  return { films, isSettled: isSettled(films) };
+  return { films, start: first, isSettled: isSettled(films) };
 }

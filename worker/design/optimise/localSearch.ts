@@ -7,6 +7,8 @@ const LATER_SIDE = 0.002;
 /** A simplex smaller than this is a point, nm: far below what any layer is known to. */
 const POINT_NM = 1e-5;
 
+export type LocalOptimum = { film: Film; isSettled: boolean };
+
 /**
  * The best film near the given one in one goal: simplex search of J. A. Nelder and R. Mead, Comput. J. 7, 308 (1965), with
  * the factors of F. Gao and L. Han, Comput. Optim. Appl. 51, 259 (2012) for many variables. It compares films and
@@ -22,7 +24,7 @@ export async function searchLocally(
   most: number,
   evaluate: EvaluateFilms,
   onBetter: (film: Film) => void,
-): Promise<{ film: Film; isSettled: boolean }> {
+): Promise<LocalOptimum> {
   let best = from;
   let spent = 0;
   const solve = async (nm: number[][]): Promise<Film[]> => {

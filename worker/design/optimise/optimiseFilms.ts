@@ -7,8 +7,9 @@ import { drawnLayers } from '../expandBlocks.ts';
 import type { FilmChange } from '../filmSolver.ts';
 import { FilmSolver } from '../filmSolver.ts';
 import { leastThicknessNm } from './checkOptimise.ts';
-import type { Evaluation } from './film.ts';
+import type { Film } from './film.ts';
 import { costSign } from './film.ts';
+import { repaired } from './repaired.ts';
 
 /** Half the step of the difference that gives a slope, nm: far below any structure, far above rounding. */
 const SLOPE_STEP_NM = 0.005;
@@ -36,7 +37,7 @@ export class OptimiseFilms {
    *
    * @param nm thicknesses in the order of the variables
    */
-  evaluate(nm: readonly number[]): Evaluation {
+  evaluate(nm: number[]): Film {
     const change = this.#changeTo(nm);
     const costs = this.#goals.map(() => -Infinity);
     let violation = 0;
@@ -49,7 +50,13 @@ export class OptimiseFilms {
         costs[position] = Math.max(costs[position]!, value === null ? NaN : costSign(goal.quantity) * value);
       });
     }
-    return { violation, costs };
+    return { nm, violation, costs };
+  }
+
+  /** A film, or where it lacks reflectance the nearest that does not, as far as one can be found. */
+  trial(nm: number[]): Film {
+    const film = this.evaluate(nm);
+    return film.violation > 0 ? repaired(film, this.#design.variables, (one) => this.evaluate(one)) : film;
   }
 
   /** Every reading of one film, by working point. */

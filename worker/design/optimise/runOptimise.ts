@@ -8,10 +8,11 @@ import { drawnLayers } from '../expandBlocks.ts';
 import { BestSoFar } from './bestSoFar.ts';
 import { checkOptimise } from './checkOptimise.ts';
 import { budgetOf, globalTotal } from './effort.ts';
-import type { Evaluation, Film } from './film.ts';
-import { bestOf } from './film.ts';
+import type { EvaluateFilms, Film } from './film.ts';
+import { bestOf, isBetter } from './film.ts';
 import { paretoFront } from './front.ts';
 import { searchGlobally } from './globalSearch.ts';
+import type { LocalOptimum } from './localSearch.ts';
 import { searchLocally } from './localSearch.ts';
 
 /** Fewer films than this are not worth a second thread. */
@@ -19,8 +20,9 @@ const LEAST_PER_STEP = 4;
 const PARTIAL_MS = 200;
 
 /**
- * A global search, then a local one from its best film. All random numbers are drawn here and threads only solve, so the
- * outcome does not depend on how many there are. With a second goal the ends of the front are refined.
+ * A global search, then local ones from its best film and from the one that was drawn; with two goals, for each of them
+ * from both ends of the front. All random numbers are drawn here and threads only solve, so the outcome does not depend
+ * on how many there are.
  *
  * @throws ComputeError `refused` when the design does not fit its film, `cancelled`
  */
@@ -34,10 +36,11 @@ export async function runOptimise(
     throw new ComputeError('refused', 'The optimisation does not fit the film.', issues);
   }
   const { variables, second } = design;
-  const { population, generations, local } = budgetOf(design);
+  const { population, generations } = budgetOf(design);
   const drawn = drawnThicknesses(design);
-  const [start] = await solveFilms([drawn], threads);
-  const course = new BestSoFar(design, start!);
+  // The film as drawn must not move, whatever it lacks.
+  const start = (await threads.run({ kind: 'optimise start', nm: drawn })) as Film;
+  const course = new BestSoFar(design, start);
   course.evaluations = 1;
   const evaluate = async (nm: number[][]) => {
     const films = await solveFilms(nm, threads);
@@ -69,23 +72,42 @@ export async function runOptimise(
   // A search that settled early has done all of its work.
   threads.done = globalTotal(design);
 
-  let isSettled = search.isSettled;
-  for (const goal of second ? [0, 1] : [0]) {
-    const from = bestOf(course.films, goal);
-    const refined = await searchLocally(from, goal, variables, local, evaluate, (film) => {
-      course.offer(film, 'local');
-      tell();
-    });
-    course.films = [...course.films, refined.film];
-    isSettled &&= refined.isSettled;
-  }
+  const isRefined = await refine(design, search, evaluate, course, tell);
   course.endPhase('local');
 
   const best = (second ? paretoFront(course.films)[0] : undefined) ?? bestOf(course.films, 0);
   // Given by designTask.ts for this kind of step.
   const readings = (await threads.run({ kind: 'optimise readings', nm: best.nm })) as PointReadings[];
   const points = design.points.map(({ id }, i) => ({ pointId: id, readings: readings[i]! }));
-  return course.result(isSettled && best.violation === 0 ? 'converged' : 'budget', best, points);
+  const isConverged = search.isSettled && isRefined && best.violation === 0;
+  return course.result(isConverged ? 'converged' : 'budget', best, points);
+}
+
+/** Local searches for each goal, one after the other; whether the best of each ended in a point. */
+async function refine(
+  design: OptimiseDesign,
+  { films, start }: { films: Film[]; start: Film },
+  evaluate: EvaluateFilms,
+  course: BestSoFar,
+  tell: () => void,
+): Promise<boolean> {
+  const { variables, second } = design;
+  const take = (film: Film) => {
+    course.offer(film, 'local');
+    tell();
+  };
+  let isRefined = true;
+  for (const goal of second ? [0, 1] : [0]) {
+    const from = [bestOf(films, goal), second ? bestOf(films, 1 - goal) : start];
+    const found: LocalOptimum[] = [];
+    for (const film of from) {
+      found.push(await searchLocally(film, goal, variables, budgetOf(design).local, evaluate, take));
+    }
+    course.films = [...course.films, ...found.map(({ film }) => film)];
+    const winner = found.reduce((best, one) => (isBetter(one.film, best.film, goal) ? one : best));
+    isRefined &&= winner.isSettled;
+  }
+  return isRefined;
 }
 
 function drawnThicknesses({ document, variables }: OptimiseDesign): number[] {
@@ -100,11 +122,9 @@ async function solveFilms(nm: number[][], threads: DesignThreads): Promise<Film[
     piecesOf(nm.length, size).map(({ from, to }) => ({ kind: 'optimise films', nm: nm.slice(from, to) })),
   );
   // Given by designTask.ts for this kind of step; nothing comes back once the calculation was cancelled.
-  const evaluations = (answers as (Evaluation[] | null)[]).flatMap((one) => one ?? []);
-  if (evaluations.length < nm.length) {
-    throw new ComputeError('cancelled', 'The calculation was cancelled.');
-  }
-  return nm.map((thicknesses, i) => ({ nm: thicknesses, ...evaluations[i]! }));
+  const films = (answers as (Film[] | null)[]).flatMap((one) => one ?? []);
+  if (films.length < nm.length) throw new ComputeError('cancelled', 'The calculation was cancelled.');
+  return films;
 }
 
 /** Calls at most about five times a second. When it does so changes nothing of the outcome. */

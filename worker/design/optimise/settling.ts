@@ -4,8 +4,8 @@ import { paretoFront } from './front.ts';
 /** Films whose costs differ by no more than this share are as good as each other. */
 const SAME = 1e-6;
 /** The area that a front must gain within so many generations not to count as settled. */
-const LEAST_GAIN = 1e-3;
-const GENERATIONS_OF_GAIN = 20;
+const LEAST_GAIN = 2e-4;
+const GENERATIONS_OF_GAIN = 30;
 
 /** Says of generation after generation whether the search has settled. */
 export type IsSettled = (films: readonly Film[]) => boolean;
