@@ -1,5 +1,6 @@
 import type { Logger } from 'pino';
 import type { Transaction } from 'sequelize';
+import type { DesignResult } from '../shared/design.ts';
 import type { RunProgress } from '../shared/run.ts';
 import type { ComputePool } from '../worker/pool.ts';
 import type { PartialResult } from '../worker/sweep/runSweep.ts';
@@ -46,6 +47,8 @@ export type Jobs = {
   watch(runId: string, listener: (progress: RunProgress | null) => void): () => void;
   /** The numbers of a run that this process is computing, as far as they go; null for any other run. */
   partialResult(runId: string): PartialResult | null;
+  /** What a design question that this process is answering has found so far; null for any other. */
+  partialDesign(runId: string): DesignResult | null;
   imports: ImportReading;
 };
 

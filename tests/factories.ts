@@ -8,7 +8,8 @@ import type { Group } from '../server/models/group.ts';
 import type { Material } from '../server/models/material.ts';
 import type { MaterialImport } from '../server/models/materialImport.ts';
 import type { Models } from '../server/models/models.ts';
-import type { Run, RunInput } from '../server/models/run.ts';
+import type { Run, RunInput, SweepRun } from '../server/models/run.ts';
+import { isSweepRun } from '../server/models/run.ts';
 import type { ShareLink } from '../server/models/shareLink.ts';
 import type { Stack } from '../server/models/stack.ts';
 import type { User } from '../server/models/user.ts';
@@ -210,8 +211,8 @@ export async function buildRun(
   models: Models,
   group: Group,
   { input = buildRunInput(), ...overrides }: RunOverrides = {},
-): Promise<Run> {
-  return models.Run.create({
+): Promise<SweepRun> {
+  const run = await models.Run.create({
     groupId: group.id,
     stackId: null,
     stackVersion: null,
@@ -227,6 +228,8 @@ export async function buildRun(
     inputSha256: hashSecret(JSON.stringify(input)),
     ...overrides,
   });
+  if (!isSweepRun(run)) throw new Error(`Built a run of kind ${run.kind}.`);
+  return run;
 }
 
 type LinkOverrides = Partial<Pick<ShareLink, 'label' | 'expiresAt' | 'revokedAt' | 'createdById'>>;

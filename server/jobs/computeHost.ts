@@ -1,6 +1,7 @@
 import { randomBytes } from 'node:crypto';
 import { hostname } from 'node:os';
 import { isDatabaseAway } from '../http/toRefusal.ts';
+import type { DesignResult } from '../../shared/design.ts';
 import { LOST, executeRun } from './executeRun.ts';
 import type { ExecutionDependencies } from './executeRun.ts';
 import type { PartialResult } from '../../worker/sweep/runSweep.ts';
@@ -20,6 +21,8 @@ type Running = {
   ended: Promise<void>;
   /** Its numbers as they come in; null until the threads have it. */
   soFar: PartialResult | null;
+  /** What a design question has found so far. */
+  design: DesignResult | null;
 };
 
 /** Takes runs out of the queue and computes them on this machine. */
@@ -54,6 +57,11 @@ export class ComputeHost {
   /** The numbers of a run that is being computed here, as far as they go. */
   partialResult(runId: string): PartialResult | null {
     return this.#running.get(runId)?.soFar ?? null;
+  }
+
+  /** What a design question that is being answered here has found so far. */
+  partialDesign(runId: string): DesignResult | null {
+    return this.#running.get(runId)?.design ?? null;
   }
 
   /** Stops taking runs and gives those under way back to the queue. */
@@ -106,15 +114,16 @@ export class ComputeHost {
 
   #execute(lease: RunLease): void {
     const stopping = new AbortController();
-    const onStart = (soFar: PartialResult) => {
-      const running = this.#running.get(lease.runId);
-      if (running) running.soFar = soFar;
+    const running: Omit<Running, 'ended'> = { lease, stopping, soFar: null, design: null };
+    const watch = {
+      onStart: (soFar: PartialResult) => (running.soFar = soFar),
+      onPartial: (soFar: DesignResult) => (running.design = soFar),
     };
-    const ended = executeRun(lease, this.#dependencies, stopping, onStart).finally(() => {
+    const ended = executeRun(lease, this.#dependencies, stopping, watch).finally(() => {
       this.#running.delete(lease.runId);
       if (!this.#stopped) this.#wake();
     });
-    this.#running.set(lease.runId, { lease, stopping, ended, soFar: null });
+    this.#running.set(lease.runId, Object.assign(running, { ended }));
   }
 
   #beating = false;

@@ -1,12 +1,13 @@
 import type { Logger } from 'pino';
 import type { ComputePool } from '../../worker/pool.ts';
 import { ComputeError } from '../../worker/sweep/computeError.ts';
-import type { SweepOptions, SweepResult } from '../../worker/sweep/runSweep.ts';
 import { Refusal } from '../errors.ts';
 import { isDatabaseAway } from '../http/toRefusal.ts';
 import type { Models } from '../models/models.ts';
 import type { MaterialStore } from '../services/materialStore.ts';
 import { loadRunMaterials } from '../services/runMaterials.ts';
+import { computeRun } from './computeRun.ts';
+import type { ComputedRun, ComputeWatch } from './computeRun.ts';
 import { releaseMemory } from '../../worker/releaseMemory.ts';
 import type { RunLease } from './runLease.ts';
 import type { RunQueue } from './runQueue.ts';
@@ -28,19 +29,19 @@ export const LOST = 'cancelled, deleted or taken by another host';
  * stays away, the run is left to the sweeper.
  *
  * @param stopping aborted to stop the run, with `LOST` when it is not this host's any more
- * @param onStart gets the numbers as they come in
+ * @param watch gets the numbers as they come in
  */
 export async function executeRun(
   lease: RunLease,
   dependencies: ExecutionDependencies,
   stopping: AbortController,
-  onStart: SweepOptions['onStart'],
+  watch: Pick<ComputeWatch, 'onStart' | 'onPartial'>,
 ): Promise<void> {
   const { logger, queue } = dependencies;
   const log = logger.child({ runId: lease.runId });
   let storedBytes = 0;
   try {
-    const outcome = await compute(lease, dependencies, stopping, onStart);
+    const outcome = await compute(lease, dependencies, stopping, watch);
     switch (outcome.kind) {
       case 'stopped':
         if (stopping.signal.reason !== LOST) await lease.giveBack(queue);
@@ -51,10 +52,10 @@ export async function executeRun(
         log.warn({ error: outcome.error }, 'A run failed');
         break;
       case 'solved': {
-        const { seconds, points } = outcome.result;
+        const { seconds, bytes } = outcome.result;
         const stored = await retryWhileAway(() => lease.finish(outcome.result), stopping.signal);
-        log.info({ seconds, points, stored }, 'A run was solved');
-        storedBytes = 8 * points * outcome.result.columns.length;
+        log.info({ seconds, bytes, stored }, 'A run was solved');
+        storedBytes = bytes;
         break;
       }
     }
@@ -66,7 +67,7 @@ export async function executeRun(
 }
 
 type Outcome =
-  | { kind: 'solved'; result: SweepResult }
+  | { kind: 'solved'; result: ComputedRun }
   /** `error` is for people. */
   | { kind: 'failed'; error: string }
   | { kind: 'stopped' };
@@ -75,7 +76,7 @@ async function compute(
   lease: RunLease,
   { materials: store, pool, logger }: ExecutionDependencies,
   stopping: AbortController,
-  onStart: SweepOptions['onStart'],
+  watch: Pick<ComputeWatch, 'onStart' | 'onPartial'>,
 ): Promise<Outcome> {
   let reporting = false;
   const report = async (done: number) => {
@@ -92,10 +93,9 @@ async function compute(
   };
   try {
     const materials = await loadRunMaterials(store, lease.run);
-    const input = { ...lease.run.input, materials };
-    const result = await pool.sweep(input, {
+    const result = await computeRun(pool, lease.run, materials, {
       signal: stopping.signal,
-      onStart,
+      ...watch,
       onProgress: (done, total) => {
         if (done < total) void report(done);
       },

@@ -14,7 +14,7 @@ import { createModels } from '../models/models.ts';
 import type { Models } from '../models/models.ts';
 import type { Run } from '../models/run.ts';
 import { createMaterialStore } from '../services/materialStore.ts';
-import { cancelRun } from '../services/runs.ts';
+import { cancelRun } from '../services/runLifecycle.ts';
 import { buildGroup, buildRun, buildRunInput, buildUser, buildSlowDocument } from '../../tests/factories.ts';
 import { waitForRun } from '../../tests/waitForRun.ts';
 import { RunQueue } from './runQueue.ts';

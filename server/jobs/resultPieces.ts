@@ -1,14 +1,14 @@
 import { describeResult, encodeResultHeader } from '../../shared/resultFormat.ts';
 import { SOLVER_VERSION } from '../../worker/optics/version.ts';
 import type { SweepResult } from '../../worker/sweep/runSweep.ts';
-import type { Run } from '../models/run.ts';
+import type { SweepRun } from '../models/run.ts';
 
 /** What one row of run_chunks holds at most. */
 export const PIECE_BYTES = 4 * 1024 * 1024;
 
 /** The result file of a run, cut into rows. The pieces are views of the shared columns wherever possible. */
 export function* resultPieces(
-  run: Pick<Run, 'input' | 'inputSha256'>,
+  run: Pick<SweepRun, 'input' | 'inputSha256'>,
   result: SweepResult,
 ): Generator<Buffer> {
   const { readings } = run.input;
@@ -32,6 +32,13 @@ export function* resultPieces(
     }
   }
   if (bytes > 0) yield joined(waiting);
+}
+
+/** The answer to a design question, JSON in UTF-8, cut into rows. */
+export function* jsonPieces(bytes: Buffer): Generator<Buffer> {
+  for (let start = 0; start < bytes.length; start += PIECE_BYTES) {
+    yield bytes.subarray(start, start + PIECE_BYTES);
+  }
 }
 
 function joined(parts: Buffer[]): Buffer {

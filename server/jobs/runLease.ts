@@ -2,10 +2,9 @@ import { fn } from 'sequelize';
 import type { Transaction } from 'sequelize';
 import type { RunProgress, RunState } from '../../shared/run.ts';
 import { SOLVER_VERSION } from '../../worker/optics/version.ts';
-import type { SweepResult } from '../../worker/sweep/runSweep.ts';
 import type { Models } from '../models/models.ts';
 import type { Run } from '../models/run.ts';
-import { resultPieces } from './resultPieces.ts';
+import type { ComputedRun } from './computeRun.ts';
 import type { RunQueue } from './runQueue.ts';
 import { sendRunNotice } from './runNotices.ts';
 
@@ -77,21 +76,23 @@ export class RunLease {
   }
 
   /** Stores the numbers and the end of the run, both or neither. */
-  async finish(result: SweepResult): Promise<boolean> {
+  async finish({ seconds, pieces }: ComputedRun): Promise<boolean> {
+    // A search that ended early has done what there was to do.
+    const done = this.run.total;
     return this.#models.sequelize.transaction(async (transaction) => {
       const held = await this.#change(
         {
           state: 'done',
-          done: result.points,
+          done,
           finishedAt: fn('now'),
-          computeSeconds: result.seconds,
+          computeSeconds: seconds,
           solverVersion: SOLVER_VERSION,
         },
         transaction,
       );
       if (!held) return false;
       let position = 0;
-      for (const bytes of resultPieces(this.run, result)) {
+      for (const bytes of pieces()) {
         // Bound, not spelled out in the statement: 4 MB in hex would be 8 MB of text.
         await this.#models.sequelize.query(
           'INSERT INTO run_chunks (run_id, position, bytes) VALUES ($1, $2, $3)',
@@ -99,7 +100,7 @@ export class RunLease {
         );
         position += 1;
       }
-      await this.#notify('done', { done: result.points }, transaction);
+      await this.#notify('done', { done }, transaction);
       return true;
     });
   }

@@ -35,6 +35,7 @@ export async function startJobs(dependencies: JobDependencies): Promise<Jobs> {
         else if (notice.kind === 'stop' && notice.runId === runId) listener(null);
       }),
     partialResult: (runId) => host?.partialResult(runId) ?? null,
+    partialDesign: (runId) => host?.partialDesign(runId) ?? null,
     imports,
     health() {
       const computing = host ? `${host.runCount} runs on this machine` : 'other machines compute';

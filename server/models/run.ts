@@ -8,13 +8,14 @@ import type {
   NonAttribute,
   Sequelize,
 } from 'sequelize';
+import type { DesignInput, DesignKind } from '../../shared/design.ts';
 import type { ReadingName, RunState, SweepAxes, UsedMaterial } from '../../shared/run.ts';
 import type { SolveWarning } from '../../shared/solve.ts';
 import type { StackDocument } from '../../shared/stack.ts';
 import type { Group } from './group.ts';
 import type { User } from './user.ts';
 
-/** Everything a run is computed from; never changed once stored, and what `inputSha256` is the hash of. */
+/** Everything a sweep is computed from; never changed once stored, and what `inputSha256` is the hash of. */
 export type RunInput = SweepAxes & {
   document: StackDocument;
   readings: ReadingName[];
@@ -22,7 +23,10 @@ export type RunInput = SweepAxes & {
   materials: { id: string; version: number }[];
 };
 
-/** One stored calculation. Its numbers are in RunChunk rows. */
+/** ... and a design question. */
+export type DesignRunInput = { design: DesignInput; materials: RunInput['materials'] };
+
+/** One stored calculation: a sweep, or the answer to a design question. Its numbers are in RunChunk rows. */
 export interface Run extends Model<InferAttributes<Run>, InferCreationAttributes<Run>> {
   id: CreationOptional<string>;
   groupId: string;
@@ -32,8 +36,9 @@ export interface Run extends Model<InferAttributes<Run>, InferCreationAttributes
   /** The stack's name at that time, which outlives the stack. */
   stackName: string | null;
   name: string;
+  kind: CreationOptional<'sweep' | DesignKind>;
   createdById: string | null;
-  input: RunInput;
+  input: RunInput | DesignRunInput;
   materials: UsedMaterial[];
   assumptions: string[];
   warnings: SolveWarning[];
@@ -60,6 +65,17 @@ export interface Run extends Model<InferAttributes<Run>, InferCreationAttributes
   group?: NonAttribute<Group>;
 }
 
+export type SweepRun = Run & { kind: 'sweep'; input: RunInput };
+export type DesignRun = Run & { kind: DesignKind; input: DesignRunInput };
+
+export function isSweepRun(run: Run): run is SweepRun {
+  return run.kind === 'sweep';
+}
+
+export function isDesignRun(run: Run): run is DesignRun {
+  return run.kind !== 'sweep';
+}
+
 export function defineRun(sequelize: Sequelize): ModelStatic<Run> {
   return sequelize.define<Run>(
     'Run',
@@ -70,6 +86,7 @@ export function defineRun(sequelize: Sequelize): ModelStatic<Run> {
       stackVersion: DataTypes.INTEGER,
       stackName: DataTypes.TEXT,
       name: { type: DataTypes.TEXT, allowNull: false },
+      kind: { type: DataTypes.TEXT, allowNull: false, defaultValue: 'sweep' },
       createdById: DataTypes.UUID,
       input: { type: DataTypes.JSONB, allowNull: false },
       materials: { type: DataTypes.JSONB, allowNull: false },

@@ -1,11 +1,12 @@
 import type { CreatedLink, Link } from '../../shared/link.ts';
-import type { LinkWithRun } from '../services/links.ts';
+import type { LinkWithSubject } from '../services/links.ts';
 
-export function presentLink({ link, runId, runName }: LinkWithRun): Link {
+export function presentLink({ link, subject }: LinkWithSubject): Link {
   return {
     id: link.id,
-    runId,
-    runName,
+    opens: subject.opens,
+    subjectId: subject.id,
+    subjectName: subject.name,
     label: link.label,
     createdAt: link.createdAt.toISOString(),
     createdBy: link.createdBy?.name ?? null,
@@ -17,6 +18,6 @@ export function presentLink({ link, runId, runName }: LinkWithRun): Link {
 }
 
 /** @param publicUrl where people reach the server */
-export function presentCreatedLink(link: LinkWithRun, token: string, publicUrl: string): CreatedLink {
+export function presentCreatedLink(link: LinkWithSubject, token: string, publicUrl: string): CreatedLink {
   return { ...presentLink(link), url: `${publicUrl}/share/${token}` };
 }

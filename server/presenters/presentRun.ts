@@ -1,8 +1,8 @@
 import type { Run as PresentedRun, RunProgress, RunSummary, SharedRun, SweepAxes } from '../../shared/run.ts';
-import type { Run } from '../models/run.ts';
+import type { Run, SweepRun } from '../models/run.ts';
 
 /** @param axes apart from the row: a list leaves the rest of the input in the database */
-export function presentRunSummary(run: Run, axes: SweepAxes): RunSummary {
+export function presentRunSummary(run: SweepRun, axes: SweepAxes): RunSummary {
   return {
     id: run.id,
     groupId: run.groupId,
@@ -19,12 +19,12 @@ export function presentRunSummary(run: Run, axes: SweepAxes): RunSummary {
 }
 
 /** @param run with who made it */
-export function presentRun(run: Run): PresentedRun {
+export function presentRun(run: SweepRun): PresentedRun {
   return { ...presentRunSummary(run, run.input), ...snapshotOf(run) };
 }
 
 /** What a share link shows of a run: nothing of the group, its people or its stack. */
-export function presentSharedRun(run: Run): SharedRun {
+export function presentSharedRun(run: SweepRun): SharedRun {
   return {
     name: run.name,
     ...onlyAxes(run.input),
@@ -44,7 +44,7 @@ export function presentRunProgress(run: Run): RunProgress {
   return { state, done, total, secondsLeft: hasRate ? (seconds / done) * (total - done) : null, error };
 }
 
-function snapshotOf(run: Run) {
+function snapshotOf(run: SweepRun) {
   const { materials, warnings, assumptions, solverVersion, inputSha256, computeSeconds } = run;
   const { document, readings } = run.input;
   return { document, readings, materials, warnings, assumptions, solverVersion, inputSha256, computeSeconds };

@@ -57,6 +57,7 @@ const agreed: Record<string, string> = {
   'get /runs/:runId/links': 'editor of the group',
   'post /runs/:runId/links': 'editor of the group',
   'delete /links/:linkId': 'editor of the group',
+  'get /shared/:token/subject': 'anyone',
   'get /shared/:token': 'anyone',
   'get /shared/:token/data': 'anyone',
   'get /shared/:token/data.csv': 'anyone',

@@ -1,43 +1,61 @@
 import { Op, fn, literal } from 'sequelize';
 import { conflict, gone, invalid } from '../errors.ts';
 import type { Models } from '../models/models.ts';
+import type { Link } from '../../shared/link.ts';
 import type { Run } from '../models/run.ts';
+import { isDesignRun } from '../models/run.ts';
 import type { ShareLink } from '../models/shareLink.ts';
 import { recordActivity } from './recordActivity.ts';
 import { hashSecret, makeSecret } from './secrets.ts';
 
 type Person = { userId: string; name: string };
 
+/** What a link opens. */
+export type LinkSubject = { opens: Link['opens']; id: string; groupId: string; name: string };
+
 /** A link with what a list shows of it. */
-export type LinkWithRun = { link: ShareLink; runName: string; runId: string };
+export type LinkWithSubject = { link: ShareLink; subject: Omit<LinkSubject, 'groupId'> };
 
 /**
- * Makes a link that opens a run without an account.
+ * A sweep or a design as the subject of a link.
+ *
+ * @throws Refusal 409 while it has no numbers
+ */
+export function shareableRun(run: Run): LinkSubject {
+  const opens = opensOf(run);
+  if (run.state !== 'done') {
+    throw conflict(`The ${opens} is ${run.state}: a link can be made once it has its numbers.`);
+  }
+  return { opens, id: run.id, groupId: run.groupId, name: run.name };
+}
+
+function opensOf(run: Run): 'run' | 'design' {
+  return isDesignRun(run) ? 'design' : 'run';
+}
+
+/**
+ * Makes a link that opens its subject without an account.
  *
  * @param wanted.expiresAt when it stops to open; null for never
  * @returns the link and its token, which is stored as a hash only and cannot be shown again
- * @throws Refusal 409 while the run has no numbers, 422 when the link would have expired already
+ * @throws Refusal 422 when the link would have expired already
  */
 export async function createLink(
   models: Models,
   actor: Person,
-  run: Run,
+  { opens, id, groupId, name }: LinkSubject,
   wanted: { label: string; expiresAt: Date | null },
-): Promise<{ link: LinkWithRun; token: string }> {
-  if (run.state !== 'done') {
-    throw conflict(`The run is ${run.state}: a link can be made once it has its numbers.`);
-  }
+): Promise<{ link: LinkWithSubject; token: string }> {
   if (wanted.expiresAt !== null && wanted.expiresAt.getTime() <= Date.now()) {
     throw invalid([{ path: 'expiresAt', message: 'must be in the future' }]);
   }
   const token = makeSecret();
-  const { id: runId, groupId } = run;
   const linkId = await models.sequelize.transaction(async (transaction) => {
     const link = await models.ShareLink.create(
-      { ...wanted, runId, groupId, tokenHash: hashSecret(token), createdById: actor.userId },
+      { ...wanted, runId: id, groupId, tokenHash: hashSecret(token), createdById: actor.userId },
       { transaction },
     );
-    const detail = { run: run.name, label: wanted.label };
+    const detail = { [opens]: name, label: wanted.label };
     await recordActivity(
       models,
       { action: 'link.create', groupId, actor, subjectId: link.id, detail },
@@ -50,20 +68,23 @@ export async function createLink(
   return { link, token };
 }
 
-/** Links whose run exists, newest first. Those of deleted runs open nothing and are not listed. */
+/** Links whose subject exists, newest first. Those of deleted ones open nothing and are not listed. */
 export async function listLinks(
   models: Models,
   where: { id: string } | { runId: string } | { groupId: string },
-): Promise<LinkWithRun[]> {
+): Promise<LinkWithSubject[]> {
   const links = await models.ShareLink.findAll({
     where: { runId: { [Op.ne]: null }, ...where },
-    include: ['createdBy', { association: 'run', attributes: ['id', 'name'] }],
+    include: ['createdBy', { association: 'run', attributes: ['id', 'name', 'kind'] }],
     order: [
       ['createdAt', 'DESC'],
       ['id', 'ASC'],
     ],
   });
-  return links.flatMap((link) => (link.run ? [{ link, runId: link.run.id, runName: link.run.name }] : []));
+  return links.flatMap((link) => {
+    const { run } = link;
+    return run ? [{ link, subject: { opens: opensOf(run), id: run.id, name: run.name } }] : [];
+  });
 }
 
 /** From now on the link answers 410. Revoking twice keeps the first time. */
@@ -84,18 +105,21 @@ export async function revokeLink(models: Models, actor: Person, link: ShareLink)
 }
 
 /**
- * The run that a token opens; null for a token that never was.
+ * What a token opens; null for a token that never was.
  *
- * @throws Refusal 410 when the link was revoked, has expired, or its run was deleted
+ * @throws Refusal 410 when the link was revoked, has expired, or its subject was deleted
  */
-export async function openLink(models: Models, token: string): Promise<{ link: ShareLink; run: Run } | null> {
+export async function openLink(
+  models: Models,
+  token: string,
+): Promise<{ link: ShareLink; opens: LinkSubject['opens']; run: Run } | null> {
   const link = await models.ShareLink.findOne({ where: { tokenHash: hashSecret(token) }, include: 'run' });
   if (!link) return null;
   if (link.revokedAt || !link.run) throw gone('This link was revoked. Ask whoever sent it for a new one.');
   if (link.expiresAt && link.expiresAt.getTime() <= Date.now()) {
     throw gone('This link has expired. Ask whoever sent it for a new one.');
   }
-  return { link, run: link.run };
+  return { link, opens: opensOf(link.run), run: link.run };
 }
 
 /** Remembers that somebody opened the link. */

@@ -6,7 +6,7 @@ import type { ResolvableMaterial } from '../../worker/dispersion/resolveCase.ts'
 import { materialKey } from '../../worker/sweep/sweepInput.ts';
 import { conflict } from '../errors.ts';
 import type { AppDependencies } from '../dependencies.ts';
-import type { Run } from '../models/run.ts';
+import type { SweepRun } from '../models/run.ts';
 import { recordActivity } from './recordActivity.ts';
 import { loadRunMaterials } from './runMaterials.ts';
 import { resolveOneSafely } from './resolveSafely.ts';
@@ -27,7 +27,7 @@ type Person = { userId: string; name: string };
 export async function openSharedRun(
   dependencies: Pick<AppDependencies, 'models' | 'materials' | 'pool'>,
   actor: Person,
-  run: Run,
+  run: SweepRun,
   groupId: string,
 ): Promise<StackWithVersion> {
   const { models } = dependencies;
@@ -54,7 +54,7 @@ export async function openSharedRun(
 /** Ids of the run's materials that are out of the group's reach. */
 async function foreignMaterials(
   { models }: Pick<AppDependencies, 'models'>,
-  run: Run,
+  run: SweepRun,
   groupId: string,
 ): Promise<Set<string>> {
   const ids = run.input.materials.map(({ id }) => id);
@@ -68,7 +68,7 @@ async function foreignMaterials(
 
 async function withConstants(
   { materials: store, pool }: Pick<AppDependencies, 'materials' | 'pool'>,
-  run: Run,
+  run: SweepRun,
   foreign: Set<string>,
 ): Promise<StackDocument> {
   const materials = await loadRunMaterials(store, run);

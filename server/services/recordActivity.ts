@@ -26,6 +26,10 @@ export type ActivityAction =
   | 'run.cancel'
   | 'run.rerun'
   | 'run.delete'
+  | 'design.create'
+  | 'design.cancel'
+  | 'design.rerun'
+  | 'design.delete'
   | 'link.create'
   | 'link.revoke'
   | 'link.open-in-group';

@@ -5,7 +5,7 @@ import type { ResultHeader } from '../../shared/resultFormat.ts';
 import type { ReadingName, SweepAxes } from '../../shared/run.ts';
 import { axesOf } from '../../shared/runAxes.ts';
 import type { PartialResult } from '../../worker/sweep/runSweep.ts';
-import type { Run } from '../models/run.ts';
+import type { SweepRun } from '../models/run.ts';
 import { quantityOf } from './runNames.ts';
 import type { RunResult } from './runResult.ts';
 
@@ -14,7 +14,7 @@ const POINTS_AT_A_TIME = 65_536;
 const ROWS_AT_A_TIME = 2_048;
 
 /** The header of the file that hands out these readings of a run. */
-export function resultHeaderOf(run: Run, readings: ReadingName[]): ResultHeader {
+export function resultHeaderOf(run: SweepRun, readings: ReadingName[]): ResultHeader {
   const { input, solverVersion, inputSha256 } = run;
   return describeResult(input, readings, { solverVersion, inputSha256 });
 }
@@ -38,7 +38,7 @@ export async function* resultBytes(result: RunResult, readings: ReadingName[]): 
  * @param header with `done`
  */
 export function* partialResultBytes(
-  run: Run,
+  run: SweepRun,
   soFar: PartialResult,
   header: ResultHeader,
 ): Generator<Uint8Array> {
@@ -79,7 +79,7 @@ export async function* resultCsv(result: RunResult, readings: ReadingName[]): As
 }
 
 /** Where every constant comes from, a line of `# ` for each: what is computed is worth no more than they are. */
-function sourceLines(materials: Run['materials']): string {
+function sourceLines(materials: SweepRun['materials']): string {
   const lines = materials.flatMap(({ name, id, version, indexSource, voigtSource, anisotropySource }) => {
     const given = [
       { of: 'n and k', source: indexSource },
@@ -133,7 +133,7 @@ const usualTitles = {
 } as const;
 
 /** Two axes may sweep the same of two layers: then the layers are named. */
-function axisTitles(input: Run['input'], materials: Run['materials']): string[] {
+function axisTitles(input: SweepRun['input'], materials: SweepRun['materials']): string[] {
   const axes = axesOf<SweepAxes['axis']>(input).map(({ axis }) => axis);
   return axes.map((axis) => {
     const isOnly = axes.filter(({ kind }) => kind === axis.kind).length === 1;

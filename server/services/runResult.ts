@@ -5,7 +5,7 @@ import { axesOf, pointCountOf } from '../../shared/runAxes.ts';
 import { conflict, invalid } from '../errors.ts';
 import { PIECE_BYTES } from '../jobs/resultPieces.ts';
 import type { Models } from '../models/models.ts';
-import type { Run } from '../models/run.ts';
+import type { SweepRun } from '../models/run.ts';
 
 const BYTES_PER_VALUE = 8;
 /** Enough for the preamble of the result format. */
@@ -13,18 +13,18 @@ const PREAMBLE_BYTES = 16;
 
 /** The stored numbers of one run, read column by column and never as a whole. */
 export class RunResult {
-  readonly run: Run;
+  readonly run: SweepRun;
   readonly #models: Models;
   readonly #columnsAt: number;
 
-  private constructor(models: Models, run: Run, columnsAt: number) {
+  private constructor(models: Models, run: SweepRun, columnsAt: number) {
     this.#models = models;
     this.run = run;
     this.#columnsAt = columnsAt;
   }
 
   /** @throws Refusal 409 while there are no numbers */
-  static async open(models: Models, run: Run): Promise<RunResult> {
+  static async open(models: Models, run: SweepRun): Promise<RunResult> {
     if (run.state !== 'done') throw conflict(`The run is ${run.state}: it has no numbers.`);
     const start = await readBytes(models, run.id, 0, PREAMBLE_BYTES);
     return new RunResult(models, run, columnsOffset(toArrayBuffer(start), Number.MAX_SAFE_INTEGER));
@@ -69,7 +69,7 @@ export class RunResult {
  *
  * @throws Refusal 422 for one that this run does not store
  */
-export function chooseReadings(run: Run, wanted: ReadingName[] | undefined): ReadingName[] {
+export function chooseReadings(run: SweepRun, wanted: ReadingName[] | undefined): ReadingName[] {
   const { readings } = run.input;
   const missing = (wanted ?? []).filter((name) => !readings.includes(name));
   if (missing.length > 0) {

@@ -4,7 +4,7 @@ import type { Response } from 'express';
 import { resultByteLength } from '../../shared/resultFormat.ts';
 import type { ReadingName } from '../../shared/run.ts';
 import type { AppDependencies } from '../dependencies.ts';
-import type { Run } from '../models/run.ts';
+import type { SweepRun } from '../models/run.ts';
 import { releaseMemory } from '../../worker/releaseMemory.ts';
 import { partialResultBytes, resultBytes, resultCsv, resultHeaderOf } from './runDownloads.ts';
 import { plainFileName } from './fileNames.ts';
@@ -26,7 +26,7 @@ export type RunFile =
 /** @throws Refusal 409 while the run has no numbers, 422 for a reading that it does not have; nothing is sent then */
 export async function sendRunFile(
   { models, materials, pool, jobs }: Pick<AppDependencies, 'models' | 'materials' | 'pool' | 'jobs'>,
-  run: Run,
+  run: SweepRun,
   file: RunFile,
   response: Response,
 ): Promise<void> {
@@ -86,4 +86,4 @@ async function send(
   }
 }
 
-const fileNameOf = (run: Run) => plainFileName(run.name, 'run');
+const fileNameOf = (run: SweepRun) => plainFileName(run.name, 'run');

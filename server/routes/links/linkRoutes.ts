@@ -5,7 +5,7 @@ import { revokeLink as mayRevoke } from '../../policies/shareLink.ts';
 import { presentCreatedLink, presentLink } from '../../presenters/presentLink.ts';
 import type { Route } from '../../routing/route.ts';
 import { route } from '../../routing/route.ts';
-import { createLink, listLinks, revokeLink } from '../../services/links.ts';
+import { createLink, listLinks, revokeLink, shareableRun } from '../../services/links.ts';
 import { loadRun } from '../../services/runs.ts';
 
 const listLinksOfGroup = route({
@@ -48,7 +48,7 @@ const createLinkForRun = route({
   async handler({ dependencies, actor, subject, body }) {
     const expiresAt = body.expiresAt ? new Date(body.expiresAt) : null;
     const wanted = { label: body.label, expiresAt };
-    const { link, token } = await createLink(dependencies.models, actor, subject, wanted);
+    const { link, token } = await createLink(dependencies.models, actor, shareableRun(subject), wanted);
     return presentCreatedLink(link, token, dependencies.publicUrl());
   },
 });

@@ -7,7 +7,8 @@ import { isRowId } from '../../routing/pathParams.ts';
 import { readIdempotencyKey } from '../../routing/readIdempotencyKey.ts';
 import type { Route } from '../../routing/route.ts';
 import { route } from '../../routing/route.ts';
-import { cancelRun, createRun, deleteRun, listRuns, loadRun, rerunRun } from '../../services/runs.ts';
+import { cancelRun, deleteRun } from '../../services/runLifecycle.ts';
+import { createRun, listRuns, loadRun, rerunSweep } from '../../services/runs.ts';
 
 const load = ({ dependencies, params }: { dependencies: AppDependencies; params: { runId: string } }) =>
   loadRun(dependencies.models, params.runId);
@@ -86,7 +87,7 @@ const rerunRunById = route({
   load,
   answer: { status: 201, schema: runSchema },
   handler: async ({ dependencies, actor, subject }) =>
-    presentRun(await rerunRun(dependencies, actor, subject)),
+    presentRun(await rerunSweep(dependencies, actor, subject)),
 });
 
 export const runRoutes: Route[] = [

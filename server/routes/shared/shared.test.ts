@@ -220,8 +220,14 @@ describe('who may', () => {
     await editor.get(`/api/v1/groups/${people.group.id}/links`).expect(403);
     await stranger.get(`/api/v1/groups/${people.group.id}/links`).expect(404);
     const all = await linksAt(owner, `/groups/${people.group.id}/links`);
-    expect(all[0]).toMatchObject({ id, runId: run.id, runName: 'Shared sweep', revokedAt: null });
-    expect(new Set(all.map(({ runId }) => runId)).size).toBeGreaterThan(1);
+    expect(all[0]).toMatchObject({
+      id,
+      opens: 'run',
+      subjectId: run.id,
+      subjectName: 'Shared sweep',
+      revokedAt: null,
+    });
+    expect(new Set(all.map(({ subjectId }) => subjectId)).size).toBeGreaterThan(1);
   });
 });
 

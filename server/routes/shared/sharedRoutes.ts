@@ -1,7 +1,8 @@
-import { openInGroupSchema } from '../../../shared/link.ts';
+import { openInGroupSchema, sharedSubjectSchema } from '../../../shared/link.ts';
 import { sharedRunSchema } from '../../../shared/run.ts';
 import { stackSchema } from '../../../shared/stack.ts';
 import type { AppDependencies } from '../../dependencies.ts';
+import { isSweepRun } from '../../models/run.ts';
 import { addToGroup } from '../../policies/group.ts';
 import { anyone } from '../../policies/policy.ts';
 import { presentSharedRun } from '../../presenters/presentRun.ts';
@@ -15,8 +16,21 @@ import { sendRunFile } from '../../services/sendRunFile.ts';
 import { readingsQuerySchema } from '../runs/readingsQuery.ts';
 
 /** What a link opens is the run as it was stored: nothing here looks at the stack or the materials of today. */
-const load = ({ dependencies, params }: { dependencies: AppDependencies; params: { token: string } }) =>
-  openLink(dependencies.models, params.token);
+async function load(context: { dependencies: AppDependencies; params: { token: string } }) {
+  const shared = await openLink(context.dependencies.models, context.params.token);
+  return shared && isSweepRun(shared.run) ? { link: shared.link, run: shared.run } : null;
+}
+
+const readSubject = route({
+  method: 'get',
+  path: '/shared/:token/subject',
+  summary: 'What a share link opens: a run, a design, a study or a growth card.',
+  noun: 'link',
+  policy: anyone,
+  load: ({ dependencies, params }) => openLink(dependencies.models, params.token),
+  answer: { status: 200, schema: sharedSubjectSchema },
+  handler: ({ subject }) => ({ opens: subject.opens }),
+});
 
 const readSharedRun = route({
   method: 'get',
@@ -92,6 +106,7 @@ const openInGroup = route({
 });
 
 export const sharedRoutes: Route[] = [
+  readSubject,
   readSharedRun,
   readSharedData,
   readSharedCsv,
