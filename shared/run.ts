@@ -185,6 +185,8 @@ export const usedMaterialSchema = z.object({
   assumedConstant: z.boolean(),
   /** Of what makes a crystal more than N and Q; absent where there is none. */
   anisotropySource: sourceSchema.optional(),
+  /** What it was mixed from and by which law, in words; absent for what is no mixture. */
+  mixture: z.string().optional(),
   /** How imported constants were read and what was noticed then, in sentences; absent in runs made before it was kept. */
   origin: z.array(z.string()).optional(),
 });

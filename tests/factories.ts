@@ -167,9 +167,9 @@ export async function buildMaterial(
   return material;
 }
 
-type ImportOverrides = Partial<Pick<MaterialImport, 'fileName' | 'state' | 'readingAt' | 'createdAt'>> & {
-  text?: string;
-};
+type ImportOverrides = Partial<
+  Pick<MaterialImport, 'fileName' | 'state' | 'readingAt' | 'createdAt' | 'tableJson' | 'exported'>
+> & { text?: string };
 
 /** A file of constants as its sender left it, which nobody reads unless told to. */
 export async function buildImport(

@@ -122,9 +122,10 @@ class Converter {
     if (this.last && isDeepStrictEqual(this.last.given, given)) return this.last.converted;
     const row = await this.find(importId, path);
     const table = await convertImport(this.dependencies, row, mapping, `${path}.mapping.`);
-    const { sentences, warnings } = table;
+    const { sentences } = table;
     const { fileName, sha256 } = row;
     const rows = row.tableJson?.rowCount ?? 0;
+    const warnings = [...(row.tableJson?.warnings ?? []), ...table.warnings];
     const origin = { importId, fileName, sha256, rows, mapping, sentences, warnings };
     this.last = { given, converted: { table, origin } };
     return this.last.converted;

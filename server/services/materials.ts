@@ -60,7 +60,8 @@ export async function createMaterial(
   }
   const first = await models.Material.findByPk(id);
   if (first?.groupId !== groupId) throw notFound('material');
-  if (first.name !== name) {
+  const stored = await dependencies.materials.contentOf(id, 1);
+  if (first.name !== name || !isDeepStrictEqual(stored, content)) {
     throw conflict('This Idempotency-Key was used for another material: send a new one.');
   }
   return first;

@@ -20,12 +20,28 @@ export function runAssumptions(
 ): string[] {
   return [
     ...settings(document, axes, materials),
-    magnetization(document.workingPoint.magnetization),
+    magnetizationInWords(document.workingPoint.magnetization),
     ...axisMeanings(axes),
+    ...filmAssumptions(document, readings, materials, sweeps(axes, 'wavelength')),
+  ];
+}
+
+/**
+ * What the numbers of a film rest on, whatever is asked of it.
+ *
+ * @param atManyWavelengths whether it is solved at more than one
+ */
+export function filmAssumptions(
+  document: StackDocument,
+  readings: ReadingName[],
+  materials: UsedMaterial[],
+  atManyWavelengths: boolean,
+): string[] {
+  return [
     'Convention: time factor exp(-iωt), so N = n + ik with k ≥ 0; z points into the film, x lies in the plane of incidence; a rotation is positive counter-clockwise for an observer who looks into the reflected beam.',
     ...meanings(readings, document),
     ...geometry(document),
-    ...constants(document, axes, materials),
+    ...constants(document, atManyWavelengths, materials),
     ...thermalLaws(document.layers),
     'Constants of thin films differ from tabulated ones: use the numbers for planning.',
   ];
@@ -72,7 +88,7 @@ function directionMeaning({ plane, layerId }: SweepAxis & { kind: 'direction' })
   return `m of ${whose} keeps its length and turns from ${turns}, whatever direction the working point gives it.`;
 }
 
-function magnetization(given: WorkingMagnetization): string {
+export function magnetizationInWords(given: WorkingMagnetization): string {
   switch (given.mode) {
     case 'drawn':
       return 'Magnetization: as drawn in each layer.';
@@ -160,7 +176,7 @@ function anyLayer(items: StackItem[], holds: (layer: StackLayer) => boolean): bo
   return items.some((item) => ('layers' in item ? anyLayer(item.layers, holds) : holds(item)));
 }
 
-function constants(document: StackDocument, axes: SweepAxes, materials: UsedMaterial[]): string[] {
+function constants(document: StackDocument, atManyWavelengths: boolean, materials: UsedMaterial[]): string[] {
   const sentences = materials.flatMap((material) => [
     ...(material.assumedConstant
       ? [
@@ -172,6 +188,7 @@ function constants(document: StackDocument, axes: SweepAxes, materials: UsedMate
         (what) => `${what} of ${material.name} (${material.id}) is ${confidence}, not measured.`,
       ),
     ),
+    ...(material.mixture ? [`${material.name} (${material.id}) is a mixture: ${material.mixture}.`] : []),
     ...(material.anisotropySource
       ? [`${material.name} (${material.id}) is not isotropic: its crystal axes stand as its version says.`]
       : []),
@@ -179,7 +196,7 @@ function constants(document: StackDocument, axes: SweepAxes, materials: UsedMate
       ? [`The Voigt constant of ${material.name} (${material.id}) is from memory: verify it before use.`]
       : []),
   ]);
-  if (sweeps(axes, 'wavelength') && hasTypedConstants(document)) {
+  if (atManyWavelengths && hasTypedConstants(document)) {
     sentences.push('Constants typed into the stack do not change with wavelength.');
   }
   return sentences;

@@ -14,7 +14,8 @@ export function checkVoigt({ index, voigt }: MaterialContent, isIndexUsable: boo
   }
   if (voigt.kind !== 'mixture') return checkPlainVoigt('voigt', { index, voigt }, isIndexUsable);
   if (index.kind !== 'mixture' || index.parts.every((part) => part.voigt === null)) {
-    const message = 'a Q from the parts needs a mixed index with a magnetic part';
+    const message =
+      'a Q from the parts needs a mixed index with a magnetic part: give Q of its own or none beside these n and k, or make a material of its own from them';
     return [{ path: 'voigt', message }];
   }
   return isIndexUsable ? checkFollowing('voigt', { index, voigt }) : [];
