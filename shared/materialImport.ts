@@ -28,7 +28,10 @@ export const signHabitsSchema = strictObject({
   time: z.enum(['exp(-iwt)', 'exp(+iwt)']),
   /** eps_xy = +iQ eps_d or -iQ eps_d, for a tabulated Q. */
   voigtSign: z.enum(['+iQ', '-iQ']),
-  /** Where +m (or the field) of the source points. */
+  /**
+   * Where +m (or the field) of the source points. For Kerr angles against the film itself; for Q and tensor elements
+   * against the source's own right-handed axes, `into` along their +z: a tensor does not change when z and m turn together.
+   */
   magnetization: z.enum(['into the film', 'out of the film']),
   /** The sense in which a positive rotation turns, for an observer who looks into the reflected beam. */
   rotation: z.enum(['counter-clockwise', 'clockwise']),

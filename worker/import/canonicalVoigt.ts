@@ -29,10 +29,7 @@ export function canonicalVoigt(
       const q = toVoigt(...row);
       return q && negative(q);
     },
-    sentences: [
-      ...sentences,
-      'The +m of the source points out of the film, ours into it: Q was multiplied by -1 (the axes of the source are taken to point as ours, z into the film).',
-    ],
+    sentences: [...sentences, `${reversed(mapping.from)}: Q was multiplied by -1.`],
   };
 }
 
@@ -95,6 +92,16 @@ function conversionOf(mapping: VoigtMapping, habits: SignHabits): { toVoigt: ToV
       };
     }
   }
+}
+
+/**
+ * A tensor follows its own axes: turning z and m around together changes nothing in it, so only m against z counts. A
+ * Kerr angle is seen from outside, so there m against the film does.
+ */
+function reversed(from: VoigtMapping['from']): string {
+  return from === 'Kerr angles'
+    ? 'The +m of the source points out of the film, ours into it'
+    : 'The +m of the source points along -z of the axes of its tensor, ours along +z';
 }
 
 function describeHabit({ time, voigtSign }: SignHabits, isOther: boolean, sign: number): string {

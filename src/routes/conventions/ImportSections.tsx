@@ -43,12 +43,17 @@ export function ImportSections() {
         </p>
         <p>The other questions of an import:</p>
         <dl className="grid grid-cols-[auto_1fr] gap-x-6 gap-y-1.5 max-sm:grid-cols-1">
-          <dt className="text-muted">field out of the film</dt>
+          <dt className="text-muted">
+            <var>m</var> along −<var>z</var> of the tensor
+          </dt>
           <dd>
             <var>Q</var>, <var>ε</var>
-            <sub>xy</sub>, <var>σ</var>
-            <sub>xy</sub> and both Kerr angles change sign
+            <sub>xy</sub> and <var>σ</var>
+            <sub>xy</sub> change sign; where the <var>z</var> of the source points does not matter, since a
+            tensor stays the same when <var>z</var> and <var>m</var> turn around together
           </dd>
+          <dt className="text-muted">field out of the film</dt>
+          <dd>both Kerr angles change sign</dd>
           <dt className="text-muted">rotation clockwise</dt>
           <dd>the rotation changes sign; here it is positive counter-clockwise, looking into the beam</dd>
           <dt className="text-muted">ellipticity clockwise</dt>

@@ -2,6 +2,7 @@ import { useQuery, useQueryClient } from '@tanstack/react-query';
 import { generatePath, useNavigate, useSearchParams } from 'react-router-dom';
 import type { Membership } from '../../../shared/account.ts';
 import type { Material } from '../../../shared/material.ts';
+import { ButtonLink } from '../../components/Button.tsx';
 import { ErrorState } from '../../components/ErrorState.tsx';
 import { useNotify } from '../../components/Notices.tsx';
 import { Page } from '../../components/Page.tsx';
@@ -41,7 +42,7 @@ function ImportMaterial({ group: { groupId } }: { group: Membership }) {
       title={target.data ? `Import constants for ${formatFormula(target.data.formula)}` : 'Import constants'}
       subtitle={
         target.data
-          ? `${target.data.name}: the table makes version ${target.data.version + 1}. What it does not give stays as it is.`
+          ? subtitleFor(target.data, groupId)
           : 'A table of n and k, of the permittivity, or of magneto-optic constants becomes a material of this group.'
       }
     >
@@ -55,16 +56,7 @@ function ImportMaterial({ group: { groupId } }: { group: Membership }) {
                 material.groupId === groupId ? (
                   <Workbench groupId={groupId} target={material} materials={list} />
                 ) : (
-                  <ErrorState
-                    title="This material cannot be changed here"
-                    error={
-                      new ApiError(
-                        403,
-                        'forbidden',
-                        'It is of the shipped library or of another group; only own materials get new versions.',
-                      )
-                    }
-                  />
+                  <CopyFirst groupId={groupId} material={material} />
                 )
               }
             </QueryGate>
@@ -72,6 +64,32 @@ function ImportMaterial({ group: { groupId } }: { group: Membership }) {
         }
       </QueryGate>
     </Page>
+  );
+}
+
+function subtitleFor({ name, version, groupId: owner }: Material, groupId: string): string {
+  if (owner !== groupId) return name;
+  return `${name}: the table makes version ${version + 1}. What it does not give stays as it is.`;
+}
+
+/** A material of the shipped library or of another group stays as it is. */
+function CopyFirst({ groupId, material: { id, name, version } }: { groupId: string; material: Material }) {
+  const copy = new URLSearchParams({ from: id, version: String(version) });
+  return (
+    <div className="card flex max-w-prose flex-col items-start gap-3 px-4 py-3.5">
+      <p>
+        {name} is not of this group, so it cannot get a new version here. Keep a copy of it in this group
+        first, then import the table for the copy. Its n, k and their source go with it.
+      </p>
+      <div className="flex flex-wrap gap-2">
+        <ButtonLink tone="primary" to={`${generatePath(paths.newMaterial, { groupId })}?${copy}`}>
+          Copy into this group
+        </ButtonLink>
+        <ButtonLink to={generatePath(paths.importMaterial, { groupId })}>
+          Import as a material of its own
+        </ButtonLink>
+      </div>
+    </div>
   );
 }
 

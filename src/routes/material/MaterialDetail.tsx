@@ -1,5 +1,6 @@
-import { useId } from 'react';
+import { useEffect, useId } from 'react';
 import type { ReactNode } from 'react';
+import { useLocation } from 'react-router-dom';
 import type { Material } from '../../../shared/material.ts';
 import { MaterialUsesPanel } from '../../features/materials/components/MaterialUsesPanel.tsx';
 import { OriginPanel } from '../../features/materials/components/OriginPanel.tsx';
@@ -11,6 +12,11 @@ import { VersionList } from '../../features/materials/components/VersionList.tsx
 /** Curves, then what is stored on the left; sources, origin, versions and uses on the right. */
 export function MaterialDetail({ material }: { material: Material }) {
   const { content, notes } = material;
+  const { hash } = useLocation();
+  // The address was there before what it points at.
+  useEffect(() => {
+    if (hash) document.getElementById(decodeURIComponent(hash.slice(1)))?.scrollIntoView();
+  }, [hash]);
   const { origin } = content;
   return (
     <div className="grid grid-cols-1 items-start gap-4 lg:grid-cols-[1.5fr_1fr]">
@@ -48,7 +54,7 @@ export function MaterialDetail({ material }: { material: Material }) {
             <OriginPanel origin={origin} />
           </Card>
         ) : null}
-        <Card title="Versions">
+        <Card title="Versions" anchor="history">
           <VersionList materialId={material.id} shown={material.version} />
         </Card>
         <Card title="Where it is used">
@@ -59,10 +65,11 @@ export function MaterialDetail({ material }: { material: Material }) {
   );
 }
 
-function Card({ title, children }: { title: string; children: ReactNode }) {
+/** @param anchor under which links lead here */
+function Card({ title, anchor, children }: { title: string; anchor?: string; children: ReactNode }) {
   const id = useId();
   return (
-    <section aria-labelledby={id} className="card min-w-0 px-4 py-3.5">
+    <section id={anchor} aria-labelledby={id} className="card min-w-0 scroll-mt-4 px-4 py-3.5">
       <h2 id={id} className="mb-2 text-body">
         {title}
       </h2>

@@ -3,6 +3,7 @@ import { materialSchema } from '../../../../shared/material.ts';
 import type { Material } from '../../../../shared/material.ts';
 import type { CreateMaterial, CreateMaterialVersion } from '../../../../shared/materialEdit.ts';
 import { request } from '../../../lib/apiClient.ts';
+import { useRequestKey } from '../../../lib/useRequestKey.ts';
 
 /** Either a new material of the group or a new version of one that is there. */
 export type KeepImported =
@@ -10,6 +11,7 @@ export type KeepImported =
   | { kind: 'version'; materialId: string; body: CreateMaterialVersion };
 
 export function useKeepImported(onKept: (material: Material) => void) {
+  const keyOf = useRequestKey();
   return useMutation({
     mutationFn: (kept: KeepImported) =>
       request({
@@ -19,6 +21,8 @@ export function useKeepImported(onKept: (material: Material) => void) {
             ? `/groups/${kept.groupId}/materials`
             : `/materials/${encodeURIComponent(kept.materialId)}/versions`,
         body: kept.body,
+        // A version sent twice is one version without a key.
+        ...(kept.kind === 'material' && { headers: { 'idempotency-key': keyOf(kept.body) } }),
         schema: materialSchema,
       }),
     onSuccess: onKept,

@@ -3,18 +3,21 @@ import type { SignHabits } from '../../../../shared/materialImport.ts';
 import type { HabitName } from '../model/neededHabits.ts';
 import { EllipticityDrawing, RotationDrawing } from './BeamViewDrawing.tsx';
 import { HabitQuestion } from './HabitQuestion.tsx';
-import { MagnetizationDrawing } from './MagnetizationDrawing.tsx';
+import { IronKnown } from './IronKnown.tsx';
+import { FilmMagnetization, TensorMagnetization } from './MagnetizationQuestions.tsx';
 import { PhasorDrawing } from './PhasorDrawing.tsx';
 import { TensorDrawing } from './TensorDrawing.tsx';
 
 type HabitQuestionsProps = {
   needed: readonly HabitName[];
+  /** The columns hold Q or an element of a tensor, not Kerr angles. */
+  ofTensor: boolean;
   answers: Partial<SignHabits>;
   onAnswer: (answer: Partial<SignHabits>) => void;
 };
 
 /** The habits that matter for the chosen columns, each asked; none is guessed. */
-export function HabitQuestions({ needed, answers, onAnswer }: HabitQuestionsProps) {
+export function HabitQuestions({ needed, ...rest }: HabitQuestionsProps) {
   if (needed.length === 0) {
     return (
       <p className="text-muted">
@@ -30,25 +33,20 @@ export function HabitQuestions({ needed, answers, onAnswer }: HabitQuestionsProp
         from is the place to look.
       </p>
       {needed.map((name) => (
-        <Question key={name} name={name} answers={answers} onAnswer={onAnswer} />
+        <Question key={name} name={name} {...rest} />
       ))}
     </div>
   );
 }
 
-/** Fe at 632.8 nm from N = 2.87 + 3.36i and Q = 0.0376 + 0.0066i: Zak et al., Phys. Rev. B 43, 6423 (1991). */
-const ironKnown = (
-  <p>
-    A sample that is known settles it: bulk iron at 632.8 nm and normal incidence, magnetized into the film,
-    has a rotation near +0.33° and an ellipticity near +0.36° in the signs of this program (from constants of
-    Zak et al., Phys. Rev. B 43, 6423 (1991)). If the same source reports iron with the other sign, take the
-    other choice here.
-  </p>
-);
-
 const looking = 'You look from the detector toward the sample, so that the reflected beam comes at you.';
 
-function Question({ name, answers, onAnswer }: Omit<HabitQuestionsProps, 'needed'> & { name: HabitName }) {
+function Question({
+  name,
+  ofTensor,
+  answers,
+  onAnswer,
+}: Omit<HabitQuestionsProps, 'needed'> & { name: HabitName }) {
   switch (name) {
     case 'time':
       return (
@@ -121,43 +119,16 @@ function Question({ name, answers, onAnswer }: Omit<HabitQuestionsProps, 'needed
           help={
             <>
               <p>Find where the source writes its tensor; the sign at row x, column y is the answer.</p>
-              {ironKnown}
+              <IronKnown />
             </>
           }
         />
       );
     case 'magnetization':
-      return (
-        <HabitQuestion
-          question="Where does the positive magnetization of the source point?"
-          why="Magneto-optic constants are odd in the magnetization: the other direction is the other sign."
-          answer={answers.magnetization}
-          onAnswer={(magnetization) => onAnswer({ magnetization })}
-          choices={[
-            {
-              value: 'into the film',
-              label: 'into the film',
-              says: 'along the light that arrives',
-              drawing: <MagnetizationDrawing points="into the film" />,
-            },
-            {
-              value: 'out of the film',
-              label: 'out of the film',
-              says: 'toward the light source',
-              drawing: <MagnetizationDrawing points="out of the film" />,
-            },
-          ]}
-          help={
-            <>
-              <p>
-                Look for the z axis of the source: into the sample or along the outward normal. Measured
-                tables often say &ldquo;field toward the light source&rdquo; or &ldquo;parallel to the
-                incident light&rdquo;.
-              </p>
-              {ironKnown}
-            </>
-          }
-        />
+      return ofTensor ? (
+        <TensorMagnetization answers={answers} onAnswer={onAnswer} />
+      ) : (
+        <FilmMagnetization answers={answers} onAnswer={onAnswer} />
       );
     case 'rotation':
       return (
@@ -212,7 +183,7 @@ function TurnHelp() {
         A source that looks along the beam, from the sample toward the detector, sees the opposite sense: its
         clockwise is counter-clockwise here.
       </p>
-      {ironKnown}
+      <IronKnown />
     </>
   );
 }

@@ -6,6 +6,7 @@ import { LoadingState } from '../../../components/LoadingState.tsx';
 import { useKeepImported } from '../api/keepImported.ts';
 import { useConversion } from '../hooks/useConversion.ts';
 import { useImportDraft } from '../hooks/useImportDraft.ts';
+import { answersThatStay, isOfTensor } from '../model/neededHabits.ts';
 import { keepRequest } from '../model/keepRequest.ts';
 import type { NamingForm } from '../model/naming.ts';
 import { ColumnStep } from './ColumnStep.tsx';
@@ -73,12 +74,13 @@ export function MappedImport(props: MappedImportProps) {
             problems={problems}
             target={target}
             materials={materials}
-            onPlan={(next) => change({ plan: next })}
+            onPlan={(next) => change({ plan: next, answers: answersThatStay(draft, next) })}
           />
         </ImportStep>
         <ImportStep id="signs" state={signs} waitsFor="asked once the columns are known">
           <HabitQuestions
             needed={needed}
+            ofTensor={isOfTensor(plan)}
             answers={draft.answers}
             onAnswer={(answer) => change({ answers: { ...draft.answers, ...answer } })}
           />

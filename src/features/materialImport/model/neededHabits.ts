@@ -1,6 +1,7 @@
 import type { SignHabits } from '../../../../shared/materialImport.ts';
 import type { ColumnPlan } from './columnPlan.ts';
 import { quantitiesOf } from './columnPlan.ts';
+import type { ImportDraft } from './importDraft.ts';
 
 export type HabitName = keyof SignHabits;
 
@@ -18,4 +19,19 @@ export function neededHabits(plan: Pick<ColumnPlan, 'roles'>): HabitName[] {
   if (voigt !== null) needed.push('magnetization');
   if (voigt === 'Kerr angles') needed.push('rotation', 'ellipticity');
   return needed;
+}
+
+/** Whether the direction of m is asked against the axes of a tensor, not against the film. */
+export function isOfTensor(plan: Pick<ColumnPlan, 'roles'>): boolean {
+  return quantitiesOf(plan).voigt !== 'Kerr angles';
+}
+
+/** The answers without the one whose question becomes another with the next plan. */
+export function answersThatStay(
+  { plan, answers }: Pick<ImportDraft, 'plan' | 'answers'>,
+  next: ColumnPlan,
+): ImportDraft['answers'] {
+  if (isOfTensor(plan) === isOfTensor(next)) return answers;
+  const { magnetization: _otherQuestion, ...rest } = answers;
+  return rest;
 }

@@ -27,11 +27,13 @@ export function MaterialActions({ material, groupId, onDeleted }: Props) {
         <Download size={15} aria-hidden />
         Export CSV
       </a>
+      {groupId !== null ? (
+        <ButtonLink to={`${generatePath(paths.importMaterial, { groupId })}?for=${encodeURIComponent(id)}`}>
+          Import Q for it
+        </ButtonLink>
+      ) : null}
       {groupId !== null && own ? (
         <>
-          <ButtonLink to={`${generatePath(paths.importMaterial, { groupId })}?for=${id}`}>
-            Import Q for it
-          </ButtonLink>
           <DeleteMaterial material={material} groupId={groupId} onDeleted={onDeleted} />
           <ButtonLink tone="primary" to={generatePath(paths.editMaterial, { materialId: id })}>
             Edit
