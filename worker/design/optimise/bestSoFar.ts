@@ -1,10 +1,13 @@
 import type { OptimiseDesign, OptimiseResult } from '../../../shared/optimiseDesign.ts';
+import { optimiseTotal } from './effort.ts';
 import type { Film } from './film.ts';
 import { isBetter, valueOf } from './film.ts';
 import { paretoFront } from './front.ts';
 
 type Phase = OptimiseResult['path'][number]['phase'];
 
+/** A path has about this many entries at the most; of a crowd the last one stays. */
+const PATH_ENTRIES = 400;
 /** A thickness this near to a bound is at it, nm. */
 const AT_BOUND_NM = 1e-3;
 
@@ -12,6 +15,8 @@ const AT_BOUND_NM = 1e-3;
 export class BestSoFar {
   readonly #design: OptimiseDesign;
   readonly #start: Film;
+  /** Films between entries of the path. */
+  readonly #leastGap: number;
   readonly #path: OptimiseResult['path'] = [];
   #best: Film | null = null;
   /** Films solved. */
@@ -23,6 +28,7 @@ export class BestSoFar {
   constructor(design: OptimiseDesign, start: Film) {
     this.#design = design;
     this.#start = start;
+    this.#leastGap = optimiseTotal(design) / PATH_ENTRIES;
   }
 
   /** Adds a film to the path when it beats all before it in the first goal. */
@@ -39,6 +45,12 @@ export class BestSoFar {
 
   #enter(film: Film, phase: Phase): void {
     const value = valueOf(this.#design.goal, film, 0);
+    const [before, last] = this.#path.slice(-2);
+    const isCrowded =
+      last?.phase === phase &&
+      before?.phase === phase &&
+      last.evaluations - before.evaluations < this.#leastGap;
+    if (isCrowded) this.#path.pop();
     this.#path.push({ phase, evaluations: this.evaluations, value, thicknessesNm: film.nm });
   }
 

@@ -42,7 +42,14 @@ export async function searchLocally(
   };
   for (let share = FIRST_SIDE; ; share = LATER_SIDE) {
     const start = best;
-    const isPoint = await contract(start, goal, bounds, share, () => spent + bounds.length + 2 <= most, solve);
+    const isPoint = await contract(
+      start,
+      goal,
+      bounds,
+      share,
+      () => spent + bounds.length + 2 <= most,
+      solve,
+    );
     if (!isPoint) return { film: best, isSettled: false };
     if (distanceNm(best, start) <= 10 * POINT_NM) return { film: best, isSettled: true };
   }

@@ -12,7 +12,7 @@ import { costSign } from './film.ts';
 import { repaired } from './repaired.ts';
 
 /** Half the step of the difference that gives a slope, nm: far below any structure, far above rounding. */
-const SLOPE_STEP_NM = 0.005;
+const SLOPE_STEP_NM = 0.001;
 
 /** The films of one optimisation as one thread solves them. */
 export class OptimiseFilms {
