@@ -38,6 +38,10 @@ const groupPages = [
   page(paths.start, async () => (await import('./routes/start/StartPage.tsx')).StartPage),
   page(paths.groupHome, async () => (await import('./routes/groupHome/GroupHomePage.tsx')).GroupHomePage),
   page(paths.runs, async () => (await import('./routes/runs/RunsPage.tsx')).RunsPage),
+  page(
+    paths.compareRuns,
+    async () => (await import('./routes/compareRuns/CompareRunsPage.tsx')).CompareRunsPage,
+  ),
   page(paths.materials, async () => (await import('./routes/materials/MaterialsPage.tsx')).MaterialsPage),
   page(
     paths.compareMaterials,

@@ -1,18 +1,21 @@
 import { useQuery } from '@tanstack/react-query';
-import { useSearchParams } from 'react-router-dom';
+import { useMemo, useState } from 'react';
+import { generatePath, useSearchParams } from 'react-router-dom';
 import type { Membership } from '../../../shared/account.ts';
 import { runStates } from '../../../shared/run.ts';
-import { Button } from '../../components/Button.tsx';
+import { Button, ButtonLink } from '../../components/Button.tsx';
 import { EmptyState } from '../../components/EmptyState.tsx';
 import { Field } from '../../components/Field.tsx';
 import { Page } from '../../components/Page.tsx';
 import { QueryGate } from '../../components/QueryGate.tsx';
 import { Select } from '../../components/Select.tsx';
 import { TextInput } from '../../components/TextInput.tsx';
+import { MOST_RUNS } from '../../features/compare/model/comparable.ts';
 import { runListQuery } from '../../features/runList/api/runList.ts';
 import { RunTable } from '../../features/runList/components/RunTable.tsx';
 import { GroupGate } from '../../features/session/components/GroupGate.tsx';
 import { mayEdit } from '../../features/session/hooks/useSession.ts';
+import { paths } from '../../lib/paths.ts';
 
 const stateOptions = [
   { value: 'all', label: 'Any state' },
@@ -26,6 +29,16 @@ export function RunsPage() {
 function Runs({ group }: { group: Membership }) {
   const runs = useQuery(runListQuery(group.groupId));
   const [search, setSearch] = useSearchParams();
+  const [ids, setIds] = useState<readonly string[]>([]);
+  const picked = useMemo(
+    () => ({
+      ids,
+      most: MOST_RUNS,
+      onToggle: (id: string) =>
+        setIds((before) => (before.includes(id) ? before.filter((one) => one !== id) : [...before, id])),
+    }),
+    [ids],
+  );
   const words = search.get('q') ?? '';
   const state = stateOptions.find((option) => option.value === search.get('state'))?.value ?? 'all';
   const change = (key: string, value: string) =>
@@ -40,7 +53,11 @@ function Runs({ group }: { group: Membership }) {
   const wanted = words.trim().toLowerCase();
 
   return (
-    <Page title="Runs" subtitle={`Stored sweeps of ${group.groupName}, each with everything it rests on.`}>
+    <Page
+      title="Runs"
+      subtitle={`Stored sweeps of ${group.groupName}, each with everything it rests on.`}
+      actions={<CompareLink groupId={group.groupId} ids={ids} />}
+    >
       <QueryGate query={runs} what="runs">
         {(data) => {
           const found = data.runs.filter(
@@ -85,6 +102,7 @@ function Runs({ group }: { group: Membership }) {
                   groupId={group.groupId}
                   runs={found}
                   mayEdit={mayEdit(group)}
+                  picked={picked}
                   empty={
                     <EmptyState
                       title="No run fits"
@@ -100,5 +118,16 @@ function Runs({ group }: { group: Membership }) {
         }}
       </QueryGate>
     </Page>
+  );
+}
+
+/** Leads to the comparison of what is ticked. */
+function CompareLink({ groupId, ids }: { groupId: string; ids: readonly string[] }) {
+  const to = `${generatePath(paths.compareRuns, { groupId })}${ids.length > 0 ? `?runs=${ids.join(',')}` : ''}`;
+  return (
+    <ButtonLink to={to}>
+      Compare
+      <span aria-live="polite">{ids.length > 0 ? ` (${ids.length} of ${MOST_RUNS} ticked)` : ''}</span>
+    </ButtonLink>
   );
 }

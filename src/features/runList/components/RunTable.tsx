@@ -14,16 +14,33 @@ import { describeAxes } from '../describeAxis.ts';
 import { DeleteRunDialog } from './DeleteRunDialog.tsx';
 import { RunStateCell } from './RunStateCell.tsx';
 
-type RunTableProps = { groupId: string; runs: readonly RunSummary[]; mayEdit: boolean; empty: ReactNode };
+type RunTableProps = {
+  groupId: string;
+  runs: readonly RunSummary[];
+  mayEdit: boolean;
+  empty: ReactNode;
+  /** Runs ticked for a comparison; no boxes where there is nothing to tick for. */
+  picked?: { ids: readonly string[]; onToggle: (id: string) => void; most: number };
+};
 
-export function RunTable({ groupId, runs, mayEdit, empty }: RunTableProps) {
+export function RunTable({ groupId, runs, mayEdit, empty, picked }: RunTableProps) {
   const [deleting, setDeleting] = useState<RunSummary | null>(null);
   const { mutate: cancel, isPending, variables } = useCancelRun(groupId);
   const notify = useNotify();
 
   const columns = useMemo(() => {
     const shown: Column<RunSummary>[] = [
-      { id: 'name', header: 'Run', value: (run) => run.name, cell: (run) => <RunName run={run} /> },
+      {
+        id: 'name',
+        header: 'Run',
+        value: (run) => run.name,
+        cell: (run) => (
+          <div className="flex items-start gap-2.5">
+            {picked ? <PickBox run={run} picked={picked} /> : null}
+            <RunName run={run} />
+          </div>
+        ),
+      },
       {
         id: 'sweep',
         header: 'Sweep',
@@ -80,7 +97,7 @@ export function RunTable({ groupId, runs, mayEdit, empty }: RunTableProps) {
       });
     }
     return shown;
-  }, [mayEdit, cancel, isPending, variables, notify]);
+  }, [mayEdit, cancel, isPending, variables, notify, picked]);
 
   return (
     <>
@@ -94,6 +111,20 @@ export function RunTable({ groupId, runs, mayEdit, empty }: RunTableProps) {
       />
       {deleting ? <DeleteRunDialog run={deleting} onClose={() => setDeleting(null)} /> : null}
     </>
+  );
+}
+
+function PickBox({ run, picked }: { run: RunSummary; picked: NonNullable<RunTableProps['picked']> }) {
+  const ticked = picked.ids.includes(run.id);
+  return (
+    <input
+      type="checkbox"
+      aria-label={`Compare ${run.name}`}
+      checked={ticked}
+      disabled={!ticked && (picked.ids.length >= picked.most || run.progress.state !== 'done')}
+      onChange={() => picked.onToggle(run.id)}
+      className="mt-[3px] size-4 shrink-0 accent-accent"
+    />
   );
 }
 
