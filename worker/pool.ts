@@ -2,6 +2,8 @@ import { availableParallelism } from 'node:os';
 import type { SolveRequest, SolveResponse } from '../shared/solve.ts';
 import { designPool } from './designPool.ts';
 import type { DesignPool } from './designPool.ts';
+import { livePool } from './livePool.ts';
+import type { LivePool } from './livePool.ts';
 import { materialPool } from './materialPool.ts';
 import type { MaterialPool } from './materialPool.ts';
 import { runLimited } from './runLimited.ts';
@@ -23,7 +25,8 @@ type PoolState = { ok: boolean; detail: string };
 
 /** The threads of one process: all numbers of Skewlight are computed here. */
 export type ComputePool = MaterialPool &
-  DesignPool & {
+  DesignPool &
+  LivePool & {
     /**
      * Solves a request whose input is valid (schema and `solveRules.ts`); a small one is answered while sweeps run.
      *
@@ -58,6 +61,7 @@ export function createPool(options: { threads?: number; taskFile?: URL; heapMb?:
   return {
     ...materialPool({ small, large: sweeps }),
     ...designPool(sweeps),
+    ...livePool({ small, large: sweeps }),
     solve(request) {
       const chosen = microsecondsOf(request) <= SMALL_MICROSECONDS ? small : sweeps;
       return runLimited(chosen, 'solve', request, {

@@ -4,6 +4,9 @@ import type { ImportMapping, ImportTable } from '../shared/materialImport.ts';
 import type { FitResult } from '../shared/materialFit.ts';
 import type { LibrarySolveCase, SolveCase, SolveRequest, SolveResponse } from '../shared/solve.ts';
 import type { SensitivityAnswer, SensitivityRequest } from '../shared/toleranceDesign.ts';
+import type { AngleFeatures } from '../shared/live.ts';
+import type { StackDocument } from '../shared/stack.ts';
+import { angleFeatures as featuresOf } from './design/angleFeatures.ts';
 import type { DesignTask } from './design/designInput.ts';
 import { designStep as stepTaken } from './design/designTask.ts';
 import { sensitivities } from './design/tolerance/sensitivity.ts';
@@ -21,8 +24,11 @@ import { fitMaterial } from './fit/fitMaterial.ts';
 import { solveRequest } from './optics/solveRequest.ts';
 import { releaseMemory } from './releaseMemory.ts';
 import { resolveCases } from './resolveCases.ts';
+import { liveCurve as curveInto, readMaterial } from './sweep/liveCurve.ts';
+import type { LiveCurveTask, SharedMaterial } from './sweep/liveCurve.ts';
 import type { ChunkTask } from './sweep/runSweep.ts';
 import { SharedResult } from './sweep/sharedResult.ts';
+import { materialKey } from './sweep/sweepInput.ts';
 import type { SweepInput } from './sweep/sweepInput.ts';
 import { SweepSolver } from './sweep/sweepSolver.ts';
 import { warmUp } from './sweep/warmUp.ts';
@@ -106,6 +112,23 @@ export function sensitivity(task: {
   materials: ResolvableMaterial[];
 }): TaskOutcome<SensitivityAnswer> {
   return outcomeOf(() => sensitivities(task.request.document, task.request.points, task.materials));
+}
+
+export function liveCurve(task: LiveCurveTask): TaskOutcome<null> {
+  return outcomeOf(() => {
+    curveInto(task);
+    return null;
+  });
+}
+
+export function angleFeatures(task: {
+  document: StackDocument;
+  materials: SharedMaterial[];
+}): TaskOutcome<AngleFeatures> {
+  return outcomeOf(() => {
+    const materials = task.materials.map(readMaterial);
+    return featuresOf(task.document, new Map(materials.map((material) => [materialKey(material), material])));
+  });
 }
 
 /** Makes a thread load and compile its code before the first question. */

@@ -4,6 +4,7 @@ import { developmentRoutes } from './development/developmentRoutes.ts';
 import { healthRoutes } from './health/healthRoutes.ts';
 import { importRoutes } from './imports/importRoutes.ts';
 import { linkRoutes } from './links/linkRoutes.ts';
+import { liveRoutes } from './live/liveRoutes.ts';
 import { materialEditRoutes } from './materials/materialEditRoutes.ts';
 import { materialFitRoutes } from './materials/materialFitRoutes.ts';
 import { materialRoutes } from './materials/materialRoutes.ts';
@@ -17,6 +18,8 @@ import { sessionRoutes } from './session/sessionRoutes.ts';
 import { sharedRoutes } from './shared/sharedRoutes.ts';
 import { solveRoutes } from './solve/solveRoutes.ts';
 import { stackRoutes } from './stacks/stackRoutes.ts';
+import { studyLinkRoutes } from './studies/studyLinkRoutes.ts';
+import { studyRoutes } from './studies/studyRoutes.ts';
 import { tokenRoutes } from './tokens/tokenRoutes.ts';
 
 const described: Route[] = [
@@ -32,9 +35,12 @@ const described: Route[] = [
   ...materialFitRoutes,
   ...importRoutes,
   ...solveRoutes,
+  ...liveRoutes,
   ...runRoutes,
   ...runEventRoutes,
   ...runFileRoutes,
+  ...studyRoutes,
+  ...studyLinkRoutes,
   ...linkRoutes,
   ...sharedRoutes,
   ...developmentRoutes,

@@ -180,13 +180,14 @@ export function uploadRoute<
 export function streamRoute<
   Path extends string,
   Who extends Actor | null,
+  Body extends Schema = undefined,
   Query extends Schema = undefined,
   Subject = null,
 >(
-  declaration: Declaration<Path, undefined, Query, Who, Subject> & {
+  declaration: Declaration<Path, Body, Query, Who, Subject> & {
     answer: { contentType: string; schema?: ZodType };
     handler: (
-      context: RouteContext<Path, undefined, Output<Query>, Who> & { subject: Subject },
+      context: RouteContext<Path, Output<Body>, Output<Query>, Who> & { subject: Subject },
     ) => Promise<void> | void;
   },
 ): Route {
