@@ -1,6 +1,7 @@
 import type { Issue } from '../../../shared/error.ts';
 import type { OptimiseDesign } from '../../../shared/optimiseDesign.ts';
 import type { StackLayer } from '../../../shared/stack.ts';
+import { addsIntensities } from '../../../shared/stackCase.ts';
 import { drawnLayers } from '../expandBlocks.ts';
 
 /** What the oxide and the parts without magnetization take of a layer: it cannot be thinner. */
@@ -26,15 +27,12 @@ export function checkOptimise(design: OptimiseDesign): Issue[] {
       issues.push({ path: `${at}.layerId`, message: `is used twice: ${layerId}` });
     }
   });
-  const { thicknessPercent = 0, divergenceDeg = 0, bandwidthNm = 0 } = document.spread ?? {};
-  const addsIntensities =
-    document.backside !== undefined || thicknessPercent > 0 || divergenceDeg > 0 || bandwidthNm > 0;
   for (const name of ['goal', 'second'] as const) {
     const goal = design[name];
     if (goal?.layerId !== undefined && !layers.has(goal.layerId)) {
       issues.push({ path: `${name}.layerId`, message: `names no layer of the film: ${goal.layerId}` });
     }
-    if (goal?.quantity === 'amplitude' && addsIntensities) {
+    if (goal?.quantity === 'amplitude' && addsIntensities(document)) {
       const message = 'cannot be the amplitude: with a thick slab or averages only intensities add up';
       issues.push({ path: `${name}.quantity`, message });
     }
