@@ -57,7 +57,7 @@ describe('the same physical data', () => {
     const habits = { ...ownHabits, magnetization: 'out of the film' } as const;
     const { voigt, sentences } = convertTable(read(rows), mappingOf('nm', 'Q', 'n, k', habits), null);
     expect(voigt!.q).toEqual(physical.map(({ voigt: [re, im] }) => [-re, -im]));
-    expect(sentences.join(' ')).toMatch(/out of the film.*multiplied by -1/);
+    expect(sentences.join(' ')).toMatch(/along -z of the axes of its tensor.*multiplied by -1/);
   });
 
   test('with k written without its sign, N = n - ik, gives the same k and a warning that says so', () => {
