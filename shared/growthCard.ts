@@ -95,5 +95,6 @@ export const sharedGrowthCardSchema = growthCardSchema.omit({ groupId: true, stu
 
 export type CreateGrowthCard = z.input<typeof createGrowthCardSchema>;
 export type GrowthCard = z.infer<typeof growthCardSchema>;
+export type SharedGrowthCard = z.infer<typeof sharedGrowthCardSchema>;
 export type CardLayer = z.infer<typeof cardLayerSchema>;
 export type CardReading = z.infer<typeof cardReadingSchema>;

@@ -7,10 +7,20 @@ import { runs } from './0004-runs.ts';
 import { linksAndActivity } from './0005-links-and-activity.ts';
 import { materialImports } from './0006-material-imports.ts';
 import { designs } from './0007-designs.ts';
+import { studiesAndCards } from './0008-studies-and-cards.ts';
 import type { Migration, MigrationContext } from './migration.ts';
 
 // Named here, not found by a pattern: the bundle has no folder of migrations to look into.
-const migrations: Migration[] = [people, materials, stacks, runs, linksAndActivity, materialImports, designs];
+const migrations: Migration[] = [
+  people,
+  materials,
+  stacks,
+  runs,
+  linksAndActivity,
+  materialImports,
+  designs,
+  studiesAndCards,
+];
 
 /** Any number that nothing else in the database locks; servers that start together wait for one another. */
 const LOCK = 0x5ce1_11a7;

@@ -2,6 +2,7 @@ import { Sequelize } from 'sequelize';
 import { defineActivity } from './activity.ts';
 import { defineApiToken } from './apiToken.ts';
 import { defineGroup } from './group.ts';
+import { defineGrowthCard } from './growthCard.ts';
 import { defineMaterial } from './material.ts';
 import { defineMaterialImport } from './materialImport.ts';
 import { defineMaterialVersion } from './materialVersion.ts';
@@ -12,6 +13,8 @@ import { defineRunChunk } from './runChunk.ts';
 import { defineShareLink } from './shareLink.ts';
 import { defineStack } from './stack.ts';
 import { defineStackVersion } from './stackVersion.ts';
+import { defineStudy } from './study.ts';
+import { defineStudyVersion } from './studyVersion.ts';
 import { defineUser } from './user.ts';
 
 export type Models = ReturnType<typeof createModels>;
@@ -43,17 +46,25 @@ export function createModels(databaseUrl: string) {
     StackVersion: defineStackVersion(sequelize),
     Run: defineRun(sequelize),
     RunChunk: defineRunChunk(sequelize),
+    Study: defineStudy(sequelize),
+    StudyVersion: defineStudyVersion(sequelize),
+    GrowthCard: defineGrowthCard(sequelize),
     ShareLink: defineShareLink(sequelize),
     Activity: defineActivity(sequelize),
   };
   const { User, Group, Membership, Stack, StackVersion, Run, ShareLink } = models;
+  const { Study, StudyVersion, GrowthCard } = models;
   Membership.belongsTo(User, { as: 'user', foreignKey: 'userId' });
   Membership.belongsTo(Group, { as: 'group', foreignKey: 'groupId' });
   Stack.hasMany(StackVersion, { as: 'versions', foreignKey: 'stackId' });
   StackVersion.belongsTo(User, { as: 'author', foreignKey: 'authorId' });
+  Study.hasMany(StudyVersion, { as: 'versions', foreignKey: 'studyId' });
+  StudyVersion.belongsTo(User, { as: 'author', foreignKey: 'authorId' });
   Run.belongsTo(User, { as: 'createdBy', foreignKey: 'createdById' });
   Run.belongsTo(Group, { as: 'group', foreignKey: 'groupId' });
   ShareLink.belongsTo(User, { as: 'createdBy', foreignKey: 'createdById' });
   ShareLink.belongsTo(Run, { as: 'run', foreignKey: 'runId' });
+  ShareLink.belongsTo(Study, { as: 'study', foreignKey: 'studyId' });
+  ShareLink.belongsTo(GrowthCard, { as: 'card', foreignKey: 'cardId' });
   return models;
 }

@@ -8,14 +8,18 @@ import type {
   NonAttribute,
   Sequelize,
 } from 'sequelize';
+import type { GrowthCard } from './growthCard.ts';
 import type { Run } from './run.ts';
+import type { Study } from './study.ts';
 import type { User } from './user.ts';
 
-/** A link that opens one run without an account. Only the SHA-256 of its token is stored. */
+/** A link that opens one run, design, study or growth card without an account. Only the SHA-256 of its token is stored. */
 export interface ShareLink extends Model<InferAttributes<ShareLink>, InferCreationAttributes<ShareLink>> {
   id: CreationOptional<string>;
-  /** Null once the run is deleted: the link is revoked with it and keeps answering 410. */
+  /** At most one of the three; none once its subject is deleted: the link is revoked with it and keeps answering 410. */
   runId: string | null;
+  studyId: CreationOptional<string | null>;
+  cardId: CreationOptional<string | null>;
   groupId: string;
   tokenHash: string;
   label: string;
@@ -27,6 +31,8 @@ export interface ShareLink extends Model<InferAttributes<ShareLink>, InferCreati
   createdAt: CreationOptional<Date>;
   /** Present when the query included it. */
   run?: NonAttribute<Run | null>;
+  study?: NonAttribute<Study | null>;
+  card?: NonAttribute<GrowthCard | null>;
   createdBy?: NonAttribute<User | null>;
 }
 
@@ -36,6 +42,8 @@ export function defineShareLink(sequelize: Sequelize): ModelStatic<ShareLink> {
     {
       id: { type: DataTypes.UUID, primaryKey: true, defaultValue: DataTypes.UUIDV4 },
       runId: DataTypes.UUID,
+      studyId: DataTypes.UUID,
+      cardId: DataTypes.UUID,
       groupId: { type: DataTypes.UUID, allowNull: false },
       tokenHash: { type: DataTypes.TEXT, allowNull: false },
       label: { type: DataTypes.TEXT, allowNull: false },

@@ -3,6 +3,7 @@ import type { Role } from '../../shared/account.ts';
 import { Refusal } from '../errors.ts';
 import type { Actor } from './actor.ts';
 import { revokeApiToken } from './apiToken.ts';
+import { deleteCard, readCard } from './growthCard.ts';
 import { addToGroup, manageGroup, readGroup } from './group.ts';
 import { changeMaterial, readMaterial } from './material.ts';
 import { deleteImport, readImport } from './materialImport.ts';
@@ -11,6 +12,7 @@ import { anyone, signedIn, signedInWithSession } from './policy.ts';
 import { changeRun, readRun } from './run.ts';
 import { revokeLink } from './shareLink.ts';
 import { changeStack, readStack } from './stack.ts';
+import { changeStudy, readStudy } from './study.ts';
 
 const actorWith = (role: Role | null, via: Actor['via'] = 'session'): Actor => ({
   userId: 'me',
@@ -43,6 +45,10 @@ describe('what somebody outside, a viewer, an editor and an owner may', () => {
     ['change a stack', (actor: Actor) => changeStack.decide(actor, inGroup), 'hide refuse allow allow'],
     ['read a run', (actor: Actor) => readRun.decide(actor, inGroup), 'hide allow allow allow'],
     ['change a run', (actor: Actor) => changeRun.decide(actor, inGroup), 'hide refuse allow allow'],
+    ['read a study', (actor: Actor) => readStudy.decide(actor, inGroup), 'hide allow allow allow'],
+    ['change a study', (actor: Actor) => changeStudy.decide(actor, inGroup), 'hide refuse allow allow'],
+    ['read a card', (actor: Actor) => readCard.decide(actor, inGroup), 'hide allow allow allow'],
+    ['delete a card', (actor: Actor) => deleteCard.decide(actor, inGroup), 'hide refuse allow allow'],
     ['revoke a link', (actor: Actor) => revokeLink.decide(actor, inGroup), 'hide refuse allow allow'],
     [
       'read a material of the group',

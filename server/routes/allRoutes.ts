@@ -1,5 +1,9 @@
 import type { Route } from '../routing/route.ts';
 import { accountRoutes } from './accounts/accountRoutes.ts';
+import { designFileRoutes } from './designs/designFileRoutes.ts';
+import { designLinkRoutes } from './designs/designLinkRoutes.ts';
+import { designRoutes } from './designs/designRoutes.ts';
+import { sensitivityRoutes } from './designs/sensitivityRoutes.ts';
 import { developmentRoutes } from './development/developmentRoutes.ts';
 import { healthRoutes } from './health/healthRoutes.ts';
 import { importRoutes } from './imports/importRoutes.ts';
@@ -15,6 +19,7 @@ import { runEventRoutes } from './runs/runEventRoutes.ts';
 import { runFileRoutes } from './runs/runFileRoutes.ts';
 import { runRoutes } from './runs/runRoutes.ts';
 import { sessionRoutes } from './session/sessionRoutes.ts';
+import { sharedDesignRoutes } from './shared/sharedDesignRoutes.ts';
 import { sharedRoutes } from './shared/sharedRoutes.ts';
 import { solveRoutes } from './solve/solveRoutes.ts';
 import { stackRoutes } from './stacks/stackRoutes.ts';
@@ -39,10 +44,15 @@ const described: Route[] = [
   ...runRoutes,
   ...runEventRoutes,
   ...runFileRoutes,
+  ...designRoutes,
+  ...designFileRoutes,
+  ...designLinkRoutes,
+  ...sensitivityRoutes,
   ...studyRoutes,
   ...studyLinkRoutes,
   ...linkRoutes,
   ...sharedRoutes,
+  ...sharedDesignRoutes,
   ...developmentRoutes,
 ];
 

@@ -30,6 +30,11 @@ export type ActivityAction =
   | 'design.cancel'
   | 'design.rerun'
   | 'design.delete'
+  | 'study.create'
+  | 'study.update'
+  | 'study.delete'
+  | 'card.create'
+  | 'card.delete'
   | 'link.create'
   | 'link.revoke'
   | 'link.open-in-group';

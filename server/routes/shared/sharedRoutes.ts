@@ -2,7 +2,7 @@ import { openInGroupSchema, sharedSubjectSchema } from '../../../shared/link.ts'
 import { sharedRunSchema } from '../../../shared/run.ts';
 import { stackSchema } from '../../../shared/stack.ts';
 import type { AppDependencies } from '../../dependencies.ts';
-import { isSweepRun } from '../../models/run.ts';
+import { isDesignRun, isSweepRun } from '../../models/run.ts';
 import { addToGroup } from '../../policies/group.ts';
 import { anyone } from '../../policies/policy.ts';
 import { presentSharedRun } from '../../presenters/presentRun.ts';
@@ -12,13 +12,14 @@ import type { Route } from '../../routing/route.ts';
 import { route, streamRoute } from '../../routing/route.ts';
 import { countLinkUse, openLink } from '../../services/links.ts';
 import { openSharedRun } from '../../services/openSharedRun.ts';
+import { sendDesignFile } from '../../services/sendDesignFile.ts';
 import { sendRunFile } from '../../services/sendRunFile.ts';
 import { readingsQuerySchema } from '../runs/readingsQuery.ts';
 
 /** What a link opens is the run as it was stored: nothing here looks at the stack or the materials of today. */
 async function load(context: { dependencies: AppDependencies; params: { token: string } }) {
   const shared = await openLink(context.dependencies.models, context.params.token);
-  return shared && isSweepRun(shared.run) ? { link: shared.link, run: shared.run } : null;
+  return shared && 'run' in shared && isSweepRun(shared.run) ? { link: shared.link, run: shared.run } : null;
 }
 
 const readSubject = route({
@@ -75,13 +76,18 @@ const readSharedCsv = streamRoute({
 const readSharedInput = streamRoute({
   method: 'get',
   path: '/shared/:token/input.json',
-  summary: 'A request of the solve contract that reproduces the shared run on the command line.',
+  summary: 'A request of the solve contract that reproduces the shared run or design on the command line.',
   noun: 'link',
   policy: anyone,
-  load,
+  async load({ dependencies, params }) {
+    const shared = await openLink(dependencies.models, params.token);
+    return shared && 'run' in shared ? shared.run : null;
+  },
   answer: { contentType: 'application/json' },
-  handler: ({ dependencies, subject, response }) =>
-    sendRunFile(dependencies, subject.run, { kind: 'input' }, response),
+  async handler({ dependencies, subject, response }) {
+    if (isDesignRun(subject)) await sendDesignFile(dependencies, subject, 'input', response);
+    else if (isSweepRun(subject)) await sendRunFile(dependencies, subject, { kind: 'input' }, response);
+  },
 });
 
 const openInGroup = route({
