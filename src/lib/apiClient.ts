@@ -91,9 +91,18 @@ export async function readAnswer<Schema extends z.ZodType>(
   );
 }
 
-/** One binary download, such as the stored values of a run. Rejects as `request` does. */
-export async function requestBinary({ path, signal }: BinaryRequest): Promise<ArrayBuffer> {
-  const response = await answerTo(path, { ...(signal ? { signal } : {}) });
+/** One binary answer, such as the stored values of a run; to a question with a body, by POST. Rejects as `request` does. */
+export async function requestBinary({
+  path,
+  body,
+  signal,
+}: BinaryRequest & { body?: unknown }): Promise<ArrayBuffer> {
+  const response = await answerTo(path, {
+    ...(body === undefined
+      ? {}
+      : { method: 'POST', headers: { 'content-type': 'application/json' }, body: JSON.stringify(body) }),
+    ...(signal ? { signal } : {}),
+  });
   return response.arrayBuffer();
 }
 

@@ -4,6 +4,7 @@ import type { KeyboardEvent, ReactNode } from 'react';
 import { nearestIndex, valueAt } from './curveValues.ts';
 import { echarts, renderPng, renderSvg } from './plotEngine.ts';
 import { fullWindow, layoutPlot } from './plotLayout.ts';
+import type { PlotLayout } from './plotLayout.ts';
 import { plotOption } from './plotOption.ts';
 import { PlotOverlay } from './PlotOverlay.tsx';
 import { PlotReadout } from './PlotReadout.tsx';
@@ -11,7 +12,7 @@ import { zoomWindow } from './plotScale.ts';
 import type { Window } from './plotScale.ts';
 import { PlotToolbar } from './PlotToolbar.tsx';
 import { usePlotTokens } from './plotTokens.ts';
-import type { PlotAxis, PlotSeries } from './plotTypes.ts';
+import type { PlotAxis, PlotMark, PlotSeries } from './plotTypes.ts';
 import { fileNameOf, saveFile } from './saveFile.ts';
 import { useElementWidth } from './useElementWidth.ts';
 import { usePlotPointer } from './usePlotPointer.ts';
@@ -26,6 +27,8 @@ type Props = {
   ariaLabel: string;
   /** Where the working point stands on x. */
   marker?: number;
+  /** Named places on x, drawn as fine lines. */
+  marks?: readonly PlotMark[];
   /** Sets the working point; without it a click does nothing. */
   onPickX?: (x: number) => void;
   /** Told the x at which values are read, null when nowhere. */
@@ -36,6 +39,8 @@ type Props = {
   controls?: ReactNode;
   /** Further files beside PNG and SVG. */
   downloads?: ReactNode;
+  /** Under the figure and along its x axis, such as bars of a window; follows the zoom. */
+  below?: (layout: PlotLayout) => ReactNode;
   /** The SVG renderer is for tests: jsdom has no canvas. */
   renderer?: 'canvas' | 'svg';
 };
@@ -153,6 +158,7 @@ export function LinePlot(props: Props) {
           size={size}
           cursor={shown}
           marker={marker}
+          marks={props.marks ?? noMarks}
           selection={pointer.selection}
         />
         {shown !== null && <PlotReadout layout={layout} rows={rows} cursor={shown} title={title} />}
@@ -177,9 +183,12 @@ export function LinePlot(props: Props) {
           {onPickX ? ', Enter sets the working point' : ''}.
         </span>
       </div>
+      {props.below?.(layout)}
     </figure>
   );
 }
+
+const noMarks: readonly PlotMark[] = [];
 
 /** Samples (1) or share of the grid that a key moves the cursor by. */
 const keySteps: Record<string, number> = {

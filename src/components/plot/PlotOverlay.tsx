@@ -1,7 +1,7 @@
 import { valueAt } from './curveValues.ts';
 import type { PlotLayout } from './plotLayout.ts';
 import { toPixel } from './plotScale.ts';
-import type { PlotSeries } from './plotTypes.ts';
+import type { PlotMark, PlotSeries } from './plotTypes.ts';
 
 type Props = {
   layout: PlotLayout;
@@ -9,11 +9,12 @@ type Props = {
   size: { width: number; height: number };
   cursor: number | null;
   marker: number | undefined;
+  marks: readonly PlotMark[];
   selection: { startX: number; x: number } | null;
 };
 
 /** Crosshair, working point and zoom selection, drawn over the curves so that they move without a redraw. */
-export function PlotOverlay({ layout, series, size, cursor, marker, selection }: Props) {
+export function PlotOverlay({ layout, series, size, cursor, marker, marks, selection }: Props) {
   const { frame } = layout;
   const visible = (value: number) => value >= layout.x.min && value <= layout.x.max;
   return (
@@ -34,6 +35,22 @@ export function PlotOverlay({ layout, series, size, cursor, marker, selection }:
           opacity="0.14"
         />
       )}
+      {marks
+        .filter(({ x }) => visible(x))
+        .map(({ x, label }) => (
+          <g key={`${label} ${x}`}>
+            <VerticalLine layout={layout} x={toPixel(layout.x, x)} stroke="var(--muted)" dash="1 3" />
+            <text
+              x={toPixel(layout.x, x)}
+              y={frame.top - 5}
+              textAnchor="middle"
+              fontSize="11"
+              fill="var(--muted)"
+            >
+              {label}
+            </text>
+          </g>
+        ))}
       {marker !== undefined && visible(marker) && (
         <g>
           <VerticalLine layout={layout} x={toPixel(layout.x, marker)} stroke="var(--accent)" />

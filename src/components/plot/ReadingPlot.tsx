@@ -3,7 +3,9 @@ import type { ReactNode } from 'react';
 import type { ReadingName, SweepAxis } from '../../../shared/run.ts';
 import type { AngleUnit } from '../../lib/format.ts';
 import { LinePlot } from './LinePlot.tsx';
+import type { PlotMark } from './plotTypes.ts';
 import { readingSeries, sweepXAxis } from './readingSeries.ts';
+import { useSteadyAxes } from './useSteadyAxes.ts';
 
 type Props = {
   axis: SweepAxis;
@@ -19,6 +21,10 @@ type Props = {
   marker?: number | undefined;
   onPickX?: ((x: number) => void) | undefined;
   onCursorX?: ((x: number | null) => void) | undefined;
+  /** Whether the curves are being moved: the scales then stay as they are. */
+  steady?: boolean | undefined;
+  /** Places on x with a name. */
+  marks?: readonly PlotMark[] | undefined;
   fileName: string;
   controls?: ReactNode;
   downloads?: ReactNode;
@@ -27,19 +33,23 @@ type Props = {
 
 /** Readings along a sweep, drawn as everywhere in the program. */
 export function ReadingPlot(props: Props) {
-  const { axis, layerName, grid, columns, readings, unit, log, marker, onPickX, onCursorX, ...rest } = props;
+  const { axis, layerName, grid, columns, readings, unit, log, marker, onPickX, onCursorX, ...others } =
+    props;
+  const { steady = false, marks, ...rest } = others;
   const data = useMemo(
     () => readingSeries(grid, columns, readings, unit, log),
     [grid, columns, readings, unit, log],
   );
+  const yAxes = useSteadyAxes(data, steady);
   const xAxis = useMemo(() => sweepXAxis(axis, layerName), [axis, layerName]);
   return (
     <LinePlot
       {...rest}
       series={data.series}
-      yAxes={data.yAxes}
+      yAxes={yAxes}
       xAxis={xAxis}
       ariaLabel={`Readings against ${xAxis.label}`}
+      {...(marks ? { marks } : {})}
       {...(marker === undefined ? {} : { marker })}
       {...(onPickX ? { onPickX } : {})}
       {...(onCursorX ? { onCursorX } : {})}

@@ -16,6 +16,8 @@ export type PlotSeries = {
   symbol?: 'none' | 'open';
   /** Samples that the curve was made from, such as tabulated ones; drawn as small open marks, not read out. */
   points?: { x: ArrayLike<number>; y: ArrayLike<number> };
+  /** Lower and upper edge at the x of the curve, such as a tolerance band; NaN where there is none. */
+  band?: { low: ArrayLike<number>; high: ArrayLike<number> };
   /** Which of the y axes: 0 is on the left, the others on the right. */
   yAxisIndex?: number;
   /** A value as read out, unit included; as many digits as the axis needs when left out. */
@@ -37,3 +39,6 @@ export type PlotAxis = {
 
 /** Pixels of the plotting area within the figure. */
 export type PlotFrame = { left: number; right: number; top: number; bottom: number };
+
+/** A place on x that has a name, such as an angle at which a curve passes through 0. */
+export type PlotMark = { x: number; label: string };

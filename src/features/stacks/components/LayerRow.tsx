@@ -7,6 +7,7 @@ import { useFilm } from './film.ts';
 import { stepItem } from './itemActions.ts';
 import { LayerControls } from './LayerControls.tsx';
 import { BottomPart, GradedBand, TopParts } from './SampleMarks.tsx';
+import { ThicknessHandle } from './ThicknessHandle.tsx';
 
 type Props = {
   layer: StackLayer;
@@ -52,6 +53,7 @@ export function LayerRow({ layer, position, height, depthNm, fillAbove, dragged,
         <LayerControls layer={layer} position={position} onGrab={onGrab} />
       </div>
       <BottomPart layer={layer} />
+      <ThicknessHandle layer={layer} />
       {depthNm !== null && <DepthTick depthNm={depthNm} />}
     </li>
   );

@@ -62,7 +62,9 @@ export function ReadingsStrip({ live, input, transverse, unit, ceiling, averaged
 export function SolveProblem({ error }: { error: Error }) {
   const issues = error instanceof ApiError ? error.issues : [];
   const first = issues[0];
-  const text = first ? `${first.path.replace(/^cases\[\d+\]\.?/, '')}: ${first.message}` : error.message;
+  const text = first
+    ? `${first.path.replace(/^(cases\[\d+\]|document)\.?/, '')}: ${first.message}`
+    : error.message;
   const more = new Set(issues.map(({ message }) => message)).size - 1;
   return (
     <p role="alert" className="mt-2 rounded-control bg-danger-soft px-3 py-1.5 text-note text-danger">

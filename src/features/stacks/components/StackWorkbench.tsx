@@ -8,10 +8,12 @@ import { addsIntensities } from '../../../../shared/stackCase.ts';
 import { Button } from '../../../components/Button.tsx';
 import { ApiError } from '../../../lib/apiClient.ts';
 import type { AngleUnit } from '../../../lib/format.ts';
+import { useMoving } from '../../../lib/useMoving.ts';
 import { useEditorKeys } from '../hooks/useEditorKeys.ts';
 import { useMaterials } from '../hooks/useMaterials.ts';
 import type { MaterialAt } from '../hooks/useMaterials.ts';
 import { useReadings } from '../hooks/useReadings.ts';
+import { useSteadySweep } from '../hooks/useSteadySweep.ts';
 import { useStackEditor } from '../hooks/useStackEditor.ts';
 import type { EditDocument } from '../hooks/useStackEditor.ts';
 import { useView } from '../hooks/useView.ts';
@@ -103,7 +105,9 @@ export function StackWorkbench({
   const materials = useMaterials(library, film, materialAt);
   const [view, setView] = useView(film.workingPoint);
   const { point } = view;
-  const axes = useMemo(() => axesOf(view, film, materials), [view, film, materials]);
+  const moving = useMoving(film);
+  const usualAxes = useMemo(() => axesOf(view, film, materials), [view, film, materials]);
+  const axes = useSteadySweep(usualAxes, moving);
   const rangeNm = wavelengthRange(point, axes);
   const live = useReadings(film, point);
   const vectors = useMemo(() => workingVectors(film, point.magnetization), [film, point]);
@@ -224,6 +228,7 @@ export function StackWorkbench({
               .filter(({ kind }) => kind === 'extended')
               .map(({ text }) => text)}
             transverse={transverse}
+            moving={moving}
             onView={setView}
             keep={mayEdit ? keep : null}
           />

@@ -1,3 +1,4 @@
+import { useMemo } from 'react';
 import type { ReadingName, SweepAxis } from '../../../../shared/run.ts';
 import type { StackDocument } from '../../../../shared/stack.ts';
 import { AxesPlot } from '../../../components/plot/AxesPlot.tsx';
@@ -8,12 +9,16 @@ import { ReadingPlot } from '../../../components/plot/ReadingPlot.tsx';
 import { ReadingSelect } from '../../../components/plot/ReadingSelect.tsx';
 import type { Family } from '../../../components/plot/readingView.ts';
 import { fileNameOf, saveFile, toCsv } from '../../../components/plot/saveFile.ts';
+import { useAngleFeatures } from '../hooks/useAngleFeatures.ts';
 import type { LiveSweep } from '../hooks/useSweep.ts';
+import { angleMarks } from '../model/angleMarks.ts';
+import type { AngleMark } from '../model/angleMarks.ts';
 import { targetName } from '../model/axisTargets.ts';
 import { findItem, isBlock } from '../model/items.ts';
 import type { Materials } from '../model/media.ts';
 import type { Sweep } from '../model/solveStates.ts';
 import type { ViewState } from '../model/viewState.ts';
+import { AngleMarks } from './AngleMarks.tsx';
 
 type Props = {
   title: string;
@@ -27,12 +32,20 @@ type Props = {
   /** Readings that a map or a family can show. */
   choices: readonly ReadingName[];
   height: number;
+  /** Whether the film is being moved: the scales then stay as they are. */
+  moving: boolean;
   onView: (change: Partial<ViewState>) => void;
 };
 
 /** The preview as it suits its axes: curves of several readings, a family of one reading, or a map of one. */
 export function SweepFigure(props: Props) {
   const { title, document, materials, view, sweep, offered, shown, choices, height, onView } = props;
+  const sweepsAngle = isAngleCurve(sweep.drawn);
+  const features = useAngleFeatures(document, view.point, sweepsAngle);
+  const marks = useMemo(
+    () => (features && sweep.drawn ? angleMarks(features, sweep.drawn.readings) : noMarks),
+    [features, sweep.drawn],
+  );
   const { drawn, error, pending } = sweep;
   if (drawn === null) {
     return (
@@ -88,6 +101,8 @@ export function SweepFigure(props: Props) {
           unit={view.unit}
           log={view.log}
           height={height}
+          steady={props.moving}
+          marks={marks}
           marker={marker}
           onPickX={isPointAxis(axis) ? (x) => onView(picked(axis, x, view)) : undefined}
           fileName={`${title} ${axis.kind}`}
@@ -99,8 +114,15 @@ export function SweepFigure(props: Props) {
           }
         />
       )}
+      {sweepsAngle && <AngleMarks marks={marks} />}
     </div>
   );
+}
+
+const noMarks: readonly AngleMark[] = [];
+
+function isAngleCurve(drawn: LiveSweep['drawn']): boolean {
+  return drawn !== null && drawn.axis.kind === 'angle' && !drawn.second && !drawn.family;
 }
 
 function isPointAxis({ kind }: SweepAxis): boolean {

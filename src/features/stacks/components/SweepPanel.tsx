@@ -29,6 +29,8 @@ type Props = {
   /** What is swept; null where there is nothing to sweep. */
   axes: PreviewAxes | null;
   transverse: boolean;
+  /** Whether the film is being moved. */
+  moving: boolean;
   /** What to know of the constants along the sweep. */
   notes: readonly string[];
   onView: (change: Partial<ViewState>) => void;
@@ -54,7 +56,7 @@ const moreKinds = ['voigtScale', 'repeat', 'graded'] as const;
 
 /** The plot of the current question: which quantity is swept, over what, and which readings are drawn. */
 export function SweepPanel(props: Props) {
-  const { title, document, materials, view, axes, transverse, notes, onView, keep } = props;
+  const { title, document, materials, view, axes, transverse, moving, notes, onView, keep } = props;
   const plotHeight = usePlotHeight(PAGE_ABOVE_PLOT);
   const averaged = addsIntensities(document);
   const offered = useMemo<readonly Family[]>(
@@ -128,6 +130,7 @@ export function SweepPanel(props: Props) {
                 shown={shown}
                 choices={choices}
                 height={plotHeight}
+                moving={moving}
                 onView={onView}
               />
               {sweep.error && <SolveProblem error={sweep.error} />}

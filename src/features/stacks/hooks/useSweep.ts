@@ -1,24 +1,33 @@
-import { keepPreviousData, useQuery } from '@tanstack/react-query';
 import { useMemo } from 'react';
+import type { LiveCurveRequest } from '../../../../shared/live.ts';
 import type { ReadingName } from '../../../../shared/run.ts';
+import type { LibrarySolveRequest } from '../../../../shared/solve.ts';
 import type { StackDocument, WorkingPoint } from '../../../../shared/stack.ts';
-import { sweepQuery } from '../api/solve.ts';
+import { useLatest } from '../../../lib/useLatest.ts';
+import { useSettled } from '../../../lib/useSettled.ts';
+import { liveCurve } from '../api/liveCurve.ts';
+import { solve } from '../api/solve.ts';
 import { axesProblem } from '../model/axesProblem.ts';
-import { readSweepResponse, sweepRequest } from '../model/solveStates.ts';
+import { curveRequest, isCurve, readSweepResponse, sweepRequest } from '../model/solveStates.ts';
 import type { ReadingColumns, Sweep } from '../model/solveStates.ts';
 import { axisGrid, axisProblems, previewGrid } from '../model/sweepAxis.ts';
 import type { PreviewAxes } from '../model/sweepAxis.ts';
-import { useSettled } from '../../../lib/useSettled.ts';
 
-/** Longer than that of the readings strip, which comes first. */
+/** A map or a family is many solves: it waits until the film stands still. A curve is drawn at once. */
 const PAUSE_MS = 110;
+
+type DrawnSweep = Sweep & { columns: ReadingColumns; seconds: number };
 
 export type LiveSweep = {
   /** The last sweep there was: the axes and grids that its columns belong to. */
-  drawn: (Sweep & { columns: ReadingColumns; seconds: number }) | null;
+  drawn: DrawnSweep | null;
   pending: boolean;
   error: Error | null;
 };
+
+type Question = { sweep: Sweep } & (
+  { curve: LiveCurveRequest; cases?: undefined } | { cases: LibrarySolveRequest; curve?: undefined }
+);
 
 /**
  * The preview of a sweep, solved anew as film, point and axes change.
@@ -31,29 +40,25 @@ export function useSweep(
   axes: PreviewAxes | null,
   readings: readonly ReadingName[],
 ): LiveSweep {
-  const asked = useMemo(() => {
+  const asked = useMemo<Question | null>(() => {
     const sweep = axes && previewOf(axes, document, readings);
-    return sweep && { sweep, request: sweepRequest(document, point, sweep) };
+    if (!sweep) return null;
+    return isCurve(sweep)
+      ? { sweep, curve: curveRequest(document, point, sweep) }
+      : { sweep, cases: sweepRequest(document, point, sweep) };
   }, [document, point, axes, readings]);
   const settled = useSettled(asked, PAUSE_MS);
-  const query = useQuery({ ...sweepQuery(settled), placeholderData: keepPreviousData, retry: false });
-  const answer = query.data;
-  const drawn = useMemo(
-    () =>
-      answer
-        ? {
-            ...answer.sweep,
-            columns: readSweepResponse(answer.response, answer.sweep),
-            seconds: answer.seconds,
-          }
-        : null,
-    [answer],
-  );
-  return {
-    drawn,
-    pending: settled !== asked || query.isFetching,
-    error: settled === asked ? query.error : null,
-  };
+  const question = asked?.curve ? asked : settled;
+  const { answer, pending, error } = useLatest(question, solveSweep);
+  return { drawn: answer, pending: pending || question !== asked, error: question === asked ? error : null };
+}
+
+async function solveSweep(question: Question, signal: AbortSignal): Promise<DrawnSweep> {
+  const start = performance.now();
+  const columns = question.curve
+    ? (await liveCurve(question.curve, signal)).columns
+    : readSweepResponse(await solve(question.cases, signal), question.sweep);
+  return { ...question.sweep, columns, seconds: (performance.now() - start) / 1000 };
 }
 
 /** The sweep with as many points as a preview has; null while an axis cannot be swept. */

@@ -1,3 +1,4 @@
+import type { LiveCurveRequest } from '../../../../shared/live.ts';
 import type { ReadingName, SweepAxis } from '../../../../shared/run.ts';
 import { applyAxis } from '../../../../shared/applyAxis.ts';
 import { comparedStates, outputFor, readingOf } from '../../../../shared/readings.ts';
@@ -59,6 +60,23 @@ export type Sweep = GridAxis & {
 /** Points of a sweep over all its axes. */
 export function sweepPoints({ grid, second, family }: Sweep): number {
   return grid.length * (second?.grid.length ?? 1) * (family?.grid.length ?? 1);
+}
+
+/** Readings of one live curve at most (shared/live.ts). */
+const CURVE_READINGS = 8;
+
+/** Whether the sweep is one curve that is computed while somebody drags. Repeats are not spaced evenly once thinned. */
+export function isCurve({ axis, grid, second, family, readings }: Sweep): boolean {
+  if (second || family || readings.length === 0 || readings.length > CURVE_READINGS) return false;
+  return axis.kind !== 'repeat' || grid.length === axis.points;
+}
+
+export function curveRequest(document: StackDocument, point: WorkingPoint, sweep: Sweep): LiveCurveRequest {
+  return {
+    document: { ...document, workingPoint: point },
+    axis: { ...sweep.axis, points: sweep.grid.length },
+    readings: [...sweep.readings],
+  };
 }
 
 /**
