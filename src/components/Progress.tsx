@@ -5,6 +5,8 @@ type ProgressProps = {
   label: string;
   done: number;
   total: number;
+  /** What is counted, in the plural. */
+  noun?: string;
   /** Null while there is no rate to estimate from. */
   secondsLeft: number | null;
   onCancel?: (() => void) | undefined;
@@ -12,7 +14,8 @@ type ProgressProps = {
 };
 
 /** Long work: how far, how long still, and a way to stop it. */
-export function Progress({ label, done, total, secondsLeft, onCancel, cancelling = false }: ProgressProps) {
+export function Progress(props: ProgressProps) {
+  const { label, done, total, noun = 'points', secondsLeft, onCancel, cancelling = false } = props;
   const share = total > 0 ? Math.min(1, done / total) : 0;
   const left =
     secondsLeft === null ? 'estimating the time left' : `about ${formatDuration(secondsLeft)} left`;
@@ -21,7 +24,7 @@ export function Progress({ label, done, total, secondsLeft, onCancel, cancelling
       <div className="flex flex-wrap items-baseline gap-x-2.5">
         <span className="font-semibold">{label}</span>
         <span className="text-note text-muted">
-          {formatCount(done)} of {formatCount(total)} points, {cancelling ? 'stopping' : left}
+          {formatCount(done)} of {formatCount(total)} {noun}, {cancelling ? 'stopping' : left}
         </span>
       </div>
       <div className="flex items-center gap-2">

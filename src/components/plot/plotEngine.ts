@@ -1,11 +1,19 @@
-import { LineChart, ScatterChart } from 'echarts/charts';
+import { CustomChart, LineChart, ScatterChart } from 'echarts/charts';
 import { GridComponent, MarkPointComponent } from 'echarts/components';
 import * as echarts from 'echarts/core';
 import type { EChartsCoreOption } from 'echarts/core';
 import { CanvasRenderer, SVGRenderer } from 'echarts/renderers';
 
 // Only what a line plot needs, so that the rest of the library stays out of the bundle.
-echarts.use([LineChart, ScatterChart, GridComponent, MarkPointComponent, CanvasRenderer, SVGRenderer]);
+echarts.use([
+  CustomChart,
+  LineChart,
+  ScatterChart,
+  GridComponent,
+  MarkPointComponent,
+  CanvasRenderer,
+  SVGRenderer,
+]);
 
 export { echarts };
 

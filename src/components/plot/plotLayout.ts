@@ -102,10 +102,12 @@ function scaleOf(
   let low = Infinity;
   let high = -Infinity;
   for (const one of series) {
-    const range = rangeWithin(one, window[0], window[1], axis.log === true);
-    if (range === null) continue;
-    low = Math.min(low, range[0]);
-    high = Math.max(high, range[1]);
+    for (const y of one.band ? [one.y, one.band.low, one.band.high] : [one.y]) {
+      const range = rangeWithin({ x: one.x, y }, window[0], window[1], axis.log === true);
+      if (range === null) continue;
+      low = Math.min(low, range[0]);
+      high = Math.max(high, range[1]);
+    }
   }
   if (axis.log) return logScale(low, high);
   if (low <= high)

@@ -1,4 +1,5 @@
 import type { EChartsCoreOption } from 'echarts/core';
+import { bandOption } from './plotBand.ts';
 import { formatTick } from './niceScale.ts';
 import type { PlotLayout } from './plotLayout.ts';
 import { fromPixel, onScale } from './plotScale.ts';
@@ -65,6 +66,7 @@ export function plotOption(
       axisLine: { show: false },
     })),
     series: [
+      ...series.flatMap((one) => bandOption(one, layout, tokens)),
       ...series.flatMap((one, index) => seriesOption(one, index, layout, tokens)),
       ...zeroLine(layout, tokens),
     ],
