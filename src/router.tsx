@@ -63,6 +63,10 @@ const groupPages = [
   page(paths.account, async () => (await import('./routes/account/AccountPage.tsx')).AccountPage),
   page(paths.material, async () => (await import('./routes/material/MaterialPage.tsx')).MaterialPage),
   page(paths.stack, async () => (await import('./routes/stack/StackPage.tsx')).StackPage),
+  page(paths.newCard, async () => (await import('./routes/newCard/NewCardPage.tsx')).NewCardPage),
+  page(paths.card, async () => (await import('./routes/card/CardPage.tsx')).CardPage),
+  page(paths.studies, async () => (await import('./routes/studies/StudiesPage.tsx')).StudiesPage),
+  page(paths.study, async () => (await import('./routes/study/StudyPage.tsx')).StudyPage),
   page(paths.run, async () => (await import('./routes/run/RunPage.tsx')).RunPage),
 ];
 

@@ -7,6 +7,8 @@ import { Button, ButtonLink } from '../../components/Button.tsx';
 import { EmptyState } from '../../components/EmptyState.tsx';
 import { Page } from '../../components/Page.tsx';
 import { QueryGate } from '../../components/QueryGate.tsx';
+import { cardListQuery } from '../../features/cards/api/cards.ts';
+import { CardTable } from '../../features/cards/components/CardTable.tsx';
 import { materialListQuery } from '../../features/materials/api/materialList.ts';
 import { runListQuery } from '../../features/runList/api/runList.ts';
 import { RunTable } from '../../features/runList/components/RunTable.tsx';
@@ -92,6 +94,7 @@ function GroupHome({ group }: { group: Membership }) {
         </QueryGate>
       </section>
       <NewestRuns groupId={groupId} editable={editable} />
+      <Cards groupId={groupId} />
     </Page>
   );
 }
@@ -141,6 +144,22 @@ function NewestRuns({ groupId, editable }: { groupId: string; editable: boolean 
           </div>
         )}
       </QueryGate>
+    </section>
+  );
+}
+
+/** Growth cards, once there are some: a card is made from a stack or a design. */
+function Cards({ groupId }: { groupId: string }) {
+  const { data } = useQuery(cardListQuery(groupId));
+  if (!data || data.cards.length === 0) return null;
+  return (
+    <section aria-labelledby="cards-heading" className="mt-8">
+      <h2 id="cards-heading" className="mb-2 text-lead">
+        Growth cards
+      </h2>
+      <div className="card">
+        <CardTable cards={data.cards} />
+      </div>
     </section>
   );
 }

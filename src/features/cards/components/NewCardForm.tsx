@@ -1,0 +1,117 @@
+import { zodResolver } from '@hookform/resolvers/zod';
+import { useForm, useWatch } from 'react-hook-form';
+import type { UseFormReturn } from 'react-hook-form';
+import type { GrowthCard } from '../../../../shared/growthCard.ts';
+import type { StackMedium } from '../../../../shared/stack.ts';
+import { Button } from '../../../components/Button.tsx';
+import { controlLook } from '../../../components/controlLook.ts';
+import { Field, FormError } from '../../../components/Field.tsx';
+import { TextInput } from '../../../components/TextInput.tsx';
+import { showServerIssues } from '../../../lib/formIssues.ts';
+import { useCreateCard } from '../api/cards.ts';
+import { cardFormSchema, cardRequest, emptyForm } from '../model/cardDraft.ts';
+import type { CardForm, CardStart } from '../model/cardDraft.ts';
+import { CardPoints } from './CardPoints.tsx';
+import { CardRates } from './CardRates.tsx';
+
+type Props = {
+  groupId: string;
+  start: CardStart;
+  nameOf: (medium: StackMedium) => string;
+  onMade: (card: GrowthCard) => void;
+};
+
+const errors = [
+  ['ratePercent', 'Rate, shared by a material (%)'],
+  ['randomPercent', 'Random, each layer (%)'],
+  ['indexPercent', 'n and k (%)'],
+  ['voigtPercent', 'Q (%)'],
+] as const;
+
+/** What a card says beside the film itself. It cannot be changed once it is made. */
+export function NewCardForm({ groupId, start, nameOf, onMade }: Props) {
+  const create = useCreateCard(groupId);
+  const form = useForm<CardForm>({ resolver: zodResolver(cardFormSchema), defaultValues: emptyForm(start) });
+  const { register, formState } = form;
+  const submit = form.handleSubmit(async (values) => {
+    try {
+      onMade(await create.mutateAsync(cardRequest(start, values)));
+    } catch (error) {
+      showServerIssues(error, form.setError, ['title', 'sampleId', 'bench', 'signal']);
+    }
+  });
+  return (
+    <form noValidate onSubmit={(event) => void submit(event)} className="flex max-w-[820px] flex-col gap-6">
+      <div className="grid gap-3 sm:grid-cols-[minmax(0,1fr)_220px]">
+        <Field label="Title" error={formState.errors.title?.message}>
+          {(control) => <TextInput {...control} {...register('title')} />}
+        </Field>
+        <Field label="Sample id" error={formState.errors.sampleId?.message} hint="Empty: written by hand">
+          {(control) => <TextInput {...control} {...register('sampleId')} />}
+        </Field>
+      </div>
+      <CardPoints form={form} />
+      <fieldset>
+        <legend className="mb-1 text-lead font-semibold">Errors to reckon with</legend>
+        <p className="mb-2 text-note text-muted">
+          One standard deviation each. The card prints the band that holds 68.27 % of{' '}
+          {start.tolerance.samples} films drawn with them.
+        </p>
+        <div className="grid grid-cols-2 gap-3 sm:grid-cols-4">
+          {errors.map(([name, label]) => (
+            <Field key={name} label={label} error={formState.errors[name]?.message}>
+              {(control) => (
+                <TextInput {...control} inputMode="decimal" {...register(name, { valueAsNumber: true })} />
+              )}
+            </Field>
+          ))}
+        </div>
+        <Field label="Signal that counts" className="mt-3 max-w-64">
+          {(control) => (
+            <select {...control} {...register('signal')} className={controlLook}>
+              <option value="rotation">Kerr rotation</option>
+              <option value="ellipticity">Kerr ellipticity</option>
+              <option value="amplitude">Cross-polarized amplitude</option>
+              <option value="contrast">Transverse contrast</option>
+            </select>
+          )}
+        </Field>
+      </fieldset>
+      <CardRates form={form} document={start.document} nameOf={nameOf} />
+      <Field
+        label="Bench"
+        error={formState.errors.bench?.message}
+        hint="How the film will be measured: source, polarizer, analyzer offset, detector"
+      >
+        {(control) => <textarea {...control} rows={2} {...register('bench')} className={controlLook} />}
+      </Field>
+      <Field label="Decision" error={formState.errors.decision?.message} hint="What was decided, and why">
+        {(control) => <textarea {...control} rows={3} {...register('decision')} className={controlLook} />}
+      </Field>
+      <LinkFields form={form} />
+      <FormError message={formState.errors.root?.['server']?.message} />
+      <Button type="submit" tone="primary" busy={create.isPending} className="self-start">
+        {create.isPending ? 'Drawing the films' : 'Make the card'}
+      </Button>
+    </form>
+  );
+}
+
+function LinkFields({ form }: { form: UseFormReturn<CardForm> }) {
+  const { register, control, formState } = form;
+  const hasLink = useWatch({ control, name: 'hasLink' });
+  return (
+    <fieldset className="flex flex-wrap items-start gap-x-6 gap-y-2">
+      <legend className="mb-1 text-lead font-semibold">Link</legend>
+      <label className="flex items-center gap-2 pt-1">
+        <input type="checkbox" {...register('hasLink')} className="size-4 accent-(--accent)" />
+        Print a QR code that opens the card without signing in
+      </label>
+      {hasLink && (
+        <Field label="Opens until" error={formState.errors.lastDay?.message} hint="Empty: no end">
+          {(one) => <TextInput {...one} type="date" {...register('lastDay')} />}
+        </Field>
+      )}
+    </fieldset>
+  );
+}
