@@ -141,6 +141,24 @@ describe('a table that cannot be constants is refused', () => {
       /k < 0.*lines 1, 2: does the source use exp\(\+iwt\)\?/,
     ],
     [
+      'N beyond what can be calculated with (bounds of the solve contract)',
+      [
+        [400, 1e300, 2],
+        [500, 1e-320, 0],
+      ],
+      'index.n',
+      /lines 1, 2/,
+    ],
+    [
+      'a wavelength of 0',
+      [
+        [0, 1, 2],
+        [500, 1, 2],
+      ],
+      'spectral.column',
+      /line 1/,
+    ],
+    [
       'k < 0 by noise',
       [
         [400, 1, 2],
@@ -173,6 +191,17 @@ describe('a table that cannot be constants is refused', () => {
     const [issue] = issuesOf(rows, indexOnly);
     expect(issue!.path).toBe(path);
     expect(issue!.message).toMatch(message);
+  });
+
+  test('a photon energy whose wavelength is not finite', () => {
+    const inEv: ImportMapping = { ...indexOnly, spectral: { column: 0, unit: 'eV' } };
+    const rows = [
+      [1e-320, 1, 2],
+      [2, 1, 2],
+    ];
+    const [issue] = issuesOf(rows, inEv);
+    expect(issue).toMatchObject({ path: 'spectral.column' });
+    expect(issue!.message).toMatch(/finite wavelength.*line 1/);
   });
 
   test('columns that do not exist or are named twice', () => {

@@ -90,6 +90,18 @@ describe('a content that cannot be used', () => {
       'the Sellmeier formula gives n^2 = ',
     ],
     [
+      'N that cannot be calculated with (bounds of the solve contract)',
+      buildContent({ index: { kind: 'table', wavelengthsNm: [400, 500], n: [2, 1e300], k: [0, 0] } }),
+      'index.n[1]',
+      '|N| must lie between',
+    ],
+    [
+      'Q that cannot be calculated with (bounds of the solve contract)',
+      magnetic({ kind: 'table', wavelengthsNm: [400], q: [[1e300, 0]] }),
+      'voigt.q[0]',
+      '|Q| must be at most',
+    ],
+    [
       'a range that does not rise',
       buildContent({ index: formula('2', [500, 500]) }),
       'index.rangeNm',

@@ -2,6 +2,7 @@ import type { IndexDispersion, PlainIndex } from '../../shared/dispersion.ts';
 import type { Issue } from '../../shared/error.ts';
 import { checkColumns, checkRange, checkValues } from './checkColumns.ts';
 import { checkPlainVoigt } from './checkVoigt.ts';
+import { isUsable, unusableIndex } from './opticalValue.ts';
 import { dispersionRangeNm, isEmptyRange } from './range.ts';
 import { sampleIndex } from './sample.ts';
 
@@ -21,8 +22,11 @@ function checkPlainIndex(path: string, index: PlainIndex): Issue[] {
   if (index.kind === 'table') {
     const issues = checkColumns(path, index.wavelengthsNm, { n: index.n.length, k: index.k.length });
     index.n.forEach((n, i) => {
-      if (n === 0 && index.k[i] === 0) {
+      const k = index.k[i] ?? 0;
+      if (n === 0 && k === 0) {
         issues.push({ path: `${path}.n[${i}]`, message: 'n and k must not both be 0' });
+      } else if (!isUsable([n, k])) {
+        issues.push({ path: `${path}.n[${i}]`, message: unusableIndex });
       }
     });
     return issues;
@@ -39,6 +43,9 @@ function checkTensor(path: string, index: Extract<IndexDispersion, { kind: 'tens
     const [re, im] = tensor[2][2];
     if (re === 0 && im === 0) {
       issues.push({ path: `${path}.epsilon[${i}][2][2]`, message: 'eps_zz must not be 0' });
+    } else if (!isUsable([re, im])) {
+      const message = '|eps_zz| must lie between 1e-20 and 1e20';
+      issues.push({ path: `${path}.epsilon[${i}][2][2]`, message });
     }
   });
   return issues;

@@ -2,6 +2,7 @@ import type { IndexDispersion, PlainVoigt } from '../../shared/dispersion.ts';
 import type { Issue } from '../../shared/error.ts';
 import type { MaterialContent } from '../../shared/material.ts';
 import { checkColumns, checkRange, checkValues } from './checkColumns.ts';
+import { isUsableVoigt, unusableVoigt } from './opticalValue.ts';
 import { dispersionRangeNm, isEmptyRange, voigtRangeNm } from './range.ts';
 import { sampleVoigt } from './sample.ts';
 
@@ -29,7 +30,12 @@ export function checkPlainVoigt(
 ): Issue[] {
   switch (voigt.kind) {
     case 'table':
-      return checkColumns(path, voigt.wavelengthsNm, { q: voigt.q.length });
+      return [
+        ...checkColumns(path, voigt.wavelengthsNm, { q: voigt.q.length }),
+        ...voigt.q.flatMap((q, i) =>
+          isUsableVoigt(q) ? [] : [{ path: `${path}.q[${i}]`, message: unusableVoigt }],
+        ),
+      ];
     case 'formula': {
       const issues = checkRange(path, voigt.rangeNm);
       if (issues.length > 0) return issues;

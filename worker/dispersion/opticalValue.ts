@@ -44,13 +44,24 @@ export function passiveRoot(subject: string, [re, im]: Complex, wavelengthNm: nu
 
 /** @throws DispersionValueError where Q is not finite */
 export function finiteVoigt(subject: string, q: Complex, wavelengthNm: number): Complex {
-  if (Math.hypot(q[0], q[1]) <= LARGEST) return q;
+  if (isUsableVoigt(q)) return q;
   throw new DispersionValueError(
     `${subject} gives Q = ${complexText(q)} at ${wavelengthNm} nm: Q must be finite`,
   );
 }
 
-function isUsable(value: Complex): boolean {
+/** What is said of a tabulated N for which `isUsable` does not hold. */
+export const unusableIndex = `|N| must lie between ${1 / LARGEST} and ${LARGEST}`;
+
+/** What is said of a tabulated Q for which `isUsableVoigt` does not hold. */
+export const unusableVoigt = `|Q| must be at most ${LARGEST}`;
+
+export function isUsableVoigt(q: Complex): boolean {
+  return Math.hypot(q[0], q[1]) <= LARGEST;
+}
+
+/** Whether N or eps is one that can be calculated with: neither 0 nor beyond the bounds, and no NaN. */
+export function isUsable(value: Complex): boolean {
   const size = Math.hypot(value[0], value[1]);
   return size >= 1 / LARGEST && size <= LARGEST;
 }

@@ -1,6 +1,7 @@
 import type { Issue } from '../../shared/error.ts';
 import type { IndexDispersion } from '../../shared/dispersion.ts';
 import type { ImportMapping, ImportWarning } from '../../shared/materialImport.ts';
+import { isUsable, unusableIndex } from '../dispersion/opticalValue.ts';
 import { squareRoot } from '../optics/complexNumber.ts';
 import { ConversionError } from './conversionError.ts';
 import type { ReadTable } from './readTable.ts';
@@ -127,6 +128,11 @@ function refuseNoMedium(from: 'n, k' | 'eps1, eps2', { n, k }: TabledIndex, line
       path,
       message: `N = 0 in ${describeLines(zero)}: n and k must not both be 0; delete these rows`,
     });
+  }
+  const absurd = lines.filter((_, i) => n[i]! + k[i]! > 0 && !isUsable([n[i]!, k[i]!]));
+  if (absurd.length > 0) {
+    const message = `${unusableIndex}, but does not in ${describeLines(absurd)}: correct or delete these rows`;
+    issues.push({ path, message });
   }
   if (issues.length > 0) throw new ConversionError(issues);
 }

@@ -29,9 +29,10 @@ export function spectralRows(
   const spectral = columns[column]!;
   const rows = Array.from(spectral, (_, row) => row).filter((row) => !Number.isNaN(spectral[row]));
   const linesOf = (positions: number[]) => positions.map((row) => lines[row]!);
-  const wrong = rows.filter((row) => !(spectral[row]! > 0));
+  const isWavelength = (value: number) => value > 0 && Number.isFinite(wavelengthNm(value, unit));
+  const wrong = rows.filter((row) => !isWavelength(spectral[row]!));
   if (wrong.length > 0) {
-    const message = `must be above 0 everywhere, but is not in ${describeLines(linesOf(wrong))}: choose the column of wavelengths or energies, or delete these rows`;
+    const message = `must be above 0 and give a finite wavelength everywhere, but does not in ${describeLines(linesOf(wrong))}: choose the column of wavelengths or energies, or delete these rows`;
     throw new ConversionError([{ path: 'spectral.column', message }]);
   }
   const nm = Float64Array.from(spectral, (value) => wavelengthNm(value, unit));
