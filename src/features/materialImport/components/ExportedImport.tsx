@@ -46,9 +46,9 @@ export function ExportedImport({ groupId, importId, exported, tableStep, onKept 
             values={naming}
             onChange={setNaming}
             busy={keep.isPending}
-            onKeep={(form, refuse) =>
-              keep.mutate(keepExportedRequest(groupId, importId, form), { onError: refuse })
-            }
+            onKeep={async (form, refuse) => {
+              await keep.mutateAsync(keepExportedRequest(groupId, importId, form)).catch(refuse);
+            }}
           />
         </ImportStep>
       </div>

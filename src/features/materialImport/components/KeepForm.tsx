@@ -1,5 +1,6 @@
 import { zodResolver } from '@hookform/resolvers/zod';
-import { useEffect } from 'react';
+import { useEffect, useRef } from 'react';
+import type { FormEvent } from 'react';
 import { useForm, useWatch } from 'react-hook-form';
 import { Button } from '../../../components/Button.tsx';
 import { Field, FormError } from '../../../components/Field.tsx';
@@ -18,7 +19,7 @@ type KeepFormProps = {
   onChange: (values: NamingForm) => void;
   busy: boolean;
   /** `refuse` puts what the server says at its field. */
-  onKeep: (values: NamingForm, refuse: (error: unknown) => void) => void;
+  onKeep: (values: NamingForm, refuse: (error: unknown) => void) => Promise<void>;
 };
 
 const sourceFields = [
@@ -54,9 +55,17 @@ export function KeepForm({ asked, action, values, onChange, busy, onKeep }: Keep
   const apart = useWatch({ control: form.control, name: 'apart' });
   const shown = shownSources(asked, apart);
   const both = asked.indexSource && asked.voigtSource;
-  const submit = form.handleSubmit((typed) =>
-    onKeep(typed, (error) => showServerIssues(error, form.setError, fields)),
-  );
+  const underWay = useRef(false);
+  const submit = async (event: FormEvent) => {
+    event.preventDefault();
+    // A second press before the first is answered says nothing new.
+    if (underWay.current) return;
+    underWay.current = true;
+    await form.handleSubmit((typed) =>
+      onKeep(typed, (error) => showServerIssues(error, form.setError, fields)),
+    )();
+    underWay.current = false;
+  };
   return (
     <form
       noValidate

@@ -106,7 +106,7 @@ export function MappedImport(props: MappedImportProps) {
             values={draft.naming}
             onChange={changeNaming}
             busy={keep.isPending}
-            onKeep={(form, refuse) => void onKeep(form, refuse)}
+            onKeep={onKeep}
           />
         </ImportStep>
       </div>
