@@ -7,10 +7,12 @@ type CopyButtonProps = {
   text: string;
   /** What it is, for screen readers: "token". */
   what: string;
+  /** What the button says where several stand together. */
+  label?: string;
 };
 
 /** Copies a text and says so. Where the browser forbids it, says to select and copy by hand. */
-export function CopyButton({ text, what }: CopyButtonProps) {
+export function CopyButton({ text, what, label = 'Copy' }: CopyButtonProps) {
   const [state, setState] = useState<'ready' | 'copied' | 'refused'>('ready');
   useEffect(() => {
     if (state === 'ready') return undefined;
@@ -29,7 +31,7 @@ export function CopyButton({ text, what }: CopyButtonProps) {
   return (
     <Button icon={<Icon aria-hidden="true" className="size-4" />} onClick={() => void copy()}>
       <span aria-live="polite">
-        {state === 'copied' ? 'Copied' : state === 'refused' ? 'Select and copy by hand' : 'Copy'}
+        {state === 'copied' ? 'Copied' : state === 'refused' ? 'Select and copy by hand' : label}
         <span className="sr-only"> {what}</span>
       </span>
     </Button>

@@ -42,7 +42,7 @@ export function angleFeatures(
     const isP = reading.endsWith('P');
     const [rotation, ellipticity] = isP ? angleNames : angleNames.slice(2);
     const isNothing = (value: number, position: number) => {
-      const { [rotation!]: one = 0, [ellipticity!]: other = 0 } = points[position]!;
+      const { [rotation]: one = 0, [ellipticity]: other = 0 } = points[position]!;
       return Math.abs(value) < NOTHING_DEG + ROUNDING * Math.hypot(one, other);
     };
     return signChanges(

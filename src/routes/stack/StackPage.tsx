@@ -1,6 +1,7 @@
 import { useQuery } from '@tanstack/react-query';
 import { useEffect } from 'react';
 import { generatePath, useNavigate, useParams } from 'react-router-dom';
+import { ButtonLink } from '../../components/Button.tsx';
 import { ErrorState } from '../../components/ErrorState.tsx';
 import { LoadingState } from '../../components/LoadingState.tsx';
 import { Page, useDocumentTitle } from '../../components/Page.tsx';
@@ -64,11 +65,22 @@ export function StackPage() {
       )}
       samplePanel={(film) => <SamplePanel {...film} />}
       explanation={({ onPoint, ...film }) => (
-        <SignalPanels
-          {...film}
-          heightsOf={profileHeights}
-          onAzimuth={(inputAzimuthDeg) => onPoint({ inputAzimuthDeg })}
-        />
+        <>
+          <SignalPanels
+            {...film}
+            heightsOf={profileHeights}
+            onAzimuth={(inputAzimuthDeg) => onPoint({ inputAzimuthDeg })}
+          />
+          {mayEdit(membership) && (
+            <ButtonLink
+              className="mt-4"
+              to={`${generatePath(paths.newCard, { groupId: stack.data.groupId })}?stack=${stackId}`}
+              title="A page for the chamber, of the stack as it is saved"
+            >
+              Make a growth card
+            </ButtonLink>
+          )}
+        </>
       )}
     />
   );

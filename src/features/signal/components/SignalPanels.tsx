@@ -10,8 +10,10 @@ import { filmLayers } from '../model/filmLayers.ts';
 import type { DescribeMedium } from '../model/filmLayers.ts';
 import { threeStates } from '../model/moreReadings.ts';
 import { DepthProfile } from './DepthProfile.tsx';
+import { ExactTables } from './ExactTables.tsx';
 import { LayerShares } from './LayerShares.tsx';
 import { MoreReadings } from './MoreReadings.tsx';
+import { SensitivityPanel } from './SensitivityPanel.tsx';
 import { StateStep } from './StateStep.tsx';
 
 type Props = {
@@ -100,6 +102,10 @@ function Panels({ document, point, describe, heightsOf, unit, onAzimuth, onActiv
             onAzimuth={onAzimuth}
           />
         )}
+      </Disclosure>
+      <Disclosure title="Exact values">{states && <ExactTables states={states} />}</Disclosure>
+      <Disclosure title="Sensitivity">
+        <SensitivityPanel document={document} point={point} unit={unit} />
       </Disclosure>
       <Disclosure title="Step between two magnetization states">
         <StateStep document={document} point={point} describe={describe} unit={unit} />
