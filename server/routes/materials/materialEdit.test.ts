@@ -14,6 +14,7 @@ import {
   buildStack,
 } from '../../../tests/factories.ts';
 import { runCalls } from '../../../tests/runCalls.ts';
+import { pinVersions } from '../../services/pinVersions.ts';
 
 let api: ApiServer;
 let people: Awaited<ReturnType<typeof buildPeople>>;
@@ -105,6 +106,23 @@ test('what is in use stays, and who uses it is named', async () => {
   await stack.destroy();
   await editor.delete(`/api/v1/materials/${id}`).expect(204);
   await editor.get(`/api/v1/materials/${id}`).expect(404);
+});
+
+test('a deletion waits for a stack that is being stored, and then finds it', async () => {
+  const { id } = await create();
+  const document = buildDocument({ substrate: { material: id } });
+  const stored = await api.models.sequelize.transaction(async (transaction) => {
+    // What storing a stack does first.
+    await pinVersions(api.models, people.group.id, document, transaction);
+    const deletion = editor.delete(`/api/v1/materials/${id}`).then((answer) => answer);
+    const soon = await Promise.race([deletion, new Promise((resolve) => setTimeout(resolve, 500, 'waits'))]);
+    expect(soon).toBe('waits');
+    const stack = await buildStack(api.models, people.group, { name: 'Just in time', document });
+    return { stack, deletion };
+  });
+  expect(issuePaths(await stored.deletion)).toEqual(['stacks[0]']);
+  await stored.stack.destroy();
+  await editor.delete(`/api/v1/materials/${id}`).expect(204);
 });
 
 test('a part of a mixture must be plain, and a formula must have a value', async () => {
