@@ -1,4 +1,5 @@
 import { z } from 'zod';
+import { canonicalJson } from './canonicalJson.ts';
 import { LIMITS } from './limits.ts';
 import { workingPointSchema } from './stack.ts';
 import type { StackMedium, WorkingPoint } from './stack.ts';
@@ -96,9 +97,12 @@ export const toleranceSchema = strictObject({
 
 export type Tolerance = z.infer<typeof toleranceSchema>;
 
-/** What makes two layers layers of one material: its library id, else the constants typed in. */
+/**
+ * What makes two layers layers of one material: its library id, else the constants typed in. The database does not keep the
+ * order of keys, so it must not matter.
+ */
 export function materialKeyOf({ material, label: _label, version: _version, ...typed }: StackMedium): string {
-  return material ?? JSON.stringify(typed);
+  return material ?? canonicalJson(typed);
 }
 
 export type DesignPoint = { id: string; label: string; workingPoint: WorkingPoint };

@@ -25,6 +25,8 @@ export const LIMITS = {
   designPoints: 6,
   /** Thicknesses that one optimisation varies. */
   designVariables: 8,
+  /** Layers drawn in a film whose derivatives are answered at once. */
+  sensitivityLayers: 200,
   capCandidates: 12,
   capPoints: 400,
   toleranceSamples: 20_000,

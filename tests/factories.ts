@@ -1,5 +1,6 @@
 import { randomUUID } from 'node:crypto';
 import type { Role } from '../shared/account.ts';
+import type { DesignInput } from '../shared/design.ts';
 import type { MaterialContent } from '../shared/material.ts';
 import type { StackDocument } from '../shared/stack.ts';
 import { countLayers } from '../shared/stackCase.ts';
@@ -13,6 +14,7 @@ import { isSweepRun } from '../server/models/run.ts';
 import type { ShareLink } from '../server/models/shareLink.ts';
 import type { Stack } from '../server/models/stack.ts';
 import type { User } from '../server/models/user.ts';
+import { designTotal } from '../worker/design/runDesign.ts';
 import { hashSecret, makeSecret } from '../server/services/secrets.ts';
 
 /** Rows for tests, in a real database. Everything has a name of its own, so that tests do not meet. */
@@ -230,6 +232,32 @@ export async function buildRun(
   });
   if (!isSweepRun(run)) throw new Error(`Built a run of kind ${run.kind}.`);
   return run;
+}
+
+/** A design question's row as it is stored, without an answer. */
+export function buildDesign(
+  models: Models,
+  group: Group,
+  design: DesignInput,
+  overrides: Partial<Pick<Run, 'name' | 'state'>> = {},
+): Promise<Run> {
+  return models.Run.create({
+    groupId: group.id,
+    stackId: null,
+    stackVersion: null,
+    stackName: null,
+    name: 'Question',
+    kind: design.kind,
+    createdById: null,
+    input: { design, materials: [] },
+    materials: [],
+    assumptions: ['Built for a test.'],
+    warnings: [],
+    total: designTotal(design),
+    solverVersion: 'test',
+    inputSha256: hashSecret(JSON.stringify(design)),
+    ...overrides,
+  });
 }
 
 type LinkOverrides = Partial<Pick<ShareLink, 'label' | 'expiresAt' | 'revokedAt' | 'createdById'>>;

@@ -4,6 +4,7 @@ import { setTimeout as sleep } from 'node:timers/promises';
 import pg from 'pg';
 import { pino } from 'pino';
 import { afterAll, afterEach, beforeAll, describe, expect, it, vi } from 'vitest';
+import { designResultSchema } from '../../shared/design.ts';
 import type { SweepAxis } from '../../shared/run.ts';
 import { decodeResult } from '../../shared/resultFormat.ts';
 import { createPool } from '../../worker/pool.ts';
@@ -15,7 +16,15 @@ import type { Models } from '../models/models.ts';
 import type { Run } from '../models/run.ts';
 import { createMaterialStore } from '../services/materialStore.ts';
 import { cancelRun } from '../services/runLifecycle.ts';
-import { buildGroup, buildRun, buildRunInput, buildUser, buildSlowDocument } from '../../tests/factories.ts';
+import { buildToleranceInput } from '../../tests/designInputs.ts';
+import {
+  buildDesign,
+  buildGroup,
+  buildRun,
+  buildRunInput,
+  buildUser,
+  buildSlowDocument,
+} from '../../tests/factories.ts';
 import { waitForRun } from '../../tests/waitForRun.ts';
 import { RunQueue } from './runQueue.ts';
 import { startJobs } from './start.ts';
@@ -74,9 +83,12 @@ async function enqueued(axis: SweepAxis = longer): Promise<Run> {
 }
 
 /** A run whose host was killed without a word. */
-async function orphaned(attempts: number): Promise<Run> {
+async function orphaned(attempts: number, kind: 'sweep' | 'design' = 'sweep'): Promise<Run> {
   const group = await buildGroup(models);
-  const run = await buildRun(models, group, { state: 'running' });
+  const run =
+    kind === 'sweep'
+      ? await buildRun(models, group, { state: 'running' })
+      : await buildDesign(models, group, buildToleranceInput(), { state: 'running' });
   await run.update({
     host: 'killed',
     attempts,
@@ -226,6 +238,17 @@ describe('the sweeper', () => {
     expect((await run.reload()).state).toBe('queued');
     await startHost();
     expect(await waitForRun(models, run.id, 'done')).toMatchObject({ attempts: 2 });
+  });
+
+  it('returns a design question too, and it is answered', async () => {
+    const run = await orphaned(1, 'design');
+    expect(await sweepOrphans({ models, queue, logger })).toEqual({ returned: 1, failed: 0 });
+    await startHost();
+    const done = await waitForRun(models, run.id, 'done');
+    expect(done).toMatchObject({ attempts: 2, done: run.total });
+    const chunks = await models.RunChunk.findAll({ where: { runId: run.id }, order: ['position'] });
+    const text = Buffer.concat(chunks.map(({ bytes }) => bytes)).toString('utf8');
+    expect(designResultSchema.parse(JSON.parse(text))).toMatchObject({ kind: 'tolerance', samples: 100 });
   });
 
   it('fails a run over which three hosts died, and says so', async () => {

@@ -54,7 +54,8 @@ export function checkRunDocument(document: StackDocument, axes: SweepAxes): Issu
   return issues.length > 0 ? issues : checkCorners(document, axes, sweepsWavelength);
 }
 
-function caseIssues(document: StackDocument, sweepsWavelength: boolean): Issue[] {
+/** What the solve contract says of the document at its working point, before any material is looked up. */
+export function caseIssues(document: StackDocument, sweepsWavelength: boolean): Issue[] {
   const given = runCase(document, document.workingPoint.wavelengthNm);
   const parsed = librarySolveCaseSchema.safeParse(given);
   const problems = parsed.success
@@ -120,7 +121,8 @@ export async function checkRunMaterials(
   });
 }
 
-async function resolutionIssues(
+/** ... and with the numbers of its materials at one wavelength. */
+export async function resolutionIssues(
   document: StackDocument,
   wavelengthNm: number,
   resolve: CaseResolver,

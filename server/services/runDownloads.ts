@@ -1,4 +1,3 @@
-import type { MaterialSource } from '../../shared/materialSource.ts';
 import { readingDefinitions } from '../../shared/readings.ts';
 import { axisUnitOf, describeResult, encodeResultHeader } from '../../shared/resultFormat.ts';
 import type { ResultHeader } from '../../shared/resultFormat.ts';
@@ -6,6 +5,7 @@ import type { ReadingName, SweepAxes } from '../../shared/run.ts';
 import { axesOf } from '../../shared/runAxes.ts';
 import type { PartialResult } from '../../worker/sweep/runSweep.ts';
 import type { SweepRun } from '../models/run.ts';
+import { sourceLines, toCsvLine } from './csvLines.ts';
 import { quantityOf } from './runNames.ts';
 import type { RunResult } from './runResult.ts';
 
@@ -69,35 +69,13 @@ export async function* resultCsv(result: RunResult, readings: ReadingName[]): As
     return `${label} (${unit})`;
   });
   yield sourceLines(materials);
-  yield toLine([...axisTitles(input, materials), ...names]);
+  yield toCsvLine([...axisTitles(input, materials), ...names]);
   const axes = await result.readAxes();
   for (const { start, count } of stretches(result.pointCount, POINTS_AT_A_TIME)) {
     const columns: Float64Array[] = axisColumns(axes, start, count);
     for (const reading of readings) columns.push(await result.readValues(reading, start, count));
     for (const rows of stretches(count, ROWS_AT_A_TIME)) yield toLines(columns, rows.start, rows.count);
   }
-}
-
-/** Where every constant comes from, a line of `# ` for each: what is computed is worth no more than they are. */
-function sourceLines(materials: SweepRun['materials']): string {
-  const lines = materials.flatMap(({ name, id, version, indexSource, voigtSource, anisotropySource }) => {
-    const given = [
-      { of: 'n and k', source: indexSource },
-      { of: 'Q', source: voigtSource },
-      { of: 'anisotropy', source: anisotropySource },
-    ];
-    return given.flatMap(({ of, source }) =>
-      source ? [`${name} (${id}, version ${version}), ${of}: ${describeSource(source)}`] : [],
-    );
-  });
-  return lines.map((line) => `# ${line.replace(/\s+/g, ' ')}\r\n`).join('');
-}
-
-function describeSource(source: MaterialSource): string {
-  const { citation, doi, licence, sample, temperature, method, confidence, caution } = source;
-  const parts = { DOI: doi, licence, sample, temperature, method, confidence, caution };
-  const said = Object.entries(parts).flatMap(([field, value]) => (value ? [`${field}: ${value}`] : []));
-  return [citation, ...said].join('; ');
 }
 
 /** The value of every axis at each of the points, the first axis running fastest. */
@@ -120,10 +98,6 @@ function toLines(columns: Float64Array[], start: number, count: number): string 
     text += '\r\n';
   }
   return text;
-}
-
-function toLine(fields: string[]): string {
-  return `${fields.map((field) => (/[",\r\n]/.test(field) ? `"${field.replaceAll('"', '""')}"` : field)).join(',')}\r\n`;
 }
 
 const usualTitles = {

@@ -1,4 +1,6 @@
 import { createHash } from 'node:crypto';
+import { canonicalJson } from '../../shared/canonicalJson.ts';
+import type { DesignInput } from '../../shared/design.ts';
 import type { ResolvableMaterial } from '../../worker/dispersion/resolveCase.ts';
 import type { RunInput } from '../models/run.ts';
 
@@ -7,23 +9,22 @@ import type { RunInput } from '../models/run.ts';
  * every material. Equal inputs have equal hashes however their keys are ordered.
  */
 export function hashRunInput(input: RunInput, materials: ResolvableMaterial[]): string {
-  const constants = materials
-    .map(({ id, version, content }) => ({ id, version, content }))
-    .sort((a, b) => (a.id < b.id ? -1 : a.id > b.id ? 1 : a.version - b.version));
   // A run of one axis has the hash that it had before there were more: undefined keys do not count.
   const { document, axis, second, family, readings } = input;
-  return createHash('sha256')
-    .update(canonicalJson({ document, axis, second, family, readings, materials: constants }))
-    .digest('hex');
+  return sha256({ document, axis, second, family, readings, materials: constantsOf(materials) });
 }
 
-/** JSON with the keys of every object in order and without those that are undefined. */
-function canonicalJson(value: unknown): string {
-  if (Array.isArray(value)) return `[${value.map(canonicalJson).join(',')}]`;
-  if (typeof value !== 'object' || value === null) return JSON.stringify(value) ?? 'null';
-  const entries = Object.entries(value)
-    .filter(([, inner]) => inner !== undefined)
-    .sort(([a], [b]) => (a < b ? -1 : 1))
-    .map(([key, inner]) => `${JSON.stringify(key)}:${canonicalJson(inner)}`);
-  return `{${entries.join(',')}}`;
+/** ... and of a design question. */
+export function hashDesignInput(design: DesignInput, materials: ResolvableMaterial[]): string {
+  return sha256({ design, materials: constantsOf(materials) });
+}
+
+function constantsOf(materials: ResolvableMaterial[]) {
+  return materials
+    .map(({ id, version, content }) => ({ id, version, content }))
+    .sort((a, b) => (a.id < b.id ? -1 : a.id > b.id ? 1 : a.version - b.version));
+}
+
+function sha256(value: unknown): string {
+  return createHash('sha256').update(canonicalJson(value)).digest('hex');
 }

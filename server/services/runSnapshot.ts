@@ -1,3 +1,4 @@
+import type { IndexDispersion } from '../../shared/dispersion.ts';
 import type { MaterialContent } from '../../shared/material.ts';
 import type { ReadingName, SweepAxes, UsedMaterial } from '../../shared/run.ts';
 import { pointCountOf } from '../../shared/runAxes.ts';
@@ -15,7 +16,7 @@ import { solveWarnings } from '../../worker/optics/warnings.ts';
 import { axisValues } from '../../shared/axisValues.ts';
 import type { Dependencies } from '../dependencies.ts';
 import { invalid } from '../errors.ts';
-import type { Run, RunInput } from '../models/run.ts';
+import type { RunInput, SweepRun } from '../models/run.ts';
 import type { LoadedMaterial } from './materialStore.ts';
 import { resolveOneSafely } from './resolveSafely.ts';
 import { runAssumptions } from './runAssumptions.ts';
@@ -27,9 +28,11 @@ import { documentPath, toDocumentIssues } from './runPaths.ts';
 
 /** What a run is computed from and rests on, taken at the moment of its making and never changed. */
 export type RunSnapshot = Pick<
-  Run,
+  SweepRun,
   'input' | 'materials' | 'assumptions' | 'warnings' | 'inputSha256' | 'solverVersion' | 'total'
 >;
+
+type Mixture = Extract<IndexDispersion, { kind: 'mixture' }>;
 
 /** Wavelengths at which media are looked at for warnings. */
 const WARNING_POINTS = 21;
@@ -73,10 +76,10 @@ export async function takeRunSnapshot(
 }
 
 /** The document with the version of every material named: the newest one may be another tomorrow. */
-function withVersions(
-  document: StackDocument,
+export function withVersions<Holder extends object>(
+  document: Holder,
   materials: ReadonlyMap<string, LoadedMaterial>,
-): StackDocument {
+): Holder {
   const newest = new Map([...materials.values()].map(({ id, material }) => [id, material.version]));
   return mapNamedMaterials(document, (named) =>
     named.version === undefined ? { ...named, version: newest.get(named.material) } : named,
@@ -89,9 +92,10 @@ function sweptNm(input: RunInput): number[] {
   return swept ? [swept.from, swept.to] : [input.document.workingPoint.wavelengthNm];
 }
 
-function describeUse(
+/** @param media where it is used; @param wavelengthsNm at which */
+export function describeUse(
   { id, version, content, material }: LoadedMaterial,
-  document: StackDocument,
+  media: object,
   wavelengthsNm: number[],
 ): UsedMaterial {
   const knownVoigtNm = voigtRangeNm(content);
@@ -113,9 +117,22 @@ function describeUse(
     rangeNm,
     voigtRangeNm: knownVoigtNm,
     ...(content.anisotropySource && { anisotropySource: content.anisotropySource }),
+    ...(content.index.kind === 'mixture' && { mixture: mixtureInWords(content.index) }),
     ...(content.origin && { origin: originSentences(content.origin) }),
-    assumedConstant: stretched && isAssumedConstant(document, id, version),
+    assumedConstant: stretched && isAssumedConstant(media, id, version),
   };
+}
+
+function mixtureInWords({ model, fraction, parts }: Mixture): string {
+  const said = parts.map(({ name, material, version }, position) => {
+    const share = position === 0 ? 1 - fraction : fraction;
+    return `${Number((100 * share).toPrecision(6))} % ${name} (${material}, version ${version})`;
+  });
+  const law = {
+    bruggeman: 'Bruggeman',
+    'maxwell-garnett': 'Maxwell Garnett, spheres of the second in the first',
+  }[model];
+  return `${said.join(' and ')} by volume, as an effective medium after ${law}`;
 }
 
 /** How imported constants were read, and what was noticed then. */
@@ -132,8 +149,8 @@ function originSentences({ index, voigt }: NonNullable<MaterialContent['origin']
   );
 }
 
-function isAssumedConstant(document: StackDocument, id: string, version: number): boolean {
-  return namedMaterialsOf(document).some(
+function isAssumedConstant(media: object, id: string, version: number): boolean {
+  return namedMaterialsOf(media).some(
     (named) => named.material === id && named.version === version && named.assumeConstant === true,
   );
 }

@@ -1,5 +1,3 @@
-import { Readable } from 'node:stream';
-import { pipeline } from 'node:stream/promises';
 import type { Response } from 'express';
 import { resultByteLength } from '../../shared/resultFormat.ts';
 import type { ReadingName } from '../../shared/run.ts';
@@ -11,6 +9,7 @@ import { plainFileName } from './fileNames.ts';
 import { runInputFile } from './runInputFile.ts';
 import { loadRunMaterials } from './runMaterials.ts';
 import { RunResult, chooseReadings } from './runResult.ts';
+import { sendPieces } from './sendPieces.ts';
 
 /**
  * The files that a run is handed out as, to members and through links alike. All are streamed: a run of a million
@@ -36,7 +35,7 @@ export async function sendRunFile(
       const readings = chooseReadings(run, file.readings);
       const bytes = resultByteLength(resultHeaderOf(run, readings));
       announce(response, bytes);
-      await send(resultBytes(result, readings), response);
+      await sendPieces(resultBytes(result, readings), response);
       releaseMemory(bytes);
       return;
     }
@@ -49,18 +48,18 @@ export async function sendRunFile(
       }
       const header = { ...resultHeaderOf(run, chooseReadings(run, file.readings)), done: soFar.done() };
       announce(response, resultByteLength(header));
-      return send(partialResultBytes(run, soFar, header), response);
+      return sendPieces(partialResultBytes(run, soFar, header), response);
     }
     case 'csv': {
       const result = await RunResult.open(models, run);
       const readings = chooseReadings(run, file.readings);
       response.attachment(`${fileNameOf(run)}.csv`).type('text/csv; charset=utf-8');
-      return send(resultCsv(result, readings), response);
+      return sendPieces(resultCsv(result, readings), response);
     }
     case 'input': {
       const constants = await loadRunMaterials(materials, run);
       response.attachment(`${fileNameOf(run)}-input.json`).type('application/json');
-      return send(runInputFile(pool, run.input, constants), response);
+      return sendPieces(runInputFile(pool, run.input, constants), response);
     }
   }
 }
@@ -71,19 +70,6 @@ function announce(response: Response, bytes: number): void {
     'Content-Length': String(bytes),
     'Cache-Control': 'no-store',
   });
-}
-
-async function send(
-  pieces: AsyncIterable<Uint8Array | string> | Iterable<Uint8Array | string>,
-  response: Response,
-): Promise<void> {
-  try {
-    await pipeline(Readable.from(pieces), response);
-  } catch (error) {
-    // The reader went away: nobody is left to be told.
-    if (error instanceof Error && 'code' in error && error.code === 'ERR_STREAM_PREMATURE_CLOSE') return;
-    throw error;
-  }
 }
 
 const fileNameOf = (run: SweepRun) => plainFileName(run.name, 'run');
