@@ -67,6 +67,9 @@ const groupPages = [
   page(paths.card, async () => (await import('./routes/card/CardPage.tsx')).CardPage),
   page(paths.studies, async () => (await import('./routes/studies/StudiesPage.tsx')).StudiesPage),
   page(paths.study, async () => (await import('./routes/study/StudyPage.tsx')).StudyPage),
+  page(paths.designs, async () => (await import('./routes/designs/DesignsPage.tsx')).DesignsPage),
+  page(paths.newDesign, async () => (await import('./routes/newDesign/NewDesignPage.tsx')).NewDesignPage),
+  page(paths.design, async () => (await import('./routes/design/DesignPage.tsx')).DesignPage),
   page(paths.run, async () => (await import('./routes/run/RunPage.tsx')).RunPage),
 ];
 

@@ -16,6 +16,7 @@ import { RunProvenance } from '../../features/runs/components/RunProvenance.tsx'
 import { RunState } from '../../features/runs/components/RunState.tsx';
 import { useRunProgress } from '../../features/runs/hooks/useRunProgress.ts';
 import { mayEdit, useMembership } from '../../features/session/hooks/useSession.ts';
+import { PinToStudy } from '../../features/studies/components/PinToStudy.tsx';
 import { SharePanel } from '../../features/sharing/components/SharePanel.tsx';
 import { formatCount, formatDateTime } from '../../lib/format.ts';
 import { paths } from '../../lib/paths.ts';
@@ -72,6 +73,14 @@ function LoadedRun({ run }: { run: Run }) {
         editor && (
           <>
             {done && (
+              <PinToStudy
+                groupId={run.groupId}
+                pinned={{ kind: 'run', runId: run.id }}
+                view={pinnedView(search)}
+                name={run.name}
+              />
+            )}
+            {done && (
               <Button
                 busy={rerun.isPending}
                 onClick={startRerun}
@@ -114,6 +123,13 @@ function LoadedRun({ run }: { run: Run }) {
       </StoredRun>
     </Page>
   );
+}
+
+/** What of the address says how the plot is shown. */
+function pinnedView(search: URLSearchParams): string {
+  const view = new URLSearchParams(search);
+  view.delete('compare');
+  return view.toString();
 }
 
 function RunLine({ run }: { run: Run }) {

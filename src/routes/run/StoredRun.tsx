@@ -1,9 +1,8 @@
 import { useQuery } from '@tanstack/react-query';
 import { useCallback, useMemo, useState } from 'react';
 import type { ReactNode } from 'react';
-import { materialClasses } from '../../../shared/material.ts';
 import type { RunResult } from '../../../shared/resultFormat.ts';
-import type { SharedRun, SweepAxis, UsedMaterial } from '../../../shared/run.ts';
+import type { SharedRun, SweepAxis } from '../../../shared/run.ts';
 import type { WorkingPoint } from '../../../shared/stack.ts';
 import { ErrorState } from '../../components/ErrorState.tsx';
 import { LoadingState } from '../../components/LoadingState.tsx';
@@ -22,9 +21,10 @@ import type { GridPlace } from '../../features/runs/model/sweepPlace.ts';
 import { FilmDrawing } from '../../features/stacks/components/FilmDrawing.tsx';
 import { isTransverse, workingVectors } from '../../features/stacks/model/magnetization.ts';
 import { targetName } from '../../features/stacks/model/axisTargets.ts';
-import { versionKey } from '../../features/stacks/model/media.ts';
-import type { DrawnMaterial, Materials } from '../../features/stacks/model/media.ts';
 import { usualFamilies } from '../../features/stacks/model/viewState.ts';
+import { drawnMaterials } from './drawnMaterials.ts';
+import { markedPlaceIn } from './markedPlace.ts';
+import { useMarkedPlace } from './useMarkedPlace.ts';
 import { useReadingView } from './useReadingView.ts';
 
 type Props = {
@@ -48,7 +48,7 @@ type Props = {
 export function StoredRun({ run, dataPath, partialPath = null, waiting, besideFilm, children }: Props) {
   const [view, setView] = useReadingView();
   const [cursor, setCursor] = useState<Pick<GridPlace, 'ix' | 'iy'> | null>(null);
-  const [member, setMember] = useState<number | null>(null);
+  const [{ at, member }, setMarked] = useMarkedPlace();
   const data = useQuery({ ...runDataQuery(dataPath ?? ''), enabled: dataPath !== null });
   const materials = useMemo(() => drawnMaterials(run.materials), [run.materials]);
   const plotHeight = usePlotHeight(330);
@@ -58,7 +58,7 @@ export function StoredRun({ run, dataPath, partialPath = null, waiting, besideFi
   const result = data.data ?? (partialPath === null ? null : (partial.data ?? null));
   const usual = usualFamilies(isTransverse(workingVectors(document, document.workingPoint.magnetization)));
   const home = result && homePlace(run, result, document);
-  const place = home && { ...home, ...cursor, ...(member === null ? {} : { member }) };
+  const place = home && result && { ...home, ...markedPlaceIn({ at, member }, result), ...cursor };
   const values = result && place ? valuesAt(result, place) : null;
   const point = result && place ? pointOf(run, result, place) : document.workingPoint;
   const swept = [axis, second, run.family].find((one) => one?.kind === 'wavelength');
@@ -103,7 +103,9 @@ export function StoredRun({ run, dataPath, partialPath = null, waiting, besideFi
               onView={setView}
               onPlace={setCursor}
               member={place.member}
-              onMember={setMember}
+              onMember={(next) => setMarked({ member: next })}
+              mark={at}
+              onMark={(x) => setMarked({ at: x })}
               nameOf={nameOf}
               height={plotHeight}
             />
@@ -139,25 +141,6 @@ function pointOf(run: SharedRun, result: RunResult, { ix, iy, member }: GridPlac
   return moves.reduce(
     (point, [axis, x]) => (axis && x !== undefined ? pointAt(axis, point, x) : point),
     run.document.workingPoint,
-  );
-}
-
-/** The materials of a run as the drawing takes them, each as it was in the version that was used. */
-function drawnMaterials(used: readonly UsedMaterial[]): Materials {
-  return new Map(
-    used.flatMap((material) => {
-      const drawn: DrawnMaterial = {
-        version: material.version,
-        formula: material.formula,
-        class: materialClasses.find((one) => one === material.class) ?? 'refractory',
-        rangeNm: material.rangeNm,
-        voigtRangeNm: material.voigtRangeNm,
-        voigtConfidence: material.voigtSource?.confidence ?? null,
-        // The drawing of a stored run shows each m as it was given; it does not ask what could be magnetic.
-        anisotropy: null,
-      };
-      return [[material.id, drawn] as const, [versionKey(material.id, material.version), drawn] as const];
-    }),
   );
 }
 

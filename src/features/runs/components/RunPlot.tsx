@@ -25,6 +25,9 @@ type Props = {
   /** Which of a family is shown, where only one can be. */
   member: number;
   onMember: (member: number) => void;
+  /** Where somebody marked a value on the first axis; null for the place of the film itself. */
+  mark: number | null;
+  onMark: (x: number) => void;
   nameOf: NameOfTarget;
   height: number;
 };
@@ -60,7 +63,7 @@ export function RunPlot(props: Props) {
 type PartProps = Props & { families: readonly Family[]; light: 'p' | 's' | 'ps' };
 
 function OneAxis(props: PartProps) {
-  const { run, result, view, usual, onView, onPlace, nameOf, height, families, light } = props;
+  const { run, result, view, usual, onView, onPlace, mark, onMark, nameOf, height, families, light } = props;
   const wanted = (view.shown ?? usual).filter((family) => families.includes(family));
   const shown = wanted.length > 0 ? wanted : families;
   const key = `${shown.join()} ${light}`;
@@ -80,7 +83,8 @@ function OneAxis(props: PartProps) {
       unit={view.unit}
       log={view.log}
       height={height}
-      marker={workingPlace(run.axis, run.document) ?? undefined}
+      marker={mark ?? workingPlace(run.axis, run.document) ?? undefined}
+      onPickX={onMark}
       onCursorX={(x) => onPlace(x === null ? null : { ix: nearestIndex(result.axis, x), iy: 0 })}
       fileName={run.name}
       controls={<FamilyControls families={families} shown={shown} onChange={onView} />}
@@ -118,7 +122,7 @@ function SeveralAxes(props: PartProps) {
       log={view.log}
       height={height}
       marker={{
-        x: workingPlace(axis, run.document),
+        x: props.mark ?? workingPlace(axis, run.document),
         y: second ? workingPlace(second, run.document) : null,
       }}
       onCursor={onPlace}

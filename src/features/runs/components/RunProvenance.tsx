@@ -5,9 +5,14 @@ import { formatDuration } from '../../../lib/format.ts';
 import { paths } from '../../../lib/paths.ts';
 import { MaterialProvenance } from './MaterialProvenance.tsx';
 
-type Props = { run: SharedRun };
+type Props = {
+  run: Pick<
+    SharedRun,
+    'assumptions' | 'warnings' | 'materials' | 'solverVersion' | 'computeSeconds' | 'inputSha256'
+  >;
+};
 
-/** Everything the numbers of a run rest on: assumptions, warnings, the source of each constant, solver and input. */
+/** Everything the numbers of a run or a design rest on: assumptions, warnings, the source of each constant, solver and input. */
 export function RunProvenance({ run }: Props) {
   return (
     <div className="grid gap-x-8 gap-y-6 lg:grid-cols-2">
