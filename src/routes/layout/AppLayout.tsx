@@ -29,6 +29,7 @@ export function AppLayout() {
         { to: generatePath(paths.groupHome, { groupId: group.groupId }), label: 'Stacks', exact: true },
         { to: generatePath(paths.materials, { groupId: group.groupId }), label: 'Materials' },
         { to: generatePath(paths.runs, { groupId: group.groupId }), label: 'Runs' },
+        { to: generatePath(paths.designs, { groupId: group.groupId }), label: 'Designs' },
         { to: generatePath(paths.studies, { groupId: group.groupId }), label: 'Studies' },
         { to: paths.conventions, label: 'Conventions', narrowOnly: true },
       ]

@@ -4,7 +4,9 @@ import type { RunSummary } from '../../../../shared/run.ts';
 import { Progress } from '../../../components/Progress.tsx';
 
 type RunStateCellProps = {
-  run: RunSummary;
+  run: Pick<RunSummary, 'progress'>;
+  /** What is counted, in the plural. */
+  noun?: string;
   /** Absent for people who may not cancel. */
   onCancel: (() => void) | undefined;
   cancelling: boolean;
@@ -13,7 +15,7 @@ type RunStateCellProps = {
 const icon = 'size-3.5 shrink-0';
 
 /** How a run stands: a word with a mark, or its progress while it is computed. */
-export function RunStateCell({ run, onCancel, cancelling }: RunStateCellProps) {
+export function RunStateCell({ run, noun = 'points', onCancel, cancelling }: RunStateCellProps) {
   const { state, done, total, secondsLeft, error } = run.progress;
   switch (state) {
     case 'queued':
@@ -29,6 +31,7 @@ export function RunStateCell({ run, onCancel, cancelling }: RunStateCellProps) {
             label="Computing"
             done={done}
             total={total}
+            noun={noun}
             secondsLeft={secondsLeft}
             onCancel={onCancel}
             cancelling={cancelling}

@@ -1,9 +1,11 @@
 import { Redo2, Undo2 } from 'lucide-react';
+import { Link, generatePath } from 'react-router-dom';
 import type { Stack } from '../../../../shared/stack.ts';
 import { LIMITS } from '../../../../shared/limits.ts';
 import { countLayers } from '../../../../shared/stackCase.ts';
 import { Button, IconButton } from '../../../components/Button.tsx';
 import { formatCount, formatSince } from '../../../lib/format.ts';
+import { paths } from '../../../lib/paths.ts';
 import type { StackEditor } from '../hooks/useStackEditor.ts';
 
 type Props = { stack: Stack; editor: StackEditor; mayEdit: boolean };
@@ -67,6 +69,14 @@ export function FilmHeader({ stack, editor, mayEdit }: Props) {
           </>
         )}
       </div>
+      {mayEdit && (
+        <Link
+          className="prose-link text-note"
+          to={`${generatePath(paths.newDesign, { groupId: stack.groupId })}?stack=${stack.id}`}
+        >
+          Choose its cap, optimise it or check its tolerances
+        </Link>
+      )}
     </header>
   );
 }
