@@ -1,4 +1,4 @@
-import { complex, divide, multiply, pow, sqrt, subtract, add, abs } from 'mathjs';
+import { complex, divide, multiply, square, sqrt, subtract, add, abs } from 'mathjs';
 import type { Complex } from 'mathjs';
 import { describe, expect, test } from 'vitest';
 import type { AngleFeatures } from '../../shared/live.ts';
@@ -22,8 +22,8 @@ const cobalt = { index: [2.87, 3.36] as [number, number], voigt: [0.0376, 0.0066
 /** |r_p|^2 of one face by Fresnel's formula (Born & Wolf, Principles of Optics, section 1.5.2), computed by mathjs. */
 function fresnelRp([n, k]: readonly [number, number], angleDeg: number): number {
   const angle = (angleDeg * Math.PI) / 180;
-  const eps = pow(complex(n, k), 2) as Complex;
-  const root = sqrt(subtract(eps, Math.sin(angle) ** 2) as Complex) as Complex;
+  const eps = square(complex(n, k));
+  const root = sqrt(complex(eps.re - Math.sin(angle) ** 2, eps.im));
   const first = multiply(eps, Math.cos(angle)) as Complex;
   const ratio = divide(subtract(first, root), add(first, root)) as Complex;
   return Number(abs(ratio)) ** 2;
