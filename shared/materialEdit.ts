@@ -95,6 +95,7 @@ export const materialVersionListSchema = z.object({ versions: z.array(materialVe
 export const materialUsesSchema = z.object({
   stacks: z.array(z.object({ id: z.string(), name: z.string(), versions: z.array(z.int()) })),
   runs: z.array(z.object({ id: z.string(), name: z.string(), versions: z.array(z.int()) })),
+  designs: z.array(z.object({ id: z.string(), name: z.string(), versions: z.array(z.int()) })),
   materials: z.array(z.object({ id: z.string(), name: z.string(), versions: z.array(z.int()) })),
 });
 

@@ -38,7 +38,7 @@ export async function computeRun(
     const bytes = Buffer.from(JSON.stringify(designResultSchema.parse(result)), 'utf8');
     return { seconds, bytes: bytes.length, pieces: () => jsonPieces(bytes) };
   }
-  if (!isSweepRun(run)) throw new Error(`Nobody knows how to compute a run of kind ${String(run)}.`);
+  if (!isSweepRun(run)) throw new Error('Nobody knows how to compute this kind of run.');
   const result = await pool.sweep({ ...run.input, materials }, { ...watch, onStart });
   return {
     seconds: result.seconds,

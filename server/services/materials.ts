@@ -170,13 +170,13 @@ export async function renameMaterial(
   });
 }
 
-/** @throws Refusal 409 that names every stack, run and material that uses it */
+/** @throws Refusal 409 that names every stack, run, design and material that uses it */
 export async function deleteMaterial(models: Models, actor: Person, material: Material): Promise<void> {
   const { id, groupId, name } = material;
   await models.sequelize.transaction(async (transaction) => {
     await models.Material.findByPk(id, { lock: transaction.LOCK.UPDATE, transaction });
     const uses = await materialUses(models, material, groupId === null ? [] : [groupId], transaction);
-    const issues = (['stacks', 'runs', 'materials'] as const).flatMap((kind) =>
+    const issues = (['stacks', 'runs', 'designs', 'materials'] as const).flatMap((kind) =>
       uses[kind].map((use, position) => ({
         path: `${kind}[${position}]`,
         message: `the ${kind.slice(0, -1)} "${use.name}" uses version ${use.versions.join(', ')}`,

@@ -9,6 +9,7 @@ export type DesignWork = { design: DesignInput; materials: ResolvableMaterial[] 
 
 /** One piece of a design calculation for one thread. */
 export type DesignStep =
+  | { kind: 'cap bare' }
   | { kind: 'cap samples'; candidateId: string; from: number; to: number; samples: SharedArrayBuffer }
   | {
       kind: 'cap outcome';

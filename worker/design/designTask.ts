@@ -1,5 +1,5 @@
 import type { CapDesign } from '../../shared/capDesign.ts';
-import { CapCurves, capThicknesses } from './cap/capCurves.ts';
+import { CapCurves, bareReadings, capThicknesses } from './cap/capCurves.ts';
 import { capOutcome } from './cap/capOutcome.ts';
 import { CapSamples } from './cap/capSamples.ts';
 import type { ToleranceDesign } from '../../shared/toleranceDesign.ts';
@@ -30,6 +30,8 @@ export function designStep({ designId, work, flags, step }: DesignTask): unknown
 
 function takeStep(mine: Kept, step: DesignStep, flags: Int32Array): unknown {
   switch (step.kind) {
+    case 'cap bare':
+      return bareReadings(capOf(mine.work), mine.work.materials);
     case 'cap samples': {
       const { design, curves } = capCurvesOf(mine, step.candidateId);
       const nm = capThicknesses(design);
@@ -76,10 +78,15 @@ function takeStep(mine: Kept, step: DesignStep, flags: Int32Array): unknown {
 }
 
 function capCurvesOf(mine: Kept, candidateId: string): { design: CapDesign; curves: CapCurves } {
-  const { design, materials } = mine.work;
-  if (design.kind !== 'cap') throw new Error(`a cap step of a calculation of kind ${design.kind}`);
+  const { materials } = mine.work;
+  const design = capOf(mine.work);
   if (mine.curves?.candidate.id !== candidateId) mine.curves = new CapCurves(design, candidateId, materials);
   return { design, curves: mine.curves };
+}
+
+function capOf({ design }: DesignWork): CapDesign {
+  if (design.kind !== 'cap') throw new Error(`a cap step of a calculation of kind ${design.kind}`);
+  return design;
 }
 
 function toleranceOf({ design }: DesignWork): ToleranceDesign {

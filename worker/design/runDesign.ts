@@ -38,7 +38,7 @@ export async function runDesign(
   const result = await threads.watch<DesignResult>(designTotal(design), options, () => {
     switch (design.kind) {
       case 'cap':
-        return runCap(design, work, threads);
+        return runCap(design, threads);
       case 'optimise':
         return runOptimise(design, threads, options.onPartial);
       case 'tolerance':

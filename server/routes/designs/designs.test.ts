@@ -10,6 +10,7 @@ import {
 } from '../../../shared/design.ts';
 import type { PointReadings } from '../../../shared/designPoint.ts';
 import { createdLinkSchema, linkListSchema, sharedSubjectSchema } from '../../../shared/link.ts';
+import { materialUsesSchema } from '../../../shared/materialEdit.ts';
 import { runListSchema } from '../../../shared/run.ts';
 import { sensitivityAnswerSchema } from '../../../shared/toleranceDesign.ts';
 import { issuePaths, read, refusalOf } from '../../../tests/answers.ts';
@@ -264,10 +265,7 @@ describe('a tolerance', () => {
   });
 
   it('keeps the errors of a typed material however the database orders its keys', async () => {
-    const medium = { voigt: [0.03, 0.01], index: [2.25, 4.07] } as {
-      voigt: [number, number];
-      index: [number, number];
-    };
+    const medium = { voigt: [0.03, 0.01], index: [2.25, 4.07] };
     const document = buildDocument({ layers: [{ id: 'film', medium, thicknessNm: 5, m: [0, 0, 1] }] });
     const base = buildToleranceInput();
     const none = { ...base.tolerance, ratePercent: 0, randomPercent: 0 };
@@ -367,8 +365,15 @@ describe('a design', () => {
     const material = await buildMaterial(server.models, { contents });
     const document = buildDocument();
     document.substrate = { material: material.id };
-    const { input } = await calls.start(buildToleranceInput({ document }));
+    const { id, name, input } = await calls.start(buildToleranceInput({ document }));
     expect(input.document.substrate).toEqual({ material: material.id, version: 2 });
+    // Every thing that rests on a material is named among its uses, which keep it from being deleted.
+    const uses = read(
+      materialUsesSchema,
+      await editor.get(`/api/v1/materials/${material.id}/uses`).expect(200),
+    );
+    expect(uses.designs).toEqual([{ id, name, versions: [2] }]);
+    expect(uses.runs).toEqual([]);
   });
 });
 
@@ -386,7 +391,7 @@ describe('derivatives', () => {
     // Between two solves 0.02 nm apart the derivative is the slope: its definition.
     const shifted = async (nm: number) => {
       const moved = structuredClone(document);
-      moved.layers[0] = { ...moved.layers[0]!, thicknessNm: 3 + nm } as (typeof moved.layers)[number];
+      moved.layers[0] = { ...moved.layers[0]!, thicknessNm: 3 + nm };
       const { readings } = read(
         sensitivityAnswerSchema,
         await editor

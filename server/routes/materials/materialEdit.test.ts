@@ -98,6 +98,7 @@ test('what is in use stays, and who uses it is named', async () => {
   expect(uses).toEqual({
     stacks: [{ id: stack.id, name: 'Oxidized', versions: [1] }],
     runs: [],
+    designs: [],
     materials: [{ id: mixed.id, name: mixed.name, versions: [1] }],
   });
   const refused = await editor.delete(`/api/v1/materials/${id}`).expect(409);

@@ -1,8 +1,7 @@
 import type { CapDesign, CapOutcome, CapResult } from '../../../shared/capDesign.ts';
-import type { DesignWork } from '../designInput.ts';
 import type { DesignThreads } from '../designThreads.ts';
 import { piecesOf } from '../designThreads.ts';
-import { bareReadings, capThicknesses } from './capCurves.ts';
+import { capThicknesses } from './capCurves.ts';
 import { rankCandidates } from './capOutcome.ts';
 import { CapSamples } from './capSamples.ts';
 
@@ -15,14 +14,11 @@ export function capTotal({ candidates, tolerance }: CapDesign): number {
 }
 
 /** Candidates one after the other, the samples of each over all threads. */
-export async function runCap(
-  design: CapDesign,
-  { materials }: DesignWork,
-  threads: DesignThreads,
-): Promise<CapResult> {
+export async function runCap(design: CapDesign, threads: DesignThreads): Promise<CapResult> {
   const { samples, seed } = design.tolerance;
   const thicknessNm = capThicknesses(design);
-  const bare = bareReadings(design, materials);
+  // Given by designTask.ts for this kind of step. In a thread: a formula that somebody wrote may take its time.
+  const bare = (await threads.run({ kind: 'cap bare' })) as CapResult['bare'];
   const candidates: CapOutcome[] = [];
   for (const { id: candidateId } of design.candidates) {
     const { buffer } = new CapSamples({

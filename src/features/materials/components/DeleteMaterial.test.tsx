@@ -11,7 +11,12 @@ import { DeleteMaterial } from './DeleteMaterial.tsx';
 afterEach(cleanup);
 const server = startTestServer();
 
-const uses = { stacks: [{ id: 's1', name: 'Capped cobalt', versions: [2] }], runs: [], materials: [] };
+const uses = {
+  stacks: [{ id: 's1', name: 'Capped cobalt', versions: [2] }],
+  runs: [],
+  designs: [],
+  materials: [],
+};
 const refusal = { error: { code: 'conflict', message: 'This material is in use.' } };
 
 /** Answers DELETE as told and GET with the uses. */

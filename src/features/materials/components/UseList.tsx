@@ -7,17 +7,18 @@ const MOST = 12;
 
 type Use = MaterialUses['stacks'][number];
 
-export function isUsed({ stacks, runs, materials }: MaterialUses): boolean {
-  return stacks.length + runs.length + materials.length > 0;
+export function isUsed({ stacks, runs, designs, materials }: MaterialUses): boolean {
+  return stacks.length + runs.length + designs.length + materials.length > 0;
 }
 
-/** The stacks, runs and mixtures that a material is used in, with the versions that they name. */
+/** The stacks, runs, designs and mixtures that a material is used in, with the versions that they name. */
 export function UseList({ uses }: { uses: MaterialUses }) {
   if (!isUsed(uses)) return <p className="text-muted">Nothing of your groups uses it.</p>;
   return (
     <div className="flex flex-col gap-3">
       <Uses what="Stacks" uses={uses.stacks} to={(stackId) => generatePath(paths.stack, { stackId })} />
       <Uses what="Stored runs" uses={uses.runs} to={(runId) => generatePath(paths.run, { runId })} />
+      <Uses what="Designs" uses={uses.designs} to={(designId) => generatePath(paths.design, { designId })} />
       <Uses
         what="Mixtures"
         uses={uses.materials}
