@@ -15,7 +15,7 @@ import type { CaseResolver } from './runCases.ts';
 import { toDocumentIssues } from './runPaths.ts';
 
 /** Samples x working points x thicknesses that are held at once, 9 bytes each. */
-export const MOST_CAP_VALUES = 12_000_000;
+const MOST_CAP_VALUES = 12_000_000;
 
 /** What keeps a design question from being answered, found before any material is looked up. */
 export function checkDesign(design: DesignInput): Issue[] {

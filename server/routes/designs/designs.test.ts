@@ -139,6 +139,26 @@ describe('a cap design', () => {
     });
   });
 
+  it('with more films than a file should hold gives the best ones and the edges of the windows, and says so', async () => {
+    const buffers = Array.from({ length: 100 }, (_, number) => ({
+      id: `buffer ${number}`,
+      medium: { index: [2.33, 4.14] as [number, number], label: 'Pt' },
+      thicknessNm: 0.05,
+    }));
+    const document = buildDocument();
+    document.layers.splice(2, 1, ...buffers);
+    const range = { fromNm: 1, toNm: 9, points: 300 };
+    const { id } = await calls.finished(buildCapInput({ document, range }));
+    const file = await editor.get(`/api/v1/designs/${id}/input.json`).buffer(true).expect(200);
+    expect(file.headers['content-disposition']).toContain('-input-without-curves.json');
+    const { candidates } = answerOf(await calls.resultOf(id), 'cap');
+    const films = await calls.reproduced(id);
+    const windows = candidates.flatMap((candidate) => candidate.windows);
+    expect(windows.length).toBeGreaterThan(0);
+    expect(films).toHaveLength(1 + 2 + 2 * windows.length);
+    candidates.forEach(({ best }, at) => expectSame(films[1 + at]!, best!.points[0]!.readings));
+  });
+
   it('is handed out as CSV with the sources of its constants', async () => {
     const material = await buildMaterial(server.models, { group: people.group });
     const input = buildCapInput();
