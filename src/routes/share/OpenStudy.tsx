@@ -28,6 +28,7 @@ export function OpenStudy({ token, study }: Props) {
           rows={rowsOf(document.items)}
           onRows={undefined}
           renderPinned={(item) => <SharedItem item={item} token={token} study={study} />}
+          renderBelow={(item) => <SharedSources item={item} token={token} study={study} />}
           nameOf={itemNames(runNames, designNames)}
         />
         <DecisionSection decision={document.decision} decided={decided} />
@@ -39,32 +40,46 @@ export function OpenStudy({ token, study }: Props) {
 type ItemProps = Props & { item: Exclude<StudyItem, { kind: 'note' }> };
 
 function SharedItem({ item, token, study }: ItemProps) {
+  const dataPath = itemPath(item, token);
   if (item.kind === 'run') {
     const run = study.runs.find(({ id }) => id === item.runId)?.run;
-    if (!run) return <Gone what="run" />;
-    const path = `${sharedPath(token)}/runs/${item.runId}`;
-    return (
-      <>
-        <PinnedRun run={run} dataPath={path} view={item.view} href={null} />
-        <RestsOn>
-          <RunProvenance run={run} />
-          <RunDownloads path={path} hasData />
-        </RestsOn>
-      </>
+    return run ? (
+      <PinnedRun run={run} dataPath={dataPath} view={item.view} href={null} />
+    ) : (
+      <Gone what="run" />
     );
   }
   const design = study.designs.find(({ id }) => id === item.designId)?.design;
-  if (!design) return <Gone what="design" />;
-  const path = `${sharedPath(token)}/designs/${item.designId}`;
-  return (
-    <>
-      <PinnedDesign design={design} dataPath={path} view={item.view} href={null} />
-      <RestsOn>
-        <RunProvenance run={design} />
-        <DesignFiles path={path} />
-      </RestsOn>
-    </>
+  return design ? (
+    <PinnedDesign design={design} dataPath={dataPath} view={item.view} href={null} />
+  ) : (
+    <Gone what="design" />
   );
+}
+
+function SharedSources({ item, token, study }: ItemProps) {
+  const path = itemPath(item, token);
+  if (item.kind === 'run') {
+    const run = study.runs.find(({ id }) => id === item.runId)?.run;
+    return run ? (
+      <RestsOn>
+        <RunProvenance run={run} />
+        <RunDownloads path={path} hasData />
+      </RestsOn>
+    ) : null;
+  }
+  const design = study.designs.find(({ id }) => id === item.designId)?.design;
+  return design ? (
+    <RestsOn>
+      <RunProvenance run={design} />
+      <DesignFiles path={path} />
+    </RestsOn>
+  ) : null;
+}
+
+function itemPath(item: ItemProps['item'], token: string): string {
+  const below = item.kind === 'run' ? `runs/${item.runId}` : `designs/${item.designId}`;
+  return `${sharedPath(token)}/${below}`;
 }
 
 function RestsOn({ children }: { children: ReactNode }) {

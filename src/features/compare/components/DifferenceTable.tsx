@@ -48,7 +48,7 @@ export function DifferenceTable({ runs, reference, reading, unit, xAxis }: Props
               const { count, largest, at, rms } = sizeOf(base.x, differences);
               return (
                 <tr key={one.run.id} className="border-b border-line last:border-b-0">
-                  <th scope="row" className="py-1 pr-4 font-semibold">
+                  <th scope="row" className="py-1 pr-4 font-semibold whitespace-nowrap">
                     {one.letter} − {reference.letter}
                   </th>
                   <td className="py-1 pr-4 whitespace-nowrap">{show(largest)}</td>

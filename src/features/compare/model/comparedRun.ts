@@ -98,10 +98,9 @@ export function relatedCurves(
       relation === 'ratio' ? `${one.letter} / ${reference.letter}` : `${one.letter} − ${reference.letter}`;
     return [{ ...lookOf(one, position, reading), name, x, y }];
   });
-  const { label } = scale.axis;
   const axis: PlotAxis =
     relation === 'ratio'
-      ? { label: `ratio to ${reference.letter}`, include: [1], format: (value) => formatNumber(value) }
-      : { ...scale.axis, label: `difference to ${reference.letter} (${label})`, most: Infinity };
+      ? { label: 'ratio', include: [1], format: (value) => formatNumber(value) }
+      : { ...scale.axis, most: Infinity };
   return { series, axis };
 }

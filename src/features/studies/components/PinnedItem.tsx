@@ -7,11 +7,12 @@ import { TextInput } from '../../../components/TextInput.tsx';
 type Props = {
   item: Exclude<StudyItem, { kind: 'note' }>;
   onCaption: ((caption: string) => void) | undefined;
+  below: ReactNode;
   children: ReactNode;
 };
 
 /** A run or design as it was pinned, with what it shows in a sentence. */
-export function PinnedItem({ item, onCaption, children }: Props) {
+export function PinnedItem({ item, onCaption, below, children }: Props) {
   return (
     <figure className="m-0">
       {children}
@@ -30,6 +31,7 @@ export function PinnedItem({ item, onCaption, children }: Props) {
       ) : (
         item.caption && <figcaption className="mt-2 max-w-prose">{item.caption}</figcaption>
       )}
+      {below}
     </figure>
   );
 }

@@ -15,12 +15,14 @@ type Props = {
   onRows: ((change: (rows: readonly StudyRow[]) => StudyRow[]) => void) | undefined;
   /** Draws a run or design as it was pinned. */
   renderPinned: (item: Exclude<StudyItem, { kind: 'note' }>) => ReactNode;
+  /** What stands below the caption of a pinned thing. */
+  renderBelow?: (item: Exclude<StudyItem, { kind: 'note' }>) => ReactNode;
   /** What the pinned thing is called. */
   nameOf: (item: StudyItem) => string;
 };
 
 /** The items in their order. They are moved by dragging, and by buttons that keep the focus on what they move. */
-export function StudyItemList({ rows, onRows, renderPinned, nameOf }: Props) {
+export function StudyItemList({ rows, onRows, renderPinned, renderBelow, nameOf }: Props) {
   const list = useRef<HTMLOListElement | null>(null);
   const [said, setSaid] = useState('');
   const drop = useCallback(
@@ -83,6 +85,7 @@ export function StudyItemList({ rows, onRows, renderPinned, nameOf }: Props) {
                   ) : (
                     <PinnedItem
                       item={item}
+                      below={renderBelow?.(item)}
                       onCaption={
                         onRows && ((caption) => onRows((now) => changeItem(now, { ...item, caption })))
                       }
