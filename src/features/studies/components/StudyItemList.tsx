@@ -109,7 +109,8 @@ function DropLine() {
 }
 
 function focusMove(list: HTMLElement | null, id: string, step: -1 | 1): void {
-  const row = list?.querySelector(`[data-row="${CSS.escape(id)}"]`);
+  const rows = [...(list?.querySelectorAll<HTMLElement>('[data-row]') ?? [])];
+  const row = rows.find(({ dataset }) => dataset['row'] === id);
   const buttons = [step, -step].map((one) =>
     row?.querySelector<HTMLButtonElement>(`button[data-move="${one}"]:not(:disabled)`),
   );
