@@ -19,7 +19,8 @@ export function DesignAnswer({ design, mayEdit }: Props) {
   const path = `/designs/${design.id}`;
   const [search, setSearch] = useSearchParams();
   const done = state === 'done';
-  const searching = state === 'running' && design.kind === 'optimise';
+  // Before the first films are solved there is nothing to ask for.
+  const searching = state === 'running' && design.kind === 'optimise' && design.progress.done > 0;
   const result = useQuery({ ...designResultQuery(path), enabled: done });
   const partial = useQuery({ ...partialDesignResultQuery(path), enabled: searching });
   const shown = done ? result.data : searching ? partial.data : undefined;

@@ -1,6 +1,6 @@
 import { useQuery } from '@tanstack/react-query';
 import { useEffect } from 'react';
-import { generatePath, useNavigate, useParams } from 'react-router-dom';
+import { generatePath, useNavigate, useParams, useSearchParams } from 'react-router-dom';
 import type { Design } from '../../../shared/design.ts';
 import { Button } from '../../components/Button.tsx';
 import { ErrorState } from '../../components/ErrorState.tsx';
@@ -50,6 +50,7 @@ export function DesignPage() {
 function LoadedDesign({ design }: { design: Design }) {
   const editor = mayEdit(useMembership(design.groupId));
   const navigate = useNavigate();
+  const [search] = useSearchParams();
   const rerun = useRerunDesign(design);
   const done = design.progress.state === 'done';
   const path = `/designs/${design.id}`;
@@ -69,7 +70,7 @@ function LoadedDesign({ design }: { design: Design }) {
                 <PinToStudy
                   groupId={design.groupId}
                   pinned={{ kind: 'design', designId: design.id }}
-                  view={window.location.search.slice(1)}
+                  view={search.toString()}
                   name={design.name}
                 />
                 <Button busy={rerun.isPending} onClick={startRerun} title="Compute the same question again">
@@ -96,7 +97,7 @@ function LoadedDesign({ design }: { design: Design }) {
       <DesignAnswer design={design} mayEdit={editor} />
       <div className="mt-8 flex flex-col gap-7 border-t border-line pt-5">
         <RunProvenance run={design} />
-        <div className="grid gap-7 lg:grid-cols-2">
+        <div className="grid grid-cols-1 gap-7 lg:grid-cols-2">
           <RunDownloads path={path} valuesFile="result.csv" hasData={done} />
           {editor && done && <SharePanel subject={{ opens: 'design', id: design.id }} />}
         </div>

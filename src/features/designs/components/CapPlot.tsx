@@ -6,7 +6,7 @@ import { Select } from '../../../components/Select.tsx';
 import { formatNumber } from '../../../lib/format.ts';
 import { capSeries } from '../model/capSeries.ts';
 import type { DesignView } from '../model/designView.ts';
-import { axisLabel, capQuantity, capQuantityNames } from '../model/quantities.ts';
+import { axisLabel, capQuantity, capQuantityNames, unitLabel } from '../model/quantities.ts';
 import { CapWindows } from './CapWindows.tsx';
 import { PointSelect } from './PointSelect.tsx';
 
@@ -31,7 +31,7 @@ export function CapPlot({ input, result, view, onView }: Props) {
     () => capSeries(input, result, pointId, quantity),
     [input, result, pointId, quantity],
   );
-  const yAxes = useMemo(() => [{ label: axisLabel(capQuantity(quantity, input.signal)) }], [quantity, input]);
+  const yAxes = useMemo(() => [{ label: unitLabel(capQuantity(quantity, input.signal)) }], [quantity, input]);
   const label = input.points.find(({ id }) => id === pointId)?.label ?? '';
   return (
     <section aria-label="Curves">

@@ -56,8 +56,8 @@ export function CapRanking({ input, result, pointId, actions }: Props) {
 function columnsOf(input: CapDesign, actions: Props['actions']): Column<Row>[] {
   const signal = signalQuantities[input.signal];
   const percent = (value: number | null | undefined, unit: string) =>
-    value === null || value === undefined ? '–' : `${formatNumber(value, { digits: 3 })} ${unit}`;
-  const columns: Column<Row>[] = [
+    value === null || value === undefined ? '–' : `${formatNumber(value, { digits: 3 })}\u00a0${unit}`;
+  return [
     {
       id: 'cap',
       header: 'Cap',
@@ -66,6 +66,7 @@ function columnsOf(input: CapDesign, actions: Props['actions']): Column<Row>[] {
         <div className="max-w-96">
           {outcome.label}
           <div className="text-note font-normal text-muted">{outcome.best?.reason ?? outcome.obstacle}</div>
+          {outcome.best && actions ? <div className="mt-1.5 font-normal">{actions(outcome.id)}</div> : null}
         </div>
       ),
     },
@@ -129,18 +130,6 @@ function columnsOf(input: CapDesign, actions: Props['actions']): Column<Row>[] {
       header: 'Window',
       value: ({ outcome }) => outcome.windows[0]?.fromNm ?? null,
       cell: ({ outcome }) => windowWords(outcome.windows) || 'none',
-    },
-  ];
-  if (!actions) return columns;
-  return [
-    ...columns,
-    {
-      id: 'actions',
-      header: 'Actions',
-      hideHeader: true,
-      sortable: false,
-      value: () => null,
-      cell: ({ outcome }) => (outcome.best ? actions(outcome.id) : null),
     },
   ];
 }

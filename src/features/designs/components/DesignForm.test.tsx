@@ -65,7 +65,7 @@ const stack: Stack = {
 function show(kind: DesignKind) {
   const sent: unknown[] = [];
   vi.stubGlobal('fetch', (_path: string, init: RequestInit) => {
-    sent.push(JSON.parse(String(init.body)));
+    sent.push(typeof init.body === 'string' ? JSON.parse(init.body) : null);
     const issues = [
       { path: 'input.points[0].workingPoint.wavelengthNm', message: 'Q of Cobalt is known at 632.8 nm only' },
       { path: 'input.candidates[1].layers[0].leastNm', message: 'is beyond the range' },

@@ -69,7 +69,7 @@ export function OptimiseResultView({ input, result, materials, view, onView, act
           onMember={(chosen) => onView({ member: chosen })}
         />
       )}
-      <div className="grid gap-6 lg:grid-cols-2">
+      <div className="grid grid-cols-1 gap-6 lg:grid-cols-2">
         <FilmTable
           input={input}
           materials={materials}

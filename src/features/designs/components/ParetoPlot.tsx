@@ -3,7 +3,7 @@ import type { Goal, OptimiseResult } from '../../../../shared/optimiseDesign.ts'
 import { LinePlot } from '../../../components/plot/LinePlot.tsx';
 import { nearestIndex } from '../../../components/plot/curveValues.ts';
 import { Select } from '../../../components/Select.tsx';
-import { axisLabel, goalQuantityLooks, printQuantity } from '../model/quantities.ts';
+import { axisLabel, unitLabel, goalQuantityLooks, printQuantity } from '../model/quantities.ts';
 
 type Props = {
   goal: Goal;
@@ -41,7 +41,7 @@ export function ParetoPlot({ goal, second, pareto, member, onMember }: Props) {
       format: (value: number) => printQuantity({ ...look, scale: 1 }, value),
     };
   }, [goal]);
-  const yAxes = useMemo(() => [{ label: axisLabel(goalQuantityLooks[second.quantity]) }], [second]);
+  const yAxes = useMemo(() => [{ label: unitLabel(goalQuantityLooks[second.quantity]) }], [second]);
   const chosen = member === null ? undefined : x[member];
   const options = [
     { value: 'best', label: 'the best of the first goal' },
@@ -52,7 +52,9 @@ export function ParetoPlot({ goal, second, pareto, member, onMember }: Props) {
   ];
   return (
     <section aria-label="Both goals">
-      <h2 className="mb-2 text-lead">Both goals</h2>
+      <h2 className="mb-2 text-lead">
+        Both goals: {other.label} against {first.label}
+      </h2>
       <LinePlot
         series={series}
         xAxis={xAxis}

@@ -3,7 +3,7 @@ import type { Goal, OptimiseResult } from '../../../../shared/optimiseDesign.ts'
 import { LinePlot } from '../../../components/plot/LinePlot.tsx';
 import type { PlotSeries } from '../../../components/plot/plotTypes.ts';
 import { formatCount } from '../../../lib/format.ts';
-import { axisLabel, goalQuantityLooks, printQuantity } from '../model/quantities.ts';
+import { unitLabel, goalQuantityLooks, printQuantity } from '../model/quantities.ts';
 
 const xAxis = { label: 'films solved', format: (value: number) => `${formatCount(value)} films` };
 
@@ -11,11 +11,11 @@ const xAxis = { label: 'films solved', format: (value: number) => `${formatCount
 export function SearchPath({ goal, path }: { goal: Goal; path: OptimiseResult['path'] }) {
   const look = goalQuantityLooks[goal.quantity];
   const series = useMemo(() => pathSeries(goal, path), [goal, path]);
-  const yAxes = useMemo(() => [{ label: axisLabel(goalQuantityLooks[goal.quantity]) }], [goal]);
+  const yAxes = useMemo(() => [{ label: unitLabel(goalQuantityLooks[goal.quantity]) }], [goal]);
   if (path.length === 0) return null;
   return (
     <section aria-label="Path of the search">
-      <h2 className="mb-2 text-lead">Path of the search</h2>
+      <h2 className="mb-2 text-lead">Path of the search: best {look.label} so far</h2>
       <LinePlot
         series={series}
         xAxis={xAxis}

@@ -112,6 +112,11 @@ export function bareValue(bare: CapResult['bare'][number] | undefined, name: Cap
   }
 }
 
+/** Over a y axis, where the quantity is named by the heading or its control. */
+export function unitLabel({ unit }: Quantity): string {
+  return unit || 'value';
+}
+
 export function axisLabel({ label, unit }: Quantity): string {
   return unit ? `${label} (${unit})` : label;
 }
@@ -120,5 +125,5 @@ export function axisLabel({ label, unit }: Quantity): string {
 export function printQuantity({ scale, unit, signed }: Quantity, value: number | null, digits = 4): string {
   if (value === null) return '–';
   const number = formatNumber(value * scale, { digits, signed: signed ?? false });
-  return unit ? `${number} ${unit}` : number;
+  return unit ? `${number}\u00a0${unit}` : number;
 }
