@@ -1,4 +1,5 @@
 import type { CreatedLink, Link } from '../../shared/link.ts';
+import { shareAddress } from '../services/shareAddress.ts';
 import type { LinkWithSubject } from '../services/links.ts';
 
 export function presentLink({ link, subject }: LinkWithSubject): Link {
@@ -19,5 +20,5 @@ export function presentLink({ link, subject }: LinkWithSubject): Link {
 
 /** @param publicUrl where people reach the server */
 export function presentCreatedLink(link: LinkWithSubject, token: string, publicUrl: string): CreatedLink {
-  return { ...presentLink(link), url: `${publicUrl}/share/${token}` };
+  return { ...presentLink(link), url: shareAddress(publicUrl, token) };
 }

@@ -4,6 +4,7 @@ import { designFileRoutes } from './designs/designFileRoutes.ts';
 import { designLinkRoutes } from './designs/designLinkRoutes.ts';
 import { designRoutes } from './designs/designRoutes.ts';
 import { sensitivityRoutes } from './designs/sensitivityRoutes.ts';
+import { cardRoutes } from './cards/cardRoutes.ts';
 import { developmentRoutes } from './development/developmentRoutes.ts';
 import { healthRoutes } from './health/healthRoutes.ts';
 import { importRoutes } from './imports/importRoutes.ts';
@@ -20,7 +21,9 @@ import { runFileRoutes } from './runs/runFileRoutes.ts';
 import { runRoutes } from './runs/runRoutes.ts';
 import { sessionRoutes } from './session/sessionRoutes.ts';
 import { sharedDesignRoutes } from './shared/sharedDesignRoutes.ts';
+import { sharedCardRoutes } from './shared/sharedCardRoutes.ts';
 import { sharedRoutes } from './shared/sharedRoutes.ts';
+import { sharedStudyRoutes } from './shared/sharedStudyRoutes.ts';
 import { solveRoutes } from './solve/solveRoutes.ts';
 import { stackRoutes } from './stacks/stackRoutes.ts';
 import { studyLinkRoutes } from './studies/studyLinkRoutes.ts';
@@ -50,8 +53,11 @@ const described: Route[] = [
   ...sensitivityRoutes,
   ...studyRoutes,
   ...studyLinkRoutes,
+  ...cardRoutes,
   ...linkRoutes,
   ...sharedRoutes,
+  ...sharedStudyRoutes,
+  ...sharedCardRoutes,
   ...sharedDesignRoutes,
   ...developmentRoutes,
 ];

@@ -64,25 +64,28 @@ export async function createLink(
   wanted: WantedLink,
 ): Promise<{ link: LinkWithSubject; token: string }> {
   const { linkId, token } = await models.sequelize.transaction((transaction) =>
-    insertLink(models, actor, subject, wanted, transaction),
+    insertLink(models, actor, subject, wanted, { transaction }),
   );
   const [link] = await listLinks(models, { id: linkId });
   if (!link) throw new Error(`Link ${linkId} is gone right after its making.`);
   return { link, token };
 }
 
-/** As createLink, in the transaction of what the link is made for. */
+/**
+ * As createLink, in the transaction of what the link is made for.
+ *
+ * @param options.token of makeSecret, where the address had to be known before
+ */
 export async function insertLink(
   models: Models,
   actor: Person,
   { opens, id, groupId, name }: LinkSubject,
   wanted: WantedLink,
-  transaction: Transaction,
+  { transaction, token = makeSecret() }: { transaction: Transaction; token?: string },
 ): Promise<{ linkId: string; token: string }> {
   if (wanted.expiresAt !== null && wanted.expiresAt.getTime() <= Date.now()) {
     throw invalid([{ path: 'expiresAt', message: 'must be in the future' }]);
   }
-  const token = makeSecret();
   const link = await models.ShareLink.create(
     {
       ...{ ...wanted, groupId, tokenHash: hashSecret(token), createdById: actor.userId, runId: null },

@@ -2,11 +2,20 @@ import './nodeVersion.mjs';
 import { randomBytes } from 'node:crypto';
 import { provideChromium } from './packages/chromium.mjs';
 import { installPackages } from './packages/npmPackages.mjs';
+import { providePoppler } from './packages/poppler.mjs';
 import { runEntry } from './processes/stopping.mjs';
 import { SetupError } from './setupError.mjs';
 import { seconds } from './step.mjs';
 import { endLeftovers } from './testing/endLeftovers.mjs';
-import { needsBrowser, needsDatabase, runBuild, runCheck, runVitest, STAGES } from './testing/stages.mjs';
+import {
+  needsBrowser,
+  needsDatabase,
+  readsPdf,
+  runBuild,
+  runCheck,
+  runVitest,
+  STAGES,
+} from './testing/stages.mjs';
 import { testDatabases } from './testing/testDatabases.mjs';
 import { testServer } from './testing/testServer.mjs';
 
@@ -25,6 +34,7 @@ async function provideWhatIsNeeded(stages) {
   endLeftovers();
   await installPackages();
   const chromium = stages.some(needsBrowser) ? await provideChromium() : undefined;
+  if (stages.some(readsPdf)) await providePoppler();
   const freshDatabase = stages.some(needsDatabase) ? await testDatabases(await testServer()) : undefined;
   return { chromium, freshDatabase };
 }

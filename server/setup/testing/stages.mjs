@@ -24,6 +24,9 @@ export const needsDatabase = (stage) => stage === 'api' || stage === 'e2e';
 /** @param {Stage} stage */
 export const needsBrowser = (stage) => stage === 'e2e';
 
+/** Whether it reads growth cards. @param {Stage} stage */
+export const readsPdf = needsDatabase;
+
 /** @param {string} program @param {string[]} args @param {NodeJS.ProcessEnv} env */
 async function succeeds(program, args, env) {
   const { ended } = startChild(program, args, {

@@ -1,0 +1,152 @@
+import type { z } from 'zod';
+import type { DesignPoint, SignalName } from '../../shared/designPoint.ts';
+import type { CardReading, createGrowthCardSchema } from '../../shared/growthCard.ts';
+import { readingDefinitions } from '../../shared/readings.ts';
+import type { ReadingName, UsedMaterial } from '../../shared/run.ts';
+import type { StackDocument } from '../../shared/stack.ts';
+import type { ToleranceDesign, ToleranceResult } from '../../shared/toleranceDesign.ts';
+import { drawnLayers } from '../../worker/design/expandBlocks.ts';
+import { ComputeError } from '../../worker/sweep/computeError.ts';
+import type { Dependencies } from '../dependencies.ts';
+import { Refusal, invalid } from '../errors.ts';
+import type { GrowthCardContent } from '../models/growthCard.ts';
+import { cardCautions } from './cardCautions.ts';
+import { cardLayers } from './cardLayers.ts';
+import { layerRemarks } from './cardRemarks.ts';
+import { cardSources } from './cardSources.ts';
+import { takeDesignSnapshot } from './designSnapshot.ts';
+import { loadRunMaterials } from './runMaterials.ts';
+
+type WantedCard = z.output<typeof createGrowthCardSchema>;
+
+export type ComputedCard = {
+  content: Omit<GrowthCardContent, 'url'>;
+  solverVersion: string;
+  inputSha256: string;
+};
+
+/** A card is made while somebody waits for it. */
+const PATIENCE_MS = 60_000;
+
+/**
+ * What a card says of a film: a tolerance question is answered for its working points, and its numbers go on the page.
+ *
+ * @throws Refusal 422 with issues at the fields of the request, also when it takes longer than a minute
+ */
+export async function takeCardContent(
+  { materials: store, pool }: Pick<Dependencies, 'materials' | 'pool'>,
+  groupId: string,
+  wanted: WantedCard,
+  signal: AbortSignal,
+): Promise<ComputedCard> {
+  refuseUnknownRates(wanted);
+  const { points, signal: signalName, tolerance, rates, bench } = wanted;
+  const question: ToleranceDesign = {
+    ...{ kind: 'tolerance', document: wanted.document, points, tolerance },
+    ...{ signal: signalName, demands: {} },
+  };
+  const snapshot = await takeDesignSnapshot({ materials: store, pool }, groupId, question).catch(
+    (error: unknown) => {
+      throw withCardPaths(error);
+    },
+  );
+  const { document } = snapshot.input.design;
+  const result = await answer(pool, snapshot.input.design, await loadRunMaterials(store, snapshot), signal);
+  return {
+    content: {
+      ...{ document, tolerance, bench },
+      layers: cardLayers(document, snapshot.materials, tolerance, rates),
+      readings: points.map((point) => cardReading(point, wanted, result)),
+      assumptions: [...snapshot.assumptions, ...layerRemarks(document, snapshot.materials)],
+      sources: cardSources(document, snapshot.materials),
+      cautions: cardCautions(formulasOf(document, snapshot.materials), bench),
+    },
+    solverVersion: snapshot.solverVersion,
+    inputSha256: snapshot.inputSha256,
+  };
+}
+
+async function answer(
+  pool: Dependencies['pool'],
+  design: Parameters<typeof pool.design>[0]['design'],
+  materials: Parameters<typeof pool.design>[0]['materials'],
+  signal: AbortSignal,
+): Promise<ToleranceResult> {
+  const late = AbortSignal.timeout(PATIENCE_MS);
+  try {
+    const { result } = await pool.design({ design, materials }, { signal: AbortSignal.any([signal, late]) });
+    if (result.kind !== 'tolerance') throw new Error(`a tolerance question was answered by ${result.kind}`);
+    return result;
+  } catch (error) {
+    if (error instanceof ComputeError && late.aborted) {
+      const message = `the bands took longer than ${PATIENCE_MS / 1000} s: ask fewer samples or working points`;
+      throw invalid([{ path: 'tolerance.samples', message }]);
+    }
+    throw error;
+  }
+}
+
+type Shown = {
+  of: SignalName | 'reflectance';
+  key: keyof ToleranceResult['points'][number]['distributions'];
+  name: ReadingName;
+};
+
+/** What is read at one working point: the signal that counts first. */
+function cardReading(point: DesignPoint, { signal }: WantedCard, result: ToleranceResult): CardReading {
+  const found = result.points.find(({ pointId }) => pointId === point.id);
+  if (!found) throw new Error(`the working point ${point.id} has no answer`);
+  const isP = point.workingPoint.input === 'p';
+  const usual: Shown[] = [
+    { of: 'rotation', key: 'rotationDeg', name: isP ? 'rotationP' : 'rotationS' },
+    { of: 'ellipticity', key: 'ellipticityDeg', name: isP ? 'ellipticityP' : 'ellipticityS' },
+    { of: 'amplitude', key: 'amplitude', name: isP ? 'crossSp' : 'crossPs' },
+    { of: 'reflectance', key: 'reflectance', name: isP ? 'reflectanceP' : 'reflectanceS' },
+  ];
+  const contrast: Shown = { of: 'contrast', key: 'contrast', name: isP ? 'contrastP' : 'contrastS' };
+  const all = signal === 'contrast' ? [contrast, ...usual] : usual;
+  const shown = [...all.filter((one) => one.of === signal), ...all.filter((one) => one.of !== signal)];
+  return {
+    pointId: point.id,
+    label: point.label,
+    conditions: conditionsOf(point),
+    readings: shown.map(({ key, name }) => {
+      const { label, unit } = readingDefinitions[name];
+      const [, low, , high] = found.distributions[key]?.quantiles ?? [];
+      return { label, unit, nominal: found.nominal[key], low: low ?? null, high: high ?? null };
+    }),
+  };
+}
+
+function conditionsOf({ workingPoint }: DesignPoint): string {
+  const { wavelengthNm, angleDeg, input, magnetization } = workingPoint;
+  const m = {
+    drawn: 'm as drawn',
+    reversed: 'm reversed',
+    direction: `m along (${magnetization.mode === 'direction' ? magnetization.m.join(', ') : ''})`,
+  }[magnetization.mode];
+  return `${wavelengthNm} nm, ${angleDeg}° from the normal, ${input} light, ${m}`;
+}
+
+/** Formulas of the materials, and what people called constants that they typed in. */
+function formulasOf(document: StackDocument, materials: readonly UsedMaterial[]): string[] {
+  const media = [document.substrate, ...drawnLayers(document.layers).map(({ medium }) => medium)];
+  return [...materials.map(({ formula }) => formula), ...media.flatMap(({ label }) => label ?? [])];
+}
+
+function refuseUnknownRates({ document, rates }: WantedCard): void {
+  const known = new Set(drawnLayers(document.layers).map(({ id }) => id));
+  const issues = rates.flatMap(({ layerId }, position) =>
+    known.has(layerId)
+      ? []
+      : [{ path: `rates[${position}].layerId`, message: `the film has no layer ${layerId}` }],
+  );
+  if (issues.length > 0) throw invalid(issues);
+}
+
+/** The request of a card holds the question's fields without the `input.` of a design's. */
+function withCardPaths(error: unknown): unknown {
+  if (!(error instanceof Refusal) || !error.issues) return error;
+  const issues = error.issues.map(({ path, message }) => ({ path: path.replace(/^input\./, ''), message }));
+  return new Refusal(error.status, error.code, error.message, issues);
+}
