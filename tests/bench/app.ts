@@ -9,12 +9,12 @@ import { readDemoData } from '../../server/seeders/demoData.ts';
 import { startBenchServer } from './benchServer.ts';
 import { timeReadTable } from './readTable.ts';
 import { User } from './user.ts';
-import { mapRun, stripRequest, sweepRun } from './workloads.ts';
+import { curveRequest, mapRun, stripRequest, sweepRun } from './workloads.ts';
 
 /**
  * `npm run bench:app`: what a person waits for, against a real server on a throw-away database (of the PostgreSQL at
  * DATABASE_URL or TEST_DATABASE_URL, else the project's own). The way of a run from its request to its stored numbers,
- * the readings strip under four parallel users, and the reading of a large table of constants. `--json` prints one JSON object.
+ * the readings strip under four parallel users, curves while a layer is dragged, and the reading of a large table of constants. `--json` prints one JSON object.
  */
 const { values: options } = parseArgs({ options: { json: { type: 'boolean', default: false } } });
 
@@ -23,6 +23,7 @@ const MAPS = 3;
 const TABLES = 5;
 const USERS = 4;
 const STRIP_REQUESTS = 100;
+const CURVES = 200;
 
 type Row = { what: string; count: number; medianMs: number; p99Ms: number };
 
@@ -36,6 +37,7 @@ async function measure(databaseUrl: string): Promise<{ rows: Row[]; peakMemoryMb
     const [first] = users;
     const rows = [
       ...(await timeStrip(users)),
+      ...(await timeLiveCurves(first!)),
       ...(await timeRuns(first!, 'sweep of 2,000 points, 10 layers', sweepRun, SWEEPS)),
       ...(await timeRuns(first!, 'map of 1,000 x 1,000 points', mapRun, MAPS)),
       rowOf('reading a table of 100,000 rows', await timeReadTable(TABLES)),
@@ -60,6 +62,27 @@ async function timeStrip(users: User[]): Promise<Row[]> {
   times.length = 0;
   await Promise.all(users.map((user) => use(user, STRIP_REQUESTS)));
   return [rowOf(`readings strip, ${USERS} users`, times)];
+}
+
+/** A layer dragged: two curves under way at a time, as the page asks them. The middle time is that from answer to answer. */
+async function timeLiveCurves(user: User): Promise<Row[]> {
+  const asked: number[] = [];
+  const arrivals: number[] = [];
+  let next = 0;
+  const lane = async () => {
+    while (next < CURVES) {
+      const started = performance.now();
+      await user.liveCurve(curveRequest(1 + (next += 1) * 0.01));
+      arrivals.push(performance.now());
+      asked.push(arrivals.at(-1)! - started);
+    }
+  };
+  await Promise.all([lane(), lane()]);
+  const between = arrivals.slice(1).map((at, index) => at - arrivals[index]!);
+  return [
+    rowOf('live curve of 200 points: from question to answer', asked),
+    rowOf('live curve of 200 points: from answer to answer', between),
+  ];
 }
 
 /** The way of a run, and of that the part spent on computing. */

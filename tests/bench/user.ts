@@ -1,5 +1,6 @@
 import { setTimeout as sleep } from 'node:timers/promises';
 import { sessionSchema } from '../../shared/account.ts';
+import type { LiveCurveRequest } from '../../shared/live.ts';
 import { decodeResult } from '../../shared/resultFormat.ts';
 import type { RunResult } from '../../shared/resultFormat.ts';
 import { runSchema } from '../../shared/run.ts';
@@ -43,6 +44,10 @@ export class User {
   /** Answers of the solve contract are read but not looked at: the client's parsing is no part of the latency. */
   async solve(request: LibrarySolveRequest): Promise<void> {
     await (await this.#send('POST', '/solve', request)).text();
+  }
+
+  async liveCurve(request: LiveCurveRequest): Promise<RunResult> {
+    return decodeResult(await (await this.#send('POST', '/live-curve', request)).arrayBuffer());
   }
 
   async startRun(wanted: Omit<CreateRun, 'groupId'>): Promise<Run> {

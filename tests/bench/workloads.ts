@@ -1,3 +1,4 @@
+import type { LiveCurveRequest } from '../../shared/live.ts';
 import type { CreateRun } from '../../shared/run.ts';
 import type { LibrarySolveRequest } from '../../shared/solve.ts';
 import { inMagnetizationState, toSolveCase } from '../../shared/stackCase.ts';
@@ -64,5 +65,15 @@ export function stripRequest(angleDeg: number): LibrarySolveRequest {
       ...inMagnetizationState(given, state),
       outputs: ['mueller', 'faraday', 'ceiling'],
     })),
+  };
+}
+
+/** What the plot asks while the cap is dragged. */
+export function curveRequest(capNm: number): LiveCurveRequest {
+  const layers = film.layers.map((layer) => (layer.id === 'cap' ? plain('cap', 2.33, 4.14, capNm) : layer));
+  return {
+    document: { ...film, layers },
+    axis: wavelengths(200),
+    readings: ['rotationP', 'ellipticityP', 'reflectanceP'],
   };
 }

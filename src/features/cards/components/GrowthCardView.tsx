@@ -80,7 +80,7 @@ function Part({ title, children }: { title: string; children: ReactNode }) {
 
 function Lines({ lines }: { lines: readonly string[] }) {
   return (
-    <ul className="list-disc pl-4 wrap-break-word">
+    <ul className="fine-print list-disc pl-4 wrap-break-word">
       {lines.map((line) => (
         <li key={line}>{line}</li>
       ))}

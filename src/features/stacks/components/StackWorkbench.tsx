@@ -1,4 +1,4 @@
-import { useCallback, useMemo, useState } from 'react';
+import { useCallback, useDeferredValue, useMemo, useState } from 'react';
 import type { ReactNode } from 'react';
 import type { Issue } from '../../../../shared/error.ts';
 import type { MaterialSummary } from '../../../../shared/material.ts';
@@ -127,7 +127,24 @@ export function StackWorkbench({
   const canEdit = mayEdit && newer === null;
   useEditorKeys({ undo: editor.undo, redo: editor.redo, save: () => void editor.save() }, canEdit);
 
-  const setPoint = (change: Partial<WorkingPoint>) => setView({ point: { ...point, ...change } });
+  const setPoint = useCallback(
+    (change: Partial<WorkingPoint>) => setView({ point: { ...point, ...change } }),
+    [point, setView],
+  );
+  // What explains the readings is drawn when there is time: the curve under the pointer comes first.
+  const explained = useDeferredValue(film);
+  const panels = useMemo(
+    () =>
+      explanation({
+        document: explained,
+        point,
+        describe,
+        unit: view.unit,
+        onPoint: setPoint,
+        onActiveLayer: setActiveLayer,
+      }),
+    [explanation, explained, point, describe, view.unit, setPoint],
+  );
   const keep = ({ axes: { axis, second, family }, problem }: { axes: PreviewAxes; problem: boolean }) => {
     const sweep = { axis, ...(second ? { second } : {}), ...(family ? { family } : {}) };
     return keepButton({
@@ -233,16 +250,7 @@ export function StackWorkbench({
             keep={mayEdit ? keep : null}
           />
         </div>
-        <div className="mt-4">
-          {explanation({
-            document: film,
-            point,
-            describe,
-            unit: view.unit,
-            onPoint: setPoint,
-            onActiveLayer: setActiveLayer,
-          })}
-        </div>
+        <div className="mt-4">{panels}</div>
       </div>
       <LeaveGuard dirty={editor.dirty && mayEdit} />
     </div>

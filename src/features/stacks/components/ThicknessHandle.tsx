@@ -1,6 +1,5 @@
 import { useEffect, useEffectEvent } from 'react';
 import type { StackLayer } from '../../../../shared/stack.ts';
-import { formatPlain } from '../../../lib/format.ts';
 import { useThicknessDrag } from '../hooks/useThicknessDrag.ts';
 import { withLayer } from '../model/items.ts';
 import { useFilm } from './film.ts';
@@ -37,11 +36,6 @@ export function ThicknessHandle({ layer }: { layer: StackLayer }) {
       <span
         className={`h-[3px] w-9 rounded-full bg-ink group-hover:opacity-70 ${dragging ? 'opacity-90' : 'opacity-25'}`}
       />
-      {dragging && (
-        <span className="absolute top-3 rounded-box bg-ink px-1.5 py-0.5 text-small whitespace-nowrap text-paper">
-          {formatPlain(thicknessNm)} nm
-        </span>
-      )}
     </div>
   );
 }
