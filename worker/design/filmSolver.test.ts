@@ -119,6 +119,19 @@ describe('a film solved over and over', () => {
     expect(reflectance).toBeCloseTo(wanted.reflectance, 10);
   });
 
+  test('a layer is never thinner than its dead parts', () => {
+    const film = buildFilm();
+    film.layers[1] = {
+      ...film.layers[1]!,
+      dead: { topNm: 0.3, bottomNm: 0.2 },
+    } as StackDocument['layers'][0];
+    const solver = new FilmSolver(film, new Map(), plain);
+    const at = (nm: number) => solver.readings({ thicknessNm: new Map([['co', nm]]), constants: null });
+    expect(at(-1)).toEqual(at(0.5));
+    expect(Math.abs(at(0.5).rotationDeg!)).toBeLessThan(1e-12);
+    expect(Math.abs(at(1).rotationDeg!)).toBeGreaterThan(1e-4);
+  });
+
   test('says which layer does not exist', () => {
     const solver = new FilmSolver(buildFilm(), new Map(), plain);
     expect(() => solver.readings({ thicknessNm: new Map([['au', 1]]), constants: null })).toThrow(
