@@ -3,7 +3,7 @@ import userEvent from '@testing-library/user-event';
 import { useState } from 'react';
 import { afterEach, expect, it } from 'vitest';
 import type { StudyItem } from '../../../../shared/study.ts';
-import { itemsOf, rowsOf } from '../model/rows.ts';
+import { rowsOf } from '../model/rows.ts';
 import type { StudyRow } from '../model/rows.ts';
 import { StudyItemList } from './StudyItemList.tsx';
 
@@ -11,11 +11,8 @@ afterEach(cleanup);
 
 const items: StudyItem[] = ['first', 'second', 'third'].map((text) => ({ kind: 'note', id: text, text }));
 
-let shown: readonly StudyRow[] = [];
-
 function Editable() {
   const [rows, setRows] = useState<readonly StudyRow[]>(rowsOf(items));
-  shown = rows;
   return (
     <StudyItemList
       rows={rows}
@@ -26,7 +23,9 @@ function Editable() {
   );
 }
 
-const order = () => itemsOf(shown).map(({ id }) => id);
+/** As screen readers name the items: `1. first`. */
+const order = () =>
+  screen.getAllByRole('region').map((region) => region.getAttribute('aria-label')?.replace(/^\d+\. /, ''));
 
 it('moves by keyboard and keeps the focus on the control that moved', async () => {
   const user = userEvent.setup();
