@@ -12,6 +12,7 @@ import type { PointReadings } from '../../../shared/designPoint.ts';
 import { createdLinkSchema, linkListSchema, sharedSubjectSchema } from '../../../shared/link.ts';
 import { materialUsesSchema } from '../../../shared/materialEdit.ts';
 import { runListSchema } from '../../../shared/run.ts';
+import type { StackMedium } from '../../../shared/stack.ts';
 import { sensitivityAnswerSchema } from '../../../shared/toleranceDesign.ts';
 import { issuePaths, read, refusalOf } from '../../../tests/answers.ts';
 import { startApiServer } from '../../../tests/apiServer.ts';
@@ -285,7 +286,7 @@ describe('a tolerance', () => {
   });
 
   it('keeps the errors of a typed material however the database orders its keys', async () => {
-    const medium = { voigt: [0.03, 0.01], index: [2.25, 4.07] };
+    const medium: StackMedium = { voigt: [0.03, 0.01], index: [2.25, 4.07] };
     const document = buildDocument({ layers: [{ id: 'film', medium, thicknessNm: 5, m: [0, 0, 1] }] });
     const base = buildToleranceInput();
     const none = { ...base.tolerance, ratePercent: 0, randomPercent: 0 };
