@@ -17,6 +17,7 @@ import { projectRoot } from './projectRoot.ts';
 import { seedDemo } from './seeders/demo.ts';
 import { DEMO_LINK_TOKEN, DEMO_PASSWORD, readDemoData } from './seeders/demoData.ts';
 import { revokeDemoLink, seedDemoRun } from './seeders/demoRun.ts';
+import { seedDemoStudy } from './seeders/demoStudy.ts';
 import { seedLibrary } from './seeders/library.ts';
 import { createMaterialStore } from './services/materialStore.ts';
 
@@ -67,7 +68,9 @@ async function greetWithDemo(app: AppDependencies): Promise<string[]> {
   if (app.config.production) await revokeDemoLink(app.models);
   if (!app.config.demo) return [];
   const data = readDemoData();
-  await seedDemoRun(app, await seedDemo(app.models, data), data);
+  const demo = await seedDemo(app.models, data);
+  await seedDemoRun(app, demo, data);
+  await seedDemoStudy(app, demo, data);
   return [
     `Demo sign-ins, password ${DEMO_PASSWORD}:`,
     ...data.people.map(({ email, role }) => `  ${email} (${role})`),

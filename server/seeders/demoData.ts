@@ -2,8 +2,10 @@ import { readFileSync } from 'node:fs';
 import path from 'node:path';
 import { z } from 'zod';
 import { roles } from '../../shared/account.ts';
+import { capDesignSchema } from '../../shared/capDesign.ts';
+import { createGrowthCardSchema } from '../../shared/growthCard.ts';
 import { axisSchema } from '../../shared/run.ts';
-import { createStackSchema } from '../../shared/stack.ts';
+import { createStackSchema, stackLayerSchema } from '../../shared/stack.ts';
 import { projectRoot } from '../projectRoot.ts';
 
 const peopleSchema = z.strictObject({
@@ -16,6 +18,20 @@ const runSchema = z.strictObject({
   name: z.string(),
   axis: axisSchema,
   link: z.string(),
+});
+
+/** A study, with the input of its cap question without the document and of its card without what the question holds. */
+const studySchema = z.strictObject({
+  title: z.string(),
+  question: z.string(),
+  stack: z.string(),
+  design: capDesignSchema.omit({ kind: true, document: true }).extend({ name: z.string() }),
+  notes: z.tuple([z.string(), z.string()]),
+  captions: z.strictObject({ design: z.string(), run: z.string() }),
+  decision: z.string(),
+  card: createGrowthCardSchema
+    .pick({ title: true, rates: true, sampleId: true, bench: true, decision: true })
+    .extend({ layer: stackLayerSchema }),
 });
 
 /** Of every demo account; published, and therefore refused in production. */
@@ -33,6 +49,7 @@ export function readDemoData() {
     ...peopleSchema.parse(read('people.json')),
     stacks: z.array(createStackSchema).parse(read('stacks.json')),
     run: runSchema.parse(read('run.json')),
+    study: studySchema.parse(read('study.json')),
   };
 }
 

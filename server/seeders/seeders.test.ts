@@ -1,7 +1,11 @@
+import { execFileSync } from 'node:child_process';
 import path from 'node:path';
+import { setTimeout as sleep } from 'node:timers/promises';
 import { afterAll, beforeAll, describe, expect, test } from 'vitest';
 import type { LibraryEntry } from '../../shared/material.ts';
-import { librarySolveRequestSchema } from '../../shared/solve.ts';
+import { designResultSchema } from '../../shared/design.ts';
+import { readingOf } from '../../shared/readings.ts';
+import { librarySolveRequestSchema, solveResponseSchema } from '../../shared/solve.ts';
 import { toSolveCase } from '../../shared/stackCase.ts';
 import { loadLibrary } from '../../worker/dispersion/loadLibrary.ts';
 import type { ApiServer } from '../../tests/apiServer.ts';
@@ -16,7 +20,15 @@ import { solve } from '../services/solve.ts';
 import { seedDemo } from './demo.ts';
 import { DEMO_LINK_TOKEN, DEMO_PASSWORD, readDemoData } from './demoData.ts';
 import { revokeDemoLink, seedDemoRun } from './demoRun.ts';
+import { seedDemoStudy } from './demoStudy.ts';
 import { seedLibrary } from './library.ts';
+
+function solveOnCommandLine(input: string): string {
+  const tsx = path.join(projectRoot, 'node_modules', 'tsx', 'dist', 'cli.mjs');
+  return execFileSync(process.execPath, [tsx, 'worker/solve.ts', '-'], {
+    ...{ cwd: projectRoot, input, encoding: 'utf8', maxBuffer: 64_000_000 },
+  });
+}
 
 // The demo group exists once in a database: this one is ours alone.
 let scratch: ScratchDatabase;
@@ -97,6 +109,50 @@ describe('the demo', () => {
     await api.anonymous().get(`/api/v1/shared/${DEMO_LINK_TOKEN}`).expect(200);
   });
 
+  test('answers which cap in a study whose numbers the command line gives again', async () => {
+    const data = readDemoData();
+    const demo = await seedDemo(api.models, data);
+    await seedDemoStudy(api.dependencies, demo, data);
+    await seedDemoStudy(api.dependencies, demo, data);
+    const { group } = demo;
+    expect(await api.models.Study.count({ where: { groupId: group.id } })).toBe(1);
+    const [card] = await api.models.GrowthCard.findAll({ where: { groupId: group.id } });
+    expect(card).toMatchObject({ isDemo: true, title: data.study.card.title });
+    const design = await api.models.Run.findOne({
+      where: { groupId: group.id, kind: 'cap' },
+      rejectOnEmpty: true,
+    });
+    while (['queued', 'running'].includes(design.state)) {
+      await sleep(100);
+      await design.reload();
+    }
+    const lead = api.anonymous();
+    await lead.post('/api/v1/session').send({ email: 'lead@northgate.example', password: DEMO_PASSWORD });
+    const answer = await lead.get(`/api/v1/designs/${design.id}/result`).expect(200);
+    const result = designResultSchema.parse(answer.body);
+    if (result.kind !== 'cap') throw new Error(`the demo question is answered by ${result.kind}`);
+    expect(result.candidates).toHaveLength(4);
+    const best = result.candidates.find(({ id }) => id === result.ranking[0])!.best!;
+    const said = `${(1000 * best.points[0]!.signal).toFixed(1)} mdeg`;
+    expect(data.study.decision).toContain(`${best.thicknessNm} nm`);
+    expect(data.study.decision).toContain(said);
+    // The card's film is the chosen one: its nominal rotation is the same number.
+    const nominal = card!.content.readings[0]!.readings[0]!.nominal!;
+    expect(Math.abs(nominal)).toBeCloseTo(best.points[0]!.signal, 9);
+    const input = await lead.get(`/api/v1/designs/${design.id}/input.json`).expect(200);
+    const output = solveOnCommandLine(JSON.stringify(input.body));
+    const points = solveResponseSchema.parse(JSON.parse(output)).results.map((one) => one.points[0]!);
+    // Each film comes as given, with m = 0 and reversed.
+    const rotations = points.flatMap((given, at) =>
+      at % 3 === 0 ? [readingOf('rotationP', given, points[at + 1]!, points[at + 2]!)] : [],
+    );
+    const shown = result.candidates.flatMap((one) => one.points[0]!.rotationDeg);
+    expect(shown).toHaveLength(4 * data.study.design.range.points);
+    for (const value of shown) {
+      expect(Math.min(...rotations.map((one) => Math.abs(one! - value!)))).toBeLessThan(1e-9);
+    }
+  }, 120_000);
+
   test('is made once: what somebody deleted stays deleted', async () => {
     const data = readDemoData();
     const demo = await seedDemo(api.models, data);
@@ -106,7 +162,7 @@ describe('the demo', () => {
     await seedDemoRun(api.dependencies, again, data);
     expect(again.group.id).toBe(demo.group.id);
     expect(await api.models.Stack.count({ where: { groupId: demo.group.id } })).toBe(3);
-    expect(await api.models.Run.count({ where: { groupId: demo.group.id } })).toBe(1);
+    expect(await api.models.Run.count({ where: { groupId: demo.group.id, kind: 'sweep' } })).toBe(1);
     expect(await api.models.Group.count({ where: { isDemo: true } })).toBe(1);
   });
 
