@@ -25,7 +25,7 @@ export const needsDatabase = (stage) => stage === 'api' || stage === 'e2e';
 export const needsBrowser = (stage) => stage === 'e2e';
 
 /** Whether it reads growth cards. @param {Stage} stage */
-export const readsPdf = needsDatabase;
+export const readsPdf = (stage) => needsDatabase(stage);
 
 /** @param {string} program @param {string[]} args @param {NodeJS.ProcessEnv} env */
 async function succeeds(program, args, env) {
