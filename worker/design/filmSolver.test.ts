@@ -124,7 +124,7 @@ describe('a film solved over and over', () => {
     film.layers[1] = {
       ...film.layers[1]!,
       dead: { topNm: 0.3, bottomNm: 0.2 },
-    } as StackDocument['layers'][0];
+    };
     const solver = new FilmSolver(film, new Map(), plain);
     const at = (nm: number) => solver.readings({ thicknessNm: new Map([['co', nm]]), constants: null });
     expect(at(-1)).toEqual(at(0.5));

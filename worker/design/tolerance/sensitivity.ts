@@ -16,7 +16,6 @@ const STEP_NM = 1e-3;
 /** Relative step of a constant. */
 const STEP_FACTOR = 1e-4;
 
-const names = ['rotationDeg', 'ellipticityDeg', 'amplitude', 'contrast', 'reflectance'] as const;
 type Derivative = Sensitivity['derivative'];
 
 /**
@@ -138,7 +137,7 @@ function forward(at: (step: number) => PointReadings, h: number): Derivative {
 }
 
 function combine(values: PointReadings[], weights: number[], divisor: number): Derivative {
-  const entry = (name: (typeof names)[number]) => {
+  const entry = (name: keyof Derivative) => {
     let sum = 0;
     for (const [i, readings] of values.entries()) {
       const value = readings[name];

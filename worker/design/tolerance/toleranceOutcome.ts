@@ -5,7 +5,7 @@ import type { DemandName } from '../demands.ts';
 import { failedDemands } from '../demands.ts';
 import { ONE_SIGMA, TWO_SIGMA, quantileOf } from '../quantiles.ts';
 import { sensitivities } from './sensitivity.ts';
-import { ToleranceSamples } from './toleranceSamples.ts';
+import type { ToleranceSamples } from './toleranceSamples.ts';
 
 const BINS = 41;
 
