@@ -1,9 +1,24 @@
-import { parse } from 'mathjs/number';
+import { createRequire } from 'node:module';
+import type * as mathjs from 'mathjs/number';
 import type { ConstantNode, FunctionNode, MathNode, OperatorNode, ParenthesisNode, SymbolNode } from 'mathjs';
 import { FORMULA_LENGTH } from '../../shared/dispersion.ts';
 import type { FormulaAlgebra } from './formulaAlgebra.ts';
 import { formulaFunctions, formulaOperators } from './formulaAlgebra.ts';
 import { DispersionValueError } from './opticalValue.ts';
+
+type Parse = (typeof mathjs)['parse'];
+
+let mathjsParse: Parse | null = null;
+
+/**
+ * mathjs takes a second of a core to load, more than all the rest of a thread's code, and most threads never see a
+ * formula: it is loaded with the first one.
+ */
+function loadParse(): Parse {
+  if (mathjsParse) return mathjsParse;
+  const loaded = createRequire(import.meta.url)('mathjs/number') as typeof mathjs;
+  return (mathjsParse = loaded.parse);
+}
 
 /** A dispersion formula that cannot be used: not arithmetic, or without a real index at some wavelength. */
 export class FormulaError extends DispersionValueError {
@@ -91,7 +106,7 @@ function parseFormula(expression: string, names: string): MathNode {
   const other = otherCharacter.exec(expression);
   if (other) throw refusal(`the character ${other[0]}`, names);
   try {
-    return parse(expression);
+    return loadParse()(expression);
   } catch (error) {
     if (error instanceof RangeError) throw new FormulaError('has too many parentheses inside one another');
     throw new FormulaError(
