@@ -4,6 +4,7 @@ import { stackDocumentSchema } from '../../shared/stack.ts';
 import type { StackDocument } from '../../shared/stack.ts';
 import { createStudySchema } from '../../shared/study.ts';
 import type { AppDependencies } from '../dependencies.ts';
+import type { Models } from '../models/models.ts';
 import type { Run } from '../models/run.ts';
 import type { Study } from '../models/study.ts';
 import { createDesign } from '../services/designs.ts';
@@ -19,10 +20,7 @@ import { withSeedLock } from './seedLock.ts';
  */
 export async function seedDemoStudy(app: AppDependencies, demo: Demo, data: DemoData): Promise<void> {
   await withSeedLock(app.models.sequelize, async () => {
-    const made = await app.models.Activity.count({
-      where: { groupId: demo.group.id, action: 'study.create', actorId: demo.lead.id },
-    });
-    if (made > 0) return;
+    if (await wasMade(app.models, demo, data.study.title)) return;
     const document = stackDocumentSchema.parse(
       data.stacks.find(({ name }) => name === data.study.stack)?.document,
     );
@@ -30,6 +28,14 @@ export async function seedDemoStudy(app: AppDependencies, demo: Demo, data: Demo
     const study = await createDemoStudy(app, demo, data, design);
     await createDemoCard(app, demo, data, { document, study });
   });
+}
+
+/** Tells the seeded study from one that somebody made by hand, whatever its title; the trail remembers a deleted one. */
+async function wasMade({ Study, Activity }: Models, { group }: Demo, title: string): Promise<boolean> {
+  const there = await Study.count({ where: { groupId: group.id, isDemo: true } });
+  if (there > 0) return true;
+  const lines = await Activity.findAll({ where: { groupId: group.id, action: 'study.create' } });
+  return lines.some(({ detail }) => detail['isDemo'] === true && detail['title'] === title);
 }
 
 async function createDemoDesign(

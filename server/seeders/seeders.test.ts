@@ -17,6 +17,7 @@ import { migrate } from '../migrations/migrate.ts';
 import { projectRoot } from '../projectRoot.ts';
 import { hashSecret } from '../services/secrets.ts';
 import { solve } from '../services/solve.ts';
+import { createStudy, deleteStudy } from '../services/studies.ts';
 import { seedDemo } from './demo.ts';
 import { DEMO_LINK_TOKEN, DEMO_PASSWORD, readDemoData } from './demoData.ts';
 import { revokeDemoLink, seedDemoRun } from './demoRun.ts';
@@ -112,10 +113,14 @@ describe('the demo', () => {
   test('answers which cap in a study whose numbers the command line gives again', async () => {
     const data = readDemoData();
     const demo = await seedDemo(api.models, data);
-    await seedDemoStudy(api.dependencies, demo, data);
-    await seedDemoStudy(api.dependencies, demo, data);
     const { group } = demo;
-    expect(await api.models.Study.count({ where: { groupId: group.id } })).toBe(1);
+    // One of the same name that the lead made by hand is another.
+    const actor = { userId: demo.lead.id, name: demo.lead.name };
+    const byHand = { title: data.study.title, document: { question: 'Mine?', items: [], decision: '' } };
+    await createStudy(api.models, actor, group.id, byHand);
+    await seedDemoStudy(api.dependencies, demo, data);
+    await seedDemoStudy(api.dependencies, demo, data);
+    expect(await api.models.Study.count({ where: { groupId: group.id, isDemo: true } })).toBe(1);
     const [card] = await api.models.GrowthCard.findAll({ where: { groupId: group.id } });
     expect(card).toMatchObject({ isDemo: true, title: data.study.card.title });
     const design = await api.models.Run.findOne({
@@ -158,8 +163,12 @@ describe('the demo', () => {
     const demo = await seedDemo(api.models, data);
     const [stack] = await api.models.Stack.findAll({ where: { groupId: demo.group.id } });
     await stack!.destroy();
+    const study = await api.models.Study.findOne({ where: { isDemo: true }, rejectOnEmpty: true });
+    await deleteStudy(api.models, { userId: demo.lead.id, name: demo.lead.name }, study);
     const again = await seedDemo(api.models, data);
     await seedDemoRun(api.dependencies, again, data);
+    await seedDemoStudy(api.dependencies, again, data);
+    expect(await api.models.Study.count({ where: { isDemo: true } })).toBe(0);
     expect(again.group.id).toBe(demo.group.id);
     expect(await api.models.Stack.count({ where: { groupId: demo.group.id } })).toBe(3);
     expect(await api.models.Run.count({ where: { groupId: demo.group.id, kind: 'sweep' } })).toBe(1);

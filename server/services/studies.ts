@@ -89,7 +89,10 @@ export async function createStudy(
     );
     await recordActivity(
       models,
-      { action: 'study.create', groupId, actor, subjectId: study.id, detail: { title } },
+      {
+        ...{ action: 'study.create', groupId, actor, subjectId: study.id },
+        detail: { title, ...(isDemo && { isDemo }) },
+      },
       transaction,
     );
     return study.id;
