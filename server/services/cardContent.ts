@@ -10,9 +10,9 @@ import { ComputeError } from '../../worker/sweep/computeError.ts';
 import type { Dependencies } from '../dependencies.ts';
 import { Refusal, invalid } from '../errors.ts';
 import type { GrowthCardContent } from '../models/growthCard.ts';
+import { cardAssumptions } from './cardAssumptions.ts';
 import { cardCautions } from './cardCautions.ts';
 import { cardLayers } from './cardLayers.ts';
-import { layerRemarks } from './cardRemarks.ts';
 import { cardSources } from './cardSources.ts';
 import { takeDesignSnapshot } from './designSnapshot.ts';
 import { loadRunMaterials } from './runMaterials.ts';
@@ -57,7 +57,7 @@ export async function takeCardContent(
       ...{ document, tolerance, bench },
       layers: cardLayers(document, snapshot.materials, tolerance, rates),
       readings: points.map((point) => cardReading(point, wanted, result)),
-      assumptions: [...snapshot.assumptions, ...layerRemarks(document, snapshot.materials)],
+      assumptions: cardAssumptions({ ...question, document }, snapshot.materials),
       sources: cardSources(document, snapshot.materials),
       cautions: cardCautions(formulasOf(document, snapshot.materials), bench),
     },

@@ -4,6 +4,7 @@ import type { DesignPoint, Tolerance } from '../../shared/designPoint.ts';
 import { materialKeyOf } from '../../shared/designPoint.ts';
 import type { Goal, OptimiseDesign } from '../../shared/optimiseDesign.ts';
 import type { ReadingName, UsedMaterial } from '../../shared/run.ts';
+import type { StackDocument } from '../../shared/stack.ts';
 import type { ToleranceDesign } from '../../shared/toleranceDesign.ts';
 import { MOST_SINGLE_LAYERS, expandBlocks } from '../../worker/design/expandBlocks.ts';
 import { mediaWithErrors } from './designMedia.ts';
@@ -15,7 +16,7 @@ import {
   mediumName,
   signalWords,
 } from './designNames.ts';
-import { filmAssumptions, magnetizationInWords } from './runAssumptions.ts';
+import { FOR_PLANNING, filmAssumptions, magnetizationInWords } from './runAssumptions.ts';
 
 /** Sentences that say what the answer to a design question rests on, so that it can be read alone years later. */
 export function designAssumptions(design: DesignInput, materials: UsedMaterial[]): string[] {
@@ -25,6 +26,7 @@ export function designAssumptions(design: DesignInput, materials: UsedMaterial[]
     ...questionOf(design, materials),
     ...points.map(pointInWords),
     ...filmAssumptions(document, readingsOf(design), materials, wavelengths.size > 1),
+    FOR_PLANNING,
   ];
 }
 
@@ -109,19 +111,22 @@ function errorsInWords(design: CapDesign | ToleranceDesign, materials: UsedMater
     ...(indexPercent > 0 ? [`n and k ${indexPercent} % each`] : []),
     ...(voigtPercent > 0 ? [`Q ${voigtPercent} %`] : []),
   ];
-  const { isExpanded } = expandBlocks(design.document);
   return [
     `Errors are normal and every stated value is one standard deviation: rate error ${ratePercent} %, one for each material and shared by all its layers; random error ${randomPercent} %, one for each layer. A layer is its nominal thickness times 1 + both; below 0 it counts as absent.`,
     constants.length === 0
       ? 'Constants are taken to be right.'
       : `Constants of each material are off by a factor: ${constants.join(', ')}.`,
     ...otherErrors(design, design.tolerance, materials),
-    ...(isExpanded
-      ? []
-      : [
-          `The film has more than ${MOST_SINGLE_LAYERS} layers: all repetitions of a block share their errors.`,
-        ]),
+    ...sharedErrors(design.document),
     `Bands and shares come from ${samples} films drawn with seed ${seed}; a band holds 68.27 % of them.`,
+  ];
+}
+
+/** Said of a film with too many layers for an error of each. */
+export function sharedErrors(document: StackDocument): string[] {
+  if (expandBlocks(document).isExpanded) return [];
+  return [
+    `The film has more than ${MOST_SINGLE_LAYERS} layers: all repetitions of a block share their errors.`,
   ];
 }
 

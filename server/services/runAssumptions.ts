@@ -11,6 +11,9 @@ import { describeAxis } from './runNames.ts';
 import { axesOf } from '../../shared/runAxes.ts';
 import { inputAzimuthOf } from '../../shared/stack.ts';
 
+export const FOR_PLANNING =
+  'Constants of thin films differ from tabulated ones: use the numbers for planning.';
+
 /** Sentences that say what the numbers of a run rest on, so that they can be read alone years later. */
 export function runAssumptions(
   document: StackDocument,
@@ -23,6 +26,7 @@ export function runAssumptions(
     magnetizationInWords(document.workingPoint.magnetization),
     ...axisMeanings(axes),
     ...filmAssumptions(document, readings, materials, sweeps(axes, 'wavelength')),
+    FOR_PLANNING,
   ];
 }
 
@@ -43,7 +47,6 @@ export function filmAssumptions(
     ...geometry(document),
     ...constants(document, atManyWavelengths, materials),
     ...thermalLaws(document.layers),
-    'Constants of thin films differ from tabulated ones: use the numbers for planning.',
   ];
 }
 

@@ -13,7 +13,7 @@ import {
 } from '../../../shared/growthCard.ts';
 import type { CreateGrowthCard, GrowthCard } from '../../../shared/growthCard.ts';
 import { studySchema } from '../../../shared/study.ts';
-import { issuePaths, read } from '../../../tests/answers.ts';
+import { issuePaths, read, refusalOf } from '../../../tests/answers.ts';
 import type { ApiServer, Browser } from '../../../tests/apiServer.ts';
 import { startApiServer } from '../../../tests/apiServer.ts';
 import { buildDocument, buildMaterial, buildPeople, buildRun } from '../../../tests/factories.ts';
@@ -120,6 +120,8 @@ describe('a growth card', () => {
     }
     expect(card.decision).toMatchObject({ by: people.editor.name });
     expect(card.cautions.join(' ')).toMatch(/for planning.*Cobalt: .*IEC 60825-1/);
+    expect(card.assumptions.join(' ')).toContain('Layer Co: m = (0, 0, 1).');
+    expect(card.assumptions.join(' ')).not.toMatch(/No demand|Derivatives|transverse contrast|Working point/);
     expect(card.sources.join(' ')).toContain('Co: typed in, without a source (index [2.25,4.07]');
     expect(read(growthCardSchema, await browser.get(`/api/v1/cards/${card.id}`).expect(200))).toEqual(card);
     const { cards } = read(growthCardListSchema, await browser.get(groupUrl()).expect(200));
@@ -147,6 +149,41 @@ describe('a growth card', () => {
     expect(JSON.stringify(stored)).not.toContain(token);
     await browser.delete(`/api/v1/cards/${card.id}`).expect(204);
     await api.anonymous().get(`${shared}/card`).expect(410);
+  });
+
+  test.each(['revoked', 'expired'])('and its PDF answer 410 once the link is %s', async (how) => {
+    const card = await make(wanted());
+    const shared = `/api/v1/shared/${card.url!.split('/').at(-1)!}`;
+    const link = await api.models.ShareLink.findOne({ where: { cardId: card.id }, rejectOnEmpty: true });
+    if (how === 'revoked') await browser.delete(`/api/v1/links/${link.id}`).expect(204);
+    else await link.update({ expiresAt: new Date(Date.now() - 1_000) });
+    for (const part of ['/card', '/card.pdf', '/subject']) {
+      const answer = await api.anonymous().get(shared + part);
+      expect([part, answer.status, refusalOf(answer).code]).toEqual([part, 410, 'gone']);
+      expect(answer.text).not.toContain(card.title);
+    }
+    // The group keeps its card.
+    await browser.get(`/api/v1/cards/${card.id}`).expect(200);
+  });
+
+  test('shows no more than itself: not the group, nor where it came from, nor by other routes', async () => {
+    const card = await make(wanted());
+    const shared = `/api/v1/shared/${card.url!.split('/').at(-1)!}`;
+    const { text } = await api.anonymous().get(`${shared}/card`).expect(200);
+    const { group, editor, owner } = people;
+    for (const secret of [group.id, group.name, editor.id, editor.email, owner.name, 'studyId', 'designId']) {
+      expect(text).not.toContain(secret);
+    }
+    for (const part of ['', '/study', '/design', '/data', '/result', '/input.json']) {
+      await api
+        .anonymous()
+        .get(shared + part)
+        .expect(404);
+    }
+    await api
+      .anonymous()
+      .get(`/api/v1/shared/${'x'.repeat(43)}/card.pdf`)
+      .expect(404);
   });
 
   test('of a study carries a link that opens the study', async () => {
