@@ -23,6 +23,9 @@ const layerColumns: Column[] = [
   { title: 'As grown, nm', share: 0.11, byHand: true },
 ];
 
+/** The substrate is not deposited: nothing to write of it but which piece it was. */
+const substrateColumns = layerColumns.map((column) => ({ ...column, byHand: column.title === 'Sample' }));
+
 const readingColumns: Column[] = [
   { title: 'Reading', share: 0.4 },
   { title: 'Nominal', share: 0.13, align: 'right' },
@@ -55,7 +58,8 @@ export function cardBlocks(card: SharedGrowthCard): Block[] {
 function layerRows(layer: CardLayer, before: CardLayer | null): Block[] {
   const cells = cardLayerCells(layer);
   const { step, material, role, thickness, deviation, rate, time } = cells;
-  const row = tableRow(layerColumns, [step, material, role, thickness, deviation, rate, time, '', ''], {
+  const columns = step === '' ? substrateColumns : layerColumns;
+  const row = tableRow(columns, [step, material, role, thickness, deviation, rate, time, '', ''], {
     isRepeated: layer.block !== null,
   });
   const isNewBlock = layer.block !== null && layer.block !== before?.block;

@@ -61,6 +61,6 @@ export class CardHead {
 
   #addressLines(pen: Pen, width: number): string[] {
     const { url } = this.#card;
-    return url === null ? [] : pen.wrap(`Open this card: ${url}`, ADDRESS_SIZE, this.#textWidth(width));
+    return url === null ? [] : pen.wrap(`The code opens ${url}`, ADDRESS_SIZE, this.#textWidth(width));
   }
 }

@@ -65,7 +65,7 @@ export class Pen {
   readonly doc: PDFKit.PDFDocument;
   /** Of all sizes and distances; below 1 where much has to go on the page. */
   readonly scale: number;
-  /** Of texts at the size MEASURED_AT: every size is a multiple, and words come again at each try. */
+  /** Of words at the size MEASURED_AT: every size is a multiple. */
   readonly #widths: Map<string, number>;
 
   constructor(doc: PDFKit.PDFDocument, scale: number, widths = new Map<string, number>()) {
@@ -80,16 +80,29 @@ export class Pen {
     return size * 1.28 * this.scale;
   }
 
+  /**
+   * Word by word, since words come again: whole lines at every break took most of a second. Kerning next to a space, which is
+   * left out, only makes a line shorter.
+   */
   widthOf(text: string, size: number): number {
-    let known = this.#widths.get(text);
+    const [first = '', ...more] = text.split(' ');
+    const width = more.reduce(
+      (sum, word) => sum + this.#widthOfWord(' ') + this.#widthOfWord(word),
+      this.#widthOfWord(first),
+    );
+    return (width * size * this.scale) / MEASURED_AT;
+  }
+
+  #widthOfWord(word: string): number {
+    let known = this.#widths.get(word);
     if (known === undefined) {
-      known = runsOf(text).reduce((sum, run) => {
+      known = runsOf(word).reduce((sum, run) => {
         this.doc.font(run.script).fontSize(MEASURED_AT);
         return sum + this.doc.widthOfString(run.text, { features: FEATURES });
       }, 0);
-      this.#widths.set(text, known);
+      this.#widths.set(word, known);
     }
-    return (known * size * this.scale) / MEASURED_AT;
+    return known;
   }
 
   /** Text broken into lines of at most this width, between words, or inside one that is longer than a line. */
@@ -113,6 +126,7 @@ export class Pen {
   }
 
   #broken(word: string, size: number, width: number): string[] {
+    if (this.widthOf(word, size) <= width) return [word];
     const pieces = [''];
     for (const character of word) {
       const longer = pieces.at(-1)! + character;
@@ -129,7 +143,7 @@ export class Pen {
     for (const run of runsOf(text)) {
       this.doc.font(run.script).fontSize(size * this.scale);
       this.doc.text(run.text, x, y, { lineBreak: false, features: FEATURES });
-      x += this.doc.widthOfString(run.text, { features: FEATURES });
+      x += this.widthOf(run.text, size);
     }
   }
 
