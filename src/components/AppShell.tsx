@@ -45,7 +45,7 @@ export function AppShell({ home, links, right, banner, children }: AppShellProps
         {links.length > 0 ? (
           <nav
             aria-label="Main"
-            className="flex gap-5 max-md:gap-3.5 max-md:overflow-x-auto max-md:order-last max-md:h-10 max-md:w-full max-md:items-start"
+            className="flex gap-5 max-md:gap-[min(14px,2.6vw)] max-md:text-[min(14px,3.5vw)] max-md:overflow-x-auto max-md:order-last max-md:h-10 max-md:w-full max-md:items-start"
           >
             {links.map((link) => (
               <NavLink

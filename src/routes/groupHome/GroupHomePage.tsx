@@ -43,7 +43,6 @@ function GroupHome({ group }: { group: Membership }) {
       subtitle={<GroupLine group={group} />}
       actions={
         <>
-          <ButtonLink to={generatePath(paths.designs, { groupId })}>Designs</ButtonLink>
           <ButtonLink
             to={generatePath(paths.people, { groupId })}
             icon={<Users aria-hidden="true" className="size-4" />}

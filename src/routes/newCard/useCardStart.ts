@@ -1,13 +1,16 @@
 import { useQuery } from '@tanstack/react-query';
 import { useMemo } from 'react';
 import type { Design, DesignResult } from '../../../shared/design.ts';
+import { LIMITS } from '../../../shared/limits.ts';
 import type { Stack } from '../../../shared/stack.ts';
 import { usualTolerance } from '../../features/cards/model/cardDraft.ts';
 import type { CardStart } from '../../features/cards/model/cardDraft.ts';
 import { designedFilm } from '../../features/cards/model/designedFilm.ts';
 import { designQuery } from '../../features/designs/api/design.ts';
 import { designResultQuery } from '../../features/designs/api/designResult.ts';
+import { pointWords } from '../../features/designs/model/pointWords.ts';
 import { stackQuery } from '../../features/stacks/api/stack.ts';
+import { formatNumber } from '../../lib/format.ts';
 
 /** What the address says a card begins with: a stack as it is, or the film that a design ended with. */
 export function useCardStart(search: URLSearchParams) {
@@ -34,20 +37,34 @@ function fromStack({ name, document }: Stack): CardStart {
   return {
     title: name,
     document,
-    points: [{ id: 'point-1', label: 'Working point', workingPoint: document.workingPoint }],
+    points: [
+      { id: 'point-1', label: pointWords(document.workingPoint), workingPoint: document.workingPoint },
+    ],
     signal: 'rotation',
     tolerance: usualTolerance,
   };
 }
 
 function fromDesign(design: Design, result: DesignResult, candidate: string | null): CardStart {
-  const { id, name, input } = design;
+  const { id, input } = design;
   return {
-    title: name,
+    title: filmTitle(design, result, candidate),
     document: designedFilm(design, result, candidate),
     points: input.points,
     signal: 'signal' in input ? input.signal : 'rotation',
     tolerance: 'tolerance' in input ? input.tolerance : usualTolerance,
     designId: id,
   };
+}
+
+/** A card is of a film: it bears the name of its stack and what the design made of it, not the whole question. */
+function filmTitle({ name, stackName }: Design, result: DesignResult, candidate: string | null): string {
+  if (stackName === null) return name;
+  if (result.kind === 'optimise') return `${stackName}, optimised`.slice(0, LIMITS.nameLength);
+  if (result.kind !== 'cap') return stackName;
+  const wanted = candidate ?? result.ranking[0];
+  const cap = result.candidates.find(({ id }) => id === wanted);
+  if (!cap?.best) return stackName;
+  const cover = `${cap.label} ${formatNumber(cap.best.thicknessNm, { digits: 3 })} nm`;
+  return `${stackName}, cap ${cover}`.slice(0, LIMITS.nameLength);
 }

@@ -20,13 +20,18 @@ export function itemNames(runs: readonly Named[], designs: readonly Named[]) {
   return (item: StudyItem): string => {
     switch (item.kind) {
       case 'note':
-        return `note “${item.text.trim().split('\n')[0]?.slice(0, 40) || 'empty'}”`;
+        return `note “${firstWords(item.text) || 'empty'}”`;
       case 'run':
         return named(runs, item.runId) ?? 'run';
       case 'design':
         return named(designs, item.designId) ?? 'design';
     }
   };
+}
+
+/** The first line of a Markdown note without the marks of a heading or a list. */
+function firstWords(text: string): string {
+  return (text.trim().split('\n')[0] ?? '').replace(/^(#+|[-*])\s+/, '').slice(0, 40);
 }
 
 function isDone({ progress }: { progress: { state: string } }): boolean {

@@ -6,7 +6,13 @@ const numbers = 'py-1 pl-3 text-right whitespace-nowrap';
 /** The film in the order of growth, with room to write what became of it. */
 export function CardLayerTable({ layers }: { layers: readonly CardLayer[] }) {
   return (
-    <div className="overflow-x-auto">
+    // The words for screen readers are placed in it, so that they do not widen the page on a phone.
+    <div
+      className="relative overflow-x-auto"
+      tabIndex={0}
+      role="region"
+      aria-label="Film in the order of growth"
+    >
       <table className="w-full min-w-[560px] text-left text-note">
         <caption className="sr-only">Layers in the order of growth, the substrate first</caption>
         <thead className="border-b border-edge text-small text-muted">
@@ -48,9 +54,15 @@ export function CardLayerTable({ layers }: { layers: readonly CardLayer[] }) {
                 </th>
                 <td className={`${numbers} font-semibold`}>{cells.thickness}</td>
                 <td className={numbers}>{cells.deviation}</td>
-                <Fill text={cells.rate} />
-                <Fill text={cells.time} />
-                <Fill text="" />
+                {layer.step === null ? (
+                  <td colSpan={3} />
+                ) : (
+                  <>
+                    <Fill text={cells.rate} />
+                    <Fill text={cells.time} />
+                    <Fill text="" />
+                  </>
+                )}
               </tr>,
             ];
           })}

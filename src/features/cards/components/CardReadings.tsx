@@ -28,7 +28,7 @@ export function CardReadings({ readings }: { readings: readonly CardReading[] })
                   <td className="py-0.5 pl-3 text-right font-semibold whitespace-nowrap">
                     {cells.nominal} {cells.unit}
                   </td>
-                  <td className="py-0.5 pl-3 text-right whitespace-nowrap">{cells.band}</td>
+                  <td className="py-0.5 pl-3 text-right sm:whitespace-nowrap">{cells.band}</td>
                 </tr>
               );
             })}

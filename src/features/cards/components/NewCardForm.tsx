@@ -88,7 +88,7 @@ export function NewCardForm({ groupId, start, nameOf, onMade }: Props) {
       <Field label="Decision" error={formState.errors.decision?.message} hint="What was decided, and why">
         {(control) => <textarea {...control} rows={3} {...register('decision')} className={controlLook} />}
       </Field>
-      <LinkFields form={form} />
+      <LinkFields form={form} start={start} />
       <FormError message={formState.errors.root?.['server']?.message} />
       <Button type="submit" tone="primary" busy={create.isPending} className="self-start">
         {create.isPending ? 'Drawing the films' : 'Make the card'}
@@ -97,15 +97,21 @@ export function NewCardForm({ groupId, start, nameOf, onMade }: Props) {
   );
 }
 
-function LinkFields({ form }: { form: UseFormReturn<CardForm> }) {
+/** The link opens where the card comes from; only a card that stands alone is opened itself. */
+function LinkFields({ form, start }: { form: UseFormReturn<CardForm>; start: CardStart }) {
   const { register, control, formState } = form;
   const hasLink = useWatch({ control, name: 'hasLink' });
+  const opened = start.studyId
+    ? 'the study it comes from'
+    : start.designId
+      ? 'the design it comes from'
+      : 'the card';
   return (
     <fieldset className="flex flex-wrap items-start gap-x-6 gap-y-2">
       <legend className="mb-1 text-lead font-semibold">Link</legend>
       <label className="flex items-center gap-2 pt-1">
         <input type="checkbox" {...register('hasLink')} className="size-4 accent-(--accent)" />
-        Print a QR code that opens the card without signing in
+        Print a QR code that opens {opened} without signing in
       </label>
       {hasLink && (
         <Field label="Opens until" error={formState.errors.lastDay?.message} hint="Empty: no end">

@@ -18,7 +18,7 @@ type Props = {
 
 type CapLayer = CapCandidate['layers'][number];
 
-/** One candidate: its name, and of each layer how thick it must be to protect and who says so. */
+/** One candidate: its name, and of each layer how thick it must be to protect and by which source. */
 export function CandidateFields({ candidate, path, materials, onChange, onRemove }: Props) {
   const { label, layers } = candidate;
   const changeLayer = (position: number, part: Partial<CapLayer>) =>
@@ -67,7 +67,7 @@ export function CandidateFields({ candidate, path, materials, onChange, onRemove
               onChange={(leastNm) => changeLayer(position, { leastNm })}
             />
             <TextField
-              label="Who says so"
+              label="Source"
               path={`${at}.leastSource`}
               value={layer.leastSource}
               className="min-w-52 flex-1"

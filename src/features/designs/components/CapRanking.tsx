@@ -39,7 +39,7 @@ export function CapRanking({ input, result, pointId, actions }: Props) {
       <h2 id="ranking-heading" className="mb-2 text-lead">
         Candidates in order
       </h2>
-      <div className="card">
+      <div className="card @container">
         <DataTable
           caption="Candidates from the best to the worst"
           columns={columns}
@@ -48,6 +48,15 @@ export function CapRanking({ input, result, pointId, actions }: Props) {
           empty={null}
           initialSort={{ id: 'rank', descending: false }}
         />
+        {/* Where the table has no room for sentences, as in a study, they stand under it. */}
+        <ul className="hidden border-t border-line px-3 py-2 text-note md:@max-4xl:block">
+          {rows.map(({ outcome }) => (
+            <li key={outcome.id} className="py-0.5">
+              <b className="font-semibold">{outcome.label}</b>{' '}
+              <span className="text-muted">{outcome.best?.reason ?? outcome.obstacle}</span>
+            </li>
+          ))}
+        </ul>
       </div>
     </section>
   );
@@ -65,7 +74,9 @@ function columnsOf(input: CapDesign, actions: Props['actions']): Column<Row>[] {
       cell: ({ outcome }) => (
         <div className="max-w-96">
           {outcome.label}
-          <div className="text-note font-normal text-muted">{outcome.best?.reason ?? outcome.obstacle}</div>
+          <div className="text-note font-normal text-muted md:@max-4xl:hidden">
+            {outcome.best?.reason ?? outcome.obstacle}
+          </div>
           {outcome.best && actions ? <div className="mt-1.5 font-normal">{actions(outcome.id)}</div> : null}
         </div>
       ),

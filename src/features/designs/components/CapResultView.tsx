@@ -27,6 +27,11 @@ export function CapResultView({ input, result, view, onView, actions }: Props) {
                 {best.label}, {formatNumber(best.best.thicknessNm, { digits: 3 })} nm
               </p>
               <p className="mt-1">{best.best.reason}</p>
+              {best.best.thicknessNm >= input.range.toNm && (
+                <p className="mt-1 text-note text-warn">
+                  <span aria-hidden="true">▲ </span>At the end of the range: a wider range may give more.
+                </p>
+              )}
             </div>
             {actions?.(best.id)}
           </div>

@@ -13,7 +13,7 @@ export function Distribution({ reading, nominal, distribution }: Props) {
   const look = readingQuantities[reading];
   return (
     <figure className="card m-0 min-w-0 px-4 py-3" aria-label={`Spread of the ${look.label}`}>
-      <figcaption className="font-semibold">{look.label}</figcaption>
+      <figcaption className="font-semibold first-letter:uppercase">{look.label}</figcaption>
       {distribution === null ? (
         <p className="mt-1 text-note text-muted">It does not exist for any of the films.</p>
       ) : (

@@ -27,7 +27,7 @@ export function PointReadingsTable({ points, found }: Props) {
           <tbody>
             {pointReadingNames.map((name) => (
               <tr key={name} className="border-b border-line last:border-b-0">
-                <th scope="row" className="px-3 py-1.5 text-left font-medium">
+                <th scope="row" className="px-3 py-1.5 text-left font-medium first-letter:uppercase">
                   {readingQuantities[name].label}
                 </th>
                 {found.map(({ pointId, readings }) => (

@@ -5,7 +5,15 @@ import type { PlotTone } from '../../../components/plot/plotTypes.ts';
 import { formatNumber } from '../../../lib/format.ts';
 
 /** How a quantity of a design is called, scaled and printed. `scale` takes a value of the API to the unit on screen. */
-export type Quantity = { label: string; unit: string; scale: number; tone: PlotTone; signed?: boolean };
+export type Quantity = {
+  label: string;
+  unit: string;
+  scale: number;
+  tone: PlotTone;
+  signed?: boolean;
+  /** Stands over the axis of what has no unit. */
+  symbol?: string;
+};
 
 const rotation = {
   label: 'Kerr rotation',
@@ -21,9 +29,22 @@ const ellipticity = {
   tone: 'ellipticity',
   signed: true,
 } as const;
-const amplitude = { label: 'cross-polarized amplitude', unit: '', scale: 1, tone: 'ink' } as const;
-const contrast = { label: 'transverse contrast', unit: '', scale: 1, tone: 'ink', signed: true } as const;
-const reflectance = { label: 'reflectance', unit: '', scale: 1, tone: 'reflectance' } as const;
+const amplitude = {
+  label: 'cross-polarized amplitude',
+  unit: '',
+  scale: 1,
+  tone: 'ink',
+  symbol: '|r|',
+} as const;
+const contrast = {
+  label: 'transverse contrast',
+  unit: '',
+  scale: 1,
+  tone: 'ink',
+  signed: true,
+  symbol: 'C',
+} as const;
+const reflectance = { label: 'reflectance', unit: '', scale: 1, tone: 'reflectance', symbol: 'R' } as const;
 const ceilingShare = { label: 'share of the ceiling', unit: '%', scale: 100, tone: 'ink' } as const;
 
 export const readingQuantities: Record<PointReadingName, Quantity> = {
@@ -113,8 +134,8 @@ export function bareValue(bare: CapResult['bare'][number] | undefined, name: Cap
 }
 
 /** Over a y axis, where the quantity is named by the heading or its control. */
-export function unitLabel({ unit }: Quantity): string {
-  return unit || 'value';
+export function unitLabel({ unit, symbol }: Quantity): string {
+  return unit || (symbol ?? '1');
 }
 
 export function axisLabel({ label, unit }: Quantity): string {

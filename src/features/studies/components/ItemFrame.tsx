@@ -27,7 +27,7 @@ export function ItemFrame({ name, number, count, edit, children }: Props) {
             <GripVertical className={icon} />
           </span>
           <span className="min-w-0 flex-1 truncate text-note text-muted">
-            {number}. {name}
+            {number} of {count}
           </span>
           <IconButton
             label={`Move ${name} up`}

@@ -2,7 +2,9 @@ import { useEffect, useState } from 'react';
 import type { PointerEvent as ReactPointerEvent } from 'react';
 
 /** Pixels from the edge of the screen within which a drag scrolls the page. */
-const EDGE = 60;
+const EDGE = 80;
+/** Pixels that the page scrolls in one frame at the very edge; items with plots are taller than the screen. */
+const FASTEST = 40;
 
 type Dragging = { id: string; before: number | null };
 
@@ -19,12 +21,18 @@ export function useItemDrag(onDrop: (id: string, before: number) => void) {
   useEffect(() => {
     if (id === undefined) return;
     let before: number | null = null;
-    const onMove = (event: PointerEvent) => {
-      if (event.clientY < EDGE) window.scrollBy(0, -12);
-      if (event.clientY > window.innerHeight - EDGE) window.scrollBy(0, 12);
-      before = rowBelow(list, event.clientY);
+    let frame = 0;
+    const follow = (y: number) => {
+      cancelAnimationFrame(frame);
+      const scroll = scrollAt(y, window.innerHeight);
+      // Instantly: a page that is still on its way cannot be asked where its rows are.
+      window.scrollBy({ top: scroll, behavior: 'instant' });
+      before = rowBelow(list, y);
       setDragging({ id, before });
+      // A pointer that rests at the edge goes on scrolling.
+      if (scroll !== 0) frame = requestAnimationFrame(() => follow(y));
     };
+    const onMove = (event: PointerEvent) => follow(event.clientY);
     const end = () => setDragging(null);
     const onUp = () => {
       end();
@@ -38,6 +46,7 @@ export function useItemDrag(onDrop: (id: string, before: number) => void) {
     window.addEventListener('pointercancel', end);
     window.addEventListener('keydown', onKey);
     return () => {
+      cancelAnimationFrame(frame);
       window.removeEventListener('pointermove', onMove);
       window.removeEventListener('pointerup', onUp);
       window.removeEventListener('pointercancel', end);
@@ -51,6 +60,12 @@ export function useItemDrag(onDrop: (id: string, before: number) => void) {
     setDragging({ id: itemId, before: null });
   };
   return { setList, draggedId: id ?? null, before: dragging?.before ?? null, start };
+}
+
+/** How far the page scrolls in one frame while the pointer is at `y`, px; faster nearer to the edge. */
+function scrollAt(y: number, height: number): number {
+  const past = (distance: number) => Math.min(Math.max((EDGE - distance) / EDGE, 0), 1);
+  return Math.round(FASTEST * (past(height - y) - past(y)));
 }
 
 /** The first row whose middle lies below the pointer. */
