@@ -1,10 +1,9 @@
 import { useQuery } from '@tanstack/react-query';
 import { Download, Printer } from 'lucide-react';
-import { useState } from 'react';
 import { generatePath, useNavigate, useParams } from 'react-router-dom';
 import type { GrowthCard } from '../../../shared/growthCard.ts';
 import { Button } from '../../components/Button.tsx';
-import { ConfirmDialog } from '../../components/ConfirmDialog.tsx';
+import { DeleteButton } from '../../components/DeleteButton.tsx';
 import { Page, useDocumentTitle } from '../../components/Page.tsx';
 import { QueryGate } from '../../components/QueryGate.tsx';
 import { cardQuery, useDeleteCard } from '../../features/cards/api/cards.ts';
@@ -53,27 +52,14 @@ function DeleteCard({ card }: { card: GrowthCard }) {
   const navigate = useNavigate();
   const membership = useMembership(card.groupId);
   const remove = useDeleteCard(card);
-  const [asked, setAsked] = useState(false);
   if (!mayEdit(membership)) return null;
   return (
-    <>
-      <Button tone="danger" onClick={() => setAsked(true)}>
-        Delete
-      </Button>
-      <ConfirmDialog
-        open={asked}
-        onOpenChange={setAsked}
-        title={`Delete the card “${card.title}”?`}
-        description="It is gone for everybody in the group, and its link and QR code stop to open."
-        action="Delete card"
-        busy={remove.isPending}
-        error={remove.error?.message}
-        onConfirm={() =>
-          remove.mutate(undefined, {
-            onSuccess: () => void navigate(generatePath(paths.groupHome, { groupId: card.groupId })),
-          })
-        }
-      />
-    </>
+    <DeleteButton
+      title={`Delete the card “${card.title}”?`}
+      description="It is gone for everybody in the group, and its link and QR code stop to open."
+      action="Delete card"
+      remove={remove}
+      onDeleted={() => void navigate(generatePath(paths.groupHome, { groupId: card.groupId }))}
+    />
   );
 }

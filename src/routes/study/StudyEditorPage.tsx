@@ -14,7 +14,7 @@ import { AddItem } from '../../features/studies/components/AddItem.tsx';
 import { DecisionSection } from '../../features/studies/components/DecisionSection.tsx';
 import { DeleteStudy } from '../../features/studies/components/DeleteStudy.tsx';
 import { StudyItemList } from '../../features/studies/components/StudyItemList.tsx';
-import { StudyLeaveGuard } from '../../features/studies/components/StudyLeaveGuard.tsx';
+import { LeaveGuard } from '../../components/LeaveGuard.tsx';
 import { StudyNotices } from '../../features/studies/components/StudyNotices.tsx';
 import { StudyVersions } from '../../features/studies/components/StudyVersions.tsx';
 import { useStudyEditor } from '../../features/studies/hooks/useStudyEditor.ts';
@@ -60,7 +60,10 @@ export function StudyEditorPage({ study }: { study: Study }) {
       }
     >
       <StudyNotices editor={editor} />
-      <StudyLeaveGuard dirty={dirty} />
+      <LeaveGuard
+        dirty={dirty}
+        description="They are not in the group's study yet. This tab keeps them until you come back to the study or close it."
+      />
       <div className="grid gap-x-8 gap-y-8 lg:grid-cols-[minmax(0,1fr)_340px]">
         <div className="flex min-w-0 flex-col gap-7">
           <div className="flex flex-col gap-3">

@@ -11,7 +11,7 @@ import type { ContentForm, MaterialForm } from '../model/form.ts';
 import { formOfMaterial } from '../model/formOfMaterial.ts';
 import { loadForm, storeForm } from '../model/keptForm.ts';
 import { readForm } from '../model/readForm.ts';
-import { useKeptForm } from './useKeptForm.ts';
+import { useKeptInTab } from '../../../lib/useKeptInTab.ts';
 
 export type EditContent = (change: Partial<ContentForm>) => void;
 
@@ -59,7 +59,7 @@ export function useMaterialEditor({ groupId, material, start, keptUnder, onSaved
     () => (dirty ? { baseVersion: startedFrom, form } : null),
     [dirty, startedFrom, form],
   );
-  useKeptForm(keptUnder, unsaved);
+  useKeptInTab(storeForm, keptUnder, unsaved);
 
   const edit = useCallback((change: Partial<MaterialForm>) => setForm((now) => ({ ...now, ...change })), []);
   const editContent = useCallback<EditContent>(

@@ -1,6 +1,6 @@
-import type { ReactNode } from 'react';
 import type { Stack } from '../../../../shared/stack.ts';
 import { Button } from '../../../components/Button.tsx';
+import { NotSavedNotice, RestoredNotice, SaveNotice } from '../../../components/SaveNotices.tsx';
 import type { StackEditor } from '../hooks/useStackEditor.ts';
 
 type Props = {
@@ -19,7 +19,7 @@ export function EditorNotices({ editor, showsNewer, onShowNewer, onCopied }: Pro
   };
   if (conflict) {
     return (
-      <Notice tone="warn">
+      <SaveNotice tone="warn">
         <p>
           {conflict.updatedBy ?? 'Somebody'} saved version {conflict.version} while you were editing. Your
           edits are kept in this tab.
@@ -46,46 +46,10 @@ export function EditorNotices({ editor, showsNewer, onShowNewer, onCopied }: Pro
           </Button>
         </div>
         {editor.copyError && <p className="text-danger">{editor.copyError.message}</p>}
-      </Notice>
+      </SaveNotice>
     );
   }
-  if (saveError) {
-    return (
-      <Notice tone="danger">
-        <p>
-          Not saved: {saveError.message}
-          {editor.saveIssues.map(({ path, message }) => (
-            <span key={path + message} className="block">
-              {path}: {message}
-            </span>
-          ))}
-        </p>
-      </Notice>
-    );
-  }
-  if (restored) {
-    return (
-      <Notice tone="warn">
-        <div className="flex flex-wrap items-center gap-1.5">
-          <p className="flex-1">Your unsaved changes from before are back.</p>
-          <Button className="py-1!" tone="plain" onClick={editor.takeNewest}>
-            Discard them
-          </Button>
-          <Button className="py-1!" tone="plain" onClick={editor.dismissRestored}>
-            Keep
-          </Button>
-        </div>
-      </Notice>
-    );
-  }
+  if (saveError) return <NotSavedNotice message={saveError.message} issues={editor.saveIssues} />;
+  if (restored) return <RestoredNotice onDiscard={editor.takeNewest} onKeep={editor.dismissRestored} />;
   return null;
-}
-
-function Notice({ tone, children }: { tone: 'warn' | 'danger'; children: ReactNode }) {
-  const look = tone === 'warn' ? 'bg-warn-soft text-ink' : 'bg-danger-soft text-danger';
-  return (
-    <div role="alert" className={`mt-2 flex flex-col gap-2 rounded-control px-3 py-2 text-note ${look}`}>
-      {children}
-    </div>
-  );
 }

@@ -1,30 +1,13 @@
-import { useBlocker } from 'react-router-dom';
-import { Button } from '../../../components/Button.tsx';
-import { Dialog } from '../../../components/Dialog.tsx';
+import { LeaveGuard as Guard } from '../../../components/LeaveGuard.tsx';
 
-/**
- * Asks before another page is opened over unsaved changes. They stay in this tab either way; so the way to a run that
- * was just kept, which holds the film as edited, is taken without a question.
- */
+/** The way to a run that was just kept, which holds the film as edited, is taken without a question. */
 export function LeaveGuard({ dirty }: { dirty: boolean }) {
-  const blocker = useBlocker(
-    ({ currentLocation, nextLocation }) =>
-      dirty && currentLocation.pathname !== nextLocation.pathname && !isKeptRun(nextLocation.state),
-  );
   return (
-    <Dialog
-      open={blocker.state === 'blocked'}
-      onOpenChange={(open) => {
-        if (!open) blocker.reset?.();
-      }}
-      title="Leave with unsaved changes?"
+    <Guard
+      dirty={dirty}
       description="They are not in the group's stack yet. This tab keeps them until you come back to the stack or close it."
-    >
-      <div className="flex justify-end gap-2">
-        <Button onClick={() => blocker.reset?.()}>Stay</Button>
-        <Button onClick={() => blocker.proceed?.()}>Leave</Button>
-      </div>
-    </Dialog>
+      lets={isKeptRun}
+    />
   );
 }
 

@@ -10,7 +10,7 @@ import { draftOf, loadDraft, sameDraft, storeDraft } from '../model/draft.ts';
 import type { Draft } from '../model/draft.ts';
 import { closeStep, recordEdit, redo, startHistory, undo } from '../model/history.ts';
 import type { History } from '../model/history.ts';
-import { useKeptDraft } from './useKeptDraft.ts';
+import { useKeptInTab } from '../../../lib/useKeptInTab.ts';
 
 type Base = { version: number; draft: Draft };
 
@@ -35,7 +35,7 @@ export function useStackEditor(stack: Stack) {
   const copy = useSaveCopy(stack.groupId);
 
   const draft = history.present;
-  const dirty = !sameDraft(draft, base.draft);
+  const dirty = useMemo(() => !sameDraft(draft, base.draft), [draft, base.draft]);
 
   if (stack.version > base.version && !save.isPending) {
     const newest = { version: stack.version, draft: draftOf(stack) };
@@ -49,7 +49,7 @@ export function useStackEditor(stack: Stack) {
     () => (dirty ? { baseVersion: startedFrom, draft } : null),
     [dirty, startedFrom, draft],
   );
-  useKeptDraft(stack.id, unsaved);
+  useKeptInTab(storeDraft, stack.id, unsaved);
 
   const editDraft = useCallback((change: (draft: Draft) => Draft, edit: EditName) => {
     setHistory((now) => recordEdit(now, change(now.present), edit));

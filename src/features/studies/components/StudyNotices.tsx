@@ -1,7 +1,7 @@
 import { useQuery } from '@tanstack/react-query';
-import type { ReactNode } from 'react';
 import type { Study } from '../../../../shared/study.ts';
 import { Button } from '../../../components/Button.tsx';
+import { NotSavedNotice, RestoredNotice, SaveNotice } from '../../../components/SaveNotices.tsx';
 import { studyVersionsQuery } from '../api/study.ts';
 import type { StudyEditor } from '../hooks/useStudyEditor.ts';
 
@@ -11,7 +11,7 @@ export function StudyNotices({ editor }: { editor: StudyEditor }) {
   if (conflict) {
     const { study, since } = conflict;
     return (
-      <Notice tone="warn">
+      <SaveNotice tone="warn">
         <p>
           {study.updatedBy ?? 'Somebody'} saved version {study.version} while you were editing. Your edits are
           kept in this tab.
@@ -25,38 +25,11 @@ export function StudyNotices({ editor }: { editor: StudyEditor }) {
             Take theirs
           </Button>
         </div>
-      </Notice>
+      </SaveNotice>
     );
   }
-  if (saveError) {
-    return (
-      <Notice tone="danger">
-        <p>
-          Not saved: {saveError.message}
-          {editor.saveIssues.map(({ path, message }) => (
-            <span key={path + message} className="block">
-              {path}: {message}
-            </span>
-          ))}
-        </p>
-      </Notice>
-    );
-  }
-  if (restored) {
-    return (
-      <Notice tone="warn">
-        <div className="flex flex-wrap items-center gap-1.5">
-          <p className="flex-1">Your unsaved changes from before are back.</p>
-          <Button className="py-1!" tone="plain" onClick={editor.takeSaved}>
-            Discard them
-          </Button>
-          <Button className="py-1!" tone="plain" onClick={editor.dismissRestored}>
-            Keep
-          </Button>
-        </div>
-      </Notice>
-    );
-  }
+  if (saveError) return <NotSavedNotice message={saveError.message} issues={editor.saveIssues} />;
+  if (restored) return <RestoredNotice onDiscard={editor.takeSaved} onKeep={editor.dismissRestored} />;
   return null;
 }
 
@@ -71,14 +44,5 @@ function ChangesSince({ study, since }: { study: Study; since: number }) {
         changes.map((change) => <li key={`${version} ${change}`}>{change}</li>),
       )}
     </ul>
-  );
-}
-
-function Notice({ tone, children }: { tone: 'warn' | 'danger'; children: ReactNode }) {
-  const look = tone === 'warn' ? 'bg-warn-soft text-ink' : 'bg-danger-soft text-danger';
-  return (
-    <div role="alert" className={`mb-4 flex flex-col gap-2 rounded-control px-3 py-2 text-note ${look}`}>
-      {children}
-    </div>
   );
 }

@@ -5,10 +5,10 @@ import type { Study } from '../../../../shared/study.ts';
 import { ApiError } from '../../../lib/apiClient.ts';
 import { useSaveStudy } from '../api/changeStudy.ts';
 import { studyQuery } from '../api/study.ts';
-import { contentOf, draftOf, loadDraft, sameContent } from '../model/draft.ts';
+import { contentOf, draftOf, loadDraft, sameContent, storeDraft } from '../model/draft.ts';
 import type { StudyDraft } from '../model/draft.ts';
 import type { StudyRow } from '../model/rows.ts';
-import { useKeptStudy } from './useKeptStudy.ts';
+import { useKeptInTab } from '../../../lib/useKeptInTab.ts';
 
 /**
  * The study being edited: what of it is saved, and what to do when somebody else saved first.
@@ -38,7 +38,7 @@ export function useStudyEditor(study: Study) {
     () => (dirty ? { baseVersion: startedFrom, draft } : null),
     [dirty, startedFrom, draft],
   );
-  useKeptStudy(study.id, unsaved);
+  useKeptInTab(storeDraft, study.id, unsaved);
 
   const edit = useCallback((change: Partial<StudyDraft>) => setDraft((now) => ({ ...now, ...change })), []);
   const editRows = useCallback(
