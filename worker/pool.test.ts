@@ -8,6 +8,8 @@ import type { MaterialContent } from '../shared/material.ts';
 import type { SweepAxis } from '../shared/run.ts';
 import type { SolveRequest } from '../shared/solve.ts';
 import type { StackDocument, StackMedium } from '../shared/stack.ts';
+import { toleranceDesignSchema } from '../shared/toleranceDesign.ts';
+import type { DesignWork } from './design/designInput.ts';
 import { solveRequest } from './optics/solveRequest.ts';
 import { createPool } from './pool.ts';
 import type { ComputePool } from './pool.ts';
@@ -33,6 +35,18 @@ const sweepOf = (axis: SweepAxis): SweepInput => ({
   readings: ['rotationP', 'ellipticityP', 'contrastP', 'reflectanceS'],
   materials: [],
 });
+
+const designWork: DesignWork = {
+  materials: [],
+  design: toleranceDesignSchema.parse({
+    kind: 'tolerance',
+    document,
+    points: [{ id: 'a', label: 'oblique', workingPoint: document.workingPoint }],
+    signal: 'rotation',
+    demands: { leastReflectance: 0.5 },
+    tolerance: { ratePercent: 5, randomPercent: 2, samples: 450, seed: 3 },
+  }),
+};
 
 const request: SolveRequest = {
   cases: [
@@ -110,6 +124,17 @@ describe('the pool', () => {
     expect(columns.every((column) => column.every(Number.isFinite))).toBe(true);
     expect(seen).toEqual([...seen].sort((a, b) => a - b));
     expect(seen.at(-1)).toBe(50_000);
+  });
+
+  it('answers a design question alike on one and two threads', async () => {
+    const alone = createPool({ threads: 1 });
+    try {
+      const [two, one] = await Promise.all([pool, alone].map((some) => some.design(designWork)));
+      expect(one!.result).toEqual(two!.result);
+      expect(one!.result).toMatchObject({ kind: 'tolerance', samples: 450 });
+    } finally {
+      await alone.close();
+    }
   });
 
   it('stops a running sweep within 100 ms and works on', async () => {

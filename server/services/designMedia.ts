@@ -3,6 +3,7 @@ import type { DesignInput } from '../../shared/design.ts';
 import type { DesignPoint } from '../../shared/designPoint.ts';
 import type { StackDocument, StackMedium } from '../../shared/stack.ts';
 import { drawnLayers } from '../../worker/design/expandBlocks.ts';
+import { mediaBeside } from '../../worker/design/mediaBeside.ts';
 
 /** Everything in a design question that holds media: its film, and the layers of candidates. */
 export type DesignMedia = { document: StackDocument; candidates: CapCandidate[] };
@@ -41,11 +42,11 @@ export function candidateAlone(
   };
 }
 
-/** Media of which errors may be stated: of every layer, the substrate and the candidates. */
+/** Media of which errors may be stated: of every layer and its oxide, around the film, and of the candidates. */
 export function mediaWithErrors(design: DesignInput): StackMedium[] {
   return [
     ...drawnLayers(design.document.layers).map(({ medium }) => medium),
-    design.document.substrate,
+    ...mediaBeside(design.document),
     ...candidatesOf(design).flatMap(({ layers }) => layers.map(({ medium }) => medium)),
   ];
 }

@@ -1,14 +1,27 @@
 import type { Demands, PointReadings, SignalName } from '../../shared/designPoint.ts';
 
-/** The size of the chosen signal, in deg or 1; null where it does not exist. */
-export function signalOf(readings: PointReadings, signal: SignalName): number | null {
-  const value = {
+/** Signals no larger than this, deg or 1, are rounding: there is nothing to see. */
+const ROUNDING = 1e-12;
+
+/** The chosen signal with its sign, in deg or 1; null where it does not exist. */
+export function signedSignalOf(readings: PointReadings, signal: SignalName): number | null {
+  return {
     rotation: readings.rotationDeg,
     ellipticity: readings.ellipticityDeg,
     amplitude: readings.amplitude,
     contrast: readings.contrast,
   }[signal];
+}
+
+/** The size of the chosen signal, in deg or 1; null where it does not exist. */
+export function signalOf(readings: PointReadings, signal: SignalName): number | null {
+  const value = signedSignalOf(readings, signal);
   return value === null ? null : Math.abs(value);
+}
+
+/** Whether a signal exists and is more than rounding, so that others can be given as shares of it. */
+export function isSeen(signal: number | null): signal is number {
+  return signal !== null && Math.abs(signal) > ROUNDING;
 }
 
 export type DemandName = keyof Demands;

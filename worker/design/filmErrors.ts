@@ -16,18 +16,20 @@ type MaterialErrors = { key: string; rate: number; random: number; index: number
 
 /**
  * The errors of a tolerance, drawn for one film after the other. Numbers are drawn in a fixed order (rates of the
- * materials, random errors of the layers, constants), so a film with further layers at the end of the list keeps the
- * thicknesses of the others: candidates are compared on the same films.
+ * materials, random errors of the layers, constants), so a film with further layers at the end of the list keeps what
+ * the others are: candidates are compared on the same films.
  */
 export class FilmErrors {
   readonly #seed: number;
   readonly #layers: { id: string; material: MaterialErrors }[];
   readonly #materials: MaterialErrors[];
+  /** In the order in which their constants are drawn. */
+  readonly #scaled: MaterialErrors[];
   readonly #scalesConstants: boolean;
 
   /**
    * @param layers every layer that can be off by itself, in a lasting order
-   * @param others media that are not layers (substrate): only their constants can be off
+   * @param others media that are not layers, such as the substrate: only their constants can be off
    */
   constructor(tolerance: Tolerance, layers: readonly StackLayer[], others: readonly StackMedium[] = []) {
     const materials = new Map<string, MaterialErrors>();
@@ -48,8 +50,9 @@ export class FilmErrors {
     };
     this.#seed = tolerance.seed;
     this.#layers = layers.map(({ id, medium }) => ({ id, material: errorsOf(medium) }));
-    others.forEach(errorsOf);
+    const beside = others.map(errorsOf);
     this.#materials = [...materials.values()];
+    this.#scaled = [...new Set([...beside, ...this.#materials])];
     this.#scalesConstants = this.#materials.some(({ index, voigt }) => index > 0 || voigt > 0);
   }
 
@@ -66,7 +69,7 @@ export class FilmErrors {
     );
     if (!this.#scalesConstants) return { thickness, constants: null };
     const constants = new Map<string, ConstantFactors>(
-      this.#materials.map(({ key, index, voigt }) => {
+      this.#scaled.map(({ key, index, voigt }) => {
         // A negative n or k means nothing; errors so large are cut off at a tenth.
         const n = Math.max(0.1, 1 + index * nextConstant());
         const k = Math.max(0.1, 1 + index * nextConstant());

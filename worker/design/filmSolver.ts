@@ -1,7 +1,7 @@
 import type { PointReadings } from '../../shared/designPoint.ts';
 import { readingOf } from '../../shared/readings.ts';
 import type { ReadingName } from '../../shared/run.ts';
-import type { StackDocument, StackItem, StackLayer } from '../../shared/stack.ts';
+import type { StackDocument, StackItem } from '../../shared/stack.ts';
 import { findLayerPath, toSolveCase } from '../../shared/stackCase.ts';
 import type { ResolvableMaterial } from '../dispersion/resolveCase.ts';
 import { resolveCase } from '../dispersion/resolveCase.ts';
@@ -15,6 +15,7 @@ import { BatchRoom } from '../sweep/pointBatch.ts';
 import { partsNeeded } from '../sweep/solvedReadings.ts';
 import type { ConstantFactors } from './frozenFilm.ts';
 import { freezeDocument, scaleConstants } from './frozenFilm.ts';
+import { leastThicknessNm } from './optimise/checkOptimise.ts';
 
 /** Which readings are needed beside rotation, ellipticity, amplitude and reflectance; each costs time. */
 export type Wanted = { contrast: boolean; ceiling: boolean };
@@ -208,12 +209,7 @@ function withThicknesses(document: StackDocument, nm: ReadonlyMap<string, number
     const thickness = nm.get(item.id);
     return thickness === undefined
       ? item
-      : { ...item, thicknessNm: Math.max(0, thickness, unmagnetizedNm(item)) };
+      : { ...item, thicknessNm: Math.max(0, thickness, leastThicknessNm(item)) };
   };
   return { ...document, layers: document.layers.map(change) };
-}
-
-/** A layer is never thinner than what has oxidized of it and its dead parts. */
-function unmagnetizedNm({ oxide, dead }: StackLayer): number {
-  return (oxide?.consumedNm ?? 0) + (dead ? dead.topNm + dead.bottomNm : 0);
 }

@@ -87,17 +87,31 @@ function mapMedia(
   };
 }
 
-/** A frozen document with constants times factors; media given as tensors or mixtures, and what is not named, stay. */
+/** Vacuum and air, at any pressure and humidity, have no constants that could be off. */
+export function isVacuumOrAir({ index }: Pick<StackMedium, 'index'>): boolean {
+  if (index === undefined) return false;
+  const values = typeof index === 'object' && 'samples' in index ? index.samples : [index];
+  return values.map(toComplex).every(([n, k]) => Math.abs(n - 1) < 1e-3 && k === 0);
+}
+
+/**
+ * A frozen document with constants times factors, both indices of a uniaxial medium alike. Media given as tensors or
+ * mixtures, vacuum and air, and what is not named, stay.
+ */
 export function scaleConstants(
   frozen: StackDocument,
   factors: ReadonlyMap<string, ConstantFactors>,
 ): StackDocument {
   return mapMedia(frozen, (medium) => {
     const factor = factors.get(medium.label ?? '');
-    if (!factor || medium.index === undefined) return medium;
+    if (!factor || medium.index === undefined || isVacuumOrAir(medium)) return medium;
+    const scaleIndex = ([n, k]: [number, number]): [number, number] => [n * factor.n, k * factor.k];
     return {
       ...medium,
-      index: scaleSamples(medium.index, ([n, k]) => [n * factor.n, k * factor.k]),
+      index: scaleSamples(medium.index, scaleIndex),
+      ...(medium.extraordinary === undefined
+        ? {}
+        : { extraordinary: scaleSamples(medium.extraordinary, scaleIndex) }),
       ...(medium.voigt === undefined
         ? {}
         : { voigt: scaleSamples(medium.voigt, ([re, im]) => [re * factor.q[0], im * factor.q[1]]) }),

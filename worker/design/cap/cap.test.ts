@@ -126,7 +126,7 @@ describe('the cap chooser', () => {
     expect(pt.windows[0]!.toNm).toBe(6);
     expect(pt.best!.thicknessNm).toBeGreaterThan(1.2);
     expect(pt.best!.yield).toBeGreaterThanOrEqual(0.9);
-    expect(pt.best!.reason).toMatch(/% of the films meet all demands/);
+    expect(pt.best!.reason).toMatch(/% of the films protect and meet all demands \(90 % were asked\)/);
     expect([...free.ranking].sort()).toEqual(['au-ru', 'pt']);
 
     const bareRotation = free.bare[0]!.signal!;

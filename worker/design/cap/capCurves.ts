@@ -1,11 +1,13 @@
 import type { CapCandidate, CapDesign } from '../../../shared/capDesign.ts';
 import type { DesignPoint, PointReadings } from '../../../shared/designPoint.ts';
+import { foldDegrees } from '../../../shared/units.ts';
 import { materialKey } from '../../sweep/sweepInput.ts';
 import type { ResolvableMaterial } from '../../dispersion/resolveCase.ts';
-import { asksContrast, failedDemands, signalOf } from '../demands.ts';
+import { asksContrast, failedDemands, isSeen, signalOf, signedSignalOf } from '../demands.ts';
 import { FilmErrors } from '../filmErrors.ts';
 import type { FilmChange } from '../filmSolver.ts';
 import { FilmSolver, UNCHANGED } from '../filmSolver.ts';
+import { mediaBeside } from '../mediaBeside.ts';
 import type { CandidateFilm } from './candidateFilm.ts';
 import { bareFilm, candidateFilm, capLayerId } from './candidateFilm.ts';
 
@@ -35,7 +37,7 @@ export class CapCurves {
     this.candidate = candidate;
     this.#design = design;
     this.#film = candidateFilm(design, candidate);
-    this.#errors = new FilmErrors(design.tolerance, this.#film.drawn, [design.document.substrate]);
+    this.#errors = new FilmErrors(design.tolerance, this.#film.drawn, mediaBeside(this.#film.document));
     const known = new Map(materials.map((material) => [materialKey(material), material]));
     const contrast = asksContrast(design.demands, design.signal);
     const solverOf = (ceiling: boolean) => (point: DesignPoint) =>
@@ -52,19 +54,24 @@ export class CapCurves {
     return this.#full.map((solver) => solver.curve(UNCHANGED, { layerId: this.#film.sweptId, nm }));
   }
 
-  /** d |signal| / d thickness over |signal|, percent per nm, by working point. */
+  /**
+   * d |signal| / d thickness over |signal|, percent per nm, by working point: of the signed signal, since its size has a
+   * kink where it changes sign.
+   */
   slopes(nm: readonly number[], change: FilmChange = UNCHANGED): (number | null)[][] {
     const layerId = this.#film.sweptId;
+    const { signal } = this.#design;
     return this.#lean.map((solver) => {
       const below = nm.map((one) => Math.max(0, one - SLOPE_STEP_NM));
       const above = nm.map((one) => Math.max(0, one) + SLOPE_STEP_NM);
       const signals = [below, nm, above].map((list) =>
-        solver.curve(change, { layerId, nm: list }).map((one) => signalOf(one, this.#design.signal)),
+        solver.curve(change, { layerId, nm: list }).map((one) => signedSignalOf(one, signal)),
       );
       return nm.map((_, i) => {
         const [low, here, high] = [signals[0]![i]!, signals[1]![i]!, signals[2]![i]!];
-        if (low === null || here === null || high === null || here === 0) return null;
-        return (100 * (high - low)) / (above[i]! - below[i]!) / here;
+        if (low === null || !isSeen(here) || high === null) return null;
+        const change = signal === 'rotation' ? foldDegrees(high - low) : high - low;
+        return (100 * change) / (above[i]! - below[i]!) / here;
       });
     });
   }

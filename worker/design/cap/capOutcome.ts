@@ -1,11 +1,12 @@
 import type { CapDesign, CapOutcome, CapPointCurves } from '../../../shared/capDesign.ts';
 import type { PointReadings } from '../../../shared/designPoint.ts';
-import { signalOf } from '../demands.ts';
+import { isSeen, signalOf } from '../demands.ts';
 import type { CapCurves } from './capCurves.ts';
 import type { Band, CapSamples } from './capSamples.ts';
 import { windowsOf } from './capWindows.ts';
 import type { Window } from './capWindows.ts';
 import { obstacleOf, reasonFor } from './capWords.ts';
+import { weakestPoint } from './weakestPoint.ts';
 
 /**
  * Everything that the chooser shows of one candidate.
@@ -99,13 +100,15 @@ function pointCurves(
     signalMedian: band.median,
     signalHigh: band.high,
     slopePercentPerNm: slopes,
-    costPercent: signal.map((one) => (one === null || !bare ? null : 100 * (1 - one / bare))),
+    costPercent: signal.map((one) => (one === null || !isSeen(bare) ? null : 100 * (1 - one / bare))),
   };
 }
 
-/** How much of the bare signal a working point has at the lower edge of its band. */
-function worthAt({ points, bare }: Computed, point: number, position: number): number {
-  return (points[point]!.signalLow[position] ?? 0) / (bare[point] ?? 1);
+function weakestAt({ points, bare }: Computed, position: number): ReturnType<typeof weakestPoint> {
+  return weakestPoint(
+    points.map(({ signalLow }) => signalLow[position] ?? null),
+    bare,
+  );
 }
 
 /** The robust thickness of greatest worth at its weakest working point; without any, the one that the most films meet. */
@@ -115,9 +118,7 @@ function bestPosition(computed: Computed, isRobust: boolean[]): number | null {
   let bestScore = -Infinity;
   computed.isMet.forEach((met, position) => {
     if (!(robust ? isRobust[position] : met)) return;
-    const score = robust
-      ? Math.min(...computed.points.map((_, point) => worthAt(computed, point, position)))
-      : computed.yields[position]!;
+    const score = robust ? weakestAt(computed, position).worth : computed.yields[position]!;
     if (score > bestScore) [best, bestScore] = [position, score];
   });
   return best;
@@ -136,11 +137,7 @@ function bestOf(computed: Computed, position: number, isRobust: boolean): NonNul
     costPercent: curve.costPercent[position] ?? null,
     slopePercentPerNm: curve.slopePercentPerNm[position] ?? null,
   }));
-  const weakest = rows.reduce(
-    (least, _, point) =>
-      worthAt(computed, point, position) < worthAt(computed, least, position) ? point : least,
-    0,
-  );
+  const weakest = weakestAt(computed, position).point;
   const reason = reasonFor(design, {
     nm: thicknessNm,
     yield: yieldThere,
@@ -159,8 +156,11 @@ export function rankCandidates(
 ): string[] {
   const score = ({ best }: CapOutcome): [number, number] => {
     if (!best) return [-1, 0];
-    const left = Math.min(...best.points.map(({ signalLow }, point) => signalLow / (bare[point] ?? 1)));
-    return best.yield >= leastYield ? [1, left] : [0, best.yield];
+    const { worth } = weakestPoint(
+      best.points.map(({ signalLow }) => signalLow),
+      bare,
+    );
+    return best.yield >= leastYield ? [1, worth] : [0, best.yield];
   };
   return outcomes
     .map((outcome, order) => ({ id: outcome.id, order, score: score(outcome) }))

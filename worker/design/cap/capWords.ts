@@ -38,23 +38,28 @@ export function reasonFor(
   const { worst, window } = choice;
   const label = signalLabels[design.signal];
   const where = window
-    ? ` in the window from ${nmWords(window.fromNm)} to ${nmWords(window.toNm)} where all demands hold`
+    ? `; the nominal film meets them from ${nmWords(window.fromNm)} to ${nmWords(window.toNm)}`
     : '';
+  const share = percent(choice.yield, design.tolerance.samples);
+  const asked = `${Number((100 * design.leastYield).toPrecision(6))} %`;
+  const at = design.points.length > 1 ? ` at ${worst.label}, its weakest working point` : '';
   const robust = choice.isRobust
-    ? `${percent(choice.yield)} of the films meet all demands, and the lower edge of the ${label} is the greatest`
-    : `only ${percent(choice.yield)} of the films meet all demands (${percent(design.leastYield)} were asked), the most`;
+    ? `${share} of the films protect and meet all demands (${asked} were asked), and of such thicknesses this one has the greatest lower edge of the ${label}${at}`
+    : `only ${share} of the films protect and meet all demands (${asked} were asked), the most of any thickness`;
   const cost =
     worst.costPercent === null
       ? ''
       : worst.costPercent >= 0
         ? `, ${digits(worst.costPercent)} % less than without a cap`
         : `, ${digits(-worst.costPercent)} % more than without a cap`;
-  const at = design.points.length > 1 ? ` at ${worst.label}, its weakest working point` : '';
-  return `${nmWords(choice.nm)}: ${robust}${where}; ${label} ${signalWords(design.signal, worst.signal)}${at}${cost}.`;
+  const there = design.points.length > 1 ? ` there` : '';
+  return `${nmWords(choice.nm)}: ${robust}${where}; ${label}${there} ${signalWords(design.signal, worst.signal)}${cost}.`;
 }
 
-function percent(share: number): string {
-  return `${Math.round(100 * share)} %`;
+/** With the decimals that so many samples have, so that what is below a limit does not read as if it were at it. */
+function percent(share: number, samples: number): string {
+  const decimals = Math.max(0, Math.ceil(Math.log10(samples)) - 2);
+  return `${Number((100 * share).toFixed(decimals))} %`;
 }
 
 const demandLabels: Record<DemandName, string> = {

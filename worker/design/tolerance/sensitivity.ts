@@ -1,6 +1,7 @@
 import type { DesignPoint, PointReadings } from '../../../shared/designPoint.ts';
 import { materialKeyOf } from '../../../shared/designPoint.ts';
 import { toComplex } from '../../../shared/complex.ts';
+import { foldDegrees } from '../../../shared/units.ts';
 import type { StackDocument, StackMedium } from '../../../shared/stack.ts';
 import type { Sensitivity, SensitivityAnswer } from '../../../shared/toleranceDesign.ts';
 import type { ResolvableMaterial } from '../../dispersion/resolveCase.ts';
@@ -9,7 +10,9 @@ import { drawnLayers } from '../expandBlocks.ts';
 import type { FilmChange } from '../filmSolver.ts';
 import { FilmSolver, UNCHANGED } from '../filmSolver.ts';
 import type { ConstantFactors } from '../frozenFilm.ts';
-import { freezeDocument } from '../frozenFilm.ts';
+import { freezeDocument, isVacuumOrAir } from '../frozenFilm.ts';
+import { mediaBeside } from '../mediaBeside.ts';
+import { leastThicknessNm } from '../optimise/checkOptimise.ts';
 
 /** Step of a thickness, nm: the readings bend over nanometres, rounding is at 1e-13. */
 const STEP_NM = 1e-3;
@@ -20,7 +23,7 @@ type Derivative = Sensitivity['derivative'];
 
 /**
  * How much every reading changes with every thickness and constant: fourth-order central differences
- * (f(-2h) - 8 f(-h) + 8 f(h) - f(2h)) / 12h, Abramowitz and Stegun, table 25.2; at a thickness near 0 a one-sided
+ * (f(-2h) - 8 f(-h) + 8 f(h) - f(2h)) / 12h, Abramowitz and Stegun, table 25.2; at the least thickness that a layer can have a one-sided
  * difference of second order.
  *
  * @param materials by id and version, all that the document names
@@ -67,7 +70,10 @@ function thicknessSensitivities(
       of: layer.id,
       label: `thickness of ${layer.note ? `${layer.note} ` : ''}${mediumLabel(layer.medium, names)}`,
       value: layer.thicknessNm,
-      derivative: layer.thicknessNm < 2 * STEP_NM ? forward(at, STEP_NM) : central(at, STEP_NM),
+      derivative:
+        layer.thicknessNm - leastThicknessNm(layer) < 2 * STEP_NM
+          ? forward(at, STEP_NM)
+          : central(at, STEP_NM),
     };
   });
 }
@@ -80,8 +86,8 @@ function constantSensitivities(
   names: ReadonlyMap<string, string>,
 ): OneSensitivity[] {
   const media = new Map<string, { frozen: StackMedium; drawn: StackMedium }>();
-  const drawn = [...drawnLayers(film.layers).map(({ medium }) => medium), film.substrate];
-  const solved = [...drawnLayers(frozen.layers).map(({ medium }) => medium), frozen.substrate];
+  const drawn = [...drawnLayers(film.layers).map(({ medium }) => medium), ...mediaBeside(film)];
+  const solved = [...drawnLayers(frozen.layers).map(({ medium }) => medium), ...mediaBeside(frozen)];
   drawn.forEach((medium, position) => {
     const key = materialKeyOf(medium);
     const before = media.get(key);
@@ -108,9 +114,14 @@ type Parameter = {
   change: (step: number) => ConstantFactors;
 };
 
-/** The constants of a medium given as one index; a k of 0 cannot be scaled and has no derivative here. */
-function parametersOf({ index, voigt }: StackMedium): Parameter[] {
-  if (index === undefined || (typeof index === 'object' && 'samples' in index)) return [];
+/**
+ * The constants of a medium given as one index, of a uniaxial one for both indices together. A k of 0 cannot be scaled and
+ * has no derivative here; vacuum and air have none.
+ */
+function parametersOf(medium: StackMedium): Parameter[] {
+  const { index, voigt } = medium;
+  if (index === undefined || isVacuumOrAir(medium) || (typeof index === 'object' && 'samples' in index))
+    return [];
   const [n, k] = toComplex(index);
   const same: ConstantFactors = { n: 1, k: 1, q: [1, 1] };
   const parameters: Parameter[] = [
@@ -138,11 +149,13 @@ function forward(at: (step: number) => PointReadings, h: number): Derivative {
 
 function combine(values: PointReadings[], weights: number[], divisor: number): Derivative {
   const entry = (name: keyof Derivative) => {
+    const first = values[0]![name];
     let sum = 0;
     for (const [i, readings] of values.entries()) {
       const value = readings[name];
-      if (value === null) return null;
-      sum += weights[i]! * value;
+      if (value === null || first === null) return null;
+      // Weights add up to 0. Rotations of 90 and -90 deg are the same.
+      sum += weights[i]! * (name === 'rotationDeg' ? foldDegrees(value - first) : value);
     }
     return sum / divisor;
   };

@@ -6,6 +6,7 @@ import { asksContrast } from '../demands.ts';
 import { expandBlocks } from '../expandBlocks.ts';
 import { FilmErrors } from '../filmErrors.ts';
 import { FilmSolver } from '../filmSolver.ts';
+import { mediaBeside } from '../mediaBeside.ts';
 
 /** What is kept of each sample, in the order of the buffer. */
 export const keptReadings = [
@@ -64,7 +65,7 @@ export class ToleranceFilms {
     this.#errors = new FilmErrors(
       tolerance,
       film.layers.map(({ layer }) => layer),
-      [document.substrate],
+      mediaBeside(document),
     );
     const known = new Map(materials.map((material) => [materialKey(material), material]));
     const wanted = { contrast: asksContrast(demands, signal), ceiling: false };
