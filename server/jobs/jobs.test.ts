@@ -25,7 +25,7 @@ import {
   buildUser,
   buildSlowDocument,
 } from '../../tests/factories.ts';
-import { waitForRun } from '../../tests/waitForRun.ts';
+import { waitForRun, waitLongForRun } from '../../tests/waitForRun.ts';
 import { RunQueue } from './runQueue.ts';
 import { startJobs } from './start.ts';
 import { sweepOrphans } from './sweeper.ts';
@@ -321,7 +321,7 @@ describe('npm run compute', () => {
       const user = await buildUser(models);
       const actor = { userId: user.id, name: user.name };
       const first = await enqueued({ ...longer, points: 1_000 });
-      expect(await waitForRun(models, first.id, 'done')).toMatchObject({ attempts: 1 });
+      expect(await waitLongForRun(60_000, models, first.id, 'done')).toMatchObject({ attempts: 1 });
       const second = await enqueued(endless);
       await waitForRun(models, second.id, 'running');
       expect(await cpuSecondsWithin(child.pid!, 1_000)).toBeGreaterThan(0.05);
@@ -337,5 +337,5 @@ describe('npm run compute', () => {
     } finally {
       child.kill('SIGKILL');
     }
-  });
+  }, 120_000);
 });
