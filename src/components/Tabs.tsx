@@ -1,4 +1,5 @@
 import { Tabs as Radix } from 'radix-ui';
+import { memo } from 'react';
 import type { ReactNode } from 'react';
 
 type TabsProps<Value extends string> = {
@@ -31,17 +32,7 @@ export function Tabs<Value extends string>({
       }}
     >
       <div className="flex flex-wrap items-center gap-x-3 gap-y-2">
-        <Radix.List aria-label={label} className="flex flex-wrap gap-1">
-          {tabs.map((tab) => (
-            <Radix.Trigger
-              key={tab.value}
-              value={tab.value}
-              className="rounded-control px-3 py-[5px] text-muted hover:text-ink data-[state=active]:bg-accent-soft data-[state=active]:font-semibold data-[state=active]:text-accent"
-            >
-              {tab.label}
-            </Radix.Trigger>
-          ))}
-        </Radix.List>
+        <TabRow label={label} tabs={tabs} />
         {end ? <div className="ml-auto flex items-center gap-3">{end}</div> : null}
       </div>
       <Radix.Content value={value} className="outline-offset-4">
@@ -50,3 +41,20 @@ export function Tabs<Value extends string>({
     </Radix.Root>
   );
 }
+
+/** Apart from the panel, which on some pages is drawn at every step of a drag. */
+const TabRow = memo(function TabRow({ label, tabs }: Pick<TabsProps<string>, 'label' | 'tabs'>) {
+  return (
+    <Radix.List aria-label={label} className="flex flex-wrap gap-1">
+      {tabs.map((tab) => (
+        <Radix.Trigger
+          key={tab.value}
+          value={tab.value}
+          className="rounded-control px-3 py-[5px] text-muted hover:text-ink data-[state=active]:bg-accent-soft data-[state=active]:font-semibold data-[state=active]:text-accent"
+        >
+          {tab.label}
+        </Radix.Trigger>
+      ))}
+    </Radix.List>
+  );
+});

@@ -54,9 +54,12 @@ export function formatPlain(value: number): string {
   return withMinus(String(value));
 }
 
+/** `toLocaleString` would make one of these at every call, which takes longer than all the rest of a page. */
+const counts = new Intl.NumberFormat('en');
+
 /** A whole number with its thousands apart: 1,000,000. */
 export function formatCount(count: number): string {
-  return withMinus(count.toLocaleString('en'));
+  return withMinus(counts.format(count));
 }
 
 export type AngleUnit = 'mdeg' | 'deg' | 'mrad';

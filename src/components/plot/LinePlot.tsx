@@ -147,7 +147,8 @@ export function LinePlot(props: Props) {
           key={fontsReady ? 'shipped font' : 'waiting for the font'}
           echarts={echarts}
           option={option}
-          notMerge
+          replaceMerge={replaced}
+          lazyUpdate
           opts={{ renderer, width, height }}
           style={{ height, width: '100%' }}
           aria-hidden="true"
@@ -189,6 +190,9 @@ export function LinePlot(props: Props) {
 }
 
 const noMarks: readonly PlotMark[] = [];
+
+/** Curves and axes keep their place by id and take the new values; what is no longer there goes. */
+const replaced = ['series', 'xAxis', 'yAxis'];
 
 /** Samples (1) or share of the grid that a key moves the cursor by. */
 const keySteps: Record<string, number> = {

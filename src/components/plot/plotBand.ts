@@ -7,12 +7,18 @@ import type { PlotSeries } from './plotTypes.ts';
  * The band of a curve: a grey tint with thin edges, under all curves. Each stretch without gaps is one polygon, in
  * pixels, so that it agrees with the overlay.
  */
-export function bandOption(series: PlotSeries, layout: PlotLayout, tokens: PlotTokens): object[] {
+export function bandOption(
+  series: PlotSeries,
+  index: number,
+  layout: PlotLayout,
+  tokens: PlotTokens,
+): object[] {
   const stretches = bandPolygons(series, layout);
   if (stretches.length === 0) return [];
   return [
     {
       type: 'custom',
+      id: `band ${index}`,
       name: `${series.name} (band)`,
       yAxisIndex: series.yAxisIndex ?? 0,
       // The polygons are given in pixels; the data only say how many there are.

@@ -40,6 +40,7 @@ export function plotOption(
       bottom: size.height - frame.bottom,
     },
     xAxis: {
+      id: 'x',
       ...axisOption(layout.x, tokens),
       name: xAxis.label,
       nameLocation: 'middle',
@@ -50,6 +51,7 @@ export function plotOption(
     },
     yAxis: yAxes.map((axis, index) => ({
       ...axisOption(layout.y[index]!, tokens),
+      id: `y ${index}`,
       position: index === 0 ? 'left' : 'right',
       offset: index === 0 ? 0 : (index - 1) * 54,
       name: axis.label,
@@ -66,7 +68,7 @@ export function plotOption(
       axisLine: { show: false },
     })),
     series: [
-      ...series.flatMap((one) => bandOption(one, layout, tokens)),
+      ...series.flatMap((one, index) => bandOption(one, index, layout, tokens)),
       ...series.flatMap((one, index) => seriesOption(one, index, layout, tokens)),
       ...zeroLine(layout, tokens),
     ],
@@ -81,6 +83,7 @@ function zeroLine({ x, y }: PlotLayout, tokens: PlotTokens): object[] {
   return [
     {
       type: 'line',
+      id: 'zero',
       data: ends,
       showSymbol: false,
       silent: true,
@@ -120,6 +123,7 @@ function seriesOption(series: PlotSeries, index: number, layout: PlotLayout, tok
   const label = layout.labels[index];
   const line = {
     type: 'line',
+    id: `line ${index}`,
     name: series.name,
     yAxisIndex: axisIndex,
     data: points,
@@ -157,6 +161,7 @@ function seriesOption(series: PlotSeries, index: number, layout: PlotLayout, tok
   };
   const marks = (name: string, data: number[][], symbolSize: number) => ({
     type: 'scatter',
+    id: `${name} ${index}`,
     name: `${series.name} (${name})`,
     yAxisIndex: axisIndex,
     data,

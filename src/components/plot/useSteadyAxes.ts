@@ -1,4 +1,4 @@
-import { useState } from 'react';
+import { useMemo, useState } from 'react';
 import { rangeWithin } from './curveValues.ts';
 import type { PlotAxis, PlotSeries } from './plotTypes.ts';
 
@@ -11,16 +11,19 @@ type Range = readonly [number, number];
  */
 export function useSteadyAxes(figure: Figure, steady: boolean): readonly PlotAxis[] {
   const [kept, setKept] = useState<{ figure: Figure; ranges: ReadonlyMap<string, Range> } | null>(null);
-  if (!steady) {
-    if (kept !== null) setKept(null);
-    return figure.yAxes;
+  if (!steady && kept !== null) setKept(null);
+  if (steady && kept?.figure !== figure) {
+    setKept({ figure, ranges: widened(kept?.ranges ?? new Map(), figure) });
   }
-  const ranges = kept?.figure === figure ? kept.ranges : widened(kept?.ranges ?? new Map(), figure);
-  if (kept?.figure !== figure) setKept({ figure, ranges });
-  return figure.yAxes.map((axis) => {
-    const range = ranges.get(axis.label);
-    return axis.log || !range ? axis : { ...axis, include: [...(axis.include ?? []), ...range] };
-  });
+  const ranges = steady ? kept?.ranges : undefined;
+  // The same axes while the figure is the same: new ones would draw it again at every step of the pointer.
+  return useMemo(() => {
+    if (!ranges) return figure.yAxes;
+    return figure.yAxes.map((axis) => {
+      const range = ranges.get(axis.label);
+      return axis.log || !range ? axis : { ...axis, include: [...(axis.include ?? []), ...range] };
+    });
+  }, [figure.yAxes, ranges]);
 }
 
 function widened(before: ReadonlyMap<string, Range>, { series, yAxes }: Figure): Map<string, Range> {

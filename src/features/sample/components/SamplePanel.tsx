@@ -24,6 +24,7 @@ const SUBSTRATE = 'substrate';
 /** What films really are: graded interfaces, dead parts, oxides, mixtures, a slab's back face, spreads. Closed until used. */
 export function SamplePanel(props: Props) {
   const { document, edit, nameOf } = props;
+  const [open, setOpen] = useState(false);
   const [chosen, setChosen] = useState<string | null>(null);
   const used = sampleSummary(document, nameOf);
   const layers = numberedLayers(document.layers);
@@ -31,12 +32,15 @@ export function SamplePanel(props: Props) {
   const picked =
     layers.find(({ layer }) => layer.id === chosen) ?? (chosen === SUBSTRATE ? undefined : layers[0]);
   return (
-    <details className="mt-3 ml-[38px] rounded-control border border-line bg-panel px-3 py-2 text-note">
+    <details
+      onToggle={(event) => setOpen(event.currentTarget.open)}
+      className="mt-3 ml-[38px] rounded-control border border-line bg-panel px-3 py-2 text-note"
+    >
       <summary className="rounded-box">
         <span className="font-semibold">Real sample</span>{' '}
         <span className="text-muted">{used.length > 0 ? used.join(', ') : 'ideal so far'}</span>
       </summary>
-      {edit && (
+      {edit && open && (
         <div className="flex flex-col gap-2 pt-2">
           <Row label="Layer">
             <select

@@ -7,13 +7,13 @@ import { useSettled } from '../../../lib/useSettled.ts';
 import { sensitivityQuery } from '../api/sensitivity.ts';
 import { sensitivityRows } from '../model/sensitivityRows.ts';
 
-type Props = { document: StackDocument; point: WorkingPoint; unit: AngleUnit };
+type Props = { document: StackDocument; stale: boolean; point: WorkingPoint; unit: AngleUnit };
 
 /** The derivatives follow when the typing has stopped. */
 const PAUSE_MS = 300;
 
 /** What the readings hang on, the most important parameter first. */
-export function SensitivityPanel({ document, point, unit }: Props) {
+export function SensitivityPanel({ document, stale, point, unit }: Props) {
   const asked = useMemo(
     () => ({ document, points: [{ id: 'point', label: 'Working point', workingPoint: point }] }),
     [document, point],
@@ -33,7 +33,7 @@ export function SensitivityPanel({ document, point, unit }: Props) {
       </p>
     );
   }
-  const pending = isFetching || settled !== asked;
+  const pending = stale || isFetching || settled !== asked;
   const angle = (value: number | null) => (value === null ? '–' : formatAngle(value, unit));
   const number = (value: number | null) => (value === null ? '–' : formatNumber(value, { signed: true }));
   return (

@@ -18,6 +18,8 @@ import { StateStep } from './StateStep.tsx';
 
 type Props = {
   document: StackDocument;
+  /** Whether the film on the page has gone on since. */
+  stale: boolean;
   point: WorkingPoint;
   /** Name and fill of a medium on the drawing. Keep the function stable between renders. */
   describe: DescribeMedium;
@@ -44,9 +46,10 @@ export function SignalPanels(props: Props) {
   return <Panels {...props} />;
 }
 
-function Panels({ document, point, describe, heightsOf, unit, onAzimuth, onActiveLayer }: Props) {
+function Panels({ document, stale, point, describe, heightsOf, unit, onAzimuth, onActiveLayer }: Props) {
   const request = useMemo(() => explainRequest(document, point), [document, point]);
-  const { response, pending, error } = useSolved(request);
+  const { response, pending: unanswered, error } = useSolved(request);
+  const pending = stale || unanswered || error !== null;
   const film = useMemo(() => filmLayers(document, describe), [document, describe]);
   const substrate = describe(document.substrate);
   const states = useMemo(() => threeStates(response), [response]);
@@ -68,7 +71,7 @@ function Panels({ document, point, describe, heightsOf, unit, onAzimuth, onActiv
               contributions={contributions}
               film={film}
               substrateName={substrate.name}
-              pending={pending || error !== null}
+              pending={pending}
               onActiveLayer={onActiveLayer}
             />
           ) : (
@@ -86,7 +89,7 @@ function Panels({ document, point, describe, heightsOf, unit, onAzimuth, onActiv
               film={film}
               substrate={substrate}
               heightsOf={heightsOf}
-              pending={pending || error !== null}
+              pending={pending}
             />
           ) : (
             <Waiting title="Depth profile">{error ? '' : 'Solving the film'}</Waiting>
@@ -105,10 +108,10 @@ function Panels({ document, point, describe, heightsOf, unit, onAzimuth, onActiv
       </Disclosure>
       <Disclosure title="Exact values">{states && <ExactTables states={states} />}</Disclosure>
       <Disclosure title="Sensitivity">
-        <SensitivityPanel document={document} point={point} unit={unit} />
+        <SensitivityPanel document={document} stale={stale} point={point} unit={unit} />
       </Disclosure>
       <Disclosure title="Step between two magnetization states">
-        <StateStep document={document} point={point} describe={describe} unit={unit} />
+        <StateStep document={document} stale={stale} point={point} describe={describe} unit={unit} />
       </Disclosure>
     </div>
   );

@@ -9,17 +9,25 @@ import type { DescribeMedium } from '../model/filmLayers.ts';
 import { magneticStates, stepRequest, stepRows } from '../model/magneticStates.ts';
 import { printReading } from '../model/moreReadings.ts';
 
-type Props = { document: StackDocument; point: WorkingPoint; describe: DescribeMedium; unit: AngleUnit };
+type Props = {
+  document: StackDocument;
+  /** Whether the film on the page has gone on since. */
+  stale: boolean;
+  point: WorkingPoint;
+  describe: DescribeMedium;
+  unit: AngleUnit;
+};
 
 /** The step that a loop shows between two magnetization states of the film, such as one layer switched. */
-export function StateStep({ document, point, describe, unit }: Props) {
+export function StateStep({ document, stale, point, describe, unit }: Props) {
   const states = useMemo(() => magneticStates(document, describe), [document, describe]);
   const [a, setA] = useState('drawn');
   const [b, setB] = useState('reversed');
   const known = (id: string, other: string) => (states.some((state) => state.id === id) ? id : other);
   const [from, to] = [known(a, 'drawn'), known(b, 'reversed')];
   const request = useMemo(() => stepRequest(document, point, from, to), [document, point, from, to]);
-  const { response, pending, error } = useSolved(request);
+  const { response, pending: unanswered, error } = useSolved(request);
+  const pending = stale || unanswered;
   const rows = response ? stepRows(response) : [];
   const choice = (label: string, value: string, onChange: (id: string) => void) => (
     <label className="inline-flex items-center gap-1.5 text-note text-muted">

@@ -1,3 +1,4 @@
+import { memo } from 'react';
 import { useElementWidth } from '../../../components/plot/useElementWidth.ts';
 import type { Polarization } from '../../../../shared/stack.ts';
 import { formatCount } from '../../../lib/format.ts';
@@ -20,7 +21,7 @@ const FILM_LEFT = 38;
 const LENS_AT = 0.72;
 
 /** Light arriving at its true angle, and the polarization it leaves with, tilted by a stated exaggeration. */
-export function Beam({ angleDeg, input, kerr }: Props) {
+export const Beam = memo(function Beam({ angleDeg, input, kerr }: Props) {
   const [measure, width] = useElementWidth(372);
   const frame = { width, height: HEIGHT, x: (FILM_LEFT + width) / 2, surface: HEIGHT - 1 };
   const incoming = incomingRay(angleDeg, frame);
@@ -60,7 +61,7 @@ export function Beam({ angleDeg, input, kerr }: Props) {
       </svg>
     </div>
   );
-}
+});
 
 function shifted(point: Point, by: number): Point {
   return { x: point.x + by, y: point.y };

@@ -2,6 +2,7 @@ import { Link } from 'react-router-dom';
 import { formatNumber } from '../../../lib/format.ts';
 import { paths } from '../../../lib/paths.ts';
 import type { CeilingCell } from '../model/stripReadings.ts';
+import { pendingLook } from './pendingLook.ts';
 
 /** How much of the most that the magnet allows is reached, as number and bar; in words where there is no ceiling. */
 export function CeilingReading({ ceiling, pending }: { ceiling: CeilingCell | null; pending: boolean }) {
@@ -15,7 +16,7 @@ export function CeilingReading({ ceiling, pending }: { ceiling: CeilingCell | nu
         Share of the ceiling
       </Link>
       <div
-        className={`mt-0.5 truncate text-reading font-[560] tracking-[-0.02em] transition-opacity ${pending ? 'opacity-55' : ''}`}
+        className={`mt-0.5 truncate text-reading font-[560] tracking-[-0.02em] ${pending ? pendingLook : ''}`}
       >
         {percent === null ? '–' : formatNumber(percent, { digits: 3 })}
         {percent !== null && (

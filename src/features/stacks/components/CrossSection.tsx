@@ -93,7 +93,10 @@ export function CrossSection({ document, activeLayer }: Props) {
       </ol>
       <DepthTick depthNm={0} atTop />
       <Substrate
-        document={document}
+        substrate={document.substrate}
+        substrateM={document.substrateM}
+        backside={document.backside}
+        graded={document.substrateGradedNm !== undefined}
         fillAbove={fillBefore(document.layers, document.layers.length, 'transparent')}
       />
       {target && (

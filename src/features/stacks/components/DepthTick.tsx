@@ -1,7 +1,10 @@
+import { memo } from 'react';
 import { formatDepth } from '../model/depthScale.ts';
 
+type Props = { depthNm: number; atTop?: boolean };
+
 /** The depth of a face beside the drawing, at the lower edge of the row it stands in. */
-export function DepthTick({ depthNm, atTop = false }: { depthNm: number; atTop?: boolean }) {
+export const DepthTick = memo(function DepthTick({ depthNm, atTop = false }: Props) {
   return (
     <span
       aria-hidden="true"
@@ -13,4 +16,4 @@ export function DepthTick({ depthNm, atTop = false }: { depthNm: number; atTop?:
       <span className="ml-1 inline-block h-px w-1.5 bg-muted" />
     </span>
   );
-}
+});

@@ -62,7 +62,11 @@ export function FilmDrawing(props: Props) {
     <FilmContext value={film}>
       <div className="relative">
         <div className="absolute top-0 left-0">
-          <IncidentMedium document={document} point={point} />
+          <IncidentMedium
+            incident={document.incident}
+            wavelengthNm={point.wavelengthNm}
+            input={point.input}
+          />
         </div>
         <Beam angleDeg={point.angleDeg} input={point.input} kerr={kerr} />
         <span aria-hidden="true" className="absolute bottom-1.5 left-0 text-tick text-muted">

@@ -1,3 +1,4 @@
+import { useState } from 'react';
 import { Link } from 'react-router-dom';
 import type { StackDocument } from '../../../../shared/stack.ts';
 import { formatFormula } from '../../../lib/format.ts';
@@ -16,12 +17,16 @@ type Props = {
 
 /** The library materials of the film with the version that each is used in, and the newer ones that there are. */
 export function FilmMaterials({ document, materials, edit }: Props) {
+  const [open, setOpen] = useState(false);
   const used = filmVersions(document, materials);
   const older = used.filter(isOutdated).length;
   if (used.length === 0) return null;
   const take = (only: string | null) => edit?.((now) => withNewestEverywhere(now, materials, only), null);
   return (
-    <details className="mt-3 ml-[38px] rounded-control border border-line bg-panel px-3 py-2 text-note">
+    <details
+      onToggle={(event) => setOpen(event.currentTarget.open)}
+      className="mt-3 ml-[38px] rounded-control border border-line bg-panel px-3 py-2 text-note"
+    >
       <summary className="rounded-box">
         <span className="font-semibold">Materials</span>{' '}
         <span className="text-muted">
@@ -29,13 +34,15 @@ export function FilmMaterials({ document, materials, edit }: Props) {
           {older > 0 ? `, ${older} with a newer version` : ', all in the newest version'}
         </span>
       </summary>
-      <ul aria-label="Materials of the film" className="flex flex-col gap-1.5 pt-2">
-        {used.map((one) => (
-          <li key={`${one.id}@${one.version}`}>
-            <MaterialLine used={one} materials={materials} onTake={edit ? () => take(one.id) : null} />
-          </li>
-        ))}
-      </ul>
+      {open && (
+        <ul aria-label="Materials of the film" className="flex flex-col gap-1.5 pt-2">
+          {used.map((one) => (
+            <li key={`${one.id}@${one.version}`}>
+              <MaterialLine used={one} materials={materials} onTake={edit ? () => take(one.id) : null} />
+            </li>
+          ))}
+        </ul>
+      )}
       {edit && older > 1 && (
         <button
           type="button"

@@ -1,4 +1,5 @@
-import type { StackDocument, StackMedium, WorkingPoint } from '../../../../shared/stack.ts';
+import { memo } from 'react';
+import type { Polarization, StackMedium } from '../../../../shared/stack.ts';
 import { mediumName } from '../model/media.ts';
 import { withNewest } from '../model/versions.ts';
 import { useFilm } from './film.ts';
@@ -6,10 +7,11 @@ import { MediumNotes } from './MediumNotes.tsx';
 import { MediumPicker } from './MediumPicker.tsx';
 import { VersionNote } from './VersionNote.tsx';
 
+type Props = { incident: StackMedium; wavelengthNm: number; input: Polarization };
+
 /** What the light comes through, at the top of the drawing. */
-export function IncidentMedium({ document, point }: { document: StackDocument; point: WorkingPoint }) {
+export const IncidentMedium = memo(function IncidentMedium({ incident, wavelengthNm, input }: Props) {
   const { materials, edit, issues } = useFilm();
-  const { incident } = document;
   const name = mediumName(incident, materials);
   const change = (medium: StackMedium, editName: string | null) =>
     edit?.((now) => ({ ...now, incident: medium }), editName);
@@ -29,10 +31,10 @@ export function IncidentMedium({ document, point }: { document: StackDocument; p
         <span className="text-note text-muted">{name}</span>
       )}
       <p className="text-[11.5px] text-muted">
-        {String(Number(point.wavelengthNm.toPrecision(7)))} nm
+        {String(Number(wavelengthNm.toPrecision(7)))} nm
         {/* Two lines: the beam comes in close by. */}
         <br />
-        {point.input} light
+        {input} light
       </p>
       <VersionNote
         media={[incident]}
@@ -46,4 +48,4 @@ export function IncidentMedium({ document, point }: { document: StackDocument; p
       />
     </div>
   );
-}
+});

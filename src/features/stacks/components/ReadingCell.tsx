@@ -1,6 +1,7 @@
 import type { ReactNode } from 'react';
 import { Link } from 'react-router-dom';
 import { paths } from '../../../lib/paths.ts';
+import { pendingLook } from './pendingLook.ts';
 
 type Props = {
   label: string;
@@ -28,7 +29,7 @@ export function ReadingCell({ label, anchor, mark, value, unit, other, pending }
         </Link>
       </div>
       <div
-        className={`mt-0.5 truncate text-reading font-[560] tracking-[-0.02em] transition-opacity ${pending ? 'opacity-55' : ''}`}
+        className={`mt-0.5 truncate text-reading font-[560] tracking-[-0.02em] ${pending ? pendingLook : ''}`}
       >
         {value ?? '–'}
         {value !== null && unit && (

@@ -1,3 +1,4 @@
+import { memo } from 'react';
 import type { Polarization } from '../../../../shared/stack.ts';
 import { familyLooks } from '../../../components/plot/readingSeries.ts';
 import { SeriesMark } from '../../../components/plot/SeriesMark.tsx';
@@ -20,7 +21,8 @@ type Props = {
 };
 
 /** The readings at the working point, large for the input light. */
-export function ReadingsStrip({ live, input, transverse, unit, ceiling, averaged }: Props) {
+export const ReadingsStrip = memo(function ReadingsStrip(props: Props) {
+  const { live, input, transverse, unit, ceiling, averaged } = props;
   const cells = stripReadings(live.readings, input, transverse, unit);
   const spoken = cells.map(({ label, value, unit: own }) => `${label} ${value ?? 'none'} ${own}`).join(', ');
   return (
@@ -56,7 +58,7 @@ export function ReadingsStrip({ live, input, transverse, unit, ceiling, averaged
       )}
     </section>
   );
-}
+});
 
 /** Why there is no new number. Issues at a layer are shown at that layer, so one line is enough here. */
 export function SolveProblem({ error }: { error: Error }) {

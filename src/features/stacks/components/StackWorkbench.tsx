@@ -1,4 +1,4 @@
-import { useCallback, useDeferredValue, useMemo, useState } from 'react';
+import { useCallback, useMemo, useState } from 'react';
 import type { ReactNode } from 'react';
 import type { Issue } from '../../../../shared/error.ts';
 import type { MaterialSummary } from '../../../../shared/material.ts';
@@ -9,6 +9,7 @@ import { Button } from '../../../components/Button.tsx';
 import { ApiError } from '../../../lib/apiClient.ts';
 import type { AngleUnit } from '../../../lib/format.ts';
 import { useMoving } from '../../../lib/useMoving.ts';
+import { useSettled } from '../../../lib/useSettled.ts';
 import { useEditorKeys } from '../hooks/useEditorKeys.ts';
 import { useMaterials } from '../hooks/useMaterials.ts';
 import type { MaterialAt } from '../hooks/useMaterials.ts';
@@ -50,6 +51,8 @@ export type KeptSweep = {
 /** The film at its working point, for what explains its readings. */
 export type ExplainedFilm = {
   document: StackDocument;
+  /** Whether the film on the page has gone on since: what is said of it is then of an earlier state. */
+  stale: boolean;
   point: WorkingPoint;
   /** Name and fill of a medium on the drawing. */
   describe: (medium: StackMedium) => { name: string; fill: string };
@@ -72,6 +75,9 @@ export type SampledFilm = {
     onChange: (medium: StackMedium) => void;
   }) => ReactNode;
 };
+
+/** Shorter than what a person takes for slow, longer than a step of a drag. */
+const EXPLAIN_AFTER_MS = 60;
 
 type Props = {
   stack: Stack;
@@ -113,6 +119,12 @@ export function StackWorkbench({
   const vectors = useMemo(() => workingVectors(film, point.magnetization), [film, point]);
   const transverse = isTransverse(vectors);
   const averaged = addsIntensities(film);
+  const kerr = useMemo(() => kerrAngles(live.readings, point.input), [live.readings, point.input]);
+  const magnetized = vectors.some((m) => lengthOf(m) > 0);
+  const ceiling = useMemo(
+    () => ceilingCell(live.readings, magnetized, averaged),
+    [live.readings, magnetized, averaged],
+  );
   const [activeLayer, setActiveLayer] = useState<string | null>(null);
   const nameOf = (medium: StackMedium) => mediumName(medium, materials);
   const describe = useCallback(
@@ -131,19 +143,21 @@ export function StackWorkbench({
     (change: Partial<WorkingPoint>) => setView({ point: { ...point, ...change } }),
     [point, setView],
   );
-  // What explains the readings is drawn when there is time: the curve under the pointer comes first.
-  const explained = useDeferredValue(film);
+  // What explains the readings follows when the film stands still: the curve under the pointer comes first.
+  const explained = useSettled(film, EXPLAIN_AFTER_MS);
+  const stale = explained !== film;
   const panels = useMemo(
     () =>
       explanation({
         document: explained,
+        stale,
         point,
         describe,
         unit: view.unit,
         onPoint: setPoint,
         onActiveLayer: setActiveLayer,
       }),
-    [explanation, explained, point, describe, view.unit, setPoint],
+    [explanation, explained, stale, point, describe, view.unit, setPoint],
   );
   const keep = ({ axes: { axis, second, family }, problem }: { axes: PreviewAxes; problem: boolean }) => {
     const sweep = { axis, ...(second ? { second } : {}), ...(family ? { family } : {}) };
@@ -174,7 +188,7 @@ export function StackWorkbench({
             library={library}
             materialAt={materialAt}
             point={point}
-            kerr={kerrAngles(live.readings, point.input)}
+            kerr={kerr}
             rangeNm={rangeNm}
             issues={issues}
             edit={canEdit ? editor.editDocument : null}
@@ -227,11 +241,7 @@ export function StackWorkbench({
           input={point.input}
           transverse={transverse}
           unit={view.unit}
-          ceiling={ceilingCell(
-            live.readings,
-            vectors.some((m) => lengthOf(m) > 0),
-            averaged,
-          )}
+          ceiling={ceiling}
           averaged={averaged}
         />
         <div className="mt-4">

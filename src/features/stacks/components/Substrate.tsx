@@ -1,3 +1,4 @@
+import { memo } from 'react';
 import type { StackDocument, StackMedium } from '../../../../shared/stack.ts';
 import { isMagnetic, mediumClass, mediumName } from '../model/media.ts';
 import { withNewest } from '../model/versions.ts';
@@ -9,10 +10,16 @@ import { MediumPicker } from './MediumPicker.tsx';
 import { GradedBand, SlabBreak } from './SampleMarks.tsx';
 import { VersionNote } from './VersionNote.tsx';
 
+type Props = Pick<StackDocument, 'substrate' | 'substrateM' | 'backside'> & {
+  /** Whether what lies above runs out into it. */
+  graded: boolean;
+  fillAbove: string;
+};
+
 /** What the film stands on, fading out downwards; what lies behind it where it is a slab. */
-export function Substrate({ document, fillAbove }: { document: StackDocument; fillAbove: string }) {
+export const Substrate = memo(function Substrate(props: Props) {
+  const { substrate, substrateM, backside, graded, fillAbove } = props;
   const { materials, edit, issues } = useFilm();
-  const { substrate, substrateM } = document;
   const name = mediumName(substrate, materials);
   const change = (medium: StackMedium, editName: string | null) =>
     edit?.(({ substrateM: m, ...now }) => {
@@ -21,11 +28,12 @@ export function Substrate({ document, fillAbove }: { document: StackDocument; fi
     }, editName);
   const takeNewest = () =>
     edit?.((now) => {
-      const { backside } = now;
       return {
         ...now,
         substrate: withNewest(now.substrate, materials),
-        ...(backside ? { backside: { ...backside, exit: withNewest(backside.exit, materials) } } : {}),
+        ...(now.backside
+          ? { backside: { ...now.backside, exit: withNewest(now.backside.exit, materials) } }
+          : {}),
       };
     }, null);
   return (
@@ -36,7 +44,7 @@ export function Substrate({ document, fillAbove }: { document: StackDocument; fi
         ...(substrateM ? { backgroundImage: `${magnetHatch}` } : {}),
       }}
     >
-      {document.substrateGradedNm !== undefined && <GradedBand fillAbove={fillAbove} />}
+      {graded && <GradedBand fillAbove={fillAbove} />}
       <div className="flex items-center gap-1.5 px-3">
         {edit ? (
           <MediumPicker
@@ -65,7 +73,7 @@ export function Substrate({ document, fillAbove }: { document: StackDocument; fi
         )}
       </div>
       <div className="px-1 pt-1">
-        <VersionNote media={[substrate, document.backside?.exit]} onTake={edit ? takeNewest : undefined} />
+        <VersionNote media={[substrate, backside?.exit]} onTake={edit ? takeNewest : undefined} />
         <MediumNotes
           medium={substrate}
           magnetized={substrateM !== undefined && substrateM.some((part) => part !== 0)}
@@ -73,7 +81,7 @@ export function Substrate({ document, fillAbove }: { document: StackDocument; fi
           onChange={edit ? (medium) => change(medium, null) : undefined}
         />
       </div>
-      {document.backside && <SlabBreak backside={document.backside} />}
+      {backside && <SlabBreak backside={backside} />}
     </div>
   );
-}
+});

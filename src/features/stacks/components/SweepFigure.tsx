@@ -1,6 +1,6 @@
-import { useMemo } from 'react';
+import { useCallback, useMemo } from 'react';
 import type { ReadingName, SweepAxis } from '../../../../shared/run.ts';
-import type { StackDocument } from '../../../../shared/stack.ts';
+import type { StackDocument, WorkingPoint } from '../../../../shared/stack.ts';
 import { AxesPlot } from '../../../components/plot/AxesPlot.tsx';
 import type { SweptAxis } from '../../../components/plot/AxesPlot.tsx';
 import { PlotButton } from '../../../components/plot/PlotToolbar.tsx';
@@ -39,7 +39,7 @@ type Props = {
 
 /** The preview as it suits its axes: curves of several readings, a family of one reading, or a map of one. */
 export function SweepFigure(props: Props) {
-  const { title, document, materials, view, sweep, offered, shown, choices, height, onView } = props;
+  const { title, document, materials, view, sweep, offered, shown, choices, height, moving, onView } = props;
   const sweepsAngle = isAngleCurve(sweep.drawn);
   const features = useAngleFeatures(document, view.point, sweepsAngle);
   const marks = useMemo(
@@ -47,6 +47,56 @@ export function SweepFigure(props: Props) {
     [features, sweep.drawn],
   );
   const { drawn, error, pending } = sweep;
+  const layerName = drawn ? targetName(drawn.axis, document, materials) : undefined;
+  const pick = useCallback(
+    (x: number) => {
+      if (drawn) onView({ point: picked(drawn.axis, x, view.point) });
+    },
+    [drawn, view.point, onView],
+  );
+  const marker = drawn ? markerOf(drawn.axis, document, view.point) : undefined;
+  // Made anew when there is something to draw, not at every step of a pointer that moves the film.
+  const curves = useMemo(
+    () =>
+      drawn && (
+        <ReadingPlot
+          axis={drawn.axis}
+          layerName={layerName}
+          grid={drawn.grid}
+          columns={drawn.columns}
+          readings={drawn.readings}
+          unit={view.unit}
+          log={view.log}
+          height={height}
+          steady={moving}
+          marks={marks}
+          marker={marker}
+          onPickX={isPointAxis(drawn.axis) ? pick : undefined}
+          fileName={`${title} ${drawn.axis.kind}`}
+          controls={<FamilyControls families={offered} shown={shown} onChange={onView} />}
+          downloads={
+            <PlotButton label="Download the values as CSV" onClick={() => saveCsv(title, drawn)}>
+              CSV
+            </PlotButton>
+          }
+        />
+      ),
+    [
+      drawn,
+      layerName,
+      view.unit,
+      view.log,
+      height,
+      moving,
+      marks,
+      marker,
+      pick,
+      title,
+      offered,
+      shown,
+      onView,
+    ],
+  );
   if (drawn === null) {
     return (
       <div
@@ -61,7 +111,6 @@ export function SweepFigure(props: Props) {
   const { axis, grid, columns } = drawn;
   const swept = (one: Sweep['second']): SweptAxis | null =>
     one ? { ...one, layerName: targetName(one.axis, document, materials) } : null;
-  const marker = markerOf(axis, document, view);
   const [reading] = drawn.readings;
   const values = reading && columns[reading];
   const several = drawn.second !== undefined || drawn.family !== undefined;
@@ -69,7 +118,7 @@ export function SweepFigure(props: Props) {
     <div className={`transition-opacity ${error ? 'opacity-45' : ''}`} aria-busy={pending}>
       {several && reading && values ? (
         <AxesPlot
-          x={{ axis, grid, layerName: targetName(axis, document, materials) }}
+          x={{ axis, grid, layerName }}
           second={swept(drawn.second)}
           family={swept(drawn.family)}
           member={0}
@@ -80,7 +129,7 @@ export function SweepFigure(props: Props) {
           height={height}
           marker={{
             x: marker ?? null,
-            y: drawn.second ? (markerOf(drawn.second.axis, document, view) ?? null) : null,
+            y: drawn.second ? (markerOf(drawn.second.axis, document, view.point) ?? null) : null,
           }}
           fileName={`${title} ${axis.kind}`}
           controls={
@@ -92,27 +141,7 @@ export function SweepFigure(props: Props) {
           }
         />
       ) : (
-        <ReadingPlot
-          axis={axis}
-          layerName={targetName(axis, document, materials)}
-          grid={grid}
-          columns={columns}
-          readings={drawn.readings}
-          unit={view.unit}
-          log={view.log}
-          height={height}
-          steady={props.moving}
-          marks={marks}
-          marker={marker}
-          onPickX={isPointAxis(axis) ? (x) => onView(picked(axis, x, view)) : undefined}
-          fileName={`${title} ${axis.kind}`}
-          controls={<FamilyControls families={offered} shown={shown} onChange={onView} />}
-          downloads={
-            <PlotButton label="Download the values as CSV" onClick={() => saveCsv(title, drawn)}>
-              CSV
-            </PlotButton>
-          }
-        />
+        curves
       )}
       {sweepsAngle && <AngleMarks marks={marks} />}
     </div>
@@ -129,12 +158,12 @@ function isPointAxis({ kind }: SweepAxis): boolean {
   return kind === 'wavelength' || kind === 'angle';
 }
 
-function markerOf(axis: SweepAxis, document: StackDocument, view: ViewState): number | undefined {
+function markerOf(axis: SweepAxis, document: StackDocument, point: WorkingPoint): number | undefined {
   switch (axis.kind) {
     case 'wavelength':
-      return view.point.wavelengthNm;
+      return point.wavelengthNm;
     case 'angle':
-      return view.point.angleDeg;
+      return point.angleDeg;
     case 'thickness': {
       const layer = findItem(document.layers, axis.layerId);
       return layer && !isBlock(layer) ? layer.thicknessNm : undefined;
@@ -156,14 +185,9 @@ function markerOf(axis: SweepAxis, document: StackDocument, view: ViewState): nu
 }
 
 /** The working point moved to where the plot was clicked, in steps that can be read. */
-function picked(axis: SweepAxis, x: number, view: ViewState): Partial<ViewState> {
+function picked(axis: SweepAxis, x: number, point: WorkingPoint): WorkingPoint {
   const rounded = Number(x.toFixed(Math.abs(axis.to - axis.from) < 10 ? 3 : 1));
-  return {
-    point:
-      axis.kind === 'wavelength'
-        ? { ...view.point, wavelengthNm: rounded }
-        : { ...view.point, angleDeg: rounded },
-  };
+  return axis.kind === 'wavelength' ? { ...point, wavelengthNm: rounded } : { ...point, angleDeg: rounded };
 }
 
 const unitEndings = {

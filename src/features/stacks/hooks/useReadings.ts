@@ -19,7 +19,10 @@ export type LiveReadings = {
 export function useReadings(document: StackDocument, point: WorkingPoint): LiveReadings {
   const question = useMemo(() => pointRequest(document, point), [document, point]);
   const { answer, pending, error } = useLatest(question, solvePoint);
-  return { readings: answer?.readings ?? null, pending, error, warnings: answer?.warnings ?? noWarnings };
+  return useMemo(
+    () => ({ readings: answer?.readings ?? null, pending, error, warnings: answer?.warnings ?? noWarnings }),
+    [answer, pending, error],
+  );
 }
 
 const noWarnings: readonly SolveWarning[] = [];
