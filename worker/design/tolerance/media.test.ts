@@ -76,7 +76,7 @@ test('a layer that has oxidized through has a derivative to one side only', () =
   const { derivative } = found.find(({ of }) => of === 'al')!;
   const thicker = buildFilm();
   const at = (shift: number) => {
-    thicker.layers[1] = { ...buildFilm().layers[1]!, thicknessNm: 2 + shift } as StackDocument['layers'][0];
+    thicker.layers[1] = { ...buildFilm().layers[1]!, thicknessNm: 2 + shift };
     return solved(thicker).reflectance;
   };
   const h = 1e-3;
