@@ -1,8 +1,11 @@
 import AxeBuilder from '@axe-core/playwright';
 import { afterAll, beforeAll, describe, expect, it } from 'vitest';
 import type { Page } from 'playwright-core';
-import { demoGroupId, demoRunId, demoStack } from './demo.ts';
+import { makeDecisions } from './decisions.ts';
+import type { Decisions } from './decisions.ts';
+import { ask, demoGroupId, demoRunId, demoStack } from './demo.ts';
 import { DEMO_LINK_TOKEN } from '../../server/seeders/demoData.ts';
+import { runSchema } from '../../shared/run.ts';
 import { startSite } from './site.ts';
 import type { Site } from './site.ts';
 import type { Visitor } from './visitor.ts';
@@ -24,7 +27,7 @@ type Screen = {
 let site: Site;
 let member: Visitor;
 let stranger: Visitor;
-let ids: { group: string; stack: string; run: string };
+let ids: { group: string; stack: string; run: string; rerun: string } & Decisions;
 
 beforeAll(async () => {
   site = await startSite();
@@ -36,7 +39,8 @@ beforeAll(async () => {
     await demoStack(context, 'Pt/Co/Pt'),
     await demoRunId(context),
   ];
-  ids = { group, stack: stack.id, run };
+  const { id: rerun } = await ask(context, `/runs/${run}/rerun`, runSchema, {});
+  ids = { group, stack: stack.id, run, rerun, ...(await makeDecisions(context)) };
 });
 
 afterAll(async () => site?.stop());
@@ -52,6 +56,24 @@ const screens: Screen[] = [
   { name: 'run', address: '/runs/:run', landmark: 'Values at angle 30°' },
   { name: 'share', address: `/share/${DEMO_LINK_TOKEN}`, landmark: 'Values at angle 30°', open: true },
   { name: 'share that never was', address: '/share/none', landmark: 'There is no such link', open: true },
+  { name: 'compared runs', address: '/groups/:group/compare?runs=:run,:rerun', landmark: 'Root mean square' },
+  { name: 'one run to compare', address: '/groups/:group/compare?runs=:run', landmark: 'Two to six runs' },
+  { name: 'designs', address: '/groups/:group/designs', landmark: 'Sensitivity and tolerance' },
+  ...['cap', 'optimise', 'tolerance'].map((kind) => ({
+    name: `new design (${kind})`,
+    address: `/groups/:group/designs/new?kind=${kind}&stack=:stack`,
+    landmark: 'With several, the demands hold at each',
+  })),
+  { name: 'cap chooser', address: '/designs/:cap', landmark: 'Candidates in order' },
+  { name: 'optimisation', address: '/designs/:search', landmark: 'Path of the search' },
+  { name: 'tolerance', address: '/designs/:spread', landmark: 'Spread of the readings' },
+  { name: 'studies', address: '/groups/:group/studies', landmark: 'Every item of a study' },
+  { name: 'study', address: '/studies/:study', landmark: 'Values at angle 30°' },
+  { name: 'new card', address: '/groups/:group/cards/new?stack=:stack', landmark: 'Deposition rates' },
+  { name: 'card', address: '/cards/:card', landmark: 'Predicted readings' },
+  { name: 'shared design', address: '/share/:capLink', landmark: 'Candidates in order', open: true },
+  { name: 'shared study', address: '/share/:studyLink', landmark: 'Values at angle 30°', open: true },
+  { name: 'shared card', address: '/share/:cardLink', landmark: 'Predicted readings', open: true },
   { name: 'materials', address: '/groups/:group/materials', landmark: 'Titanium nitride' },
   { name: 'import', address: '/groups/:group/materials/import', landmark: 'At most 20 MB' },
   { name: 'material', address: '/materials/fe-johnson-1974', landmark: 'Where Q comes from' },
