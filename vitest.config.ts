@@ -16,7 +16,8 @@ export default defineConfig({
       {
         test: {
           name: 'client',
-          environment: 'jsdom',
+          // Tests of components begin with a line that asks for jsdom; models need no page.
+          environment: 'node',
           include: ['src/**/*.test.{ts,tsx}'],
           testTimeout: 20_000,
         },

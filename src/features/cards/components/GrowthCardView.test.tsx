@@ -1,3 +1,4 @@
+// @vitest-environment jsdom
 import { cleanup, render, screen, within } from '@testing-library/react';
 import { afterEach, expect, it } from 'vitest';
 import { cardLayerCells, cardReadingCells } from '../../../../shared/cardWords.ts';

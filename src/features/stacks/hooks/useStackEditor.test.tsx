@@ -1,3 +1,4 @@
+// @vitest-environment jsdom
 import { QueryClientProvider, useQuery } from '@tanstack/react-query';
 import { act, cleanup, renderHook, waitFor } from '@testing-library/react';
 import type { ReactNode } from 'react';

@@ -1,3 +1,4 @@
+// @vitest-environment jsdom
 import { beforeEach, describe, expect, it } from 'vitest';
 import { loadDraft, sameDraft, storeDraft } from './draft.ts';
 import { buildDocument } from './stackFixtures.ts';
