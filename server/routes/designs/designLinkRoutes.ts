@@ -1,11 +1,11 @@
 import { createdLinkSchema, createLinkSchema, linkListSchema } from '../../../shared/link.ts';
 import type { AppDependencies } from '../../dependencies.ts';
 import { changeRun } from '../../policies/run.ts';
-import { presentCreatedLink, presentLink } from '../../presenters/presentLink.ts';
 import type { Route } from '../../routing/route.ts';
 import { route } from '../../routing/route.ts';
 import { loadDesign } from '../../services/designs.ts';
-import { createLink, listLinks, shareableRun } from '../../services/links.ts';
+import { shareableRun } from '../../services/links.ts';
+import { answerLinks, answerNewLink } from '../links/linkAnswers.ts';
 
 const load = ({ dependencies, params }: { dependencies: AppDependencies; params: { designId: string } }) =>
   loadDesign(dependencies.models, params.designId);
@@ -18,10 +18,7 @@ const listLinksOfDesign = route({
   policy: changeRun,
   load,
   answer: { status: 200, schema: linkListSchema },
-  async handler({ dependencies, subject }) {
-    const links = await listLinks(dependencies.models, { runId: subject.id });
-    return { links: links.map(presentLink) };
-  },
+  handler: ({ dependencies, subject }) => answerLinks(dependencies, { runId: subject.id }),
 });
 
 const createLinkForDesign = route({
@@ -33,12 +30,8 @@ const createLinkForDesign = route({
   body: createLinkSchema,
   load,
   answer: { status: 201, schema: createdLinkSchema },
-  async handler({ dependencies, actor, subject, body }) {
-    const expiresAt = body.expiresAt ? new Date(body.expiresAt) : null;
-    const wanted = { label: body.label, expiresAt };
-    const { link, token } = await createLink(dependencies.models, actor, shareableRun(subject), wanted);
-    return presentCreatedLink(link, token, dependencies.publicUrl());
-  },
+  handler: ({ dependencies, actor, subject, body }) =>
+    answerNewLink(dependencies, actor, shareableRun(subject), body),
 });
 
 export const designLinkRoutes: Route[] = [listLinksOfDesign, createLinkForDesign];

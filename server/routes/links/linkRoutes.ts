@@ -2,11 +2,11 @@ import { createdLinkSchema, createLinkSchema, linkListSchema } from '../../../sh
 import { manageGroup } from '../../policies/group.ts';
 import { changeRun } from '../../policies/run.ts';
 import { revokeLink as mayRevoke } from '../../policies/shareLink.ts';
-import { presentCreatedLink, presentLink } from '../../presenters/presentLink.ts';
 import type { Route } from '../../routing/route.ts';
 import { route } from '../../routing/route.ts';
-import { createLink, listLinks, revokeLink, shareableRun } from '../../services/links.ts';
+import { revokeLink, shareableRun } from '../../services/links.ts';
 import { loadRun } from '../../services/runs.ts';
+import { answerLinks, answerNewLink } from './linkAnswers.ts';
 
 const listLinksOfGroup = route({
   method: 'get',
@@ -16,10 +16,7 @@ const listLinksOfGroup = route({
   policy: manageGroup,
   load: ({ dependencies, params }) => dependencies.models.Group.findByPk(params.groupId),
   answer: { status: 200, schema: linkListSchema },
-  async handler({ dependencies, subject }) {
-    const links = await listLinks(dependencies.models, { groupId: subject.id });
-    return { links: links.map(presentLink) };
-  },
+  handler: ({ dependencies, subject }) => answerLinks(dependencies, { groupId: subject.id }),
 });
 
 const listLinksOfRun = route({
@@ -30,10 +27,7 @@ const listLinksOfRun = route({
   policy: changeRun,
   load: ({ dependencies, params }) => loadRun(dependencies.models, params.runId),
   answer: { status: 200, schema: linkListSchema },
-  async handler({ dependencies, subject }) {
-    const links = await listLinks(dependencies.models, { runId: subject.id });
-    return { links: links.map(presentLink) };
-  },
+  handler: ({ dependencies, subject }) => answerLinks(dependencies, { runId: subject.id }),
 });
 
 const createLinkForRun = route({
@@ -45,12 +39,8 @@ const createLinkForRun = route({
   body: createLinkSchema,
   load: ({ dependencies, params }) => loadRun(dependencies.models, params.runId),
   answer: { status: 201, schema: createdLinkSchema },
-  async handler({ dependencies, actor, subject, body }) {
-    const expiresAt = body.expiresAt ? new Date(body.expiresAt) : null;
-    const wanted = { label: body.label, expiresAt };
-    const { link, token } = await createLink(dependencies.models, actor, shareableRun(subject), wanted);
-    return presentCreatedLink(link, token, dependencies.publicUrl());
-  },
+  handler: ({ dependencies, actor, subject, body }) =>
+    answerNewLink(dependencies, actor, shareableRun(subject), body),
 });
 
 const removeLink = route({

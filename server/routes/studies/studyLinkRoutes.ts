@@ -1,10 +1,10 @@
 import { createdLinkSchema, createLinkSchema, linkListSchema } from '../../../shared/link.ts';
 import type { AppDependencies } from '../../dependencies.ts';
 import { changeStudy } from '../../policies/study.ts';
-import { presentCreatedLink, presentLink } from '../../presenters/presentLink.ts';
 import type { Route } from '../../routing/route.ts';
 import { route } from '../../routing/route.ts';
-import { createLink, listLinks, shareableStudy } from '../../services/links.ts';
+import { shareableStudy } from '../../services/links.ts';
+import { answerLinks, answerNewLink } from '../links/linkAnswers.ts';
 
 const load = ({ dependencies, params }: { dependencies: AppDependencies; params: { studyId: string } }) =>
   dependencies.models.Study.findByPk(params.studyId);
@@ -17,10 +17,7 @@ const listLinksOfStudy = route({
   policy: changeStudy,
   load,
   answer: { status: 200, schema: linkListSchema },
-  async handler({ dependencies, params }) {
-    const links = await listLinks(dependencies.models, { studyId: params.studyId });
-    return { links: links.map(presentLink) };
-  },
+  handler: ({ dependencies, params }) => answerLinks(dependencies, { studyId: params.studyId }),
 });
 
 const createLinkForStudy = route({
@@ -33,12 +30,8 @@ const createLinkForStudy = route({
   body: createLinkSchema,
   load,
   answer: { status: 201, schema: createdLinkSchema },
-  async handler({ dependencies, actor, subject, body }) {
-    const expiresAt = body.expiresAt ? new Date(body.expiresAt) : null;
-    const wanted = { label: body.label, expiresAt };
-    const { link, token } = await createLink(dependencies.models, actor, shareableStudy(subject), wanted);
-    return presentCreatedLink(link, token, dependencies.publicUrl());
-  },
+  handler: ({ dependencies, actor, subject, body }) =>
+    answerNewLink(dependencies, actor, shareableStudy(subject), body),
 });
 
 export const studyLinkRoutes: Route[] = [listLinksOfStudy, createLinkForStudy];
