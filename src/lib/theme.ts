@@ -21,9 +21,16 @@ function currentTheme(): Theme {
   return systemDark?.matches ? 'dark' : 'light';
 }
 
+/**
+ * On screen now. Only `applyTheme` asks the system: whoever reads a media query between its change and the event that
+ * tells of it (a render may) takes that event away from the listener, and half the page keeps the other colours.
+ */
+let shown: Theme = currentTheme();
+
 /** Writes the theme where tokens.css reads it. Called once at the start and at every change. */
 export function applyTheme(): void {
-  document.documentElement.dataset['theme'] = currentTheme();
+  shown = currentTheme();
+  document.documentElement.dataset['theme'] = shown;
   listeners.forEach((listener) => listener());
 }
 
@@ -46,7 +53,7 @@ window.addEventListener('storage', (event) => {
 
 /** The theme on screen; a component that draws with resolved colours redraws when it changes. */
 export function useTheme(): Theme {
-  return useSyncExternalStore(subscribe, currentTheme);
+  return useSyncExternalStore(subscribe, () => shown);
 }
 
 /** What the person chose, which may be to follow the system. */
