@@ -62,6 +62,7 @@ export const optimiseDesignSchema = strictObject({
 });
 
 const thicknesses = z.array(z.number());
+const points = z.array(z.object({ pointId: z.string(), readings: pointReadingsSchema }));
 
 export const optimiseResultSchema = z.object({
   kind: z.literal('optimise'),
@@ -71,7 +72,8 @@ export const optimiseResultSchema = z.object({
   best: z.object({
     thicknessesNm: thicknesses,
     value: z.number().nullable(),
-    points: z.array(z.object({ pointId: z.string(), readings: pointReadingsSchema })),
+    /** Empty in an answer that is not finished. */
+    points,
     /** Layers whose thickness ended at a bound. */
     atBounds: z.array(z.string()),
   }),
@@ -85,12 +87,24 @@ export const optimiseResultSchema = z.object({
     }),
   ),
   evaluations: z.int(),
-  ended: z.enum(['converged', 'budget']),
-  /** Ordered by the first goal; null without a second. */
-  pareto: z.array(z.object({ thicknessesNm: thicknesses, first: z.number(), second: z.number() })).nullable(),
+  /** `unfinished`: what was found so far by a search that goes on, or that was stopped before its end. */
+  ended: z.enum(['converged', 'budget', 'unfinished']),
+  /** Ordered by the first goal; null without a second. The first film is the best one. */
+  pareto: z
+    .array(
+      z.object({
+        thicknessesNm: thicknesses,
+        first: z.number(),
+        second: z.number(),
+        /** Left out in answers that are not finished, and in those stored before readings of each film were kept. */
+        points: points.optional(),
+      }),
+    )
+    .nullable(),
   seed: z.int(),
 });
 
 export type Goal = z.infer<typeof goalSchema>;
 export type OptimiseDesign = z.infer<typeof optimiseDesignSchema>;
+export type ParetoFilm = NonNullable<z.infer<typeof optimiseResultSchema>['pareto']>[number];
 export type OptimiseResult = z.infer<typeof optimiseResultSchema>;

@@ -114,6 +114,8 @@ describe('an optimisation', () => {
     expect(third!.path.slice(0, lasting.length)).toEqual(lasting);
     expect(third!.evaluations).toBeGreaterThan(first!.evaluations);
     expect(third!.pareto!.length).toBeGreaterThan(0);
+    expect(third!.pareto![0]!.first).toBe(third!.best.value);
+    expect([third!.ended, third!.best.points]).toEqual(['unfinished', []]);
     await new Promise((resolve) => setTimeout(resolve, 300));
     expect(partial).toHaveLength(3);
   });

@@ -18,10 +18,10 @@ export type DesignStep =
       bare: (number | null)[];
     }
   | { kind: 'tolerance samples'; from: number; to: number; samples: SharedArrayBuffer }
-  | { kind: 'tolerance outcome'; samples: SharedArrayBuffer }
+  | { kind: 'tolerance outcome' | 'tolerance bands'; samples: SharedArrayBuffer }
   /** Thicknesses of the variables of each film. */
-  | { kind: 'optimise films'; nm: number[][] }
-  | { kind: 'optimise start' | 'optimise readings'; nm: number[] };
+  | { kind: 'optimise films' | 'optimise readings'; nm: number[][] }
+  | { kind: 'optimise start'; nm: number[] };
 
 /** What a thread needs for one step; the buffers are shared, not copied. */
 export type DesignTask = {

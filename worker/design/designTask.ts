@@ -6,7 +6,7 @@ import type { ToleranceDesign } from '../../shared/toleranceDesign.ts';
 import type { DesignStep, DesignTask, DesignWork } from './designInput.ts';
 import type { Film } from './optimise/film.ts';
 import { OptimiseFilms } from './optimise/optimiseFilms.ts';
-import { toleranceOutcome } from './tolerance/toleranceOutcome.ts';
+import { bandsOutcome, toleranceOutcome } from './tolerance/toleranceOutcome.ts';
 import { ToleranceFilms, ToleranceSamples } from './tolerance/toleranceSamples.ts';
 
 /** What a thread keeps of the calculation that it last took a step of. */
@@ -59,7 +59,7 @@ function takeStep(mine: Kept, step: DesignStep, flags: Int32Array): unknown {
     case 'optimise start':
       return optimisedOf(mine).evaluate(step.nm);
     case 'optimise readings':
-      return optimisedOf(mine).readings(step.nm);
+      return step.nm.map((nm) => optimisedOf(mine).readings(nm));
     case 'tolerance samples': {
       const design = toleranceOf(mine.work);
       mine.films ??= new ToleranceFilms(design, mine.work.materials);
@@ -70,9 +70,11 @@ function takeStep(mine: Kept, step: DesignStep, flags: Int32Array): unknown {
       }
       return null;
     }
-    case 'tolerance outcome': {
+    case 'tolerance outcome':
+    case 'tolerance bands': {
       const design = toleranceOf(mine.work);
-      return toleranceOutcome(design, mine.work.materials, new ToleranceSamples(design, step.samples));
+      const outcome = step.kind === 'tolerance bands' ? bandsOutcome : toleranceOutcome;
+      return outcome(design, mine.work.materials, new ToleranceSamples(design, step.samples));
     }
   }
 }

@@ -1,15 +1,15 @@
 import type { OptimiseDesign, OptimiseResult } from '../../../shared/optimiseDesign.ts';
+import { layersAtBounds } from '../../../shared/atBounds.ts';
 import { optimiseTotal } from './effort.ts';
 import type { Film } from './film.ts';
-import { isBetter, valueOf } from './film.ts';
+import { bestOf, isBetter, valueOf } from './film.ts';
 import { paretoFront } from './front.ts';
 
 type Phase = OptimiseResult['path'][number]['phase'];
+type FilmPoints = OptimiseResult['best']['points'];
 
 /** A path has about this many entries at the most; of a crowd the last one stays. */
 const PATH_ENTRIES = 400;
-/** A thickness this near to a bound is at it, nm. */
-const AT_BOUND_NM = 1e-3;
 
 /** The course of a search, and what its result is at any time. */
 export class BestSoFar {
@@ -54,19 +54,25 @@ export class BestSoFar {
     this.#path.push({ phase, evaluations: this.evaluations, value, thicknessesNm: film.nm });
   }
 
-  result(
-    ended: OptimiseResult['ended'],
-    best: Film,
-    points: OptimiseResult['best']['points'],
-  ): OptimiseResult {
+  /** The films that a result shows: the front of two goals, else the best film. */
+  shown(): Film[] {
+    const front = this.#design.second ? this.#front() : [];
+    return front.length > 0 ? front : [bestOf(this.#all(), 0)];
+  }
+
+  #front(): Film[] {
+    return paretoFront(this.#all());
+  }
+
+  /** In a local search the best film is not among the others yet. */
+  #all(): readonly Film[] {
+    return this.#best ? [...this.films, this.#best] : this.films;
+  }
+
+  /** @param points the readings of the films that are shown, as far as they are known */
+  result(ended: OptimiseResult['ended'], points: ReadonlyMap<Film, FilmPoints>): OptimiseResult {
     const { goal, second, variables, seed } = this.#design;
-    const pareto = second
-      ? paretoFront(this.films).map((film) => ({
-          thicknessesNm: film.nm,
-          first: valueOf(goal, film, 0)!,
-          second: valueOf(second, film, 1)!,
-        }))
-      : null;
+    const best = this.shown()[0]!;
     return {
       kind: 'optimise',
       layerIds: variables.map(({ layerId }) => layerId),
@@ -74,21 +80,29 @@ export class BestSoFar {
       best: {
         thicknessesNm: best.nm,
         value: valueOf(goal, best, 0),
-        points,
-        atBounds: variables
-          .filter(({ fromNm, toNm }, i) => Math.min(best.nm[i]! - fromNm, toNm - best.nm[i]!) <= AT_BOUND_NM)
-          .map(({ layerId }) => layerId),
+        points: points.get(best) ?? [],
+        atBounds: layersAtBounds(variables, best.nm),
       },
       path: [...this.#path],
       evaluations: this.evaluations,
       ended,
-      pareto,
+      pareto: second
+        ? this.#front().map((film) => {
+            const found = points.get(film);
+            return {
+              thicknessesNm: film.nm,
+              first: valueOf(goal, film, 0)!,
+              second: valueOf(second, film, 1)!,
+              ...(found ? { points: found } : {}),
+            };
+          })
+        : null,
       seed,
     };
   }
 
-  /** What there is to show before the end; the readings of the best film come with the result. */
+  /** What there is to show before the end; readings come with the result. */
   soFar(): OptimiseResult | null {
-    return this.#best && this.result('budget', this.#best, []);
+    return this.#best && this.result('unfinished', new Map());
   }
 }

@@ -21,6 +21,8 @@ export class OptimiseFilms {
   readonly #materials: ReadonlyMap<string, ResolvableMaterial>;
   /** By working point, with what the goals need only. */
   readonly #solvers: FilmSolver[];
+  /** ... and with every reading, made when the first film is read. */
+  #readers: FilmSolver[] | null = null;
 
   /** @throws ResolutionError when a material is not known at a working point */
   constructor(design: OptimiseDesign, materials: readonly ResolvableMaterial[]) {
@@ -62,7 +64,8 @@ export class OptimiseFilms {
   /** Every reading of one film, by working point. */
   readings(nm: readonly number[]): PointReadings[] {
     const change = this.#changeTo(nm);
-    return this.#solversWith({ contrast: true, ceiling: true }).map((solver) => solver.readings(change));
+    this.#readers ??= this.#solversWith({ contrast: true, ceiling: true });
+    return this.#readers.map((solver) => solver.readings(change));
   }
 
   #solversWith(wanted: { contrast: boolean; ceiling: boolean }): FilmSolver[] {

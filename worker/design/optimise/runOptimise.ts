@@ -10,7 +10,6 @@ import { checkOptimise } from './checkOptimise.ts';
 import { budgetOf, globalTotal } from './effort.ts';
 import type { EvaluateFilms, Film } from './film.ts';
 import { bestOf, isBetter } from './film.ts';
-import { paretoFront } from './front.ts';
 import { searchGlobally } from './globalSearch.ts';
 import type { LocalOptimum } from './localSearch.ts';
 import { searchLocally } from './localSearch.ts';
@@ -75,12 +74,34 @@ export async function runOptimise(
   const isRefined = await refine(design, search, evaluate, course, tell);
   course.endPhase('local');
 
-  const best = (second ? paretoFront(course.films)[0] : undefined) ?? bestOf(course.films, 0);
-  // Given by designTask.ts for this kind of step.
-  const readings = (await threads.run({ kind: 'optimise readings', nm: best.nm })) as PointReadings[];
-  const points = design.points.map(({ id }, i) => ({ pointId: id, readings: readings[i]! }));
-  const isConverged = search.isSettled && isRefined && best.violation === 0;
-  return course.result(isConverged ? 'converged' : 'budget', best, points);
+  const films = course.shown();
+  const points = await readFilms(design, films, threads);
+  const isConverged = search.isSettled && isRefined && films[0]!.violation === 0;
+  return course.result(isConverged ? 'converged' : 'budget', points);
+}
+
+/** Every reading of each film at each working point, over all threads. */
+async function readFilms(
+  { points }: OptimiseDesign,
+  films: readonly Film[],
+  threads: DesignThreads,
+): Promise<Map<Film, OptimiseResult['best']['points']>> {
+  const pieces = piecesOf(films.length, Math.max(LEAST_PER_STEP, Math.ceil(films.length / threads.count)));
+  const answers = await threads.runAll(
+    pieces.map(({ from, to }) => ({
+      kind: 'optimise readings',
+      nm: films.slice(from, to).map(({ nm }) => nm),
+    })),
+  );
+  // Given by designTask.ts for this kind of step; nothing comes back once the calculation was cancelled.
+  const readings = (answers as (PointReadings[][] | undefined)[]).flatMap((one) => one ?? []);
+  if (readings.length < films.length) throw new ComputeError('cancelled', 'The calculation was cancelled.');
+  return new Map(
+    films.map((film, i) => [
+      film,
+      points.map(({ id }, point) => ({ pointId: id, readings: readings[i]![point]! })),
+    ]),
+  );
 }
 
 /** Local searches for each goal, one after the other; whether the best of each ended in a point. */
