@@ -1,11 +1,10 @@
 import type { DesignResult } from '../../shared/design.ts';
-import { designResultSchema } from '../../shared/design.ts';
 import type { ResolvableMaterial } from '../../worker/dispersion/resolveCase.ts';
 import type { ComputePool } from '../../worker/pool.ts';
 import type { PartialResult } from '../../worker/sweep/runSweep.ts';
 import type { Run } from '../models/run.ts';
 import { isDesignRun, isSweepRun } from '../models/run.ts';
-import { jsonPieces, resultPieces } from './resultPieces.ts';
+import { bytePieces, designBytes, resultPieces } from './resultPieces.ts';
 
 /** What a host is told while it computes. */
 export type ComputeWatch = {
@@ -34,9 +33,8 @@ export async function computeRun(
   if (isDesignRun(run)) {
     const { design } = run.input;
     const { result, seconds } = await pool.design({ design, materials }, { ...watch, onPartial });
-    // A number that is none would be stored as null and could not be read again.
-    const bytes = Buffer.from(JSON.stringify(designResultSchema.parse(result)), 'utf8');
-    return { seconds, bytes: bytes.length, pieces: () => jsonPieces(bytes) };
+    const bytes = designBytes(result);
+    return { seconds, bytes: bytes.length, pieces: () => bytePieces(bytes) };
   }
   if (!isSweepRun(run)) throw new Error('Nobody knows how to compute this kind of run.');
   const result = await pool.sweep({ ...run.input, materials }, { ...watch, onStart });

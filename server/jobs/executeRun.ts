@@ -1,4 +1,5 @@
 import type { Logger } from 'pino';
+import type { DesignResult } from '../../shared/design.ts';
 import type { ComputePool } from '../../worker/pool.ts';
 import { ComputeError } from '../../worker/sweep/computeError.ts';
 import { Refusal } from '../errors.ts';
@@ -9,6 +10,7 @@ import { loadRunMaterials } from '../services/runMaterials.ts';
 import { computeRun } from './computeRun.ts';
 import type { ComputedRun, ComputeWatch } from './computeRun.ts';
 import { releaseMemory } from '../../worker/releaseMemory.ts';
+import { designBytes } from './resultPieces.ts';
 import type { RunLease } from './runLease.ts';
 import type { RunQueue } from './runQueue.ts';
 import { retryWhileAway } from './retryWhileAway.ts';
@@ -40,15 +42,24 @@ export async function executeRun(
   const { logger, queue } = dependencies;
   const log = logger.child({ runId: lease.runId });
   let storedBytes = 0;
+  let found: DesignResult | null = null;
+  const bytesFound = () => found && designBytes(found);
+  const onPartial = (soFar: DesignResult) => {
+    found = soFar;
+    watch.onPartial(soFar);
+  };
   try {
-    const outcome = await compute(lease, dependencies, stopping, watch);
+    const outcome = await compute(lease, dependencies, stopping, { ...watch, onPartial });
     switch (outcome.kind) {
-      case 'stopped':
+      case 'stopped': {
+        const kept = bytesFound();
         if (stopping.signal.reason !== LOST) await lease.giveBack(queue);
+        else if (kept) await lease.keep(kept);
         log.info({ reason: String(stopping.signal.reason) }, 'A run was stopped');
         break;
+      }
       case 'failed':
-        await retryWhileAway(() => lease.fail(outcome.error), stopping.signal);
+        await retryWhileAway(() => lease.fail(outcome.error, bytesFound()), stopping.signal);
         log.warn({ error: outcome.error }, 'A run failed');
         break;
       case 'solved': {

@@ -1,3 +1,5 @@
+import type { DesignResult } from '../../shared/design.ts';
+import { designResultSchema } from '../../shared/design.ts';
 import { describeResult, encodeResultHeader } from '../../shared/resultFormat.ts';
 import { SOLVER_VERSION } from '../../worker/optics/version.ts';
 import type { SweepResult } from '../../worker/sweep/runSweep.ts';
@@ -34,8 +36,17 @@ export function* resultPieces(
   if (bytes > 0) yield joined(waiting);
 }
 
-/** The answer to a design question, JSON in UTF-8, cut into rows. */
-export function* jsonPieces(bytes: Buffer): Generator<Buffer> {
+/**
+ * The answer to a design question as JSON in UTF-8.
+ *
+ * @throws ZodError where a number is none: it would be stored as null and could not be read again
+ */
+export function designBytes(result: DesignResult): Buffer {
+  return Buffer.from(JSON.stringify(designResultSchema.parse(result)), 'utf8');
+}
+
+/** Bytes cut into rows. */
+export function* bytePieces(bytes: Buffer): Generator<Buffer> {
   for (let start = 0; start < bytes.length; start += PIECE_BYTES) {
     yield bytes.subarray(start, start + PIECE_BYTES);
   }

@@ -5,6 +5,7 @@ import { SOLVER_VERSION } from '../../worker/optics/version.ts';
 import type { Models } from '../models/models.ts';
 import type { Run } from '../models/run.ts';
 import type { ComputedRun } from './computeRun.ts';
+import { bytePieces } from './resultPieces.ts';
 import type { RunQueue } from './runQueue.ts';
 import { sendRunNotice } from './runNotices.ts';
 
@@ -91,26 +92,39 @@ export class RunLease {
         transaction,
       );
       if (!held) return false;
-      let position = 0;
-      for (const bytes of pieces()) {
-        // Bound, not spelled out in the statement: 4 MB in hex would be 8 MB of text.
-        await this.#models.sequelize.query(
-          'INSERT INTO run_chunks (run_id, position, bytes) VALUES ($1, $2, $3)',
-          { bind: [this.runId, position, bytes], transaction },
-        );
-        position += 1;
-      }
+      await this.#store(pieces(), transaction);
       await this.#notify('done', { done }, transaction);
       return true;
     });
   }
 
-  /** @param error what went wrong and what to do, for the person who started the run */
-  async fail(error: string): Promise<boolean> {
+  /**
+   * @param error what went wrong and what to do, for the person who started the run
+   * @param found what was found until then, if anything
+   */
+  async fail(error: string, found: Buffer | null): Promise<boolean> {
     return this.#models.sequelize.transaction(async (transaction) => {
       const held = await this.#change({ state: 'failed', error, finishedAt: fn('now') }, transaction);
-      if (held) await this.#notify('failed', { error }, transaction);
-      return held;
+      if (!held) return false;
+      if (found) await this.#store(bytePieces(found), transaction);
+      await this.#notify('failed', { error }, transaction);
+      return true;
+    });
+  }
+
+  /** Stores what was found before the run was cancelled; nothing of one that was deleted or given to another host. */
+  async keep(found: Buffer): Promise<boolean> {
+    const { id, host, attempts } = this.run;
+    return this.#models.sequelize.transaction(async (transaction) => {
+      const cancelled = await this.#models.Run.findOne({
+        where: { id, host, attempts, state: 'cancelled' },
+        attributes: ['id'],
+        lock: transaction.LOCK.UPDATE,
+        transaction,
+      });
+      if (!cancelled) return false;
+      await this.#store(bytePieces(found), transaction);
+      return true;
     });
   }
 
@@ -126,6 +140,18 @@ export class RunLease {
       await this.#notify('queued', { done: 0 }, transaction);
       return true;
     });
+  }
+
+  async #store(pieces: Iterable<Buffer>, transaction: Transaction): Promise<void> {
+    let position = 0;
+    for (const bytes of pieces) {
+      // Bound, not spelled out in the statement: 4 MB in hex would be 8 MB of text.
+      await this.#models.sequelize.query(
+        'INSERT INTO run_chunks (run_id, position, bytes) VALUES ($1, $2, $3)',
+        { bind: [this.runId, position, bytes], transaction },
+      );
+      position += 1;
+    }
   }
 
   async #change(values: Change, transaction?: Transaction): Promise<boolean> {

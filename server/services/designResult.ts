@@ -7,16 +7,24 @@ import type { DesignRun } from '../models/run.ts';
 /**
  * The stored answer, JSON in UTF-8, piece by piece.
  *
+ * @param take `unfinished` also takes what was found by a design that was cancelled or failed
  * @throws Refusal 409 while there is none
  */
-export async function openDesignResult(models: Models, design: DesignRun): Promise<AsyncGenerator<Buffer>> {
-  if (design.state !== 'done') throw conflict(`The design is ${design.state}: it has no answer.`);
+export async function openDesignResult(
+  models: Models,
+  design: DesignRun,
+  take: 'finished' | 'unfinished' = 'finished',
+): Promise<AsyncGenerator<Buffer>> {
+  const none = () => conflict(`The design is ${design.state}: it has no answer.`);
+  if (design.state !== 'done' && take === 'finished') throw none();
   const chunks = await models.RunChunk.findAll({
     where: { runId: design.id },
     attributes: ['position'],
     order: ['position'],
   });
-  if (chunks.length === 0) throw new Error(`The answer of design ${design.id} is missing.`);
+  if (chunks.length === 0) {
+    throw design.state === 'done' ? new Error(`The answer of design ${design.id} is missing.`) : none();
+  }
   return pieces();
 
   async function* pieces(): AsyncGenerator<Buffer> {

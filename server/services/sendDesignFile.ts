@@ -12,7 +12,7 @@ import { sendPieces } from './sendPieces.ts';
 /** What the answer to a design question is handed out as, to members and through links alike. */
 export type DesignFile =
   | 'result'
-  /** What is found so far while this machine answers the question, afterwards all of it. */
+  /** What is found so far while this machine answers the question, afterwards all of it or what was kept. */
   | 'partial'
   | 'csv'
   | 'input';
@@ -34,13 +34,10 @@ export async function sendDesignFile(
       }
       // It may have come to its end since the row was read.
       await design.reload({ attributes: ['state'] });
-      return sendDesignFile({ models, materials, pool, jobs }, design, 'result', response);
+      return sendJson(await openDesignResult(models, design, 'unfinished'), response);
     }
-    case 'result': {
-      const pieces = await openDesignResult(models, design);
-      response.set('Cache-Control', 'no-store').type('application/json');
-      return sendPieces(pieces, response);
-    }
+    case 'result':
+      return sendJson(await openDesignResult(models, design), response);
     case 'csv': {
       const result = await readDesignResult(models, design);
       response.attachment(`${fileName}.csv`).type('text/csv; charset=utf-8');
@@ -58,4 +55,9 @@ export async function sendDesignFile(
       return sendPieces(designInputFile(pool, question, result, constants), response);
     }
   }
+}
+
+function sendJson(pieces: AsyncGenerator<Buffer>, response: Response): Promise<void> {
+  response.set('Cache-Control', 'no-store').type('application/json');
+  return sendPieces(pieces, response);
 }

@@ -11,7 +11,7 @@ import { sendRunEvents } from '../../services/sendRunEvents.ts';
 const load = ({ dependencies, params }: { dependencies: AppDependencies; params: { designId: string } }) =>
   loadDesign(dependencies.models, params.designId);
 
-/** `?partial=true` also takes a design that is still being computed. */
+/** `?partial=true` also takes a design that is still being computed, or that was stopped before its end. */
 const partialQuerySchema = z.strictObject({ partial: z.enum(['true', 'false']).optional() });
 
 const readDesignEvents = streamRoute({
@@ -30,7 +30,7 @@ const readDesignResult = streamRoute({
   method: 'get',
   path: '/designs/:designId/result',
   summary:
-    'The answer. With partial=true what is found so far, too, while this machine computes it and the question can say so.',
+    'The answer. With partial=true what is found so far, too, while this machine computes it and the question can say so, and what a design that was cancelled or failed had found by then (`ended` is unfinished).',
   noun: 'design',
   policy: readRun,
   query: partialQuerySchema,
