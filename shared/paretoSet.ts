@@ -3,6 +3,12 @@ import type { ParetoFilm } from './optimiseDesign.ts';
 /** What films of a Pareto set have beyond being in it. */
 export type ParetoRole = 'best first' | 'compromise' | 'best second';
 
+export const paretoRoleWords: Record<ParetoRole, string> = {
+  'best first': 'best of the first goal',
+  compromise: 'compromise',
+  'best second': 'best of the second goal',
+};
+
 type Values = readonly Pick<ParetoFilm, 'first' | 'second'>[];
 
 /**

@@ -32,3 +32,8 @@ export function commentLines(lines: string[]): string {
 export function toCsvLine(fields: string[]): string {
   return `${fields.map((field) => (/[",\r\n]/.test(field) ? `"${field.replaceAll('"', '""')}"` : field)).join(',')}\r\n`;
 }
+
+/** A line of cells; one without a value is empty. */
+export function cellLine(cells: (string | number | null | undefined)[]): string {
+  return toCsvLine(cells.map((cell) => String(cell ?? '')));
+}

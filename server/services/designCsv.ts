@@ -1,10 +1,10 @@
 import type { CapDesign, CapPointCurves, CapResult } from '../../shared/capDesign.ts';
 import type { DesignResult } from '../../shared/design.ts';
-import type { OptimiseDesign, OptimiseResult } from '../../shared/optimiseDesign.ts';
 import type { Sensitivity, ToleranceDesign, ToleranceResult } from '../../shared/toleranceDesign.ts';
 import type { DesignRun } from '../models/run.ts';
-import { commentLines, sourceLines, toCsvLine } from './csvLines.ts';
-import { demandWords, goalWords, layerName, signalWords } from './designNames.ts';
+import { cellLine, commentLines, sourceLines } from './csvLines.ts';
+import { demandWords, layerName, readingTitles, signalWords } from './designNames.ts';
+import { optimiseLines } from './optimiseCsv.ts';
 
 /**
  * An answer as CSV (RFC 4180) behind comment lines with the sources of every constant: a header line with names and
@@ -23,12 +23,6 @@ export function* designCsv(
   if (design.kind === 'tolerance' && result.kind === 'tolerance') {
     yield* toleranceLines(design, result);
   }
-}
-
-type Cell = string | number | null | undefined;
-
-function line(cells: Cell[]): string {
-  return toCsvLine(cells.map((cell) => String(cell ?? '')));
 }
 
 type Curve = Exclude<keyof CapPointCurves, 'pointId'>;
@@ -51,7 +45,7 @@ function* capLines(design: CapDesign, result: CapResult): Generator<string> {
     ['slopePercentPerNm', 'Change of the signal (%/nm)'],
     ['costPercent', 'Signal lost against no cap (%)'],
   ];
-  yield line([
+  yield cellLine([
     'Candidate',
     'Working point',
     'Thickness (nm)',
@@ -62,50 +56,17 @@ function* capLines(design: CapDesign, result: CapResult): Generator<string> {
     for (const [position, curves] of points.entries()) {
       const point = design.points[position]!.label;
       yield result.thicknessNm
-        .map((nm, at) => line([label, point, nm, ...columns.map(([name]) => curves[name][at]), shares[at]]))
+        .map((nm, at) =>
+          cellLine([label, point, nm, ...columns.map(([name]) => curves[name][at]), shares[at]]),
+        )
         .join('');
     }
   }
 }
 
-/** A line for the film as drawn, each step of the path, each film of the front, and the best film. */
-function* optimiseLines(
-  { goal, second }: OptimiseDesign,
-  { start, best, path, pareto }: OptimiseResult,
-  names: string[],
-): Generator<string> {
-  const titleOf = ({ quantity }: OptimiseDesign['goal']) => {
-    const { words, unit } = goalWords[quantity];
-    return `${words.replace(/^(greatest|least) /, '')} (${unit})`;
-  };
-  yield line([
-    'Film',
-    'Films solved',
-    ...names.map((name) => `Thickness of ${name} (nm)`),
-    titleOf(goal),
-    ...(second ? [titleOf(second)] : []),
-  ]);
-  yield line(['as drawn', '', ...start.thicknessesNm, start.value]);
-  yield path
-    .map(({ phase, evaluations, thicknessesNm, value }) =>
-      line([`${phase} search`, evaluations, ...thicknessesNm, value]),
-    )
-    .join('');
-  yield (pareto ?? [])
-    .map((film) => line(['front', '', ...film.thicknessesNm, film.first, film.second]))
-    .join('');
-  yield line(['best', '', ...best.thicknessesNm, best.value]);
-}
-
 type Reading = keyof Sensitivity['derivative'];
 
-const readings: Record<Reading, { title: string; unit: string }> = {
-  rotationDeg: { title: 'Kerr rotation', unit: 'deg' },
-  ellipticityDeg: { title: 'Kerr ellipticity', unit: 'deg' },
-  amplitude: { title: 'Cross-polarized amplitude', unit: '1' },
-  contrast: { title: 'Transverse contrast', unit: '1' },
-  reflectance: { title: 'Reflectance', unit: '1' },
-};
+const spreadReadings: Reading[] = ['rotationDeg', 'ellipticityDeg', 'amplitude', 'contrast', 'reflectance'];
 
 /** A line for each working point and reading; derivatives are further columns, in the unit of the line. */
 function* toleranceLines({ points, demands }: ToleranceDesign, result: ToleranceResult): Generator<string> {
@@ -124,7 +85,7 @@ function* toleranceLines({ points, demands }: ToleranceDesign, result: Tolerance
   ]);
   const parameters = [...new Map(sensitivities.map((one) => [`${one.parameter} ${one.of}`, one] as const))];
   const quantiles = ['2.275', '15.865', '50', '84.135', '97.725'];
-  yield line([
+  yield cellLine([
     'Working point',
     'Reading',
     'Unit',
@@ -139,17 +100,17 @@ function* toleranceLines({ points, demands }: ToleranceDesign, result: Tolerance
     ),
   ]);
   for (const { pointId, nominal, distributions } of result.points) {
-    for (const name of Object.keys(readings) as Reading[]) {
+    for (const name of spreadReadings) {
       const found = distributions[name];
       const derivatives = parameters.map(
         ([key]) =>
           sensitivities.find((one) => one.pointId === pointId && `${one.parameter} ${one.of}` === key)
             ?.derivative[name],
       );
-      yield line([
+      yield cellLine([
         labels.get(pointId),
-        readings[name].title,
-        readings[name].unit,
+        readingTitles[name].title,
+        readingTitles[name].unit,
         nominal[name],
         found?.mean,
         found?.deviation,

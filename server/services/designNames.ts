@@ -1,10 +1,11 @@
 import type { CapCandidate } from '../../shared/capDesign.ts';
 import type { DesignInput } from '../../shared/design.ts';
-import type { Demands, SignalName } from '../../shared/designPoint.ts';
+import type { Demands, PointReadingName, SignalName } from '../../shared/designPoint.ts';
+import { layerNames } from '../../shared/layerNames.ts';
 import type { GoalQuantity } from '../../shared/optimiseDesign.ts';
 import type { StackDocument, StackMedium } from '../../shared/stack.ts';
+import { drawnLayers } from '../../worker/design/expandBlocks.ts';
 import type { NamedMaterials } from './runNames.ts';
-import { findLayer } from './runNames.ts';
 
 /** What things of a design question are called in sentences and column titles. */
 
@@ -23,6 +24,15 @@ export const goalWords: Record<GoalQuantity, { words: string; unit: string }> = 
   'zero ellipticity': { words: 'least |Kerr ellipticity|', unit: 'deg' },
   insensitivity: { words: 'least relative change of the rotation per nm of a layer', unit: '1/nm' },
   'least reflectance': { words: 'least reflectance', unit: '1' },
+};
+
+export const readingTitles: Record<PointReadingName, { title: string; unit: string }> = {
+  rotationDeg: { title: 'Kerr rotation', unit: 'deg' },
+  ellipticityDeg: { title: 'Kerr ellipticity', unit: 'deg' },
+  amplitude: { title: 'Cross-polarized amplitude', unit: '1' },
+  contrast: { title: 'Transverse contrast', unit: '1' },
+  reflectance: { title: 'Reflectance', unit: '1' },
+  ceilingShare: { title: 'Share of the ceiling', unit: '1' },
 };
 
 /** The demands that are made, each as words such as "|rotation| at least 0.1 deg". */
@@ -45,12 +55,10 @@ export function mediumName({ label, material }: StackMedium, materials: NamedMat
   );
 }
 
-/** Such as "Pt (cap)". */
+/** Such as "Pt (cap)"; see `layerNames`. */
 export function layerName(layerId: string, document: StackDocument, materials: NamedMaterials): string {
-  const layer = findLayer(document.layers, layerId);
-  if (!layer) return layerId;
-  const name = mediumName(layer.medium, materials);
-  return layer.note ? `${name} (${layer.note})` : name;
+  const names = layerNames(drawnLayers(document.layers), (medium) => mediumName(medium, materials));
+  return names.get(layerId) ?? layerId;
 }
 
 /** Such as "SiO2 swept on TiN 2 nm". */

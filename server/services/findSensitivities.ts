@@ -35,11 +35,9 @@ export async function findSensitivities(
   );
   if (unknown.length > 0) throw invalid(unknown);
   // Rows of the database cannot be sent to a thread.
-  const materials = [...loaded.values()].map(({ id, version, name, content }) => ({
-    id,
-    version,
-    name,
-    content,
+  const materials = [...loaded.values()].map(({ id, version, name, content, material }) => ({
+    ...{ id, version, name, content },
+    formula: material.formula,
   }));
   return pool.sensitivity({ document: withVersions(document, loaded), points }, materials);
 }

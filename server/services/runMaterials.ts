@@ -17,7 +17,7 @@ export async function loadRunMaterials(
       const content = await store.contentOf(id, version);
       if (!content) throw gone(`Version ${version} of the material ${id}, which this run uses, is gone.`);
       const used = run.materials.find((material) => material.id === id && material.version === version);
-      return { id, version, name: used?.name ?? id, content };
+      return { id, version, name: used?.name ?? id, ...(used && { formula: used.formula }), content };
     }),
   );
 }

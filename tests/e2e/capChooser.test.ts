@@ -26,7 +26,7 @@ it('fills in the question from the stack', async () => {
   const stack = await demoStack(context, 'Pt/Co/Pt');
   await grower.open(`/groups/${await demoGroupId(context)}/designs/new?kind=cap&stack=${stack.id}`);
   await page.getByRole('group', { name: 'Candidate Pt' }).waitFor();
-  expect(await page.getByLabel('1 Pt, cap').isChecked()).toBe(true);
+  expect(await page.getByLabel('1 Pt (cap)').isChecked()).toBe(true);
   expect(await page.getByRole('spinbutton', { name: 'Wavelength' }).inputValue()).toBe('632.8');
 });
 

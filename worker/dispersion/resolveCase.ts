@@ -12,7 +12,14 @@ import type { MaterialConstants, MaterialUse } from './materialConstants.ts';
 import { materialConstants } from './materialConstants.ts';
 
 /** A stored version of a material, as the solve needs it. */
-export type ResolvableMaterial = { id: string; version: number; name: string; content: MaterialContent };
+export type ResolvableMaterial = {
+  id: string;
+  version: number;
+  name: string;
+  /** Short name for tables, such as "Co". */
+  formula?: string;
+  content: MaterialContent;
+};
 
 /** Everything that keeps a case from being solved with the library, each with its path inside the case. */
 export class ResolutionError extends Error {

@@ -1,6 +1,7 @@
 import type { DesignPoint, PointReadings } from '../../../shared/designPoint.ts';
 import { materialKeyOf } from '../../../shared/designPoint.ts';
 import { toComplex } from '../../../shared/complex.ts';
+import { layerNames } from '../../../shared/layerNames.ts';
 import { foldDegrees } from '../../../shared/units.ts';
 import type { StackDocument, StackMedium } from '../../../shared/stack.ts';
 import type { Sensitivity, SensitivityAnswer } from '../../../shared/toleranceDesign.ts';
@@ -35,7 +36,7 @@ export function sensitivities(
   materials: readonly ResolvableMaterial[],
 ): SensitivityAnswer {
   const known = new Map(materials.map((material) => [materialKey(material), material]));
-  const names = new Map(materials.map(({ id, name }) => [id, name]));
+  const names = shortNames(materials);
   const answer: SensitivityAnswer = { readings: [], sensitivities: [] };
   for (const { id: pointId, workingPoint } of points) {
     const film = { ...document, workingPoint };
@@ -59,7 +60,9 @@ function thicknessSensitivities(
   solver: FilmSolver,
   names: ReadonlyMap<string, string>,
 ): OneSensitivity[] {
-  return drawnLayers(film.layers).map((layer) => {
+  const layers = drawnLayers(film.layers);
+  const called = layerNames(layers, (medium) => mediumLabel(medium, names));
+  return layers.map((layer) => {
     const at = (shiftNm: number) =>
       solver.readings({
         thicknessNm: new Map([[layer.id, layer.thicknessNm + shiftNm]]),
@@ -68,7 +71,7 @@ function thicknessSensitivities(
     return {
       parameter: 'thickness',
       of: layer.id,
-      label: `thickness of ${layer.note ? `${layer.note} ` : ''}${mediumLabel(layer.medium, names)}`,
+      label: `thickness of ${called.get(layer.id)!}`,
       value: layer.thicknessNm,
       derivative:
         layer.thicknessNm - leastThicknessNm(layer) < 2 * STEP_NM
@@ -177,6 +180,13 @@ function over(derivative: Derivative, value: number): Derivative {
     contrast: divided(derivative.contrast),
     reflectance: divided(derivative.reflectance),
   };
+}
+
+/** Materials by their formulas; those that share one by their names. */
+function shortNames(materials: readonly ResolvableMaterial[]): Map<string, string> {
+  const isShared = ({ id, formula }: ResolvableMaterial) =>
+    materials.some((other) => other.id !== id && other.formula === formula);
+  return new Map(materials.map((one) => [one.id, one.formula && !isShared(one) ? one.formula : one.name]));
 }
 
 function mediumLabel(medium: StackMedium, names: ReadonlyMap<string, string>): string {

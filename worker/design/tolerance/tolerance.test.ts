@@ -2,6 +2,7 @@ import { describe, expect, test } from 'vitest';
 import { materialKeyOf } from '../../../shared/designPoint.ts';
 import type { ToleranceDesign, ToleranceResult } from '../../../shared/toleranceDesign.ts';
 import { toleranceDesignSchema } from '../../../shared/toleranceDesign.ts';
+import { buildMaterial } from '../../dispersion/materialFixtures.ts';
 import { designStep } from '../designTask.ts';
 import { FilmSolver } from '../filmSolver.ts';
 import { runDesign } from '../runDesign.ts';
@@ -207,6 +208,25 @@ describe('sensitivity', () => {
     const slopeQ = (inQ(0.01 + h) - inQ(0.01 - h)) / (2 * h);
     expect(of('Im Q', key).derivative.rotationDeg! / slopeQ).toBeCloseTo(1, 5);
     expect(of('n', key).value).toBe(2.25);
+  });
+
+  test('parameters are called by formula and note, layers that would be called alike by their place too', () => {
+    const library = [
+      { ...buildMaterial('tantalum'), formula: 'Ta' },
+      { ...buildMaterial('platinum'), formula: 'Pt' },
+    ];
+    const film = structuredClone(document);
+    film.layers = [
+      { id: 'cap', medium: { material: 'platinum' }, thicknessNm: 2 },
+      { id: 'co', medium: cobalt, thicknessNm: 1, m: [0, 0, 1] },
+      { id: 'seed', medium: { material: 'platinum' }, thicknessNm: 2 },
+      { id: 'below', medium: { material: 'tantalum' }, thicknessNm: 2, note: 'adhesion' },
+    ];
+    const labels = sensitivities(film, points, library).sensitivities.map(({ label }) => label);
+    expect(labels).toContain('thickness of Ta (adhesion)');
+    expect(labels).toContain('k of Ta');
+    expect(labels).toContain('thickness of Pt, layer 1');
+    expect(labels).toContain('thickness of Pt, layer 3');
   });
 
   test('a lossless constant has no k to change, and light sees no thickness of a layer that is the medium around it', () => {

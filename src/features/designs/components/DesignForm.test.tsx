@@ -88,7 +88,7 @@ function show(kind: DesignKind) {
 
 it('begins with the film’s own working point, its present cap and the usual candidates', async () => {
   const { sent, user } = show('cap');
-  expect(screen.getByLabelText('1 Pt, cap')).toHaveProperty('checked', true);
+  expect(screen.getByLabelText('1 Pt (cap)')).toHaveProperty('checked', true);
   await user.click(screen.getByRole('button', { name: 'Compare the caps' }));
   await waitFor(() => expect(sent).toHaveLength(1));
   const { input, stackId } = createDesignSchema.parse(sent[0]);

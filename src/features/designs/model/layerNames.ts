@@ -25,7 +25,7 @@ export function drawnLayers(items: readonly StackItem[]): StackLayer[] {
   return items.flatMap((item) => ('layers' in item ? drawnLayers(item.layers) : [item]));
 }
 
-/** A layer as the form and the tables name it: `1 Pt, cap`. */
+/** A layer as the form and the tables name it: `1 Pt (cap)`. */
 export function layerWords(
   document: StackDocument,
   layerId: string,
@@ -36,7 +36,7 @@ export function layerWords(
   const layer = layers[position];
   if (!layer) return layerId;
   const name = `${position + 1} ${mediumWords(layer.medium, materials)}`;
-  return layer.note ? `${name}, ${layer.note}` : name;
+  return layer.note ? `${name} (${layer.note})` : name;
 }
 
 /** The film with other thicknesses. */
