@@ -10,6 +10,22 @@ export async function runTolerance(
   design: ToleranceDesign,
   threads: DesignThreads,
 ): Promise<ToleranceResult> {
+  const samples = await drawSamples(design, threads);
+  // Given by designTask.ts for this kind of step.
+  return (await threads.run({ kind: 'tolerance outcome', samples })) as ToleranceResult;
+}
+
+/** As runTolerance, of the points alone: what a growth card prints. */
+export async function runBands(
+  design: ToleranceDesign,
+  threads: DesignThreads,
+): Promise<ToleranceResult['points']> {
+  const samples = await drawSamples(design, threads);
+  // Given by designTask.ts for this kind of step.
+  return (await threads.run({ kind: 'tolerance bands', samples })) as ToleranceResult['points'];
+}
+
+async function drawSamples(design: ToleranceDesign, threads: DesignThreads): Promise<SharedArrayBuffer> {
   const { buffer } = new ToleranceSamples(design);
   await threads.runAll(
     piecesOf(design.tolerance.samples, SAMPLES_PER_STEP).map((piece) => ({
@@ -18,6 +34,5 @@ export async function runTolerance(
       samples: buffer,
     })),
   );
-  // Given by designTask.ts for this kind of step.
-  return (await threads.run({ kind: 'tolerance outcome', samples: buffer })) as ToleranceResult;
+  return buffer;
 }

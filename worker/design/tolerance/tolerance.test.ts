@@ -4,8 +4,10 @@ import type { ToleranceDesign, ToleranceResult } from '../../../shared/tolerance
 import { toleranceDesignSchema } from '../../../shared/toleranceDesign.ts';
 import { buildMaterial } from '../../dispersion/materialFixtures.ts';
 import { designStep } from '../designTask.ts';
+import { DesignThreads } from '../designThreads.ts';
 import { FilmSolver } from '../filmSolver.ts';
 import { runDesign } from '../runDesign.ts';
+import { runBands } from './runTolerance.ts';
 import { sensitivities } from './sensitivity.ts';
 import { distributionOf, wilsonInterval } from './toleranceOutcome.ts';
 
@@ -125,6 +127,14 @@ describe('tolerance bands', () => {
     const narrow = (await answer(finer)).points[0]!.distributions.rotationDeg!.deviation;
     // To first order the deviation is proportional to the errors.
     expect(narrow / wide).toBeCloseTo(0.1, 1);
+  });
+
+  test('of a growth card are those of the whole answer, which derivatives are added to', async () => {
+    const design = buildDesign({ tolerance: { ...buildDesign().tolerance, samples: 200 } });
+    const threads = new DesignThreads({ design, materials: [] }, 2, (task) =>
+      Promise.resolve().then(() => designStep(task)),
+    );
+    expect(await runBands(design, threads)).toEqual((await answer(design)).points);
   });
 
   test('errors of constants move the readings, and a material of its own can be exact', async () => {

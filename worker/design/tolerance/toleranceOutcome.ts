@@ -1,8 +1,10 @@
 import type { PointReadings } from '../../../shared/designPoint.ts';
 import type { Distribution, ToleranceDesign, ToleranceResult } from '../../../shared/toleranceDesign.ts';
 import type { ResolvableMaterial } from '../../dispersion/resolveCase.ts';
+import { materialKey } from '../../sweep/sweepInput.ts';
 import type { DemandName } from '../demands.ts';
 import { failedDemands } from '../demands.ts';
+import { FilmSolver, UNCHANGED } from '../filmSolver.ts';
 import { ONE_SIGMA, TWO_SIGMA, quantileOf } from '../quantiles.ts';
 import { sensitivities } from './sensitivity.ts';
 import type { ToleranceSamples } from './toleranceSamples.ts';
@@ -19,23 +21,50 @@ export function toleranceOutcome(
   const { yields, byDemand } = yieldsOf(design, samples);
   return {
     kind: 'tolerance',
-    points: design.points.map(({ id }, point) => ({
-      pointId: id,
-      nominal: readings[point]!.readings,
-      distributions: {
-        rotationDeg: distributionOf(samples.column(point, 'rotationDeg')),
-        ellipticityDeg: distributionOf(samples.column(point, 'ellipticityDeg')),
-        amplitude: distributionOf(samples.column(point, 'amplitude')),
-        contrast: distributionOf(samples.column(point, 'contrast')),
-        reflectance: distributionOf(samples.column(point, 'reflectance')),
-      },
-    })),
+    points: pointOutcomes(
+      design,
+      readings.map(({ readings: nominal }) => nominal),
+      samples,
+    ),
     yield: yields,
     byDemand,
     sensitivities: found,
     samples: design.tolerance.samples,
     seed: design.tolerance.seed,
   };
+}
+
+/** The readings of the film as drawn and how those of the samples are spread, without derivatives, which take longest. */
+export function bandsOutcome(
+  design: ToleranceDesign,
+  materials: readonly ResolvableMaterial[],
+  samples: ToleranceSamples,
+): ToleranceResult['points'] {
+  const known = new Map(materials.map((material) => [materialKey(material), material]));
+  const nominal = design.points.map(({ workingPoint }) =>
+    new FilmSolver({ ...design.document, workingPoint }, known, { contrast: true, ceiling: true }).readings(
+      UNCHANGED,
+    ),
+  );
+  return pointOutcomes(design, nominal, samples);
+}
+
+function pointOutcomes(
+  { points }: ToleranceDesign,
+  nominal: PointReadings[],
+  samples: ToleranceSamples,
+): ToleranceResult['points'] {
+  return points.map(({ id }, point) => ({
+    pointId: id,
+    nominal: nominal[point]!,
+    distributions: {
+      rotationDeg: distributionOf(samples.column(point, 'rotationDeg')),
+      ellipticityDeg: distributionOf(samples.column(point, 'ellipticityDeg')),
+      amplitude: distributionOf(samples.column(point, 'amplitude')),
+      contrast: distributionOf(samples.column(point, 'contrast')),
+      reflectance: distributionOf(samples.column(point, 'reflectance')),
+    },
+  }));
 }
 
 /** @param column NaN where the reading does not exist; null when it never does */
