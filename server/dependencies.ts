@@ -1,12 +1,14 @@
 import type { Logger } from 'pino';
 import type { Transaction } from 'sequelize';
 import type { DesignResult } from '../shared/design.ts';
+import type { CardMaking } from '../shared/growthCard.ts';
 import type { RunProgress } from '../shared/run.ts';
 import type { ComputePool } from '../worker/pool.ts';
 import type { PartialResult } from '../worker/sweep/runSweep.ts';
 import type { Config } from './config.ts';
 import type { MailCatcher } from './mail/mailCatcher.ts';
 import type { Mailer } from './mail/mailer.ts';
+import type { GrowthCard } from './models/growthCard.ts';
 import type { Models } from './models/models.ts';
 import type { MaterialStore } from './services/materialStore.ts';
 
@@ -34,6 +36,23 @@ export type ImportReading = {
   progressOf(importId: string): number;
 };
 
+/** How far a growth card is, in films; `bandsSince` is when the first was begun, ms. */
+export type CardProgress = Omit<NonNullable<CardMaking['progress']>, 'secondsLeft'> & {
+  bandsSince: number | null;
+};
+
+/** Makes a card, tells its steps on the way, and ends when the signal aborts. */
+export type MakeCard = (
+  signal: AbortSignal,
+  report: (progress: Omit<CardProgress, 'bandsSince'>) => void,
+) => Promise<GrowthCard>;
+
+/** The making of growth cards as the rest of the server sees it: see CardMakings. */
+export type CardMaker = {
+  make(id: string, wanted: object, hungUp: AbortSignal, make: MakeCard): Promise<GrowthCard>;
+  progressOf(id: string): CardProgress | null;
+};
+
 /** The queue of runs as the rest of the server sees it. */
 export type Jobs = {
   health(): Promise<PartHealth>;
@@ -50,6 +69,7 @@ export type Jobs = {
   /** What a design question that this process is answering has found so far; null for any other. */
   partialDesign(runId: string): DesignResult | null;
   imports: ImportReading;
+  cards: CardMaker;
 };
 
 /** What request handlers have: the queue is started after everything that it depends on. */

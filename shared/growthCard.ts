@@ -84,6 +84,23 @@ export const growthCardSchema = z.object({
   isDemo: z.boolean(),
 });
 
+/** The steps of making a card, in their order. */
+export const cardSteps = ['film', 'bands', 'card'] as const;
+
+/** How far a card is that somebody waits for; `progress` is null when none is being made under this key. */
+export const cardMakingSchema = z.object({
+  progress: z
+    .object({
+      step: z.enum(cardSteps),
+      /** Films that are drawn for the bands, of all. */
+      done: z.int(),
+      total: z.int(),
+      /** Null while there is no rate to estimate from. */
+      secondsLeft: z.number().nullable(),
+    })
+    .nullable(),
+});
+
 export const growthCardListSchema = z.object({
   cards: z.array(
     growthCardSchema.pick({ id: true, title: true, sampleId: true, createdAt: true, decision: true }),
@@ -96,5 +113,6 @@ export const sharedGrowthCardSchema = growthCardSchema.omit({ groupId: true, stu
 export type CreateGrowthCard = z.input<typeof createGrowthCardSchema>;
 export type GrowthCard = z.infer<typeof growthCardSchema>;
 export type SharedGrowthCard = z.infer<typeof sharedGrowthCardSchema>;
+export type CardMaking = z.infer<typeof cardMakingSchema>;
 export type CardLayer = z.infer<typeof cardLayerSchema>;
 export type CardReading = z.infer<typeof cardReadingSchema>;

@@ -1,4 +1,5 @@
 import type { Dependencies, Jobs } from '../dependencies.ts';
+import { CardMakings } from './cardMakings.ts';
 import { ComputeHost } from './computeHost.ts';
 import { ImportReader } from './importReader.ts';
 import { RunChannel } from './runChannel.ts';
@@ -37,6 +38,7 @@ export async function startJobs(dependencies: JobDependencies): Promise<Jobs> {
     partialResult: (runId) => host?.partialResult(runId) ?? null,
     partialDesign: (runId) => host?.partialDesign(runId) ?? null,
     imports,
+    cards: new CardMakings(),
     health() {
       const computing = host ? `${host.runCount} runs on this machine` : 'other machines compute';
       return Promise.resolve(

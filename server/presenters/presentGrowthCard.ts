@@ -1,6 +1,7 @@
 import type { z } from 'zod';
-import type { GrowthCard as PresentedCard, SharedGrowthCard } from '../../shared/growthCard.ts';
+import type { CardMaking, GrowthCard as PresentedCard, SharedGrowthCard } from '../../shared/growthCard.ts';
 import type { growthCardListSchema } from '../../shared/growthCard.ts';
+import type { CardProgress } from '../dependencies.ts';
 import type { GrowthCard } from '../models/growthCard.ts';
 
 export function presentGrowthCard(card: GrowthCard): PresentedCard {
@@ -15,6 +16,17 @@ export function presentSharedGrowthCard(card: GrowthCard): SharedGrowthCard {
     ...{ id, title, sampleId, decision, solverVersion, inputSha256, isDemo },
     ...content,
     createdAt: createdAt.toISOString(),
+  };
+}
+
+/** @param progress null when no such card is being made */
+export function presentCardMaking(progress: CardProgress | null): CardMaking {
+  if (!progress) return { progress: null };
+  const { step, done, total, bandsSince } = progress;
+  const seconds = bandsSince === null ? 0 : (Date.now() - bandsSince) / 1000;
+  const hasRate = step === 'bands' && done > 0;
+  return {
+    progress: { step, done, total, secondsLeft: hasRate ? (seconds / done) * (total - done) : null },
   };
 }
 

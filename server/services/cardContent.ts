@@ -7,7 +7,7 @@ import type { StackDocument } from '../../shared/stack.ts';
 import type { ToleranceDesign, ToleranceResult } from '../../shared/toleranceDesign.ts';
 import { drawnLayers } from '../../worker/design/expandBlocks.ts';
 import { ComputeError } from '../../worker/sweep/computeError.ts';
-import type { Dependencies } from '../dependencies.ts';
+import type { Dependencies, MakeCard } from '../dependencies.ts';
 import { Refusal, invalid } from '../errors.ts';
 import type { GrowthCardContent } from '../models/growthCard.ts';
 import { cardAssumptions } from './cardAssumptions.ts';
@@ -15,86 +15,94 @@ import { cardCautions } from './cardCautions.ts';
 import { cardLayers } from './cardLayers.ts';
 import { cardSources } from './cardSources.ts';
 import { takeDesignSnapshot } from './designSnapshot.ts';
+import type { DesignSnapshot } from './designSnapshot.ts';
 import { loadRunMaterials } from './runMaterials.ts';
 
 type WantedCard = z.output<typeof createGrowthCardSchema>;
 
-export type ComputedCard = {
-  content: Omit<GrowthCardContent, 'url'>;
-  solverVersion: string;
-  inputSha256: string;
-};
+type Compute = Pick<Dependencies, 'materials' | 'pool'>;
 
-/** A card is made while somebody waits for it. */
-const PATIENCE_MS = 60_000;
+/** The tolerance question that a card answers, with what its answer rests on. */
+export type CardQuestion = { design: ToleranceDesign; snapshot: DesignSnapshot };
 
-/**
- * What a card says of a film: a tolerance question is answered for its working points, and its numbers go on the page.
- *
- * @throws Refusal 422 with issues at the fields of the request, also when it takes longer than a minute
- */
-export async function takeCardContent(
-  { materials: store, pool }: Pick<Dependencies, 'materials' | 'pool'>,
+type Watch = { signal: AbortSignal; report: Parameters<MakeCard>[1] };
+
+/** A card is made while somebody waits for it, and sees how far it is. */
+const PATIENCE_MS = 300_000;
+
+/** @throws Refusal 422 with issues at the fields of the request */
+export async function askCardQuestion(
+  compute: Compute,
   groupId: string,
   wanted: WantedCard,
-  signal: AbortSignal,
-): Promise<ComputedCard> {
+): Promise<CardQuestion> {
   refuseUnknownRates(wanted);
-  const { points, signal: signalName, tolerance, rates, bench } = wanted;
+  const { document, points, signal, tolerance } = wanted;
   const question: ToleranceDesign = {
-    ...{ kind: 'tolerance', document: wanted.document, points, tolerance },
-    ...{ signal: signalName, demands: {} },
+    ...{ kind: 'tolerance', document, points, tolerance, signal, demands: {} },
   };
-  const snapshot = await takeDesignSnapshot({ materials: store, pool }, groupId, question).catch(
-    (error: unknown) => {
-      throw withCardPaths(error);
-    },
-  );
-  const { document } = snapshot.input.design;
-  const result = await answer(pool, snapshot.input.design, await loadRunMaterials(store, snapshot), signal);
+  const snapshot = await takeDesignSnapshot(compute, groupId, question).catch((error: unknown) => {
+    throw withCardPaths(error);
+  });
+  const { design } = snapshot.input;
+  if (design.kind !== 'tolerance') throw new Error(`a tolerance question was kept as ${design.kind}`);
+  return { design, snapshot };
+}
+
+/**
+ * What a card says of a film: the answer for its working points, and what it rests on.
+ *
+ * @throws Refusal 422 when it takes longer than five minutes; ComputeError `cancelled` when the signal aborts
+ */
+export async function takeCardContent(
+  { materials: store, pool }: Compute,
+  wanted: WantedCard,
+  { design, snapshot }: CardQuestion,
+  watch: Watch,
+): Promise<Omit<GrowthCardContent, 'url'>> {
+  const { tolerance, rates, bench } = wanted;
+  const { document, points } = design;
+  const answers = await answer(pool, { design, materials: await loadRunMaterials(store, snapshot) }, watch);
   return {
-    content: {
-      ...{ document, tolerance, bench },
-      layers: cardLayers(document, snapshot.materials, tolerance, rates),
-      readings: points.map((point) => cardReading(point, wanted, result)),
-      assumptions: cardAssumptions({ ...question, document }, snapshot.materials),
-      sources: cardSources(document, snapshot.materials),
-      cautions: cardCautions(formulasOf(document, snapshot.materials), bench),
-    },
-    solverVersion: snapshot.solverVersion,
-    inputSha256: snapshot.inputSha256,
+    ...{ document, tolerance, bench },
+    layers: cardLayers(document, snapshot.materials, tolerance, rates),
+    readings: points.map((point) => cardReading(point, wanted, answers)),
+    assumptions: cardAssumptions(design, snapshot.materials),
+    sources: cardSources(document, snapshot.materials),
+    cautions: cardCautions(formulasOf(document, snapshot.materials), bench),
   };
 }
 
 async function answer(
   pool: Dependencies['pool'],
-  design: Parameters<typeof pool.design>[0]['design'],
-  materials: Parameters<typeof pool.design>[0]['materials'],
-  signal: AbortSignal,
-): Promise<ToleranceResult> {
+  work: Parameters<typeof pool.bands>[0],
+  { signal, report }: Watch,
+): Promise<Answers> {
   const late = AbortSignal.timeout(PATIENCE_MS);
+  const onProgress = (done: number, total: number) => report({ step: 'bands', done, total });
+  onProgress(0, work.design.tolerance.samples);
   try {
-    const { result } = await pool.design({ design, materials }, { signal: AbortSignal.any([signal, late]) });
-    if (result.kind !== 'tolerance') throw new Error(`a tolerance question was answered by ${result.kind}`);
-    return result;
+    return await pool.bands(work, { signal: AbortSignal.any([signal, late]), onProgress });
   } catch (error) {
     if (error instanceof ComputeError && late.aborted) {
-      const message = `the bands took longer than ${PATIENCE_MS / 1000} s: ask fewer samples or working points`;
+      const message = `the bands took longer than ${PATIENCE_MS / 60_000} minutes: ask fewer samples or working points`;
       throw invalid([{ path: 'tolerance.samples', message }]);
     }
     throw error;
   }
 }
 
+type Answers = ToleranceResult['points'];
+
 type Shown = {
   of: SignalName | 'reflectance';
-  key: keyof ToleranceResult['points'][number]['distributions'];
+  key: keyof Answers[number]['distributions'];
   name: ReadingName;
 };
 
 /** What is read at one working point: the signal that counts first. */
-function cardReading(point: DesignPoint, { signal }: WantedCard, result: ToleranceResult): CardReading {
-  const found = result.points.find(({ pointId }) => pointId === point.id);
+function cardReading(point: DesignPoint, { signal }: WantedCard, answers: Answers): CardReading {
+  const found = answers.find(({ pointId }) => pointId === point.id);
   if (!found) throw new Error(`the working point ${point.id} has no answer`);
   const isP = point.workingPoint.input === 'p';
   const usual: Shown[] = [

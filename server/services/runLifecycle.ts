@@ -1,4 +1,3 @@
-import { createHash } from 'node:crypto';
 import { isDeepStrictEqual } from 'node:util';
 import { Op, UniqueConstraintError, fn } from 'sequelize';
 import type { CreationAttributes, Transaction } from 'sequelize';
@@ -12,6 +11,7 @@ import type { Models } from '../models/models.ts';
 import { isDesignRun } from '../models/run.ts';
 import type { Run } from '../models/run.ts';
 import { isRowId } from '../routing/pathParams.ts';
+import { idOfKey } from './idOfKey.ts';
 import { lockMaterials } from './lockMaterials.ts';
 import { recordActivity } from './recordActivity.ts';
 import { loadStack } from './stacks.ts';
@@ -158,15 +158,6 @@ export async function loadNamedStack(
   const { stack, newest } = found;
   const unchanged = isDeepStrictEqual(newest.document, document);
   return { stackId, stackVersion: unchanged ? stack.version : null, stackName: stack.name };
-}
-
-/** A row id that follows from who asks and the key: the database itself then refuses the second row. */
-function idOfKey(actor: Person, group: Group, key: string): string {
-  const bytes = createHash('sha256').update(`${actor.userId}\n${group.id}\n${key}`).digest().subarray(0, 16);
-  // Version 8 and the variant of RFC 9562: a UUID made by a rule of one's own.
-  bytes[6] = (bytes[6]! & 0x0f) | 0x80;
-  bytes[8] = (bytes[8]! & 0x3f) | 0x80;
-  return bytes.toString('hex').replace(/^(.{8})(.{4})(.{4})(.{4})(.{12})$/, '$1-$2-$3-$4-$5');
 }
 
 async function reload(models: Models, runId: string): Promise<Run> {

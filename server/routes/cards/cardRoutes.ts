@@ -1,4 +1,5 @@
 import {
+  cardMakingSchema,
   createGrowthCardSchema,
   growthCardListSchema,
   growthCardSchema,
@@ -10,12 +11,16 @@ import { addToGroup, readGroup } from '../../policies/group.ts';
 import { deleteCard as mayDelete, readCard as mayRead } from '../../policies/growthCard.ts';
 import {
   presentCardList,
+  presentCardMaking,
   presentGrowthCard,
   presentSharedGrowthCard,
 } from '../../presenters/presentGrowthCard.ts';
+import { readIdempotencyKey } from '../../routing/readIdempotencyKey.ts';
 import type { Route } from '../../routing/route.ts';
 import { route, streamRoute } from '../../routing/route.ts';
-import { createCard, deleteCard, listCards, loadCard } from '../../services/growthCards.ts';
+import { createCard } from '../../services/createCard.ts';
+import { deleteCard, listCards, loadCard } from '../../services/growthCards.ts';
+import { idOfKey } from '../../services/idOfKey.ts';
 import { sendCardPdf } from '../../services/sendCardPdf.ts';
 
 const listCardsOfGroup = route({
@@ -34,18 +39,22 @@ const listCardsOfGroup = route({
 const createCardInGroup = route({
   method: 'post',
   path: '/groups/:groupId/cards',
-  summary: 'Compute a growth card and keep it; it is never changed. It ends when the asker hangs up.',
+  summary:
+    'Compute a growth card and keep it; it is never changed. It ends when the asker hangs up. With an Idempotency-Key header (any text up to 200 characters) a request sent twice makes one, and GET .../cards-in-making/:key tells how far it is.',
   noun: 'group',
   policy: addToGroup,
   body: createGrowthCardSchema,
   load: ({ dependencies, params }) => dependencies.models.Group.findByPk(params.groupId),
   answer: { status: 201, schema: growthCardSchema },
-  async handler({ dependencies, actor, subject, body, response }) {
+  async handler({ dependencies, actor, subject, body, request, response }) {
+    const idempotencyKey = readIdempotencyKey(request);
     const hungUp = new AbortController();
     response.once('close', () => hungUp.abort());
+    // Whoever was gone before this line closes nothing any more.
+    if (response.closed) hungUp.abort();
     try {
       return presentGrowthCard(
-        await createCard(dependencies, actor, subject, body, { signal: hungUp.signal }),
+        await createCard(dependencies, actor, subject, body, { signal: hungUp.signal, idempotencyKey }),
       );
     } catch (error) {
       // Nobody reads this any more; it keeps the end of a card out of the log of failures.
@@ -55,6 +64,19 @@ const createCardInGroup = route({
       throw error;
     }
   },
+});
+
+const readCardMaking = route({
+  method: 'get',
+  path: '/groups/:groupId/cards-in-making/:key',
+  summary:
+    'How far the card is that you asked for with this Idempotency-Key; null when it is not being made here.',
+  noun: 'group',
+  policy: addToGroup,
+  load: ({ dependencies, params }) => dependencies.models.Group.findByPk(params.groupId),
+  answer: { status: 200, schema: cardMakingSchema },
+  handler: ({ dependencies, actor, subject, params }) =>
+    presentCardMaking(dependencies.jobs.cards.progressOf(idOfKey(actor, subject, params.key))),
 });
 
 const load = ({ dependencies, params }: { dependencies: AppDependencies; params: { cardId: string } }) =>
@@ -93,4 +115,11 @@ const readCardPdf = streamRoute({
   handler: ({ subject, response }) => sendCardPdf(presentSharedGrowthCard(subject), response),
 });
 
-export const cardRoutes: Route[] = [listCardsOfGroup, createCardInGroup, readCard, removeCard, readCardPdf];
+export const cardRoutes: Route[] = [
+  listCardsOfGroup,
+  createCardInGroup,
+  readCardMaking,
+  readCard,
+  removeCard,
+  readCardPdf,
+];

@@ -4,9 +4,11 @@ import { tmpdir } from 'node:os';
 import path from 'node:path';
 import { promisify } from 'node:util';
 import type { Response } from 'supertest';
-import { afterAll, beforeAll, beforeEach, describe, expect, test } from 'vitest';
+import { afterAll, beforeAll, beforeEach, describe, expect, test, vi } from 'vitest';
 import { cardLayerCells, cardReadingCells, cardToleranceSentences } from '../../../shared/cardWords.ts';
 import {
+  cardMakingSchema,
+  createGrowthCardSchema,
   growthCardListSchema,
   growthCardSchema,
   sharedGrowthCardSchema,
@@ -16,6 +18,7 @@ import { studySchema } from '../../../shared/study.ts';
 import { issuePaths, read, refusalOf } from '../../../tests/answers.ts';
 import type { ApiServer, Browser } from '../../../tests/apiServer.ts';
 import { startApiServer } from '../../../tests/apiServer.ts';
+import { createCard } from '../../services/createCard.ts';
 import { buildDocument, buildMaterial, buildPeople, buildRun } from '../../../tests/factories.ts';
 
 let api: ApiServer;
@@ -48,6 +51,14 @@ const wanted = (overrides: Partial<CreateGrowthCard> = {}): CreateGrowthCard => 
 const groupUrl = () => `/api/v1/groups/${people.group.id}/cards`;
 const make = async (given: CreateGrowthCard): Promise<GrowthCard> =>
   read(growthCardSchema, await browser.post(groupUrl()).send(given).expect(201));
+
+/** What is stored of the group's cards. */
+const kept = async () => {
+  const where = { groupId: people.group.id };
+  const { GrowthCard, ShareLink } = api.models;
+  return { cards: await GrowthCard.count({ where }), links: await ShareLink.count({ where }) };
+};
+const above0: unknown = expect.toSatisfy((value: number) => value > 0);
 
 const execute = promisify(execFile);
 
@@ -198,6 +209,41 @@ describe('a growth card', () => {
     const token = card.url!.split('/').at(-1)!;
     expect((await api.anonymous().get(`/api/v1/shared/${token}/subject`)).body).toEqual({ opens: 'study' });
     expect((await make(wanted({ studyId: study.id, link: null }))).url).toBeNull();
+  });
+
+  test('is made once when the request is sent twice, at once or afterwards', async () => {
+    const send = (overrides: Partial<CreateGrowthCard> = {}) =>
+      browser.post(groupUrl()).set('Idempotency-Key', 'press-1').send(wanted(overrides));
+    const [first, second] = await Promise.all([send().expect(201), send().expect(201)]);
+    const ids = [first, second, await send().expect(201)].map((answer) => read(growthCardSchema, answer).id);
+    expect(new Set(ids).size).toBe(1);
+    expect(await kept()).toEqual({ cards: 1, links: 1 });
+    await send({ decision: { text: 'Another.' } }).expect(409);
+  });
+
+  test('that is cancelled leaves nothing behind, while its films are drawn or while it is stored', async () => {
+    const tolerance = { ratePercent: 3, randomPercent: 4, indexPercent: 1, samples: 20_000, seed: 7 };
+    const bands = vi.spyOn(api.dependencies.pool, 'bands');
+    const sent = browser.post(groupUrl()).set('Idempotency-Key', 'long').send(wanted({ tolerance }));
+    sent.end(() => undefined);
+    const making = async () =>
+      read(cardMakingSchema, await browser.get(`${groupUrl()}-in-making/long`).expect(200)).progress;
+    const isDrawing = { step: 'bands', total: 20_000, done: above0 };
+    await vi.waitFor(async () => expect(await making()).toMatchObject(isDrawing), { timeout: 10_000 });
+    sent.abort();
+    const ended = { type: 'rejected', value: { failure: 'cancelled' } };
+    await vi.waitFor(() => expect(bands.mock.settledResults[0]).toMatchObject(ended), { timeout: 10_000 });
+    bands.mockRestore();
+    expect(await making()).toBeNull();
+
+    const hungUp = new AbortController();
+    api.models.ShareLink.addHook('afterCreate', 'hang up', () => hungUp.abort());
+    const actor = { userId: people.editor.id, name: people.editor.name };
+    const given = createGrowthCardSchema.parse(wanted());
+    const late = createCard(api.dependencies, actor, people.group, given, { signal: hungUp.signal });
+    await expect(late).rejects.toMatchObject({ failure: 'cancelled' });
+    api.models.ShareLink.removeHook('afterCreate', 'hang up');
+    expect(await kept()).toEqual({ cards: 0, links: 0 });
   });
 
   test('is refused with the place of each mistake', async () => {
