@@ -14,6 +14,8 @@ export const liveCurveRequestSchema = strictObject({
     error: `must be at most ${LIMITS.liveCurvePoints}: start a run for more`,
   }),
   readings: z.array(z.enum(readingNames)).min(1).max(8),
+  /** Whether the header of the answer has the strip of the document's working point too. */
+  strip: z.boolean().optional(),
 });
 
 /** Angles of incidence at which something happens, for the document at its own wavelength and magnetization. */

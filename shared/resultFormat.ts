@@ -1,5 +1,6 @@
 import { z } from 'zod';
 import { readingDefinitions } from './readings.ts';
+import { readingsStripSchema } from './readingsStrip.ts';
 import { axisSchema, readingNames } from './run.ts';
 import type { ReadingName, SweepAxes, SweepAxis } from './run.ts';
 import { axesOf, pointCountOf } from './runAxes.ts';
@@ -48,6 +49,8 @@ const resultHeaderSchema = z.object({
   solverVersion: z.string(),
   /** SHA-256 of everything the numbers were computed from. */
   inputSha256: z.string(),
+  /** The readings at the working point of the film; only of a live curve that was asked for them. */
+  strip: readingsStripSchema.optional(),
 });
 
 export type ResultHeader = z.infer<typeof resultHeaderSchema>;

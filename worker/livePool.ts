@@ -1,5 +1,6 @@
 import { axisValues } from '../shared/axisValues.ts';
 import type { AngleFeatures } from '../shared/live.ts';
+import type { ReadingsStrip } from '../shared/readingsStrip.ts';
 import type { StackDocument } from '../shared/stack.ts';
 import type { ResolvableMaterial } from './dispersion/resolveCase.ts';
 import { runLimited } from './runLimited.ts';
@@ -19,6 +20,8 @@ export type LiveCurve = {
   axis: Float64Array;
   /** The readings in the order asked; NaN where one does not exist. */
   columns: Float64Array[];
+  /** The readings at the working point, where they were asked for. */
+  strip: ReadingsStrip | null;
 };
 
 /** Answers while somebody edits, in the threads for what is quick. */
@@ -32,7 +35,7 @@ export type LivePool = {
   liveCurve(
     sweep: LiveCurveTask['sweep'],
     materials: readonly ResolvableMaterial[],
-    options?: { signal?: AbortSignal },
+    options?: { strip?: boolean; signal?: AbortSignal },
   ): Promise<LiveCurve>;
   /** Angles at which something happens (design/angleFeatures.ts). @throws ComputeError as `liveCurve` */
   angleFeatures(document: StackDocument, materials: readonly ResolvableMaterial[]): Promise<AngleFeatures>;
@@ -42,7 +45,7 @@ export type LivePool = {
 export function livePool({ small, large }: { small: Threads; large: Threads }): LivePool {
   const shared = new SharedMaterials();
   return {
-    async liveCurve(sweep, materials, { signal } = {}) {
+    async liveCurve(sweep, materials, { strip = false, signal } = {}) {
       const { axis, readings } = sweep;
       const result = SharedResult.allocate(axis.points, readings.length);
       const stop = () => result.cancel();
@@ -52,9 +55,11 @@ export function livePool({ small, large }: { small: Threads; large: Threads }): 
         sweep,
         materials: materials.map((material) => shared.share(material)),
         result: result.buffer,
+        strip,
       };
+      let found: ReadingsStrip | null;
       try {
-        await runLimited(isQuick(sweep) ? small : large, 'liveCurve', task, {
+        found = await runLimited(isQuick(sweep) ? small : large, 'liveCurve', task, {
           milliseconds: LIVE_TIMEOUT_MS,
           message: `The curve took longer than ${LIVE_TIMEOUT_MS / 1000} s: ask fewer points, or start a run.`,
         });
@@ -62,7 +67,7 @@ export function livePool({ small, large }: { small: Threads; large: Threads }): 
         signal?.removeEventListener('abort', stop);
       }
       if (result.cancelled) throw new ComputeError('cancelled', 'The curve is no longer wanted.');
-      return { axis: Float64Array.from(axisValues(axis)), columns: result.columns };
+      return { axis: Float64Array.from(axisValues(axis)), columns: result.columns, strip: found };
     },
     angleFeatures: (document, materials) =>
       runLimited(

@@ -5,6 +5,7 @@ import type { FitResult } from '../shared/materialFit.ts';
 import type { LibrarySolveCase, SolveCase, SolveRequest, SolveResponse } from '../shared/solve.ts';
 import type { SensitivityAnswer, SensitivityRequest } from '../shared/toleranceDesign.ts';
 import type { AngleFeatures } from '../shared/live.ts';
+import type { ReadingsStrip } from '../shared/readingsStrip.ts';
 import type { StackDocument } from '../shared/stack.ts';
 import { angleFeatures as featuresOf } from './design/angleFeatures.ts';
 import type { DesignTask } from './design/designInput.ts';
@@ -114,11 +115,8 @@ export function sensitivity(task: {
   return outcomeOf(() => sensitivities(task.request.document, task.request.points, task.materials));
 }
 
-export function liveCurve(task: LiveCurveTask): TaskOutcome<null> {
-  return outcomeOf(() => {
-    curveInto(task);
-    return null;
-  });
+export function liveCurve(task: LiveCurveTask): TaskOutcome<ReadingsStrip | null> {
+  return outcomeOf(() => curveInto(task));
 }
 
 export function angleFeatures(task: {

@@ -1,3 +1,5 @@
+import { createSecretKey } from 'node:crypto';
+import type { KeyObject } from 'node:crypto';
 import type { Request, Response } from 'express';
 import passport from 'passport';
 import { Strategy as JwtStrategy } from 'passport-jwt';
@@ -49,10 +51,12 @@ function createSessionStrategy(dependencies: {
   models: Models;
   config: Pick<Config, 'production' | 'sessionSecret'>;
 }): JwtStrategy {
+  // A text would be tried as a public key first, at every request. The types of passport-jwt know no key objects.
+  const key = createSecretKey(Buffer.from(dependencies.config.sessionSecret)) as KeyObject & Buffer;
   return new JwtStrategy(
     {
       jwtFromRequest: sessionTokenOf,
-      secretOrKey: dependencies.config.sessionSecret,
+      secretOrKey: key,
       algorithms: ['HS256'],
     },
     (payload: unknown, done) => {

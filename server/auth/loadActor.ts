@@ -19,10 +19,8 @@ export async function loadActor(
   via: Actor['via'],
   sessionVersion: number | null,
 ): Promise<Actor | null> {
-  const [user, memberships] = await Promise.all([
-    models.User.findByPk(userId),
-    models.Membership.findAll({ where: { userId } }),
-  ]);
+  // One query: this stands before every answer.
+  const user = await models.User.findByPk(userId, { include: 'memberships' });
   if (!user || !mayActAsUser(user, config)) return null;
   if (sessionVersion !== null && sessionVersion !== user.sessionVersion) return null;
   return {
@@ -31,6 +29,6 @@ export async function loadActor(
     email: user.email,
     isSiteAdministrator: user.isSiteAdministrator,
     via,
-    roles: new Map(memberships.map((membership) => [membership.groupId, membership.role])),
+    roles: new Map(user.memberships?.map((membership) => [membership.groupId, membership.role])),
   };
 }

@@ -54,6 +54,7 @@ export function createModels(databaseUrl: string) {
   };
   const { User, Group, Membership, Stack, StackVersion, Run, ShareLink } = models;
   const { Study, StudyVersion, GrowthCard } = models;
+  User.hasMany(Membership, { as: 'memberships', foreignKey: 'userId' });
   Membership.belongsTo(User, { as: 'user', foreignKey: 'userId' });
   Membership.belongsTo(Group, { as: 'group', foreignKey: 'groupId' });
   Stack.hasMany(StackVersion, { as: 'versions', foreignKey: 'stackId' });

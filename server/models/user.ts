@@ -1,10 +1,12 @@
 import { DataTypes } from 'sequelize';
+import type { Membership } from './membership.ts';
 import type {
   CreationOptional,
   InferAttributes,
   InferCreationAttributes,
   Model,
   ModelStatic,
+  NonAttribute,
   Sequelize,
 } from 'sequelize';
 
@@ -21,6 +23,8 @@ export interface User extends Model<InferAttributes<User>, InferCreationAttribut
   isDemo: CreationOptional<boolean>;
   createdAt: CreationOptional<Date>;
   updatedAt: CreationOptional<Date>;
+  /** Present when the query included them. */
+  memberships?: NonAttribute<Membership[]>;
 }
 
 export function defineUser(sequelize: Sequelize): ModelStatic<User> {

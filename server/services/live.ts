@@ -26,21 +26,21 @@ const ALL_ANGLES = { kind: 'angle', from: 0, to: 89.99, points: 2, spacing: 'lin
  */
 export async function liveCurve(
   { materials: store, pool }: Live,
-  { document, axis, readings: asked }: LiveCurveRequest,
+  { document, axis, readings: asked, strip = false }: LiveCurveRequest,
   groupIds: Iterable<string>,
   signal: AbortSignal,
 ): Promise<Buffer> {
   const materials = await loadChecked(store, document, { axis }, groupIds);
   const readings = [...new Set(asked)];
   const curve = await explained(document, () =>
-    pool.liveCurve({ document, axis, readings }, materials, { signal }),
+    pool.liveCurve({ document, axis, readings }, materials, { strip, signal }),
   );
   const header = describeResult({ axis }, readings, {
     solverVersion: SOLVER_VERSION,
     inputSha256: hashOf({ document, axis, readings, materials: materials.map(nameOf) }),
   });
   return Buffer.concat([
-    encodeResultHeader(header),
+    encodeResultHeader(curve.strip ? { ...header, strip: curve.strip } : header),
     ...[curve.axis, ...curve.columns].map(
       (column) => new Uint8Array(column.buffer, column.byteOffset, column.byteLength),
     ),

@@ -1,6 +1,7 @@
 import { afterAll, beforeAll, beforeEach, describe, expect, test } from 'vitest';
 import { angleFeaturesSchema } from '../../../shared/live.ts';
 import { LIMITS } from '../../../shared/limits.ts';
+import { readStrip, stripRequest } from '../../../shared/readingsStrip.ts';
 import { decodeResult } from '../../../shared/resultFormat.ts';
 import { solveResponseSchema } from '../../../shared/solve.ts';
 import type { StackDocument } from '../../../shared/stack.ts';
@@ -41,18 +42,19 @@ const curve = (body: object) =>
     .post('/api/v1/live-curve')
     .send({ document, axis: angles, readings: ['rotationP', 'reflectanceS'], ...body });
 
+async function decoded(asked: ReturnType<typeof curve>) {
+  const answer = await asked.buffer(true).parse((response, done) => {
+    const pieces: Buffer[] = [];
+    response.on('data', (piece: Buffer) => pieces.push(piece));
+    response.on('end', () => done(null, Buffer.concat(pieces)));
+  });
+  expect(answer.status).toBe(200);
+  return decodeResult(Uint8Array.from(answer.body as Buffer).buffer);
+}
+
 describe('a live curve', () => {
   test('has the numbers that the solve route gives', async () => {
-    const answer = await curve({})
-      .buffer(true)
-      .parse((response, done) => {
-        const pieces: Buffer[] = [];
-        response.on('data', (piece: Buffer) => pieces.push(piece));
-        response.on('end', () => done(null, Buffer.concat(pieces)));
-      });
-    expect(answer.status).toBe(200);
-    const bytes = Uint8Array.from(answer.body as Buffer);
-    const { axis, columns, header } = decodeResult(bytes.buffer);
+    const { axis, columns, header } = await decoded(curve({}));
     const asked = toSolveCase(document, 632.8, [...axis]);
     const solved = read(
       solveResponseSchema,
@@ -67,6 +69,17 @@ describe('a live curve', () => {
       expect(columns.rotationP![index]).toBeCloseTo(kerr.p!.rotationDeg, 9);
       expect(columns.reflectanceS![index]).toBeCloseTo(R.s, 12);
     });
+  });
+
+  test('brings the readings at the working point along when it is asked to', async () => {
+    const { header } = await decoded(curve({ strip: true }));
+    const alone = await browser
+      .post('/api/v1/solve')
+      .send(stripRequest(document, document.workingPoint))
+      .expect(200);
+    expect(header.strip).toEqual(readStrip(read(solveResponseSchema, alone)));
+    expect(header.strip?.readings.rotationP).not.toBeNull();
+    expect((await decoded(curve({}))).header.strip).toBeUndefined();
   });
 
   test('says every problem at its field of the document', async () => {

@@ -15,6 +15,7 @@ import { useMaterials } from '../hooks/useMaterials.ts';
 import type { MaterialAt } from '../hooks/useMaterials.ts';
 import { useReadings } from '../hooks/useReadings.ts';
 import { useSteadySweep } from '../hooks/useSteadySweep.ts';
+import { useSweep } from '../hooks/useSweep.ts';
 import { useStackEditor } from '../hooks/useStackEditor.ts';
 import type { EditDocument } from '../hooks/useStackEditor.ts';
 import { useView } from '../hooks/useView.ts';
@@ -22,7 +23,7 @@ import { issueTarget } from '../model/issueTarget.ts';
 import { isTransverse, lengthOf, workingVectors } from '../model/magnetization.ts';
 import { filmCautions, hasAxes, isMagnetic, mediumClass, mediumName } from '../model/media.ts';
 import type { Materials } from '../model/media.ts';
-import { axesOf, keptReadings, wavelengthRange } from '../model/pageSweep.ts';
+import { axesOf, drawnReadings, keptReadings, wavelengthRange } from '../model/pageSweep.ts';
 import { kerrAngles } from '../model/solveStates.ts';
 import type { PreviewAxes } from '../model/sweepAxis.ts';
 import { ceilingCell } from '../model/stripReadings.ts';
@@ -115,10 +116,16 @@ export function StackWorkbench({
   const usualAxes = useMemo(() => axesOf(view, film, materials), [view, film, materials]);
   const axes = useSteadySweep(usualAxes, moving);
   const rangeNm = wavelengthRange(point, axes);
-  const live = useReadings(film, point);
   const vectors = useMemo(() => workingVectors(film, point.magnetization), [film, point]);
   const transverse = isTransverse(vectors);
   const averaged = addsIntensities(film);
+  const several = axes !== null && (axes.second !== null || axes.family !== null);
+  const drawn = useMemo(
+    () => drawnReadings(view, several, transverse, averaged),
+    [view, several, transverse, averaged],
+  );
+  const sweep = useSweep(film, point, axes, drawn.readings);
+  const live = useReadings(film, point, sweep);
   const kerr = useMemo(() => kerrAngles(live.readings, point.input), [live.readings, point.input]);
   const magnetized = vectors.some((m) => lengthOf(m) > 0);
   const ceiling = useMemo(
@@ -254,7 +261,8 @@ export function StackWorkbench({
             notes={filmCautions(film, materials, rangeNm)
               .filter(({ kind }) => kind === 'extended')
               .map(({ text }) => text)}
-            transverse={transverse}
+            sweep={sweep}
+            drawn={drawn}
             moving={moving}
             onView={setView}
             keep={mayEdit ? keep : null}

@@ -1,21 +1,16 @@
-import { useMemo } from 'react';
 import type { ReactNode } from 'react';
 import { pointCountOf } from '../../../../shared/runAxes.ts';
 import type { StackDocument } from '../../../../shared/stack.ts';
-import { addsIntensities } from '../../../../shared/stackCase.ts';
 import { ScaleControls } from '../../../components/plot/ReadingControls.tsx';
-import { families, readingsOf } from '../../../components/plot/readingView.ts';
-import type { Family, Light } from '../../../components/plot/readingView.ts';
 import { usePlotHeight } from '../../../components/plot/usePlotHeight.ts';
 import { Tabs } from '../../../components/Tabs.tsx';
 import { formatCount, formatDuration } from '../../../lib/format.ts';
-import { useSweep } from '../hooks/useSweep.ts';
 import type { LiveSweep } from '../hooks/useSweep.ts';
 import { axesProblem } from '../model/axesProblem.ts';
 import type { Materials } from '../model/media.ts';
+import type { DrawnReadings } from '../model/pageSweep.ts';
 import { axisProblems, defaultAxis, sweepableKinds, withFewerPoints } from '../model/sweepAxis.ts';
 import type { PreviewAxes } from '../model/sweepAxis.ts';
-import { usualFamilies } from '../model/viewState.ts';
 import type { ViewState } from '../model/viewState.ts';
 import { AxesForm } from './AxesForm.tsx';
 import { SolveProblem } from './ReadingsStrip.tsx';
@@ -28,7 +23,9 @@ type Props = {
   view: ViewState;
   /** What is swept; null where there is nothing to sweep. */
   axes: PreviewAxes | null;
-  transverse: boolean;
+  sweep: LiveSweep;
+  /** What of it is drawn. */
+  drawn: DrawnReadings;
   /** Whether the film is being moved. */
   moving: boolean;
   /** What to know of the constants along the sweep. */
@@ -56,30 +53,9 @@ const moreKinds = ['voigtScale', 'repeat', 'graded'] as const;
 
 /** The plot of the current question: which quantity is swept, over what, and which readings are drawn. */
 export function SweepPanel(props: Props) {
-  const { title, document, materials, view, axes, transverse, moving, notes, onView, keep } = props;
+  const { title, document, materials, view, axes, sweep, drawn, moving, notes, onView, keep } = props;
   const plotHeight = usePlotHeight(PAGE_ABOVE_PLOT);
-  const averaged = addsIntensities(document);
-  const offered = useMemo<readonly Family[]>(
-    () => families.filter((family) => !(family === 'ceiling' && averaged)),
-    [averaged],
-  );
-  const shown = view.shown ?? usualFamilies(transverse);
-  const light: Light = view.light ?? view.point.input;
-  const several = axes !== null && (axes.second !== null || axes.family !== null);
-  const choices = useMemo(() => readingsOf(offered, 'ps'), [offered]);
-  const usual = `${transverse ? 'contrast' : 'rotation'}${view.point.input === 's' ? 'S' : 'P'}`;
-  const one = choices.find((name) => name === (view.reading ?? usual)) ?? 'reflectanceP';
-  const readings = useMemo(
-    () =>
-      several
-        ? [one]
-        : readingsOf(
-            shown.filter((family) => offered.includes(family)),
-            light,
-          ),
-    [several, one, shown, offered, light],
-  );
-  const sweep = useSweep(document, view.point, axes, readings);
+  const { offered, shown, choices, light, several } = drawn;
   const between = axes && axesProblem(axes);
   const tab = tabOf(view);
   const kinds = tab === 'more' || tab === 'map' ? sweepableKinds(document) : [];

@@ -1,5 +1,6 @@
 import { useMemo } from 'react';
 import type { LiveCurveRequest } from '../../../../shared/live.ts';
+import type { ReadingsStrip } from '../../../../shared/readingsStrip.ts';
 import type { ReadingName } from '../../../../shared/run.ts';
 import type { LibrarySolveRequest } from '../../../../shared/solve.ts';
 import type { StackDocument, WorkingPoint } from '../../../../shared/stack.ts';
@@ -16,13 +17,17 @@ import type { PreviewAxes } from '../model/sweepAxis.ts';
 /** A map or a family is many solves: it waits until the film stands still. A curve is drawn at once. */
 const PAUSE_MS = 110;
 
-type DrawnSweep = Sweep & { columns: ReadingColumns; seconds: number };
+type DrawnSweep = Sweep & { columns: ReadingColumns; seconds: number; strip: ReadingsStrip | null };
 
 export type LiveSweep = {
   /** The last sweep there was: the axes and grids that its columns belong to. */
   drawn: DrawnSweep | null;
   pending: boolean;
   error: Error | null;
+  /** Whether the question that is asked now brings the readings at the working point along. */
+  bringsStrip: boolean;
+  /** Those that came with the last sweep. */
+  strip: ReadingsStrip | null;
 };
 
 type Question = { sweep: Sweep } & (
@@ -50,15 +55,21 @@ export function useSweep(
   const settled = useSettled(asked, PAUSE_MS);
   const question = asked?.curve ? asked : settled;
   const { answer, pending, error } = useLatest(question, solveSweep);
-  return { drawn: answer, pending: pending || question !== asked, error: question === asked ? error : null };
+  return {
+    drawn: answer,
+    pending: pending || question !== asked,
+    error: question === asked ? error : null,
+    bringsStrip: asked?.curve?.strip === true,
+    strip: answer?.strip ?? null,
+  };
 }
 
 async function solveSweep(question: Question, signal: AbortSignal): Promise<DrawnSweep> {
   const start = performance.now();
-  const columns = question.curve
-    ? (await liveCurve(question.curve, signal)).columns
-    : readSweepResponse(await solve(question.cases, signal), question.sweep);
-  return { ...question.sweep, columns, seconds: (performance.now() - start) / 1000 };
+  const { columns, strip } = question.curve
+    ? await liveCurve(question.curve, signal)
+    : { columns: readSweepResponse(await solve(question.cases, signal), question.sweep), strip: null };
+  return { ...question.sweep, columns, strip, seconds: (performance.now() - start) / 1000 };
 }
 
 /** The sweep with as many points as a preview has; null while an axis cannot be swept. */

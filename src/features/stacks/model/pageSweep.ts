@@ -3,6 +3,7 @@ import type { ReadingName, SweepAxes } from '../../../../shared/run.ts';
 import { pointCountOf } from '../../../../shared/runAxes.ts';
 import type { StackDocument, WorkingPoint } from '../../../../shared/stack.ts';
 import { families, readingsOf } from '../../../components/plot/readingView.ts';
+import type { Family, Light } from '../../../components/plot/readingView.ts';
 import type { Materials } from './media.ts';
 import { fitsFilm } from './sweepAxis.ts';
 import type { PreviewAxes } from './sweepAxis.ts';
@@ -24,6 +25,45 @@ export function axesOf(view: ViewState, film: StackDocument, materials: Material
   };
 }
 
+/** What of a sweep is drawn, and what could be. */
+export type DrawnReadings = {
+  /** Families that curves can be drawn of, and those that are. */
+  offered: readonly Family[];
+  shown: readonly Family[];
+  light: Light;
+  /** Readings that a map or a family can show one of. */
+  choices: readonly ReadingName[];
+  /** Whether the sweep has more than one axis, so that one reading is drawn. */
+  several: boolean;
+  readings: readonly ReadingName[];
+};
+
+export function drawnReadings(
+  view: Pick<ViewState, 'shown' | 'light' | 'reading' | 'point'>,
+  several: boolean,
+  transverse: boolean,
+  averaged: boolean,
+): DrawnReadings {
+  const offered = offeredFamilies(averaged);
+  const shown = view.shown ?? usualFamilies(transverse);
+  const light = view.light ?? view.point.input;
+  const choices = readingsOf(offered, 'ps');
+  const usual = `${transverse ? 'contrast' : 'rotation'}${view.point.input === 's' ? 'S' : 'P'}`;
+  const one = choices.find((name) => name === (view.reading ?? usual)) ?? 'reflectanceP';
+  const readings = several
+    ? [one]
+    : readingsOf(
+        shown.filter((family) => offered.includes(family)),
+        light,
+      );
+  return { offered, shown, light, choices, several, readings };
+}
+
+/** The ceiling is of amplitudes, which averaged intensities have none of. */
+function offeredFamilies(averaged: boolean): readonly Family[] {
+  return families.filter((family) => !(averaged && family === 'ceiling'));
+}
+
 /** A short run stores all that the page can show, a long one what is drawn, a map at most six. */
 export function keptReadings(
   sweep: SweepAxes,
@@ -36,7 +76,7 @@ export function keptReadings(
     const drawn = view.reading && !(averaged && view.reading === 'ceilingShare') ? [view.reading] : [];
     return [...new Set([...drawn, ...readingsOf(usual, 'ps')])].slice(0, LIMITS.mapReadings);
   }
-  const all = families.filter((family) => !(averaged && family === 'ceiling'));
+  const all = offeredFamilies(averaged);
   if (pointCountOf(sweep) <= ALL_READINGS_UP_TO) return readingsOf(all, 'ps');
   return readingsOf(
     (view.shown ?? usual).filter((family) => all.includes(family)),

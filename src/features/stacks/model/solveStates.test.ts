@@ -1,14 +1,6 @@
 import { describe, expect, it } from 'vitest';
-import { librarySolveRequestSchema } from '../../../../shared/solve.ts';
 import type { SolvePoint } from '../../../../shared/solve.ts';
-import {
-  sweepPoints,
-  pointRequest,
-  readPointResponse,
-  readSweepResponse,
-  statesFor,
-  sweepRequest,
-} from './solveStates.ts';
+import { sweepPoints, readSweepResponse, statesFor, sweepRequest } from './solveStates.ts';
 import type { Sweep } from './solveStates.ts';
 import { buildDocument } from './stackFixtures.ts';
 
@@ -28,37 +20,6 @@ function buildPoint(rotationDeg: number, reflectance = 0.5): SolvePoint {
     kerr: { p: angles, s: null },
   };
 }
-
-describe('pointRequest', () => {
-  it('asks for the film as given, with m = 0 and reversed, in one request that the contract accepts', () => {
-    const document = buildDocument();
-    const request = pointRequest(document, document.workingPoint);
-    expect(librarySolveRequestSchema.safeParse(request).success).toBe(true);
-    expect(request.cases.map(({ layers }) => layers[1])).toMatchObject([
-      { m: [0, 0, 1] },
-      { m: [0, 0, 0] },
-      { m: [0, 0, -1] },
-    ]);
-  });
-});
-
-describe('readPointResponse', () => {
-  it('reads the change against m = 0 and the contrast against the reversed film', () => {
-    const response = {
-      results: [
-        { points: [buildPoint(0.05, 0.51)] },
-        { points: [buildPoint(0.01)] },
-        { points: [buildPoint(-0.03, 0.49)] },
-      ],
-    };
-    const readings = readPointResponse(response);
-    expect(readings.rotationP).toBeCloseTo(0.04, 12);
-    expect(readings.ellipticityP).toBeCloseTo(0.08, 12);
-    expect(readings.rotationS).toBeNull();
-    expect(readings.crossSp).toBeCloseTo(5e-4, 15);
-    expect(readings.contrastP).toBeCloseTo(0.02, 12);
-  });
-});
 
 describe('a sweep', () => {
   const document = buildDocument();

@@ -1,4 +1,5 @@
 import type { LiveCurveRequest } from '../../../../shared/live.ts';
+import type { StripReadings } from '../../../../shared/readingsStrip.ts';
 import type { ReadingName, SweepAxis } from '../../../../shared/run.ts';
 import { applyAxis } from '../../../../shared/applyAxis.ts';
 import { comparedStates, outputFor, readingOf } from '../../../../shared/readings.ts';
@@ -6,6 +7,7 @@ import type { LibrarySolveCase, LibrarySolveRequest, SolveResponse } from '../..
 import type { Polarization, StackDocument, WorkingPoint } from '../../../../shared/stack.ts';
 import { addsIntensities, inMagnetizationState, toSolveCase } from '../../../../shared/stackCase.ts';
 import type { MagnetizationState } from '../../../../shared/stackCase.ts';
+import { listLayers } from './items.ts';
 
 /** Which magnetization states the readings are made of; `given` is always first. */
 export function statesFor(readings: readonly ReadingName[]): MagnetizationState[] {
@@ -14,38 +16,6 @@ export function statesFor(readings: readonly ReadingName[]): MagnetizationState[
   if (compared.some(({ zero }) => zero)) states.push('zero');
   if (compared.some(({ reversed }) => reversed)) states.push('reversed');
   return states;
-}
-
-/** One request for everything the readings strip shows: the film as given, with m = 0 and reversed. */
-export function pointRequest(document: StackDocument, point: WorkingPoint): LibrarySolveRequest {
-  const given = toSolveCase(document, point.wavelengthNm, point.angleDeg, point.magnetization);
-  const cases = (['given', 'zero', 'reversed'] as const).map((state) => inMagnetizationState(given, state));
-  if (!addsIntensities(document)) cases[0] = { ...given, outputs: ['ceiling'] };
-  return { cases };
-}
-
-export type PointReadings = Partial<Record<ReadingName, number | null>>;
-
-/** What the strip shows, and the share of the ceiling. */
-const stripNames = [
-  'rotationP',
-  'ellipticityP',
-  'rotationS',
-  'ellipticityS',
-  'reflectanceP',
-  'reflectanceS',
-  'crossSp',
-  'crossPs',
-  'contrastP',
-  'contrastS',
-  'ceilingShare',
-] as const;
-
-/** The answer to `pointRequest`. */
-export function readPointResponse(response: SolveResponse): PointReadings {
-  const [given, zero, reversed] = response.results.map((result) => result.points[0]);
-  if (!given || !zero || !reversed) return {};
-  return Object.fromEntries(stripNames.map((name) => [name, readingOf(name, given, zero, reversed)]));
 }
 
 type GridAxis = { axis: SweepAxis; grid: readonly number[] };
@@ -71,12 +41,20 @@ export function isCurve({ axis, grid, second, family, readings }: Sweep): boolea
   return axis.kind !== 'repeat' || grid.length === axis.points;
 }
 
+/** One curve, and with it the readings at the working point where they need not go ahead of it. */
 export function curveRequest(document: StackDocument, point: WorkingPoint, sweep: Sweep): LiveCurveRequest {
   return {
     document: { ...document, workingPoint: point },
     axis: { ...sweep.axis, points: sweep.grid.length },
     readings: [...sweep.readings],
+    ...(isSharp(document) && sweep.axis.kind !== 'graded' ? { strip: true } : {}),
   };
+}
+
+/** Sharp layers in coherent light: a point takes microseconds. */
+function isSharp(document: StackDocument): boolean {
+  const graded = [document.substrateGradedNm, ...listLayers(document.layers).map(({ gradedNm }) => gradedNm)];
+  return !addsIntensities(document) && graded.every((widthNm) => !widthNm);
 }
 
 /**
@@ -147,7 +125,7 @@ export function readSweepResponse(response: SolveResponse, sweep: Sweep): Readin
 }
 
 /** Rotation and ellipticity for the input light, deg; null where the reflected beam has no polarization. */
-export function kerrAngles(readings: PointReadings | null, input: Polarization) {
+export function kerrAngles(readings: StripReadings | null, input: Polarization) {
   const rotationDeg = readings?.[input === 'p' ? 'rotationP' : 'rotationS'] ?? null;
   const ellipticityDeg = readings?.[input === 'p' ? 'ellipticityP' : 'ellipticityS'] ?? null;
   return rotationDeg === null || ellipticityDeg === null ? null : { rotationDeg, ellipticityDeg };

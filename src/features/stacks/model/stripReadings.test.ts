@@ -1,8 +1,8 @@
 import { describe, expect, it } from 'vitest';
-import { readPointResponse } from './solveStates.ts';
+import { readStrip } from '../../../../shared/readingsStrip.ts';
 import { stripReadings } from './stripReadings.ts';
 
-const none = readPointResponse({ results: [] });
+const none = readStrip({ results: [] }).readings;
 const readings = {
   ...none,
   rotationP: 0.04029,

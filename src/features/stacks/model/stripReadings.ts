@@ -3,7 +3,7 @@ import { readingDefinitions } from '../../../../shared/readings.ts';
 import type { Polarization } from '../../../../shared/stack.ts';
 import { formatAngle, formatNumber } from '../../../lib/format.ts';
 import type { AngleUnit } from '../../../lib/format.ts';
-import type { PointReadings } from './solveStates.ts';
+import type { StripReadings } from '../../../../shared/readingsStrip.ts';
 
 export type StripReading = {
   family: 'rotation' | 'ellipticity' | 'reflectance' | 'cross' | 'contrast';
@@ -30,7 +30,7 @@ export type CeilingCell = { percent: number } | { reason: string };
  * @param averaged whether intensities are added or averaged
  */
 export function ceilingCell(
-  readings: PointReadings | null,
+  readings: StripReadings | null,
   magnetized: boolean,
   averaged: boolean,
 ): CeilingCell | null {
@@ -48,7 +48,7 @@ export function ceilingCell(
  * the place of the rotation, which is zero then.
  */
 export function stripReadings(
-  readings: PointReadings | null,
+  readings: StripReadings | null,
   input: Polarization,
   transverse: boolean,
   unit: AngleUnit,
