@@ -50,6 +50,7 @@ function NewCard({ group }: { group: Membership }) {
       <NewCardForm
         groupId={groupId}
         start={start}
+        keptUnder={`${groupId}?${search.toString()}`}
         nameOf={nameOf}
         onMade={({ id }) => void navigate(generatePath(paths.card, { cardId: id }))}
       />

@@ -1,5 +1,5 @@
 import { queryOptions, useMutation, useQueryClient } from '@tanstack/react-query';
-import { growthCardListSchema, growthCardSchema } from '../../../../shared/growthCard.ts';
+import { cardMakingSchema, growthCardListSchema, growthCardSchema } from '../../../../shared/growthCard.ts';
 import type { CreateGrowthCard, GrowthCard } from '../../../../shared/growthCard.ts';
 import { noContent, request } from '../../../lib/apiClient.ts';
 
@@ -20,15 +20,37 @@ export function cardListQuery(groupId: string) {
   });
 }
 
+const POLL_MS = 300;
+
+/** How far the card is that is being made under a key; asked again and again while there is one. */
+export function cardMakingQuery(groupId: string, key: string | null) {
+  return queryOptions({
+    queryKey: ['groups', groupId, 'cardsInMaking', key],
+    queryFn: ({ signal }) =>
+      request({ path: `/groups/${groupId}/cards-in-making/${key}`, schema: cardMakingSchema, signal }),
+    enabled: key !== null,
+    refetchInterval: POLL_MS,
+    gcTime: 0,
+    retry: false,
+  });
+}
+
+/** The same key sent twice (a double click, a repeated request) makes one card; an aborted signal makes none. */
 export function useCreateCard(groupId: string) {
   const client = useQueryClient();
   return useMutation({
-    mutationFn: (body: CreateGrowthCard): Promise<GrowthCard> =>
-      request({ method: 'POST', path: `/groups/${groupId}/cards`, body, schema: growthCardSchema }),
-    onSuccess: (card) => {
-      client.setQueryData(cardQuery(card.id).queryKey, card);
-      void client.invalidateQueries({ queryKey: cardListQuery(groupId).queryKey });
-    },
+    mutationFn: ({ body, key, signal }: { body: CreateGrowthCard; key: string; signal: AbortSignal }) =>
+      request({
+        method: 'POST',
+        path: `/groups/${groupId}/cards`,
+        body,
+        headers: { 'idempotency-key': key },
+        schema: growthCardSchema,
+        signal,
+      }),
+    onSuccess: (card) => client.setQueryData(cardQuery(card.id).queryKey, card),
+    // Also after a cancel, which may have come a moment too late.
+    onSettled: () => client.invalidateQueries({ queryKey: cardListQuery(groupId).queryKey }),
   });
 }
 
