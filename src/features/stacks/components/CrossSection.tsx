@@ -1,5 +1,5 @@
 import { Plus } from 'lucide-react';
-import { useCallback, useMemo } from 'react';
+import { memo, useCallback, useMemo } from 'react';
 import type { StackDocument, StackItem, StackMedium } from '../../../../shared/stack.ts';
 import { Button } from '../../../components/Button.tsx';
 import { useLayerDrag } from '../hooks/useLayerDrag.ts';
@@ -22,7 +22,7 @@ const ROOM = 430;
 type Props = { document: StackDocument; activeLayer: string | null };
 
 /** The film from its surface down: layers on a compressed depth scale, blocks in brackets, the substrate fading out. */
-export function CrossSection({ document, activeLayer }: Props) {
+export const CrossSection = memo(function CrossSection({ document, activeLayer }: Props) {
   const { materials, edit, announce } = useFilm();
   const onDrop = useCallback(
     (id: string, target: DropTarget) => {
@@ -107,7 +107,7 @@ export function CrossSection({ document, activeLayer }: Props) {
       )}
     </div>
   );
-}
+});
 
 function periodOf(items: readonly StackItem[]): number {
   return items.reduce((sum, item) => sum + thicknessOf(item), 0);

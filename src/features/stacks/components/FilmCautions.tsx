@@ -1,10 +1,11 @@
 import { TriangleAlert } from 'lucide-react';
+import { memo } from 'react';
 import type { StackDocument } from '../../../../shared/stack.ts';
 import { filmCautions } from '../model/media.ts';
 import { useFilm } from './film.ts';
 
 /** What to know of the film's constants, each said once: a Q from memory, a constant used beyond its wavelength. */
-export function FilmCautions({ document }: { document: StackDocument }) {
+export const FilmCautions = memo(function FilmCautions({ document }: { document: StackDocument }) {
   const { materials, rangeNm } = useFilm();
   const cautions = filmCautions(document, materials, rangeNm);
   if (cautions.length === 0) return null;
@@ -18,4 +19,4 @@ export function FilmCautions({ document }: { document: StackDocument }) {
       ))}
     </ul>
   );
-}
+});

@@ -1,44 +1,36 @@
 import { useCallback, useMemo, useState } from 'react';
 import type { ReactNode } from 'react';
-import type { Issue } from '../../../../shared/error.ts';
 import type { MaterialSummary } from '../../../../shared/material.ts';
 import type { ReadingName, SweepAxes } from '../../../../shared/run.ts';
 import type { Stack, StackDocument, StackMedium, WorkingPoint } from '../../../../shared/stack.ts';
 import { addsIntensities } from '../../../../shared/stackCase.ts';
 import { Button } from '../../../components/Button.tsx';
-import { ApiError } from '../../../lib/apiClient.ts';
 import type { AngleUnit } from '../../../lib/format.ts';
 import { useMoving } from '../../../lib/useMoving.ts';
 import { useSettled } from '../../../lib/useSettled.ts';
 import { useEditorKeys } from '../hooks/useEditorKeys.ts';
 import { useMaterials } from '../hooks/useMaterials.ts';
 import type { MaterialAt } from '../hooks/useMaterials.ts';
-import { useReadings } from '../hooks/useReadings.ts';
 import { useSteadySweep } from '../hooks/useSteadySweep.ts';
-import { useSweep } from '../hooks/useSweep.ts';
 import { useStackEditor } from '../hooks/useStackEditor.ts';
 import type { EditDocument } from '../hooks/useStackEditor.ts';
 import { useView } from '../hooks/useView.ts';
-import { issueTarget } from '../model/issueTarget.ts';
 import { isTransverse, lengthOf, workingVectors } from '../model/magnetization.ts';
 import { filmCautions, hasAxes, isMagnetic, mediumClass, mediumName } from '../model/media.ts';
 import type { Materials } from '../model/media.ts';
 import { axesOf, drawnReadings, keptReadings, wavelengthRange } from '../model/pageSweep.ts';
-import { kerrAngles } from '../model/solveStates.ts';
 import type { PreviewAxes } from '../model/sweepAxis.ts';
-import { ceilingCell } from '../model/stripReadings.ts';
 import { samePoint } from '../model/viewState.ts';
 import { classFill } from './classColours.ts';
 import { EditorNotices } from './EditorNotices.tsx';
-import { FilmDrawing } from './FilmDrawing.tsx';
 import { FilmHeader } from './FilmHeader.tsx';
 import { FilmMaterials } from './FilmMaterials.tsx';
 import { LeaveGuard } from './LeaveGuard.tsx';
+import { LiveFilmProvider } from './LiveFilmProvider.tsx';
+import { LiveDrawing, LivePointBar, LiveStrip } from './LiveParts.tsx';
 import { MediumPicker } from './MediumPicker.tsx';
-import { ReadingsStrip } from './ReadingsStrip.tsx';
 import { StackDescription } from './StackDescription.tsx';
 import { SweepPanel } from './SweepPanel.tsx';
-import { WorkingPointBar } from './WorkingPointBar.tsx';
 
 /** What "keep as run" keeps. */
 export type KeptSweep = {
@@ -124,14 +116,7 @@ export function StackWorkbench({
     () => drawnReadings(view, several, transverse, averaged),
     [view, several, transverse, averaged],
   );
-  const sweep = useSweep(film, point, axes, drawn.readings);
-  const live = useReadings(film, point, sweep);
-  const kerr = useMemo(() => kerrAngles(live.readings, point.input), [live.readings, point.input]);
   const magnetized = vectors.some((m) => lengthOf(m) > 0);
-  const ceiling = useMemo(
-    () => ceilingCell(live.readings, magnetized, averaged),
-    [live.readings, magnetized, averaged],
-  );
   const [activeLayer, setActiveLayer] = useState<string | null>(null);
   const nameOf = (medium: StackMedium) => mediumName(medium, materials);
   const describe = useCallback(
@@ -141,8 +126,6 @@ export function StackWorkbench({
     }),
     [materials],
   );
-  const solveIssues = live.error instanceof ApiError ? live.error.issues : noIssues;
-  const issues = useMemo(() => [...solveIssues, ...editor.saveIssues], [solveIssues, editor.saveIssues]);
   const canEdit = mayEdit && newer === null;
   useEditorKeys({ undo: editor.undo, redo: editor.redo, save: () => void editor.save() }, canEdit);
 
@@ -177,101 +160,105 @@ export function StackWorkbench({
   };
 
   return (
-    <div className="grid min-h-[calc(100dvh-53px)] grid-cols-1 lg:grid-cols-[416px_minmax(0,1fr)]">
-      <section aria-label="Film" className="border-line px-5 py-4 max-lg:border-b lg:border-r">
-        <FilmHeader stack={stack} editor={editor} mayEdit={mayEdit} />
-        {mayEdit && (
-          <EditorNotices
-            editor={editor}
-            showsNewer={showsNewer}
-            onShowNewer={setShowsNewer}
-            onCopied={onCopied}
-          />
-        )}
-        <div className="mt-3">
-          <FilmDrawing
-            document={film}
-            materials={materials}
-            library={library}
-            materialAt={materialAt}
-            point={point}
-            kerr={kerr}
-            rangeNm={rangeNm}
-            issues={issues}
-            edit={canEdit ? editor.editDocument : null}
-            activeLayer={activeLayer}
-          >
-            {samplePanel({
-              document: film,
-              edit: canEdit ? editor.editDocument : null,
-              nameOf,
-              isMagnetic: (medium) => isMagnetic(medium, materials),
-              hasAxes: (medium) => hasAxes(medium, materials),
-              pickMedium: pickMedium(materials),
-            })}
-            <FilmMaterials
+    <LiveFilmProvider
+      document={film}
+      point={point}
+      axes={axes}
+      readings={drawn.readings}
+      saveIssues={editor.saveIssues}
+    >
+      <div className="grid min-h-[calc(100dvh-53px)] grid-cols-1 lg:grid-cols-[416px_minmax(0,1fr)]">
+        <section aria-label="Film" className="border-line px-5 py-4 max-lg:border-b lg:border-r">
+          <FilmHeader stack={stack} editor={editor} mayEdit={mayEdit} />
+          {mayEdit && (
+            <EditorNotices
+              editor={editor}
+              showsNewer={showsNewer}
+              onShowNewer={setShowsNewer}
+              onCopied={onCopied}
+            />
+          )}
+          <div className="mt-3">
+            <LiveDrawing
               document={film}
               materials={materials}
+              library={library}
+              materialAt={materialAt}
+              point={point}
+              rangeNm={rangeNm}
               edit={canEdit ? editor.editDocument : null}
-            />
-          </FilmDrawing>
-        </div>
-        <StackDescription
-          text={newer?.description ?? editor.draft.description}
-          onChange={
-            canEdit
-              ? (description) => editor.editDraft((now) => ({ ...now, description }), 'description')
-              : null
-          }
-        />
-      </section>
-      <div className="min-w-0 px-6 pt-4 pb-6">
-        <div className="mb-3 flex flex-wrap items-center gap-x-3 gap-y-2">
-          <WorkingPointBar point={point} problems={pointProblems(film, issues)} onChange={setPoint} />
-          <span className="ml-auto text-[13px] text-muted">
-            {canEdit && !samePoint(point, film.workingPoint) ? (
-              <Button
-                tone="plain"
-                className="px-1.5! py-0.5! text-[13px]!"
-                title="Open the stack at this working point from now on; saved with the stack"
-                onClick={() => editor.editDocument((now) => ({ ...now, workingPoint: point }), null)}
-              >
-                Make this the stack's working point
-              </Button>
-            ) : (
-              'exact, change against m = 0'
-            )}
-          </span>
-        </div>
-        <ReadingsStrip
-          live={live}
-          input={point.input}
-          transverse={transverse}
-          unit={view.unit}
-          ceiling={ceiling}
-          averaged={averaged}
-        />
-        <div className="mt-4">
-          <SweepPanel
-            title={editor.draft.name}
-            document={film}
-            materials={materials}
-            view={view}
-            axes={axes}
-            notes={filmCautions(film, materials, rangeNm)
-              .filter(({ kind }) => kind === 'extended')
-              .map(({ text }) => text)}
-            sweep={sweep}
-            drawn={drawn}
-            moving={moving}
-            onView={setView}
-            keep={mayEdit ? keep : null}
+              activeLayer={activeLayer}
+            >
+              {samplePanel({
+                document: film,
+                edit: canEdit ? editor.editDocument : null,
+                nameOf,
+                isMagnetic: (medium) => isMagnetic(medium, materials),
+                hasAxes: (medium) => hasAxes(medium, materials),
+                pickMedium: pickMedium(materials),
+              })}
+              <FilmMaterials
+                document={film}
+                materials={materials}
+                edit={canEdit ? editor.editDocument : null}
+              />
+            </LiveDrawing>
+          </div>
+          <StackDescription
+            text={newer?.description ?? editor.draft.description}
+            onChange={
+              canEdit
+                ? (description) => editor.editDraft((now) => ({ ...now, description }), 'description')
+                : null
+            }
           />
+        </section>
+        <div className="min-w-0 px-6 pt-4 pb-6">
+          <div className="mb-3 flex flex-wrap items-center gap-x-3 gap-y-2">
+            <LivePointBar document={film} point={point} onChange={setPoint} />
+            <span className="ml-auto text-[13px] text-muted">
+              {canEdit && !samePoint(point, film.workingPoint) ? (
+                <Button
+                  tone="plain"
+                  className="px-1.5! py-0.5! text-[13px]!"
+                  title="Open the stack at this working point from now on; saved with the stack"
+                  onClick={() => editor.editDocument((now) => ({ ...now, workingPoint: point }), null)}
+                >
+                  Make this the stack's working point
+                </Button>
+              ) : (
+                'exact, change against m = 0'
+              )}
+            </span>
+          </div>
+          <LiveStrip
+            input={point.input}
+            transverse={transverse}
+            unit={view.unit}
+            magnetized={magnetized}
+            averaged={averaged}
+          />
+          <div className="mt-4">
+            <SweepPanel
+              title={editor.draft.name}
+              document={film}
+              materials={materials}
+              view={view}
+              axes={axes}
+              notes={filmCautions(film, materials, rangeNm)
+                .filter(({ kind }) => kind === 'extended')
+                .map(({ text }) => text)}
+              drawn={drawn}
+              moving={moving}
+              onView={setView}
+              keep={mayEdit ? keep : null}
+            />
+          </div>
+          <div className="mt-4">{panels}</div>
         </div>
-        <div className="mt-4">{panels}</div>
+        <LeaveGuard dirty={editor.dirty && mayEdit} />
       </div>
-      <LeaveGuard dirty={editor.dirty && mayEdit} />
-    </div>
+    </LiveFilmProvider>
   );
 }
 
@@ -284,15 +271,4 @@ function pickMedium(materials: Materials): SampledFilm['pickMedium'] {
       </MediumPicker>
     );
   };
-}
-
-const noIssues: readonly Issue[] = [];
-
-function pointProblems(document: StackDocument, issues: readonly Issue[]) {
-  const find = (field: string) =>
-    issues.find(({ path }) => {
-      const target = issueTarget(document, path);
-      return target.place === 'point' && target.field === field;
-    })?.message;
-  return { wavelengthNm: find('wavelengthNm'), angleDeg: find('angleDeg') };
 }

@@ -19,13 +19,13 @@ import type { Materials } from '../model/media.ts';
 import type { Sweep } from '../model/solveStates.ts';
 import type { ViewState } from '../model/viewState.ts';
 import { AngleMarks } from './AngleMarks.tsx';
+import { useLiveFilm } from './liveFilm.ts';
 
 type Props = {
   title: string;
   document: StackDocument;
   materials: Materials;
   view: ViewState;
-  sweep: LiveSweep;
   /** Families that curves can be drawn of, and those that are. */
   offered: readonly Family[];
   shown: readonly Family[];
@@ -39,7 +39,8 @@ type Props = {
 
 /** The preview as it suits its axes: curves of several readings, a family of one reading, or a map of one. */
 export function SweepFigure(props: Props) {
-  const { title, document, materials, view, sweep, offered, shown, choices, height, moving, onView } = props;
+  const { title, document, materials, view, offered, shown, choices, height, moving, onView } = props;
+  const { sweep } = useLiveFilm();
   const sweepsAngle = isAngleCurve(sweep.drawn);
   const features = useAngleFeatures(document, view.point, sweepsAngle);
   const marks = useMemo(

@@ -5,7 +5,6 @@ import { ScaleControls } from '../../../components/plot/ReadingControls.tsx';
 import { usePlotHeight } from '../../../components/plot/usePlotHeight.ts';
 import { Tabs } from '../../../components/Tabs.tsx';
 import { formatCount, formatDuration } from '../../../lib/format.ts';
-import type { LiveSweep } from '../hooks/useSweep.ts';
 import { axesProblem } from '../model/axesProblem.ts';
 import type { Materials } from '../model/media.ts';
 import type { DrawnReadings } from '../model/pageSweep.ts';
@@ -13,6 +12,7 @@ import { axisProblems, defaultAxis, sweepableKinds, withFewerPoints } from '../m
 import type { PreviewAxes } from '../model/sweepAxis.ts';
 import type { ViewState } from '../model/viewState.ts';
 import { AxesForm } from './AxesForm.tsx';
+import { useLiveFilm } from './liveFilm.ts';
 import { SolveProblem } from './ReadingsStrip.tsx';
 import { SweepFigure } from './SweepFigure.tsx';
 
@@ -23,8 +23,7 @@ type Props = {
   view: ViewState;
   /** What is swept; null where there is nothing to sweep. */
   axes: PreviewAxes | null;
-  sweep: LiveSweep;
-  /** What of it is drawn. */
+  /** What of the sweep is drawn. */
   drawn: DrawnReadings;
   /** Whether the film is being moved. */
   moving: boolean;
@@ -53,7 +52,7 @@ const moreKinds = ['voigtScale', 'repeat', 'graded'] as const;
 
 /** The plot of the current question: which quantity is swept, over what, and which readings are drawn. */
 export function SweepPanel(props: Props) {
-  const { title, document, materials, view, axes, sweep, drawn, moving, notes, onView, keep } = props;
+  const { title, document, materials, view, axes, drawn, moving, notes, onView, keep } = props;
   const plotHeight = usePlotHeight(PAGE_ABOVE_PLOT);
   const { offered, shown, choices, light, several } = drawn;
   const between = axes && axesProblem(axes);
@@ -69,8 +68,10 @@ export function SweepPanel(props: Props) {
         tabs={tabs}
         end={
           <>
-            <span className="text-[13px] text-muted">{axes && <SweepNote sweep={sweep} axes={axes} />}</span>
-            {axes && keep?.({ axes, problem: hasProblem(axes) || between !== null || sweep.error !== null })}
+            <span className="text-[13px] text-muted">{axes && <SweepNote axes={axes} />}</span>
+            {axes && keep && (
+              <KeepSweep axes={axes} problem={hasProblem(axes) || between !== null} keep={keep} />
+            )}
           </>
         }
       >
@@ -101,7 +102,6 @@ export function SweepPanel(props: Props) {
                 document={document}
                 materials={materials}
                 view={view}
-                sweep={sweep}
                 offered={offered}
                 shown={shown}
                 choices={choices}
@@ -109,7 +109,7 @@ export function SweepPanel(props: Props) {
                 moving={moving}
                 onView={onView}
               />
-              {sweep.error && <SolveProblem error={sweep.error} />}
+              <SweepProblem />
               {notes.map((note) => (
                 <p key={note} className="text-small text-warn">
                   {note}
@@ -160,7 +160,20 @@ function hasProblem({ axis, second, family }: PreviewAxes): boolean {
   return [axis, second, family].some((one) => one !== null && Object.keys(axisProblems(one)).length > 0);
 }
 
-function SweepNote({ sweep: { drawn }, axes }: { sweep: LiveSweep; axes: PreviewAxes }) {
+type KeepProps = { axes: PreviewAxes; problem: boolean; keep: NonNullable<Props['keep']> };
+
+function KeepSweep({ axes, problem, keep }: KeepProps) {
+  const { error } = useLiveFilm().sweep;
+  return keep({ axes, problem: problem || error !== null });
+}
+
+function SweepProblem() {
+  const { error } = useLiveFilm().sweep;
+  return error && <SolveProblem error={error} />;
+}
+
+function SweepNote({ axes }: { axes: PreviewAxes }) {
+  const { drawn } = useLiveFilm().sweep;
   if (drawn === null) return null;
   const { second, family } = drawn;
   const previewed = drawn.grid.length * (second?.grid.length ?? 1) * (family?.grid.length ?? 1);

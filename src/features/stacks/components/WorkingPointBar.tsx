@@ -1,4 +1,5 @@
 import { ChevronDown } from 'lucide-react';
+import { memo } from 'react';
 import type { ReactNode } from 'react';
 import type { WorkingMagnetization, WorkingPoint } from '../../../../shared/stack.ts';
 import { Quantity } from '../../../components/Quantity.tsx';
@@ -14,7 +15,7 @@ type Props = {
 };
 
 /** Where the readings strip stands: light, angle, input and magnetization, each changed where it is printed. */
-export function WorkingPointBar({ point, problems, onChange }: Props) {
+export const WorkingPointBar = memo(function WorkingPointBar({ point, problems, onChange }: Props) {
   return (
     <div role="group" aria-label="Working point" className="flex flex-wrap items-center gap-2">
       <Chip name="light">
@@ -81,7 +82,7 @@ export function WorkingPointBar({ point, problems, onChange }: Props) {
       </Chip>
     </div>
   );
-}
+});
 
 function Chip({ name, children }: { name: string; children: ReactNode }) {
   return (

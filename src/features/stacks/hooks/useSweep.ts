@@ -55,13 +55,13 @@ export function useSweep(
   const settled = useSettled(asked, PAUSE_MS);
   const question = asked?.curve ? asked : settled;
   const { answer, pending, error } = useLatest(question, solveSweep);
-  return {
-    drawn: answer,
-    pending: pending || question !== asked,
-    error: question === asked ? error : null,
-    bringsStrip: asked?.curve?.strip === true,
-    strip: answer?.strip ?? null,
-  };
+  const awaited = pending || question !== asked;
+  const failed = question === asked ? error : null;
+  const bringsStrip = asked?.curve?.strip === true;
+  return useMemo(
+    () => ({ drawn: answer, pending: awaited, error: failed, bringsStrip, strip: answer?.strip ?? null }),
+    [answer, awaited, failed, bringsStrip],
+  );
 }
 
 async function solveSweep(question: Question, signal: AbortSignal): Promise<DrawnSweep> {

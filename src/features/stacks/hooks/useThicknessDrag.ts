@@ -2,6 +2,9 @@ import { useRef, useState } from 'react';
 import type { PointerEvent } from 'react';
 import { draggedThickness } from '../model/thicknessDrag.ts';
 
+/** Steps closer together are one, or a pointer that reports 120 times a second leaves no time to draw what follows. */
+const STEP_MS = 30;
+
 type Grab = { pointerId: number; y: number; startNm: number; number: number };
 
 /**
@@ -16,10 +19,24 @@ export function useThicknessDrag(
 ) {
   const [grab, setGrab] = useState<Grab | null>(null);
   const drags = useRef(0);
+  const pace = useRef({ steppedAt: 0, timer: 0 });
   const changeTo = (nm: number, { number }: Grab) => {
     if (nm !== thicknessNm) onChange(nm, `drag ${number}`);
   };
-  const letGo = () => setGrab(null);
+  const stepTo = (nm: number, held: Grab) => {
+    window.clearTimeout(pace.current.timer);
+    const wait = pace.current.steppedAt + STEP_MS - performance.now();
+    const step = () => {
+      pace.current.steppedAt = performance.now();
+      onChange(nm, `drag ${held.number}`);
+    };
+    if (wait > 0) pace.current.timer = window.setTimeout(step, wait);
+    else if (nm !== thicknessNm) step();
+  };
+  const letGo = () => {
+    window.clearTimeout(pace.current.timer);
+    setGrab(null);
+  };
   const putBack = () => {
     if (grab) changeTo(grab.startNm, grab);
     letGo();
@@ -41,9 +58,14 @@ export function useThicknessDrag(
       },
       onPointerMove: (event: PointerEvent<HTMLElement>) => {
         if (grab?.pointerId !== event.pointerId) return;
-        changeTo(draggedThickness(grab.startNm, event.clientY - grab.y, leastNm), grab);
+        stepTo(draggedThickness(grab.startNm, event.clientY - grab.y, leastNm), grab);
       },
-      onPointerUp: letGo,
+      onPointerUp: (event: PointerEvent<HTMLElement>) => {
+        if (grab?.pointerId === event.pointerId) {
+          changeTo(draggedThickness(grab.startNm, event.clientY - grab.y, leastNm), grab);
+        }
+        letGo();
+      },
       onPointerCancel: putBack,
     },
     putBack,
