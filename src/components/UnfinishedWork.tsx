@@ -8,17 +8,20 @@ type UnfinishedWorkProps = {
   /** What is counted, such as "points", and the work itself in words, such as "run". */
   words: { counted: string; work: string; answer: string };
   mayEdit: boolean;
+  /** Whether what was found before the end is shown below. */
+  kept?: boolean;
   cancel: { isPending: boolean; isSuccess: boolean; error: Error | null };
   onCancel: () => void;
   onRerun: () => void;
   rerunning: boolean;
 };
 
-/** Where a calculation stands that has nothing to show: waiting, running, failed or cancelled. */
+/** Where a calculation stands that has no answer: waiting, running, failed or cancelled. */
 export function UnfinishedWork({
   progress,
   words,
   mayEdit,
+  kept = false,
   cancel,
   onCancel,
   onRerun,
@@ -50,6 +53,7 @@ export function UnfinishedWork({
     );
   }
   const failed = state === 'failed';
+  const rest = kept ? 'what it had found by then is below' : 'nothing was kept';
   return (
     <div role="alert" className={`card px-5 py-5 ${failed ? 'border-danger!' : ''}`}>
       <p className={`font-semibold ${failed ? 'text-danger' : ''}`}>
@@ -58,8 +62,13 @@ export function UnfinishedWork({
       <p className="mt-1 text-muted">
         {failed
           ? (error ?? 'No reason was recorded.')
-          : `It was stopped after ${formatCount(done)} of ${formatCount(total)} ${words.counted}; nothing was kept.`}
+          : `It was stopped after ${formatCount(done)} of ${formatCount(total)} ${words.counted}; ${rest}.`}
       </p>
+      {failed && kept && (
+        <p className="mt-1 text-muted">
+          After {formatCount(done)} of {formatCount(total)} {words.counted}; {rest}.
+        </p>
+      )}
       {mayEdit && (
         <Button tone="primary" className="mt-3" busy={rerunning} onClick={onRerun}>
           Run it again

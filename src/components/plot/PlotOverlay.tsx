@@ -1,4 +1,5 @@
 import { valueAt } from './curveValues.ts';
+import { markPlaces } from './markPlaces.ts';
 import type { PlotLayout } from './plotLayout.ts';
 import { toPixel } from './plotScale.ts';
 import type { PlotMark, PlotSeries } from './plotTypes.ts';
@@ -17,6 +18,11 @@ type Props = {
 export function PlotOverlay({ layout, series, size, cursor, marker, marks, selection }: Props) {
   const { frame } = layout;
   const visible = (value: number) => value >= layout.x.min && value <= layout.x.max;
+  const places = markPlaces(
+    marks.filter(({ x }) => visible(x)),
+    (x) => toPixel(layout.x, x),
+    frame,
+  );
   return (
     <svg
       width={size.width}
@@ -35,22 +41,14 @@ export function PlotOverlay({ layout, series, size, cursor, marker, marks, selec
           opacity="0.14"
         />
       )}
-      {marks
-        .filter(({ x }) => visible(x))
-        .map(({ x, label }) => (
-          <g key={`${label} ${x}`}>
-            <VerticalLine layout={layout} x={toPixel(layout.x, x)} stroke="var(--muted)" dash="1 3" />
-            <text
-              x={toPixel(layout.x, x)}
-              y={frame.top - 5}
-              textAnchor="middle"
-              fontSize="11"
-              fill="var(--muted)"
-            >
-              {label}
-            </text>
-          </g>
-        ))}
+      {places.map(({ x, label, px, y, anchor }) => (
+        <g key={`${label} ${x}`}>
+          <VerticalLine layout={layout} x={px} stroke="var(--muted)" dash="1 3" />
+          <text x={px} y={y} textAnchor={anchor} fontSize="11" fill="var(--muted)">
+            {label}
+          </text>
+        </g>
+      ))}
       {marker !== undefined && visible(marker) && (
         <g>
           <VerticalLine layout={layout} x={toPixel(layout.x, marker)} stroke="var(--accent)" />

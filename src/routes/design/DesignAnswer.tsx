@@ -1,53 +1,60 @@
-import { useQuery } from '@tanstack/react-query';
 import { generatePath, useNavigate, useSearchParams } from 'react-router-dom';
 import type { Design } from '../../../shared/design.ts';
-import type { StackDocument } from '../../../shared/stack.ts';
 import { Button, ButtonLink } from '../../components/Button.tsx';
 import { ErrorState } from '../../components/ErrorState.tsx';
 import { LoadingState } from '../../components/LoadingState.tsx';
 import { useNotify } from '../../components/Notices.tsx';
-import { designResultQuery, partialDesignResultQuery } from '../../features/designs/api/designResult.ts';
 import { DesignResultView } from '../../features/designs/components/DesignResultView.tsx';
+import type { FoundFilm } from '../../features/designs/components/OptimiseResultView.tsx';
 import { useCreateStack } from '../../features/stackList/api/createStack.ts';
 import { paths } from '../../lib/paths.ts';
+import type { DesignAnswer as Answer } from './useDesignAnswer.ts';
 
-type Props = { design: Design; mayEdit: boolean };
+type Props = { design: Design; answer: Answer; mayEdit: boolean };
 
-/** The answer of a design that is done; of a search under way what it has found so far. */
-export function DesignAnswer({ design, mayEdit }: Props) {
+/** The answer of a design that is done; of a search that is not, what it has found. */
+export function DesignAnswer({ design, answer: { shown, error, retry }, mayEdit }: Props) {
   const { state } = design.progress;
-  const path = `/designs/${design.id}`;
   const [search, setSearch] = useSearchParams();
   const done = state === 'done';
-  // Before the first films are solved there is nothing to ask for.
-  const searching = state === 'running' && design.kind === 'optimise' && design.progress.done > 0;
-  const result = useQuery({ ...designResultQuery(path), enabled: done });
-  const partial = useQuery({ ...partialDesignResultQuery(path), enabled: searching });
-  const shown = done ? result.data : searching ? partial.data : undefined;
   if (!shown) {
     if (!done) return null;
-    return result.error ? (
-      <ErrorState
-        title="The answer could not be loaded"
-        error={result.error}
-        onRetry={() => void result.refetch()}
-      />
+    return error ? (
+      <ErrorState title="The answer could not be loaded" error={error} onRetry={retry} />
     ) : (
       <LoadingState label="Loading the answer" rows={8} />
     );
   }
   return (
     <div className={done ? '' : 'mt-5'}>
+      {!done && (
+        <h2 className="mb-3 text-lead">
+          {state === 'running' ? 'Found so far' : 'Found before it was stopped'}
+        </h2>
+      )}
       <DesignResultView
         input={design.input}
         result={shown}
         materials={design.materials}
         search={search}
         onSearch={(next) => setSearch(next, { replace: true, preventScrollReset: true })}
-        {...(mayEdit && done
+        running={state === 'running'}
+        {...(mayEdit && state !== 'running'
           ? {
-              capActions: (candidateId: string) => <CardLink design={design} candidateId={candidateId} />,
-              filmActions: (document: StackDocument) => <MakeStack design={design} document={document} />,
+              capActions: (candidateId: string) => (
+                <CardLink design={design} film={{ candidate: candidateId }} />
+              ),
+              filmActions: (film: FoundFilm) => (
+                <div className="flex flex-wrap gap-2">
+                  {done && (
+                    <CardLink
+                      design={design}
+                      film={film.member === null ? {} : { member: String(film.member) }}
+                    />
+                  )}
+                  <MakeStack design={design} film={film} />
+                </div>
+              ),
             }
           : {})}
       />
@@ -55,8 +62,8 @@ export function DesignAnswer({ design, mayEdit }: Props) {
   );
 }
 
-function CardLink({ design: { id, groupId }, candidateId }: { design: Design; candidateId: string }) {
-  const query = new URLSearchParams({ design: id, candidate: candidateId });
+function CardLink({ design: { id, groupId }, film }: { design: Design; film: Record<string, string> }) {
+  const query = new URLSearchParams({ design: id, ...film });
   return (
     <ButtonLink className="py-1!" to={`${generatePath(paths.newCard, { groupId })}?${query.toString()}`}>
       Growth card
@@ -65,7 +72,7 @@ function CardLink({ design: { id, groupId }, candidateId }: { design: Design; ca
 }
 
 /** A film that the search has found becomes a stack of the group. */
-function MakeStack({ design, document }: { design: Design; document: StackDocument }) {
+function MakeStack({ design, film }: { design: Design; film: FoundFilm }) {
   const create = useCreateStack(design.groupId);
   const navigate = useNavigate();
   const notify = useNotify();
@@ -77,11 +84,11 @@ function MakeStack({ design, document }: { design: Design; document: StackDocume
         create.mutate(
           {
             name: `${design.stackName ?? 'Film'}, optimised`.slice(0, 120),
-            description: `Found by the design “${design.name}”.`,
+            description: `Found by the design “${design.name}”: ${film.name}.`,
             // The readings of the new stack stand where the search looked.
             document: {
-              ...document,
-              workingPoint: design.input.points[0]?.workingPoint ?? document.workingPoint,
+              ...film.document,
+              workingPoint: design.input.points[0]?.workingPoint ?? film.document.workingPoint,
             },
           },
           {

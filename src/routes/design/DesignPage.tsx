@@ -20,6 +20,7 @@ import { paths } from '../../lib/paths.ts';
 import { rememberGroup } from '../../lib/rememberedGroup.ts';
 import { DesignAnswer } from './DesignAnswer.tsx';
 import { DesignLine } from './DesignLine.tsx';
+import { useDesignAnswer } from './useDesignAnswer.ts';
 
 /** `/designs/:designId`: progress while it runs, then the answer and everything it rests on. */
 export function DesignPage() {
@@ -52,6 +53,7 @@ function LoadedDesign({ design }: { design: Design }) {
   const navigate = useNavigate();
   const [search] = useSearchParams();
   const rerun = useRerunDesign(design);
+  const answer = useDesignAnswer(design);
   const done = design.progress.state === 'done';
   const path = `/designs/${design.id}`;
   const startRerun = () =>
@@ -92,13 +94,19 @@ function LoadedDesign({ design }: { design: Design }) {
         </p>
       )}
       {!done && (
-        <DesignState design={design} mayEdit={editor} onRerun={startRerun} rerunning={rerun.isPending} />
+        <DesignState
+          design={design}
+          mayEdit={editor}
+          kept={answer.shown !== undefined}
+          onRerun={startRerun}
+          rerunning={rerun.isPending}
+        />
       )}
-      <DesignAnswer design={design} mayEdit={editor} />
+      <DesignAnswer design={design} answer={answer} mayEdit={editor} />
       <div className="mt-8 flex flex-col gap-7 border-t border-line pt-5">
         <RunProvenance run={design} />
         <div className="grid grid-cols-1 gap-7 lg:grid-cols-2">
-          <RunDownloads path={path} valuesFile="result.csv" hasData={done} />
+          {done && <RunDownloads path={path} valuesFile="result.csv" hasData />}
           {editor && done && <SharePanel subject={{ opens: 'design', id: design.id }} />}
         </div>
       </div>

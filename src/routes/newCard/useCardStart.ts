@@ -6,6 +6,7 @@ import type { Stack } from '../../../shared/stack.ts';
 import { usualTolerance } from '../../features/cards/model/cardDraft.ts';
 import type { CardStart } from '../../features/cards/model/cardDraft.ts';
 import { designedFilm } from '../../features/cards/model/designedFilm.ts';
+import type { DesignChoice } from '../../features/cards/model/designedFilm.ts';
 import { designQuery } from '../../features/designs/api/design.ts';
 import { designResultQuery } from '../../features/designs/api/designResult.ts';
 import { pointWords } from '../../features/designs/model/pointWords.ts';
@@ -15,7 +16,9 @@ import { formatNumber } from '../../lib/format.ts';
 /** What the address says a card begins with: a stack as it is, or the film that a design ended with. */
 export function useCardStart(search: URLSearchParams) {
   const [stackId, designId] = [search.get('stack'), search.get('design')];
-  const [candidate, studyId] = [search.get('candidate'), search.get('study')];
+  const [candidateId, studyId] = [search.get('candidate'), search.get('study')];
+  const place = search.get('member');
+  const member = place !== null && /^\d+$/.test(place) ? Number(place) : null;
   const stack = useQuery({ ...stackQuery(stackId ?? ''), enabled: stackId !== null });
   const design = useQuery({ ...designQuery(designId ?? ''), enabled: designId !== null });
   const result = useQuery({ ...designResultQuery(`/designs/${designId}`), enabled: designId !== null });
@@ -23,12 +26,12 @@ export function useCardStart(search: URLSearchParams) {
     const study = studyId === null ? {} : { studyId };
     if (designId !== null) {
       return design.data && result.data
-        ? { ...fromDesign(design.data, result.data, candidate), ...study }
+        ? { ...fromDesign(design.data, result.data, { candidateId, member }), ...study }
         : null;
     }
     if (stackId === null) return 'missing';
     return stack.data ? { ...fromStack(stack.data), ...study } : null;
-  }, [designId, stackId, studyId, candidate, design.data, result.data, stack.data]);
+  }, [designId, stackId, studyId, candidateId, member, design.data, result.data, stack.data]);
   const failed = [stack, design, result].find(({ error }) => error !== null);
   return { start, error: failed?.error ?? null, retry: () => void failed?.refetch() };
 }
@@ -45,11 +48,11 @@ function fromStack({ name, document }: Stack): CardStart {
   };
 }
 
-function fromDesign(design: Design, result: DesignResult, candidate: string | null): CardStart {
+function fromDesign(design: Design, result: DesignResult, chosen: DesignChoice): CardStart {
   const { id, input } = design;
   return {
-    title: filmTitle(design, result, candidate),
-    document: designedFilm(design, result, candidate),
+    title: filmTitle(design, result, chosen),
+    document: designedFilm(design, result, chosen),
     points: input.points,
     signal: 'signal' in input ? input.signal : 'rotation',
     tolerance: 'tolerance' in input ? input.tolerance : usualTolerance,
@@ -58,11 +61,11 @@ function fromDesign(design: Design, result: DesignResult, candidate: string | nu
 }
 
 /** A card is of a film: it bears the name of its stack and what the design made of it, not the whole question. */
-function filmTitle({ name, stackName }: Design, result: DesignResult, candidate: string | null): string {
+function filmTitle({ name, stackName }: Design, result: DesignResult, { candidateId }: DesignChoice): string {
   if (stackName === null) return name;
   if (result.kind === 'optimise') return `${stackName}, optimised`.slice(0, LIMITS.nameLength);
   if (result.kind !== 'cap') return stackName;
-  const wanted = candidate ?? result.ranking[0];
+  const wanted = candidateId ?? result.ranking[0];
   const cap = result.candidates.find(({ id }) => id === wanted);
   if (!cap?.best) return stackName;
   const cover = `${cap.label} ${formatNumber(cap.best.thicknessNm, { digits: 3 })} nm`;

@@ -25,7 +25,7 @@ export function CardRates({ form, document, nameOf }: Props) {
         {grownLayers(document.layers).map((layer, index) => (
           <Field
             key={layer.id}
-            label={`${nameOf(layer.medium)}, ${plainNumber(layer.thicknessNm)} nm`}
+            label={`${nameOf(layer.medium)}${layer.note ? ` (${layer.note})` : ''}, ${plainNumber(layer.thicknessNm)} nm`}
             error={formState.errors.rates?.[index]?.nmPerMin?.message}
           >
             {(control) => (

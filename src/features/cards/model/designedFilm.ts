@@ -1,20 +1,25 @@
 import type { Design, DesignResult } from '../../../../shared/design.ts';
 import type { StackDocument, StackItem, StackLayer } from '../../../../shared/stack.ts';
 
+/** Which film of a design is meant. */
+export type DesignChoice = { candidateId: string | null; member: number | null };
+
 /**
  * The film that a design calculation ended with: the best thickness of a candidate cap, or the best thicknesses found; the
  * film as drawn where there is no better one.
  *
- * @param candidateId of the cap; the best of the ranking when it is null or not there
+ * @param chosen.candidateId of the cap; the best of the ranking when it is null or not there
+ * @param chosen.member place of a film in the set of two goals; the best of the first goal when it is null or not there
  */
 export function designedFilm(
   { input }: Design,
   result: DesignResult,
-  candidateId: string | null,
+  { candidateId, member }: DesignChoice,
 ): StackDocument {
   if (input.kind === 'optimise' && result.kind === 'optimise') {
-    const { layerIds, best } = result;
-    const nm = new Map(layerIds.map((id, index) => [id, best.thicknessesNm[index]!]));
+    const { layerIds, best, pareto } = result;
+    const { thicknessesNm } = (member === null ? undefined : pareto?.[member]) ?? best;
+    const nm = new Map(layerIds.map((id, index) => [id, thicknessesNm[index]!]));
     return mapLayers(input.document, (layer) => ({
       ...layer,
       thicknessNm: nm.get(layer.id) ?? layer.thicknessNm,

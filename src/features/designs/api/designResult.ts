@@ -1,4 +1,4 @@
-import { queryOptions } from '@tanstack/react-query';
+import { keepPreviousData, queryOptions } from '@tanstack/react-query';
 import { designResultSchema } from '../../../../shared/design.ts';
 import { request } from '../../../lib/apiClient.ts';
 
@@ -18,15 +18,26 @@ export function designResultQuery(path: string) {
 /** How often the path of a search is drawn anew, ms. */
 const PARTIAL_MS = 1000;
 
-/** What a search has found so far. */
-export function partialDesignResultQuery(path: string) {
+/** How often a stopped search is asked again for what it had found: another machine may not have stored it yet. */
+const KEPT_RETRIES = 4;
+
+/**
+ * What a search has found so far, or what it had found when it was stopped.
+ *
+ * @param running asks again and again
+ */
+export function partialDesignResultQuery(path: string, running: boolean) {
   return queryOptions({
-    queryKey: ['design result so far', path],
+    queryKey: ['design result so far', path, running],
     queryFn: ({ signal }) =>
       request({ path: `${path}/result?partial=true`, schema: designResultSchema, signal }),
-    refetchInterval: PARTIAL_MS,
+    refetchInterval: running ? PARTIAL_MS : false,
+    staleTime: running ? 0 : Infinity,
     gcTime: 0,
+    // What was last seen stays in sight while what was kept is fetched.
+    placeholderData: keepPreviousData,
     // Another machine may be computing it, or nothing is found yet; then there is only the progress to show.
-    retry: false,
+    retry: running ? false : KEPT_RETRIES,
+    retryDelay: PARTIAL_MS,
   });
 }

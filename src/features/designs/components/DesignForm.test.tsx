@@ -141,3 +141,22 @@ it('comes back after a reload, values that make no sense included', async () => 
   expect(screen.getByRole('spinbutton', { name: 'Rate' })).toHaveProperty('value', '70');
   expect(screen.getByText(/What you had filled in is back/)).toBeDefined();
 });
+
+it('offers a least reflectance with a goal that needs light, which can be cleared and goes with the goal', async () => {
+  const { sent, user } = show('optimise');
+  const least = () => screen.getByRole('spinbutton', { name: 'Least reflectance' });
+  expect(least()).toHaveProperty('value', '0.01');
+  expect(screen.getByText(/0.01 is common practice, no source/)).toBeDefined();
+  const goal = screen.getByRole('combobox', { name: 'Goal' });
+  await user.selectOptions(goal, 'least reflectance');
+  expect(least()).toHaveProperty('value', '0');
+  await user.selectOptions(goal, 'zero ellipticity');
+  expect(least()).toHaveProperty('value', '0.01');
+  await user.clear(least());
+  await user.type(least(), '0');
+  await user.selectOptions(goal, 'rotation');
+  await user.click(screen.getByRole('button', { name: 'Search the best film' }));
+  await waitFor(() => expect(sent).toHaveLength(1));
+  expect(createDesignSchema.parse(sent[0]).input).toMatchObject({ goal: { quantity: 'rotation' } });
+  expect(JSON.stringify(sent[0])).not.toContain('leastReflectance');
+});

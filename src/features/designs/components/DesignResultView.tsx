@@ -1,12 +1,12 @@
 import type { ReactNode } from 'react';
 import { useState } from 'react';
 import type { DesignInput, DesignResult } from '../../../../shared/design.ts';
-import type { StackDocument } from '../../../../shared/stack.ts';
 import { readDesignView, withDesignView } from '../model/designView.ts';
 import type { DesignView } from '../model/designView.ts';
 import type { NamedMaterial } from '../model/layerNames.ts';
 import { CapResultView } from './CapResultView.tsx';
 import { OptimiseResultView } from './OptimiseResultView.tsx';
+import type { FoundFilm } from './OptimiseResultView.tsx';
 import { ToleranceResultView } from './ToleranceResultView.tsx';
 
 type Props = {
@@ -20,7 +20,9 @@ type Props = {
   /** What people who may change something can do with a cap. */
   capActions?: (candidateId: string) => ReactNode;
   /** ... with a film that a search has found. */
-  filmActions?: (document: StackDocument) => ReactNode;
+  filmActions?: (film: FoundFilm) => ReactNode;
+  /** Whether a search still goes on, so that what it has found changes. */
+  running?: boolean;
 };
 
 /** The answer to a design question, read-only: cap chooser, best film or tolerance. */
@@ -32,6 +34,7 @@ export function DesignResultView({
   onSearch,
   capActions,
   filmActions,
+  running = false,
 }: Props) {
   const [own, setOwn] = useState(() => search ?? new URLSearchParams());
   const shown = onSearch && search ? search : own;
@@ -57,6 +60,7 @@ export function DesignResultView({
         materials={materials}
         view={view}
         onView={onView}
+        running={running}
         {...(filmActions ? { actions: filmActions } : {})}
       />
     );

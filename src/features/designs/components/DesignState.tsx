@@ -2,7 +2,14 @@ import type { Design } from '../../../../shared/design.ts';
 import { UnfinishedWork } from '../../../components/UnfinishedWork.tsx';
 import { useCancelDesign } from '../api/changeDesign.ts';
 
-type Props = { design: Design; mayEdit: boolean; onRerun: () => void; rerunning: boolean };
+type Props = {
+  design: Design;
+  mayEdit: boolean;
+  /** Whether what it had found before its end is there. */
+  kept: boolean;
+  onRerun: () => void;
+  rerunning: boolean;
+};
 
 const words = { counted: 'films', work: 'calculation', answer: 'answer' };
 

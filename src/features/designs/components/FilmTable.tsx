@@ -11,7 +11,7 @@ type Props = {
   chosenLabel: string;
 };
 
-const cell = 'px-3 py-1.5 text-right whitespace-nowrap';
+const cell = 'px-2 py-1.5 sm:px-3 text-right whitespace-nowrap';
 
 /** The thicknesses that were varied: as drawn, as found, and between what bounds. */
 export function FilmTable({ input, materials, startNm, chosenNm, chosenLabel }: Props) {

@@ -1,6 +1,7 @@
 import { goalQuantities } from '../../../../shared/optimiseDesign.ts';
 import type { Goal } from '../../../../shared/optimiseDesign.ts';
 import type { StackDocument } from '../../../../shared/stack.ts';
+import { leastReflectanceFor, needsLight } from '../model/goalLight.ts';
 import { goalLabels } from '../model/goalWords.ts';
 import { drawnLayers, layerWords } from '../model/layerNames.ts';
 import type { NamedMaterial } from '../model/layerNames.ts';
@@ -28,11 +29,10 @@ export function GoalFields({ goal, path, document, materials, onChange }: Props)
         value={quantity}
         options={goalQuantities.map((name) => ({ value: name, label: goalLabels[name] }))}
         onChange={(next) => {
-          const { layerId: _layer, ...rest } = goal;
           const first = layers[0]?.id;
           onChange({
-            ...rest,
             quantity: next,
+            ...leastReflectanceFor(goal, next),
             ...(next === 'insensitivity' && first !== undefined ? { layerId: layerId ?? first } : {}),
           });
         }}
@@ -51,7 +51,12 @@ export function GoalFields({ goal, path, document, materials, onChange }: Props)
         path={`${path}.leastReflectance`}
         value={leastReflectance ?? 0}
         step={0.01}
-        hint="0: none"
+        className="w-full sm:w-96"
+        hint={
+          needsLight(quantity)
+            ? 'Films that reflect less are left out, because their angles say little: 0.01 is common practice, no source; 0 leaves none out.'
+            : 'Films that reflect less are left out; 0 leaves none out.'
+        }
         onChange={(next) => {
           const { leastReflectance: _least, ...rest } = goal;
           onChange(next === 0 ? rest : { ...rest, leastReflectance: next });

@@ -1,5 +1,6 @@
 import { LIMITS } from '../../../../shared/limits.ts';
 import type { OptimiseDesign } from '../../../../shared/optimiseDesign.ts';
+import { newGoal } from '../model/goalLight.ts';
 import { drawnLayers, layerWords } from '../model/layerNames.ts';
 import type { NamedMaterial } from '../model/layerNames.ts';
 import { newVariable } from '../model/startInput.ts';
@@ -86,7 +87,7 @@ export function OptimiseForm({ input, materials, onChange }: Props) {
             checked={second !== undefined}
             onChange={({ target }) => {
               const { second: _second, ...rest } = input;
-              onChange(target.checked ? { ...rest, second: { quantity: 'zero ellipticity' } } : rest);
+              onChange(target.checked ? { ...rest, second: newGoal('zero ellipticity') } : rest);
             }}
           />
           a second goal

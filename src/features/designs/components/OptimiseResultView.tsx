@@ -2,16 +2,19 @@ import { useMemo } from 'react';
 import type { ReactNode } from 'react';
 import type { OptimiseDesign, OptimiseResult } from '../../../../shared/optimiseDesign.ts';
 import type { StackDocument } from '../../../../shared/stack.ts';
-import { formatCount } from '../../../lib/format.ts';
 import type { DesignView } from '../model/designView.ts';
-import { goalWords } from '../model/goalWords.ts';
-import { layerWords, withThicknesses } from '../model/layerNames.ts';
+import { withThicknesses } from '../model/layerNames.ts';
 import type { NamedMaterial } from '../model/layerNames.ts';
-import { goalQuantityLooks, printQuantity } from '../model/quantities.ts';
+import { shownFilm } from '../model/shownFilm.ts';
+import type { ShownFilm } from '../model/shownFilm.ts';
 import { FilmTable } from './FilmTable.tsx';
+import { OptimiseAnswer } from './OptimiseAnswer.tsx';
 import { ParetoPlot } from './ParetoPlot.tsx';
 import { PointReadingsTable } from './PointReadingsTable.tsx';
 import { SearchPath } from './SearchPath.tsx';
+
+/** A film that a search has found, to do something with. */
+export type FoundFilm = Pick<ShownFilm, 'name' | 'member'> & { document: StackDocument };
 
 type Props = {
   input: OptimiseDesign;
@@ -19,54 +22,35 @@ type Props = {
   materials: readonly NamedMaterial[];
   view: DesignView;
   onView: (change: Partial<DesignView>) => void;
-  actions?: (document: StackDocument) => ReactNode;
+  running: boolean;
+  actions?: (film: FoundFilm) => ReactNode;
 };
 
-/** The best film beside the one drawn, the way there, and with two goals the films of which none is better in both. */
-export function OptimiseResultView({ input, result, materials, view, onView, actions }: Props) {
+/** The film shown beside the one drawn, the way there, and with two goals the films of which none is better in both. */
+export function OptimiseResultView({ input, result, materials, view, onView, running, actions }: Props) {
   const { goal, second, document } = input;
-  const member = view.member === null ? undefined : result.pareto?.[view.member];
-  const thicknessesNm = member?.thicknessesNm ?? result.best.thicknessesNm;
-  const film = useMemo(
-    () => withThicknesses(document, result.layerIds, thicknessesNm),
-    [document, result.layerIds, thicknessesNm],
+  // While a search goes on, a place in the set means another film every second.
+  const film = useMemo(() => shownFilm(result, running ? null : view.member), [result, running, view.member]);
+  const { name, member, thicknessesNm, points } = film;
+  const found = useMemo(
+    () => ({ name, member, document: withThicknesses(document, result.layerIds, thicknessesNm) }),
+    [name, member, document, result.layerIds, thicknessesNm],
   );
-  const look = goalQuantityLooks[goal.quantity];
-  const atBounds = result.best.atBounds.map((id) => layerWords(document, id, materials));
+  const unfinished = result.ended === 'unfinished';
   return (
     <div className="flex flex-col gap-6">
-      <section aria-label="Answer" className="card px-5 py-4">
-        <p className="text-note text-muted">{goalWords(goal, document, materials)}</p>
-        <div className="flex flex-wrap items-start gap-x-6 gap-y-3">
-          <p className="min-w-0 flex-1 text-lead">
-            {printQuantity(look, result.start.value)} as drawn, {printQuantity(look, result.best.value)} at
-            best
-          </p>
-          {actions?.(film)}
-        </div>
-        {second && (
-          <p className="mt-1 text-note text-muted">Second goal: {goalWords(second, document, materials)}.</p>
-        )}
-        <p className="mt-1 text-note text-muted">
-          {formatCount(result.evaluations)} films solved;{' '}
-          {result.ended === 'converged'
-            ? 'the search ended because nothing better was found near the best film'
-            : 'the search ended because its effort was used up: more effort may find a better film'}
-          . Seed {result.seed}.
-        </p>
-        {atBounds.length > 0 && (
-          <p className="mt-1 text-warn">
-            ▲ At the end of its bounds: {atBounds.join('; ')}. Wider bounds may give more.
-          </p>
-        )}
-      </section>
-      {result.pareto && second && (
+      <OptimiseAnswer input={input} result={result} film={film} materials={materials} running={running}>
+        {actions?.(found)}
+      </OptimiseAnswer>
+      {result.pareto && result.pareto.length > 0 && second && (
         <ParetoPlot
           goal={goal}
           second={second}
           pareto={result.pareto}
-          member={view.member}
-          onMember={(chosen) => onView({ member: chosen })}
+          member={member ?? 0}
+          {...(running
+            ? {}
+            : { onMember: (place: number) => onView({ member: place === 0 ? null : place }) })}
         />
       )}
       <div className="grid grid-cols-1 gap-6 lg:grid-cols-2">
@@ -75,11 +59,20 @@ export function OptimiseResultView({ input, result, materials, view, onView, act
           materials={materials}
           startNm={result.start.thicknessesNm}
           chosenNm={thicknessesNm}
-          chosenLabel={member ? 'Chosen' : 'Best'}
+          chosenLabel={unfinished ? 'So far' : member === null ? 'Best' : 'Chosen'}
         />
-        <PointReadingsTable points={input.points} found={result.best.points} />
+        <PointReadingsTable
+          points={input.points}
+          found={points}
+          of={name}
+          whyNone={
+            unfinished
+              ? 'They are taken when a search has come to its end; a stack made of the film shows them too.'
+              : 'This answer was stored before each film kept its readings. Rerun the design to have them.'
+          }
+        />
       </div>
-      <SearchPath goal={goal} path={result.path} />
+      <SearchPath goal={goal} result={result} />
     </div>
   );
 }

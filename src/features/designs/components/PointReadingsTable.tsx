@@ -4,14 +4,28 @@ import { pointReadingNames } from '../model/readingNames.ts';
 
 type Props = {
   points: readonly DesignPoint[];
+  /** Empty where there are none. */
   found: readonly { pointId: string; readings: PointReadings }[];
+  /** Which film it is, such as "best film". */
+  of: string;
+  /** Why there are none, where there are none. */
+  whyNone: string;
 };
 
-/** Every reading of the best film at each working point. */
-export function PointReadingsTable({ points, found }: Props) {
+/** Every reading of one film at each working point. */
+export function PointReadingsTable({ points, found, of, whyNone }: Props) {
+  const heading = `Readings: ${of}`;
+  if (found.length === 0) {
+    return (
+      <section aria-label={heading} className="min-w-0">
+        <h2 className="mb-2 text-lead">{heading}</h2>
+        <p className="text-muted">{whyNone}</p>
+      </section>
+    );
+  }
   return (
-    <section aria-label="Readings of the best film" className="min-w-0">
-      <h2 className="mb-2 text-lead">Readings of the best film</h2>
+    <section aria-label={heading} className="min-w-0">
+      <h2 className="mb-2 text-lead">{heading}</h2>
       <div className="card overflow-x-auto">
         <table className="w-full">
           <thead>

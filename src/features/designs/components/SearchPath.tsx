@@ -8,11 +8,11 @@ import { unitLabel, goalQuantityLooks, printQuantity } from '../model/quantities
 const xAxis = { label: 'films solved', format: (value: number) => `${formatCount(value)} films` };
 
 /** The best value so far against the films solved: the global search solid, the local one dashed. */
-export function SearchPath({ goal, path }: { goal: Goal; path: OptimiseResult['path'] }) {
+export function SearchPath({ goal, result }: { goal: Goal; result: OptimiseResult }) {
   const look = goalQuantityLooks[goal.quantity];
-  const series = useMemo(() => pathSeries(goal, path), [goal, path]);
+  const series = useMemo(() => pathSeries(goal, wholePath(result)), [goal, result]);
   const yAxes = useMemo(() => [{ label: unitLabel(goalQuantityLooks[goal.quantity]) }], [goal]);
-  if (path.length === 0) return null;
+  if (result.path.length === 0) return null;
   return (
     <section aria-label="Path of the search">
       <h2 className="mb-2 text-lead">Path of the search: best {look.label} so far</h2>
@@ -27,8 +27,15 @@ export function SearchPath({ goal, path }: { goal: Goal; path: OptimiseResult['p
   );
 }
 
+/** The path up to the films solved: of an unfinished search the last ones may have brought nothing better. */
+function wholePath({ path, evaluations }: OptimiseResult): OptimiseResult['path'] {
+  const last = path.at(-1);
+  return last && last.evaluations < evaluations ? [...path, { ...last, evaluations }] : path;
+}
+
 function pathSeries(goal: Goal, path: OptimiseResult['path']): PlotSeries[] {
   const look = goalQuantityLooks[goal.quantity];
+  const valueOf = ({ value }: (typeof path)[number]) => (value === null ? NaN : value * look.scale);
   const firstLocal = path.findIndex(({ phase }) => phase === 'local');
   // The local part begins where the global one ended, so that the line is one.
   const parts = [
@@ -50,8 +57,9 @@ function pathSeries(goal: Goal, path: OptimiseResult['path']): PlotSeries[] {
           {
             name,
             dash,
-            x: steps.map(({ evaluations }) => evaluations),
-            y: steps.map(({ value }) => (value === null ? NaN : value * look.scale)),
+            // Until a better film comes the best stays as it is.
+            x: steps.flatMap(({ evaluations }, i) => (i === 0 ? [evaluations] : [evaluations, evaluations])),
+            y: steps.flatMap((step, i) => (i === 0 ? [step] : [steps[i - 1]!, step])).map(valueOf),
             tone: look.tone,
             format: (value: number) => printQuantity({ ...look, scale: 1 }, value),
           },

@@ -1,6 +1,6 @@
 import type { Goal } from '../../../../shared/optimiseDesign.ts';
 import type { StackDocument } from '../../../../shared/stack.ts';
-import { formatNumber } from '../../../lib/format.ts';
+import { formatPlain } from '../../../lib/format.ts';
 import { layerWords } from './layerNames.ts';
 import type { NamedMaterial } from './layerNames.ts';
 
@@ -18,7 +18,7 @@ export const goalLabels: Record<Goal['quantity'], string> = {
 export function goalWords(goal: Goal, document: StackDocument, materials: readonly NamedMaterial[]): string {
   const layer = goal.layerId === undefined ? '' : ` (${layerWords(document, goal.layerId, materials)})`;
   const limit = goal.leastReflectance
-    ? `, with a reflectance of at least ${formatNumber(goal.leastReflectance, { digits: 3 })}`
+    ? `, with a reflectance of at least ${formatPlain(goal.leastReflectance)}`
     : '';
   return goalLabels[goal.quantity] + layer + limit;
 }

@@ -3,6 +3,7 @@ import type { SignalName, Tolerance } from '../../../../shared/designPoint.ts';
 import type { MaterialSummary } from '../../../../shared/material.ts';
 import type { StackDocument, WorkingPoint } from '../../../../shared/stack.ts';
 import { startCandidates } from './capCandidates.ts';
+import { newGoal } from './goalLight.ts';
 import { drawnLayers } from './layerNames.ts';
 import { pointWords } from './pointWords.ts';
 
@@ -47,7 +48,7 @@ export function startInput(
         document,
         variables: first ? [newVariable(first)] : [],
         points: [point],
-        goal: { quantity: signal },
+        goal: newGoal(signal),
         effort: 'normal',
         seed: 1,
       };
