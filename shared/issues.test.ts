@@ -37,6 +37,18 @@ describe('each kind of problem says what is wanted and what came', () => {
   });
   const good = { name: 'abc', count: 3, positive: 1, list: [1], mode: 'drawn', flag: true };
 
+  test('a union told apart by a key names what the key may be', () => {
+    const union = z.discriminatedUnion('kind', [
+      strictObject({ kind: z.literal('cap') }),
+      strictObject({ kind: z.literal('tolerance') }),
+    ]);
+    expect(only(union, { kind: 'anneal' })).toEqual({
+      path: 'kind',
+      message: 'must be "cap" or "tolerance", got "anneal"',
+    });
+    expect(only(union, {})).toEqual({ path: 'kind', message: 'is required' });
+  });
+
   test('nothing is wrong with the good one', () => expect(issuesOf(schema, good)).toEqual([]));
 
   test.each<[object, string, string]>([

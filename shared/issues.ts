@@ -50,7 +50,7 @@ function describe(issue: ZodIssue, base: readonly Key[], input: unknown): Issue[
       return [
         {
           path: formatPath(path),
-          message: here === undefined ? 'is required' : `${issue.message}, got ${quote(here)}`,
+          message: here === undefined ? 'is required' : `${unionWords(issue)}, got ${quote(here)}`,
         },
       ];
     }
@@ -64,6 +64,15 @@ function describe(issue: ZodIssue, base: readonly Key[], input: unknown): Issue[
     }));
   }
   return [{ path: formatPath(path), message: sentence(issue, here) }];
+}
+
+/** Of a union told apart by one key: what that key may be. */
+function unionWords(issue: z.core.$ZodIssueInvalidUnion): string {
+  return 'options' in issue && issue.options ? `must be ${oneOf(issue.options)}` : issue.message;
+}
+
+function oneOf(values: readonly unknown[]): string {
+  return values.map((one) => JSON.stringify(one)).join(' or ');
 }
 
 function sentence(issue: ZodIssue, value: unknown): string {
@@ -85,7 +94,7 @@ function sentence(issue: ZodIssue, value: unknown): string {
     case 'too_big':
       return `must ${limit(issue.origin, issue.inclusive !== false ? '<=' : '<', 'at most', issue.maximum)}${got(value)}`;
     case 'invalid_value':
-      return `must be ${issue.values.map((one) => JSON.stringify(one)).join(' or ')}, got ${quote(value)}`;
+      return `must be ${oneOf(issue.values)}, got ${quote(value)}`;
     case 'custom':
       return issue.message;
     default:
