@@ -44,7 +44,7 @@ export const capDesignSchema = strictObject({
   candidates: z.array(capCandidateSchema).min(1).max(LIMITS.capCandidates),
   range: strictObject({
     fromNm: z.number().min(0),
-    toNm: z.number().positive(),
+    toNm: z.number().positive().max(LIMITS.designThicknessNm),
     points: z.int().min(2).max(LIMITS.capPoints),
   }).refine(({ fromNm, toNm }) => fromNm < toNm, { path: ['toNm'], error: 'must be greater than fromNm' }),
   points: designPointsSchema,

@@ -27,6 +27,8 @@ export const LIMITS = {
   designVariables: 8,
   /** Layers drawn in a film whose derivatives are answered at once. */
   sensitivityLayers: 200,
+  /** Thicknesses that a design question tries, nm: 1 cm is far beyond any film, and steps of 0.001 nm are still told apart. */
+  designThicknessNm: 10_000_000,
   capCandidates: 12,
   capPoints: 400,
   toleranceSamples: 20_000,

@@ -45,7 +45,7 @@ export const optimiseDesignSchema = strictObject({
       strictObject({
         layerId: z.string(),
         fromNm: z.number().min(0),
-        toNm: z.number().positive(),
+        toNm: z.number().positive().max(LIMITS.designThicknessNm),
       }).refine(({ fromNm, toNm }) => fromNm < toNm, {
         path: ['toNm'],
         error: 'must be greater than fromNm',

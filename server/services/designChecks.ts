@@ -1,4 +1,3 @@
-import type { CapDesign } from '../../shared/capDesign.ts';
 import type { DesignInput } from '../../shared/design.ts';
 import type { DesignPoint, Tolerance } from '../../shared/designPoint.ts';
 import { materialKeyOf } from '../../shared/designPoint.ts';
@@ -7,15 +6,13 @@ import { forEachMedium } from '../../shared/solveRules.ts';
 import { addsIntensities } from '../../shared/stackCase.ts';
 import type { StackDocument } from '../../shared/stack.ts';
 import { checkOptimise } from '../../worker/design/optimise/checkOptimise.ts';
+import { checkCap, checkGrading } from './capChecks.ts';
 import { checkStackDocument } from './checkStackDocument.ts';
 import { candidateAlone, candidatesOf, filmAt, mediaWithErrors } from './designMedia.ts';
 import { candidatePath, eachOnce, toDesignIssues } from './designPaths.ts';
 import { caseIssues, resolutionIssues, runCase } from './runCases.ts';
 import type { CaseResolver } from './runCases.ts';
 import { toDocumentIssues } from './runPaths.ts';
-
-/** Samples x working points x thicknesses that are held at once, 9 bytes each. */
-const MOST_CAP_VALUES = 12_000_000;
 
 /** What keeps a design question from being answered, found before any material is looked up. */
 export function checkDesign(design: DesignInput): Issue[] {
@@ -60,7 +57,8 @@ export async function checkDesignMaterials(design: DesignInput, resolve: CaseRes
       }),
     ),
   );
-  return eachOnce([...film, ...candidates.flat()]);
+  const graded = design.kind === 'cap' ? await checkGrading(design, resolve) : [];
+  return eachOnce([...film, ...candidates.flat(), ...graded]);
 }
 
 export async function checkFilmMaterials(
@@ -114,34 +112,6 @@ function checkQuestion(design: DesignInput): Issue[] {
   }
 }
 
-function checkCap({ document, replaces, candidates, points, range, tolerance }: CapDesign): Issue[] {
-  const onTop = document.layers.slice(0, replaces.length).map(({ id }) => id);
-  const values = tolerance.samples * points.length * range.points;
-  return [
-    ...replaces.flatMap((id, position) => {
-      const path = `input.replaces[${position}]`;
-      if (replaces.indexOf(id) < position) return [{ path, message: `is named twice: ${id}` }];
-      const isLayer = document.layers.some((item) => item.id === id && !('layers' in item));
-      if (!isLayer) return [{ path, message: `names no single layer of the film: ${id}` }];
-      const message = `must be a layer at the top of the film, where the candidates are put: ${id} is not`;
-      return onTop.includes(id) ? [] : [{ path, message }];
-    }),
-    ...candidates.flatMap(({ id }, position) =>
-      candidates.findIndex((other) => other.id === id) < position
-        ? [{ path: `input.candidates[${position}].id`, message: `is used twice: ${id}` }]
-        : [],
-    ),
-    ...(values > MOST_CAP_VALUES
-      ? [
-          {
-            path: 'input.tolerance.samples',
-            message: `times working points times thicknesses must be at most ${MOST_CAP_VALUES}, got ${values}: take fewer samples, working points or points of the range`,
-          },
-        ]
-      : []),
-  ];
-}
-
 function checkSignal(design: Extract<DesignInput, { signal: unknown }>): Issue[] {
   if (!addsIntensities(design.document)) return [];
   const message = 'cannot be the amplitude: with a thick slab or averages only intensities add up';
@@ -155,14 +125,12 @@ function checkSignal(design: Extract<DesignInput, { signal: unknown }>): Issue[]
 
 function checkErrors(design: DesignInput, { materials }: Tolerance): Issue[] {
   const known = new Set(mediaWithErrors(design).map(materialKeyOf));
-  return materials.flatMap(({ material }, position) =>
-    known.has(material)
-      ? []
-      : [
-          {
-            path: `input.tolerance.materials[${position}].material`,
-            message: `names no material of the film or its caps: ${material}`,
-          },
-        ],
-  );
+  return materials.flatMap(({ material }, position) => {
+    const path = `input.tolerance.materials[${position}].material`;
+    if (!known.has(material)) {
+      return [{ path, message: `names no material of the film or its caps: ${material}` }];
+    }
+    const isSecond = materials.findIndex((other) => other.material === material) < position;
+    return isSecond ? [{ path, message: `is named twice: ${material}` }] : [];
+  });
 }

@@ -1,8 +1,9 @@
-import type { CapCandidate } from '../../shared/capDesign.ts';
+import type { CapCandidate, CapDesign } from '../../shared/capDesign.ts';
 import type { DesignInput } from '../../shared/design.ts';
 import type { DesignPoint } from '../../shared/designPoint.ts';
-import type { StackDocument, StackMedium } from '../../shared/stack.ts';
-import { drawnLayers } from '../../worker/design/expandBlocks.ts';
+import type { StackDocument, StackLayer, StackMedium } from '../../shared/stack.ts';
+import { bareFilm } from '../../worker/design/cap/candidateFilm.ts';
+import { drawnLayers, expandBlocks } from '../../worker/design/expandBlocks.ts';
 import { mediaBeside } from '../../worker/design/mediaBeside.ts';
 
 /** Everything in a design question that holds media: its film, and the layers of candidates. */
@@ -40,6 +41,20 @@ export function candidateAlone(
     substrate: { index: 1 },
     workingPoint,
   };
+}
+
+/** What the candidates are graded into: the layer under them, or the substrate; null where that interface is sharp. */
+export function gradedUnderCap(design: CapDesign): StackLayer | null {
+  const film = bareFilm(design);
+  const { substrate, substrateM, substrateGradedNm = 0 } = film;
+  const top = expandBlocks(film).layers[0]?.layer ?? {
+    id: 'substrate',
+    medium: substrate,
+    thicknessNm: substrateGradedNm,
+    ...(substrateM ? { m: substrateM } : {}),
+    gradedNm: substrateGradedNm,
+  };
+  return (top.gradedNm ?? 0) > 0 ? top : null;
 }
 
 /** Media of which errors may be stated: of every layer and its oxide, around the film, and of the candidates. */

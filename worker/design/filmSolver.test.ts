@@ -46,6 +46,28 @@ function expectClose(actual: object, wanted: object) {
 }
 
 describe('a film solved over and over', () => {
+  test('never makes a layer thinner than what its graded interfaces take of it, in a block either', () => {
+    // Half of an interface lies in either layer, and a slice of negative thickness would amplify: the definition.
+    const { layers } = buildFilm();
+    const co = { ...layers[1]!, thicknessNm: 2, gradedNm: 0.6 };
+    const pt = { ...layers[2]!, gradedNm: 1 };
+    const flat = buildFilm({ layers: [layers[0]!, co, pt] });
+    const block = buildFilm({ layers: [layers[0]!, { id: 'pair', repeat: 2, layers: [pt, co] }] });
+    const nmOf = (id: string, nm: number) => ({ thicknessNm: new Map([[id, nm]]), constants: null });
+    const read = (film: StackDocument, id: string, nm: number) =>
+      new FilmSolver(film, new Map(), plain).readings(nmOf(id, nm));
+    expect(read(flat, 'co', 0.1)).toEqual(read(flat, 'co', 0.8));
+    expect(read(flat, 'co', 0.81)).not.toEqual(read(flat, 'co', 0.8));
+    expect(read(flat, 'cap', -1)).toEqual(read(flat, 'cap', 0.3));
+    // The Co between Pt needs 0.3 and 0.5 nm, the last one 0.3 alone; in a block they are as thick as each other.
+    expect(read(block, 'co', 0)).toEqual(read(block, 'co', 0.8));
+    expect(read(block, 'pt', 0)).toEqual(read(block, 'pt', 0.8));
+    expectClose(
+      read(flat, 'co', 0),
+      expected(buildFilm({ layers: [layers[0]!, { ...co, thicknessNm: 0.8 }, pt] })),
+    );
+  });
+
   test('gives what a solve request gives, whatever was set before', () => {
     const solver = new FilmSolver(buildFilm(), new Map(), plain);
     expectClose(solver.readings(UNCHANGED), expected(buildFilm()));

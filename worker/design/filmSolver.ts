@@ -15,14 +15,14 @@ import { BatchRoom } from '../sweep/pointBatch.ts';
 import { partsNeeded } from '../sweep/solvedReadings.ts';
 import type { ConstantFactors } from './frozenFilm.ts';
 import { freezeDocument, scaleConstants } from './frozenFilm.ts';
-import { leastThicknessNm } from './optimise/checkOptimise.ts';
+import { leastThicknesses } from './leastThicknesses.ts';
 
 /** Which readings are needed beside rotation, ellipticity, amplitude and reflectance; each costs time. */
 export type Wanted = { contrast: boolean; ceiling: boolean };
 
 /** How a film differs from the one that was given. */
 export type FilmChange = {
-  /** nm, by layer id; the others are as given. Below 0 counts as 0. */
+  /** nm, by layer id; the others are as given. Less than what has become of a layer's parts counts as that. */
   thicknessNm: ReadonlyMap<string, number>;
   /** By `materialKeyOf`; null leaves all constants as given. */
   constants: ReadonlyMap<string, ConstantFactors> | null;
@@ -49,6 +49,7 @@ export class FilmSolver {
   readonly #needs: Needs;
   readonly #adjustable: boolean;
   readonly #nominal = new Map<string, number>();
+  readonly #least: ReadonlyMap<string, number>;
   readonly #paths = new Map<string, number[]>();
   readonly #compiled = new Map<string, Compiled>();
 
@@ -66,6 +67,7 @@ export class FilmSolver {
       parts: partsNeeded(names),
     };
     this.#adjustable = !isGeneral(this.#frozen) && !splitsLayers(this.#frozen);
+    this.#least = leastThicknesses(this.#frozen);
     const visit = (items: StackItem[]): void => {
       for (const item of items) {
         if ('layers' in item) {
@@ -120,12 +122,14 @@ export class FilmSolver {
     const document = withThicknesses(
       change.constants ? scaleConstants(this.#frozen, change.constants) : this.#frozen,
       change.thicknessNm,
+      this.#least,
     );
     if (this.#adjustable) {
       return this.#solve(this.#statesOf(document, swept, swept?.nm.length ?? 1), swept);
     }
     return (swept?.nm ?? [null]).flatMap((nm) => {
-      const one = nm === null ? document : withThicknesses(document, new Map([[swept!.layerId, nm]]));
+      const one =
+        nm === null ? document : withThicknesses(document, new Map([[swept!.layerId, nm]]), this.#least);
       return this.#solve(this.#generalStatesOf(one), null);
     });
   }
@@ -202,14 +206,18 @@ function resolvedAtPoint(document: StackDocument) {
   return resolveCase(toSolveCase(document, wavelengthNm, angleDeg), new Map());
 }
 
-function withThicknesses(document: StackDocument, nm: ReadonlyMap<string, number>): StackDocument {
+function withThicknesses(
+  document: StackDocument,
+  nm: ReadonlyMap<string, number>,
+  least: ReadonlyMap<string, number>,
+): StackDocument {
   if (nm.size === 0) return document;
   const change = (item: StackItem): StackItem => {
     if ('layers' in item) return { ...item, layers: item.layers.map(change) };
     const thickness = nm.get(item.id);
     return thickness === undefined
       ? item
-      : { ...item, thicknessNm: Math.max(0, thickness, leastThicknessNm(item)) };
+      : { ...item, thicknessNm: Math.max(thickness, least.get(item.id) ?? 0) };
   };
   return { ...document, layers: document.layers.map(change) };
 }

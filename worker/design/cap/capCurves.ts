@@ -7,6 +7,7 @@ import { asksContrast, failedDemands, isSeen, signalOf, signedSignalOf } from '.
 import { FilmErrors } from '../filmErrors.ts';
 import type { FilmChange } from '../filmSolver.ts';
 import { FilmSolver, UNCHANGED } from '../filmSolver.ts';
+import { leastThicknesses } from '../leastThicknesses.ts';
 import { mediaBeside } from '../mediaBeside.ts';
 import type { CandidateFilm } from './candidateFilm.ts';
 import { bareFilm, candidateFilm, capLayerId } from './candidateFilm.ts';
@@ -61,9 +62,10 @@ export class CapCurves {
   slopes(nm: readonly number[], change: FilmChange = UNCHANGED): (number | null)[][] {
     const layerId = this.#film.sweptId;
     const { signal } = this.#design;
+    const least = leastThicknesses(this.#film.document).get(layerId) ?? 0;
     return this.#lean.map((solver) => {
-      const below = nm.map((one) => Math.max(0, one - SLOPE_STEP_NM));
-      const above = nm.map((one) => Math.max(0, one) + SLOPE_STEP_NM);
+      const below = nm.map((one) => Math.max(least, one - SLOPE_STEP_NM));
+      const above = nm.map((one) => Math.max(least, one) + SLOPE_STEP_NM);
       const signals = [below, nm, above].map((list) =>
         solver.curve(change, { layerId, nm: list }).map((one) => signedSignalOf(one, signal)),
       );

@@ -6,7 +6,7 @@ import { materialKey } from '../../sweep/sweepInput.ts';
 import { drawnLayers } from '../expandBlocks.ts';
 import type { FilmChange } from '../filmSolver.ts';
 import { FilmSolver } from '../filmSolver.ts';
-import { leastThicknessNm } from './checkOptimise.ts';
+import { leastThicknesses } from '../leastThicknesses.ts';
 import type { Film } from './film.ts';
 import { costSign } from './film.ts';
 import { repaired } from './repaired.ts';
@@ -21,6 +21,7 @@ export class OptimiseFilms {
   readonly #materials: ReadonlyMap<string, ResolvableMaterial>;
   /** By working point, with what the goals need only. */
   readonly #solvers: FilmSolver[];
+  readonly #least: ReadonlyMap<string, number>;
   /** ... and with every reading, made when the first film is read. */
   #readers: FilmSolver[] | null = null;
 
@@ -29,6 +30,7 @@ export class OptimiseFilms {
     this.#design = design;
     this.#goals = design.second ? [design.goal, design.second] : [design.goal];
     this.#materials = new Map(materials.map((material) => [materialKey(material), material]));
+    this.#least = leastThicknesses(design.document);
     const contrast = this.#goals.some(({ quantity }) => quantity === 'contrast');
     this.#solvers = this.#solversWith({ contrast, ceiling: false });
   }
@@ -109,7 +111,7 @@ export class OptimiseFilms {
     if (rotationDeg === null || rotationDeg === 0) return null;
     const layer = drawnLayers(this.#design.document.layers).find(({ id }) => id === layerId)!;
     const here = change.thicknessNm.get(layerId) ?? layer.thicknessNm;
-    const below = Math.max(leastThicknessNm(layer), here - SLOPE_STEP_NM);
+    const below = Math.max(this.#least.get(layerId) ?? 0, here - SLOPE_STEP_NM);
     const above = here + SLOPE_STEP_NM;
     const [low, high] = solver.curve(change, { layerId, nm: [below, above] });
     if (low!.rotationDeg === null || high!.rotationDeg === null) return null;

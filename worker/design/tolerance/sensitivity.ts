@@ -12,8 +12,8 @@ import type { FilmChange } from '../filmSolver.ts';
 import { FilmSolver, UNCHANGED } from '../filmSolver.ts';
 import type { ConstantFactors } from '../frozenFilm.ts';
 import { freezeDocument, isVacuumOrAir } from '../frozenFilm.ts';
+import { leastThicknesses } from '../leastThicknesses.ts';
 import { mediaBeside } from '../mediaBeside.ts';
-import { leastThicknessNm } from '../optimise/checkOptimise.ts';
 
 /** Step of a thickness, nm: the readings bend over nanometres, rounding is at 1e-13. */
 const STEP_NM = 1e-3;
@@ -61,6 +61,7 @@ function thicknessSensitivities(
   names: ReadonlyMap<string, string>,
 ): OneSensitivity[] {
   const layers = drawnLayers(film.layers);
+  const least = leastThicknesses(film);
   const called = layerNames(layers, (medium) => mediumLabel(medium, names));
   return layers.map((layer) => {
     const at = (shiftNm: number) =>
@@ -74,7 +75,7 @@ function thicknessSensitivities(
       label: `thickness of ${called.get(layer.id)!}`,
       value: layer.thicknessNm,
       derivative:
-        layer.thicknessNm - leastThicknessNm(layer) < 2 * STEP_NM
+        layer.thicknessNm - (least.get(layer.id) ?? 0) < 2 * STEP_NM
           ? forward(at, STEP_NM)
           : central(at, STEP_NM),
     };
