@@ -143,6 +143,27 @@ describe('errors of a film with a cap', () => {
     expect(points[0]!.slopePercentPerNm).toEqual([null, null]);
   });
 
+  test('a film that reflects nothing has no best cap, and the reason says so', () => {
+    // Nothing differs from the surroundings, so that Fresnel's equations give 0.
+    const nothing = { index: 1 };
+    const design = buildDesign({
+      document: { ...buildDesign().document, layers: [], substrate: nothing },
+      candidates: [
+        {
+          id: 'air',
+          label: 'air',
+          layers: [{ medium: nothing, leastNm: 0, leastSource: 'made up', fixedNm: null }],
+        },
+      ],
+      tolerance: { ...buildDesign().tolerance, samples: 100 },
+    });
+    const { best, obstacle } = outcomeOf(design, [3, 6], [null]);
+    expect(best).toBeNull();
+    expect(obstacle).toBe(
+      'There is no Kerr rotation for any thickness that protects: the film reflects nothing.',
+    );
+  });
+
   test('a working point at which the bare film shows nothing does not decide', () => {
     expect(weakestPoint([1e-15, 0.03, 0.02], [1e-15, 0.04, 0.04])).toEqual({ point: 2, worth: 0.5 });
     expect(weakestPoint([0.03, 0.02], [0, null])).toEqual({ point: 1, worth: 0.02 });

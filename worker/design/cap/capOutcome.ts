@@ -111,13 +111,17 @@ function weakestAt({ points, bare }: Computed, position: number): ReturnType<typ
   );
 }
 
-/** The robust thickness of greatest worth at its weakest working point; without any, the one that the most films meet. */
+/**
+ * The robust thickness of greatest worth at its weakest working point; without any, the one that the most films meet. Null where
+ * there is no signal to choose for.
+ */
 function bestPosition(computed: Computed, isRobust: boolean[]): number | null {
   const robust = isRobust.some(Boolean);
   let best: number | null = null;
   let bestScore = -Infinity;
   computed.isMet.forEach((met, position) => {
     if (!(robust ? isRobust[position] : met)) return;
+    if (computed.points.every(({ signal }) => signal[position] === null)) return;
     const score = robust ? weakestAt(computed, position).worth : computed.yields[position]!;
     if (score > bestScore) [best, bestScore] = [position, score];
   });

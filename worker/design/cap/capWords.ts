@@ -1,7 +1,7 @@
 import type { CapDesign } from '../../../shared/capDesign.ts';
 import type { DesignPoint, PointReadings, SignalName } from '../../../shared/designPoint.ts';
 import type { DemandName } from '../demands.ts';
-import { failedDemands } from '../demands.ts';
+import { failedDemands, signalOf } from '../demands.ts';
 import type { Window } from './capWindows.ts';
 
 /** Numbers as sentences have them: three digits, angles in mdeg. */
@@ -73,7 +73,7 @@ const demandLabels: Record<DemandName, string> = {
 
 /** What keeps every thickness from meeting the demands. */
 export function obstacleOf(
-  { points, demands, range }: CapDesign,
+  { points, demands, range, signal }: CapDesign,
   nm: readonly number[],
   leastNm: number,
   readings: PointReadings[][],
@@ -93,6 +93,9 @@ export function obstacleOf(
       thick.every((position) => failsAt(index, position).includes(name)),
     );
     if (point >= 0) return neverMet(name, points[point]!);
+  }
+  if (thick.every((position) => readings.every((list) => signalOf(list[position]!, signal) === null))) {
+    return `There is no ${signalLabels[signal]} for any thickness that protects: the film reflects nothing.`;
   }
   return 'Each demand is met at some thickness, but no thickness meets all of them at every working point.';
 
