@@ -16,7 +16,7 @@ import type { Models } from '../models/models.ts';
 import type { Run } from '../models/run.ts';
 import { createMaterialStore } from '../services/materialStore.ts';
 import { cancelRun } from '../services/runLifecycle.ts';
-import { buildToleranceInput } from '../../tests/designInputs.ts';
+import { buildOptimiseInput, buildToleranceInput } from '../../tests/designInputs.ts';
 import {
   buildDesign,
   buildGroup,
@@ -26,6 +26,7 @@ import {
   buildSlowDocument,
 } from '../../tests/factories.ts';
 import { waitForRun, waitLongForRun } from '../../tests/waitForRun.ts';
+import { RunLease } from './runLease.ts';
 import { RunQueue } from './runQueue.ts';
 import { startJobs } from './start.ts';
 import { sweepOrphans } from './sweeper.ts';
@@ -209,6 +210,28 @@ describe('a compute host', () => {
     const failed = await waitForRun(models, run.id, 'failed');
     expect(failed.error).toMatch(/material gone/);
     expect(failed.finishedAt).not.toBeNull();
+  });
+
+  it('keeps what a search had found when it fails or is cancelled, and nothing where another host has it', async () => {
+    const group = await buildGroup(models);
+    const found = Buffer.from('what there was');
+    const take = async () => {
+      const { id } = await buildDesign(models, group, buildOptimiseInput());
+      return (await models.sequelize.transaction((one) => RunLease.take(models, id, 'host', one)))!;
+    };
+    const kept = async ({ runId }: RunLease) => {
+      const chunks = await models.RunChunk.findAll({ where: { runId } });
+      return chunks.map(({ bytes }) => bytes.toString());
+    };
+    const [failing, cancelled, lost] = [await take(), await take(), await take()];
+    expect(await failing.fail('A thread ended.', found)).toBe(true);
+    await models.Run.update({ state: 'cancelled' }, { where: { id: cancelled.runId } });
+    expect(await cancelled.keep(found)).toBe(true);
+    await models.Run.update({ state: 'cancelled', host: 'other' }, { where: { id: lost.runId } });
+    expect(await lost.keep(found)).toBe(false);
+    expect(await kept(failing)).toEqual(['what there was']);
+    expect(await kept(cancelled)).toEqual(['what there was']);
+    expect(await kept(lost)).toEqual([]);
   });
 
   it('comes back after the database cut all its connections', async () => {

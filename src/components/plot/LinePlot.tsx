@@ -169,9 +169,9 @@ export function LinePlot(props: Props) {
           tabIndex={0}
           aria-label={`${ariaLabel}: read values along ${xAxis.label}`}
           aria-describedby={hintId}
-          aria-valuemin={low}
-          aria-valuemax={high}
-          aria-valuenow={shown ?? marker ?? low}
+          aria-valuemin={withoutExponent(low)}
+          aria-valuemax={withoutExponent(high)}
+          aria-valuenow={withoutExponent(shown ?? marker ?? low)}
           aria-valuetext={shown === null ? 'no value is being read' : `${title}: ${summary}`}
           className="absolute inset-0 touch-pan-y"
           style={{ cursor: pointer.draggingMarker ? 'ew-resize' : 'crosshair' }}
@@ -187,6 +187,11 @@ export function LinePlot(props: Props) {
       {props.below?.(layout)}
     </figure>
   );
+}
+
+/** Values of ARIA are decimal numbers: 2.5e-14 is none. */
+function withoutExponent(value: number): number {
+  return Number(value.toFixed(6));
 }
 
 const noMarks: readonly PlotMark[] = [];
