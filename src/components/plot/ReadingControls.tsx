@@ -47,7 +47,9 @@ export function FamilyControls({ families, shown, onChange }: FamilyProps) {
   );
 }
 
-type ScaleProps = Pick<ReadingView, 'log' | 'unit'> & {
+type ScaleProps = Pick<ReadingView, 'unit'> & {
+  /** Null where there is no choice of scale. */
+  log: boolean | null;
   light: Light;
   /** The lights that there are readings for. */
   lights: Light;
@@ -80,16 +82,18 @@ export function ScaleControls({ light, lights, log, unit, onChange }: ScaleProps
         <option value="deg">deg</option>
         <option value="mrad">mrad</option>
       </select>
-      <select
-        aria-label="Scale of the readings"
-        value={log ? 'log' : 'linear'}
-        onChange={(event) => onChange({ log: event.target.value === 'log' })}
-        title="The logarithm is that of the absolute value"
-        className={quietSelect}
-      >
-        <option value="linear">linear</option>
-        <option value="log">log of abs</option>
-      </select>
+      {log !== null && (
+        <select
+          aria-label="Scale of the readings"
+          value={log ? 'log' : 'linear'}
+          onChange={(event) => onChange({ log: event.target.value === 'log' })}
+          title="The logarithm is that of the absolute value"
+          className={quietSelect}
+        >
+          <option value="linear">linear</option>
+          <option value="log">log of abs</option>
+        </select>
+      )}
     </span>
   );
 }

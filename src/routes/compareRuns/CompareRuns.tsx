@@ -1,105 +1,91 @@
 import { useQueries } from '@tanstack/react-query';
 import { useMemo } from 'react';
 import { useSearchParams } from 'react-router-dom';
-import type { Run } from '../../../shared/run.ts';
 import type { RunResult } from '../../../shared/resultFormat.ts';
 import { ErrorState } from '../../components/ErrorState.tsx';
 import { LoadingState } from '../../components/LoadingState.tsx';
-import { sweepXAxis } from '../../components/plot/readingSeries.ts';
-import { readReadingView, writeReadingView } from '../../components/plot/readingView.ts';
-import type { ReadingView } from '../../components/plot/readingView.ts';
-import { usePlotHeight } from '../../components/plot/usePlotHeight.ts';
-import { CompareFigure } from '../../features/compare/components/CompareFigure.tsx';
+import { CompareChoices } from '../../features/compare/components/CompareChoices.tsx';
 import { CompareLegend } from '../../features/compare/components/CompareLegend.tsx';
-import { DifferenceTable } from '../../features/compare/components/DifferenceTable.tsx';
+import { compareSlices } from '../../features/compare/model/compareSlices.ts';
 import { commonReadings } from '../../features/compare/model/comparedRun.ts';
-import type { ComparedRun } from '../../features/compare/model/comparedRun.ts';
-import { relations } from '../../features/compare/model/curveDifference.ts';
-import { describeDifferences, sweptWord } from '../../features/compare/model/describeDifferences.ts';
+import type { LoadedRun } from '../../features/compare/model/comparedRun.ts';
+import { heldField, heldQuantities } from '../../features/compare/model/heldQuantities.ts';
+import type { Comparison } from '../../features/compare/model/planComparison.ts';
+import { readReadingView } from '../../components/plot/readingView.ts';
 import { runDataQuery } from '../../features/runs/api/runData.ts';
+import { ComparedCurves } from './ComparedCurves.tsx';
+import { ComparedMaps } from './ComparedMaps.tsx';
+import { useCompareAddress } from './useCompareAddress.ts';
 
 type Props = {
-  runs: readonly Run[];
+  comparison: Comparison;
   letters: ReadonlyMap<string, string>;
-  baseId: string;
   onRemove: (id: string) => void;
 };
 
 /** Runs that can be laid over each other: fetches their values, then draws. */
-export function CompareRuns({ runs, letters, baseId, onRemove }: Props) {
+export function CompareRuns({ comparison, letters, onRemove }: Props) {
+  const { drawn } = comparison;
   const data = useQueries({
-    queries: runs.map(({ id }) => runDataQuery(`/runs/${id}`)),
+    queries: drawn.map(({ id }) => runDataQuery(`/runs/${id}`)),
     combine: (all) => ({
       results: all.flatMap(({ data: result }) => result ?? []),
       error: all.find(({ error }) => error !== null)?.error ?? null,
       retry: () => void Promise.all(all.map((one) => one.refetch())),
     }),
   });
-  const compared = useMemo(() => {
-    const phrases = describeDifferences(runs);
-    return runs.flatMap((run, index): ComparedRun[] => {
-      const result: RunResult | undefined = data.results[index];
-      return result
-        ? [{ run, result, letter: letters.get(run.id) ?? '', phrases: phrases[index] ?? [] }]
-        : [];
-    });
-  }, [runs, letters, data.results]);
+  const loaded = useMemo(
+    () =>
+      drawn.flatMap((run, index): LoadedRun[] => {
+        const result: RunResult | undefined = data.results[index];
+        return result ? [{ run, result, letter: letters.get(run.id) ?? '' }] : [];
+      }),
+    [drawn, letters, data.results],
+  );
   if (data.error) {
     return <ErrorState title="The values could not be loaded" error={data.error} onRetry={data.retry} />;
   }
-  if (data.results.length < runs.length) return <LoadingState label="Loading the values" rows={8} />;
-  return <Compared runs={compared} baseId={baseId} onRemove={onRemove} />;
+  if (data.results.length < drawn.length) return <LoadingState label="Loading the values" rows={8} />;
+  return <Compared comparison={comparison} loaded={loaded} onRemove={onRemove} />;
 }
 
-function Compared({ runs, baseId, onRemove }: Pick<Props, 'baseId' | 'onRemove'> & { runs: ComparedRun[] }) {
-  const [search, setSearch] = useSearchParams();
-  const view = useMemo(() => readReadingView(search), [search]);
-  const relation = relations.find((one) => one === search.get('against')) ?? 'difference';
+type ComparedProps = Omit<Props, 'letters'> & { loaded: readonly LoadedRun[] };
+
+function Compared({ comparison, loaded, onRemove }: ComparedProps) {
+  const { base, axes, view, views } = comparison;
+  const [search] = useSearchParams();
+  const { change } = useCompareAddress();
+  const held = useMemo(() => heldQuantities(comparison, search), [comparison, search]);
+  const runs = useMemo(
+    () => (view ? compareSlices(loaded, axes, view, held) : []),
+    [loaded, axes, view, held],
+  );
   const readings = useMemo(() => commonReadings(runs.map(({ result }) => result)), [runs]);
-  const reading = readings.find((name) => name === view.reading) ?? readings[0];
-  const reference = runs.find(({ run }) => run.id === baseId) ?? runs[0];
-  const height = usePlotHeight(520);
-  const xAxis = useMemo(() => {
-    const words = new Set(runs.map(({ run }) => sweptWord(run)));
-    const axis = reference?.run.axis;
-    return axis && sweepXAxis(axis, words.size === 1 ? [...words][0] : 'the swept layer');
-  }, [runs, reference]);
-  if (!reading || !reference || !xAxis) {
+  const wanted = readReadingView(search).reading;
+  const reading = readings.find((name) => name === wanted) ?? readings[0];
+  const reference = runs.find(({ run }) => run.id === base?.id) ?? runs[0];
+  if (!reading || !reference || !view) {
     return <p className="py-6 text-muted">These runs have no reading in common that can be drawn.</p>;
   }
-  const change = (key: string, value: string | null) => {
-    const next = new URLSearchParams(search);
-    if (value === null) next.delete(key);
-    else next.set(key, value);
-    setSearch(next, { replace: true, preventScrollReset: true });
-  };
-  const changeView = (part: Partial<ReadingView>) => {
-    const next = new URLSearchParams(search);
-    writeReadingView({ ...view, ...part }, next);
-    setSearch(next, { replace: true, preventScrollReset: true });
-  };
+  const maps = view.keys.length > 1;
+  const parts = { runs, reference, held, readings, reading };
   return (
     <>
       <CompareLegend
         runs={runs}
         reference={reference}
-        reading={reading}
+        reading={maps ? null : reading}
         onReference={(id) => change('reference', id)}
         onRemove={onRemove}
       />
-      <CompareFigure
-        runs={runs}
-        reference={reference}
-        readings={readings}
-        reading={reading}
-        relation={relation}
+      <CompareChoices
+        views={views}
         view={view}
-        xAxis={xAxis}
-        height={height}
-        onView={changeView}
-        onRelation={(next) => change('against', next === 'ratio' ? next : null)}
+        onView={(id) => change('view', id)}
+        held={held}
+        onHeld={(key, value) => change(heldField(key), String(value))}
       />
-      <DifferenceTable runs={runs} reference={reference} reading={reading} unit={view.unit} xAxis={xAxis} />
+      {maps ? <ComparedMaps {...parts} /> : <ComparedCurves {...parts} />}
     </>
   );
 }

@@ -6,18 +6,23 @@ import { EmptyState } from '../../components/EmptyState.tsx';
 import { ErrorState } from '../../components/ErrorState.tsx';
 import { LoadingState } from '../../components/LoadingState.tsx';
 import { Page } from '../../components/Page.tsx';
-import { readRunIds, refusalOf } from '../../features/compare/model/comparable.ts';
+import { readRunIds } from '../../features/compare/model/comparedIds.ts';
+import { planComparison } from '../../features/compare/model/planComparison.ts';
 import { runQuery } from '../../features/runs/api/run.ts';
 import { paths } from '../../lib/paths.ts';
 import { CompareRuns } from './CompareRuns.tsx';
 import { LeftOutRuns } from './LeftOutRuns.tsx';
 
-/** `/groups/:groupId/compare?runs=a,b`: up to six runs over each other; the address holds the whole choice. */
+/** `/groups/:groupId/compare?runs=a,b`: up to six runs against each other; the address holds the whole choice. */
 export function CompareRunsPage() {
   const { groupId = '' } = useParams();
   const [search, setSearch] = useSearchParams();
   const ids = useMemo(() => readRunIds(search), [search]);
-  const runs = useQueries({ queries: ids.map((id) => runQuery(id)) });
+  const { runs, loaded } = useQueries({
+    queries: ids.map((id) => runQuery(id)),
+    combine: (all) => ({ runs: all, loaded: all.flatMap(({ data }) => data ?? []) }),
+  });
+  const letters = useMemo(() => lettersOf(ids), [ids]);
   const remove = (id: string) => {
     const next = new URLSearchParams(search);
     next.set('runs', ids.filter((one) => one !== id).join(','));
@@ -25,20 +30,12 @@ export function CompareRunsPage() {
     setSearch(next, { replace: true });
   };
 
-  const loaded = runs.flatMap(({ data }) => data ?? []);
-  const wanted = search.get('reference');
-  const done = loaded.filter(
-    ({ progress, second, family }) => progress.state === 'done' && !second && !family,
-  );
-  const base = done.find(({ id }) => id === wanted) ?? done[0];
-  const refused = loaded.flatMap((run) => {
-    const why = refusalOf(run, base?.axis.kind ?? run.axis.kind);
-    return why === null ? [] : [{ id: run.id, name: run.name, why }];
-  });
+  const [reference, view] = [search.get('reference'), search.get('view')];
+  const comparison = useMemo(() => planComparison(loaded, { reference, view }), [loaded, reference, view]);
+  const refused = comparison.refused.map(({ run, why }) => ({ id: run.id, name: run.name, why }));
   const failed = runs.flatMap(({ error }, index) =>
     error ? [{ id: ids[index] ?? '', name: null, why: error.message }] : [],
   );
-  const drawn = loaded.filter((run) => !refused.some(({ id }) => id === run.id));
   const toRuns = (
     <ButtonLink to={generatePath(paths.runs, { groupId })} tone={ids.length < 2 ? 'primary' : 'quiet'}>
       Choose runs
@@ -47,7 +44,7 @@ export function CompareRunsPage() {
   return (
     <Page
       title="Compare runs"
-      subtitle="Curves over each other, with what differs between their inputs and by how much."
+      subtitle="Curves over each other and maps side by side, with what differs between their inputs and by how much."
       actions={ids.length < 2 ? null : toRuns}
     >
       {ids.length < 2 ? (
@@ -59,8 +56,8 @@ export function CompareRunsPage() {
       ) : (
         <div className="flex flex-col gap-5">
           <LeftOutRuns runs={[...refused, ...failed]} onRemove={remove} />
-          {base && drawn.length > 1 ? (
-            <CompareRuns runs={drawn} letters={lettersOf(ids)} baseId={base.id} onRemove={remove} />
+          {comparison.drawn.length > 1 ? (
+            <CompareRuns comparison={comparison} letters={letters} onRemove={remove} />
           ) : failed.length === ids.length ? (
             <ErrorState title="None of the runs could be opened" error={runs[0]?.error} />
           ) : (

@@ -10,7 +10,7 @@ import { Page } from '../../components/Page.tsx';
 import { QueryGate } from '../../components/QueryGate.tsx';
 import { Select } from '../../components/Select.tsx';
 import { TextInput } from '../../components/TextInput.tsx';
-import { MOST_RUNS } from '../../features/compare/model/comparable.ts';
+import { MOST_RUNS } from '../../features/compare/model/comparedIds.ts';
 import { runListQuery } from '../../features/runList/api/runList.ts';
 import { RunTable } from '../../features/runList/components/RunTable.tsx';
 import { GroupGate } from '../../features/session/components/GroupGate.tsx';

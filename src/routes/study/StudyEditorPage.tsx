@@ -8,7 +8,7 @@ import { Field } from '../../components/Field.tsx';
 import { Page } from '../../components/Page.tsx';
 import { TextInput } from '../../components/TextInput.tsx';
 import { controlLook } from '../../components/controlLook.ts';
-import { MOST_RUNS } from '../../features/compare/model/comparable.ts';
+import { MOST_RUNS } from '../../features/compare/model/comparedIds.ts';
 import { SharePanel } from '../../features/sharing/components/SharePanel.tsx';
 import { AddItem } from '../../features/studies/components/AddItem.tsx';
 import { DecisionSection } from '../../features/studies/components/DecisionSection.tsx';

@@ -11,10 +11,13 @@ import { MapCut } from './MapCut.tsx';
 import { wholeRange } from './mapLayout.ts';
 import type { MapWindow } from './mapLayout.ts';
 import { MapOverlay } from './MapOverlay.tsx';
-import { extremesOf } from './mapRange.ts';
+import { colourDomain, extremesOf } from './mapRange.ts';
+import type { ColourDomain } from './mapRange.ts';
 import { describeMap, mapCsv, printPlace, printValue } from './mapText.ts';
 import { MapToolbar } from './MapToolbar.tsx';
 import type { MapData, MapPlace, MapValue } from './mapTypes.ts';
+import { useMapLook } from './useMapLook.ts';
+import type { MapLook } from './useMapLook.ts';
 import { useMapPicture } from './useMapPicture.ts';
 import { useMapPointer } from './useMapPointer.ts';
 import type { PlotAxis } from '../plotTypes.ts';
@@ -35,6 +38,12 @@ type Props = {
   downloads?: ReactNode;
   /** Share of the values that have been computed; contours wait for the last one. */
   computed?: number;
+  /** Ends of the colour scale where it is not that of these values alone. */
+  colours?: ColourDomain;
+  /** Shared with other maps on the same grid. */
+  look?: MapLook;
+  /** Whether the cut is drawn as a curve below; its line in the map stays. */
+  withCut?: boolean;
   renderer?: 'canvas' | 'svg';
 };
 
@@ -45,15 +54,13 @@ type Props = {
  */
 export function MapPlot(props: Props) {
   const { data, xAxis, yAxis, value, height, marker, onCursor, fileName, controls, downloads } = props;
-  const { computed = 1, renderer } = props;
+  const { computed = 1, renderer, colours, withCut = true } = props;
   const { tokens, fontsReady } = usePlotTokens();
   const [measure, width] = useElementWidth(760);
   const [canvas, setCanvas] = useState<HTMLCanvasElement | null>(null);
   const [surface, setSurface] = useState<HTMLElement | null>(null);
-  const [zoom, setZoom] = useState<MapWindow | null>(null);
-  const [cursor, setCursor] = useState<MapPlace | null>(null);
-  const [pinned, setPinned] = useState<MapPlace | null>(null);
-  const [along, setAlong] = useState<'x' | 'y'>('x');
+  const own = useMapLook();
+  const { zoom, setZoom, cursor, setCursor, pinned, setPinned, along, setAlong } = props.look ?? own;
   const [hintId, summaryId] = [useId(), useId()];
   const density = globalThis.devicePixelRatio || 1;
 
@@ -62,7 +69,8 @@ export function MapPlot(props: Props) {
   const window = zoom && overlaps(zoom, full) ? zoom : full;
   const size = useMemo(() => ({ width, height }), [width, height]);
   const extremes = useMemo(() => extremesOf(data), [data]);
-  const picture = useMapPicture(data, axes, extremes, window, size, tokens, computed >= 1);
+  const domain = useMemo(() => colours ?? colourDomain(extremes), [colours, extremes]);
+  const picture = useMapPicture(data, axes, domain, window, size, tokens, computed >= 1);
   const { layout } = picture;
 
   useEffect(() => {
@@ -213,17 +221,19 @@ export function MapPlot(props: Props) {
       <figcaption id={summaryId} className="sr-only">
         {describeMap(value.name, data, axes, extremes)}
       </figcaption>
-      <MapCut
-        data={data}
-        axes={axes}
-        value={value}
-        along={along}
-        onAlong={setAlong}
-        place={cut}
-        reading={read ?? cut}
-        fileName={`${fileName} cut`}
-        renderer={renderer}
-      />
+      {withCut && (
+        <MapCut
+          data={data}
+          axes={axes}
+          value={value}
+          along={along}
+          onAlong={setAlong}
+          place={cut}
+          reading={read ?? cut}
+          fileName={`${fileName} cut`}
+          renderer={renderer}
+        />
+      )}
     </figure>
   );
 }

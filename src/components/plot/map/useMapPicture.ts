@@ -7,8 +7,7 @@ import { colourTable } from './mapColours.ts';
 import { layoutMap } from './mapLayout.ts';
 import type { MapWindow, Size } from './mapLayout.ts';
 import { mapPixels } from './mapPixels.ts';
-import { colourDomain } from './mapRange.ts';
-import type { Extremes } from './mapRange.ts';
+import type { ColourDomain } from './mapRange.ts';
 import type { MapAxes } from './mapText.ts';
 import type { MapData } from './mapTypes.ts';
 
@@ -16,13 +15,12 @@ import type { MapData } from './mapTypes.ts';
 export function useMapPicture(
   data: MapData,
   axes: MapAxes,
-  extremes: Extremes | null,
+  domain: ColourDomain,
   window: MapWindow,
   size: Size,
   tokens: PlotTokens,
   withContours: boolean,
 ): MapPicture {
-  const domain = useMemo(() => colourDomain(extremes), [extremes]);
   const table = useMemo(() => colourTable(tokens, domain.signed), [tokens, domain.signed]);
   const image = useMemo(
     () => imageOf(mapPixels(data, domain, table), data.x.length, data.y.length),

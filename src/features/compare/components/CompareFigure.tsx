@@ -1,49 +1,54 @@
 import { useMemo } from 'react';
+import type { ReactNode } from 'react';
 import type { ReadingName } from '../../../../shared/run.ts';
 import { LinePlot } from '../../../components/plot/LinePlot.tsx';
 import { PlotButton } from '../../../components/plot/PlotToolbar.tsx';
-import { ScaleControls } from '../../../components/plot/ReadingControls.tsx';
-import { ReadingSelect } from '../../../components/plot/ReadingSelect.tsx';
 import type { PlotAxis } from '../../../components/plot/plotTypes.ts';
-import type { ReadingView } from '../../../components/plot/readingView.ts';
 import { fileNameOf, saveFile } from '../../../components/plot/saveFile.ts';
-import { comparedCsv } from '../model/comparedCsv.ts';
-import { relatedCurves, valueCurves } from '../model/comparedRun.ts';
+import type { AngleUnit } from '../../../lib/format.ts';
+import { relatedCurves, valueCurves } from '../model/comparedCurves.ts';
+import { curvesCsv } from '../model/comparedCsv.ts';
 import type { ComparedRun } from '../model/comparedRun.ts';
 import type { Relation } from '../model/curveDifference.ts';
+import type { SlicePair } from '../model/slicePairs.ts';
+import { RelationSelect } from './RelationSelect.tsx';
 
 type Props = {
   runs: readonly ComparedRun[];
   reference: ComparedRun;
-  readings: readonly ReadingName[];
+  pairs: readonly SlicePair[];
   reading: ReadingName;
   relation: Relation;
-  view: Pick<ReadingView, 'unit' | 'log'>;
+  /** What is held at one value in all runs, in words. */
+  held: readonly string[];
+  unit: AngleUnit;
+  log: boolean;
   xAxis: PlotAxis;
   height: number;
-  onView: (change: Partial<ReadingView>) => void;
   onRelation: (relation: Relation) => void;
+  /** Reading and scale. */
+  controls: ReactNode;
   /** The SVG renderer is for tests: jsdom has no canvas. */
   renderer?: 'canvas' | 'svg';
 };
 
-/** All runs over each other, and below on the same x axis each against the reference. */
+/** All curves over each other, and below on the same x axis each against the reference. */
 export function CompareFigure(props: Props) {
-  const { runs, reference, readings, reading, relation, view, xAxis, height } = props;
-  const { onView, onRelation, renderer = 'canvas' } = props;
-  const { unit, log } = view;
-  const values = useMemo(() => valueCurves(runs, reading, unit, log), [runs, reading, unit, log]);
+  const { runs, reference, pairs, reading, relation, held, unit, log, xAxis, height } = props;
+  const { onRelation, controls, renderer = 'canvas' } = props;
+  const slices = useMemo(() => runs.flatMap((one) => one.slices), [runs]);
+  const values = useMemo(() => valueCurves(slices, reading, unit, log), [slices, reading, unit, log]);
   const related = useMemo(
-    () => relatedCurves(runs, reference, reading, relation, unit),
-    [runs, reference, reading, relation, unit],
+    () => relatedCurves(slices, pairs, reading, relation, unit),
+    [slices, pairs, reading, relation, unit],
   );
   const saveCsv = () =>
     saveFile(
       fileNameOf(`compare ${reading} ${relation}`, 'csv'),
-      comparedCsv(runs, reference, reading, relation, unit),
+      curvesCsv(runs, pairs, { reading, relation, unit, held }),
       'text/csv',
     );
-  if (!values || !related) return null;
+  if (!values || !related) return <p className="py-6 text-muted">Nothing is drawn at these values.</p>;
   return (
     <div className="card px-4 pt-2 pb-2">
       <LinePlot
@@ -59,43 +64,25 @@ export function CompareFigure(props: Props) {
             CSV
           </PlotButton>
         }
-        controls={
-          <>
-            <ReadingSelect
-              readings={readings}
-              value={reading}
-              onChange={(next) => onView({ reading: next })}
-            />
-            <ScaleControls light="p" lights="p" log={log} unit={unit} onChange={onView} />
-          </>
-        }
+        controls={controls}
       />
-      <LinePlot
-        series={related.series}
-        yAxes={[related.axis]}
-        xAxis={xAxis}
-        height={Math.round(height * 0.6)}
-        renderer={renderer}
-        ariaLabel={`${relation === 'ratio' ? 'Ratio' : 'Difference'} to ${reference.letter} against ${xAxis.label}`}
-        fileName={`compare ${reading} ${relation}`}
-        controls={<RelationSelect value={relation} onChange={onRelation} letter={reference.letter} />}
-      />
+      {related.series.length > 0 ? (
+        <LinePlot
+          series={related.series}
+          yAxes={[related.axis]}
+          xAxis={xAxis}
+          height={Math.round(height * 0.6)}
+          renderer={renderer}
+          ariaLabel={`${relation === 'ratio' ? 'Ratio' : 'Difference'} to ${reference.letter} against ${xAxis.label}`}
+          fileName={`compare ${reading} ${relation}`}
+          controls={<RelationSelect value={relation} onChange={onRelation} letter={reference.letter} />}
+        />
+      ) : (
+        <p className="py-4 text-muted">
+          {reference.letter} has no curve that one of the others can be held against: choose another value or
+          another reference.
+        </p>
+      )}
     </div>
-  );
-}
-
-type RelationProps = { value: Relation; letter: string; onChange: (relation: Relation) => void };
-
-function RelationSelect({ value, letter, onChange }: RelationProps) {
-  return (
-    <select
-      aria-label="Against the reference"
-      value={value}
-      onChange={(event) => onChange(event.target.value === 'ratio' ? 'ratio' : 'difference')}
-      className="h-7 field-sizing-content rounded-box border border-line bg-panel px-1.5 text-note text-ink"
-    >
-      <option value="difference">difference to {letter}</option>
-      <option value="ratio">ratio to {letter}</option>
-    </select>
   );
 }

@@ -1,8 +1,18 @@
-import type { SharedRun } from '../../../../shared/run.ts';
+import type { SharedRun, SweepAxis } from '../../../../shared/run.ts';
 import type { StackBlock, StackItem, StackLayer } from '../../../../shared/stack.ts';
 
-/** What of a run decides its numbers. */
-export type ComparedInput = Pick<SharedRun, 'document' | 'axis' | 'materials' | 'readings'>;
+/** What of a run decides the numbers that are drawn, and over which axes they are drawn: one of a curve, two of a map. */
+export type ComparedInput = Pick<SharedRun, 'document' | 'materials' | 'readings'> & {
+  swept: readonly SweepAxis[];
+};
+
+/** The axis of this kind among those that are drawn. */
+export function sweptAs<Kind extends SweepAxis['kind']>(
+  { swept }: Pick<ComparedInput, 'swept'>,
+  kind: Kind,
+): Extract<SweepAxis, { kind: Kind }>[] {
+  return swept.filter((axis): axis is Extract<SweepAxis, { kind: Kind }> => axis.kind === kind);
+}
 
 /**
  * One thing that a run was computed from. Runs differ in it when `value` is not the same in all; what is said of each

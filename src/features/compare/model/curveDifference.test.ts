@@ -7,7 +7,7 @@ const reference = { x: [0, 1, 2, 3], y: [1, 2, 4, 0] };
 describe('a curve against a reference', () => {
   it('is read on the axis of the reference, between its own points and not beyond them', () => {
     const coarse = { x: [0.5, 2.5], y: [10, 30] };
-    expect([...resample(coarse, reference.x)]).toEqual([NaN, 15, 25, NaN]);
+    expect([...resample(coarse, reference.x, false)]).toEqual([NaN, 15, 25, NaN]);
     expect([...relate('reflectanceP', 'difference', reference, coarse)]).toEqual([NaN, 13, 21, NaN]);
     expect([...relate('reflectanceP', 'ratio', reference, coarse)]).toEqual([NaN, 7.5, 6.25, NaN]);
   });
@@ -17,7 +17,13 @@ describe('a curve against a reference', () => {
     expect([...relate('reflectanceP', 'difference', reference, gap)]).toEqual([0, NaN, 0, 1]);
     expect([...relate('reflectanceP', 'difference', gap, reference)]).toEqual([0, NaN, 0, -1]);
     const between = { x: [0, 1.5, 3], y: [1, NaN, 1] };
-    expect([...resample(between, [0, 1, 2, 3])]).toEqual([1, NaN, NaN, 1]);
+    expect([...resample(between, [0, 1, 2, 3], false)]).toEqual([1, NaN, NaN, 1]);
+  });
+
+  it('takes the shorter way between two rotations, and lets no other reading turn', () => {
+    const jump = { x: [0, 2], y: [88, -88] };
+    expect([...resample(jump, [0, 1, 2], true)]).toEqual([88, 90, -88]);
+    expect([...resample(jump, [1], false)]).toEqual([0]);
   });
 
   it('has no ratio to 0', () => {
@@ -40,11 +46,11 @@ describe('a curve against a reference', () => {
 
 describe('the size of differences', () => {
   it('is the largest of either sign with its place, and the root mean square of what is there', () => {
-    const size = sizeOf([10, 20, 30, 40], [3, NaN, -4, 0]);
-    expect(size).toEqual({ count: 3, largest: 4, at: 30, rms: Math.sqrt(25 / 3) });
+    const size = sizeOf([3, NaN, -4, 0]);
+    expect(size).toEqual({ count: 3, largest: 4, at: 2, rms: Math.sqrt(25 / 3) });
   });
 
   it('is none where no point has both values', () => {
-    expect(sizeOf([1], [NaN])).toEqual({ count: 0, largest: null, at: null, rms: null });
+    expect(sizeOf([NaN])).toEqual({ count: 0, largest: null, at: null, rms: null });
   });
 });

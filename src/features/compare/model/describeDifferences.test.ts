@@ -55,7 +55,7 @@ function build(overrides: Partial<StackDocument> = {}, rest: Partial<ComparedInp
       workingPoint: { wavelengthNm: 632.8, angleDeg: 45, input: 'p', magnetization: { mode: 'drawn' } },
       ...overrides,
     },
-    axis: angle,
+    swept: [angle],
     materials,
     readings: ['rotationP', 'rotationS'],
     ...rest,
@@ -135,14 +135,20 @@ describe('what differs between the inputs of runs', () => {
     const at = point({ angleDeg: 30, wavelengthNm: 800 });
     expect(said(build(), build(at))).toEqual(['632.8 nm', '800 nm']);
     const wavelength: SweepAxis = { ...angle, kind: 'wavelength', from: 400, to: 900 };
-    expect(said(build({}, { axis: wavelength }), build(at, { axis: wavelength }))).toEqual(['45°', '30°']);
+    expect(said(build({}, { swept: [wavelength] }), build(at, { swept: [wavelength] }))).toEqual([
+      '45°',
+      '30°',
+    ]);
   });
 
   it('does not count the thickness of the swept layer, but which layer it is', () => {
     const sweep = (layerId: string): SweepAxis => ({ ...angle, kind: 'thickness', layerId, from: 0, to: 10 });
     const thicker = { layers: [{ ...cap, thicknessNm: 7 }, magnet, buffer] };
-    expect(said(build({}, { axis: sweep('cap') }), build(thicker, { axis: sweep('cap') }))).toEqual(['', '']);
-    expect(said(build({}, { axis: sweep('cap') }), build({}, { axis: sweep('buffer') }))).toEqual([
+    expect(said(build({}, { swept: [sweep('cap')] }), build(thicker, { swept: [sweep('cap')] }))).toEqual([
+      '',
+      '',
+    ]);
+    expect(said(build({}, { swept: [sweep('cap')] }), build({}, { swept: [sweep('buffer')] }))).toEqual([
       'Pt cap swept, Ta buffer 4 nm',
       'Pt cap 2 nm, Ta buffer swept',
     ]);
@@ -178,7 +184,7 @@ describe('what differs between the inputs of runs', () => {
       'not averaged',
       'averaged over 1° of angle',
     ]);
-    expect(said(build(), build({}, { axis: { ...angle, to: 60, points: 61 } }))).toEqual([
+    expect(said(build(), build({}, { swept: [{ ...angle, to: 60, points: 61 }] }))).toEqual([
       '0–85°, 171 points',
       '0–60°, 61 points',
     ]);

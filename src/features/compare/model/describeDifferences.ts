@@ -1,4 +1,5 @@
 import { SUBSTRATE } from '../../../../shared/run.ts';
+import type { SweepAxis } from '../../../../shared/run.ts';
 import { alignLayers } from './alignLayers.ts';
 import { layersIn } from './comparedInput.ts';
 import type { ComparedInput, InputFact } from './comparedInput.ts';
@@ -28,7 +29,10 @@ export function describeDifferences(inputs: readonly ComparedInput[]): string[][
 }
 
 /** What a swept layer is called; undefined where an axis is of nothing in particular. */
-export function sweptWord({ axis, document, materials }: ComparedInput): string | undefined {
+export function sweptWord(
+  axis: SweepAxis,
+  { document, materials }: Pick<ComparedInput, 'document' | 'materials'>,
+): string | undefined {
   if (!('layerId' in axis) || axis.layerId === undefined) return undefined;
   if (axis.layerId === SUBSTRATE) return 'the substrate';
   const layers = layersIn(document.layers);
@@ -49,14 +53,16 @@ function factsOf(inputs: readonly ComparedInput[]): Facts[] {
       layerFacts(layer, {
         key: slots[run]?.[position] ?? '',
         word,
-        axis: input.axis,
+        swept: input.swept,
         document: input.document,
         used: input.materials,
       }),
     );
-    const target = targetFact(input, films[run] ?? [], slots[run] ?? []);
+    const targets = input.swept.flatMap((axis) =>
+      targetFact(axis, input, films[run] ?? [], slots[run] ?? []),
+    );
     const order = orderFact(films[run] ?? [], slots[run] ?? [], slots);
-    return new Map([...layers, order, ...filmFacts(input), ...target].map((fact) => [fact.key, fact]));
+    return new Map([...layers, order, ...filmFacts(input), ...targets].map((fact) => [fact.key, fact]));
   });
 }
 
@@ -73,19 +79,19 @@ function orderFact(
 
 /** Whose Q or m an axis sweeps. A swept thickness or interface is told by the layer itself. */
 function targetFact(
+  axis: SweepAxis,
   input: ComparedInput,
   film: readonly { layer: { id: string } }[],
   slots: readonly string[],
 ): InputFact[] {
-  const { axis } = input;
   if (axis.kind !== 'voigtScale' && axis.kind !== 'direction') return [];
   const position = film.findIndex(({ layer }) => layer.id === axis.layerId);
   const what = axis.kind === 'direction' ? 'm' : 'Q';
   return [
     {
-      key: 'target',
+      key: `target ${axis.kind}`,
       value: slots[position] ?? axis.layerId ?? 'all',
-      phrase: `${what} of ${sweptWord(input) ?? 'every magnet'} swept`,
+      phrase: `${what} of ${sweptWord(axis, input) ?? 'every magnet'} swept`,
     },
   ];
 }

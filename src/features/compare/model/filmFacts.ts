@@ -3,7 +3,7 @@ import { SUBSTRATE } from '../../../../shared/run.ts';
 import type { SweepAxis } from '../../../../shared/run.ts';
 import { inputAzimuthOf } from '../../../../shared/stack.ts';
 import { formatFormula, formatPlain } from '../../../lib/format.ts';
-import { blocksIn, layersIn } from './comparedInput.ts';
+import { blocksIn, layersIn, sweptAs } from './comparedInput.ts';
 import type { ComparedInput, InputFact } from './comparedInput.ts';
 import { vector } from './layerFacts.ts';
 import { mediumDetail, mediumValue, mediumWord } from './mediumWords.ts';
@@ -16,17 +16,18 @@ export function filmFacts(input: ComparedInput): InputFact[] {
     ...blockFacts(input),
     ...spreadFacts(input),
     ...versionFacts(input),
-    ...gridFacts(input.axis),
+    ...input.swept.flatMap(gridFacts),
   ];
 }
 
-function lightFacts({ document, axis, readings }: ComparedInput): InputFact[] {
+function lightFacts(input: ComparedInput): InputFact[] {
+  const { document, readings } = input;
   const { wavelengthNm, angleDeg, magnetization } = document.workingPoint;
   const facts: InputFact[] = [];
-  if (axis.kind !== 'wavelength') {
+  if (sweptAs(input, 'wavelength').length === 0) {
     facts.push({ key: 'wavelength', value: String(wavelengthNm), phrase: `${formatPlain(wavelengthNm)} nm` });
   }
-  if (axis.kind !== 'angle') {
+  if (sweptAs(input, 'angle').length === 0) {
     facts.push({ key: 'angle', value: String(angleDeg), phrase: `${formatPlain(angleDeg)}°` });
   }
   // p and s are both stored; the azimuth of the light decides the readings at it and no others.
@@ -42,10 +43,11 @@ function lightFacts({ document, axis, readings }: ComparedInput): InputFact[] {
   return facts;
 }
 
-function surroundingFacts({ document, axis, materials }: ComparedInput): InputFact[] {
+function surroundingFacts(input: ComparedInput): InputFact[] {
+  const { document, materials } = input;
   const { incident, substrate, substrateM, backside } = document;
   const scale = document.substrateVoigtScale ?? 1;
-  const swept = axis.kind === 'graded' && axis.layerId === SUBSTRATE;
+  const swept = sweptAs(input, 'graded').some(({ layerId }) => layerId === SUBSTRATE);
   const graded = swept ? 'swept' : `${formatPlain(document.substrateGradedNm ?? 0)} nm wide`;
   const facts: InputFact[] = [
     {
@@ -78,11 +80,12 @@ function surroundingFacts({ document, axis, materials }: ComparedInput): InputFa
   return facts;
 }
 
-function blockFacts({ document, axis, materials }: ComparedInput): InputFact[] {
+function blockFacts(input: ComparedInput): InputFact[] {
+  const { document, materials } = input;
   return blocksIn(document.layers).map((block, position) => {
     const words = layersIn(block.layers).map(({ medium }) => mediumWord(medium, materials));
     const name = words.slice(0, 4).join('/');
-    const swept = axis.kind === 'repeat' && axis.blockId === block.id;
+    const swept = sweptAs(input, 'repeat').some(({ blockId }) => blockId === block.id);
     const phrase = swept ? `repeats of ${name} swept` : `${block.repeat} × ${name}`;
     return {
       key: `block ${position}`,
@@ -127,15 +130,29 @@ function versionFacts({ materials }: ComparedInput): InputFact[] {
   });
 }
 
-function gridFacts(axis: SweepAxis): InputFact[] {
+/** Of a map the second axis has facts of its own, named by what it sweeps. */
+function gridFacts(axis: SweepAxis, position: number, { length }: readonly SweepAxis[]): InputFact[] {
   const { from, to, points, spacing } = axis;
   const unit =
     axis.kind === 'angle' || axis.kind === 'direction' ? '°' : unitless.has(axis.kind) ? '' : ' nm';
   const range = `${formatPlain(from)}–${formatPlain(to)}${unit}`;
+  const of = length > 1 ? ` of ${axisWords[axis.kind]}` : '';
   const facts: InputFact[] = [
-    { key: 'range', value: range, phrase: range },
-    { key: 'points', value: String(points), phrase: points === 1 ? '1 point' : `${points} points` },
-    { key: 'spacing', value: spacing, phrase: spacing === 'log' ? 'log spacing' : 'even spacing' },
+    {
+      key: `range ${position}`,
+      value: range,
+      phrase: length > 1 ? `${axisWords[axis.kind]} ${range}` : range,
+    },
+    {
+      key: `points ${position}`,
+      value: String(points),
+      phrase: `${points === 1 ? '1 point' : `${points} points`}${of}`,
+    },
+    {
+      key: `spacing ${position}`,
+      value: spacing,
+      phrase: `${spacing === 'log' ? 'log spacing' : 'even spacing'}${of}`,
+    },
   ];
   if (axis.kind === 'direction') {
     facts.push({ key: 'plane', value: axis.plane, phrase: `m turned in ${axis.plane}` });
@@ -144,3 +161,13 @@ function gridFacts(axis: SweepAxis): InputFact[] {
 }
 
 const unitless = new Set<SweepAxis['kind']>(['voigtScale', 'repeat']);
+
+const axisWords: Record<SweepAxis['kind'], string> = {
+  wavelength: 'wavelength',
+  angle: 'angle',
+  thickness: 'thickness',
+  direction: 'direction of m',
+  voigtScale: 'Q scale',
+  repeat: 'repeats',
+  graded: 'interface width',
+};

@@ -1,22 +1,23 @@
-import type { SweepAxis, UsedMaterial } from '../../../../shared/run.ts';
+import type { UsedMaterial } from '../../../../shared/run.ts';
 import type { StackDocument, StackLayer } from '../../../../shared/stack.ts';
 import { formatPlain } from '../../../lib/format.ts';
-import type { InputFact } from './comparedInput.ts';
+import { sweptAs } from './comparedInput.ts';
+import type { ComparedInput, InputFact } from './comparedInput.ts';
 import { mediumDetail, mediumValue, mediumWord } from './mediumWords.ts';
 
 export type LayerContext = {
   /** Names the layer in all compared runs. */
   key: string;
   word: string;
-  axis: SweepAxis;
+  swept: ComparedInput['swept'];
   document: StackDocument;
   used: readonly UsedMaterial[];
 };
 
 /** What a layer contributes to the input of a run; what the axis sweeps has no value of its own. */
 export function layerFacts(layer: StackLayer, context: LayerContext): InputFact[] {
-  const { key, word, axis, used } = context;
-  const swept = axis.kind === 'thickness' && axis.layerId === layer.id;
+  const { key, word, used } = context;
+  const swept = sweptAs(context, 'thickness').some(({ layerId }) => layerId === layer.id);
   const thickness = swept ? 'swept' : `${formatPlain(layer.thicknessNm)} nm`;
   const medium: InputFact = {
     key: `${key} medium`,
@@ -38,10 +39,10 @@ export function layerFacts(layer: StackLayer, context: LayerContext): InputFact[
   ];
 }
 
-function magneticFacts(layer: StackLayer, { key, word, axis, document }: LayerContext): InputFact[] {
+function magneticFacts(layer: StackLayer, { key, word, swept, document }: LayerContext): InputFact[] {
   const { mode } = document.workingPoint.magnetization;
-  const turned =
-    axis.kind === 'direction' && (axis.layerId === undefined ? !layer.fixed : axis.layerId === layer.id);
+  const turns = sweptAs({ swept }, 'direction');
+  const turned = turns.some(({ layerId }) => (layerId === undefined ? !layer.fixed : layerId === layer.id));
   const replaced = turned || (mode === 'direction' && !layer.fixed);
   const facts: InputFact[] = [];
   if (layer.m === undefined) {
@@ -49,7 +50,7 @@ function magneticFacts(layer: StackLayer, { key, word, axis, document }: LayerCo
   } else if (!replaced) {
     facts.push({ key: `${key} m`, value: layer.m.join(), phrase: `m of ${word} ${vector(layer.m)}` });
   }
-  if (layer.m && (mode !== 'drawn' || axis.kind === 'direction')) {
+  if (layer.m && (mode !== 'drawn' || turns.length > 0)) {
     const fixed = layer.fixed === true;
     facts.push({
       key: `${key} fixed`,
@@ -73,9 +74,10 @@ function magneticFacts(layer: StackLayer, { key, word, axis, document }: LayerCo
   return facts;
 }
 
-function faceFacts(layer: StackLayer, { key, word, axis, used }: LayerContext): InputFact[] {
+function faceFacts(layer: StackLayer, { key, word, swept, used }: LayerContext): InputFact[] {
   const { dead, oxide } = layer;
-  const graded = axis.kind === 'graded' && axis.layerId === layer.id ? null : (layer.gradedNm ?? 0);
+  const widens = sweptAs({ swept }, 'graded').some(({ layerId }) => layerId === layer.id);
+  const graded = widens ? null : (layer.gradedNm ?? 0);
   return [
     {
       key: `${key} interface`,

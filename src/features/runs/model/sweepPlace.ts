@@ -1,34 +1,16 @@
 import type { ReadingName, SweepAxes, SweepAxis } from '../../../../shared/run.ts';
 import type { RunResult } from '../../../../shared/resultFormat.ts';
-import type { StackDocument, StackItem, StackLayer, WorkingPoint } from '../../../../shared/stack.ts';
+import type { StackDocument, WorkingPoint } from '../../../../shared/stack.ts';
 import { nearestIndex } from '../../../components/plot/curveValues.ts';
 import { formatPlain } from '../../../lib/format.ts';
+import { placeOnAxis } from '../../../lib/placeOnAxis.ts';
 
 /** Where the working point of the film stands on the swept axis; null where the axis does not reach it. */
 export function workingPlace(axis: SweepAxis, document: StackDocument): number | null {
-  const place = placeOf(axis, document);
+  const place = placeOnAxis(axis, document);
   const inside =
     place !== null && place >= Math.min(axis.from, axis.to) && place <= Math.max(axis.from, axis.to);
   return inside ? place : null;
-}
-
-function placeOf(axis: SweepAxis, document: StackDocument): number | null {
-  switch (axis.kind) {
-    case 'wavelength':
-      return document.workingPoint.wavelengthNm;
-    case 'angle':
-      return document.workingPoint.angleDeg;
-    case 'thickness':
-      return layersIn(document.layers).find(({ id }) => id === axis.layerId)?.thicknessNm ?? null;
-    case 'voigtScale':
-      return 1;
-    default:
-      return null;
-  }
-}
-
-function layersIn(items: readonly StackItem[]): StackLayer[] {
-  return items.flatMap((item) => ('layers' in item ? layersIn(item.layers) : [item]));
 }
 
 /** The working point moved along the sweep, for the drawing that goes with a value that is being read. */
