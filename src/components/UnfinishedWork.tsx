@@ -8,8 +8,8 @@ type UnfinishedWorkProps = {
   /** What is counted, such as "points", and the work itself in words, such as "run". */
   words: { counted: string; work: string; answer: string };
   mayEdit: boolean;
-  /** Whether what was found before the end is shown below. */
-  kept?: boolean;
+  /** Whether what was found before the end is shown below; undefined until that is known. */
+  kept: boolean | undefined;
   cancel: { isPending: boolean; isSuccess: boolean; error: Error | null };
   onCancel: () => void;
   onRerun: () => void;
@@ -21,7 +21,7 @@ export function UnfinishedWork({
   progress,
   words,
   mayEdit,
-  kept = false,
+  kept,
   cancel,
   onCancel,
   onRerun,
@@ -53,7 +53,7 @@ export function UnfinishedWork({
     );
   }
   const failed = state === 'failed';
-  const rest = kept ? 'what it had found by then is below' : 'nothing was kept';
+  const rest = kept ? '; what it had found by then is below' : kept === false ? '; nothing was kept' : '';
   return (
     <div role="alert" className={`card px-5 py-5 ${failed ? 'border-danger!' : ''}`}>
       <p className={`font-semibold ${failed ? 'text-danger' : ''}`}>
@@ -62,11 +62,12 @@ export function UnfinishedWork({
       <p className="mt-1 text-muted">
         {failed
           ? (error ?? 'No reason was recorded.')
-          : `It was stopped after ${formatCount(done)} of ${formatCount(total)} ${words.counted}; ${rest}.`}
+          : `It was stopped after ${formatCount(done)} of ${formatCount(total)} ${words.counted}${rest}.`}
       </p>
       {failed && kept && (
         <p className="mt-1 text-muted">
-          After {formatCount(done)} of {formatCount(total)} {words.counted}; {rest}.
+          After {formatCount(done)} of {formatCount(total)} {words.counted}
+          {rest}.
         </p>
       )}
       {mayEdit && (

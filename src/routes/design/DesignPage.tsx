@@ -97,7 +97,7 @@ function LoadedDesign({ design }: { design: Design }) {
         <DesignState
           design={design}
           mayEdit={editor}
-          kept={answer.shown !== undefined}
+          kept={answer.kept}
           onRerun={startRerun}
           rerunning={rerun.isPending}
         />

@@ -5,6 +5,8 @@ import { designResultQuery, partialDesignResultQuery } from '../../features/desi
 export type DesignAnswer = {
   /** The answer, or of a search what it has found before its end; undefined while there is none. */
   shown: DesignResult | undefined;
+  /** Whether what a stopped search had found is there; undefined until that is known. */
+  kept: boolean | undefined;
   error: Error | null;
   retry: () => void;
 };
@@ -19,6 +21,7 @@ export function useDesignAnswer({ id, kind, progress: { state, done } }: Design)
   const partial = useQuery({ ...partialDesignResultQuery(path, state === 'running'), enabled: partly });
   return {
     shown: finished ? result.data : partly ? partial.data : undefined,
+    kept: !partly ? false : partial.isPending ? undefined : partial.data !== undefined,
     error: finished ? result.error : null,
     retry: () => void result.refetch(),
   };

@@ -5,8 +5,8 @@ import { useCancelDesign } from '../api/changeDesign.ts';
 type Props = {
   design: Design;
   mayEdit: boolean;
-  /** Whether what it had found before its end is there. */
-  kept: boolean;
+  /** Whether what it had found before its end is there; undefined until that is known. */
+  kept: boolean | undefined;
   onRerun: () => void;
   rerunning: boolean;
 };

@@ -65,14 +65,16 @@ export function OptimiseResultView({ input, result, materials, view, onView, run
           points={input.points}
           found={points}
           of={name}
-          whyNone={
-            unfinished
-              ? 'They are taken when a search has come to its end; a stack made of the film shows them too.'
-              : 'This answer was stored before each film kept its readings. Rerun the design to have them.'
-          }
+          whyNone={whyNone(unfinished, running)}
         />
       </div>
       <SearchPath goal={goal} result={result} />
     </div>
   );
+}
+
+function whyNone(unfinished: boolean, running: boolean): string {
+  if (running) return 'They are taken when the search has come to its end.';
+  if (unfinished) return 'They are taken at the end of a search. A stack made of the film shows them too.';
+  return 'This answer was stored before each film kept its readings. Rerun the design to have them.';
 }

@@ -13,6 +13,7 @@ export function RunState({ run, ...rest }: Props) {
     <UnfinishedWork
       progress={run.progress}
       words={words}
+      kept={false}
       cancel={cancel}
       onCancel={() => cancel.mutate()}
       {...rest}
