@@ -6,7 +6,8 @@ import { filmAssumptions } from './runAssumptions.ts';
 
 /**
  * What the numbers of a card rest on, beyond what stands elsewhere on it: the working points above their readings, sizes of
- * errors and number of films in `cardToleranceSentences`, the planning sentence in `cardCautions`.
+ * errors and number of films in `cardToleranceSentences`, what is not measured in `cardSources`, the planning sentence in
+ * `cardCautions`.
  */
 export function cardAssumptions(
   { document, points, signal }: ToleranceDesign,
@@ -17,7 +18,7 @@ export function cardAssumptions(
   return [
     'Errors are normal. A layer is its nominal thickness times 1 + both of its errors; below 0 it counts as absent.',
     ...sharedErrors(document),
-    ...filmAssumptions(document, explained, materials, wavelengths.size > 1),
+    ...filmAssumptions(document, explained, materials, wavelengths.size > 1, false),
     ...layerRemarks(document, materials),
   ];
 }

@@ -34,18 +34,20 @@ export function runAssumptions(
  * What the numbers of a film rest on, whatever is asked of it.
  *
  * @param atManyWavelengths whether it is solved at more than one
+ * @param saysConfidence left out where each source says itself that it is not measured
  */
 export function filmAssumptions(
   document: StackDocument,
   readings: ReadingName[],
   materials: UsedMaterial[],
   atManyWavelengths: boolean,
+  saysConfidence = true,
 ): string[] {
   return [
     'Convention: time factor exp(-iωt), so N = n + ik with k ≥ 0; z points into the film, x lies in the plane of incidence; a rotation is positive counter-clockwise for an observer who looks into the reflected beam.',
     ...meanings(readings, document),
     ...geometry(document),
-    ...constants(document, atManyWavelengths, materials),
+    ...constants(document, atManyWavelengths, materials, saysConfidence),
     ...thermalLaws(document.layers),
   ];
 }
@@ -179,30 +181,40 @@ function anyLayer(items: StackItem[], holds: (layer: StackLayer) => boolean): bo
   return items.some((item) => ('layers' in item ? anyLayer(item.layers, holds) : holds(item)));
 }
 
-function constants(document: StackDocument, atManyWavelengths: boolean, materials: UsedMaterial[]): string[] {
+function constants(
+  document: StackDocument,
+  atManyWavelengths: boolean,
+  materials: UsedMaterial[],
+  saysConfidence: boolean,
+): string[] {
   const sentences = materials.flatMap((material) => [
     ...(material.assumedConstant
       ? [
           `A constant of ${material.name} (${material.id}) is known at one wavelength only and was used at others as if it did not change.`,
         ]
       : []),
-    ...(['fitted', 'invented for the demo'] as const).flatMap((confidence) =>
-      constantsOf(material, confidence).map(
-        (what) => `${what} of ${material.name} (${material.id}) is ${confidence}, not measured.`,
-      ),
-    ),
+    ...(saysConfidence ? confidencesOf(material) : []),
     ...(material.mixture ? [`${material.name} (${material.id}) is a mixture: ${material.mixture}.`] : []),
     ...(material.anisotropySource
       ? [`${material.name} (${material.id}) is not isotropic: its crystal axes stand as its version says.`]
-      : []),
-    ...(material.voigtSource?.confidence === 'from memory'
-      ? [`The Voigt constant of ${material.name} (${material.id}) is from memory: verify it before use.`]
       : []),
   ]);
   if (atManyWavelengths && hasTypedConstants(document)) {
     sentences.push('Constants typed into the stack do not change with wavelength.');
   }
   return sentences;
+}
+
+function confidencesOf(material: UsedMaterial): string[] {
+  const name = `${material.name} (${material.id})`;
+  return [
+    ...(['fitted', 'invented for the demo'] as const).flatMap((confidence) =>
+      constantsOf(material, confidence).map((what) => `${what} of ${name} is ${confidence}, not measured.`),
+    ),
+    ...(material.voigtSource?.confidence === 'from memory'
+      ? [`The Voigt constant of ${name} is from memory: verify it before use.`]
+      : []),
+  ];
 }
 
 function constantsOf({ indexSource, voigtSource }: UsedMaterial, confidence: Confidence): string[] {

@@ -107,7 +107,7 @@ const removeCard = route({
 const readCardPdf = streamRoute({
   method: 'get',
   path: '/cards/:cardId/card.pdf',
-  summary: 'The growth card as one page of PDF, to print and to write on.',
+  summary: 'The growth card as PDF, on as few pages of A4 as can be read, to print and to write on.',
   noun: 'growth card',
   policy: mayRead,
   load,

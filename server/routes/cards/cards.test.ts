@@ -308,6 +308,8 @@ describe('its PDF', () => {
     const pages = await pagesOf(await pdfOf(`/api/v1/cards/${card.id}/card.pdf`));
     expect(pages.length).toBeGreaterThan(1);
     expect(pages[0]).toContain(`page 1 of ${pages.length}, continued overleaf`);
+    // The table goes on under its title and columns.
+    expect(pages[1]).toMatch(/^ ?Pt\/Co\/Pt, cap of 3 nm Sample id NF-0417 Step Material, role Nominal, nm/);
     const text = squeeze(pages.join(' '));
     const missing = shownOf(card).filter(
       (shown) => !text.includes(squeeze(shown.replaceAll('中', '[U+4E2D]'))),

@@ -6,16 +6,19 @@ export type Block = {
   draw(pen: Pen, x: number, y: number, width: number): void;
   /** A heading stays with what follows it. */
   keepsWithNext?: boolean;
+  /** Titles of the columns, which stand once more above it where it begins a page. */
+  head?: Block;
 };
 
 /** @param options.size of the type; `before` is the space above */
 export function paragraph(
   text: string,
-  options: { size: number; before?: number; indent?: number; keepsWithNext?: boolean },
+  options: { size: number; before?: number; indent?: number; keepsWithNext?: boolean; head?: Block },
 ): Block {
-  const { size, before = 0, indent = 0, keepsWithNext = false } = options;
+  const { size, before = 0, indent = 0, keepsWithNext = false, head } = options;
   return {
     keepsWithNext,
+    ...(head && { head }),
     height: (pen, width) =>
       before * pen.scale + pen.wrap(text, size, width - indent).length * pen.lineHeight(size),
     draw(pen, x, y, width) {
@@ -53,7 +56,7 @@ export type Column = {
 const CELL_SIZE = 8.5;
 const CELL_PADDING = 3;
 
-/** Titles of the columns; they stand on each page by being the first row. */
+/** Titles of the columns. */
 export function tableHead(columns: Column[]): Block {
   return tableRow(
     columns,
@@ -66,8 +69,9 @@ export function tableHead(columns: Column[]): Block {
 export function tableRow(
   columns: Column[],
   cells: string[],
-  { isHead = false, isRepeated = false }: { isHead?: boolean; isRepeated?: boolean } = {},
+  options: { isHead?: boolean; isRepeated?: boolean; keepsWithNext?: boolean; head?: Block } = {},
 ): Block {
+  const { isHead = false, isRepeated = false, keepsWithNext = isHead, head } = options;
   const size = isHead ? 7 : CELL_SIZE;
   const linesOf = (pen: Pen, width: number) =>
     columns.map(({ share }, at) => pen.wrap(cells[at] ?? '', size, share * width - 2 * CELL_PADDING));
@@ -76,7 +80,8 @@ export function tableRow(
     return most * pen.lineHeight(size) + (isHead ? 3 : 5) * pen.scale;
   };
   return {
-    keepsWithNext: isHead,
+    keepsWithNext,
+    ...(head && { head }),
     height,
     draw(pen, x, y, width) {
       const bottom = y + height(pen, width);

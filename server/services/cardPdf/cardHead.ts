@@ -43,6 +43,18 @@ export class CardHead {
     if (url !== null) drawQrCode(pen.doc, url, x + width - CODE_SIDE, y, CODE_SIDE);
   }
 
+  /** The height of what stands above the second and further pages. */
+  continuedHeight(pen: Pen): number {
+    return pen.lineHeight(LINE_SIZE) + 12;
+  }
+
+  drawContinued(pen: Pen, x: number, y: number, width: number): void {
+    const { title, sampleId } = this.#card;
+    const [line = ''] = pen.wrap(title, LINE_SIZE, 0.62 * width);
+    pen.line(line === title ? title : `${line} ...`, { x, y, width, size: LINE_SIZE });
+    this.#field(pen, 'Sample id', sampleId, { x: x + 0.7 * width, y, width: 0.3 * width });
+  }
+
   /** A line to write on, with what is known already. */
   #field(pen: Pen, label: string, value: string, at: { x: number; y: number; width: number }): void {
     const labelWidth = pen.widthOf(label, LINE_SIZE) + 5;

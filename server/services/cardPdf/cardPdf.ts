@@ -9,14 +9,16 @@ import { Pen } from './pen.ts';
 const PAGE = { width: 595.28, height: 841.89, margin: 36 };
 const FOOTER = 16;
 
-/** Sizes that are tried in turn until the card fits on one page; the last is as small as paper can be read. */
-const SCALES = [1, 0.95, 0.9, 0.85, 0.8, 0.75];
+/** Sizes that are tried in turn for the fewest pages; in the last, rows are as low as a hand can write in. */
+const SCALES = [1, 0.95, 0.9, 0.85, 0.8, 0.75, 0.7];
+/** From this size down, what is short stands beside or behind another. */
+const TIGHT_SCALE = 0.9;
 
 type Placed = { block: Block; y: number };
 
 /**
  * The card on one A4 page, black on white. A film of many layers gets smaller type; what does not fit then goes on to
- * further pages, with a note: nothing is cut off.
+ * further pages, under the title and the columns once more: nothing is cut off.
  */
 export async function growthCardPdf(card: SharedGrowthCard): Promise<Buffer> {
   const doc = new PDFDocument({
@@ -28,11 +30,11 @@ export async function growthCardPdf(card: SharedGrowthCard): Promise<Buffer> {
   });
   const bytes = collect(doc);
   const head = new CardHead(card);
-  const blocks = cardBlocks(card);
-  const { pen, pages } = layOut(doc, head, blocks);
+  const { pen, pages } = layOut(doc, head, card);
   pages.forEach((placed, at) => {
     doc.addPage({ size: 'A4', margin: 0 });
     if (at === 0) head.draw(pen, PAGE.margin, PAGE.margin, textWidth);
+    else head.drawContinued(pen, PAGE.margin, PAGE.margin, textWidth);
     for (const { block, y } of placed) block.draw(pen, PAGE.margin, y, textWidth);
     if (pages.length > 1) drawFooter(pen, card.title, at + 1, pages.length);
   });
@@ -43,29 +45,39 @@ export async function growthCardPdf(card: SharedGrowthCard): Promise<Buffer> {
 const textWidth = PAGE.width - 2 * PAGE.margin;
 const bottom = PAGE.height - PAGE.margin;
 
-function layOut(doc: PDFKit.PDFDocument, head: CardHead, blocks: Block[]): { pen: Pen; pages: Placed[][] } {
+type LaidOut = { pen: Pen; pages: Placed[][] };
+
+/** In the largest size that takes the fewest pages. */
+function layOut(doc: PDFKit.PDFDocument, head: CardHead, card: SharedGrowthCard): LaidOut {
   const widths = new Map<string, number>();
+  let best: LaidOut | null = null;
   for (const scale of SCALES) {
     const pen = new Pen(doc, scale, widths);
-    const pages = flow(pen, head.height(pen, textWidth), blocks, bottom);
-    if (pages.length === 1) return { pen, pages };
+    const blocks = cardBlocks(card, scale <= TIGHT_SCALE);
+    const onOne = flow(pen, head, blocks, bottom);
+    if (onOne.length === 1) return { pen, pages: onOne };
+    const pages = flow(pen, head, blocks, bottom - FOOTER);
+    if (!best || pages.length < best.pages.length) best = { pen, pages };
   }
-  const pen = new Pen(doc, 0.85, widths);
-  return { pen, pages: flow(pen, head.height(pen, textWidth), blocks, bottom - FOOTER) };
+  return best!;
 }
 
 /** Blocks from the top down, on to the next page where one does not fit; a heading goes with what follows it. */
-function flow(pen: Pen, headHeight: number, blocks: Block[], end: number): Placed[][] {
+function flow(pen: Pen, head: CardHead, blocks: Block[], end: number): Placed[][] {
   const pages: Placed[][] = [[]];
-  let y = PAGE.margin + headHeight;
-  for (const [at, block] of blocks.entries()) {
-    const height = block.height(pen, textWidth);
-    if (y + height + heightThatFollows(pen, blocks, at) > end && pages.at(-1)!.length > 0) {
-      pages.push([]);
-      y = PAGE.margin;
-    }
+  let y = PAGE.margin + head.height(pen, textWidth);
+  const place = (block: Block) => {
     pages.at(-1)!.push({ block, y });
-    y += height;
+    y += block.height(pen, textWidth);
+  };
+  for (const [at, block] of blocks.entries()) {
+    const needed = block.height(pen, textWidth) + heightThatFollows(pen, blocks, at);
+    if (y + needed > end && pages.at(-1)!.length > 0) {
+      pages.push([]);
+      y = PAGE.margin + head.continuedHeight(pen);
+      if (block.head) place(block.head);
+    }
+    place(block);
   }
   return pages;
 }

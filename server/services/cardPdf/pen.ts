@@ -59,11 +59,14 @@ function runsOf(text: string): Run[] {
 
 const MEASURED_AT = 1000;
 
+/** Smaller type is not read on paper in a workshop: common practice, no source. */
+const LEAST_SIZE = 6.5;
+
 export type Align = 'left' | 'right';
 
 export class Pen {
   readonly doc: PDFKit.PDFDocument;
-  /** Of all sizes and distances; below 1 where much has to go on the page. */
+  /** Of all sizes, down to the least, and distances; below 1 where much has to go on the page. */
   readonly scale: number;
   /** Of words at the size MEASURED_AT: every size is a multiple. */
   readonly #widths: Map<string, number>;
@@ -75,9 +78,14 @@ export class Pen {
     for (const script of scripts) doc.registerFont(script, fileOf(script));
   }
 
+  /** What type of this size is printed in. */
+  #printed(size: number): number {
+    return Math.max(LEAST_SIZE, size * this.scale);
+  }
+
   /** The height of one line of this size. */
   lineHeight(size: number): number {
-    return size * 1.28 * this.scale;
+    return (this.scale < 1 ? 1.22 : 1.28) * this.#printed(size);
   }
 
   /**
@@ -90,7 +98,7 @@ export class Pen {
       (sum, word) => sum + this.#widthOfWord(' ') + this.#widthOfWord(word),
       this.#widthOfWord(first),
     );
-    return (width * size * this.scale) / MEASURED_AT;
+    return (width * this.#printed(size)) / MEASURED_AT;
   }
 
   #widthOfWord(word: string): number {
@@ -141,7 +149,7 @@ export class Pen {
     const { y, width, size, align = 'left' } = at;
     let x = align === 'right' ? at.x + width - this.widthOf(text, size) : at.x;
     for (const run of runsOf(text)) {
-      this.doc.font(run.script).fontSize(size * this.scale);
+      this.doc.font(run.script).fontSize(this.#printed(size));
       this.doc.text(run.text, x, y, { lineBreak: false, features: FEATURES });
       x += this.widthOf(run.text, size);
     }
