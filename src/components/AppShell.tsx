@@ -27,6 +27,7 @@ export function AppShell({ home, links, right, banner, children }: AppShellProps
     <div className="flex min-h-dvh flex-col">
       <a
         href="#content"
+        data-screen-only
         className="fixed top-2 left-2 z-50 -translate-y-20 rounded-control bg-accent px-4 py-2 font-semibold text-on-accent focus:translate-y-0"
       >
         Skip to content

@@ -4,7 +4,7 @@ import type { CardReading } from '../../../../shared/growthCard.ts';
 /** What the film should show at each working point, with the band in which two of three films lie. */
 export function CardReadings({ readings }: { readings: readonly CardReading[] }) {
   return (
-    <div className="grid gap-x-8 gap-y-3 sm:grid-cols-2 print:grid-cols-2">
+    <div className="grid gap-x-8 gap-y-3 group-data-paper:grid-cols-2 sm:grid-cols-2">
       {readings.map(({ pointId, label, conditions, readings: values }) => (
         <table key={pointId} className="w-full self-start text-left text-note">
           <caption className="text-left">

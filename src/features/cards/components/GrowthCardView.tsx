@@ -1,6 +1,8 @@
+import { useRef } from 'react';
 import type { ReactNode } from 'react';
 import { cardOrigin, cardTime, cardToleranceSentences } from '../../../../shared/cardWords.ts';
 import type { GrowthCard } from '../../../../shared/growthCard.ts';
+import { usePaperFit } from '../hooks/usePaperFit.ts';
 import { CardLayerTable } from './CardLayerTable.tsx';
 import { CardReadings } from './CardReadings.tsx';
 import { QrCode } from './QrCode.tsx';
@@ -11,10 +13,13 @@ type Props = { card: Omit<GrowthCard, 'groupId' | 'studyId' | 'designId'> };
 /** The one page for the chamber, on screen and on A4 paper: the same words and numbers as its PDF. */
 export function GrowthCardView({ card }: Props) {
   const { title, sampleId, layers, readings, bench, decision, assumptions, sources, cautions, url } = card;
+  const paper = useRef<HTMLElement>(null);
+  usePaperFit(paper, sampleId === '' ? title : `${title}, sample ${sampleId}`);
   return (
     <article
+      ref={paper}
       aria-label={`Growth card ${title}`}
-      className="card growth-card mx-auto flex max-w-[820px] flex-col gap-4 px-5 py-5 sm:px-8"
+      className="card growth-card group mx-auto flex max-w-[820px] flex-col gap-4 px-5 py-5 sm:px-8"
     >
       <header className="flex items-start justify-between gap-4">
         <div className="min-w-0">
@@ -51,7 +56,7 @@ export function GrowthCardView({ card }: Props) {
         </p>
       </Part>
       <Part title="Tolerances and assumptions">
-        <Lines lines={[...cardToleranceSentences(card), ...assumptions]} />
+        <Lines lines={[...cardToleranceSentences(card), ...assumptions]} runOn />
       </Part>
       {cautions.length > 0 && (
         <Part title="Cautions">
@@ -78,9 +83,10 @@ function Part({ title, children }: { title: string; children: ReactNode }) {
   );
 }
 
-function Lines({ lines }: { lines: readonly string[] }) {
+/** @param props.runOn on paper that is short of room, one sentence after the other */
+function Lines({ lines, runOn = false }: { lines: readonly string[]; runOn?: boolean }) {
   return (
-    <ul className="fine-print list-disc pl-4 wrap-break-word">
+    <ul className={`fine-print list-disc pl-4 wrap-break-word ${runOn ? 'run-on' : ''}`}>
       {lines.map((line) => (
         <li key={line}>{line}</li>
       ))}
