@@ -7,8 +7,13 @@ import { toSolveCase } from '../../shared/stackCase.ts';
 import type { ResolvableMaterial } from '../dispersion/resolveCase.ts';
 import { resolveCase } from '../dispersion/resolveCase.ts';
 
-/** Factors on the constants of one material; on Re Q and Im Q each. */
-export type ConstantFactors = { n: number; k: number; q: [re: number, im: number] };
+/** Factors on the constants of one material; on Re Q and Im Q each. What is 0 cannot be scaled: it can be added to. */
+export type ConstantFactors = {
+  n: number;
+  k: number;
+  q: [re: number, im: number];
+  added?: { k: number; q: [re: number, im: number] };
+};
 
 /**
  * The document with numbers in place of library materials, for its own working point. Media can then be changed
@@ -95,7 +100,7 @@ export function isVacuumOrAir({ index }: Pick<StackMedium, 'index'>): boolean {
 }
 
 /**
- * A frozen document with constants times factors, both indices of a uniaxial medium alike. Media given as tensors or
+ * A frozen document with constants times factors and added to, both indices of a uniaxial medium alike. Media given as tensors or
  * mixtures, vacuum and air, and what is not named, stay.
  */
 export function scaleConstants(
@@ -105,19 +110,24 @@ export function scaleConstants(
   return mapMedia(frozen, (medium) => {
     const factor = factors.get(medium.label ?? '');
     if (!factor || medium.index === undefined || isVacuumOrAir(medium)) return medium;
-    const scaleIndex = ([n, k]: [number, number]): [number, number] => [n * factor.n, k * factor.k];
+    const { n: byN, k: byK, q: byQ, added = nothingAdded } = factor;
+    const scaleIndex = ([n, k]: [number, number]): [number, number] => [n * byN, k * byK + added.k];
+    const scaleVoigt = ([re, im]: [number, number]): [number, number] => [
+      re * byQ[0] + added.q[0],
+      im * byQ[1] + added.q[1],
+    ];
     return {
       ...medium,
       index: scaleSamples(medium.index, scaleIndex),
       ...(medium.extraordinary === undefined
         ? {}
         : { extraordinary: scaleSamples(medium.extraordinary, scaleIndex) }),
-      ...(medium.voigt === undefined
-        ? {}
-        : { voigt: scaleSamples(medium.voigt, ([re, im]) => [re * factor.q[0], im * factor.q[1]]) }),
+      ...(medium.voigt === undefined ? {} : { voigt: scaleSamples(medium.voigt, scaleVoigt) }),
     };
   });
 }
+
+const nothingAdded: NonNullable<ConstantFactors['added']> = { k: 0, q: [0, 0] };
 
 type Sampled = ComplexInput | { samples: ComplexInput[] };
 

@@ -17,15 +17,15 @@ import { mediaBeside } from '../mediaBeside.ts';
 
 /** Step of a thickness, nm: the readings bend over nanometres, rounding is at 1e-13. */
 const STEP_NM = 1e-3;
-/** Relative step of a constant. */
+/** Relative step of a constant, and the step itself of one that is 0. */
 const STEP_FACTOR = 1e-4;
 
 type Derivative = Sensitivity['derivative'];
 
 /**
  * How much every reading changes with every thickness and constant: fourth-order central differences
- * (f(-2h) - 8 f(-h) + 8 f(h) - f(2h)) / 12h, Abramowitz and Stegun, table 25.2; at the least thickness that a layer can have a one-sided
- * difference of second order.
+ * (f(-2h) - 8 f(-h) + 8 f(h) - f(2h)) / 12h, Abramowitz and Stegun, table 25.2; at the least thickness that a layer can have, and of a k of 0,
+ * a one-sided difference of second order.
  *
  * @param materials by id and version, all that the document names
  * @throws ResolutionError when a material is not known at a working point
@@ -105,10 +105,15 @@ function constantSensitivities(
       const film: FilmChange = { thicknessNm: new Map(), constants: new Map([[of, change(step)]]) };
       return solver.readings(film);
     };
-    return parametersOf(medium).map(({ parameter, value, change }): OneSensitivity => {
-      const perFactor = central(at(change), STEP_FACTOR);
-      return { parameter, of, label: `${parameter} of ${label}`, value, derivative: over(perFactor, value) };
-    });
+    const isIncident = of === materialKeyOf(film.incident);
+    const stepOfZero = STEP_FACTOR / Math.max(1, thicknessInWavelengths(film, of));
+    return parametersOf(medium, !isIncident).map(({ parameter, value, change }): OneSensitivity => ({
+      parameter,
+      of,
+      label: `${parameter} of ${label}`,
+      value,
+      derivative: derivativeBy(at(change), parameter, value, stepOfZero),
+    }));
   });
 }
 
@@ -118,28 +123,65 @@ type Parameter = {
   change: (step: number) => ConstantFactors;
 };
 
+/** 4 pi d / wavelength of the thickest part of a medium: how soon a k of it shows. A slab is soon opaque. */
+function thicknessInWavelengths(film: StackDocument, of: string): number {
+  const { layers, substrate, backside, workingPoint } = film;
+  const parts = drawnLayers(layers).map(({ medium, thicknessNm }) => ({ medium, thicknessNm }));
+  if (backside) parts.push({ medium: substrate, thicknessNm: backside.thicknessNm });
+  const own = parts.filter(({ medium }) => materialKeyOf(medium) === of).map((part) => part.thicknessNm);
+  return (4 * Math.PI * Math.max(0, ...own)) / workingPoint.wavelengthNm;
+}
+
+/** @param at the readings at a relative step of the constant, of one that is 0 at the step itself */
+function derivativeBy(
+  at: (step: number) => PointReadings,
+  parameter: Parameter['parameter'],
+  value: number,
+  stepOfZero: number,
+): Derivative {
+  if (value !== 0) return over(central(at, STEP_FACTOR), value);
+  // Below 0 a medium would amplify.
+  return parameter === 'k' ? forward(at, stepOfZero) : central(at, STEP_FACTOR);
+}
+
 /**
- * The constants of a medium given as one index, of a uniaxial one for both indices together. A k of 0 cannot be scaled and
- * has no derivative here; vacuum and air have none.
+ * The constants of a medium given as one index, of a uniaxial one for both indices together; vacuum and air have none.
+ *
+ * @param mayAbsorb whether the film can be solved with a k of this medium
  */
-function parametersOf(medium: StackMedium): Parameter[] {
+function parametersOf(medium: StackMedium, mayAbsorb: boolean): Parameter[] {
   const { index, voigt } = medium;
   if (index === undefined || isVacuumOrAir(medium) || (typeof index === 'object' && 'samples' in index))
     return [];
   const [n, k] = toComplex(index);
   const same: ConstantFactors = { n: 1, k: 1, q: [1, 1] };
+  const added = (step: { k?: number; q?: [number, number] }) => ({
+    ...same,
+    added: { k: 0, q: [0, 0] as [number, number], ...step },
+  });
   const parameters: Parameter[] = [
     { parameter: 'n', value: n, change: (step) => ({ ...same, n: 1 + step }) },
-    { parameter: 'k', value: k, change: (step) => ({ ...same, k: 1 + step }) },
   ];
+  if (mayAbsorb) {
+    const change = (step: number) => (k === 0 ? added({ k: step }) : { ...same, k: 1 + step });
+    parameters.push({ parameter: 'k', value: k, change });
+  }
   if (voigt !== undefined && !(typeof voigt === 'object' && 'samples' in voigt)) {
     const [re, im] = toComplex(voigt);
     parameters.push(
-      { parameter: 'Re Q', value: re, change: (step) => ({ ...same, q: [1 + step, 1] }) },
-      { parameter: 'Im Q', value: im, change: (step) => ({ ...same, q: [1, 1 + step] }) },
+      {
+        parameter: 'Re Q',
+        value: re,
+        change: (step) => (re === 0 ? added({ q: [step, 0] }) : { ...same, q: [1 + step, 1] }),
+      },
+      {
+        parameter: 'Im Q',
+        value: im,
+        change: (step) => (im === 0 ? added({ q: [0, step] }) : { ...same, q: [1, 1 + step] }),
+      },
     );
   }
-  return parameters.filter(({ value }) => value !== 0);
+  return parameters;
 }
 
 function central(at: (step: number) => PointReadings, h: number): Derivative {

@@ -1,3 +1,5 @@
+import { evaluate } from 'mathjs';
+import type { ResultSet } from 'mathjs';
 import { describe, expect, test } from 'vitest';
 import { materialKeyOf } from '../../../shared/designPoint.ts';
 import type { ToleranceDesign, ToleranceResult } from '../../../shared/toleranceDesign.ts';
@@ -239,7 +241,65 @@ describe('sensitivity', () => {
     expect(labels).toContain('thickness of Pt, layer 3');
   });
 
-  test('a lossless constant has no k to change, and light sees no thickness of a layer that is the medium around it', () => {
+  // Airy's sum for one layer at normal incidence (Born and Wolf, Principles of Optics, 7th ed., section 1.6, in our sign of k).
+  test('to the k of a lossless layer and of a slab are those of formulas', () => {
+    const airy = [
+      'N = 1.457 + i * k',
+      'top = (1 - N) / (1 + N)',
+      'bottom = (N - (3.88 + 0.02i)) / (N + (3.88 + 0.02i))',
+      'passage = exp(4 * pi * i * N * 100 / 632.8)',
+      'abs((top + bottom * passage) / (1 + top * bottom * passage))^2',
+    ].join('\n');
+    const at = (k: number) => Number((evaluate(airy, { k }) as ResultSet).valueOf().at(-1));
+    const silica = { index: 1.457 };
+    const coated = {
+      ...document,
+      layers: [{ id: 'silica', medium: silica, thicknessNm: 100 }],
+      substrate: { index: [3.88, 0.02] as [number, number] },
+    };
+    const h = 1e-4;
+    const k = sensitivities(coated, points, []).sensitivities.find(
+      (one) => one.parameter === 'k' && one.of === materialKeyOf(silica),
+    )!;
+    expect(k.value).toBe(0);
+    expect(k.derivative.reflectance! / ((at(h) - at(-h)) / (2 * h))).toBeCloseTo(1, 4);
+
+    // A slab that adds intensities: R + T^2 R a^2 / (1 - R^2 a^2), a = exp(-4 pi k d / wavelength) for one passage (Heavens,
+    // Optical Properties of Thin Solid Films, section 4.3), its R and T of the faces at n = 1.5.
+    const slab = { ...document, layers: [], substrate: { index: 1.5 } };
+    const nm = 500_000;
+    const thick = { ...slab, backside: { thicknessNm: nm, exit: { index: 1 } } };
+    const face = 0.04;
+    const ofPassage = (a: number) => face + ((1 - face) ** 2 * face * a * a) / (1 - (face * a) ** 2);
+    const perK = ((-4 * Math.PI * nm) / 632.8) * ((ofPassage(1 + h) - ofPassage(1 - h)) / (2 * h));
+    const ofSlab = sensitivities(thick, points, []).sensitivities.find(({ parameter }) => parameter === 'k')!;
+    expect(ofSlab.derivative.reflectance! / perK).toBeCloseTo(1, 4);
+  });
+
+  // Q enters the Kerr angles of a thick magnet linearly, as Q itself (physics.md section 4): the Cauchy-Riemann equations hold.
+  test('to the Im Q of a real Q turns what that to Re Q is by 90 degrees', () => {
+    const magnet = { index: [2.25, 4.07] as [number, number], voigt: 1e-5 };
+    const bulk = {
+      ...document,
+      layers: [],
+      substrate: magnet,
+      substrateM: [0, 0, 1] as [number, number, number],
+    };
+    const [re, im] = (['Re Q', 'Im Q'] as const).map((name) =>
+      sensitivities(bulk, points, []).sensitivities.find(({ parameter }) => parameter === name)!,
+    );
+    const [byRe, byIm] = [re!, im!].map(({ derivative }) => [
+      derivative.rotationDeg!,
+      derivative.ellipticityDeg!,
+    ]);
+    expect(Math.hypot(...byIm!) / Math.hypot(...byRe!)).toBeCloseTo(1, 6);
+    expect((byRe![0]! * byIm![0]! + byRe![1]! * byIm![1]!) / (byRe![0]! ** 2 + byRe![1]! ** 2)).toBeCloseTo(
+      0,
+      6,
+    );
+  });
+
+  test('light sees no thickness of a layer that is the medium around it, which cannot absorb', () => {
     const glass = structuredClone(document);
     glass.layers.unshift({ id: 'air', medium: { index: 1 }, thicknessNm: 5 });
     const { sensitivities: all } = sensitivities(glass, points, []);
