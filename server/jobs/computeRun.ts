@@ -4,7 +4,8 @@ import type { ComputePool } from '../../worker/pool.ts';
 import type { PartialResult } from '../../worker/sweep/runSweep.ts';
 import type { Run } from '../models/run.ts';
 import { isDesignRun, isSweepRun } from '../models/run.ts';
-import { bytePieces, designBytes, resultPieces } from './resultPieces.ts';
+import { designBytes } from './designBytes.ts';
+import { bytePieces, resultPieces } from './resultPieces.ts';
 
 /** What a host is told while it computes. */
 export type ComputeWatch = {

@@ -5,12 +5,14 @@ import { ComputeError } from '../../worker/sweep/computeError.ts';
 import { Refusal } from '../errors.ts';
 import { isDatabaseAway } from '../http/toRefusal.ts';
 import type { Models } from '../models/models.ts';
+import type { Run } from '../models/run.ts';
 import type { MaterialStore } from '../services/materialStore.ts';
 import { loadRunMaterials } from '../services/runMaterials.ts';
+import { askForLess } from './askForLess.ts';
 import { computeRun } from './computeRun.ts';
 import type { ComputedRun, ComputeWatch } from './computeRun.ts';
 import { releaseMemory } from '../../worker/releaseMemory.ts';
-import { designBytes } from './resultPieces.ts';
+import { designBytes } from './designBytes.ts';
 import type { RunLease } from './runLease.ts';
 import type { RunQueue } from './runQueue.ts';
 import { retryWhileAway } from './retryWhileAway.ts';
@@ -43,7 +45,14 @@ export async function executeRun(
   const log = logger.child({ runId: lease.runId });
   let storedBytes = 0;
   let found: DesignResult | null = null;
-  const bytesFound = () => found && designBytes(found);
+  const bytesFound = () => {
+    try {
+      return found && designBytes(found);
+    } catch {
+      // What cannot be read again is not worth keeping, and must not keep the run from its end.
+      return null;
+    }
+  };
   const onPartial = (soFar: DesignResult) => {
     found = soFar;
     watch.onPartial(soFar);
@@ -119,17 +128,17 @@ async function compute(
     if (!(error instanceof ComputeError) && !(error instanceof Refusal)) {
       logger.error({ err: error, runId: lease.runId }, 'A run failed for a reason that nobody thought of');
     }
-    return { kind: 'failed', error: describeFailure(error) };
+    return { kind: 'failed', error: describeFailure(error, lease.run) };
   }
 }
 
 /** What the person who started the run reads. */
-function describeFailure(error: unknown): string {
+function describeFailure(error: unknown, run: Run): string {
   if (error instanceof Refusal) return error.message;
   if (!(error instanceof ComputeError)) return 'Something went wrong on the server. The log has the details.';
   if (error.issues.length > 0)
     return error.issues.map(({ path, message }) => `${path}: ${message}`).join('\n');
   return error.failure === 'crashed'
-    ? `${error.message}. Rerun it; if that fails again, ask for fewer points or a smaller stack.`
+    ? `${error.message}. Rerun it; if that fails again, ${askForLess(run)}.`
     : error.message;
 }

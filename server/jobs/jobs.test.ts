@@ -278,7 +278,10 @@ describe('the sweeper', () => {
     const run = await orphaned(3);
     expect(await sweepOrphans({ models, queue, logger })).toEqual({ returned: 0, failed: 1 });
     expect((await run.reload()).state).toBe('failed');
-    expect(run.error).toMatch(/stopped 3 times/);
+    expect(run.error).toMatch(/this run stopped 3 times/);
+    const design = await orphaned(3, 'design');
+    await sweepOrphans({ models, queue, logger });
+    expect((await design.reload()).error).toMatch(/this design stopped 3 times.*fewer samples/);
   });
 
   it('does not touch the run of a host that is alive', async () => {

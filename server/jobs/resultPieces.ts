@@ -1,5 +1,3 @@
-import type { DesignResult } from '../../shared/design.ts';
-import { designResultSchema } from '../../shared/design.ts';
 import { describeResult, encodeResultHeader } from '../../shared/resultFormat.ts';
 import { SOLVER_VERSION } from '../../worker/optics/version.ts';
 import type { SweepResult } from '../../worker/sweep/runSweep.ts';
@@ -34,15 +32,6 @@ export function* resultPieces(
     }
   }
   if (bytes > 0) yield joined(waiting);
-}
-
-/**
- * The answer to a design question as JSON in UTF-8.
- *
- * @throws ZodError where a number is none: it would be stored as null and could not be read again
- */
-export function designBytes(result: DesignResult): Buffer {
-  return Buffer.from(JSON.stringify(designResultSchema.parse(result)), 'utf8');
 }
 
 /** Bytes cut into rows. */

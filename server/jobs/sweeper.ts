@@ -4,6 +4,8 @@ import type { Logger } from 'pino';
 import { isDatabaseAway } from '../http/toRefusal.ts';
 import type { Models } from '../models/models.ts';
 import type { Run } from '../models/run.ts';
+import { isDesignRun } from '../models/run.ts';
+import { askForLess } from './askForLess.ts';
 import { expireImports } from './expireImports.ts';
 import type { ImportReader } from './importReader.ts';
 import { sendRunNotice } from './runNotices.ts';
@@ -65,7 +67,8 @@ export async function sweepOrphans(
 }
 
 async function giveUp(models: Models, run: Run, transaction: Transaction): Promise<void> {
-  const error = `The computer that worked on this run stopped ${MOST_ATTEMPTS} times without finishing it. Ask for fewer points or a smaller stack; if it happens again, tell whoever runs the server.`;
+  const remedy = `To get an answer, ${askForLess(run)}; if it happens again, tell whoever runs the server.`;
+  const error = `The computer that worked on this ${isDesignRun(run) ? 'design' : 'run'} stopped ${MOST_ATTEMPTS} times without finishing it. ${remedy}`;
   await run.update({ state: 'failed', error, finishedAt: fn('now') }, { transaction });
   const progress = { state: 'failed', done: run.done, total: run.total, secondsLeft: null, error } as const;
   await sendRunNotice(models.sequelize, { kind: 'progress', runId: run.id, progress }, transaction);

@@ -321,6 +321,17 @@ describe('a design', () => {
     expect(list.designs.map((one) => one.id)).not.toContain(run.id);
   });
 
+  it('whose answer is not finite fails once and for all, and says where', async () => {
+    // A factor on Q that the schema allows and no arithmetic survives.
+    const document = buildDocument();
+    document.layers[1] = { ...document.layers[1]!, voigtScale: 1e300 };
+    const { id } = await calls.start(buildToleranceInput({ document }));
+    const failed = await waitForRun(server.models, id, 'failed');
+    expect(failed.attempts).toBe(1);
+    expect(failed.error).toMatch(/not finite \(.+\): a thickness, wavelength or constant/);
+    await editor.get(`/api/v1/designs/${id}/result`).expect(409);
+  });
+
   it('is asked once with an idempotency key', async () => {
     const twice = () => ask(buildToleranceInput()).set('Idempotency-Key', 'one question');
     const first = read(designSchema, await twice().expect(201));
