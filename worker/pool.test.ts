@@ -1,81 +1,19 @@
-import { writeFile, mkdtemp, rm } from 'node:fs/promises';
-import { tmpdir } from 'node:os';
-import path from 'node:path';
 import { setTimeout as sleep } from 'node:timers/promises';
-import { pathToFileURL } from 'node:url';
 import { afterAll, beforeAll, describe, expect, it } from 'vitest';
 import type { MaterialContent } from '../shared/material.ts';
-import type { SweepAxis } from '../shared/run.ts';
-import type { SolveRequest } from '../shared/solve.ts';
-import type { StackDocument, StackMedium } from '../shared/stack.ts';
-import { toleranceDesignSchema } from '../shared/toleranceDesign.ts';
-import type { DesignWork } from './design/designInput.ts';
+import {
+  SLOW_MS,
+  angles,
+  designs,
+  document,
+  endless,
+  failureOf,
+  request,
+  sweepOf,
+} from '../tests/poolQuestions.ts';
 import { solveRequest } from './optics/solveRequest.ts';
 import { createPool } from './pool.ts';
 import type { ComputePool } from './pool.ts';
-import { ComputeError } from './sweep/computeError.ts';
-import type { SweepInput } from './sweep/sweepInput.ts';
-
-const document: StackDocument = {
-  incident: { index: 1 },
-  layers: [
-    { id: 'cap', medium: { index: [2.33, 4.14] }, thicknessNm: 3 },
-    { id: 'film', medium: { index: [2.25, 4.07], voigt: [0.03, 0.01] }, thicknessNm: 1, m: [0, 0, 1] },
-    { id: 'buffer', medium: { index: [3.5, 3.6] }, thicknessNm: 5 },
-  ],
-  substrate: { index: [3.88, 0.02] },
-  workingPoint: { wavelengthNm: 633, angleDeg: 30, input: 'p', magnetization: { mode: 'drawn' } },
-};
-
-const angles = (points: number): SweepAxis => ({ kind: 'angle', from: 0, to: 85, points, spacing: 'linear' });
-
-const sweepOf = (axis: SweepAxis): SweepInput => ({
-  document,
-  axis,
-  readings: ['rotationP', 'ellipticityP', 'contrastP', 'reflectanceS'],
-  materials: [],
-});
-
-const designWork: DesignWork = {
-  materials: [],
-  design: toleranceDesignSchema.parse({
-    kind: 'tolerance',
-    document,
-    points: [{ id: 'a', label: 'oblique', workingPoint: document.workingPoint }],
-    signal: 'rotation',
-    demands: { leastReflectance: 0.5 },
-    tolerance: { ratePercent: 5, randomPercent: 2, samples: 450, seed: 3 },
-  }),
-};
-
-const request: SolveRequest = {
-  cases: [
-    {
-      wavelengthNm: 633,
-      angleDeg: [0, 30],
-      incident: { index: 1 },
-      layers: [{ index: [2.25, 4.07], voigt: [0.03, 0.01], m: [0, 0, 1], thicknessNm: 5 }],
-      substrate: { index: [3.88, 0.02] },
-    },
-  ],
-};
-
-/** Threads that translate TypeScript start slowly on a busy machine. */
-const SLOW_MS = 60_000;
-
-const mixed: StackMedium = {
-  mixture: { model: 'bruggeman', fraction: 0.5, parts: [{ index: 1.5 }, { index: 2 }] },
-};
-
-/** A sweep that takes this machine some time. */
-const endless: SweepInput = {
-  ...sweepOf(angles(1_000_000)),
-  document: {
-    ...document,
-    // A mixed layer: no fast path.
-    layers: [...document.layers, { id: 'underlayer', medium: mixed, thicknessNm: 40 }],
-  },
-};
 
 const madeUp = {
   citation: 'made up for this test',
@@ -86,18 +24,6 @@ const madeUp = {
   confidence: 'invented for the demo',
   caution: null,
 } as const;
-
-function failureOf(work: Promise<unknown>): Promise<ComputeError> {
-  return work.then(
-    () => {
-      throw new Error('expected a ComputeError');
-    },
-    (error: unknown) => {
-      if (error instanceof ComputeError) return error;
-      throw error;
-    },
-  );
-}
 
 describe('the pool', () => {
   let pool: ComputePool;
@@ -126,12 +52,14 @@ describe('the pool', () => {
     expect(seen.at(-1)).toBe(50_000);
   });
 
-  it('answers a design question alike on one and two threads', async () => {
+  it('answers design questions of each kind alike on one and two threads, to the last bit', async () => {
     const alone = createPool({ threads: 1 });
     try {
-      const [two, one] = await Promise.all([pool, alone].map((some) => some.design(designWork)));
-      expect(one!.result).toEqual(two!.result);
-      expect(one!.result).toMatchObject({ kind: 'tolerance', samples: 450 });
+      for (const ask of Object.values(designs)) {
+        const answers = [pool, alone].map((some) => some.design({ design: ask(3), materials: [] }));
+        const [two, one] = await Promise.all(answers);
+        expect(one!.result).toStrictEqual(two!.result);
+      }
     } finally {
       await alone.close();
     }
@@ -272,62 +200,5 @@ describe('the pool', () => {
     expect(failure.failure).toBe('refused');
     expect(failure.issues[0]!.path).toBe('layers[0].material');
     expect(failure.issues[0]!.message).toMatch(/Testium.*400 to 800 nm/);
-  });
-});
-
-describe('a pool whose thread dies', () => {
-  let folder: string;
-  let pool: ComputePool;
-  beforeAll(async () => {
-    // The real task, except that some inputs end or break the thread that gets them.
-    folder = await mkdtemp(path.join(tmpdir(), 'skewlight-pool-'));
-    const file = path.join(folder, 'task.mjs');
-    const real = new URL('./task.ts', import.meta.url).href;
-    await writeFile(
-      file,
-      `import * as real from ${JSON.stringify(real)};
-       export const warm = real.warm;
-       export const sweepChunk = (task) => {
-         if (task.points === 777) process.exit(9);
-         if (task.points === 778) throw new Error('a bug');
-         if (task.points === 779) { const hoard = []; for (;;) hoard.push(new Array(1_000).fill(hoard.length)); }
-         return real.sweepChunk(task);
-       };
-       export const solve = (request) => (request.cases.length === 0 ? process.exit(9) : real.solve(request));`,
-    );
-    pool = createPool({ threads: 2, taskFile: pathToFileURL(file), heapMb: 100 });
-    await pool.warm();
-  }, SLOW_MS);
-  afterAll(async () => {
-    await pool.close();
-    await rm(folder, { recursive: true });
-  });
-
-  it.each([
-    ['exits', 777, /exited with code: 9/],
-    ['throws', 778, /a bug/],
-    ['runs out of memory', 779, /memory/],
-  ])('fails its sweep clearly when it %s, and the pool lives on', async (_how, points, message) => {
-    const failure = await failureOf(pool.sweep(sweepOf(angles(points))));
-    expect(failure.failure).toBe('crashed');
-    expect(failure.message).toMatch(message);
-    const { columns } = await pool.sweep(sweepOf(angles(1_000)));
-    expect(columns[1]!.every(Number.isFinite)).toBe(true);
-    expect(pool.state().ok).toBe(true);
-  });
-
-  it('fails a small request the same way', async () => {
-    expect((await failureOf(pool.solve({ cases: [] }))).failure).toBe('crashed');
-    expect((await pool.solve(request)).results).toHaveLength(1);
-  });
-
-  it('fails what is under way when it closes', async () => {
-    const closing = createPool({ threads: 1 });
-    await closing.warm();
-    const failure = failureOf(closing.sweep(endless));
-    await sleep(100);
-    await closing.close();
-    expect((await failure).failure).toBe('closed');
-    expect((await failureOf(closing.solve(request))).failure).toBe('closed');
   });
 });
