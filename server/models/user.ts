@@ -1,5 +1,5 @@
 import { DataTypes } from 'sequelize';
-import type { Membership } from './membership.ts';
+import type { Role } from '../../shared/account.ts';
 import type {
   CreationOptional,
   InferAttributes,
@@ -23,8 +23,8 @@ export interface User extends Model<InferAttributes<User>, InferCreationAttribut
   isDemo: CreationOptional<boolean>;
   createdAt: CreationOptional<Date>;
   updatedAt: CreationOptional<Date>;
-  /** Present when the query included them. */
-  memberships?: NonAttribute<Membership[]>;
+  /** Its memberships; present when the query included them. */
+  memberships?: NonAttribute<{ groupId: string; role: Role }[]>;
 }
 
 export function defineUser(sequelize: Sequelize): ModelStatic<User> {
