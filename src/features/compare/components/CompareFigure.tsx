@@ -19,7 +19,7 @@ type Props = {
   pairs: readonly SlicePair[];
   reading: ReadingName;
   relation: Relation;
-  /** What is held at one value in all runs, in words. */
+  /** At what the maps and families are taken, in words. */
   held: readonly string[];
   unit: AngleUnit;
   log: boolean;

@@ -31,7 +31,7 @@ type Props = {
   axes: { x: PlotAxis; y: PlotAxis };
   reading: ReadingName;
   relation: Relation;
-  /** What is held at one value in all runs, in words. */
+  /** At what the maps and families are taken, in words. */
   held: readonly string[];
   unit: AngleUnit;
   height: number;

@@ -17,7 +17,7 @@ type Shown = {
   reading: ReadingName;
   relation: Relation;
   unit: AngleUnit;
-  /** What is held at one value in all runs, in words. */
+  /** At what the maps and families are taken, in words. */
   held: readonly string[];
 };
 
@@ -74,7 +74,7 @@ export function mapsCsv(base: ComparedMap, others: readonly ComparedMap[], shown
 }
 
 function heldLines(held: readonly string[]): string {
-  return held.map((words) => `# at ${words}\n`).join('');
+  return held.map((words) => `# maps and families taken at ${words}\n`).join('');
 }
 
 function relatedColumn(name: string, values: ArrayLike<number>, { reading, relation, unit }: Shown) {

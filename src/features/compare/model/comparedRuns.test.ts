@@ -58,7 +58,7 @@ describe('compared curves as a plot and as a file', () => {
       held: ['the angle 3°'],
     });
     expect(lines.trim().split('\n')).toEqual([
-      '# at the angle 3°',
+      '# maps and families taken at the angle 3°',
       '# B - A: largest difference 0.009999999999999998 deg at angle (deg) 20; root mean square 0.009999999999999998 deg; points with both values: 1',
       'angle (deg),"A Pt cap 2 nm, 0–40°: rotationP (deg)","B Pt cap 3 nm, 20–60°: rotationP (deg), interpolated",B / A',
       '0,0.01,,',
@@ -205,7 +205,7 @@ describe('what can be laid over what', () => {
     );
     expect(refused.map(({ why }) => why)).toEqual([
       'It is swept over the wavelength, the reference over the angle of incidence: they have no axis in common. ' +
-        'Start its film as a run over the angle of incidence, or take another reference.',
+        'Start its film as a run over the angle of incidence, or take one of the two out.',
     ]);
     const failed = { ...a.run, progress: { ...a.run.progress, state: 'failed' as const } };
     expect(planComparison([failed], none).refused[0]?.why).toContain('no values (failed)');

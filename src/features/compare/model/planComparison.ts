@@ -18,7 +18,7 @@ export type Comparison = {
 
 /**
  * Which runs can be laid over each other and how. Without a choice the way that takes in most runs, and the first
- * run that has any partner as the reference.
+ * run that has any partner as the reference; one that was asked for and has none is no reference.
  */
 export function planComparison(
   runs: readonly Run[],
@@ -31,11 +31,8 @@ export function planComparison(
     keys.every((key) => drawnAxesOf(of(run)).some((one) => one.key === key));
   const usable = (run: Run) =>
     viewsOf(of(run)).filter((view) => done.some((other) => other !== run && fits(other, view)));
-  const base =
-    done.find(({ id }) => id === wanted.reference) ??
-    done.find((run) => usable(run).length > 0) ??
-    done[0] ??
-    null;
+  const asked = done.filter(({ id }) => id === wanted.reference);
+  const base = [...asked, ...done].find((run) => usable(run).length > 0) ?? asked[0] ?? done[0] ?? null;
   const views = base ? usable(base) : [];
   const count = (view: CompareView) => done.filter((run) => fits(run, view)).length;
   const most = Math.max(0, ...views.map(count));
@@ -77,6 +74,6 @@ function noCommonAxis(own: readonly RunAxis[], base: readonly RunAxis[]): string
   const wanted = drawnAxesOf(base).map(quantityWords);
   return (
     `${has(own)}, the reference over ${wanted.join(' and ')}: they have no axis in common. ` +
-    `Start its film as a run over ${wanted.join(' or ')}, or take another reference.`
+    `Start its film as a run over ${wanted.join(' or ')}, or take one of the two out.`
   );
 }
