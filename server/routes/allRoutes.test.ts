@@ -81,6 +81,7 @@ const agreed: Record<string, string> = {
   'post /angle-features': 'signed in',
   'get /groups/:groupId/cards': 'member of the group',
   'post /groups/:groupId/cards': 'editor of the group',
+  'get /groups/:groupId/cards-in-making/:key': 'editor of the group',
   'get /cards/:cardId': 'member of the group',
   'delete /cards/:cardId': 'editor of the group',
   'get /cards/:cardId/card.pdf': 'member of the group',
