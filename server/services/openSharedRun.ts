@@ -6,7 +6,9 @@ import type { ResolvableMaterial } from '../../worker/dispersion/resolveCase.ts'
 import { materialKey } from '../../worker/sweep/sweepInput.ts';
 import { conflict } from '../errors.ts';
 import type { AppDependencies } from '../dependencies.ts';
-import type { SweepRun } from '../models/run.ts';
+import { isDesignRun } from '../models/run.ts';
+import type { DesignRun, SweepRun } from '../models/run.ts';
+import { filmAt } from './designMedia.ts';
 import { recordActivity } from './recordActivity.ts';
 import { loadRunMaterials } from './runMaterials.ts';
 import { resolveOneSafely } from './resolveSafely.ts';
@@ -17,8 +19,11 @@ import type { StackWithVersion } from './stacks.ts';
 
 type Person = { userId: string; name: string };
 
+/** What a link opens that is made of a stack. */
+export type StackRun = SweepRun | DesignRun;
+
 /**
- * Puts the stack of a shared run, as it was computed, into a group.
+ * Puts the stack of a shared run, as it was computed, into a group; of a design its film as drawn, at its first working point.
  *
  * A material that is another group's own cannot be named there: its constants at the working point take its place.
  *
@@ -27,18 +32,19 @@ type Person = { userId: string; name: string };
 export async function openSharedRun(
   dependencies: Pick<AppDependencies, 'models' | 'materials' | 'pool'>,
   actor: Person,
-  run: SweepRun,
+  run: StackRun,
   groupId: string,
 ): Promise<StackWithVersion> {
   const { models } = dependencies;
-  const foreign = await foreignMaterials(dependencies, run, groupId);
-  const document = foreign.size === 0 ? run.input.document : await withConstants(dependencies, run, foreign);
+  const computed = documentOf(run);
+  const foreign = await foreignMaterials(dependencies, computed, groupId);
+  const document = foreign.size === 0 ? computed : await withConstants(dependencies, run, foreign);
   const replaced =
     foreign.size > 0 ? ` Own materials of its group stand as constants at the working point.` : '';
   const opened = await createStack(models, actor, groupId, {
     // The share view does not show what the stack is called in its group.
     name: run.name,
-    description: `From the shared run "${run.name}".${replaced}`,
+    description: `From the shared ${isDesignRun(run) ? 'design' : 'run'} "${run.name}".${replaced}`,
     document,
   });
   await models.sequelize.transaction((transaction) =>
@@ -51,13 +57,19 @@ export async function openSharedRun(
   return opened;
 }
 
-/** Ids of the run's materials that are out of the group's reach. */
+function documentOf(run: StackRun): StackDocument {
+  if (!isDesignRun(run)) return run.input.document;
+  const { document, points } = run.input.design;
+  return filmAt(document, points[0]!);
+}
+
+/** Ids of the stack's materials that are out of the group's reach. */
 async function foreignMaterials(
   { models }: Pick<AppDependencies, 'models'>,
-  run: SweepRun,
+  document: StackDocument,
   groupId: string,
 ): Promise<Set<string>> {
-  const ids = run.input.materials.map(({ id }) => id);
+  const ids = namedMaterialsOf(document).map(({ material }) => material);
   const inReach = await models.Material.findAll({
     attributes: ['id'],
     where: { id: ids, groupId: { [Op.or]: [null, groupId] } },
@@ -68,12 +80,12 @@ async function foreignMaterials(
 
 async function withConstants(
   { materials: store, pool }: Pick<AppDependencies, 'materials' | 'pool'>,
-  run: SweepRun,
+  run: StackRun,
   foreign: Set<string>,
 ): Promise<StackDocument> {
   const materials = await loadRunMaterials(store, run);
   const known = new Map(materials.map((material) => [materialKey(material), material]));
-  const { document } = run.input;
+  const document = documentOf(run);
   const constants = new Map<NamesMaterial, Constants>();
   for (const named of namedMaterialsOf(document)) {
     if (!foreign.has(named.material)) continue;
@@ -106,6 +118,8 @@ async function constantsOf(
     return constants;
   } catch (error) {
     if (!(error instanceof ResolutionError)) throw error;
-    throw conflict(`This run uses materials of its own group, which cannot be taken along: ${error.message}`);
+    throw conflict(
+      `The stack uses materials of its own group, which cannot be taken along: ${error.message}`,
+    );
   }
 }

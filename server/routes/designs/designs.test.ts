@@ -12,6 +12,7 @@ import type { PointReadings } from '../../../shared/designPoint.ts';
 import { createdLinkSchema, linkListSchema, sharedSubjectSchema } from '../../../shared/link.ts';
 import { materialUsesSchema } from '../../../shared/materialEdit.ts';
 import { runListSchema } from '../../../shared/run.ts';
+import { stackSchema } from '../../../shared/stack.ts';
 import type { StackMedium } from '../../../shared/stack.ts';
 import { sensitivityAnswerSchema } from '../../../shared/toleranceDesign.ts';
 import { issuePaths, read, refusalOf } from '../../../tests/answers.ts';
@@ -391,12 +392,17 @@ describe('a design', () => {
     await anonymous.get(`${shared}/input.json`).buffer(true).expect(200);
     await anonymous.get(shared).expect(404);
     await anonymous.get(`${shared}/data`).expect(404);
+    const open = () => stranger.post(`${shared}/stacks`).send({ groupId: people.strangersGroup.id });
+    const opened = read(stackSchema, await open().expect(201));
+    expect(opened.document).toEqual({ ...buildDocument(), workingPoint: polarPoint.workingPoint });
+    expect(opened.description).toContain('From the shared design');
     const links = read(linkListSchema, await editor.get(`/api/v1/designs/${id}/links`).expect(200));
     expect(links.links).toMatchObject([{ opens: 'design', subjectId: id, useCount: 1 }]);
     await editor.delete(`/api/v1/designs/${id}`).expect(204);
     for (const part of ['subject', 'design', 'result', 'result.csv', 'input.json']) {
       await anonymous.get(`${shared}/${part}`).expect(410);
     }
+    await open().expect(410);
   });
 
   it('uses the version of a material that was the newest when it was asked', async () => {

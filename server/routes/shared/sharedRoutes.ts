@@ -93,16 +93,18 @@ const readSharedInput = streamRoute({
 const openInGroup = route({
   method: 'post',
   path: '/shared/:token/stacks',
-  summary: "Put the shared run's stack into a group of one's own.",
+  summary: "Put the stack of the shared run, or the film of the shared design, into a group of one's own.",
   noun: 'link or group',
   policy: addToGroup,
   body: openInGroupSchema,
   async load(context) {
-    const shared = await load(context);
+    const shared = await openLink(context.dependencies.models, context.params.token);
     const { groupId } = context.body;
-    if (!shared || !isRowId(groupId)) return null;
+    if (!shared || !('run' in shared) || !isRowId(groupId)) return null;
+    const { run } = shared;
+    if (!isSweepRun(run) && !isDesignRun(run)) return null;
     const group = await context.dependencies.models.Group.findByPk(groupId);
-    return group && { id: group.id, run: shared.run };
+    return group && { id: group.id, run };
   },
   answer: { status: 201, schema: stackSchema },
   async handler({ dependencies, actor, subject }) {

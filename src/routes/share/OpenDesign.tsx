@@ -1,5 +1,5 @@
-import { useSearchParams } from 'react-router-dom';
 import { useQuery } from '@tanstack/react-query';
+import { useSearchParams } from 'react-router-dom';
 import type { SharedDesign } from '../../../shared/design.ts';
 import { ErrorState } from '../../components/ErrorState.tsx';
 import { LoadingState } from '../../components/LoadingState.tsx';
@@ -10,6 +10,7 @@ import { RunProvenance } from '../../features/runs/components/RunProvenance.tsx'
 import { sharedPath } from '../../features/sharing/api/sharedRun.ts';
 import { formatDateTime } from '../../lib/format.ts';
 import { DesignFiles } from './DesignFiles.tsx';
+import { OpenFilm, SignInToOpen } from './OpenFilm.tsx';
 
 const kindWords = { cap: 'cap chooser', optimise: 'optimisation', tolerance: 'tolerance' } as const;
 
@@ -22,6 +23,7 @@ export function OpenDesign({ token, design }: { token: string; design: SharedDes
     <Page
       title={design.name}
       subtitle={`Shared design (${kindWords[design.kind]})${design.finishedAt ? `, computed ${formatDateTime(design.finishedAt)}` : ''}. It stays as it was, whatever happens to the stack.`}
+      actions={<OpenFilm token={token} />}
     >
       {result.data ? (
         <DesignResultView
@@ -43,6 +45,7 @@ export function OpenDesign({ token, design }: { token: string; design: SharedDes
       <div className="mt-6 flex flex-col gap-6 border-t border-line pt-5">
         <RunProvenance run={design} />
         <DesignFiles path={path} />
+        <SignInToOpen token={token} />
       </div>
     </Page>
   );

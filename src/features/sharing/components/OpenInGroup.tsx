@@ -12,7 +12,7 @@ type Props = {
   onOpened: (stack: Stack) => void;
 };
 
-/** Puts the shared run's stack into one of the reader's own groups. */
+/** Puts the stack of a shared run or design into one of the reader's own groups. */
 export function OpenInGroup({ token, groups, onOpened }: Props) {
   const [chosen, setChosen] = useState(groups[0]?.groupId ?? '');
   const open = useOpenInGroup(token);
