@@ -77,7 +77,9 @@ export function designNameFor(
   materials: NamedMaterials,
   stackName: string | null,
 ): string {
-  const name = stackName === null ? questionOf() : `${stackName}: ${questionOf()}`;
+  const question = questionOf();
+  const alone = question.charAt(0).toUpperCase() + question.slice(1);
+  const name = stackName === null ? alone : `${stackName}: ${question}`;
   return name.slice(0, 120);
 
   function questionOf(): string {

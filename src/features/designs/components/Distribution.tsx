@@ -15,7 +15,11 @@ export function Distribution({ reading, nominal, distribution }: Props) {
     <figure className="card m-0 min-w-0 px-4 py-3" aria-label={`Spread of the ${look.label}`}>
       <figcaption className="font-semibold first-letter:uppercase">{look.label}</figcaption>
       {distribution === null ? (
-        <p className="mt-1 text-note text-muted">It does not exist for any of the films.</p>
+        <p className="mt-1 text-note text-muted">
+          {nominal === null
+            ? 'It does not exist for any of the films.'
+            : `${printQuantity(look, nominal)} as drawn. Its spread is computed when it is the signal or a demand.`}
+        </p>
       ) : (
         <>
           <Histogram distribution={distribution} nominal={nominal} />
