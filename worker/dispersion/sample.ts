@@ -124,10 +124,15 @@ function overPermittivity(
   return { re, im };
 }
 
+/** Formulas compiled before: while a film is edited the same materials are sampled many times a second. */
+const compiled = new WeakMap<object, (wavelengthNm: number) => Complex>();
+
 function valueOf(dispersion: Exclude<PlainIndex, { kind: 'table' }>): (wavelengthNm: number) => Complex {
-  return dispersion.kind === 'formula'
-    ? compileFormula(dispersion.expression, dispersion.coefficients, dispersion.quantity)
-    : (wavelengthNm) => modelIndex(dispersion.model, wavelengthNm);
+  if (dispersion.kind === 'model') return (wavelengthNm) => modelIndex(dispersion.model, wavelengthNm);
+  const { expression, coefficients, quantity } = dispersion;
+  const formula = compiled.get(dispersion) ?? compileFormula(expression, coefficients, quantity);
+  compiled.set(dispersion, formula);
+  return formula;
 }
 
 function modelIndex(model: IndexModel, wavelengthNm: number): Complex {

@@ -1,20 +1,16 @@
-import { Link } from 'react-router-dom';
 import { formatNumber } from '../../../lib/format.ts';
-import { paths } from '../../../lib/paths.ts';
 import type { CeilingCell } from '../model/stripReadings.ts';
 import { pendingLook } from './pendingLook.ts';
+import { ReadingName } from './ReadingCell.tsx';
 
 /** How much of the most that the magnet allows is reached, as number and bar; in words where there is no ceiling. */
 export function CeilingReading({ ceiling, pending }: { ceiling: CeilingCell | null; pending: boolean }) {
   const percent = ceiling && 'percent' in ceiling ? ceiling.percent : null;
   return (
     <div className="min-w-0 border-line px-4 py-3 max-sm:border-t sm:border-l">
-      <Link
-        to={`${paths.conventions}#ceiling`}
-        className="block truncate text-small text-muted no-underline hover:text-accent hover:underline"
-      >
-        Share of the ceiling
-      </Link>
+      <div className="flex">
+        <ReadingName label="Share of the ceiling" anchor="ceiling" />
+      </div>
       <div
         className={`mt-0.5 truncate text-reading font-[560] tracking-[-0.02em] ${pending ? pendingLook : ''}`}
       >
