@@ -1,6 +1,7 @@
 import { useQuery } from '@tanstack/react-query';
 import { useMemo } from 'react';
-import type { Design, DesignResult } from '../../../shared/design.ts';
+import type { Design, DesignInput, DesignResult } from '../../../shared/design.ts';
+import { signalNames } from '../../../shared/designPoint.ts';
 import { LIMITS } from '../../../shared/limits.ts';
 import type { Stack } from '../../../shared/stack.ts';
 import { usualTolerance } from '../../features/cards/model/cardDraft.ts';
@@ -54,10 +55,16 @@ function fromDesign(design: Design, result: DesignResult, chosen: DesignChoice):
     title: filmTitle(design, result, chosen),
     document: designedFilm(design, result, chosen),
     points: input.points,
-    signal: 'signal' in input ? input.signal : 'rotation',
+    signal: signalOf(input),
     tolerance: 'tolerance' in input ? input.tolerance : usualTolerance,
     designId: id,
   };
+}
+
+/** What a design looked for is what its card prints first; a goal that is no signal of its own is judged by the rotation. */
+function signalOf(input: DesignInput): CardStart['signal'] {
+  if (input.kind !== 'optimise') return input.signal;
+  return signalNames.find((name) => name === input.goal.quantity) ?? 'rotation';
 }
 
 /** A card is of a film: it bears the name of its stack and what the design made of it, not the whole question. */
