@@ -42,6 +42,13 @@ export function detectFormat(content: ContentLine[]): TableFormat {
         'separated by commas, semicolons, tabs or spaces.',
     );
   }
+  const mixed = content.find(hasBothSigns);
+  if (mixed) {
+    throw new ImportRefusal(
+      `Line ${mixed.line} (${quote(mixed.text)}) has numbers with a point and numbers with a comma: ` +
+        'write all with one decimal sign, and without separators between thousands.',
+    );
+  }
   const [first] = content;
   throw new ImportRefusal(
     first
@@ -56,6 +63,14 @@ export function isRow(line: ContentLine, { delimiter, decimal }: TableFormat): b
   const cells = cellsOf(line, delimiter);
   if (cells.filter((cell) => cell !== '').length < 2) return false;
   return cells.every((cell) => looksNumeric(cell, decimal)) && cells.some((cell) => isNumber(cell, decimal));
+}
+
+/** A row whose cells are numbers, but not all by the same decimal sign. */
+function hasBothSigns(line: ContentLine): boolean {
+  return candidates.some(({ delimiter }) => {
+    const cells = cellsOf(line, delimiter).filter((cell) => cell !== '');
+    return cells.length > 1 && cells.every((cell) => isNumber(cell, 'point') || isNumber(cell, 'comma'));
+  });
 }
 
 /** While formats are tried, a line that cannot be split is no row; it is refused when the table is read. */
