@@ -112,7 +112,11 @@ describe('what is no table is refused with the remedy', () => {
     ['an empty file', '', /empty/],
     ['comments alone', '# a\n# b', /no rows/],
     ['words', 'hello\nworld', /No row of numbers.*"hello" \(line 1\)/],
-    ['thousands beside points', 'nm,n,k\n"1,000",0.5,3', /Line 2 .*point and numbers with a comma.*thousands/],
+    [
+      'thousands beside points',
+      'nm,n,k\n"1,000",0.5,3',
+      /Line 2 .*point and numbers with a comma.*thousands/,
+    ],
     ['points between thousands', 'nm;n;k\n1.000;0,5;3', /Line 2 .*one decimal sign/],
     ['one column', '400\n500', /Only one column.*line 1/],
     ['zero bytes', [52, 48, 0, 1], /binary file: byte 3/],
