@@ -47,7 +47,9 @@ export function useLatest<Question, Answer>(
     return () => latest.stop();
   }, [ask]);
   useEffect(() => {
-    if (question !== null) pipeline.current?.ask(question);
+    // What is under way when there is nothing more to ask would come as an answer to something else.
+    if (question === null) pipeline.current?.stop();
+    else pipeline.current?.ask(question);
   }, [question, ask]);
   const lost = state.failed?.question === question && isAway(state.failed?.error);
   useEffect(() => {

@@ -6,6 +6,7 @@ import type { StackDocument, WorkingPoint } from '../../../../shared/stack.ts';
 import { ApiError } from '../../../lib/apiClient.ts';
 import { useReadings } from '../hooks/useReadings.ts';
 import { useSweep } from '../hooks/useSweep.ts';
+import type { Materials } from '../model/media.ts';
 import type { PreviewAxes } from '../model/sweepAxis.ts';
 import { LiveFilmContext } from './liveFilm.ts';
 
@@ -14,6 +15,7 @@ type Props = {
   point: WorkingPoint;
   axes: PreviewAxes | null;
   readings: readonly ReadingName[];
+  materials: Materials;
   saveIssues: readonly Issue[];
   children: ReactNode;
 };
@@ -22,8 +24,9 @@ type Props = {
  * Asks for readings and sweep as the film changes. Answers come many times a second while somebody drags: they stand
  * in a context, so that only what shows them is drawn anew.
  */
-export function LiveFilmProvider({ document, point, axes, readings, saveIssues, children }: Props) {
-  const sweep = useSweep(document, point, axes, readings);
+export function LiveFilmProvider(props: Props) {
+  const { document, point, axes, readings, materials, saveIssues, children } = props;
+  const sweep = useSweep(document, point, axes, readings, materials);
   const live = useReadings(document, point, sweep);
   const solveIssues = live.error instanceof ApiError ? live.error.issues : noIssues;
   const issues = useMemo(() => [...solveIssues, ...saveIssues], [solveIssues, saveIssues]);

@@ -165,6 +165,7 @@ export function StackWorkbench({
       point={point}
       axes={axes}
       readings={drawn.readings}
+      materials={materials}
       saveIssues={editor.saveIssues}
     >
       <div className="grid min-h-[calc(100dvh-53px)] grid-cols-1 lg:grid-cols-[416px_minmax(0,1fr)]">

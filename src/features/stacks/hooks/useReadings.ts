@@ -1,9 +1,8 @@
-import { useMemo } from 'react';
+import { useMemo, useState } from 'react';
 import { readStrip, stripRequest } from '../../../../shared/readingsStrip.ts';
 import type { ReadingsStrip, StripReadings } from '../../../../shared/readingsStrip.ts';
 import type { LibrarySolveRequest, SolveWarning } from '../../../../shared/solve.ts';
 import type { StackDocument, WorkingPoint } from '../../../../shared/stack.ts';
-import { useChangedLast } from '../../../lib/useChangedLast.ts';
 import { useLatest } from '../../../lib/useLatest.ts';
 import { solve } from '../api/solve.ts';
 import type { LiveSweep } from './useSweep.ts';
@@ -27,7 +26,7 @@ export function useReadings(document: StackDocument, point: WorkingPoint, sweep:
   const alone = !sweep.bringsStrip || sweep.error !== null;
   const question = useMemo(() => (alone ? stripRequest(document, point) : null), [alone, document, point]);
   const { answer, pending, error } = useLatest(question, solveStrip);
-  const strip = useChangedLast(sweep.strip, answer);
+  const strip = useStripOf(alone, alone ? answer : sweep.strip);
   const awaited = alone ? pending : sweep.pending;
   return useMemo(
     () => ({
@@ -41,6 +40,21 @@ export function useReadings(document: StackDocument, point: WorkingPoint, sweep:
 }
 
 const noWarnings: readonly SolveWarning[] = [];
+
+/**
+ * The last strip of the source that is asked now. When the source changes, what the new one had before is of an earlier
+ * film: what was shown stays until it brings another.
+ */
+function useStripOf(alone: boolean, current: ReadingsStrip | null): ReadingsStrip | null {
+  const [held, setHeld] = useState({ alone, old: null as ReadingsStrip | null, shown: current });
+  if (alone !== held.alone) {
+    setHeld({ alone, old: current, shown: held.shown });
+    return held.shown;
+  }
+  if (current === null || current === held.old || current === held.shown) return held.shown;
+  setHeld({ ...held, shown: current });
+  return current;
+}
 
 async function solveStrip(question: LibrarySolveRequest, signal: AbortSignal): Promise<ReadingsStrip> {
   return readStrip(await solve(question, signal));

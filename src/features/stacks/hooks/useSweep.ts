@@ -9,6 +9,7 @@ import { useSettled } from '../../../lib/useSettled.ts';
 import { liveCurve } from '../api/liveCurve.ts';
 import { solve } from '../api/solve.ts';
 import { axesProblem } from '../model/axesProblem.ts';
+import type { Materials } from '../model/media.ts';
 import { curveRequest, isCurve, readSweepResponse, sweepRequest } from '../model/solveStates.ts';
 import type { ReadingColumns, Sweep } from '../model/solveStates.ts';
 import { axisGrid, axisProblems, previewGrid } from '../model/sweepAxis.ts';
@@ -44,14 +45,15 @@ export function useSweep(
   point: WorkingPoint,
   axes: PreviewAxes | null,
   readings: readonly ReadingName[],
+  materials: Materials,
 ): LiveSweep {
   const asked = useMemo<Question | null>(() => {
     const sweep = axes && previewOf(axes, document, readings);
     if (!sweep) return null;
     return isCurve(sweep)
-      ? { sweep, curve: curveRequest(document, point, sweep) }
+      ? { sweep, curve: curveRequest(document, point, sweep, materials) }
       : { sweep, cases: sweepRequest(document, point, sweep) };
-  }, [document, point, axes, readings]);
+  }, [document, point, axes, readings, materials]);
   const settled = useSettled(asked, PAUSE_MS);
   const question = asked?.curve ? asked : settled;
   const { answer, pending, error } = useLatest(question, solveSweep);

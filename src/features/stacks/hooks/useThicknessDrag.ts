@@ -5,6 +5,9 @@ import { draggedThickness } from '../model/thicknessDrag.ts';
 /** Steps closer together are one, or a pointer that reports 120 times a second leaves no time to draw what follows. */
 const STEP_MS = 30;
 
+/** The step that comes once the time for it has come. */
+type Pace = { steppedAt: number; timer: number; waiting: (() => void) | null };
+
 type Grab = { pointerId: number; y: number; startNm: number; number: number };
 
 /**
@@ -19,22 +22,28 @@ export function useThicknessDrag(
 ) {
   const [grab, setGrab] = useState<Grab | null>(null);
   const drags = useRef(0);
-  const pace = useRef({ steppedAt: 0, timer: 0 });
+  const pace = useRef<Pace>({ steppedAt: 0, timer: 0, waiting: null });
   const changeTo = (nm: number, { number }: Grab) => {
     if (nm !== thicknessNm) onChange(nm, `drag ${number}`);
   };
-  const stepTo = (nm: number, held: Grab) => {
-    window.clearTimeout(pace.current.timer);
-    const wait = pace.current.steppedAt + STEP_MS - performance.now();
+  const stepTo = (nm: number, held: Grab, now: number) => {
+    forgetStep();
+    const wait = Math.max(0, pace.current.steppedAt + STEP_MS - now);
     const step = () => {
-      pace.current.steppedAt = performance.now();
+      pace.current = { steppedAt: now + wait, timer: 0, waiting: null };
       onChange(nm, `drag ${held.number}`);
     };
-    if (wait > 0) pace.current.timer = window.setTimeout(step, wait);
-    else if (nm !== thicknessNm) step();
+    if (wait > 0) {
+      pace.current.waiting = step;
+      pace.current.timer = window.setTimeout(step, wait);
+    } else if (nm !== thicknessNm) step();
+  };
+  const forgetStep = () => {
+    window.clearTimeout(pace.current.timer);
+    pace.current.waiting = null;
   };
   const letGo = () => {
-    window.clearTimeout(pace.current.timer);
+    forgetStep();
     setGrab(null);
   };
   const putBack = () => {
@@ -58,12 +67,10 @@ export function useThicknessDrag(
       },
       onPointerMove: (event: PointerEvent<HTMLElement>) => {
         if (grab?.pointerId !== event.pointerId) return;
-        stepTo(draggedThickness(grab.startNm, event.clientY - grab.y, leastNm), grab);
+        stepTo(draggedThickness(grab.startNm, event.clientY - grab.y, leastNm), grab, event.timeStamp);
       },
-      onPointerUp: (event: PointerEvent<HTMLElement>) => {
-        if (grab?.pointerId === event.pointerId) {
-          changeTo(draggedThickness(grab.startNm, event.clientY - grab.y, leastNm), grab);
-        }
+      onPointerUp: () => {
+        pace.current.waiting?.();
         letGo();
       },
       onPointerCancel: putBack,

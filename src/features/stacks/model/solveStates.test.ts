@@ -1,6 +1,7 @@
 import { describe, expect, it } from 'vitest';
 import type { SolvePoint } from '../../../../shared/solve.ts';
-import { sweepPoints, readSweepResponse, statesFor, sweepRequest } from './solveStates.ts';
+import { curveRequest, sweepPoints, readSweepResponse, statesFor, sweepRequest } from './solveStates.ts';
+import type { StackDocument } from '../../../../shared/stack.ts';
 import type { Sweep } from './solveStates.ts';
 import { buildDocument } from './stackFixtures.ts';
 
@@ -94,5 +95,26 @@ describe('a sweep', () => {
     expect(many).toEqual(few);
     expect(Array.from(many.rotationP!)).toEqual([0.1 - 0.01, 0.2 - 0.02, 0.4 - 0.04]);
     expect(Array.from(many.reflectanceP!)).toEqual([0.5, 0.5, 0.5]);
+  });
+});
+
+describe('a curve', () => {
+  const document = buildDocument();
+  const asked = (change: Partial<StackDocument>, wavelengthNm = 632.8) => {
+    const axis = { kind: 'wavelength', from: 400, to: 800, points: 2, spacing: 'linear' } as const;
+    const point = { ...document.workingPoint, wavelengthNm };
+    const sweep: Sweep = { axis, grid: [400, 800], readings: ['rotationP'] };
+    return curveRequest({ ...document, ...change }, point, sweep, new Map()).strip;
+  };
+
+  it('brings the strip along where the strip need not go ahead of it', () => {
+    expect(asked({})).toBe(true);
+    expect(asked({ spread: { shape: 'normal', divergenceDeg: 1 } })).toBeUndefined();
+    expect(asked({ substrateGradedNm: 1 })).toBeUndefined();
+    expect(asked({ substrate: { index: 1.6, extraordinary: 1.5 } })).toBeUndefined();
+  });
+
+  it('does not fail by a working point outside of it', () => {
+    expect(asked({}, 900)).toBeUndefined();
   });
 });

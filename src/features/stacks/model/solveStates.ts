@@ -5,9 +5,16 @@ import { applyAxis } from '../../../../shared/applyAxis.ts';
 import { comparedStates, outputFor, readingOf } from '../../../../shared/readings.ts';
 import type { LibrarySolveCase, LibrarySolveRequest, SolveResponse } from '../../../../shared/solve.ts';
 import type { Polarization, StackDocument, WorkingPoint } from '../../../../shared/stack.ts';
-import { addsIntensities, inMagnetizationState, toSolveCase } from '../../../../shared/stackCase.ts';
+import {
+  addsIntensities,
+  countLayers,
+  inMagnetizationState,
+  toSolveCase,
+} from '../../../../shared/stackCase.ts';
 import type { MagnetizationState } from '../../../../shared/stackCase.ts';
 import { listLayers } from './items.ts';
+import { hasAxes } from './media.ts';
+import type { Materials } from './media.ts';
 
 /** Which magnetization states the readings are made of; `given` is always first. */
 export function statesFor(readings: readonly ReadingName[]): MagnetizationState[] {
@@ -42,19 +49,46 @@ export function isCurve({ axis, grid, second, family, readings }: Sweep): boolea
 }
 
 /** One curve, and with it the readings at the working point where they need not go ahead of it. */
-export function curveRequest(document: StackDocument, point: WorkingPoint, sweep: Sweep): LiveCurveRequest {
+export function curveRequest(
+  document: StackDocument,
+  point: WorkingPoint,
+  sweep: Sweep,
+  materials: Materials,
+): LiveCurveRequest {
+  const strip = isQuick(document, materials) && reaches(sweep, point) && sweep.axis.kind !== 'graded';
   return {
     document: { ...document, workingPoint: point },
     axis: { ...sweep.axis, points: sweep.grid.length },
     readings: [...sweep.readings],
-    ...(isSharp(document) && sweep.axis.kind !== 'graded' ? { strip: true } : {}),
+    ...(strip ? { strip } : {}),
   };
 }
 
-/** Sharp layers in coherent light: a point takes microseconds. */
-function isSharp(document: StackDocument): boolean {
-  const graded = [document.substrateGradedNm, ...listLayers(document.layers).map(({ gradedNm }) => gradedNm)];
-  return !addsIntensities(document) && graded.every((widthNm) => !widthNm);
+/** Layers, repetitions counted, up to which a curve takes so little that nobody notices that the strip waits for it. */
+const QUICK_LAYERS = 200;
+
+/** Sharp layers of isotropic media in coherent light: a point takes microseconds. */
+function isQuick(document: StackDocument, materials: Materials): boolean {
+  const { incident, layers, substrate, substrateGradedNm } = document;
+  const all = listLayers(layers);
+  const media = [
+    incident,
+    substrate,
+    ...all.flatMap(({ medium, oxide }) => [medium, ...(oxide ? [oxide.medium] : [])]),
+  ];
+  return (
+    !addsIntensities(document) &&
+    !substrateGradedNm &&
+    all.every(({ gradedNm }) => !gradedNm) &&
+    !media.some((medium) => hasAxes(medium, materials)) &&
+    countLayers(layers) <= QUICK_LAYERS
+  );
+}
+
+/** A working point beyond the swept wavelengths may have no constants, which must not take the curve away. */
+function reaches({ axis: { kind, from, to } }: Sweep, { wavelengthNm }: WorkingPoint): boolean {
+  if (kind !== 'wavelength') return true;
+  return wavelengthNm >= Math.min(from, to) && wavelengthNm <= Math.max(from, to);
 }
 
 /**
