@@ -18,6 +18,7 @@ export type DesignStep =
       bare: (number | null)[];
     }
   | { kind: 'tolerance samples'; from: number; to: number; samples: SharedArrayBuffer }
+  | { kind: 'tolerance derivatives'; point: number; from: number; to: number }
   | { kind: 'tolerance outcome' | 'tolerance bands'; samples: SharedArrayBuffer }
   /** Thicknesses of the variables of each film. */
   | { kind: 'optimise films' | 'optimise readings'; nm: number[][] }

@@ -2,10 +2,11 @@ import type { CapDesign } from '../../shared/capDesign.ts';
 import { CapCurves, bareReadings, capThicknesses } from './cap/capCurves.ts';
 import { capOutcome } from './cap/capOutcome.ts';
 import { CapSamples } from './cap/capSamples.ts';
-import type { ToleranceDesign } from '../../shared/toleranceDesign.ts';
+import type { Sensitivity, ToleranceDesign } from '../../shared/toleranceDesign.ts';
 import type { DesignStep, DesignTask, DesignWork } from './designInput.ts';
 import type { Film } from './optimise/film.ts';
 import { OptimiseFilms } from './optimise/optimiseFilms.ts';
+import { SensitiveFilm } from './tolerance/sensitivity.ts';
 import { bandsOutcome, toleranceOutcome } from './tolerance/toleranceOutcome.ts';
 import { ToleranceFilms, ToleranceSamples } from './tolerance/toleranceSamples.ts';
 
@@ -16,6 +17,8 @@ type Kept = {
   curves: CapCurves | null;
   films: ToleranceFilms | null;
   optimised: OptimiseFilms | null;
+  /** By the place of the working point. */
+  sensitive: Map<number, SensitiveFilm>;
 };
 
 let kept: Kept | null = null;
@@ -23,7 +26,14 @@ let kept: Kept | null = null;
 /** One step of a design calculation; what it answers depends on the kind of step. */
 export function designStep({ designId, work, flags, step }: DesignTask): unknown {
   if (kept?.designId !== designId) {
-    kept = { designId, work: readWork(work), curves: null, films: null, optimised: null };
+    kept = {
+      designId,
+      work: readWork(work),
+      curves: null,
+      films: null,
+      optimised: null,
+      sensitive: new Map(),
+    };
   }
   return takeStep(kept, step, new Int32Array(flags));
 }
@@ -70,6 +80,15 @@ function takeStep(mine: Kept, step: DesignStep, flags: Int32Array): unknown {
       }
       return null;
     }
+    case 'tolerance derivatives': {
+      const film = sensitiveOf(mine, step.point);
+      const found: Sensitivity[] = [];
+      for (let place = step.from; place < step.to && Atomics.load(flags, 1) === 0; place += 1) {
+        found.push(...film.derivatives(place, place + 1));
+        Atomics.add(flags, 0, 1);
+      }
+      return found;
+    }
     case 'tolerance outcome':
     case 'tolerance bands': {
       const design = toleranceOf(mine.work);
@@ -95,6 +114,13 @@ function toleranceOf({ design }: DesignWork): ToleranceDesign {
   if (design.kind !== 'tolerance')
     throw new Error(`a tolerance step of a calculation of kind ${design.kind}`);
   return design;
+}
+
+function sensitiveOf(mine: Kept, point: number): SensitiveFilm {
+  const { document, points } = toleranceOf(mine.work);
+  const film = mine.sensitive.get(point) ?? new SensitiveFilm(document, points[point]!, mine.work.materials);
+  mine.sensitive.set(point, film);
+  return film;
 }
 
 function optimisedOf(mine: Kept): OptimiseFilms {

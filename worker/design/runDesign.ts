@@ -5,11 +5,11 @@ import type { DesignOptions, SubmitStep } from './designThreads.ts';
 import { DesignThreads } from './designThreads.ts';
 import { optimiseTotal } from './optimise/effort.ts';
 import { runOptimise } from './optimise/runOptimise.ts';
-import { runTolerance } from './tolerance/runTolerance.ts';
+import { runTolerance, toleranceTotal } from './tolerance/runTolerance.ts';
 
 export type DesignOutcome = { result: DesignResult; seconds: number };
 
-/** How much work a question is, in its own unit: films that are solved. */
+/** How much work a question is, in its own unit: films that are solved, or derivatives taken. */
 export function designTotal(design: DesignInput): number {
   switch (design.kind) {
     case 'cap':
@@ -17,7 +17,7 @@ export function designTotal(design: DesignInput): number {
     case 'optimise':
       return optimiseTotal(design);
     case 'tolerance':
-      return design.tolerance.samples;
+      return toleranceTotal(design);
   }
 }
 

@@ -276,6 +276,29 @@ describe('sensitivity', () => {
     expect(ofSlab.derivative.reflectance! / perK).toBeCloseTo(1, 4);
   });
 
+  test('to a k or Q next to nothing are those to a k or Q of nothing', () => {
+    const by = (k: number, im: number) => {
+      const film = {
+        ...document,
+        layers: [
+          { id: 'cover', medium: { index: [2, k] as [number, number] }, thicknessNm: 80 },
+          {
+            id: 'magnet',
+            medium: { index: [2.25, 4.07] as [number, number], voigt: [0.03, im] as [number, number] },
+            thicknessNm: 15,
+            m: [0, 0, 1] as [number, number, number],
+          },
+        ],
+      };
+      return sensitivities(film, points, [])
+        .sensitivities.filter((one) => ['k', 'Im Q'].includes(one.parameter) && Math.abs(one.value) < 1e-3)
+        .map(({ derivative }) => [derivative.rotationDeg!, derivative.reflectance!]);
+    };
+    const [none, tiny] = [by(0, 0), by(1e-18, 1e-18)];
+    expect(none).toHaveLength(2);
+    tiny.flat().forEach((value, index) => expect(value).toBeCloseTo(none.flat()[index]!, 6));
+  });
+
   // Q enters the Kerr angles of a thick magnet linearly, as Q itself (physics.md section 4): the Cauchy-Riemann equations hold.
   test('to the Im Q of a real Q turns what that to Re Q is by 90 degrees', () => {
     const magnet = { index: [2.25, 4.07] as [number, number], voigt: 1e-5 };

@@ -6,35 +6,30 @@ import type { DemandName } from '../demands.ts';
 import { failedDemands } from '../demands.ts';
 import { FilmSolver, UNCHANGED } from '../filmSolver.ts';
 import { ONE_SIGMA, TWO_SIGMA, quantileOf } from '../quantiles.ts';
-import { sensitivities } from './sensitivity.ts';
 import type { ToleranceSamples } from './toleranceSamples.ts';
 
 const BINS = 41;
 
-/** What comes of all samples. */
+/** What comes of all samples, derivatives apart. */
+export type ToleranceOutcome = Omit<ToleranceResult, 'sensitivities'>;
+
 export function toleranceOutcome(
   design: ToleranceDesign,
   materials: readonly ResolvableMaterial[],
   samples: ToleranceSamples,
-): ToleranceResult {
-  const { readings, sensitivities: found } = sensitivities(design.document, design.points, materials);
+): ToleranceOutcome {
   const { yields, byDemand } = yieldsOf(design, samples);
   return {
     kind: 'tolerance',
-    points: pointOutcomes(
-      design,
-      readings.map(({ readings: nominal }) => nominal),
-      samples,
-    ),
+    points: bandsOutcome(design, materials, samples),
     yield: yields,
     byDemand,
-    sensitivities: found,
     samples: design.tolerance.samples,
     seed: design.tolerance.seed,
   };
 }
 
-/** The readings of the film as drawn and how those of the samples are spread, without derivatives, which take longest. */
+/** The readings of the film as drawn and how those of the samples are spread. */
 export function bandsOutcome(
   design: ToleranceDesign,
   materials: readonly ResolvableMaterial[],
