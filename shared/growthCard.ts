@@ -87,7 +87,10 @@ export const growthCardSchema = z.object({
 /** The steps of making a card, in their order. */
 export const cardSteps = ['film', 'bands', 'card'] as const;
 
-/** How far a card is that somebody waits for; `progress` is null when none is being made under this key. */
+/**
+ * How far a card is that somebody waits for. `progress` is null when none is being made under this key; `cardId` is then
+ * the card that was stored, null when there is none.
+ */
 export const cardMakingSchema = z.object({
   progress: z
     .object({
@@ -99,6 +102,7 @@ export const cardMakingSchema = z.object({
       secondsLeft: z.number().nullable(),
     })
     .nullable(),
+  cardId: z.string().nullable(),
 });
 
 export const growthCardListSchema = z.object({

@@ -18,6 +18,8 @@ type Making = {
  */
 export class CardMakings implements CardMaker {
   readonly #underWay = new Map<string, Making>();
+  /** Those that nobody waits for, until they have ended: one that is just being stored may still be. */
+  readonly #leaving = new Map<string, Making>();
 
   /**
    * Makes a card; a request sent again while it is being made waits for the same card. It ends when all have hung up.
@@ -37,7 +39,10 @@ export class CardMakings implements CardMaker {
       making.askers -= 1;
       if (making.askers > 0) return;
       // The same request sent once more begins anew.
-      this.#forget(id, making);
+      if (this.#underWay.get(id) === making) {
+        this.#underWay.delete(id);
+        this.#leaving.set(id, making);
+      }
       making.ending.abort();
     };
     if (hungUp.aborted) leave();
@@ -45,9 +50,9 @@ export class CardMakings implements CardMaker {
     return making.card;
   }
 
-  /** How far this process is with it; null when it does not make it. */
+  /** How far this process is with it, also while it ends; null when it does not make it. */
   progressOf(id: string): CardProgress | null {
-    return this.#underWay.get(id)?.progress ?? null;
+    return (this.#underWay.get(id) ?? this.#leaving.get(id))?.progress ?? null;
   }
 
   #begin(id: string, wanted: object, make: MakeCard): Making {
@@ -71,6 +76,8 @@ export class CardMakings implements CardMaker {
   }
 
   #forget(id: string, making: Making): void {
-    if (this.#underWay.get(id) === making) this.#underWay.delete(id);
+    for (const makings of [this.#underWay, this.#leaving]) {
+      if (makings.get(id) === making) makings.delete(id);
+    }
   }
 }

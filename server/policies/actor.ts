@@ -14,12 +14,12 @@ export type Actor = {
 const rank: Record<Role, number> = { viewer: 1, editor: 2, owner: 3 };
 
 /** A member of any role. */
-export function isMember(actor: Actor, groupId: string): boolean {
+export function isMember(actor: Pick<Actor, 'roles'>, groupId: string): boolean {
   return actor.roles.has(groupId);
 }
 
 /** Holds at least this role: an owner may do what an editor may. */
-export function holdsRole(actor: Actor, groupId: string, least: Role): boolean {
+export function holdsRole(actor: Pick<Actor, 'roles'>, groupId: string, least: Role): boolean {
   const role = actor.roles.get(groupId);
   return role !== undefined && rank[role] >= rank[least];
 }

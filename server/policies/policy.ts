@@ -7,7 +7,7 @@ import { holdsRole, isMember } from './actor.ts';
  * `hide` answers 404, so that somebody outside a group cannot tell whether an id exists; `refuse` answers 403 to a
  * member whose role does not reach.
  */
-type Decision = 'allow' | 'hide' | 'refuse';
+export type Decision = 'allow' | 'hide' | 'refuse';
 
 /** Who may call a route, decided in two steps: by who asks, then by what was loaded. */
 export type Policy<Who extends Actor | null, Subject> = {
@@ -19,6 +19,11 @@ export type Policy<Who extends Actor | null, Subject> = {
   decide: (who: Who, subject: Subject) => Decision;
   /** What to do instead, where asking an owner would not help. */
   remedy?: (subject: Subject) => string | null;
+};
+
+/** A policy that looks at roles alone, so that it can be asked again later with those of then. */
+type RolePolicy<Subject> = Omit<Policy<Actor, Subject>, 'decide'> & {
+  decide: (who: Pick<Actor, 'roles'>, subject: Subject) => Decision;
 };
 
 /** No account needed. The actor is not looked up, so that a share link costs no more than it must. */
@@ -56,7 +61,7 @@ export const signedInWithSession: Policy<Actor, unknown> = {
 export function groupRole<Subject>(
   least: Role,
   groupIdOf: (subject: Subject) => string,
-): Policy<Actor, Subject> {
+): RolePolicy<Subject> {
   return {
     who: least === 'viewer' ? 'member of the group' : `${least} of the group`,
     authentication: 'session or token',

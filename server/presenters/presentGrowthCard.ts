@@ -19,14 +19,18 @@ export function presentSharedGrowthCard(card: GrowthCard): SharedGrowthCard {
   };
 }
 
-/** @param progress null when no such card is being made */
-export function presentCardMaking(progress: CardProgress | null): CardMaking {
-  if (!progress) return { progress: null };
+/**
+ * @param progress null when no such card is being made
+ * @param cardId of the card that was stored, null when there is none
+ */
+export function presentCardMaking(progress: CardProgress | null, cardId: string | null): CardMaking {
+  if (!progress) return { progress: null, cardId };
   const { step, done, total, bandsSince } = progress;
   const seconds = bandsSince === null ? 0 : (Date.now() - bandsSince) / 1000;
   const hasRate = step === 'bands' && done > 0;
   return {
     progress: { step, done, total, secondsLeft: hasRate ? (seconds / done) * (total - done) : null },
+    cardId,
   };
 }
 

@@ -3,9 +3,10 @@ import type { Logger } from 'pino';
 import type {} from 'pino-http';
 import type { ZodType, z } from 'zod';
 import type { AppDependencies } from '../dependencies.ts';
-import { forbidden, notFound } from '../errors.ts';
+import { notFound } from '../errors.ts';
 import type { Actor } from '../policies/actor.ts';
 import type { Policy } from '../policies/policy.ts';
+import { requireAllowed } from '../policies/requireAllowed.ts';
 import { assertAnswer } from './assertAnswer.ts';
 import { readPathParams } from './pathParams.ts';
 import type { PathParams } from './pathParams.ts';
@@ -252,11 +253,6 @@ async function prepare<
   if (declaration.load && loaded === null) throw notFound(noun);
   // Without `load` there is nothing to decide on: such a policy takes any subject.
   const subject = loaded as Subject;
-  const decision = policy.decide(actor, subject);
-  if (decision === 'hide') throw notFound(noun);
-  if (decision === 'refuse') {
-    const remedy = policy.remedy?.(subject) ?? 'Ask an owner of the group.';
-    throw forbidden(`This needs the right of: ${policy.who}. ${remedy}`);
-  }
+  requireAllowed(policy, actor, subject, noun);
   return { ...context, subject };
 }

@@ -70,13 +70,18 @@ const readCardMaking = route({
   method: 'get',
   path: '/groups/:groupId/cards-in-making/:key',
   summary:
-    'How far the card is that you asked for with this Idempotency-Key; null when it is not being made here.',
+    'How far the card is that you asked for with this Idempotency-Key; null when it is not being made here, then with its id if it was stored.',
   noun: 'group',
   policy: addToGroup,
   load: ({ dependencies, params }) => dependencies.models.Group.findByPk(params.groupId),
   answer: { status: 200, schema: cardMakingSchema },
-  handler: ({ dependencies, actor, subject, params }) =>
-    presentCardMaking(dependencies.jobs.cards.progressOf(idOfKey(actor, subject, params.key))),
+  async handler({ dependencies: { jobs, models }, actor, subject, params }) {
+    const id = idOfKey(actor, subject, params.key);
+    const progress = jobs.cards.progressOf(id);
+    // In this order: what has ended is stored by now, or never.
+    const card = progress ? null : await loadCard(models, id);
+    return presentCardMaking(progress, card?.id ?? null);
+  },
 });
 
 const load = ({ dependencies, params }: { dependencies: AppDependencies; params: { cardId: string } }) =>

@@ -18,8 +18,15 @@ import { studySchema } from '../../../shared/study.ts';
 import { issuePaths, read, refusalOf } from '../../../tests/answers.ts';
 import type { ApiServer, Browser } from '../../../tests/apiServer.ts';
 import { startApiServer } from '../../../tests/apiServer.ts';
+import { buildToleranceInput } from '../../../tests/designInputs.ts';
 import { createCard } from '../../services/createCard.ts';
-import { buildDocument, buildMaterial, buildPeople, buildRun } from '../../../tests/factories.ts';
+import {
+  buildDesign,
+  buildDocument,
+  buildMaterial,
+  buildPeople,
+  buildRun,
+} from '../../../tests/factories.ts';
 
 let api: ApiServer;
 let people: Awaited<ReturnType<typeof buildPeople>>;
@@ -51,6 +58,19 @@ const wanted = (overrides: Partial<CreateGrowthCard> = {}): CreateGrowthCard => 
 const groupUrl = () => `/api/v1/groups/${people.group.id}/cards`;
 const make = async (given: CreateGrowthCard): Promise<GrowthCard> =>
   read(growthCardSchema, await browser.post(groupUrl()).send(given).expect(201));
+
+/** A study of the group. */
+const studyOf = async (): Promise<string> => {
+  const answer = await browser
+    .post(`/api/v1/groups/${people.group.id}/studies`)
+    .send({ title: 'Caps', document: { question: 'Which?', items: [] } })
+    .expect(201);
+  return read(studySchema, answer).id;
+};
+
+/** A design of the group that has its numbers. */
+const designOf = async (): Promise<string> =>
+  (await buildDesign(api.models, people.group, buildToleranceInput(), { state: 'done' })).id;
 
 /** What is stored of the group's cards. */
 const kept = async () => {
@@ -198,17 +218,11 @@ describe('a growth card', () => {
   });
 
   test('of a study carries a link that opens the study', async () => {
-    const study = read(
-      studySchema,
-      await browser
-        .post(`/api/v1/groups/${people.group.id}/studies`)
-        .send({ title: 'Caps', document: { question: 'Which?', items: [] } })
-        .expect(201),
-    );
-    const card = await make(wanted({ studyId: study.id }));
+    const studyId = await studyOf();
+    const card = await make(wanted({ studyId }));
     const token = card.url!.split('/').at(-1)!;
     expect((await api.anonymous().get(`/api/v1/shared/${token}/subject`)).body).toEqual({ opens: 'study' });
-    expect((await make(wanted({ studyId: study.id, link: null }))).url).toBeNull();
+    expect((await make(wanted({ studyId, link: null }))).url).toBeNull();
   });
 
   test('is made once when the request is sent twice, at once or afterwards', async () => {
@@ -218,7 +232,75 @@ describe('a growth card', () => {
     const ids = [first, second, await send().expect(201)].map((answer) => read(growthCardSchema, answer).id);
     expect(new Set(ids).size).toBe(1);
     expect(await kept()).toEqual({ cards: 1, links: 1 });
-    await send({ decision: { text: 'Another.' } }).expect(409);
+    const others: Partial<CreateGrowthCard>[] = [
+      { decision: { text: 'Another.' } },
+      { rates: [{ layerId: 'cap', nmPerMin: 1.8 }] },
+      { rates: [] },
+      { link: null },
+      { link: { expiresAt: '2100-01-01T00:00:00Z' } },
+      { studyId: await studyOf() },
+      { designId: await designOf() },
+    ];
+    for (const other of others) expect([other, (await send(other)).status]).toEqual([other, 409]);
+    expect(await kept()).toEqual({ cards: 1, links: 1 });
+  });
+
+  const leave = () => api.models.Membership.destroy({ where: { userId: people.editor.id } });
+  const demote = () =>
+    api.models.Membership.update({ role: 'viewer' }, { where: { userId: people.editor.id } });
+  const clearStudies = () => api.models.Study.destroy({ where: { groupId: people.group.id } });
+  const clearDesigns = () => api.models.Run.destroy({ where: { groupId: people.group.id } });
+  test.each([
+    ['the asker leaves the group', leave, 404, []],
+    ['the asker becomes a viewer', demote, 403, []],
+    ['its study is deleted', clearStudies, 422, ['studyId']],
+    ['its design is deleted', clearDesigns, 422, ['designId']],
+  ])('leaves nothing behind when %s while it is made', async (_, change, status, named) => {
+    const origin = {
+      ...(change === clearStudies && { studyId: await studyOf() }),
+      ...(change === clearDesigns && { designId: await designOf() }),
+    };
+    const { pool } = api.dependencies;
+    const compute = pool.bands.bind(pool);
+    const bands = vi.spyOn(pool, 'bands').mockImplementationOnce(async (...given) => {
+      const answer = await compute(...given);
+      await change();
+      return answer;
+    });
+    const answer = await browser.post(groupUrl()).send(wanted(origin));
+    expect(bands).toHaveBeenCalledOnce();
+    bands.mockRestore();
+    expect(answer.status).toBe(status);
+    expect(status === 422 ? issuePaths(answer) : []).toEqual(named);
+    expect(await kept()).toEqual({ cards: 0, links: 0 });
+  });
+
+  test('that is cancelled too late, while it is committed, is told with its id', async () => {
+    const making = async () =>
+      read(cardMakingSchema, await browser.get(`${groupUrl()}-in-making/late`).expect(200));
+    expect(await making()).toEqual({ progress: null, cardId: null });
+    let release = () => undefined as void;
+    const held = new Promise<void>((resolve) => (release = resolve));
+    const reached = vi.fn(() => held);
+    api.models.Activity.addHook('afterCreate', 'hold the commit', (_row, { transaction }) => {
+      if (!transaction) throw new Error('a card is stored in one transaction');
+      const commit = transaction.commit.bind(transaction);
+      transaction.commit = () => reached().then(commit);
+    });
+    const sent = browser
+      .post(groupUrl())
+      .set('Idempotency-Key', 'late')
+      .send(wanted({ link: null }));
+    sent.end(() => undefined);
+    await vi.waitFor(() => expect(reached).toHaveBeenCalledOnce(), { timeout: 10_000 });
+    api.models.Activity.removeHook('afterCreate', 'hold the commit');
+    sent.abort();
+    await new Promise((resolve) => setTimeout(resolve, 200));
+    expect(await making()).toMatchObject({ progress: { step: 'card' }, cardId: null });
+    release();
+    await vi.waitFor(async () => expect((await making()).progress).toBeNull(), { timeout: 10_000 });
+    const [stored] = await api.models.GrowthCard.findAll({ where: { groupId: people.group.id } });
+    expect(await making()).toEqual({ progress: null, cardId: stored!.id });
   });
 
   test('that is cancelled leaves nothing behind, while its films are drawn or while it is stored', async () => {

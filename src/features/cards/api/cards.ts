@@ -35,6 +35,17 @@ export function cardMakingQuery(groupId: string, key: string | null) {
   });
 }
 
+/** What became of the card that was cancelled under a key; asked until the server has ended with it. */
+export function cancelledCardQuery(groupId: string, key: string) {
+  return queryOptions({
+    ...cardMakingQuery(groupId, key),
+    // Of its own: an answer from before the cancel says nothing of this.
+    queryKey: ['groups', groupId, 'cancelledCards', key],
+    refetchInterval: ({ state }) =>
+      state.status === 'error' || state.data?.progress === null ? false : POLL_MS,
+  });
+}
+
 /** The same key sent twice (a double click, a repeated request) makes one card; an aborted signal makes none. */
 export function useCreateCard(groupId: string) {
   const client = useQueryClient();

@@ -13,6 +13,7 @@ import { useMakeCard } from '../hooks/useMakeCard.ts';
 import { cardFormSchema, cardRequest, emptyForm } from '../model/cardDraft.ts';
 import type { CardForm, CardStart } from '../model/cardDraft.ts';
 import { loadKeptCard, storeKeptCard } from '../model/keptCard.ts';
+import { CancelledCard } from './CancelledCard.tsx';
 import { CardPoints } from './CardPoints.tsx';
 import { CardProgress } from './CardProgress.tsx';
 import { CardRates } from './CardRates.tsx';
@@ -120,11 +121,7 @@ export function NewCardForm({ groupId, start, keptUnder, nameOf, onMade }: Props
         <LinkFields form={form} start={start} />
       </fieldset>
       <FormError message={formState.errors.root?.['server']?.message} />
-      {making.cancelled && (
-        <p role="status" className="text-note text-muted">
-          Cancelled: no card was made. What you filled in is as it was.
-        </p>
-      )}
+      {making.cancelledKey !== null && <CancelledCard groupId={groupId} requestKey={making.cancelledKey} />}
       {making.busy ? (
         <CardProgress
           progress={making.progress}

@@ -30,7 +30,8 @@ export function useMakeCard(groupId: string, onMade: (card: GrowthCard) => void)
     cancel: () => underWay.current?.abort(),
     busy: create.isPending,
     isMade: create.isSuccess,
-    cancelled,
+    /** Of the request that was cancelled: whether its card was stored all the same, the server knows. */
+    cancelledKey: cancelled ? key : null,
     error: cancelled ? null : create.error,
     progress: data?.progress ?? null,
   };
