@@ -8,7 +8,12 @@ import { planComparison } from './model/planComparison.ts';
 import { slicePairs } from './model/slicePairs.ts';
 
 type Values = (first: number, second: number, member: number) => number;
-type Changes = { capNm?: number; angleDeg?: number };
+type Changes = {
+  capNm?: number;
+  angleDeg?: number;
+  /** A layer of Co under the cap, whose id is that of this run alone. */
+  coNm?: number;
+};
 
 /** A finished run whose rotation (deg) follows a function of the values on its axes. */
 export function buildLoadedRun(
@@ -17,12 +22,17 @@ export function buildLoadedRun(
   value: Values,
   changes: Changes = {},
 ): LoadedRun {
-  const { capNm = 2, angleDeg = 30 } = changes;
+  const { capNm = 2, angleDeg = 30, coNm } = changes;
   const run: Run = {
     ...{ id: letter, groupId: 'group', name: `run ${letter}`, stackId: null, stackName: null, ...axes },
     document: {
       incident: { index: 1 },
-      layers: [{ id: 'cap', medium: { index: [2.3, 4.1], label: 'Pt' }, thicknessNm: capNm, note: 'cap' }],
+      layers: [
+        { id: 'cap', medium: { index: [2.3, 4.1], label: 'Pt' }, thicknessNm: capNm, note: 'cap' },
+        ...(coNm === undefined
+          ? []
+          : [{ id: `co ${letter}`, medium: { index: 2.2, label: 'Co' }, thicknessNm: coNm }]),
+      ],
       substrate: { index: 3.88 },
       workingPoint: { wavelengthNm: 600, angleDeg, input: 'p', magnetization: { mode: 'drawn' } },
     },

@@ -2,7 +2,6 @@ import { useMemo } from 'react';
 import type { ReadingName } from '../../../shared/run.ts';
 import { ScaleControls } from '../../components/plot/ReadingControls.tsx';
 import { ReadingSelect } from '../../components/plot/ReadingSelect.tsx';
-import { sweepXAxis } from '../../components/plot/readingSeries.ts';
 import { usePlotHeight } from '../../components/plot/usePlotHeight.ts';
 import { CompareFigure } from '../../features/compare/components/CompareFigure.tsx';
 import { DifferenceTable } from '../../features/compare/components/DifferenceTable.tsx';
@@ -10,6 +9,7 @@ import { curveRows } from '../../features/compare/model/differenceRows.ts';
 import type { ComparedRun } from '../../features/compare/model/comparedRun.ts';
 import { heldWords } from '../../features/compare/model/heldQuantities.ts';
 import type { HeldQuantity } from '../../features/compare/model/heldQuantities.ts';
+import { sharedXAxis } from '../../features/compare/model/sharedAxis.ts';
 import { slicePairs, unpaired } from '../../features/compare/model/slicePairs.ts';
 import { useCompareAddress } from './useCompareAddress.ts';
 
@@ -27,11 +27,10 @@ export function ComparedCurves({ runs, reference, held, readings, reading }: Com
   const height = usePlotHeight(520);
   const pairs = useMemo(() => slicePairs(runs, reference, held), [runs, reference, held]);
   const rows = useMemo(() => curveRows(pairs, reading), [pairs, reading]);
-  const xAxis = useMemo(() => {
-    const axes = [reference, ...runs].flatMap(({ slices }) => slices[0]?.axes[0] ?? []);
-    const words = new Set(axes.map(({ word }) => word));
-    return axes[0] ? sweepXAxis(axes[0].axis, words.size === 1 ? axes[0].word : 'the swept layer') : null;
-  }, [runs, reference]);
+  const xAxis = useMemo(
+    () => sharedXAxis([reference, ...runs].flatMap(({ slices }) => slices[0]?.axes[0] ?? [])),
+    [runs, reference],
+  );
   if (!xAxis) return <p className="py-6 text-muted">None of the runs reaches this value: choose another.</p>;
   const { unit, log } = view;
   const alone = unpaired(runs, reference, pairs);

@@ -1,13 +1,13 @@
 import { useMemo } from 'react';
 import { ScaleControls } from '../../components/plot/ReadingControls.tsx';
 import { ReadingSelect } from '../../components/plot/ReadingSelect.tsx';
-import { sweepXAxis } from '../../components/plot/readingSeries.ts';
 import { usePlotHeight } from '../../components/plot/usePlotHeight.ts';
 import { CompareMaps } from '../../features/compare/components/CompareMaps.tsx';
 import { DifferenceTable } from '../../features/compare/components/DifferenceTable.tsx';
 import { mapRows } from '../../features/compare/model/differenceRows.ts';
 import { heldWords } from '../../features/compare/model/heldQuantities.ts';
 import { comparedMaps } from '../../features/compare/model/mapDifference.ts';
+import { sharedXAxis } from '../../features/compare/model/sharedAxis.ts';
 import type { ComparedProps } from './ComparedCurves.tsx';
 import { useCompareAddress } from './useCompareAddress.ts';
 
@@ -18,9 +18,11 @@ export function ComparedMaps({ runs, reference, held, readings, reading }: Compa
   const maps = useMemo(() => comparedMaps(runs, reference, reading), [runs, reference, reading]);
   const rows = useMemo(() => (maps ? mapRows(maps.base, maps.others, reading) : []), [maps, reading]);
   const axes = useMemo(() => {
-    const [x, y] = reference.slices[0]?.axes ?? [];
-    return x && y ? { x: sweepXAxis(x.axis, x.word), y: sweepXAxis(y.axis, y.word) } : null;
-  }, [reference]);
+    const along = (index: number) =>
+      sharedXAxis([reference, ...runs].flatMap(({ slices }) => slices[0]?.axes[index] ?? []));
+    const [x, y] = [along(0), along(1)];
+    return x && y ? { x, y } : null;
+  }, [runs, reference]);
   const shown = maps?.others.find(({ slice }) => slice.of.run.id === beside) ?? maps?.others[0];
   if (!maps || !shown || !axes) {
     return <p className="py-6 text-muted">No map is drawn at this value: choose another.</p>;

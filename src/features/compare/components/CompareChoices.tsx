@@ -42,7 +42,7 @@ export function CompareChoices({ views, view, onView, held, onHeld }: Props) {
 }
 
 function HeldControl({ held, onChange }: { held: HeldQuantity; onChange: (value: number | 'all') => void }) {
-  const { source, choices, value, mayBeAll } = held;
+  const { source, choices, value, mayBeAll, apart } = held;
   const { axis, word } = source;
   const print = sweepXAxis(axis, word).format ?? String;
   const words = quantityWords(source);
@@ -79,7 +79,14 @@ function HeldControl({ held, onChange }: { held: HeldQuantity; onChange: (value:
         ))}
       </select>
       {!mayBeAll && choices.length > 1 && (
-        <span className="text-muted" title={`A plot holds ${MOST_CURVES} curves that can be told apart`}>
+        <span
+          className="text-muted"
+          title={
+            apart
+              ? 'Another run sweeps another layer or plane: one curve of each is held against the other'
+              : `A plot holds ${MOST_CURVES} curves that can be told apart`
+          }
+        >
           one of {choices.length}
         </span>
       )}

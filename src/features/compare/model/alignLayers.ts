@@ -1,9 +1,21 @@
 import type { StackLayer } from '../../../../shared/stack.ts';
+import { layersIn } from './comparedInput.ts';
+import type { ComparedInput } from './comparedInput.ts';
+import { layerWord } from './mediumWords.ts';
 
 type Slot = { key: string; ids: Set<string>; word: string };
 
 /** A layer with what it is called. */
 export type NamedLayer = { layer: StackLayer; word: string };
+
+/** The layers of a film in the order in which light meets them. */
+export function namedLayers({
+  document,
+  materials,
+}: Pick<ComparedInput, 'document' | 'materials'>): NamedLayer[] {
+  const layers = layersIn(document.layers);
+  return layers.map((layer) => ({ layer, word: layerWord(layer, layers, materials) }));
+}
 
 /**
  * Which layers of several films are the same one: by id (a film and its copies), then by name, then by standing between

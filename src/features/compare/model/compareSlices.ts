@@ -40,7 +40,7 @@ export function compareSlices(
 }
 
 function inputOf({ of, axes, at, heldAxes }: CutSlice) {
-  const values = heldAxes.map(({ key, axis }) => ({ axis, value: at.get(key) ?? NaN }));
+  const values = heldAxes.map(({ heldKey, axis }) => ({ axis, value: at.get(heldKey) ?? NaN }));
   return heldInput(
     of.run,
     axes.map(({ axis }) => axis),
@@ -63,7 +63,7 @@ function slicesOf(
   const heldAxes = heldAxesOf(axesByRun, of.run, view);
   const missing: string[] = [];
   const places = heldAxes.map((axis) => {
-    const quantity = held.find(({ key }) => key === axis.key);
+    const quantity = held.find(({ key }) => key === axis.heldKey);
     const found = quantity ? placesOn(axis, gridOf(of.result, axis.field), quantity) : [];
     if (found.length === 0 && quantity) missing.push(outOfReach(axis, quantity));
     return found;
@@ -87,7 +87,7 @@ function slicesOf(
         return one ? [{ field, place: one.place }] : [];
       }),
       heldAxes,
-      at: new Map(heldAxes.map(({ key }, index) => [key, chosen[index]?.value ?? NaN])),
+      at: new Map(heldAxes.map(({ heldKey }, index) => [heldKey, chosen[index]?.value ?? NaN])),
       member: texts.join(', '),
       notes: chosen.flatMap(({ note }) => note ?? []),
     };

@@ -8,6 +8,7 @@ import type { ComparedRun, ComparedSlice } from './comparedRun.ts';
 import { isRotation, relate, resample } from './curveDifference.ts';
 import type { Relation } from './curveDifference.ts';
 import { axisHeader, curveRows, differenceLines, mapRows } from './differenceRows.ts';
+import { isDiscrete } from './heldQuantities.ts';
 import { relateMaps } from './mapDifference.ts';
 import type { ComparedMap } from './mapDifference.ts';
 import { pairName } from './slicePairs.ts';
@@ -37,7 +38,7 @@ export function curvesCsv(runs: readonly ComparedRun[], pairs: readonly SlicePai
   const table = toCsv([
     { header: axisHeader(axis), values: grid },
     ...slices.map((one) => ({
-      header: `${titleOf(one)}: ${reading}${unitText}${one.of === first.of ? '' : ', interpolated'}`,
+      header: `${titleOf(one)}: ${reading}${unitText}${one.of === first.of ? '' : howResampled(one)}`,
       values: scaled(resample(curveOf(one, reading), grid, isRotation(reading))),
     })),
     ...pairs.map((pair) => {
@@ -62,7 +63,7 @@ export function mapsCsv(base: ComparedMap, others: readonly ComparedMap[], shown
       values: Float64Array.from({ length: count }, (_, at) => places[index]?.(at) ?? NaN),
     })),
     ...[base, ...others].map(({ slice, data }) => ({
-      header: `${titleOf(slice)}: ${reading}${unitText}${slice === base.slice ? '' : ', interpolated'}`,
+      header: `${titleOf(slice)}: ${reading}${unitText}${slice === base.slice ? '' : howResampled(slice)}`,
       values: scaled(data.values),
     })),
     ...others.map((other) => {
@@ -91,6 +92,11 @@ function scaleOf(reading: ReadingName, unit: AngleUnit) {
     unitText: angle ? ` (${unit})` : '',
     scaled: (values: ArrayLike<number>) => Float64Array.from(values, (value) => value * factor),
   };
+}
+
+/** Along an axis that counts no value is made up between two points. */
+function howResampled({ axes }: ComparedSlice): string {
+  return axes.every(isDiscrete) ? '' : ', interpolated';
 }
 
 function titleOf({ of: { letter, run }, member, phrases }: ComparedSlice): string {

@@ -8,6 +8,7 @@ import type { AngleUnit } from '../../../lib/format.ts';
 import type { ComparedSlice } from './comparedRun.ts';
 import { relate } from './curveDifference.ts';
 import type { ComparedCurve, Relation } from './curveDifference.ts';
+import { isDiscrete } from './heldQuantities.ts';
 import { curveIn } from './runSlice.ts';
 import { pairName } from './slicePairs.ts';
 import type { SlicePair } from './slicePairs.ts';
@@ -18,7 +19,11 @@ const dashes = ['solid', 'dashed', 'dotted'] as const;
 
 /** A reading along the drawn axis of a slice, in degrees or plain numbers. */
 export function curveOf(slice: ComparedSlice, reading: ReadingName): ComparedCurve {
-  return curveIn(slice.of.result, slice, reading);
+  const [drawn] = slice.axes;
+  return {
+    ...curveIn(slice.of.result, slice, reading),
+    discrete: drawn !== undefined && isDiscrete(drawn),
+  };
 }
 
 /**

@@ -131,6 +131,50 @@ describe('families of curves', () => {
   });
 });
 
+describe('repeats of a block', () => {
+  const repeats: SweepAxis = {
+    kind: 'repeat',
+    blockId: 'block',
+    from: 1,
+    to: 5,
+    points: 5,
+    spacing: 'linear',
+  };
+  const every2 = { ...repeats, points: 3 };
+
+  it('are compared where both have them, with nothing in between', () => {
+    const [a, b] = [
+      buildLoadedRun('A', { axis: repeats }, (count) => count / 100),
+      buildLoadedRun('B', { axis: every2 }, (count) => count / 50),
+    ];
+    const { slices, pairs, runs } = compare([a, b]);
+    const drawn = relatedCurves(slices, pairs, 'rotationP', 'difference', 'deg');
+    expect(round(drawn?.series[0]?.y ?? []).slice(1, -1)).toEqual([0.01, NaN, 0.03, NaN, 0.05]);
+    expect(curvesCsv(runs, pairs, inMdeg)).not.toContain('interpolated');
+  });
+
+  it('across or up a map are no place to interpolate, the other axis is', () => {
+    const half: SweepAxis = { ...angle, points: 2 };
+    const a = buildLoadedRun('A', { axis: angle, second: repeats }, (deg, count) => (deg * count) / 1000);
+    const b = buildLoadedRun('B', { axis: every2, second: half }, (count, deg) => (deg * count) / 1000);
+    const { runs, reference } = compare([a, b]);
+    const [other] = comparedMaps(runs, reference, 'rotationP')!.others;
+    // The rows are 1 to 5 repeats of 0, 20 and 40 deg; B has 20 deg between two of its points and 1, 3, 5 repeats.
+    expect(round(other!.data.values)).toEqual([
+      ...[0, 0.02, 0.04],
+      ...[NaN, NaN, NaN],
+      ...[0, 0.06, 0.12],
+      ...[NaN, NaN, NaN],
+      ...[0, 0.1, 0.2],
+    ]);
+    // The same with the repeats of B up.
+    const up = buildLoadedRun('C', { axis: half, second: every2 }, (deg, count) => (deg * count) / 1000);
+    const turned = compare([a, up]);
+    const [same] = comparedMaps(turned.runs, turned.reference, 'rotationP')!.others;
+    expect(round(same!.data.values)).toEqual(round(other!.data.values));
+  });
+});
+
 describe('maps', () => {
   // Bilinear interpolation reproduces this function exactly, on any grid.
   const bilinear = (deg: number, nm: number) => 0.1 + 0.002 * deg - 0.0003 * nm + 0.00001 * deg * nm;

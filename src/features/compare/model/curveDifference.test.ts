@@ -26,6 +26,11 @@ describe('a curve against a reference', () => {
     expect([...resample(jump, [1], false)]).toEqual([0]);
   });
 
+  it('has nothing between the points of an axis that counts', () => {
+    const counted = { x: [1, 3, 5], y: [10, 30, 50], discrete: true };
+    expect([...resample(counted, [1, 2, 3, 5, 6], false)]).toEqual([10, NaN, 30, 50, NaN]);
+  });
+
   it('has no ratio to 0', () => {
     expect(relate('reflectanceP', 'ratio', reference, reference)[3]).toBeNaN();
   });

@@ -1,18 +1,26 @@
 import type { ReadingName } from '../../../../shared/run.ts';
 import { readingDefinitions } from '../../../../shared/readings.ts';
 import { foldDegrees } from '../../../../shared/units.ts';
-import { between, shareOf } from './interpolate.ts';
+import { between, placeOn } from './interpolate.ts';
 
 /** A reading along the axis of a run: degrees or plain numbers, NaN where there is none. */
-export type ComparedCurve = { x: ArrayLike<number>; y: ArrayLike<number> };
+export type ComparedCurve = {
+  x: ArrayLike<number>;
+  y: ArrayLike<number>;
+  /** Along an axis that counts: there is nothing between two points. */
+  discrete?: boolean;
+};
 
 export const relations = ['difference', 'ratio'] as const;
 export type Relation = (typeof relations)[number];
 
-/** The curve's values at other places: linear between its own points, NaN outside of it and beside a gap. */
+/**
+ * The curve's values at other places: linear between its own points (none there along an axis that counts), NaN outside
+ * of it and beside a gap.
+ */
 export function resample(curve: ComparedCurve, grid: ArrayLike<number>, turns: boolean): Float64Array {
   return Float64Array.from(grid, (x) => {
-    const place = shareOf(curve.x, x);
+    const place = placeOn(curve.x, x, curve.discrete ?? false);
     return place === null ? NaN : between(curve.y[place.low]!, curve.y[place.high]!, place.share, turns);
   });
 }

@@ -1,6 +1,6 @@
 import { SUBSTRATE } from '../../../../shared/run.ts';
 import type { SweepAxis } from '../../../../shared/run.ts';
-import { alignLayers } from './alignLayers.ts';
+import { alignLayers, namedLayers } from './alignLayers.ts';
 import { layersIn } from './comparedInput.ts';
 import type { ComparedInput, InputFact } from './comparedInput.ts';
 import { filmFacts } from './filmFacts.ts';
@@ -43,10 +43,7 @@ export function sweptWord(
 type Facts = ReadonlyMap<string, InputFact>;
 
 function factsOf(inputs: readonly ComparedInput[]): Facts[] {
-  const films = inputs.map(({ document, materials }) => {
-    const layers = layersIn(document.layers);
-    return layers.map((layer) => ({ layer, word: layerWord(layer, layers, materials) }));
-  });
+  const films = inputs.map(namedLayers);
   const slots = alignLayers(films);
   return inputs.map((input, run) => {
     const layers = (films[run] ?? []).flatMap(({ layer, word }, position) =>

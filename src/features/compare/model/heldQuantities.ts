@@ -6,6 +6,7 @@ import { placeOnAxis } from '../../../lib/placeOnAxis.ts';
 import type { Comparison, CompareView } from './planComparison.ts';
 import { quantityWords } from './runAxes.ts';
 import type { AxesByRun, RunAxis } from './runAxes.ts';
+import { sharedWord } from './sharedAxis.ts';
 
 /** Curves on one plot, and differences on another, that can still be told apart. */
 export const MOST_CURVES = 12;
@@ -19,6 +20,8 @@ export type HeldQuantity = {
   choices: readonly number[] | null;
   value: number | 'all';
   mayBeAll: boolean;
+  /** Another run sweeps it of another layer (or m in another plane) instead: one value of each is drawn at a time. */
+  apart: boolean;
 };
 
 /** The field of the address that says at which value a quantity is held. */
@@ -28,9 +31,10 @@ export function heldField(key: string): string {
 
 /** What is held at one value, in words: `the wavelength 632.8 nm`. */
 export function heldWords(held: readonly HeldQuantity[]): string[] {
-  return held.flatMap(({ source, value }) => {
+  return held.flatMap(({ source, value, apart }) => {
     const print = sweepXAxis(source.axis, source.word).format ?? String;
-    return value === 'all' ? [] : [`${quantityWords(source)} ${print(value)}`];
+    const where = apart ? ' in runs that sweep it' : '';
+    return value === 'all' ? [] : [`${quantityWords(source)} ${print(value)}${where}`];
   });
 }
 
@@ -47,15 +51,16 @@ export function heldQuantities(
   if (!base || !view) return [];
   const ordered = [base, ...drawn.filter((run) => run !== base)];
   const found = ordered.flatMap((run) => heldAxesOf(axes, run, view));
-  const keys = [...new Set(found.map(({ key }) => key))];
+  const keys = [...new Set(found.map(({ heldKey }) => heldKey))];
   const held = keys.map((key): HeldQuantity => {
-    const own = found.filter((one) => one.key === key);
-    const source = own.find(isDiscrete) ?? own[0]!;
+    const own = found.filter((one) => one.heldKey === key);
+    const source = { ...(own.find(isDiscrete) ?? own[0]!), word: sharedWord(own) };
+    const apart = sweptApart(source, axes, ordered, view);
     const choices = isDiscrete(source) ? axisValues(source.axis) : null;
     const given = search.get(heldField(key));
-    const all = choices !== null && view.keys.length === 1 && (given === null || given === 'all');
+    const all = choices !== null && view.keys.length === 1 && !apart && (given === null || given === 'all');
     const value = all ? 'all' : valueFor(source, choices, given, axes, ordered);
-    return { key, source, choices, value, mayBeAll: false };
+    return { key, source, choices, value, mayBeAll: false, apart };
   });
   // Too many curves: the quantities that come last are held at one value.
   for (let last = held.length - 1; last >= 0 && curveCount(held, axes, ordered, view) > MOST_CURVES; last--) {
@@ -67,7 +72,7 @@ export function heldQuantities(
     const asAll = held.map((other, index) =>
       index === position ? { ...other, value: 'all' as const } : other,
     );
-    const possible = one.choices !== null && view.keys.length === 1;
+    const possible = one.choices !== null && view.keys.length === 1 && !one.apart;
     return { ...one, mayBeAll: possible && curveCount(asAll, axes, ordered, view) <= MOST_CURVES };
   });
 }
@@ -77,16 +82,32 @@ export function heldAxesOf(axes: AxesByRun, run: Run, { keys }: CompareView): Ru
   return (axes.get(run.id) ?? []).filter(({ key }) => !keys.includes(key));
 }
 
+/** Whether a run holds the same of another layer, which a run that holds this quantity does not. */
+function sweptApart(
+  { heldKey, axis }: RunAxis,
+  axes: AxesByRun,
+  runs: readonly Run[],
+  view: CompareView,
+): boolean {
+  const held = runs.map((run) =>
+    heldAxesOf(axes, run, view)
+      .filter((one) => one.axis.kind === axis.kind)
+      .map((one) => one.heldKey),
+  );
+  const [having, others] = [true, false].map((has) => held.filter((own) => own.includes(heldKey) === has));
+  return others!.flat().some((other) => having!.some((own) => !own.includes(other)));
+}
+
 /** As in the address; else as in a film that does not sweep the quantity, which is what the others are held against. */
 function valueFor(
-  { key, axis }: RunAxis,
+  { heldKey, axis }: RunAxis,
   choices: readonly number[] | null,
   given: string | null,
   axes: AxesByRun,
   runs: readonly Run[],
 ): number {
   const [low, high] = [Math.min(axis.from, axis.to), Math.max(axis.from, axis.to)];
-  const plain = runs.filter((run) => !axes.get(run.id)?.some((one) => one.key === key));
+  const plain = runs.filter((run) => !axes.get(run.id)?.some((one) => one.heldKey === heldKey));
   const places = [...plain, ...runs].map(({ document }) => placeOnAxis(axis, document));
   const wanted = [given === null || given.trim() === '' ? null : Number(given), ...places].find(
     (place) => place !== null && place >= low && place <= high,
@@ -104,7 +125,7 @@ function curveCount(
 ): number {
   const several = held.filter(({ value }) => value === 'all');
   const membersOf = (run: Run, { key, choices }: HeldQuantity): number => {
-    const own = heldAxesOf(axes, run, view).find((one) => one.key === key);
+    const own = heldAxesOf(axes, run, view).find((one) => one.heldKey === key);
     return own === undefined ? 1 : isDiscrete(own) ? own.axis.points : (choices?.length ?? 1);
   };
   const curvesOf = (run: Run) => several.reduce((count, one) => count * membersOf(run, one), 1);

@@ -21,6 +21,12 @@ export function shareOf(grid: ArrayLike<number>, value: number): GridShare | nul
   return { low: near, high: other, share: (value - at) / (grid[other]! - at) };
 }
 
+/** As `shareOf`, but on a grid of an axis that counts (repeats) only where it has the value itself. */
+export function placeOn(grid: ArrayLike<number>, value: number, discrete: boolean): GridShare | null {
+  const place = shareOf(grid, value);
+  return discrete && place !== null && place.share !== 0 ? null : place;
+}
+
 /**
  * Linear between two values; a value met exactly stays, whatever is beside it. A rotation takes the shorter way, since
  * an ellipse turned by 180 deg is the same.

@@ -3,18 +3,28 @@ import type { MapData } from '../../../components/plot/map/mapTypes.ts';
 import { isRotation, relateValues } from './curveDifference.ts';
 import type { Relation } from './curveDifference.ts';
 import type { ComparedRun, ComparedSlice } from './comparedRun.ts';
-import { between, shareOf } from './interpolate.ts';
+import { isDiscrete } from './heldQuantities.ts';
+import { between, placeOn } from './interpolate.ts';
+import type { RunAxis } from './runAxes.ts';
 import { mapIn } from './runSlice.ts';
 
 /**
  * A map's values on the grid of another, which has the same quantities on x and y: bilinear between the four values
- * around, NaN outside of the map and beside a gap.
+ * around, NaN outside of the map, beside a gap and, along an axis that counts, between its points.
+ *
+ * @param axes those of the map, the one across first
  */
-export function resampleMap(map: MapData, { x, y }: Pick<MapData, 'x' | 'y'>, turns: boolean): Float64Array {
-  const columns = Array.from(x, (value) => shareOf(map.x, value));
+function resampleMap(
+  map: MapData,
+  axes: readonly RunAxis[],
+  { x, y }: Pick<MapData, 'x' | 'y'>,
+  turns: boolean,
+): Float64Array {
+  const [counted = false, countedUp = false] = axes.map(isDiscrete);
+  const columns = Array.from(x, (value) => placeOn(map.x, value, counted));
   const values = new Float64Array(x.length * y.length).fill(NaN);
   for (let iy = 0; iy < y.length; iy++) {
-    const row = shareOf(map.y, y[iy]!);
+    const row = placeOn(map.y, y[iy]!, countedUp);
     if (row === null) continue;
     const [low, high] = [row.low * map.x.length, row.high * map.x.length];
     for (let ix = 0; ix < x.length; ix++) {
@@ -54,7 +64,8 @@ export function comparedMaps(
     .filter((one) => one !== reference)
     .flatMap((one) => one.slices)
     .map((other): ComparedMap => {
-      const values = resampleMap(mapIn(other.of.result, other, reading), data, isRotation(reading));
+      const own = mapIn(other.of.result, other, reading);
+      const values = resampleMap(own, other.axes, data, isRotation(reading));
       return { slice: other, data: { ...data, values } };
     });
   return { base: { slice, data }, others };

@@ -1,6 +1,7 @@
 import type { Run } from '../../../../shared/run.ts';
 import { drawnAxesOf, quantityWords, runAxesOf } from './runAxes.ts';
 import type { AxesByRun, RunAxis } from './runAxes.ts';
+import { sharedQuantityWords } from './sharedAxis.ts';
 
 /** What runs are drawn over: one quantity as curves, two as maps, the first of them across. */
 export type CompareView = { id: string; keys: readonly string[]; label: string };
@@ -27,10 +28,13 @@ export function planComparison(
   const done = runs.filter(({ progress }) => progress.state === 'done');
   const axes = runAxesOf(done);
   const of = (run: Run) => axes.get(run.id) ?? [];
-  const fits = (run: Run, { keys }: CompareView) =>
+  const fits = (run: Run, { keys }: Pick<CompareView, 'keys'>) =>
     keys.every((key) => drawnAxesOf(of(run)).some((one) => one.key === key));
   const usable = (run: Run) =>
-    viewsOf(of(run)).filter((view) => done.some((other) => other !== run && fits(other, view)));
+    viewsOf(of(run)).flatMap((view): CompareView[] => {
+      const others = done.filter((other) => other !== run && fits(other, view));
+      return others.length > 0 ? [{ ...view, label: labelOf(view, [run, ...others].map(of)) }] : [];
+    });
   const asked = done.filter(({ id }) => id === wanted.reference);
   const base = [...asked, ...done].find((run) => usable(run).length > 0) ?? asked[0] ?? done[0] ?? null;
   const views = base ? usable(base) : [];
@@ -54,16 +58,17 @@ export function planComparison(
 }
 
 /** Over what a run could be drawn, a map before its cuts. */
-function viewsOf(axes: readonly RunAxis[]): CompareView[] {
-  const drawn = drawnAxesOf(axes);
-  const curves = drawn.map((axis) => ({
-    id: axis.key,
-    keys: [axis.key],
-    label: `curves over ${quantityWords(axis)}`,
-  }));
-  if (drawn.length < 2) return curves;
-  const words = drawn.map(quantityWords).join(' and ');
-  return [{ id: 'map', keys: drawn.map(({ key }) => key), label: `maps over ${words}` }, ...curves];
+function viewsOf(axes: readonly RunAxis[]): Omit<CompareView, 'label'>[] {
+  const keys = drawnAxesOf(axes).map(({ key }) => key);
+  const curves = keys.map((key) => ({ id: key, keys: [key] }));
+  return keys.length < 2 ? curves : [{ id: 'map', keys }, ...curves];
+}
+
+function labelOf({ keys }: Pick<CompareView, 'keys'>, axes: readonly (readonly RunAxis[])[]): string {
+  const words = keys.map((key) =>
+    sharedQuantityWords(axes.flatMap((own) => drawnAxesOf(own).filter((one) => one.key === key))),
+  );
+  return `${keys.length > 1 ? 'maps' : 'curves'} over ${words.join(' and ')}`;
 }
 
 function has(axes: readonly RunAxis[]): string {
