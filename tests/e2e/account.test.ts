@@ -52,6 +52,8 @@ it('sets a new password with the link of a caught mail, once', async () => {
   const { page } = forgetful;
   await forgetful.open('/sign-in');
   await page.getByRole('link', { name: 'Forgot the password?' }).click();
+  // Both pages ask for an e-mail address.
+  await page.getByRole('heading', { level: 1, name: 'Forgot the password' }).waitFor();
   await page.getByLabel('E-mail').fill(EMAIL);
   await page.getByRole('button', { name: 'Send the link' }).click();
   await page.getByText('a mail with a link is on its way').waitFor();

@@ -1,5 +1,5 @@
 import { useCallback, useEffect, useState } from 'react';
-import { useSearchParams } from 'react-router-dom';
+import { useNavigation, useSearchParams } from 'react-router-dom';
 import type { WorkingPoint } from '../../../../shared/stack.ts';
 import { readView, writeView } from '../model/viewState.ts';
 import type { ViewState } from '../model/viewState.ts';
@@ -14,6 +14,8 @@ const WRITE_AFTER_MS = 250;
 export function useView(saved: WorkingPoint): [ViewState, (change: Partial<ViewState>) => void] {
   const [search, setSearch] = useSearchParams();
   const address = search.toString();
+  // While the code of another page is fetched, a new address of this one would take the way there back.
+  const leaving = useNavigation().state !== 'idle';
   const [view, setView] = useState(() => readView(search, saved));
   const [seen, setSeen] = useState(address);
   const [written, setWritten] = useState(address);
@@ -24,6 +26,7 @@ export function useView(saved: WorkingPoint): [ViewState, (change: Partial<ViewS
     if (address !== written) setView(readView(search, saved));
   }
   useEffect(() => {
+    if (leaving) return undefined;
     const timer = setTimeout(() => {
       const next = writeView(view, saved);
       if (next.toString() === address) return;
@@ -31,7 +34,7 @@ export function useView(saved: WorkingPoint): [ViewState, (change: Partial<ViewS
       setSearch(next, { replace: true, preventScrollReset: true });
     }, WRITE_AFTER_MS);
     return () => clearTimeout(timer);
-  }, [view, saved, address, setSearch]);
+  }, [view, saved, address, setSearch, leaving]);
 
   const change = useCallback((part: Partial<ViewState>) => setView((now) => ({ ...now, ...part })), []);
   return [view, change];
