@@ -48,7 +48,7 @@ it('writes what was changed to the address a moment later', async () => {
 
 it('does not hold back somebody who leaves before it is written', async () => {
   const { router, arrive } = open();
-  await act(() => void router.navigate('/next'));
+  act(() => void router.navigate('/next'));
   await wait(400);
   arrive();
   await wait(10);
