@@ -1,25 +1,13 @@
 import { z } from 'zod';
 import { readingOf } from './readings.ts';
-import { readingNames } from './run.ts';
+import { readingNames, usualReadings } from './run.ts';
 import { solveWarningSchema } from './solve.ts';
 import type { LibrarySolveRequest, SolveResponse } from './solve.ts';
 import type { StackDocument, WorkingPoint } from './stack.ts';
 import { addsIntensities, inMagnetizationState, toSolveCase } from './stackCase.ts';
 
 /** What the strip on the stack page shows of a film at its working point, and the share of the ceiling. */
-const stripNames = [
-  'rotationP',
-  'ellipticityP',
-  'rotationS',
-  'ellipticityS',
-  'reflectanceP',
-  'reflectanceS',
-  'crossSp',
-  'crossPs',
-  'contrastP',
-  'contrastS',
-  'ceilingShare',
-] as const;
+const stripNames = [...usualReadings, 'ceilingShare'] as const;
 
 export const readingsStripSchema = z.object({
   /** deg or plain numbers; null where a reading does not exist. Empty without an answer. */

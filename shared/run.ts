@@ -6,8 +6,8 @@ import { solveWarningSchema } from './solve.ts';
 import { stackDocumentSchema, stackNameSchema } from './stack.ts';
 import { strictObject } from './strictObject.ts';
 
-/** What a run stores at each point. Angles in degrees, the rest dimensionless. `readings.ts` defines each. */
-export const readingNames = [
+/** What the stack page shows at once, and a run stores when nobody says. */
+export const usualReadings = [
   'rotationP',
   'ellipticityP',
   'rotationS',
@@ -18,6 +18,11 @@ export const readingNames = [
   'crossPs',
   'contrastP',
   'contrastS',
+] as const;
+
+/** What a run stores at each point. Angles in degrees, the rest dimensionless. `readings.ts` defines each. */
+export const readingNames = [
+  ...usualReadings,
   'transmittanceP',
   'transmittanceS',
   'absorptanceP',

@@ -1,4 +1,5 @@
 import { literal } from 'sequelize';
+import { usualReadings } from '../../shared/run.ts';
 import type { CreateRun, ReadingName, SweepAxes, SweepAxis } from '../../shared/run.ts';
 import { LIMITS } from '../../shared/limits.ts';
 import { axisFields } from '../../shared/runAxes.ts';
@@ -15,22 +16,8 @@ type Person = { userId: string; name: string };
 type RunDependencies = Pick<AppDependencies, 'models' | 'materials' | 'pool' | 'jobs'>;
 export type ListedRun = { run: SweepRun; axes: SweepAxes };
 
-/** What is stored when nobody says: everything that the stack page draws. */
-const USUAL_READINGS: ReadingName[] = [
-  'rotationP',
-  'ellipticityP',
-  'rotationS',
-  'ellipticityS',
-  'reflectanceP',
-  'reflectanceS',
-  'crossSp',
-  'crossPs',
-  'contrastP',
-  'contrastS',
-];
-
-/** ... and of a map, which stores fewer. */
-const USUAL_MAP_READINGS: ReadingName[] = USUAL_READINGS.slice(0, LIMITS.mapReadings);
+/** A map stores fewer when nobody says. */
+const USUAL_MAP_READINGS: ReadingName[] = usualReadings.slice(0, LIMITS.mapReadings);
 
 /** Runs of a group that a list shows. */
 const LISTED_RUNS = 500;
@@ -79,7 +66,7 @@ export async function createRun(
   idempotencyKey: string | null,
 ): Promise<SweepRun> {
   const stack = await loadNamedStack(models, group.id, wanted.stackId, wanted.document);
-  const usual = wanted.second ? USUAL_MAP_READINGS : USUAL_READINGS;
+  const usual = wanted.second ? USUAL_MAP_READINGS : usualReadings;
   const readings = [...new Set(wanted.readings ?? usual)];
   const snapshot = await takeRunSnapshot({ materials, pool }, group.id, { ...wanted, readings });
   const values = {
